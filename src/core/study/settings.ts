@@ -1,0 +1,106 @@
+import * as v from "valibot";
+
+const positiveInteger = v.pipe(v.number(), v.integer(), v.minValue(1));
+const share = v.pipe(v.number(), v.gtValue(0), v.ltValue(1));
+const names = v.array(v.pipe(v.string(), v.nonEmpty()));
+const says = <T extends v.GenericSchema>(schema: T, words: string) => v.pipe(schema, v.description(words));
+
+/** The one declaration of every setting: its type, its default where absent, its words. */
+export const settingsSchema = v.strictObject({
+  seed: says(
+    v.optional(v.pipe(v.number(), v.safeInteger(), v.minValue(0)), 1),
+    "seed of every random stream",
+  ),
+  confidence: says(v.optional(share, 0.95), "level of every interval"),
+  replicates: says(v.optional(positiveInteger, 20000), "replicates of every simulation"),
+  taxa: v.optional(
+    v.strictObject({
+      minimumHorizons: says(v.optional(positiveInteger, 3), "horizons below which a taxon is too-few"),
+      identification: says(
+        v.optional(v.picklist(["strict", "inclusive"]), "strict"),
+        "treatment of cf. and ?",
+      ),
+      reworked: says(
+        v.optional(v.picklist(["exclude", "exclude-yes", "include"]), "exclude"),
+        "exclude leaves out suspected too",
+      ),
+      doubtful: says(
+        v.optional(v.picklist(["exclude", "include"]), "exclude"),
+        "treatment of doubtful finds",
+      ),
+      faultRepeat: says(
+        v.optional(v.picklist(["set-aside", "map"]), "set-aside"),
+        "finds in a fault-repeated interval: set aside, or mapped to the first passage",
+      ),
+      scales: says(
+        v.optional(v.record(v.string(), v.record(v.string(), v.number())), {}),
+        "abundance legends",
+      ),
+    }),
+    {},
+  ),
+  boundary: v.optional(
+    v.strictObject({
+      horizon: says(v.optional(v.pipe(v.string(), v.nonEmpty())), "the main horizon H and datum"),
+      same: says(
+        v.optional(
+          v.array(
+            v.strictObject({
+              name: v.pipe(v.string(), v.nonEmpty()),
+              horizons: v.array(v.tuple([v.string(), v.string()])),
+            }),
+          ),
+          [],
+        ),
+        "found horizons declared one horizon, as [section, horizon] pairs",
+      ),
+      weights: says(v.optional(v.record(v.string(), v.number()), {}), "weight of each proxy in the pick"),
+    }),
+    {},
+  ),
+  ranges: v.optional(
+    v.strictObject({
+      base: says(
+        v.optional(v.string(), "first"),
+        "working base of a range: first find, section-bottom, or a horizon's name",
+      ),
+      methods: says(
+        v.optional(v.array(v.picklist(["uniform", "window", "sampled"])), ["sampled", "uniform", "window"]),
+        "range-end methods, the leading one first",
+      ),
+      recovery: says(
+        v.optional(v.picklist(["uniform"]), "uniform"),
+        "shape of recovery where rock was searched",
+      ),
+    }),
+    {},
+  ),
+  timing: v.optional(
+    v.strictObject({
+      window: says(
+        v.optional(v.tuple([v.number(), v.number()]), [-20, 15]),
+        "window of end levels, m from H",
+      ),
+      startBelow: says(v.optional(v.number(), 0), "first finds above this level, m from H, are late starts"),
+      durationHorizons: says(v.optional(positiveInteger, 10), "least horizons for the duration box"),
+      sets: says(v.optional(v.record(v.string(), names), {}), "declared lists of taxa"),
+    }),
+    {},
+  ),
+  alignment: v.optional(
+    v.strictObject({
+      reference: says(
+        v.optional(v.string(), "consensus"),
+        "consensus, or the section whose thickness is the scale",
+      ),
+      horizons: says(v.optional(names, []), "shared horizons to align on (empty: the main horizon alone)"),
+      beyond: says(v.optional(v.picklist(["rigid", "gain"]), "rigid"), "scale beyond the outermost horizon"),
+    }),
+    {},
+  ),
+});
+
+/** Every setting of an analysis, defaults written out. */
+export type Settings = v.InferOutput<typeof settingsSchema>;
+
+export const defaultSettings: Settings = v.parse(settingsSchema, {});
