@@ -13,7 +13,8 @@ export type FindReason =
   | "reworking-suspected"
   | "doubtful"
   | "fault-repeat"
-  | "no-recovery";
+  | "no-recovery"
+  | "below-reworking-ceiling";
 
 export interface Find {
   readonly origin: Origin;
@@ -35,13 +36,29 @@ export interface LocalTaxon {
   readonly heightsM: readonly number[];
   /** The samples behind them; undefined where a find was given by position alone or its sample was not searched. */
   readonly samples: readonly (string | undefined)[];
-  /** Highest level under the inclusive reading of names, where it is higher. */
+  /** Highest level under the strict and under the inclusive reading of names, whichever the settings use. */
+  readonly lastStrictM?: number;
   readonly lastInclusiveM: number;
   /** Number of horizons stated by a published range without its finds. */
   readonly publishedHorizons?: number;
 }
 
 export type Role = "aftermath" | "survivor" | "late-start" | "too-few" | "candidate";
+
+/** The rule behind a role: which level was compared with which limit, in metres of height (or horizons). */
+export interface RoleReason {
+  readonly rule:
+    | "first-above-horizon"
+    | "first-above-base-of-smear"
+    | "last-above-interval"
+    | "last-above-ceiling"
+    | "first-above-start"
+    | "horizons-under-minimum"
+    | "ends-in-question"
+    | "no-horizon-here";
+  readonly value: number;
+  readonly limit: number;
+}
 
 export interface Candidate {
   readonly section: string;
@@ -54,6 +71,8 @@ export interface Candidate {
   readonly lastM: number;
   readonly lastInclusiveM: number;
   readonly reworkingCeilingM?: number;
-  /** Machine-readable reason code with the numbers behind it, e.g. "first find 0.12 m above the main horizon". */
-  readonly reason: string;
+  /** Finds above H but not above the ceiling: set aside, neither survival nor end. */
+  readonly findsBelowCeiling: number;
+  /** The rule that gave the role, with its numbers. */
+  readonly reason: RoleReason;
 }

@@ -29,8 +29,8 @@ export const settingsSchema = v.strictObject({
         "treatment of doubtful finds",
       ),
       faultRepeat: says(
-        v.optional(v.picklist(["set-aside", "map"]), "set-aside"),
-        "finds in a fault-repeated interval: set aside, or mapped to the first passage",
+        v.optional(v.picklist(["set-aside"]), "set-aside"),
+        "finds in a fault-repeated interval are set aside",
       ),
       scales: says(
         v.optional(v.record(v.string(), v.record(v.string(), v.number())), {}),

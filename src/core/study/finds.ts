@@ -1,0 +1,173 @@
+import type { Find, FindReason, LocalTaxon } from "./finds-result.ts";
+import { groupBy } from "./grouping.ts";
+import { type Identification, treatmentOf } from "./identification.ts";
+import type { Occurrence, PublishedRange, RockInterval, Section, Study, Taxon } from "./model.ts";
+import type { Settings } from "./settings.ts";
+
+/** Levels nearer than this are one level. */
+const LEVEL_TOLERANCE_M = 1e-9;
+
+export interface SettledFinds {
+  readonly finds: readonly Find[];
+  readonly taxa: readonly LocalTaxon[];
+}
+
+/** Decides, find by find, what counts (synonymy, qualifiers, reworked, doubtful), and gathers each taxon's horizons. */
+export function settleFinds(study: Study): SettledFinds {
+  const bySection = study.sections.map((section) => settleSection(section, study));
+  return { finds: bySection.flatMap((s) => s.finds), taxa: bySection.flatMap((s) => s.taxa) };
+}
+
+function settleSection(section: Section, study: Study): SettledFinds {
+  const judged = section.occurrences.map((occurrence) => judge(occurrence, section, study));
+  const byTaxon = groupBy(judged, (find) => find.accepted);
+  const searched = new Set(section.searches.map((s) => searchKey(s.sample, s.group)));
+  const finds: Find[] = [];
+  const taxa: LocalTaxon[] = [];
+  for (const [name, ofTaxon] of byTaxon) {
+    const merged = mergeHorizons(ofTaxon);
+    finds.push(...merged.map(({ strict: _strict, inclusive: _inclusive, ...find }) => find));
+    const used = merged.filter((find) => find.used === "yes");
+    if (used.length > 0) taxa.push(localTaxon(name, { section, study, used, judged: ofTaxon, searched }));
+  }
+  const found = new Set(taxa.map((t) => t.taxon));
+  for (const range of section.publishedRanges) {
+    const name = acceptedName(range.taxon, study.taxa);
+    if (!found.has(name)) taxa.push(publishedTaxon(name, range, section, study));
+  }
+  finds.sort((a, b) => a.origin.row - b.origin.row);
+  return { finds, taxa };
+}
+
+interface JudgedFind extends Find {
+  readonly strict: boolean;
+  readonly inclusive: boolean;
+}
+
+function judge(occurrence: Occurrence, section: Section, study: Study): JudgedFind {
+  const { identification } = study.settings.taxa;
+  const asRead = reasonAgainst(occurrence, section, study.settings, identification);
+  return {
+    origin: occurrence.origin,
+    section: section.name,
+    verbatim: occurrence.verbatim,
+    accepted: acceptedName(operationalName(occurrence), study.taxa),
+    heightM: occurrence.heightM,
+    ...(occurrence.sample === undefined ? {} : { sample: occurrence.sample }),
+    used: asRead === undefined ? "yes" : "no",
+    reason: asRead ?? "used",
+    strict: reasonAgainst(occurrence, section, study.settings, "strict") === undefined,
+    inclusive: reasonAgainst(occurrence, section, study.settings, "inclusive") === undefined,
+  };
+}
+
+function reasonAgainst(
+  occurrence: Occurrence,
+  section: Section,
+  settings: Settings,
+  identification: Identification,
+): FindReason | undefined {
+  if (occurrence.count === 0) return "zero-count";
+  const treatment = treatmentOf(occurrence.qualifier, identification);
+  if (treatment.kind === "set-aside") return treatment.reason;
+  if (occurrence.reworked === "yes" && settings.taxa.reworked !== "include") return "reworked";
+  if (occurrence.reworked === "suspected" && settings.taxa.reworked === "exclude")
+    return "reworking-suspected";
+  if (occurrence.doubtful && settings.taxa.doubtful === "exclude") return "doubtful";
+  const within = section.intervals.filter((interval) => isWithin(occurrence.heightM, interval));
+  if (within.some((interval) => interval.kind === "fault-repeat")) return "fault-repeat";
+  return within.some((interval) => hasNoRecovery(interval)) ? "no-recovery" : undefined;
+}
+
+/** Rock that nobody could search: recovery is 0 there. */
+export function hasNoRecovery(interval: RockInterval): boolean {
+  return interval.kind === "covered" || interval.kind === "core-loss" || interval.kind === "not-searched";
+}
+
+function isWithin(heightM: number, interval: RockInterval): boolean {
+  return heightM > interval.baseM + LEVEL_TOLERANCE_M && heightM < interval.topM - LEVEL_TOLERANCE_M;
+}
+
+function operationalName(occurrence: Occurrence): string {
+  const isOwnTaxon = treatmentOf(occurrence.qualifier, "strict").kind === "own-taxon";
+  return isOwnTaxon ? `${occurrence.taxon} ${occurrence.qualifier}` : occurrence.taxon;
+}
+
+/** Follows `accepted` through taxa.csv; a circle ends at the name it began with. */
+export function acceptedName(name: string, taxa: ReadonlyMap<string, Taxon>): string {
+  const seen = new Set([name]);
+  let current = name;
+  for (;;) {
+    const next = taxa.get(current)?.accepted;
+    if (next === undefined || next === current) return current;
+    if (seen.has(next)) return name;
+    seen.add(next);
+    current = next;
+  }
+}
+
+export function groupOf(taxon: string, study: Study): string {
+  return study.taxa.get(taxon)?.group ?? "ungrouped";
+}
+
+/** Finds in one sample, or at one level, are one horizon: the first is used, the rest merged into it. */
+function mergeHorizons(finds: readonly JudgedFind[]): JudgedFind[] {
+  const samples = new Set<string>();
+  const levels: number[] = [];
+  return finds.map((find) => {
+    if (find.used !== "yes") return find;
+    const isKnown =
+      (find.sample !== undefined && samples.has(find.sample)) ||
+      levels.some((level) => Math.abs(level - find.heightM) <= LEVEL_TOLERANCE_M);
+    if (isKnown) return { ...find, used: "merged", reason: "same-horizon" };
+    if (find.sample !== undefined) samples.add(find.sample);
+    levels.push(find.heightM);
+    return find;
+  });
+}
+
+interface Gathering {
+  readonly section: Section;
+  readonly study: Study;
+  readonly used: readonly JudgedFind[];
+  readonly judged: readonly JudgedFind[];
+  readonly searched: ReadonlySet<string>;
+}
+
+function localTaxon(taxon: string, { section, study, used, judged, searched }: Gathering): LocalTaxon {
+  const group = groupOf(taxon, study);
+  const upward = used.toSorted((a, b) => a.heightM - b.heightM);
+  const lastStrictM = highest(judged.filter((find) => find.strict));
+  return {
+    section: section.name,
+    taxon,
+    group,
+    heightsM: upward.map((find) => find.heightM),
+    samples: upward.map(({ sample }) =>
+      sample !== undefined && searched.has(searchKey(sample, group)) ? sample : undefined,
+    ),
+    ...(lastStrictM === undefined ? {} : { lastStrictM }),
+    lastInclusiveM: highest(judged.filter((find) => find.inclusive)) ?? upward[upward.length - 1].heightM,
+  };
+}
+
+function publishedTaxon(taxon: string, range: PublishedRange, section: Section, study: Study): LocalTaxon {
+  const isPoint = Math.abs(range.lastM - range.firstM) <= LEVEL_TOLERANCE_M;
+  const heightsM = isPoint ? [range.firstM] : [range.firstM, range.lastM];
+  return {
+    section: section.name,
+    taxon,
+    group: groupOf(taxon, study),
+    heightsM,
+    samples: heightsM.map(() => undefined),
+    lastStrictM: range.lastM,
+    lastInclusiveM: range.lastM,
+    publishedHorizons: range.horizons,
+  };
+}
+
+function highest(finds: readonly JudgedFind[]): number | undefined {
+  return finds.length === 0 ? undefined : Math.max(...finds.map((find) => find.heightM));
+}
+
+const searchKey = (sample: string, group: string) => `${sample}\u0000${group}`;

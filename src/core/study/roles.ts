@@ -1,0 +1,134 @@
+import type { Candidate, Find, LocalTaxon, Role, RoleReason } from "./finds-result.ts";
+import type { Section } from "./model.ts";
+import type { Settings } from "./settings.ts";
+
+/** What a role is judged against in one section: the main horizon H, and the smear where mixing is accepted. */
+export interface Boundary {
+  readonly positionM: number;
+  readonly highM: number;
+  /** Base of the smear, where mixing is accepted. */
+  readonly smearBaseM?: number;
+  /** The highest level at which a taxon that ended at H may still be found; undefined: no ceiling. */
+  readonly ceilingOf: (taxon: LocalTaxon) => number | undefined;
+}
+
+export interface RolesInput {
+  readonly section: Section;
+  readonly taxa: readonly LocalTaxon[];
+  readonly boundary?: Boundary;
+  readonly settings: Settings;
+}
+
+export interface AssignedRoles {
+  readonly candidates: readonly Candidate[];
+  /** The taxa with the finds of candidates between H and their ceiling taken out. */
+  readonly taxa: readonly LocalTaxon[];
+}
+
+/**
+ * Gives each taxon of a section its one role against the main horizon, by rules that never read how close below H a
+ * last find lies (choosing by closeness biases towards simultaneity: Solow & Smith 2000, Paleobiology 26:647-650).
+ */
+export function assignRoles(input: RolesInput): AssignedRoles {
+  const assigned = input.taxa.map((taxon) => assignRole(taxon, input));
+  return { candidates: assigned.map((a) => a.candidate), taxa: assigned.map((a) => a.taxon) };
+}
+
+function assignRole(taxon: LocalTaxon, { section, boundary, settings }: RolesInput) {
+  const ceilingM = boundary?.ceilingOf(taxon);
+  const { role, reason } = roleOf(taxon, boundary, { settings, ceilingM });
+  const kept =
+    role === "candidate" && boundary !== undefined ? belowCeiling(taxon, boundary, ceilingM) : taxon;
+  const candidate: Candidate = {
+    section: taxon.section,
+    taxon: taxon.taxon,
+    group: taxon.group,
+    role,
+    reachesTop: reachesTop(kept, section),
+    horizons: horizonCount(kept),
+    firstM: kept.heightsM[0],
+    lastM: kept.heightsM[kept.heightsM.length - 1],
+    lastInclusiveM: taxon.lastInclusiveM,
+    ...(ceilingM === undefined ? {} : { reworkingCeilingM: ceilingM }),
+    findsBelowCeiling: taxon.heightsM.length - kept.heightsM.length,
+    reason,
+  };
+  return { candidate, taxon: kept };
+}
+
+interface Limits {
+  readonly settings: Settings;
+  readonly ceilingM: number | undefined;
+}
+
+function roleOf(
+  taxon: LocalTaxon,
+  boundary: Boundary | undefined,
+  { settings, ceilingM }: Limits,
+): { role: Role; reason: RoleReason } {
+  const first = taxon.heightsM[0];
+  const horizons = horizonCount(taxon);
+  const minimum = settings.taxa.minimumHorizons;
+  const given = (role: Role, rule: RoleReason["rule"], value: number, limit: number) => ({
+    role,
+    reason: { rule, value, limit },
+  });
+  if (boundary !== undefined) {
+    const { positionM, highM, smearBaseM } = boundary;
+    if (smearBaseM !== undefined && first > smearBaseM)
+      return given("aftermath", "first-above-base-of-smear", first, smearBaseM);
+    if (first > positionM) return given("aftermath", "first-above-horizon", first, positionM);
+    const last = taxon.lastStrictM;
+    const limit = Math.max(highM, ceilingM ?? highM);
+    if (last !== undefined && last > limit)
+      return given("survivor", limit > highM ? "last-above-ceiling" : "last-above-interval", last, limit);
+    const start = positionM + settings.timing.startBelow;
+    if (first > start) return given("late-start", "first-above-start", first, start);
+  }
+  if (horizons < minimum) return given("too-few", "horizons-under-minimum", horizons, minimum);
+  return boundary === undefined
+    ? given("candidate", "no-horizon-here", horizons, minimum)
+    : given("candidate", "ends-in-question", taxon.heightsM[taxon.heightsM.length - 1], boundary.highM);
+}
+
+/** n counts horizons, never specimens; a range published without its finds brings its own number. */
+export function horizonCount(taxon: LocalTaxon): number {
+  return taxon.publishedHorizons ?? taxon.heightsM.length;
+}
+
+/**
+ * Where mixing smears the layer upward it smears fossils too, so a candidate's finds above H are neither survival nor
+ * its end: they are taken out. Without accepted mixing nothing is taken out.
+ */
+function belowCeiling(taxon: LocalTaxon, boundary: Boundary, ceilingM: number | undefined): LocalTaxon {
+  if (ceilingM === undefined || taxon.publishedHorizons !== undefined) return taxon;
+  const count = taxon.heightsM.filter((height) => height <= boundary.positionM).length;
+  if (count === taxon.heightsM.length) return taxon;
+  return { ...taxon, heightsM: taxon.heightsM.slice(0, count), samples: taxon.samples.slice(0, count) };
+}
+
+/** Marks the finds that the roles took out, so that every find's fate is told in one list. */
+export function markBelowCeiling(
+  finds: readonly Find[],
+  candidates: readonly Candidate[],
+  boundaries: ReadonlyMap<string, Boundary>,
+): readonly Find[] {
+  const trimmed = new Set(
+    candidates.filter((c) => c.findsBelowCeiling > 0).map((c) => `${c.section}\u0000${c.taxon}`),
+  );
+  return finds.map((find) => {
+    const boundary = boundaries.get(find.section);
+    const isAbove = boundary !== undefined && find.heightM > boundary.positionM;
+    if (find.used === "no" || !isAbove || !trimmed.has(`${find.section}\u0000${find.accepted}`)) return find;
+    return { ...find, used: "no", reason: "below-reworking-ceiling" };
+  });
+}
+
+/** True where the highest find lies in the highest sample searched for its group: the end is cut off by the section. */
+function reachesTop(taxon: LocalTaxon, section: Section): boolean {
+  const searches = section.searches.filter((search) => search.group === taxon.group);
+  if (searches.length === 0) return false;
+  const top = searches.reduce((a, b) => (b.heightM > a.heightM ? b : a));
+  const lastSample = taxon.samples[taxon.samples.length - 1];
+  return lastSample === top.sample || taxon.heightsM[taxon.heightsM.length - 1] >= top.heightM;
+}
