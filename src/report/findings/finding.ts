@@ -1,0 +1,28 @@
+import type { Basis } from "../../core/basis.ts";
+import type { Words } from "../wordings/words.ts";
+
+export type Station = "tables" | "markers" | "fence" | "ranges" | "timing";
+
+/** A line of numbers beside a plate. */
+export interface NumberLine {
+  readonly label: string;
+  readonly value: string;
+  readonly note?: string;
+}
+
+export interface Weakness {
+  readonly severity: "warning" | "note";
+  readonly words: Words;
+}
+
+/** What a plate shows, in the order of an argument: the finding, its numbers, what weakens it, how it was got. */
+export interface Finding {
+  readonly station: Station;
+  /** Absent where the finding speaks of the whole study. */
+  readonly section?: string;
+  readonly set?: string;
+  readonly sentence: Words;
+  readonly numbers: readonly NumberLine[];
+  readonly weaknesses: readonly Weakness[];
+  readonly methods: readonly Basis[];
+}

@@ -1,0 +1,69 @@
+import type { Analysis } from "../../core/analysis-result.ts";
+import type { MarkerHorizon } from "../../core/markers/result.ts";
+import type { Section } from "../../core/study/model.ts";
+import { cautionWords, flagWords, refersToWords } from "../wordings/cautions.ts";
+import { metres, offset, percent, position, positionInterval, significant } from "../wordings/numbers.ts";
+import { say, strong, type Words } from "../wordings/words.ts";
+import type { Finding, NumberLine } from "./finding.ts";
+
+/** Where the marker horizons of a section lie, and what they rest on. */
+export function markersFinding({ study, markers }: Analysis, section: Section): Finding {
+  const here = markers.horizons.filter((h) => h.section === section.name);
+  const main = markers.main.bySection[section.name];
+  const found = here.filter((h) => h.source === "found");
+  const flags = markers.flags.filter((flag) => flag.section === section.name);
+  const cautions = markers.cautions.filter((c) => c.section === undefined || c.section === section.name);
+  return {
+    station: "markers",
+    section: section.name,
+    sentence: sentence(section, main, found),
+    numbers: here.flatMap((h) => horizonLines(section, h, main)),
+    weaknesses: [
+      ...cautions.map((c) => ({ severity: "warning" as const, words: cautionWords(c, study) })),
+      ...flags.map((f) => ({ severity: "note" as const, words: flagWords(f) })),
+    ],
+    methods: markers.basis,
+  };
+}
+
+function sentence(section: Section, main: MarkerHorizon | undefined, found: readonly MarkerHorizon[]): Words {
+  if (main === undefined)
+    return say`The main horizon is ${strong("not placed")} in ${section.title}: its taxa are judged against no marker.`;
+  const place = strong(position(section, main.positionM));
+  const interval = positionInterval(section, main.lowM, main.highM);
+  const opening = say`In ${section.title} the main horizon lies at ${place} (${percent(main.level)}: ${interval}), `;
+  const beside = found.find((h) => h !== main && h.horizon === main.horizon);
+  if (main.source !== "found") {
+    const own = say`as ${main.source}.`;
+    if (beside === undefined) return [...opening, ...own];
+    const away = strong(`${offset(beside.positionM - main.positionM)} m`);
+    return [...opening, ...own, ...say` The ${beside.evidence} found beside it lies ${away} from there.`];
+  }
+  return [...opening, ...say`found by ${main.evidence}; it dates ${refersToWords(main.refersTo)}.`];
+}
+
+function horizonLines(section: Section, h: MarkerHorizon, main: MarkerHorizon | undefined): NumberLine[] {
+  const title = h === main ? `${h.name} (main horizon)` : h.name;
+  const lines: NumberLine[] = [
+    {
+      label: title,
+      value: position(section, h.positionM),
+      note: `${positionInterval(section, h.lowM, h.highM)}, ${h.source}, ${refersToWords(h.refersTo)}`,
+    },
+  ];
+  if (h.enrichment !== undefined)
+    lines.push({ label: "Enrichment", value: `${significant(h.enrichment)} ×` });
+  if (h.fluence !== undefined)
+    lines.push({
+      label: "Fluence",
+      value: `${significant(h.fluence.value)} ng/cm²`,
+      note: `${significant(h.fluence.low)} to ${significant(h.fluence.high)}`,
+    });
+  if (h.mixing !== undefined)
+    lines.push({
+      label: "Mixing length",
+      value: `${significant(100 * h.mixing.lengthM)} cm`,
+      note: `${significant(100 * h.mixing.lowM)} to ${significant(100 * h.mixing.highM)}; base of the smear ${metres(h.mixing.baseM)} m`,
+    });
+  return lines;
+}

@@ -1,0 +1,39 @@
+import type { Analysis } from "../../core/analysis-result.ts";
+import { list, plural, say, strong } from "../wordings/words.ts";
+import type { Finding } from "./finding.ts";
+
+/** What was read, and what stands in the way. */
+export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
+  const samples = study.sections.reduce((sum, section) => sum + section.samples.length, 0);
+  const occurrences = study.sections.reduce((sum, section) => sum + section.occurrences.length, 0);
+  const names = new Set(taxa.map((taxon) => taxon.taxon));
+  const errors = study.problems.filter((problem) => problem.severity === "error").length;
+  const cautions = study.problems.length - errors;
+  const setAside = finds.filter((find) => find.used === "no").length;
+  const state =
+    errors > 0
+      ? say` ${strong(plural(errors, "error"))} must be mended; what is unusable is left out.`
+      : say` Nothing had to be left out for errors.`;
+  return {
+    station: "tables",
+    sentence: say`${strong(plural(study.sections.length, "section"))} with ${plural(samples, "sample")} and ${plural(
+      occurrences,
+      "find",
+    )} of ${plural(names.size, "taxon", "taxa")} were read.${state}`,
+    numbers: [
+      { label: "Tables read", value: String(study.sheets.length) },
+      { label: "Errors", value: String(errors) },
+      { label: "Cautions", value: String(cautions) },
+      { label: "Finds set aside by the rules", value: String(setAside), note: list(reasons(finds), 4) },
+    ],
+    weaknesses: [],
+    methods: [],
+  };
+}
+
+function reasons(finds: Analysis["finds"]): string[] {
+  const counts = new Map<string, number>();
+  for (const find of finds)
+    if (find.used === "no") counts.set(find.reason, (counts.get(find.reason) ?? 0) + 1);
+  return [...counts].sort((a, b) => b[1] - a[1]).map(([reason, count]) => `${count} ${reason}`);
+}

@@ -1,0 +1,161 @@
+import type { Analysis } from "../../core/analysis-result.ts";
+import type { Section } from "../../core/study/model.ts";
+import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
+import { cautionWords } from "../wordings/cautions.ts";
+import { metres, offset, percent, positionInterval, pValue } from "../wordings/numbers.ts";
+import { plural, say, strong, type Words } from "../wordings/words.ts";
+import type { Finding, NumberLine } from "./finding.ts";
+
+/** The sentence that a set of taxa in one section earns: one level or not, where, and how gradual it could still be. */
+export function timingFinding(analysis: Analysis, section: Section, set: string): Finding {
+  const { timing, study } = analysis;
+  const answers = timing.answers.filter(
+    (a) => a.section === section.name && a.set === set && a.taxon === undefined,
+  );
+  const cautions = timing.cautions.filter(
+    (c) =>
+      (c.section === undefined || c.section === section.name) &&
+      (c.subject === undefined || c.subject === set),
+  );
+  return {
+    station: "timing",
+    section: section.name,
+    set,
+    sentence: sentence({ analysis, section, set, answers }),
+    numbers: answers.flatMap((answer) => line(answer, section)),
+    weaknesses: cautions.map((c) => ({ severity: "warning", words: cautionWords(c, study) })),
+    methods: timing.basis,
+  };
+}
+
+interface Telling {
+  readonly analysis: Analysis;
+  readonly section: Section;
+  readonly set: string;
+  readonly answers: readonly TimingAnswer[];
+}
+
+function sentence({ analysis, section, set, answers }: Telling): Words {
+  const by = (method: TimingMethod) => answers.find((answer) => answer.method === method);
+  const test = by("common-end");
+  const taxa = plural(test?.taxa ?? 0, "taxon", "taxa");
+  if (test?.p === undefined)
+    return say`${strong(taxa)} of the set ${set} in ${section.title}: too few to ask whether they ended together.`;
+  const gate = analysis.timing.distrusted.includes(section.name)
+    ? say`Finds thin out upward here, so the test of one level is not to be trusted. `
+    : [];
+  const isRejected = test.p < 1 - analysis.study.settings.confidence;
+  if (isRejected) return [...gate, ...rejected(taxa, test, by("duration-lower"))];
+  return [
+    ...gate,
+    ...notRejected({ analysis, section, taxa, test }, by("common-end-given"), by("duration-box")),
+  ];
+}
+
+function rejected(taxa: string, test: TimingAnswer, shortest: TimingAnswer | undefined): Words {
+  const opening = say`${strong(taxa)} ${strong("did not all end at one level")} (${pValue(test.p ?? 0)}).`;
+  if (shortest?.low === undefined) return opening;
+  return [
+    ...opening,
+    ...say` Their local disappearance took at least ${strong(`${metres(shortest.low)} m`)}.`,
+  ];
+}
+
+interface Kept {
+  readonly analysis: Analysis;
+  readonly section: Section;
+  readonly taxa: string;
+  readonly test: TimingAnswer;
+}
+
+function notRejected(
+  { analysis, section, taxa, test }: Kept,
+  where: TimingAnswer | undefined,
+  longest: TimingAnswer | undefined,
+): Words {
+  const opening = say`${strong(taxa)} ${strong("cannot be told from one level")} (${pValue(test.p ?? 1)})`;
+  const longestWords =
+    longest?.high === undefined
+      ? say` How long their local disappearance took cannot be bounded from above.`
+      : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(`${metres(longest.high)} m`)} cannot be excluded.`;
+  if (where?.low === undefined || where.high === undefined) return [...opening, ".", ...longestWords];
+  const main = analysis.markers.main.bySection[section.name];
+  const place =
+    main === undefined
+      ? say`; it lies at ${strong(positionInterval(section, where.low, where.high))}.`
+      : say`; it lies ${strong(`${offset(where.low - main.positionM)} to ${offset(where.high - main.positionM)} m`)} from the main horizon.`;
+  return [...opening, ...place, ...longestWords];
+}
+
+const longestOf = (longest: TimingAnswer) =>
+  longest.taxa === longest.taxaOfSet ? "these taxa" : `the ${longest.taxa} best sampled of them`;
+
+function line(answer: TimingAnswer, section: Section): NumberLine[] {
+  const interval =
+    answer.low === undefined || answer.high === undefined
+      ? undefined
+      : positionInterval(section, answer.low, answer.high);
+  const level = answer.level === undefined ? "" : `${percent(answer.level)}, `;
+  switch (answer.method) {
+    case "common-end":
+      return answer.p === undefined
+        ? [{ label: "All at one level?", value: answer.outcome }]
+        : [
+            {
+              label: "All at one level?",
+              value: pValue(answer.p),
+              note: `${answer.taxa} taxa, exact chi-square`,
+            },
+          ];
+    case "common-end-given":
+      return [
+        {
+          label: "The common level, if there is one",
+          value: interval ?? answer.outcome,
+          note: `${level}all taxa pooled`,
+        },
+      ];
+    case "common-end-joint":
+      return [
+        {
+          label: "Levels at which all could have ended",
+          value: answer.outcome === "empty" ? "none" : (interval ?? answer.outcome),
+          note: `${level}empty where one level is refuted`,
+        },
+      ];
+    case "confidence-levels":
+      return [
+        {
+          label: `All at ${answer.horizon ?? "the horizon"}?`,
+          value: answer.p === undefined ? answer.outcome : pValue(answer.p),
+          note: `${answer.taxa} taxa, exact Kolmogorov-Smirnov`,
+        },
+      ];
+    case "duration-lower":
+      return [
+        {
+          label: "It took at least",
+          value: answer.low === undefined ? answer.outcome : `${metres(answer.low)} m`,
+          note: `${level}all taxa`,
+        },
+      ];
+    case "duration-box":
+      return [
+        {
+          label: "It took at most",
+          value: answer.high === undefined ? `not bounded (${answer.outcome})` : `${metres(answer.high)} m`,
+          note: `${level}${answer.taxa} of ${answer.taxaOfSet} taxa`,
+        },
+      ];
+    case "centroid":
+      return [
+        {
+          label: "Recovery falls upward?",
+          value: answer.p === undefined ? answer.outcome : pValue(answer.p),
+          note: "pooled centroid of finds, one-sided",
+        },
+      ];
+    default:
+      return answer.method satisfies never;
+  }
+}

@@ -1,0 +1,129 @@
+import { describe, expect, it } from "vitest";
+import { acceptedName, settleFinds } from "../../../../src/core/study/finds.ts";
+import { find, sampleAt, searchOf, sectionWith, studyOf, taxonOf, withTaxa } from "./sections.ts";
+
+const reasonsOf = (study: ReturnType<typeof studyOf>) =>
+  settleFinds(study).finds.map((f) => [f.heightM, f.used, f.reason]);
+
+describe("which finds count", () => {
+  it("counts horizons, not specimens: finds of one sample are one horizon", () => {
+    const s1 = sampleAt("S1", 1);
+    const section = sectionWith({
+      samples: [s1],
+      searches: [searchOf(s1, "ammonoids")],
+      occurrences: [
+        find("Orvella tenuis", 1, { sample: "S1" }),
+        find("Orvella tenuis", 1, { sample: "S1", count: 7 }),
+      ],
+    });
+    const { taxa, finds } = settleFinds(studyOf(section, { taxa: [taxonOf("Orvella tenuis", "ammonoids")] }));
+    expect(taxa[0].heightsM).toEqual([1]);
+    expect(taxa[0].samples).toEqual(["S1"]);
+    expect(finds.map((f) => f.used)).toEqual(["yes", "merged"]);
+  });
+
+  it("a count of 0 is looked for and not found, never a find", () => {
+    const study = studyOf(sectionWith({ occurrences: [find("Orvella tenuis", 1, { count: 0 })] }));
+    expect(settleFinds(study).taxa).toEqual([]);
+    expect(reasonsOf(study)).toEqual([[1, "no", "zero-count"]]);
+  });
+
+  it("reads cf. and ? only inclusively, aff. and sp. never", () => {
+    const occurrences = [
+      find("Orvella tenuis", 1),
+      find("Orvella tenuis", 2, { qualifier: "cf." }),
+      find("Orvella tenuis", 3, { qualifier: "?" }),
+      find("Orvella tenuis", 4, { qualifier: "aff." }),
+      find("Orvella tenuis", 5, { qualifier: "sp." }),
+    ];
+    const strict = settleFinds(studyOf(sectionWith({ occurrences })));
+    expect(strict.taxa[0].heightsM).toEqual([1]);
+    expect(strict.taxa[0].lastInclusiveM).toBe(3);
+    const settings = withTaxa({ identification: "inclusive" });
+    const inclusive = settleFinds(studyOf(sectionWith({ occurrences }), { settings }));
+    expect(inclusive.taxa[0].heightsM).toEqual([1, 2, 3]);
+    expect(inclusive.taxa[0].lastStrictM).toBe(1);
+  });
+
+  it("a species group stands for itself", () => {
+    const section = sectionWith({
+      occurrences: [find("Orvella tenuis", 1), find("Orvella tenuis", 2, { qualifier: "ex gr." })],
+    });
+    expect(settleFinds(studyOf(section)).taxa.map((t) => t.taxon)).toEqual([
+      "Orvella tenuis",
+      "Orvella tenuis ex gr.",
+    ]);
+  });
+
+  it.each([
+    ["exclude", [1]],
+    ["exclude-yes", [1, 2]],
+    ["include", [1, 2, 3]],
+  ] as const)("reworked %s", (reworked, heights) => {
+    const occurrences = [
+      find("Orvella tenuis", 1),
+      find("Orvella tenuis", 2, { reworked: "suspected" }),
+      find("Orvella tenuis", 3, { reworked: "yes" }),
+    ];
+    const study = studyOf(sectionWith({ occurrences }), { settings: withTaxa({ reworked }) });
+    expect(settleFinds(study).taxa[0].heightsM).toEqual(heights);
+  });
+
+  it("sets aside finds in covered rock and in a repeated passage, and says which", () => {
+    const interval = { notes: "", origin: { file: "intervals.csv", row: 2 } };
+    const section = sectionWith({
+      intervals: [
+        { kind: "covered", baseM: 1, topM: 2, ...interval },
+        { kind: "fault-repeat", baseM: 3, topM: 4, ...interval },
+      ],
+      occurrences: [find("Orvella tenuis", 1), find("Orvella tenuis", 1.5), find("Orvella tenuis", 3.5)],
+    });
+    expect(reasonsOf(studyOf(section))).toEqual([
+      [1, "yes", "used"],
+      [1.5, "no", "no-recovery"],
+      [3.5, "no", "fault-repeat"],
+    ]);
+  });
+
+  it("follows synonyms and stops at a circle", () => {
+    const taxa = new Map(
+      [
+        taxonOf("Palla vetus", "g", { accepted: "Palla nova" }),
+        taxonOf("Palla nova", "g", { accepted: "Palla vera" }),
+        taxonOf("Circa una", "g", { accepted: "Circa bis" }),
+        taxonOf("Circa bis", "g", { accepted: "Circa una" }),
+      ].map((t) => [t.name, t]),
+    );
+    expect(acceptedName("Palla vetus", taxa)).toBe("Palla vera");
+    expect(acceptedName("Circa una", taxa)).toBe("Circa una");
+  });
+
+  it("a find in a sample not searched for its group has no sample", () => {
+    const s1 = sampleAt("S1", 1);
+    const section = sectionWith({
+      samples: [s1],
+      searches: [searchOf(s1, "bivalves")],
+      occurrences: [find("Orvella tenuis", 1, { sample: "S1" })],
+    });
+    const { taxa } = settleFinds(studyOf(section, { taxa: [taxonOf("Orvella tenuis", "ammonoids")] }));
+    expect(taxa[0].samples).toEqual([undefined]);
+  });
+
+  it("a name that is a property of every object is a name like others", () => {
+    const section = sectionWith({ occurrences: [find("__proto__", 1), find("constructor", 2)] });
+    expect(settleFinds(studyOf(section)).taxa.map((t) => t.taxon)).toEqual(["__proto__", "constructor"]);
+  });
+
+  it("a published range without finds brings its own number of horizons", () => {
+    const range = {
+      firstM: 1,
+      lastM: 9,
+      horizons: 12,
+      counted: "horizons" as const,
+      origin: { file: "r.csv", row: 2 },
+    };
+    const section = sectionWith({ publishedRanges: [{ taxon: "Orvella tenuis", ...range }] });
+    const [taxon] = settleFinds(studyOf(section)).taxa;
+    expect([taxon.heightsM, taxon.publishedHorizons]).toEqual([[1, 9], 12]);
+  });
+});
