@@ -1,0 +1,70 @@
+import type { LocalTaxon } from "../study/finds-result.ts";
+import type { Section } from "../study/model.ts";
+import type { WorkingRange } from "./base.ts";
+import type { Coordinate } from "./coordinate.ts";
+import { countSampled, type SampledCount } from "./sampled.ts";
+
+/** A level at which a group was looked for, with the samples taken there. */
+export interface SampledHorizon {
+  readonly heightM: number;
+  readonly samples: readonly string[];
+}
+
+/** A taxon's finds among the horizons that were sampled for its group. */
+export interface SampledRange {
+  readonly count: SampledCount;
+  /** Heights of the barren sampled horizons above the highest sampled find, from below upward. */
+  readonly barrenM: readonly number[];
+  /** Finds that are in no sample searched for the group: they do not count here. */
+  readonly unsampledFinds: number;
+}
+
+/** Samples nearer than this are one horizon. */
+const SAME_LEVEL_M = 1e-9;
+
+/** Levels at which a group was looked for, from below upward; samples inside rock without recovery are left out. */
+export function sampledHorizons(
+  section: Section,
+  group: string,
+  coordinate: Coordinate,
+): readonly SampledHorizon[] {
+  const horizons: { heightM: number; samples: string[] }[] = [];
+  const searches = section.searches.filter((s) => s.group === group && !isInGap(s.heightM, coordinate));
+  for (const { heightM, sample } of searches.toSorted((a, b) => a.heightM - b.heightM)) {
+    const last = horizons[horizons.length - 1];
+    if (last !== undefined && heightM - last.heightM <= SAME_LEVEL_M) last.samples.push(sample);
+    else horizons.push({ heightM, samples: [sample] });
+  }
+  return horizons;
+}
+
+function isInGap(heightM: number, { gaps }: Coordinate): boolean {
+  return gaps.some((gap) => heightM > gap.baseM + SAME_LEVEL_M && heightM < gap.topM - SAME_LEVEL_M);
+}
+
+/** Undefined where none of the taxon's finds lies in a sample searched for its group. */
+export function sampledRange(
+  taxon: LocalTaxon,
+  range: WorkingRange,
+  horizons: readonly SampledHorizon[],
+): SampledRange | undefined {
+  const found = new Set(taxon.samples.filter((sample) => sample !== undefined));
+  const counted =
+    range.mode === "base" ? horizons.filter((h) => h.heightM >= range.baseM - SAME_LEVEL_M) : horizons;
+  const presence = counted.map((h) => h.samples.some((sample) => found.has(sample)));
+  const count = countSampled(presence, range.mode);
+  if (count === undefined) return undefined;
+  return {
+    count,
+    barrenM: counted.slice(counted.length - count.barrenAbove).map((h) => h.heightM),
+    unsampledFinds: taxon.heightsM.length - presence.filter((isFound) => isFound).length,
+  };
+}
+
+/** True where the searches of a group tell of different efforts: equal detection is then in doubt. */
+export function hasUnequalEffort(section: Section, group: string): boolean {
+  const efforts = section.searches
+    .filter((s) => s.group === group && s.effort !== undefined)
+    .map((s) => `${s.effort} ${s.effortUnit ?? ""}`);
+  return new Set(efforts).size > 1;
+}

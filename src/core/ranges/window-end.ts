@@ -1,0 +1,46 @@
+import { commonFields, metres, type RangeCase, reasonWithoutBound } from "./range-case.ts";
+import type { RangeEnd } from "./result.ts";
+import { uniformBound } from "./uniform.ts";
+import { boundFields, cutOffNote } from "./uniform-end.ts";
+import { persistence } from "./window.ts";
+
+/**
+ * The row of method `window`: p and evidence ratio at the level asked about, and the bound that p inverts to. The
+ * level is H where H lies above the last find, never higher than the group was searched; else the highest level
+ * searched.
+ */
+export function windowEnd(rangeCase: RangeCase): RangeEnd {
+  const undefinedBecause = reasonWithoutBound(rangeCase);
+  const common = { ...commonFields(rangeCase), method: "window" as const };
+  if (undefinedBecause !== undefined) return { ...common, outcome: "undefined", note: undefinedBecause };
+  const { range, coordinate, confidence } = rangeCase;
+  if (rangeCase.reachesTop)
+    return { ...common, lowM: range.lastM, outcome: "leaves-section", note: cutOffNote };
+  const asked = levelAsked(rangeCase);
+  const persists =
+    asked.levelM > range.lastM ? persistence(range, coordinate.toEffective(asked.levelM)) : undefined;
+  const fields = {
+    ...common,
+    lowM: range.lastM,
+    ...(persists === undefined ? {} : { p: persists.p }),
+    ...(persists?.evidenceRatio === undefined ? {} : { evidenceRatio: persists.evidenceRatio }),
+    ...(persists !== undefined && asked.isHorizon ? { reachLevel: 1 - persists.p } : {}),
+  };
+  return { ...fields, ...boundFields(rangeCase, uniformBound(range, confidence), [asked.words]) };
+}
+
+interface LevelAsked {
+  readonly levelM: number;
+  readonly isHorizon: boolean;
+  readonly words: string;
+}
+
+function levelAsked({ range, horizon, searchedTopM }: RangeCase): LevelAsked {
+  const isAbove = horizon !== undefined && horizon.positionM > range.lastM;
+  if (isAbove && horizon.positionM <= searchedTopM)
+    return { levelM: horizon.positionM, isHorizon: true, words: `p at ${horizon.horizon}` };
+  const words = isAbove
+    ? `p at ${metres(searchedTopM)}, the highest level searched, below ${horizon.horizon}`
+    : `p at ${metres(searchedTopM)}, the highest level searched`;
+  return { levelM: searchedTopM, isHorizon: false, words };
+}

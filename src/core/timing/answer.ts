@@ -1,0 +1,140 @@
+import type { Caution, Progress } from "../basis.ts";
+import type { MarkerHorizon, Markers } from "../markers/result.ts";
+import { sectionBase } from "../ranges/base.ts";
+import { recoveryCoordinate } from "../ranges/coordinate.ts";
+import type { Ranges } from "../ranges/result.ts";
+import type { Candidate, LocalTaxon } from "../study/finds-result.ts";
+import type { Section, Study } from "../study/model.ts";
+import { timingBasis } from "./basis.ts";
+import { besideCautions, setCaseCautions, topCautions } from "./cautions.ts";
+import { oneLevelAnswer, whereAnswers } from "./common-end-answers.ts";
+import { durationAnswers } from "./duration-answers.ts";
+import { horizonAnswers } from "./horizon-answers.ts";
+import { levelCurve } from "./level-curve.ts";
+import { candidateRanges } from "./range-data.ts";
+import { DECLINE_GATE, pooledCentroid, recoveryAnswers } from "./recovery-answers.ts";
+import type { LevelCurve, Timing, TimingAnswer } from "./result.ts";
+import type { PlacedHorizon, SetCase } from "./set-case.ts";
+import { allCandidates, setCautions, setsOf } from "./sets.ts";
+import { type TimingWindow, timingWindow } from "./window.ts";
+
+export interface TimingInput {
+  readonly taxa: readonly LocalTaxon[];
+  readonly candidates: readonly Candidate[];
+  readonly markers: Markers;
+  readonly ranges?: Ranges;
+}
+
+/**
+ * The questions about assemblages, section by section and set by set: could the taxa have ended together, where, at
+ * which horizon, how gradually, and can the methods be trusted there. Only candidates enter; others are named beside.
+ */
+export function answerTiming(study: Study, input: TimingInput, progress?: Progress): Timing {
+  const answered = study.sections.map((section, index) => {
+    progress?.(`timing: ${section.name}`, index, study.sections.length);
+    return answerSection(section, study, input);
+  });
+  return {
+    sets: answered.flatMap((a) => a.cases.map(({ set: { ranges: _ranges, ...set } }) => set)),
+    answers: answered.flatMap((a) => a.answers),
+    curves: answered.flatMap((a) => a.curves),
+    distrusted: answered.flatMap((a) => a.distrusted),
+    cautions: answered.flatMap((a) => a.cautions),
+    basis: timingBasis,
+  };
+}
+
+interface AnsweredSection {
+  readonly cases: readonly SetCase[];
+  readonly answers: readonly TimingAnswer[];
+  readonly curves: readonly LevelCurve[];
+  readonly distrusted: readonly string[];
+  readonly cautions: readonly Caution[];
+}
+
+function answerSection(section: Section, study: Study, input: TimingInput): AnsweredSection {
+  const candidates = input.candidates.filter((c) => c.section === section.name);
+  const beside = besideCautions(section.name, candidates);
+  const { cases, window } = sectionCases(section, study, { ...input, candidates });
+  const declared = study.settings.timing.sets;
+  const ranges = cases.find(({ set }) => set.set === allCandidates)?.set.ranges ?? [];
+  const cautions = [
+    ...cases.flatMap(setCaseCautions),
+    ...topCautions(cases),
+    ...windowCautions(section, window),
+    ...setCautions(section.name, ranges, declared),
+    ...beside,
+  ];
+  const pooled = pooledCentroid(ranges);
+  return {
+    cases,
+    answers: cases.flatMap(answerSet),
+    curves: cases.flatMap((setCase) => (window === undefined ? [] : (levelCurve(setCase, window) ?? []))),
+    distrusted: pooled !== undefined && pooled.p < DECLINE_GATE ? [section.name] : [],
+    cautions,
+  };
+}
+
+function answerSet(setCase: SetCase): TimingAnswer[] {
+  return [
+    oneLevelAnswer(setCase),
+    ...whereAnswers(setCase),
+    ...horizonAnswers(setCase),
+    ...durationAnswers(setCase),
+    ...recoveryAnswers(setCase),
+  ];
+}
+
+function sectionCases(
+  section: Section,
+  { settings }: Study,
+  { taxa, candidates, markers }: TimingInput,
+): { cases: readonly SetCase[]; window: TimingWindow | undefined } {
+  const coordinate = recoveryCoordinate(section);
+  const { base } = sectionBase(section, settings, markers);
+  const ofSection = taxa.filter((taxon) => taxon.section === section.name);
+  const ranges = candidateRanges(candidates, ofSection, { base, coordinate });
+  const horizons = placedHorizons(section.name, markers);
+  const { durationHorizons, sets, window } = settings.timing;
+  const cases = setsOf(section.name, ranges, sets).map((set) => ({
+    section,
+    coordinate,
+    set,
+    horizons,
+    confidence: settings.confidence,
+    durationHorizons,
+  }));
+  const horizon = markers.main.bySection[section.name];
+  return {
+    cases,
+    window: ranges.length === 0 ? undefined : timingWindow(window, ranges, { section, horizon }),
+  };
+}
+
+/**
+ * Every horizon placed in the section. It goes by the name it answers to; where two answer to one name, the main
+ * horizon keeps it and the other goes by its own.
+ */
+function placedHorizons(section: string, markers: Markers): readonly PlacedHorizon[] {
+  const here = markers.horizons.filter(
+    (h) => h.section === section && Number.isFinite(h.lowM) && Number.isFinite(h.highM),
+  );
+  const main = markers.main.bySection[section];
+  return here.map((marker) => ({ name: nameAmong(marker, here, main), marker }));
+}
+
+function nameAmong(
+  marker: MarkerHorizon,
+  here: readonly MarkerHorizon[],
+  main: MarkerHorizon | undefined,
+): string {
+  const isMain = main?.name === marker.name && main.source === marker.source;
+  const isShared = here.some((other) => other !== marker && other.horizon === marker.horizon);
+  return isShared && !isMain ? marker.name : marker.horizon;
+}
+
+function windowCautions(section: Section, window: TimingWindow | undefined): Caution[] {
+  if (window === undefined || !window.isWidened) return [];
+  const { lowM, highM } = window;
+  return [{ code: "timing-window-widened", section: section.name, numbers: { lowM, highM } }];
+}

@@ -1,0 +1,89 @@
+import type { Caution } from "../basis.ts";
+import type { Candidate } from "../study/finds-result.ts";
+import { commonEndJoint, commonEndTest, informative } from "./common-end.ts";
+import { TOO_WELL_ALIGNED } from "./common-end-answers.ts";
+import { boxTaxa, widestTaxon } from "./duration-answers.ts";
+import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
+import type { SetCase } from "./set-case.ts";
+import { allCandidates, closedCandidates } from "./sets.ts";
+
+/** What weakens the answers about one set of one section. */
+export function setCaseCautions(setCase: SetCase): Caution[] {
+  return [...oneLevelCautions(setCase), ...boxCautions(setCase), ...declineCautions(setCase)];
+}
+
+function oneLevelCautions({ section, set, confidence }: SetCase): Caution[] {
+  const place = { section: section.name, subject: set.set };
+  const cautions: Caution[] = [];
+  const dropped = set.ranges.length - informative(set.ranges).length;
+  if (dropped > 0) cautions.push({ code: "timing-uninformative-taxa", ...place, numbers: { taxa: dropped } });
+  const test = commonEndTest(set.ranges);
+  if (test === undefined) return cautions;
+  const { p, tied } = test;
+  if (tied > 1) cautions.push({ code: "timing-ties", ...place, numbers: { taxa: tied } });
+  if (p > TOO_WELL_ALIGNED) cautions.push({ code: "timing-aligned-too-well", ...place, numbers: { p } });
+  if (p <= 1 - confidence) cautions.push({ code: "timing-one-level-rejected", ...place, numbers: { p } });
+  if (commonEndJoint(set.ranges, confidence).kind === "empty")
+    cautions.push({ code: "timing-no-common-end", ...place });
+  return cautions;
+}
+
+function boxCautions(setCase: SetCase): Caution[] {
+  const { section, set, durationHorizons } = setCase;
+  const place = { section: section.name, subject: set.set };
+  const widest = widestTaxon(setCase);
+  if (widest === undefined) return [];
+  const { taxon, horizons } = widest;
+  const cautions: Caution[] = [{ code: "timing-box-rarest", ...place, numbers: { taxon, horizons } }];
+  if (!boxTaxa(setCase).isSelected)
+    cautions.push({ code: "timing-box-all-taxa", ...place, numbers: { horizons: durationHorizons } });
+  return cautions;
+}
+
+function declineCautions({ section, set }: SetCase): Caution[] {
+  const pooled = pooledCentroid(set.ranges);
+  if (pooled === undefined || pooled.p >= DECLINE_GATE) return [];
+  const { p, z, finds } = pooled;
+  return [
+    { code: "timing-recovery-declines", section: section.name, subject: set.set, numbers: { p, z, finds } },
+  ];
+}
+
+/** Where some candidates reach the top: who, and whether the answer turns on them. */
+export function topCautions(cases: readonly SetCase[]): Caution[] {
+  const all = cases.find(({ set }) => set.set === allCandidates);
+  if (all === undefined) return [];
+  const section = all.section.name;
+  const reaching = all.set.ranges.filter((range) => range.reachesTop).map((range) => range.taxon);
+  if (reaching.length === 0) return [];
+  const cautions: Caution[] = [
+    {
+      code: "timing-reaches-top",
+      section,
+      numbers: { taxa: reaching.length, names: reaching.join(", ") },
+    },
+  ];
+  const closed = cases.find(({ set }) => set.set === closedCandidates);
+  const pAll = commonEndTest(all.set.ranges)?.p;
+  const pClosed = closed === undefined ? undefined : commonEndTest(closed.set.ranges)?.p;
+  if (pAll === undefined || pClosed === undefined) return cautions;
+  const alpha = 1 - all.confidence;
+  if (pAll <= alpha !== pClosed <= alpha)
+    cautions.push({ code: "timing-turns-on-top", section, numbers: { all: pAll, closed: pClosed } });
+  return cautions;
+}
+
+/** Taxa beside the answer: those that live on above the horizon, and those that no set contains. */
+export function besideCautions(section: string, candidates: readonly Candidate[]): Caution[] {
+  const of = (code: string, role: Candidate["role"]): Caution[] => {
+    const names = candidates.filter((c) => c.role === role).map((c) => c.taxon);
+    return names.length === 0
+      ? []
+      : [{ code, section, numbers: { taxa: names.length, names: names.join(", ") } }];
+  };
+  return [
+    ...of("timing-survivors", "survivor"),
+    ...of("timing-late-starts", "late-start"),
+    ...of("timing-too-few-horizons", "too-few"),
+  ];
+}
