@@ -10,15 +10,10 @@ function guilds(truth: Truth): Record<string, string[]> {
 }
 
 export function settingsJson(truth: Truth): string {
-  const horizons = truth.sections.map((section) => [
-    section.section,
-    section.givenHorizon === undefined ? "iridium-1" : truth.horizon,
-  ]);
-  const found = truth.sections.map((section) => [section.section, "iridium-1"]);
-  const all = [...found, ...horizons.filter(([, name]) => name === truth.horizon)];
+  const horizons = truth.sections.map(({ section }) => [section, "iridium-1"]);
   const settings = {
     seed: 20260,
-    boundary: { horizon: truth.horizon, same: [{ name: truth.horizon, horizons: all }] },
+    boundary: { horizon: truth.horizon, same: [{ name: truth.horizon, horizons }] },
     timing: { sets: guilds(truth) },
   };
   return `${JSON.stringify(settings, undefined, 2)}\n`;
