@@ -1,1 +1,1 @@
-export {};
+export { type ReadStudyOptions, readStudy } from "./tables/read-study.ts";

@@ -13,6 +13,19 @@ export const settingsSchema = v.strictObject({
   ),
   confidence: says(v.optional(share, 0.95), "level of every interval"),
   replicates: says(v.optional(positiveInteger, 20000), "replicates of every simulation"),
+  sections: v.optional(
+    v.strictObject({
+      axis: says(
+        v.optional(v.picklist(["height", "depth"])),
+        "axis of sections whose tables do not state one",
+      ),
+      unit: says(
+        v.optional(v.picklist(["m", "cm", "mm", "ft"])),
+        "unit of sections whose tables do not state one",
+      ),
+    }),
+    {},
+  ),
   taxa: v.optional(
     v.strictObject({
       minimumHorizons: says(v.optional(positiveInteger, 3), "horizons below which a taxon is too-few"),

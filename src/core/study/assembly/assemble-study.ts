@@ -1,0 +1,95 @@
+import type { Section, Study } from "../model.ts";
+import { planes } from "../tables/planes.ts";
+import { checkSection } from "./checks.ts";
+import type { Assembly, SectionFrame } from "./context.ts";
+import { readFrames } from "./frames.ts";
+import { readMeasurements } from "./measurements.ts";
+import { readOccurrences } from "./occurrences.ts";
+import { readPublishedRanges, readRecovery } from "./ranges-and-recovery.ts";
+import { readHorizons } from "./read-horizons.ts";
+import { readSamples } from "./read-samples.ts";
+import { readSearches } from "./read-searches.ts";
+import { readChoices, readClaims } from "./records.ts";
+import { readBeds, readIntervals } from "./rock.ts";
+import { rowsOf } from "./rows.ts";
+import { readTaxa } from "./taxa.ts";
+
+/** Turns the read tables into sections in metres of height; what cannot be used is left out and told in `assembly.problems`. */
+export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "taxa" | "choices" | "claims"> {
+  const frames = readFrames(assembly);
+  const samples = readSamples(frames, assembly);
+  const taxa = readTaxa(assembly);
+  const occurrences = readOccurrences(frames, { samples, taxa }, assembly);
+  const lists = {
+    intervals: readIntervals(frames, assembly),
+    beds: readBeds(frames, assembly),
+    searches: readSearches(frames, { samples, taxa, occurrences }, assembly),
+    occurrences,
+    publishedRanges: readPublishedRanges(frames, assembly),
+    measurements: readMeasurements(frames, samples, assembly),
+    horizons: readHorizons(frames, assembly),
+    recovery: readRecovery(frames, assembly),
+  };
+  rowsOf(planes, assembly);
+  const sections = [...frames.usable.values()].map((frame) => {
+    const own = {
+      intervals: lists.intervals.get(frame.name) ?? [],
+      beds: lists.beds.get(frame.name) ?? [],
+      samples: [...(samples.bySection.get(frame.name)?.values() ?? [])].toSorted(
+        (a, b) => a.heightM - b.heightM,
+      ),
+      searches: lists.searches.get(frame.name) ?? [],
+      occurrences: lists.occurrences.get(frame.name) ?? [],
+      publishedRanges: lists.publishedRanges.get(frame.name) ?? [],
+      measurements: lists.measurements.get(frame.name) ?? [],
+      horizons: lists.horizons.get(frame.name) ?? [],
+      recovery: lists.recovery.get(frame.name) ?? [],
+    };
+    const section = sectionOf(frame, own);
+    checkSection(section, assembly);
+    return section;
+  });
+  return { sections, taxa, choices: readChoices(assembly), claims: readClaims(assembly) };
+}
+
+type Contents = Pick<
+  Section,
+  | "intervals"
+  | "beds"
+  | "samples"
+  | "searches"
+  | "occurrences"
+  | "publishedRanges"
+  | "measurements"
+  | "horizons"
+  | "recovery"
+>;
+
+function sectionOf(frame: SectionFrame, own: Contents): Section {
+  const { bottomM, topM, ...declared } = frame.declared;
+  const ends = extremes(own);
+  return {
+    name: frame.name,
+    axis: frame.axis,
+    unit: frame.unit,
+    ...declared,
+    bottomM: bottomM ?? Math.min(ends.bottomM, topM ?? ends.bottomM),
+    topM: topM ?? Math.max(ends.topM, bottomM ?? ends.topM),
+    legs: [...frame.legs.values()],
+    ...own,
+  };
+}
+
+/** The ends of what was searched, measured, logged and found; 0 where there is nothing. */
+function extremes(own: Contents): { readonly bottomM: number; readonly topM: number } {
+  let bottomM = Infinity;
+  let topM = -Infinity;
+  const widen = (base: number, top: number) => {
+    bottomM = Math.min(bottomM, base);
+    topM = Math.max(topM, top);
+  };
+  for (const { baseM, topM } of [...own.samples, ...own.beds, ...own.measurements]) widen(baseM, topM);
+  for (const { heightM } of [...own.horizons, ...own.occurrences]) widen(heightM, heightM);
+  for (const { firstM, lastM } of own.publishedRanges) widen(firstM, lastM);
+  return bottomM === Infinity ? { bottomM: 0, topM: 0 } : { bottomM, topM };
+}

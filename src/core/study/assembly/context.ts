@@ -1,0 +1,63 @@
+import type { Axis, Leg, LengthUnit, Origin, Section, Sheet } from "../model.ts";
+import type { ProblemList } from "../problem-wordings.ts";
+import type { Settings } from "../settings.ts";
+import type { RowOf, TableDeclaration } from "../tables/declare.ts";
+import type { TableName } from "../tables/index.ts";
+
+/** What the headers of a sheet say about a column of positions or lengths. */
+export interface HeaderHint {
+  readonly header: string;
+  readonly axis?: Axis;
+  readonly unit?: LengthUnit;
+  readonly bracket?: string;
+}
+
+/** A usable table: its cells and what its headers say. */
+export interface ReadSheet {
+  readonly sheet: Sheet;
+  readonly hints: ReadonlyMap<string, HeaderHint>;
+}
+
+/** A validated row and where it stands. */
+export interface Row<T extends TableDeclaration> {
+  readonly cells: RowOf<T>;
+  readonly origin: Origin;
+}
+
+/** What converts a section's own positions to heights. */
+export interface SectionFrame {
+  readonly name: string;
+  readonly axis: Axis;
+  readonly unit: LengthUnit;
+  readonly legs: ReadonlyMap<string, Leg>;
+  /** One number for levels within 1e-9 m. */
+  readonly level: (heightM: number) => number;
+  readonly declared: Pick<Section, "title" | "datum" | "source" | "densityGCm3" | "origin"> & {
+    readonly bottomM?: number;
+    readonly topM?: number;
+  };
+}
+
+/** Everything that turning rows into the study needs; `problems` gathers what is wrong on the way. */
+export interface Assembly {
+  readonly settings: Settings;
+  readonly problems: ProblemList;
+  readonly sheets: ReadonlyMap<TableName, ReadSheet>;
+}
+
+/** Values gathered by section name. */
+export type BySection<T> = ReadonlyMap<string, readonly T[]>;
+
+/** Adds to the list of a key. */
+export function gather<K, T>(lists: Map<K, T[]>, key: K, value: T): void {
+  const list = lists.get(key);
+  if (list) list.push(value);
+  else lists.set(key, [value]);
+}
+
+/** Leaves out properties that are undefined, so that absent stays absent. */
+export function present<T extends object>(record: T): { [K in keyof T]: Exclude<T[K], undefined> } {
+  return Object.fromEntries(Object.entries(record).filter(([, value]) => value !== undefined)) as {
+    [K in keyof T]: Exclude<T[K], undefined>;
+  };
+}

@@ -1,0 +1,191 @@
+import { givenToHeight } from "../heights.ts";
+import { levelRegister } from "../legs.ts";
+import type { Axis, LengthUnit, Origin } from "../model.ts";
+import { suggestName } from "../nearest.ts";
+import { sections } from "../tables/sections.ts";
+import { type Assembly, present, type ReadSheet, type Row, type SectionFrame } from "./context.ts";
+import { readLegs } from "./read-legs.ts";
+import { rowsOf } from "./rows.ts";
+
+/** The sections of a study, each with what converts its positions; those that cannot be used with the reason. */
+export interface Frames {
+  readonly usable: ReadonlyMap<string, SectionFrame>;
+  readonly leftOut: ReadonlyMap<string, string>;
+  readonly areListed: boolean;
+}
+
+interface Scale {
+  readonly axis: Axis;
+  readonly unit: LengthUnit;
+}
+
+/** Finds every section with its axis and unit: from sections.csv, column headers, or the settings; nothing is assumed. */
+export function readFrames(assembly: Assembly): Frames {
+  const listed = assembly.sheets.get("sections");
+  const usable = new Map<string, SectionFrame>();
+  const leftOut = new Map<string, string>();
+  if (listed) readListed(assembly, { listed, usable, leftOut });
+  else readNamed(assembly, usable, leftOut);
+  return { usable: readLegs(usable, assembly), leftOut, areListed: listed !== undefined };
+}
+
+interface Listing {
+  readonly listed: ReadSheet;
+  readonly usable: Map<string, SectionFrame>;
+  readonly leftOut: Map<string, string>;
+}
+
+function readListed(assembly: Assembly, { listed, usable, leftOut }: Listing): void {
+  for (const name of namesIn(listed).keys()) {
+    leftOut.set(name, "its row in sections.csv has an error");
+  }
+  for (const row of rowsOf(sections, assembly)) {
+    const { section } = row.cells;
+    if (usable.has(section)) {
+      assembly.problems.add("redefined", {
+        ...row.origin,
+        column: "section",
+        found: section,
+        detail: `section ${section}`,
+      });
+      continue;
+    }
+    const frame = frameOf(row, listed, assembly);
+    if (!frame) continue;
+    usable.set(section, frame);
+    leftOut.delete(section);
+  }
+}
+
+function frameOf(row: Row<typeof sections>, listed: ReadSheet, assembly: Assembly): SectionFrame | undefined {
+  const { cells, origin } = row;
+  const named = { axis: cells.axis, unit: cells.unit };
+  const scale = scaleOf(cells.section, named, { assembly, origin, own: listed });
+  if (!scale) return undefined;
+  const height = (position: number | undefined) =>
+    position === undefined ? undefined : givenToHeight(position, scale);
+  const bottomM = height(cells.bottom);
+  const topM = height(cells.top);
+  if (bottomM !== undefined && topM !== undefined && !(topM > bottomM)) {
+    const found = `bottom ${cells.bottom}, top ${cells.top}`;
+    assembly.problems.add("top-below-base", { ...origin, column: "top", found });
+    return undefined;
+  }
+  const declared = present({
+    title: cells.name ?? cells.section,
+    datum: cells.datum ?? "",
+    source: cells.source ?? "",
+    densityGCm3: cells.density_g_cm3,
+    origin,
+    bottomM,
+    topM,
+  });
+  return { name: cells.section, ...scale, legs: new Map(), level: levelRegister(), declared };
+}
+
+/** Without sections.csv: one section per distinct name in the tables. */
+function readNamed(
+  assembly: Assembly,
+  usable: Map<string, SectionFrame>,
+  leftOut: Map<string, string>,
+): void {
+  const names = new Map<string, Origin>();
+  for (const read of assembly.sheets.values()) {
+    for (const [name, origin] of namesIn(read)) if (!names.has(name)) names.set(name, origin);
+  }
+  for (const [name, origin] of names) {
+    const scale = scaleOf(name, {}, { assembly, origin });
+    if (!scale) leftOut.set(name, "its axis and unit are not stated");
+    else {
+      const declared = { title: name, datum: "", source: "" };
+      usable.set(name, { name, ...scale, legs: new Map(), level: levelRegister(), declared });
+    }
+  }
+}
+
+/** The section names of a sheet, each with the row it is first met in. */
+function namesIn({ sheet }: ReadSheet): ReadonlyMap<string, Origin> {
+  const names = new Map<string, Origin>();
+  const isAboutSections = sheet.table !== "claims" && sheet.table !== "choices" && sheet.table !== "taxa";
+  const column = isAboutSections ? sheet.columns.indexOf("section") : -1;
+  if (column === -1) return names;
+  for (const [index, cells] of sheet.rows.entries()) {
+    const name = (cells[column] ?? "").trim().normalize("NFC");
+    if (name !== "" && !names.has(name)) names.set(name, { file: sheet.file, row: sheet.rowNumbers[index] });
+  }
+  return names;
+}
+
+interface ScaleSearch {
+  readonly assembly: Assembly;
+  readonly origin: Origin;
+  readonly own?: ReadSheet;
+}
+
+/** Axis and unit: as its row says, else as the headers of the tables that hold it agree, else as the settings say. */
+function scaleOf(section: string, said: Partial<Scale>, search: ScaleSearch): Scale | undefined {
+  const { assembly, origin } = search;
+  if (said.axis !== undefined && said.unit !== undefined) return { axis: said.axis, unit: said.unit };
+  const sheets = [...assembly.sheets.values()].filter(
+    (read) => read === search.own || namesIn(read).has(section),
+  );
+  const hints = sheets.flatMap((read) => [...read.hints.values()]);
+  const axes = new Set(hints.flatMap(({ axis }) => axis ?? []));
+  const units = new Set(hints.flatMap(({ unit }) => unit ?? []));
+  const axis = said.axis ?? only(axes) ?? assembly.settings.sections.axis;
+  const unit = said.unit ?? only(units) ?? assembly.settings.sections.unit;
+  if (axis !== undefined && unit !== undefined) return { axis, unit };
+  const detail = axes.size > 1 || units.size > 1 ? "The headers contradict each other." : undefined;
+  assembly.problems.add("axis-unknown", { ...origin, column: "section", found: section, detail });
+  return undefined;
+}
+
+const only = <T>(values: ReadonlySet<T>): T | undefined => (values.size === 1 ? [...values][0] : undefined);
+
+/** The frame a row's section has, or undefined with the problem told. */
+export function frameFor(
+  section: string,
+  origin: Origin,
+  { frames, read, assembly }: FrameSearch,
+): SectionFrame | undefined {
+  const frame = frames.usable.get(section);
+  if (!frame) {
+    tellMissing(section, origin, { frames, read, assembly });
+    return undefined;
+  }
+  return isContradicted(frame, origin, { frames, read, assembly }) ? undefined : frame;
+}
+
+export interface FrameSearch {
+  readonly frames: Frames;
+  readonly read: ReadSheet;
+  readonly assembly: Assembly;
+}
+
+function tellMissing(section: string, origin: Origin, { frames, assembly }: FrameSearch): void {
+  const reason = frames.leftOut.get(section);
+  const place = { ...origin, column: "section", found: section };
+  if (reason !== undefined) {
+    assembly.problems.addOnce(section, "section-left-out", { ...place, detail: reason });
+  } else {
+    const nearest = suggestName(section, frames.usable.keys());
+    assembly.problems.add("unlisted-section", { ...place, nearest });
+  }
+}
+
+/** A header that names another axis or unit than the section's: nothing is converted on a guess. */
+function isContradicted(frame: SectionFrame, origin: Origin, { read, assembly }: FrameSearch): boolean {
+  for (const { header, axis, unit } of read.hints.values()) {
+    const isOther = (axis ?? frame.axis) !== frame.axis || (unit ?? frame.unit) !== frame.unit;
+    if (!isOther) continue;
+    const detail = `${frame.axis} in ${frame.unit}, as section ${frame.name} says`;
+    assembly.problems.addOnce(frame.name, "axis-contradicted", {
+      ...origin,
+      column: header,
+      found: header,
+      detail,
+    });
+    return true;
+  }
+  return false;
+}

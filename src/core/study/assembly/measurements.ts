@@ -1,0 +1,163 @@
+import { oneSigma } from "../errors.ts";
+import type { Measurement, Reading } from "../model.ts";
+import { readingSize, readPolarityCell, readValueCell, scaleReading } from "../readings.ts";
+import type { RowOf } from "../tables/declare.ts";
+import { measurements } from "../tables/measurements.ts";
+import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
+import { type Assembly, type BySection, gather, present, type ReadSheet, type Row } from "./context.ts";
+import { type Frames, frameFor } from "./frames.ts";
+import { type Place, placeOf } from "./occurrences.ts";
+import type { SampleLists } from "./read-samples.ts";
+import { rowsOf } from "./rows.ts";
+
+type MeasurementRow = Row<typeof measurements>;
+
+/** Every usable measurement by section, in the canonical unit of its quantity. */
+export function readMeasurements(
+  frames: Frames,
+  samples: SampleLists,
+  assembly: Assembly,
+): BySection<Measurement> {
+  const read = assembly.sheets.get("measurements");
+  const lists = new Map<string, Measurement[]>();
+  if (!read) return lists;
+  for (const row of rowsOf(measurements, assembly)) {
+    const { cells, origin } = row;
+    const frame = frameFor(cells.section, origin, { frames, read, assembly });
+    const place = frame && placeOf(cells, frame, { origin, samples, assembly });
+    if (!frame || !place) continue;
+    const value = valueOf(row, read, assembly);
+    if (value)
+      gather(lists, frame.name, measurementOf(row, place, { ...value, density: frame.declared.densityGCm3 }));
+  }
+  return lists;
+}
+
+interface Value {
+  readonly reading: Reading;
+  readonly unit: MeasurementUnit;
+  readonly givenUnit: string;
+  readonly sigma?: number;
+}
+
+function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: Assembly): Value | undefined {
+  const analyte = plainAnalyte(cells.analyte);
+  const givenUnit = cells.unit || (read.hints.get("value")?.bracket ?? "");
+  const unit = measurementUnit(givenUnit, analyte);
+  if (unit === undefined || unit === "refused") {
+    const code = unit === undefined ? "unknown-unit" : "ambiguous-ppt";
+    assembly.problems.add(code, {
+      ...origin,
+      column: "unit",
+      found: givenUnit,
+      detail: measurementUnitsInWords,
+    });
+    return undefined;
+  }
+  const cell =
+    unit.quantity === "polarity"
+      ? readPolarityCell(cells.value)
+      : readValueCell(cells.value, cells.detection_limit);
+  if (cell.kind === "missing") {
+    assembly.problems.addOnce(analyte, "value-missing", { ...origin, column: "value", found: cells.value });
+    return undefined;
+  }
+  if (cell.kind === "problem") {
+    assembly.problems.add(cell.code, { ...origin, column: "value", found: cells.value });
+    return undefined;
+  }
+  const { reading } = cell;
+  if (!isSound({ cells, origin }, reading, assembly)) return undefined;
+  if (reading.kind === "value" && reading.value === 0 && isTrace(unit)) {
+    assembly.problems.addOnce(analyte, "trace-zero", { ...origin, column: "value", found: cells.value });
+  }
+  return {
+    reading: scaleReading(reading, unit.factor),
+    unit,
+    givenUnit,
+    sigma: sigmaOf(cells, reading, unit),
+  };
+}
+
+/** Trials bound the successes; an error must say what it is. */
+function isSound({ cells, origin }: MeasurementRow, reading: Reading, assembly: Assembly): boolean {
+  if (cells.error !== undefined && cells.error_kind === undefined) {
+    assembly.problems.add("error-kind-missing", { ...origin, column: "error_kind", found: "" });
+    return false;
+  }
+  if (cells.trials === undefined || reading.kind !== "value") return true;
+  if (reading.value < 0 || reading.value > cells.trials || !Number.isInteger(reading.value)) {
+    assembly.problems.add("more-successes", {
+      ...origin,
+      column: "value",
+      found: `${cells.value} of ${cells.trials}`,
+    });
+    return false;
+  }
+  return true;
+}
+
+function sigmaOf(
+  cells: RowOf<typeof measurements>,
+  reading: Reading,
+  unit: MeasurementUnit,
+): number | undefined {
+  if (cells.error === undefined || cells.error_kind === undefined) return undefined;
+  return oneSigma(cells.error, cells.error_kind, readingSize(reading)) * unit.factor;
+}
+
+function measurementOf(
+  { cells, origin }: MeasurementRow,
+  place: Place,
+  { reading, unit, givenUnit, sigma, density }: Value & { readonly density?: number },
+): Measurement {
+  const limit = cells.detection_limit;
+  return {
+    analyte: plainAnalyte(cells.analyte),
+    quantity: unit.quantity,
+    ...present({ sample: place.sample?.name }),
+    baseM: place.baseM,
+    topM: place.topM,
+    heightM: place.heightM,
+    reading,
+    unit: unit.unit,
+    givenValue: cells.value,
+    givenUnit,
+    ...present({ sigma, detectionLimit: limit === undefined ? undefined : limit * unit.factor }),
+    ...present({
+      trials: cells.trials,
+      amount: cells.amount,
+      amountUnit: cells.amount_unit,
+      method: cells.method,
+    }),
+    ...present({ densityGCm3: place.sample?.densityGCm3 ?? density }),
+    origin,
+  };
+}
+
+const symbols = new Map([
+  ["ir", "iridium"],
+  ["ni", "nickel"],
+  ["hg", "mercury"],
+  ["cr", "chromium"],
+  ["co", "cobalt"],
+  ["pt", "platinum"],
+  ["os", "osmium"],
+  ["al", "aluminium"],
+  ["aluminum", "aluminium"],
+  ["ca", "calcium"],
+  ["fe", "iron"],
+  ["δ13c", "d13c"],
+  ["delta13c", "d13c"],
+  ["d13ccarb", "d13c"],
+  ["δ18o", "d18o"],
+]);
+
+/** An analyte in lower case with hyphens; element symbols and isotope signs by their usual names. */
+export function plainAnalyte(written: string): string {
+  const plain = written
+    .trim()
+    .toLowerCase()
+    .replace(/[\s_]+/g, "-");
+  return symbols.get(plain) ?? plain;
+}

@@ -1,0 +1,96 @@
+import { givenToHeight } from "../heights.ts";
+import { legHeight } from "../legs.ts";
+import type { Origin } from "../model.ts";
+import { suggestName } from "../nearest.ts";
+import { toMetres } from "../units.ts";
+import type { Assembly, SectionFrame } from "./context.ts";
+
+export interface PositionCell {
+  readonly origin: Origin;
+  readonly column: string;
+  readonly leg?: string;
+}
+
+/** The height of a position cell: the section's own scale, or the reading of its leg; undefined with the problem told. */
+export function heightOf(
+  position: number,
+  frame: SectionFrame,
+  { origin, column, leg: name, assembly }: PositionCell & { readonly assembly: Assembly },
+): number | undefined {
+  if (name === undefined) return frame.level(givenToHeight(position, frame));
+  const leg = frame.legs.get(name);
+  if (!leg) {
+    const nearest = suggestName(name, frame.legs.keys());
+    assembly.problems.add("unknown-leg", { ...origin, column: "leg", found: name, nearest });
+    return undefined;
+  }
+  const height = legHeight(leg, position);
+  if (height !== undefined) return frame.level(height);
+  const detail = `${leg.readings[0]} to ${leg.readings.at(-1)} ${frame.unit} on leg ${name}`;
+  assembly.problems.add("outside-leg", { ...origin, column, found: String(position), detail });
+  return undefined;
+}
+
+/** Metres of a length in the section's own unit. */
+export const lengthOf = (length: number | undefined, frame: SectionFrame): number | undefined =>
+  length === undefined ? undefined : toMetres(length, frame.unit);
+
+export interface Slab {
+  readonly baseM: number;
+  readonly topM: number;
+  readonly heightM: number;
+}
+
+export interface SlabCells {
+  readonly position?: number;
+  readonly base?: number;
+  readonly top?: number;
+  readonly thickness?: number;
+  readonly leg?: string;
+}
+
+/** Base, top and middle of a slab given by its ends, by middle and thickness, or as a point. */
+export function slabOf(
+  cells: SlabCells,
+  frame: SectionFrame,
+  place: { readonly origin: Origin; readonly assembly: Assembly },
+): Slab | undefined {
+  const { position, base, top, leg } = cells;
+  if (base !== undefined && top !== undefined) return endsOf(base, top, { ...place, frame, leg });
+  if (position === undefined) return undefined;
+  const heightM = heightOf(position, frame, { ...place, column: "position", leg });
+  if (heightM === undefined) return undefined;
+  const half = (lengthOf(cells.thickness, frame) ?? 0) / 2;
+  return { baseM: heightM - half, topM: heightM + half, heightM };
+}
+
+interface Ends {
+  readonly origin: Origin;
+  readonly assembly: Assembly;
+  readonly frame: SectionFrame;
+  readonly leg?: string;
+  /** False where base and top must differ. */
+  readonly isPointAllowed?: boolean;
+}
+
+/** Heights of base and top; top below base is told. */
+export function endsOf(base: number, top: number, ends: Ends): Slab | undefined {
+  const { origin, assembly, frame, leg, isPointAllowed = true } = ends;
+  const baseM = heightOf(base, frame, { origin, column: "base", leg, assembly });
+  const topM = heightOf(top, frame, { origin, column: "top", leg, assembly });
+  if (baseM === undefined || topM === undefined) return undefined;
+  if (topM < baseM || (topM === baseM && !isPointAllowed)) {
+    const detail =
+      frame.axis === "depth"
+        ? "In a depth section base is the larger number: exchange base and top, or correct them."
+        : undefined;
+    assembly.problems.add("top-below-base", {
+      ...origin,
+      column: "top",
+      found: `base ${base}, top ${top}`,
+      detail,
+    });
+    return undefined;
+  }
+  return { baseM, topM, heightM: frame.level((baseM + topM) / 2) };
+}

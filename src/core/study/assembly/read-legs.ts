@@ -1,0 +1,62 @@
+import { givenToHeight } from "../heights.ts";
+import { suggestName } from "../nearest.ts";
+import { legs } from "../tables/legs.ts";
+import { type Assembly, gather, type Row, type SectionFrame } from "./context.ts";
+import { rowsOf } from "./rows.ts";
+
+type LegRow = Row<typeof legs>;
+
+/** The frames with their legs. A leg with a single row, or with one reading at two positions, is told. */
+export function readLegs(
+  frames: ReadonlyMap<string, SectionFrame>,
+  assembly: Assembly,
+): ReadonlyMap<string, SectionFrame> {
+  const bySection = new Map<string, Map<string, LegRow[]>>();
+  for (const row of rowsOf(legs, assembly)) {
+    const { section, leg } = row.cells;
+    if (!frames.has(section)) {
+      const nearest = suggestName(section, frames.keys());
+      assembly.problems.add("unlisted-section", {
+        ...row.origin,
+        column: "section",
+        found: section,
+        nearest,
+      });
+      continue;
+    }
+    const rows = bySection.get(section) ?? new Map<string, LegRow[]>();
+    bySection.set(section, rows);
+    gather(rows, leg, row);
+  }
+  const withLegs = new Map<string, SectionFrame>();
+  for (const [name, frame] of frames) withLegs.set(name, legsOf(frame, bySection.get(name), assembly));
+  return withLegs;
+}
+
+function legsOf(frame: SectionFrame, rows: ReadonlyMap<string, LegRow[]> | undefined, assembly: Assembly) {
+  const read = new Map(frame.legs);
+  for (const [name, legRows] of rows ?? []) {
+    const sorted = distinctReadings(legRows, assembly);
+    if (sorted.length < 2) {
+      assembly.problems.add("short-leg", { ...sorted[0].origin, column: "leg", found: name });
+      continue;
+    }
+    read.set(name, {
+      name,
+      readings: sorted.map(({ cells }) => cells.reading),
+      heightsM: sorted.map(({ cells }) => givenToHeight(cells.position, frame)),
+    });
+  }
+  return { ...frame, legs: read };
+}
+
+function distinctReadings(rows: readonly LegRow[], assembly: Assembly): readonly LegRow[] {
+  const byReading = new Map<number, LegRow>();
+  for (const row of rows) {
+    const { reading } = row.cells;
+    if (byReading.has(reading)) {
+      assembly.problems.add("repeated-reading", { ...row.origin, column: "reading", found: String(reading) });
+    } else byReading.set(reading, row);
+  }
+  return [...byReading.values()].toSorted((a, b) => a.cells.reading - b.cells.reading);
+}

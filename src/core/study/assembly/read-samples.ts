@@ -1,0 +1,105 @@
+import { sameLevelM } from "../legs.ts";
+import type { Origin, Sample } from "../model.ts";
+import { samples } from "../tables/samples.ts";
+import { type Assembly, present, type SectionFrame } from "./context.ts";
+import { type Frames, frameFor } from "./frames.ts";
+import { lengthOf, type SlabCells, slabOf } from "./position.ts";
+import { rowsOf } from "./rows.ts";
+
+/** The samples of each section by name, and whether a table lists them. */
+export interface SampleLists {
+  readonly bySection: ReadonlyMap<string, ReadonlyMap<string, Sample>>;
+  readonly areListed: boolean;
+}
+
+/** Samples of samples.csv; without it, the samples that finds and measurements name with a position. */
+export function readSamples(frames: Frames, assembly: Assembly): SampleLists {
+  const read = assembly.sheets.get("samples");
+  const bySection = new Map<string, Map<string, Sample>>();
+  for (const name of frames.usable.keys()) bySection.set(name, new Map());
+  if (!read) return { bySection: deriveSamples(bySection, frames, assembly), areListed: false };
+  for (const { cells, origin } of rowsOf(samples, assembly)) {
+    const frame = frameFor(cells.section, origin, { frames, read, assembly });
+    const slab = frame && slabOf(cells, frame, { origin, assembly });
+    const known = frame && bySection.get(frame.name);
+    if (!frame || !slab || !known) continue;
+    const sample = {
+      name: cells.sample,
+      ...slab,
+      ...present({ leg: cells.leg, densityGCm3: cells.density_g_cm3 }),
+      ...present({ positionErrorM: lengthOf(cells.position_error, frame) }),
+      notes: cells.notes ?? "",
+      origin,
+    };
+    addSample(sample, known, assembly);
+  }
+  return { bySection, areListed: true };
+}
+
+/** A sample met again on another leg at the same level counts once; anything else of the same name is told. */
+function addSample(sample: Sample, known: Map<string, Sample>, assembly: Assembly): void {
+  const first = known.get(sample.name);
+  if (!first) {
+    known.set(sample.name, sample);
+    return;
+  }
+  const isMetAgain =
+    first.leg !== sample.leg &&
+    Math.abs(first.baseM - sample.baseM) <= sameLevelM &&
+    Math.abs(first.topM - sample.topM) <= sameLevelM;
+  if (isMetAgain) return;
+  assembly.problems.add("redefined", {
+    ...sample.origin,
+    column: "sample",
+    found: sample.name,
+    detail: `sample ${sample.name} (first in row ${first.origin.row})`,
+  });
+}
+
+type Derived = Map<string, Map<string, Sample>>;
+
+/** Points where finds and measurements name both a sample and where it lies. Problems are told when those rows are read. */
+function deriveSamples(bySection: Derived, frames: Frames, assembly: Assembly): Derived {
+  for (const table of ["occurrences", "measurements"] as const) {
+    const read = assembly.sheets.get(table);
+    if (!read) continue;
+    const at = (name: string) => read.sheet.columns.indexOf(name);
+    const columns = {
+      section: at("section"),
+      sample: at("sample"),
+      position: at("position"),
+      base: at("base"),
+      top: at("top"),
+      leg: at("leg"),
+    };
+    for (const [index, cells] of read.sheet.rows.entries()) {
+      const text = (column: keyof typeof columns) => (cells[columns[column]] ?? "").trim().normalize("NFC");
+      const frame = frames.usable.get(text("section"));
+      const name = text("sample");
+      const known = frame && bySection.get(frame.name);
+      if (!frame || !known || name === "" || known.has(name)) continue;
+      const origin = { file: read.sheet.file, row: read.sheet.rowNumbers[index] };
+      const slab = quietSlab(text, frame, { origin, assembly });
+      if (slab) known.set(name, { name, ...slab, notes: "", origin });
+    }
+  }
+  return bySection;
+}
+
+function quietSlab(
+  text: (column: "position" | "base" | "top" | "leg") => string,
+  frame: SectionFrame,
+  place: { readonly origin: Origin; readonly assembly: Assembly },
+) {
+  const number = (column: "position" | "base" | "top") =>
+    /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/.test(text(column)) ? Number(text(column)) : undefined;
+  const leg = text("leg");
+  const cells: SlabCells = {
+    position: number("position"),
+    base: number("base"),
+    top: number("top"),
+    ...(leg === "" ? {} : { leg }),
+  };
+  const silent = { ...place.assembly, problems: { add: () => {}, addOnce: () => {}, problems: () => [] } };
+  return slabOf(cells, frame, { origin: place.origin, assembly: silent });
+}

@@ -1,0 +1,111 @@
+import { parseCell } from "../cells.ts";
+import { suggestName } from "../nearest.ts";
+import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
+import type { TableName } from "../tables/index.ts";
+import type { Assembly, ReadSheet, Row } from "./context.ts";
+
+/** The validated rows of a declared table; rows with an error are left out, and every error is told. */
+export function rowsOf<T extends TableDeclaration & { readonly name: TableName }>(
+  table: T,
+  assembly: Assembly,
+): readonly Row<T>[] {
+  const read = assembly.sheets.get(table.name);
+  if (!read) return [];
+  const rows: Row<T>[] = [];
+  const seen = new Map<string, number>();
+  for (const [index, cells] of read.sheet.rows.entries()) {
+    const row = read.sheet.rowNumbers[index];
+    if (isRepeated(cells, row, { seen, read, assembly })) continue;
+    const values = readRow(cells, row, { table, read, assembly });
+    if (values) rows.push({ cells: values as RowOf<T>, origin: { file: read.sheet.file, row } });
+  }
+  return rows;
+}
+
+interface Repeats {
+  readonly seen: Map<string, number>;
+  readonly read: ReadSheet;
+  readonly assembly: Assembly;
+}
+
+function isRepeated(cells: readonly string[], row: number, { seen, read, assembly }: Repeats): boolean {
+  const content = JSON.stringify(cells.map((cell) => cell.trim()));
+  const first = seen.get(content);
+  if (first === undefined) {
+    seen.set(content, row);
+    return false;
+  }
+  assembly.problems.add("duplicate-row", {
+    file: read.sheet.file,
+    row,
+    found: cells.join(","),
+    detail: String(first),
+  });
+  return true;
+}
+
+interface Reading {
+  readonly table: TableDeclaration;
+  readonly read: ReadSheet;
+  readonly assembly: Assembly;
+}
+
+function readRow(cells: readonly string[], row: number, reading: Reading): object | undefined {
+  const { table, read, assembly } = reading;
+  const { file, columns } = read.sheet;
+  const values = new Map<string, unknown>();
+  let isUsable = true;
+  for (const [name, column] of Object.entries(table.columns)) {
+    const index = columns.indexOf(name);
+    const text = index === -1 ? "" : (cells[index] ?? "");
+    const { value, isGood } = readCell(text, column, { name, row, file, assembly, read });
+    values.set(name, value);
+    isUsable &&= isGood;
+  }
+  if (isUsable && !hasOneOf(table, values)) {
+    const detail = (table.oneOf ?? []).map((set) => set.join(" and ")).join(", or ");
+    assembly.problems.add("one-of", { file, row, found: "", detail });
+    return undefined;
+  }
+  return isUsable ? Object.fromEntries(values) : undefined;
+}
+
+interface CellPlace {
+  readonly name: string;
+  readonly row: number;
+  readonly file: string;
+  readonly assembly: Assembly;
+  readonly read: ReadSheet;
+}
+
+/** A blank that another rule speaks of: a missing value is told by the reading, a unit can stand in the header. */
+const isToldElsewhere = (place: CellPlace): boolean =>
+  place.name === "value" || (place.name === "unit" && place.read.hints.get("value")?.bracket !== undefined);
+
+function readCell(text: string, column: ColumnDeclaration, place: CellPlace) {
+  const { name, row, file, assembly } = place;
+  const parsed = parseCell(text, column);
+  if ("code" in parsed) {
+    const nearest = parsed.code === "not-in-list" ? suggestName(text.trim(), column.values ?? []) : undefined;
+    assembly.problems.add(parsed.code, {
+      file,
+      row,
+      column: name,
+      found: text,
+      detail: parsed.detail,
+      nearest,
+    });
+    return { value: undefined, isGood: false };
+  }
+  if (parsed.value === undefined && column.required && !isToldElsewhere(place)) {
+    assembly.problems.add("blank-cell", { file, row, column: name, found: text });
+    return { value: undefined, isGood: false };
+  }
+  return {
+    value: parsed.value ?? (isToldElsewhere(place) && column.required ? "" : undefined),
+    isGood: true,
+  };
+}
+
+const hasOneOf = (table: TableDeclaration, values: ReadonlyMap<string, unknown>): boolean =>
+  table.oneOf === undefined || table.oneOf.some((set) => set.every((name) => values.get(name) !== undefined));

@@ -1,0 +1,272 @@
+import type { Problem } from "./problem.ts";
+
+/** Where a problem stands and what its sentence needs. */
+export interface ProblemPlace {
+  readonly file: string;
+  readonly row?: number;
+  readonly column?: string;
+  readonly found: string;
+  /** The name, list or limit that the wording of this code speaks of. */
+  readonly detail?: string;
+  /** The nearest known name, where there is one. */
+  readonly nearest?: string;
+}
+
+type Words = Pick<Problem, "severity" | "expected" | "mend">;
+type Wording = (place: ProblemPlace) => Words;
+
+const error = (expected: string, mend: string): Words => ({ severity: "error", expected, mend });
+const caution = (expected: string, mend: string): Words => ({ severity: "caution", expected, mend });
+const column = (place: ProblemPlace) =>
+  place.column === undefined ? "this column" : `column ${place.column}`;
+const nearest = (place: ProblemPlace) =>
+  place.nearest === undefined ? "" : ` Did you mean ${place.nearest}?`;
+
+/** The one table of wordings: every problem's expectation and mend, by code. */
+const wordings = {
+  "empty-file": () =>
+    error("a header row and at least one row", "Fill the file in, or take it out of the study."),
+  "header-only": () =>
+    error("at least one row below the header", "Add rows, or take the file out of the study."),
+  "undecodable-bytes": () =>
+    error("text in UTF-8", "Save the file again as CSV UTF-8 (in a spreadsheet: Save as, CSV UTF-8)."),
+  "wrong-delimiter": (p) =>
+    error(
+      "cells parted by commas",
+      `The cells are parted by ${p.detail ?? "another sign"}: save the file as comma-separated CSV.`,
+    ),
+  "decimal-comma": () =>
+    error(
+      "numbers with a decimal point",
+      "Write every number of this file with a point (12.5), or set the spreadsheet to a decimal point and save again.",
+    ),
+  "unclosed-quote": () =>
+    error(
+      "every opening quote to be closed",
+      "Close the quote that opens here; a quote inside a cell is written twice.",
+    ),
+  "malformed-quote": () =>
+    error(
+      "quotes only around a whole cell",
+      "Put the whole cell in quotes and write a quote inside it twice.",
+    ),
+  "too-many-cells": (p) =>
+    error(
+      `${p.detail ?? "as many"} cells, as in the header`,
+      "Put a cell that holds a comma in quotes, or take the further cells out.",
+    ),
+  "too-few-cells": (p) =>
+    caution(
+      `${p.detail ?? "as many"} cells, as in the header`,
+      "The cells that lack at the end are read as blank; fill them in if they should not be.",
+    ),
+  "duplicate-header": () =>
+    error("each column once", "Rename or take out one of the two columns that were read as the same."),
+  "missing-column": (p) =>
+    error(
+      `a column ${p.detail}`,
+      `Add the column ${p.detail}, or name the one that holds it so.${nearest(p)}`,
+    ),
+  "unknown-column": (p) => caution("a declared column", `The column is kept and not used.${nearest(p)}`),
+  "blank-header": () => caution("a name above every column", "Name the column; it is kept and not used."),
+  "duplicate-table": (p) =>
+    error("one file for each table", `${p.detail} was read already; put the rows into one file.`),
+  "unknown-file": (p) => caution("a table of the study", `The file is kept and not used.${nearest(p)}`),
+  "no-data": () =>
+    error("occurrences.csv, published-ranges.csv or measurements.csv", "Add at least one of these tables."),
+  "unknown-unit": (p) => error(p.detail ?? "a known unit", `Write one of the units listed.${nearest(p)}`),
+  "ambiguous-ppt": () =>
+    error(
+      "a mass fraction in ppt (1e-12), never parts per thousand",
+      "Write per mil for parts per thousand.",
+    ),
+  "blank-cell": (p) => error(`something in ${column(p)}`, `Fill ${column(p)} in, or take the row out.`),
+  "one-of": (p) => error(`${p.detail}`, `Fill in ${p.detail}.`),
+  "not-a-number": (p) =>
+    error(
+      `a number in ${column(p)}`,
+      "Write digits with a decimal point, without a unit or other signs; leave it blank where there is none.",
+    ),
+  "not-finite": (p) =>
+    error(`a finite number in ${column(p)}`, "Leave the cell blank where there is no number."),
+  "not-an-integer": (p) => error(`a whole number in ${column(p)}`, "Write a whole number."),
+  "out-of-limits": (p) => error(`a number ${p.detail} in ${column(p)}`, "Correct the number."),
+  "not-in-list": (p) => error(`one of ${p.detail}`, `Write one of these words.${nearest(p)}`),
+  "not-yes-or-no": () => error("yes or no", "Write yes or no, or leave the cell blank."),
+  "duplicate-row": (p) =>
+    caution("each row once", `The same row stands in row ${p.detail}; it is used once.`),
+  redefined: (p) =>
+    error(
+      `one row for ${p.detail}`,
+      "It is given twice with different content: take one row out or rename one. The first is used.",
+    ),
+  "axis-unknown": (p) =>
+    error(
+      `the axis (height or depth) and unit (m, cm, mm, ft) of section ${p.found}`,
+      `State them in sections.csv, in a column header such as "height (m)" or "depth_ft", or in the settings sections.axis and sections.unit.${p.detail ? ` ${p.detail}` : ""}`,
+    ),
+  "axis-contradicted": (p) =>
+    error(
+      `${p.detail}`,
+      "Make the header and the section agree: its rows in this file are left out until then.",
+    ),
+  "unlisted-section": (p) =>
+    error("a section of sections.csv", `Add the section to sections.csv or correct the name.${nearest(p)}`),
+  "section-left-out": (p) =>
+    error(`a section that can be used`, `Mend section ${p.found} first: ${p.detail}.`),
+  "top-below-base": (p) => error("top above base", p.detail ?? "Exchange base and top, or correct them."),
+  "last-below-first": (p) =>
+    error("last above first", p.detail ?? "Exchange first and last, or correct them."),
+  "unknown-leg": (p) =>
+    error(
+      "a leg of legs.csv in this section",
+      `Add two or more rows for the leg to legs.csv, or correct its name.${nearest(p)}`,
+    ),
+  "short-leg": (p) =>
+    error(`two or more rows for leg ${p.found}`, "Add the leg's second reading to legs.csv."),
+  "repeated-reading": () =>
+    error("each reading of a leg once", "Correct the reading: one reading cannot stand at two positions."),
+  "outside-leg": (p) =>
+    error(
+      `a reading from ${p.detail}`,
+      "Correct the reading or the leg, or add a row to legs.csv that reaches it.",
+    ),
+  "unknown-sample": (p) =>
+    error(
+      "a sample of this section in samples.csv",
+      `Add the sample to samples.csv or correct its name.${nearest(p)}`,
+    ),
+  "sample-without-position": () =>
+    error(
+      "a position for the sample",
+      "Add samples.csv with the sample's position, or give the position in the row.",
+    ),
+  "sample-elsewhere": (p) =>
+    error(
+      `the position of its sample (${p.detail})`,
+      "Correct the sample or the position, or leave the position blank.",
+    ),
+  "count-zero": () => caution("a find", "A count of 0 is read as looked for and not found, never as a find."),
+  "one-level": () =>
+    caution(
+      "finds at two or more levels",
+      "All finds stand at one level: no range can be estimated from them.",
+    ),
+  "one-occurrence": () => caution("two or more finds", "One find alone gives no range."),
+  "not-searched": (p) =>
+    caution(
+      `a search for ${p.detail} in this sample`,
+      "Add the row to searches.csv if the group was looked for; until then the find counts for continuous methods only.",
+    ),
+  "searches-derived": () =>
+    caution(
+      "searches.csv",
+      "Every sample is taken as searched for every group found in its section; add searches.csv to say who looked for what.",
+    ),
+  ungrouped: (p) => caution("a row in taxa.csv with a group", `Taken as group ungrouped: ${p.detail}.`),
+  "value-missing": () => caution("a value", "The row has no value and is not used."),
+  "trace-zero": () =>
+    caution(
+      "a value above 0 in a trace element",
+      "Does 0 mean not detected? Then write bdl and the detection_limit, or <limit. It is used as 0 until then.",
+    ),
+  "no-detection-limit": () =>
+    error("a detection_limit beside bdl", "Give the detection_limit of the row, or write <limit."),
+  "nd-ambiguous": () =>
+    error(
+      "a value, bdl or a blank",
+      "nd can mean two things: write bdl (with its detection_limit) for not detected, or leave the cell blank for not determined.",
+    ),
+  "trace-limits": () =>
+    error("numbers for a trace", "Write detection limit..quantitation limit, such as 0.02..0.05."),
+  "not-a-reading": () =>
+    error(
+      "a number, <0.05, >5 or 0.02..0.05",
+      "Write the value in one of these forms, with a decimal point.",
+    ),
+  "not-a-polarity": () => error("N or R", "Write N (normal) or R (reversed), or leave the cell blank."),
+  "interval-reversed": () => error("the lower number first", "Exchange the two numbers."),
+  "more-successes": () => error("no more successes than trials", "Correct value or trials."),
+  "error-kind-missing": (p) =>
+    error(
+      `${p.detail ?? "error_kind"} beside the error`,
+      "Say what the error is: 1s, 2s, 1s%, 2s%, 95% or se.",
+    ),
+  "negative-age": () =>
+    error("an age of 0 or more", "Ages are million years before present: write them without a sign."),
+  "outside-section": (p) =>
+    caution(
+      `a position within the section (${p.detail})`,
+      "Correct the position, or bottom and top in sections.csv.",
+    ),
+  "accepted-unlisted": (p) =>
+    caution("a taxon with a row of its own", `Add a row for the accepted name to taxa.csv.${nearest(p)}`),
+  "settings-unreadable": () => error("JSON", "Correct settings.json; the defaults are used until then."),
+  "unknown-setting": (p) =>
+    error("a known setting", `Take it out or correct its path; it is not used.${nearest(p)}`),
+  "bad-setting": (p) =>
+    error(p.detail ?? "another value", "Correct the value; the default is used until then."),
+  "package-unreadable": () =>
+    caution("a data package description in JSON", "Correct or take out datapackage.json; it is not used."),
+} satisfies Record<string, Wording>;
+
+export type ProblemCode = keyof typeof wordings;
+
+const longestShown = 200;
+
+/** A cell shortened for a message. */
+export function excerpt(text: string): string {
+  if (text.length <= longestShown) return text;
+  return `${text.slice(0, longestShown)}… (${text.length} characters)`;
+}
+
+/** A problem in the words of its code. */
+export function problem(code: ProblemCode, place: ProblemPlace): Problem {
+  const wording: Wording = wordings[code];
+  const { severity, expected, mend } = wording(place);
+  return {
+    severity,
+    code,
+    file: place.file,
+    ...(place.row === undefined ? {} : { row: place.row }),
+    ...(place.column === undefined ? {} : { column: place.column }),
+    found: excerpt(place.found),
+    expected,
+    mend,
+  };
+}
+
+/** Gathers problems in the order met; what repeats down a file is told once, with the number of rows. */
+export interface ProblemList {
+  add(code: ProblemCode, place: ProblemPlace): void;
+  /** Tells the first of all problems of one subject, and how many more rows share it. */
+  addOnce(subject: string, code: ProblemCode, place: ProblemPlace): void;
+  problems(): readonly Problem[];
+}
+
+export function problemList(): ProblemList {
+  const entries: { problem: Problem; more: number }[] = [];
+  const subjects = new Map<string, { problem: Problem; more: number }>();
+  return {
+    add: (code, place) => {
+      entries.push({ problem: problem(code, place), more: 0 });
+    },
+    addOnce: (subject, code, place) => {
+      const key = JSON.stringify([code, place.file, subject]);
+      const known = subjects.get(key);
+      if (known) {
+        known.more += 1;
+        return;
+      }
+      const entry = { problem: problem(code, place), more: 0 };
+      subjects.set(key, entry);
+      entries.push(entry);
+    },
+    problems: () =>
+      entries.map(({ problem, more }) =>
+        more === 0
+          ? problem
+          : { ...problem, found: `${problem.found} (and ${more} more ${more === 1 ? "row" : "rows"})` },
+      ),
+  };
+}

@@ -1,0 +1,97 @@
+import * as v from "valibot";
+import { suggestName } from "./nearest.ts";
+import { settingsSchema } from "./settings.ts";
+
+type Node = v.GenericSchema | undefined;
+
+/** The schema beneath `optional`. */
+function unwrapped(schema: unknown): Node {
+  const node = asSchema(schema);
+  const inner = node && "wrapped" in node ? asSchema(node.wrapped) : undefined;
+  return inner ? unwrapped(inner) : node;
+}
+
+const asSchema = (value: unknown): Node =>
+  typeof value === "object" && value !== null && "kind" in value && value.kind === "schema"
+    ? (value as v.GenericSchema)
+    : undefined;
+
+/** The named parts of an object schema. */
+function partsOf(schema: Node): ReadonlyMap<string, unknown> {
+  if (!schema || !("entries" in schema) || typeof schema.entries !== "object" || schema.entries === null)
+    return new Map();
+  return new Map(Object.entries(schema.entries));
+}
+
+const isRecord = (schema: Node): boolean => schema?.type === "record";
+
+/** Every path of a setting, in the order declared. */
+export function knownSettingPaths(schema: Node = settingsSchema, before = ""): readonly string[] {
+  return [...partsOf(schema)].flatMap(([name, part]) => {
+    const inner = unwrapped(part);
+    const path = `${before}${name}`;
+    return partsOf(inner).size > 0 ? knownSettingPaths(inner, `${path}.`) : [path];
+  });
+}
+
+/** True where a path leads to a setting, to a part that holds settings, or to an entry of a named list. */
+function isKnown(path: readonly string[], schema: Node = settingsSchema): boolean {
+  if (path.length === 0) return true;
+  const [name, ...rest] = path;
+  const part = partsOf(schema).get(name);
+  if (part !== undefined) return isKnown(rest, unwrapped(part));
+  return isRecord(schema);
+}
+
+const entriesOf = (value: unknown): Map<string, unknown> =>
+  typeof value === "object" && value !== null && !Array.isArray(value)
+    ? new Map(Object.entries(value))
+    : new Map();
+
+function withValue(value: unknown, [name, ...rest]: readonly string[], set: unknown): unknown {
+  if (name === undefined) return set;
+  const entries = entriesOf(value);
+  entries.set(name, withValue(entries.get(name), rest, set));
+  return Object.fromEntries(entries);
+}
+
+/** The value without what stands at a path; within a list the whole list is taken out. */
+export function withoutPath(value: unknown, [name, ...rest]: readonly string[]): unknown {
+  if (name === undefined || typeof value !== "object" || value === null || Array.isArray(value))
+    return undefined;
+  const entries = entriesOf(value);
+  const inner = rest.length === 0 ? undefined : withoutPath(entries.get(name), rest);
+  if (inner === undefined) entries.delete(name);
+  else entries.set(name, inner);
+  return Object.fromEntries(entries);
+}
+
+/** The second settings over the first, part by part; lists and single values are replaced whole. */
+export function mergeSettings(under: unknown, over: unknown): unknown {
+  if (over === undefined) return under;
+  const isPart = (value: unknown) => typeof value === "object" && value !== null && !Array.isArray(value);
+  if (!isPart(under) || !isPart(over)) return over;
+  const merged = entriesOf(under);
+  for (const [name, value] of entriesOf(over)) merged.set(name, mergeSettings(merged.get(name), value));
+  return Object.fromEntries(merged);
+}
+
+export type SetSetting =
+  | { readonly kind: "set"; readonly settings: unknown }
+  | { readonly kind: "unknown"; readonly path: string; readonly nearest?: string };
+
+/** Raw settings with one set by its path, from JSON or, where the text is not JSON, from the text itself. */
+export function setSetting(raw: unknown, path: string, text: string): SetSetting {
+  const names = path.split(".");
+  if (!isKnown(names)) return { kind: "unknown", path, nearest: suggestName(path, knownSettingPaths()) };
+  return { kind: "set", settings: withValue(raw ?? {}, names, jsonOrText(text)) };
+}
+
+function jsonOrText(text: string): unknown {
+  try {
+    const value: unknown = JSON.parse(text);
+    return value;
+  } catch {
+    return text;
+  }
+}

@@ -1,0 +1,53 @@
+import {
+  baseColumn,
+  inSections,
+  legColumn,
+  notesColumn,
+  positionColumn,
+  positionErrorColumn,
+  sectionColumn,
+  table,
+  topColumn,
+} from "./declare.ts";
+
+export const samples = table({
+  name: "samples",
+  title: "Samples",
+  help: "Every sample taken, the barren ones too: by its middle (with thickness, or as a point) or by base and top.",
+  key: ["section", "sample"],
+  references: inSections,
+  oneOf: [["position"], ["base", "top"]],
+  columns: {
+    section: sectionColumn,
+    sample: {
+      type: "text",
+      required: true,
+      help: "The sample's name, once in a section.",
+      dwc: "eventID",
+      synonyms: ["sample id", "sample number", "sample no", "sample name", "fieldNumber"],
+      example: "OL-031",
+    },
+    position: { ...positionColumn, help: "The sample's middle; with a leg, that leg's reading." },
+    base: { ...baseColumn, example: undefined },
+    top: { ...topColumn, example: undefined },
+    thickness: {
+      type: "number",
+      unit: "section",
+      measures: "length",
+      minimum: 0,
+      help: "Thickness across bedding, in the section's own unit; blank for a point.",
+      synonyms: ["sample thickness"],
+      example: "0.1",
+    },
+    leg: legColumn,
+    position_error: positionErrorColumn,
+    density_g_cm3: {
+      type: "number",
+      unit: "g/cm3",
+      minimum: 0,
+      help: "Dry bulk density of this sample.",
+      synonyms: ["density", "dry bulk density"],
+    },
+    notes: { ...notesColumn, dwc: "eventRemarks" },
+  },
+});

@@ -1,0 +1,152 @@
+import type { LengthUnit, Quantity } from "./model.ts";
+
+/** Metres in one unit as a ratio of two exact numbers; the US survey foot only where it is named. */
+const lengths = new Map<string, readonly [number, number]>([
+  ["m", [1, 1]],
+  ["cm", [1, 100]],
+  ["mm", [1, 1000]],
+  ["ft", [3048, 10000]],
+  ["in", [254, 10000]],
+  ["us_survey_ft", [1200, 3937]],
+]);
+
+const lengthNames = new Map<string, string>([
+  ...["m", "metre", "metres", "meter", "meters", "mtr"].map((name) => [name, "m"] as const),
+  ...["cm", "centimetre", "centimetres", "centimeter", "centimeters"].map((name) => [name, "cm"] as const),
+  ...["mm", "millimetre", "millimetres", "millimeter", "millimeters"].map((name) => [name, "mm"] as const),
+  ...["ft", "foot", "feet", "'"].map((name) => [name, "ft"] as const),
+  ...["in", "inch", "inches"].map((name) => [name, "in"] as const),
+  ...["us_survey_ft", "us survey foot", "us survey feet", "us ft"].map(
+    (name) => [name, "us_survey_ft"] as const,
+  ),
+]);
+
+export const lengthUnits: readonly LengthUnit[] = ["m", "cm", "mm", "ft"];
+
+/** The unit of a section that a written unit means, or undefined. */
+export function lengthUnit(written: string): LengthUnit | undefined {
+  const name = lengthNames.get(written.trim().toLowerCase());
+  return lengthUnits.find((unit) => unit === name);
+}
+
+/**
+ * Metres of a length. `unit`: m, cm, mm, ft (0.3048 m exactly), in, us_survey_ft (1200/3937 m); throws on any other.
+ */
+export function toMetres(value: number, unit: string): number {
+  const [numerator, denominator] = lengthRatio(unit);
+  return numerator === 1 ? value / denominator : (value * numerator) / denominator;
+}
+
+/** The length in `unit` of a length in metres. */
+export function fromMetres(metres: number, unit: string): number {
+  const [numerator, denominator] = lengthRatio(unit);
+  return numerator === 1 ? metres * denominator : (metres * denominator) / numerator;
+}
+
+function lengthRatio(unit: string): readonly [number, number] {
+  const ratio = lengths.get(unit);
+  if (!ratio) throw new RangeError(`units.ts: expected m, cm, mm, ft, in or us_survey_ft, got ${unit}`);
+  return ratio;
+}
+
+/** What a measurement's unit means: value x factor is in the canonical unit. */
+export interface MeasurementUnit {
+  readonly quantity: Quantity;
+  readonly unit: string;
+  readonly factor: number;
+}
+
+/** Mass fractions and their factors to ng/g; `ppt` is 1e-12, never parts per thousand. */
+const massFractions = new Map<string, number>([
+  ["ppt", 1e-3],
+  ["pg/g", 1e-3],
+  ["ng/kg", 1e-3],
+  ["ppb", 1],
+  ["ng/g", 1],
+  ["ug/kg", 1],
+  ["ppm", 1e3],
+  ["ug/g", 1e3],
+  ["mg/kg", 1e3],
+  ["wt%", 1e7],
+  ["wt.%", 1e7],
+  ["%", 1e7],
+  ["weight%", 1e7],
+  ["mass%", 1e7],
+]);
+
+const perMil = new Set(["per mil", "permil", "per mill", "permille", "per mille", "‰", "o/oo", "0/00"]);
+const percents = new Set(["percent", "per cent", "vol%", "% grains", "% of grains"]);
+const counts = new Set(["count", "counts", "grains", "specimens", "spherules", "number", "n"]);
+const polarities = new Set(["polarity", "n/r", "sign"]);
+const others = new Set([
+  "ratio",
+  "1",
+  "-",
+  "dimensionless",
+  "unitless",
+  "si",
+  "m3/kg",
+  "am2/kg",
+  "a/m",
+  "degrees",
+  "degree",
+  "deg",
+  "°",
+  "api",
+  "cps",
+]);
+const perGram =
+  /^(?:(?:counts?|grains|spherules|specimens|number|n|1)\s*(?:\/|per\s)|\/|per\s)\s*(g|gram|kg|kilogram)$/;
+
+/** Every unit accepted for a measurement, in words. */
+export const measurementUnitsInWords =
+  "ppt (1e-12), pg/g, ng/kg, ppb, ng/g, ug/kg, ppm, ug/g, mg/kg, wt%, per mil, percent, grains/g, grains/kg, count, polarity, ratio, SI, m3/kg or degrees";
+
+/** Both micro signs, minus signs and negative powers as one plain spelling. */
+function plainUnit(written: string): string {
+  return written
+    .trim()
+    .normalize("NFKC")
+    .toLowerCase()
+    .replaceAll("\u03bc", "u")
+    .replaceAll("\u2212", "-")
+    .replace(/\s+/g, " ")
+    .replace(/[ .·]*\b(g|kg)\s?\^?-1$/, "/$1")
+    .replace(/^wt %$/, "wt%")
+    .replace(/\s*\/\s*/g, "/");
+}
+
+const perMilPossible = /^(?:δ|d|delta)[\s_-]*\d+|salinity|isotop/i;
+
+/** What a written unit means for an analyte; `refused` where `ppt` could be taken for parts per thousand. */
+export function measurementUnit(written: string, analyte: string): MeasurementUnit | "refused" | undefined {
+  const unit = plainUnit(written);
+  const given = written.trim();
+  const factor = massFractions.get(unit);
+  if (unit === "ppt" && perMilPossible.test(analyte)) return "refused";
+  if (factor !== undefined) return { quantity: "mass-fraction", unit: "ng/g", factor };
+  if (perMil.has(unit)) return { quantity: "per-mil", unit: "‰", factor: 1 };
+  if (percents.has(unit)) return { quantity: "percent", unit: given, factor: 1 };
+  if (counts.has(unit)) return { quantity: "count", unit: given, factor: 1 };
+  if (polarities.has(unit)) return { quantity: "polarity", unit: "polarity", factor: 1 };
+  const gram = perGram.exec(unit);
+  if (gram) return perGramUnit(gram[1], given);
+  if (others.has(unit))
+    return { quantity: analyte === "polarity" ? "polarity" : "other", unit: given, factor: 1 };
+  return undefined;
+}
+
+function perGramUnit(mass: string, given: string): MeasurementUnit {
+  const isGram = mass === "g" || mass === "gram";
+  return isGram
+    ? { quantity: "per-gram", unit: given, factor: 1 }
+    : {
+        quantity: "per-gram",
+        unit: given.replace(/k(g|ilogram)$/i, (_, rest: string) => (rest === "g" ? "g" : "gram")),
+        factor: 1e-3,
+      };
+}
+
+/** True for contents where a plain 0 is likely to mean "not detected": ppm and smaller. */
+export const isTrace = (unit: MeasurementUnit): boolean =>
+  unit.quantity === "mass-fraction" && unit.factor <= 1e3;

@@ -1,0 +1,82 @@
+import { tableSchema } from "../study/table-schema.ts";
+import type { TableDeclaration } from "../study/tables/declare.ts";
+
+/** The property of a resource that lists the columns in which `writeCsv` put apostrophes. */
+export const apostrophesProperty = "lastbed:apostrophes";
+
+export interface PackageTable {
+  readonly declaration: TableDeclaration;
+  /** The file's path in the folder. */
+  readonly path: string;
+  /** Headers of the columns whose text cells were given an apostrophe. */
+  readonly guarded: readonly string[];
+}
+
+/** The text of datapackage.json (Frictionless Data Package 2.0) for a folder of tables. */
+export function writeDataPackage(name: string, tables: readonly PackageTable[], title = name): string {
+  const descriptor = {
+    $schema: "https://datapackage.org/profiles/2.0/datapackage.json",
+    name: packageName(name),
+    title,
+    resources: tables.map(resourceOf),
+  };
+  return `${JSON.stringify(descriptor, null, 2)}\n`;
+}
+
+const resourceOf = ({ declaration, path, guarded }: PackageTable) => ({
+  name: declaration.name,
+  path,
+  type: "table",
+  title: declaration.title,
+  description: declaration.help,
+  format: "csv",
+  mediatype: "text/csv",
+  encoding: "utf-8",
+  ...(guarded.length > 0 ? { [apostrophesProperty]: guarded } : {}),
+  schema: tableSchema(declaration),
+});
+
+/** A name as a data package allows it: lower case, digits, hyphen, dot, underscore. */
+const packageName = (name: string): string =>
+  name
+    .toLowerCase()
+    .replace(/[^a-z0-9._-]+/g, "-")
+    .replace(/^-+|-+$/g, "") || "study";
+
+/** What our reading needs of a data package: per path, the columns that carry apostrophes. */
+export type Apostrophes = ReadonlyMap<string, ReadonlySet<string>>;
+
+/** Reads the apostrophe record; undefined where the text is not a data package in JSON. */
+export function readApostrophes(text: string): Apostrophes | undefined {
+  const descriptor = parseObject(text);
+  if (descriptor === undefined) return undefined;
+  const columns = new Map<string, ReadonlySet<string>>();
+  for (const resource of listOf(descriptor, "resources")) {
+    const path = property(resource, "path");
+    if (typeof path !== "string") continue;
+    columns.set(
+      path,
+      new Set(listOf(resource, apostrophesProperty).filter((name) => typeof name === "string")),
+    );
+  }
+  return columns;
+}
+
+function parseObject(text: string): object | undefined {
+  try {
+    const value: unknown = JSON.parse(text);
+    return typeof value === "object" && value !== null && !Array.isArray(value) ? value : undefined;
+  } catch {
+    return undefined;
+  }
+}
+
+const property = (value: unknown, name: string): unknown =>
+  typeof value === "object" && value !== null
+    ? new Map<string, unknown>(Object.entries(value)).get(name)
+    : undefined;
+
+function listOf(value: unknown, name: string): readonly unknown[] {
+  const list = property(value, name);
+  return Array.isArray(list) ? list : [];
+}

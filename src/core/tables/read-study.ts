@@ -1,0 +1,129 @@
+import { assembleStudy } from "../study/assembly/assemble-study.ts";
+import type { ReadSheet } from "../study/assembly/context.ts";
+import type { Study } from "../study/model.ts";
+import { suggestName } from "../study/nearest.ts";
+import { type ProblemList, problemList } from "../study/problem-wordings.ts";
+import { readSettings } from "../study/read-settings.ts";
+import { mergeSettings } from "../study/setting-path.ts";
+import type { Settings } from "../study/settings.ts";
+import { type TableName, tables } from "../study/tables/index.ts";
+import { decodeText } from "./csv.ts";
+import { type Apostrophes, readApostrophes } from "./data-package.ts";
+import { readSheet } from "./read-sheet.ts";
+
+export interface ReadStudyOptions {
+  /** The study's name; absent: the folder that the files lie in, else "study". */
+  readonly name?: string;
+  /** Settings that stand over those of settings.json, in the same form. */
+  readonly settings?: unknown;
+}
+
+/**
+ * Reads a study from its files: names, with or without folders, to bytes. Every problem is told in `problems`; an error
+ * leaves its row or its file out and takes nothing else with it. Never throws on bad input.
+ *
+ * @example
+ * readStudy(new Map([["occurrences.csv", new TextEncoder().encode("section,taxon,height (m)\nOrsk Ledge,Velorites orskensis,1.2\n")]]))
+ */
+export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadStudyOptions = {}): Study {
+  const problems = problemList();
+  const settings = settingsOf(files, options.settings, problems);
+  const sheets = readSheets(files, problems);
+  const assembly = { settings, problems, sheets };
+  const assembled = assembleStudy(assembly);
+  if (!hasData(sheets)) problems.add("no-data", { file: "study", found: "none of them can be used" });
+  return {
+    name: options.name ?? folderOf(files) ?? "study",
+    settings,
+    ...assembled,
+    problems: problems.problems(),
+    sheets: [...sheets.values()].map(({ sheet }) => sheet),
+    files: [...files].map(([name, bytes]) => ({ name, bytes })),
+  };
+}
+
+const baseName = (path: string): string => path.split(/[/\\]/).at(-1) ?? path;
+
+function folderOf(files: ReadonlyMap<string, Uint8Array>): string | undefined {
+  const folders = new Set([...files.keys()].map((path) => path.split(/[/\\]/).at(-2)));
+  const [folder] = folders;
+  return folders.size === 1 && folder !== "" ? folder : undefined;
+}
+
+const hasData = (sheets: ReadonlyMap<TableName, ReadSheet>): boolean =>
+  sheets.has("occurrences") || sheets.has("published-ranges") || sheets.has("measurements");
+
+const find = (files: ReadonlyMap<string, Uint8Array>, name: string) =>
+  [...files].find(([path]) => baseName(path).toLowerCase() === name);
+
+function settingsOf(files: ReadonlyMap<string, Uint8Array>, over: unknown, problems: ProblemList): Settings {
+  const [path, bytes] = find(files, "settings.json") ?? ["settings.json", undefined];
+  const raw = bytes === undefined ? {} : parseSettings(path, bytes, problems);
+  return readSettings(mergeSettings(raw, over), path, problems);
+}
+
+function parseSettings(file: string, bytes: Uint8Array, problems: ProblemList): unknown {
+  const text = decodeText(bytes);
+  try {
+    const value: unknown = JSON.parse(text ?? "");
+    return value;
+  } catch {
+    problems.add("settings-unreadable", { file, found: text ?? "bytes that are not UTF-8" });
+    return {};
+  }
+}
+
+function apostrophesOf(files: ReadonlyMap<string, Uint8Array>, problems: ProblemList): Apostrophes {
+  const [path, bytes] = find(files, "datapackage.json") ?? ["", undefined];
+  if (bytes === undefined) return new Map();
+  const text = decodeText(bytes);
+  const apostrophes = text === undefined ? undefined : readApostrophes(text);
+  if (apostrophes === undefined)
+    problems.add("package-unreadable", { file: path, found: text ?? "bytes that are not UTF-8" });
+  return new Map([...(apostrophes ?? [])].map(([file, columns]) => [baseName(file), columns]));
+}
+
+const companions =
+  /^(?:settings\.json|datapackage\.json|readme(?:\..*)?|licen[cs]e(?:\..*)?|citation\.cff|\..*)$/i;
+const tableFile = (name: string): string => `${name}.csv`;
+
+function tableNamed(file: string) {
+  const plain = file.toLowerCase().replace(/[\s_]+/g, "-");
+  return tables.find(({ name }) => plain === tableFile(name));
+}
+
+function readSheets(
+  files: ReadonlyMap<string, Uint8Array>,
+  problems: ProblemList,
+): ReadonlyMap<TableName, ReadSheet> {
+  const apostrophes = apostrophesOf(files, problems);
+  const sheets = new Map<TableName, ReadSheet>();
+  const first = new Map<TableName, string>();
+  for (const [path, bytes] of files) {
+    const file = baseName(path);
+    const table = tableNamed(file);
+    if (!table) {
+      tellUnknown(path, problems);
+      continue;
+    }
+    const earlier = first.get(table.name);
+    if (earlier !== undefined) {
+      problems.add("duplicate-table", { file: path, found: file, detail: earlier });
+      continue;
+    }
+    first.set(table.name, path);
+    const read = readSheet({ file, bytes, table, guarded: apostrophes.get(file) ?? new Set(), problems });
+    if (read) sheets.set(table.name, read);
+  }
+  return sheets;
+}
+
+function tellUnknown(path: string, problems: ProblemList): void {
+  const file = baseName(path);
+  if (companions.test(file)) return;
+  const nearest = suggestName(
+    file,
+    tables.map(({ name }) => tableFile(name)),
+  );
+  problems.add("unknown-file", { file: path, found: file, nearest });
+}
