@@ -1,0 +1,142 @@
+import type { ReactElement } from "react";
+import { type ContactKind, contactPath, contactStroke } from "./columns/contact.ts";
+import { filledTick, openTick } from "./columns/search-rail.tsx";
+import type { PatternId } from "./lithology/pattern-tiles.ts";
+import { patternFill } from "./lithology/patterns.tsx";
+import { arrowPath, boxPath, markPath } from "./marks/mark-path.ts";
+import { round } from "./numbers.ts";
+import { PlateText } from "./plate-text.tsx";
+import { COLOURS, TEXT } from "./theme.ts";
+
+/** What a legend entry shows. A rock outside the table of terms has the letter that stands in its beds. */
+export type LegendSign =
+  | { readonly kind: "rock"; readonly pattern: PatternId }
+  | { readonly kind: "plain-rock"; readonly letter: string }
+  | { readonly kind: "contact"; readonly contact: ContactKind }
+  | {
+      readonly kind: "found" | "barren" | "find" | "open-find" | "taper" | "reaches-top";
+      readonly colour: string;
+    }
+  | {
+      readonly kind:
+        | "main-horizon"
+        | "other-horizon"
+        | "value"
+        | "anomaly"
+        | "limit"
+        | "background"
+        | "curve"
+        | "density";
+    };
+
+export const SWATCH_WIDTH = 16;
+export const SWATCH_HEIGHT = 8;
+
+interface LegendSwatchProps {
+  readonly plateId: string;
+  readonly x: number;
+  readonly y: number;
+  readonly sign: LegendSign;
+}
+
+const box = boxPath(0, 0, SWATCH_WIDTH, SWATCH_HEIGHT);
+const middleX = SWATCH_WIDTH / 2;
+const middleY = SWATCH_HEIGHT / 2;
+const across = `M0 ${middleY}h${SWATCH_WIDTH}`;
+const taper = `M0 ${middleY - 3}H6C9 ${middleY - 1} 12 ${middleY - 0.4} 16 ${middleY}C12 ${middleY + 0.4} 9 ${middleY + 1} 6 ${middleY + 3}H0z`;
+
+export function LegendSwatch({ plateId, x, y, sign }: LegendSwatchProps): ReactElement {
+  return <g transform={`translate(${round(x)} ${round(y)})`}>{swatch(plateId, sign)}</g>;
+}
+
+function swatch(plateId: string, sign: LegendSign): ReactElement {
+  switch (sign.kind) {
+    case "rock":
+      return <Rock plateId={plateId} pattern={sign.pattern} />;
+    case "plain-rock":
+      return <PlainRock letter={sign.letter} />;
+    case "contact":
+      return (
+        <path
+          d={contactPath(sign.contact, { x: 0, y: middleY, width: SWATCH_WIDTH })}
+          fill="none"
+          stroke={sign.contact === "faulted" ? COLOURS.rust : COLOURS.ink}
+          {...contactStroke(sign.contact)}
+        />
+      );
+    case "found":
+      return <path d={filledTick(middleX - 3.5, middleY)} fill={sign.colour} />;
+    case "barren":
+      return (
+        <path
+          d={openTick(middleX - 3.5, middleY)}
+          fill={COLOURS.paper}
+          stroke={sign.colour}
+          strokeWidth={0.35}
+        />
+      );
+    case "find":
+      return <path d={`M${middleX - 3} ${middleY}h6`} stroke={sign.colour} strokeWidth={0.75} />;
+    case "open-find":
+      return (
+        <path
+          d={boxPath(middleX - 3, middleY - 0.8, 6, 1.6)}
+          fill={COLOURS.paper}
+          stroke={sign.colour}
+          strokeWidth={0.4}
+        />
+      );
+    case "taper":
+      return <path d={taper} fill={sign.colour} fillOpacity={0.3} />;
+    case "reaches-top":
+      return <path d={markPath("triangle", middleX, middleY, 2.2)} fill={sign.colour} />;
+    case "main-horizon":
+      return (
+        <>
+          <path d={boxPath(0, middleY - 2.5, SWATCH_WIDTH, 5)} fill={COLOURS.rust} opacity={0.13} />
+          <path d={across} stroke={COLOURS.rust} strokeWidth={0.9} />
+        </>
+      );
+    case "other-horizon":
+      return <path d={across} stroke={COLOURS.ink} strokeWidth={0.6} strokeDasharray="0.8 2" />;
+    case "value":
+      return <path d={markPath("circle", middleX, middleY, 1.25)} fill={COLOURS.ink} />;
+    case "anomaly":
+      return <path d={markPath("circle", middleX, middleY, 1.25)} fill={COLOURS.rust} />;
+    case "limit":
+      return (
+        <path d={arrowPath(middleX + 3, middleY, -6)} fill="none" stroke={COLOURS.soft} strokeWidth={0.5} />
+      );
+    case "background":
+      return <path d={box} fill={COLOURS.band} />;
+    case "curve":
+      return (
+        <>
+          <path d={boxPath(0, middleY - 2, SWATCH_WIDTH, 4)} fill={COLOURS.rust} opacity={0.16} />
+          <path d={across} stroke={COLOURS.rust} strokeWidth={0.9} />
+        </>
+      );
+    case "density":
+      return <path d={box} fill={COLOURS.blue} fillOpacity={0.28} stroke={COLOURS.blue} strokeWidth={0.7} />;
+    default:
+      return sign satisfies never;
+  }
+}
+
+function Rock({ plateId, pattern }: { readonly plateId: string; readonly pattern: PatternId }): ReactElement {
+  const stroke = { stroke: COLOURS.ink, strokeWidth: 0.45 };
+  if (pattern !== "covered") return <path d={box} fill={patternFill(plateId, pattern)} {...stroke} />;
+  const cross = `M0 0L${SWATCH_WIDTH} ${SWATCH_HEIGHT}M${SWATCH_WIDTH} 0L0 ${SWATCH_HEIGHT}`;
+  return <path d={box + cross} fill="none" {...stroke} />;
+}
+
+function PlainRock({ letter }: { readonly letter: string }): ReactElement {
+  return (
+    <>
+      <path d={box} fill={COLOURS.paper} stroke={COLOURS.ink} strokeWidth={0.45} />
+      <PlateText x={middleX} y={middleY + 2.5} style={TEXT.unit} anchor="middle">
+        {letter}
+      </PlateText>
+    </>
+  );
+}
