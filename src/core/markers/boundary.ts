@@ -13,7 +13,9 @@ export function boundaryIn(section: string, markers: Markers, study: Study): Bou
   if (main === undefined) return undefined;
   const mixing =
     main.mixing ??
-    markers.horizons.find((h) => h.section === section && h.horizon === main.horizon && h.mixing !== undefined)?.mixing;
+    markers.horizons.find(
+      (h) => h.section === section && h.horizon === main.horizon && h.mixing !== undefined,
+    )?.mixing;
   const base = { positionM: main.positionM, highM: main.highM };
   if (mixing === undefined) return { ...base, ceilingOf: () => undefined };
   return {

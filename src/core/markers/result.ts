@@ -68,6 +68,9 @@ export interface Background {
   readonly censored: number;
   /** median x 10^(3 logSd): the ceiling drawn and printed. */
   readonly threshold: number;
+  /** Product-limit quartiles of the kept samples; absent where not estimable or half of the cells are censored. */
+  readonly lowerQuartile?: number;
+  readonly upperQuartile?: number;
 }
 
 /** A run of adjacent flagged samples, with its integrated excess and the mixing models fitted to it. */
@@ -96,8 +99,21 @@ export interface Fluence {
   readonly lowCensored: number;
   readonly highCensored: number;
   readonly tail?: number;
+  /** Simulated distribution under all errors. */
+  readonly simulated?: SimulatedSpread;
   /** Named shares of the variance, (ng/cm2)^2. */
   readonly variance: Readonly<Record<string, number>>;
+}
+
+export interface SimulatedSpread {
+  readonly median: number;
+  readonly sd: number;
+  readonly low68: number;
+  readonly high68: number;
+  readonly low95: number;
+  readonly high95: number;
+  readonly replicates: number;
+  readonly seed: number;
 }
 
 export interface MixingModel {
@@ -122,6 +138,10 @@ export interface Profile {
   readonly unit: string;
   readonly samples: readonly ProfileSample[];
   readonly background?: Background;
+  /** Number of tests among which false discoveries were controlled. */
+  readonly tests?: number;
+  /** Chance of a false flag somewhere in the profile by a plain 3-sigma rule. */
+  readonly falseThreeSigmaChance?: number;
   readonly anomalies: readonly Anomaly[];
 }
 
