@@ -23,7 +23,7 @@ interface Piece {
 }
 
 const cyclesBelow = ["limestone", "marl", "marly limestone", "marl", "limestone", "marly limestone"];
-const cyclesAbove = ["marl", "limestone", "claystone", "marly limestone", "marl"];
+const cyclesAbove = ["marl", "limestone", "claystone", "marly limestone"];
 const rock: Readonly<Record<string, { density: number; carbonate: number; facies: string }>> = {
   limestone: { density: 2.52, carbonate: 86, facies: "outer shelf" },
   "marly limestone": { density: 2.42, carbonate: 68, facies: "outer shelf" },
@@ -102,8 +102,8 @@ function bedOf(
     facies: properties?.facies ?? "",
     bioturbation: lithology === "bentonite" ? 1 : Math.floor(between(draws, isClay ? 1 : 2, isClay ? 3 : 6)),
     carbonatePercent: Math.max(1, Math.round((properties?.carbonate ?? 40) + 5 * draws.normal())),
-    formation: isAbove ? "Sedder Marl" : "Hask Limestone",
-    member: isAbove ? "" : "Tolme Member",
+    formation: isAbove ? "Seddry Marl" : "Hurrim Limestone",
+    member: isAbove ? "" : "Tolvane Member",
   };
 }
 

@@ -186,7 +186,7 @@ export function exampleMeasurements(
       measurements.push(shockedQuartz(sample, context), spherules(sample, context));
     if (isSlab ? index % 2 === 0 : chance > 0.35) measurements.push(carbonIsotopes(sample, context));
     if (isSlab ? index % 3 === 0 : chance > 0.55) measurements.push(...mercuryAndCarbon(sample, context));
-    if (!isSlab && chance > 0.7) measurements.push(polarity(sample, context));
+    if (!isSlab && chance > 0.5) measurements.push(polarity(sample, context));
     return measurements;
   });
 }

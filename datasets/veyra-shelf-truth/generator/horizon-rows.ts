@@ -33,7 +33,7 @@ function ashes(truth: Truth, { section, beds, index }: SectionData): Row[] {
         age_error_ma: errorMa.toFixed(3),
         age_error_kind: "2s",
         dating_method: "U-Pb zircon, single grains",
-        laboratory: section.axis === "depth" ? "Sundhal" : "Corran House",
+        laboratory: section.axis === "depth" ? "Vessarn Institute" : "Ormelin Laboratory",
         notes: ash.bed,
       },
     ];

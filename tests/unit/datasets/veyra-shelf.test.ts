@@ -7,6 +7,7 @@ import { heightAtKa, kaAtHeight, smearBaseM } from "../../../datasets/veyra-shel
 import { type SectionData, sectionData } from "../../../datasets/veyra-shelf-truth/generator/section-data.ts";
 import { exampleStudy, trueLevels } from "../../../datasets/veyra-shelf-truth/generator/study.ts";
 import { readTruth } from "../../../datasets/veyra-shelf-truth/generator/truth.ts";
+import { readStudy } from "../../../src/core/tables/read-study.ts";
 
 const at = (path: string) => fileURLToPath(new URL(`../../../datasets/${path}`, import.meta.url));
 const truthText = readFileSync(at("veyra-shelf-truth/truth.json"), "utf8");
@@ -24,6 +25,26 @@ describe("the committed study", () => {
   it("is what the generator writes from the truth, byte for byte", () => {
     for (const [name, text] of study) {
       expect(readFileSync(at(`veyra-shelf/${name}`)).equals(Buffer.from(text)), name).toBe(true);
+    }
+  });
+
+  it("is read without an error, and with a caution only for taxa found once", () => {
+    const files = new Map([...study].map(([name, text]) => [name, new TextEncoder().encode(text)]));
+    const read = readStudy(files);
+    expect([...new Set(read.problems.map(({ severity, code }) => `${severity} ${code}`))]).toEqual([
+      "caution one-occurrence",
+    ]);
+    const samples = read.sections.map(({ name, samples }) => [name, samples.length]);
+    expect(samples).toEqual(data.map(({ section, samples }) => [section.section, samples.length]));
+  });
+
+  it("places every sample within 5 mm of where the generator had it", () => {
+    const files = new Map([...study].map(([name, text]) => [name, new TextEncoder().encode(text)]));
+    for (const { name, samples } of readStudy(files).sections) {
+      const truly = new Map(dataOf(name).samples.map(({ code, heightM }) => [code, heightM]));
+      for (const sample of samples) {
+        expect(Math.abs(sample.heightM - (truly.get(sample.name) ?? 0)), sample.name).toBeLessThan(0.0051);
+      }
     }
   });
 
