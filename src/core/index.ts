@@ -1,1 +1,19 @@
+export { formatGiven, givenToHeight, heightToGiven, type OwnScale } from "./study/heights.ts";
+export type * from "./study/model.ts";
+export { suggestName } from "./study/nearest.ts";
+export type { Problem } from "./study/problem.ts";
+export { knownSettingPaths, mergeSettings, type SetSetting, setSetting } from "./study/setting-path.ts";
+export { defaultSettings, type Settings, settingsSchema } from "./study/settings.ts";
+export { columnKind, tablesGuide } from "./study/table-guide.ts";
+export { tableSchema } from "./study/table-schema.ts";
+export {
+  type ColumnDeclaration,
+  type TableDeclaration,
+  type TableName,
+  tables,
+} from "./study/tables/index.ts";
+export { readWrittenCsv } from "./tables/csv.ts";
+export { type PackageResource, tableResource, writeDataPackage } from "./tables/data-package.ts";
 export { type ReadStudyOptions, readStudy } from "./tables/read-study.ts";
+export { studyTemplate } from "./tables/templates.ts";
+export { type CsvCell, type WrittenCsv, writeCsv } from "./tables/write-csv.ts";

@@ -36,8 +36,7 @@ function tellIssue(issue: v.BaseIssue<unknown>, path: string, { file, problems }
     const nearest = suggestName(path, knownSettingPaths());
     problems.add("unknown-setting", { file, column: path, found: path, nearest });
   } else {
-    const found =
-      issue.input === undefined ? "nothing" : (JSON.stringify(issue.input) ?? String(issue.input));
+    const found = JSON.stringify(issue.input) ?? "nothing";
     problems.add("bad-setting", { file, column: path, found, detail: issue.message });
   }
 }

@@ -11,10 +11,10 @@ function unwrapped(schema: unknown): Node {
   return inner ? unwrapped(inner) : node;
 }
 
-const asSchema = (value: unknown): Node =>
-  typeof value === "object" && value !== null && "kind" in value && value.kind === "schema"
-    ? (value as v.GenericSchema)
-    : undefined;
+const isSchema = (value: unknown): value is v.GenericSchema =>
+  typeof value === "object" && value !== null && "kind" in value && value.kind === "schema";
+
+const asSchema = (value: unknown): Node => (isSchema(value) ? value : undefined);
 
 /** The named parts of an object schema. */
 function partsOf(schema: Node): ReadonlyMap<string, unknown> {

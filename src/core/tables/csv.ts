@@ -1,4 +1,5 @@
 import Papa from "papaparse";
+import { takeOffApostrophe } from "./apostrophes.ts";
 
 /** Records of a comma-separated text: cells as written, with the row numbers a spreadsheet shows. */
 export interface CsvRecords {
@@ -88,3 +89,27 @@ export function otherDelimiter(headers: readonly string[]): string | undefined {
   const commas = headers.length - 1;
   return otherSigns.find(([sign]) => header.split(sign).length - 1 > commas)?.[1];
 }
+
+/** Cells of a table that `writeCsv` wrote, with its apostrophes taken off in the columns that were guarded. */
+export function readWrittenCsv(
+  text: string,
+  guarded: readonly string[] = [],
+): Pick<CsvRecords, "headers" | "rows"> {
+  const records = parseCsv(text);
+  const headers = unguardedHeaders(records.headers, new Set(guarded));
+  const isGuarded = headers.map((header) => guarded.includes(header));
+  const rows = records.rows.map((cells) =>
+    cells.map((cell, index) => (isGuarded[index] ? takeOffApostrophe(cell) : cell)),
+  );
+  return { headers, rows };
+}
+
+/** Headers without the apostrophe of writing, where the record of guarded columns names them without it. */
+export const unguardedHeaders = (
+  headers: readonly string[],
+  guarded: ReadonlySet<string>,
+): readonly string[] =>
+  headers.map((header) => {
+    const own = takeOffApostrophe(header);
+    return guarded.has(own) ? own : header;
+  });

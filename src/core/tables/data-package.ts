@@ -4,36 +4,55 @@ import type { TableDeclaration } from "../study/tables/declare.ts";
 /** The property of a resource that lists the columns in which `writeCsv` put apostrophes. */
 export const apostrophesProperty = "lastbed:apostrophes";
 
-export interface PackageTable {
-  readonly declaration: TableDeclaration;
+/** A table in a folder, as datapackage.json tells it. */
+export interface PackageResource {
+  readonly name: string;
   /** The file's path in the folder. */
   readonly path: string;
-  /** Headers of the columns whose text cells were given an apostrophe. */
+  readonly title: string;
+  readonly description: string;
+  /** A Table Schema, as plain JSON. */
+  readonly schema: object;
+  /** Headers of the columns whose text cells were given an apostrophe, as `writeCsv` returns them. */
   readonly guarded: readonly string[];
 }
 
+/** The resource of a study table in a folder. */
+export const tableResource = (
+  declaration: TableDeclaration,
+  guarded: readonly string[] = [],
+  path = `${declaration.name}.csv`,
+): PackageResource => ({
+  name: declaration.name,
+  path,
+  title: declaration.title,
+  description: declaration.help,
+  schema: tableSchema(declaration),
+  guarded,
+});
+
 /** The text of datapackage.json (Frictionless Data Package 2.0) for a folder of tables. */
-export function writeDataPackage(name: string, tables: readonly PackageTable[], title = name): string {
+export function writeDataPackage(name: string, resources: readonly PackageResource[], title = name): string {
   const descriptor = {
     $schema: "https://datapackage.org/profiles/2.0/datapackage.json",
     name: packageName(name),
     title,
-    resources: tables.map(resourceOf),
+    resources: resources.map(resourceOf),
   };
   return `${JSON.stringify(descriptor, null, 2)}\n`;
 }
 
-const resourceOf = ({ declaration, path, guarded }: PackageTable) => ({
-  name: declaration.name,
+const resourceOf = ({ name, path, title, description, schema, guarded }: PackageResource) => ({
+  name,
   path,
   type: "table",
-  title: declaration.title,
-  description: declaration.help,
+  title,
+  description,
   format: "csv",
   mediatype: "text/csv",
   encoding: "utf-8",
   ...(guarded.length > 0 ? { [apostrophesProperty]: guarded } : {}),
-  schema: tableSchema(declaration),
+  schema,
 });
 
 /** A name as a data package allows it: lower case, digits, hyphen, dot, underscore. */

@@ -7,7 +7,7 @@ import type { TableDeclaration } from "../study/tables/declare.ts";
 import type { TableName } from "../study/tables/index.ts";
 import { lengthUnits } from "../study/units.ts";
 import { takeOffApostrophe } from "./apostrophes.ts";
-import { type CsvRecords, decodeText, otherDelimiter, parseCsv } from "./csv.ts";
+import { type CsvRecords, decodeText, otherDelimiter, parseCsv, unguardedHeaders } from "./csv.ts";
 
 export interface SheetSource {
   readonly file: string;
@@ -26,7 +26,8 @@ export function readSheet(source: SheetSource): ReadSheet | undefined {
     problems.add("undecodable-bytes", { file, found: "bytes that are not UTF-8" });
     return undefined;
   }
-  const records = parseCsv(text);
+  const written = parseCsv(text);
+  const records = { ...written, headers: unguardedHeaders(written.headers, source.guarded) };
   if (!isWhole(records, source)) return undefined;
   const columns = recogniseColumns(records.headers, table);
   if (!areColumnsSound(columns, source)) return undefined;

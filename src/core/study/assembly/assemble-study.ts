@@ -17,17 +17,21 @@ import { readTaxa } from "./taxa.ts";
 /** Turns the read tables into sections in metres of height; what cannot be used is left out and told in `assembly.problems`. */
 export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "taxa" | "choices" | "claims"> {
   const frames = readFrames(assembly);
+  // Levels within 1e-9 m take the number met first: what a person stated directly comes before middles and legs.
+  const horizons = readHorizons(frames, assembly);
+  const beds = readBeds(frames, assembly);
+  const intervals = readIntervals(frames, assembly);
   const samples = readSamples(frames, assembly);
   const taxa = readTaxa(assembly);
   const occurrences = readOccurrences(frames, { samples, taxa }, assembly);
   const lists = {
-    intervals: readIntervals(frames, assembly),
-    beds: readBeds(frames, assembly),
+    intervals,
+    beds,
     searches: readSearches(frames, { samples, taxa, occurrences }, assembly),
     occurrences,
     publishedRanges: readPublishedRanges(frames, assembly),
     measurements: readMeasurements(frames, samples, assembly),
-    horizons: readHorizons(frames, assembly),
+    horizons,
     recovery: readRecovery(frames, assembly),
   };
   rowsOf(planes, assembly);

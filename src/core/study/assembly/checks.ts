@@ -2,6 +2,7 @@ import { formatGiven } from "../heights.ts";
 import { sameLevelM } from "../legs.ts";
 import type { Occurrence, Section } from "../model.ts";
 import { type Assembly, gather } from "./context.ts";
+import { isToGenus } from "./occurrences.ts";
 
 /** Cautions on what is read well but gives little, or lies where it should not. */
 export function checkSection(section: Section, assembly: Assembly): void {
@@ -11,7 +12,7 @@ export function checkSection(section: Section, assembly: Assembly): void {
 
 function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
   const byTaxon = new Map<string, Occurrence[]>();
-  for (const find of occurrences) if (find.count !== 0) gather(byTaxon, find.taxon, find);
+  for (const find of occurrences) if (find.count !== 0 && !isToGenus(find)) gather(byTaxon, find.taxon, find);
   for (const [taxon, finds] of byTaxon) {
     if (finds.some(({ heightM }) => Math.abs(heightM - finds[0].heightM) > sameLevelM)) continue;
     const code = finds.length === 1 ? "one-occurrence" : "one-level";

@@ -56,8 +56,7 @@ export function gather<K, T>(lists: Map<K, T[]>, key: K, value: T): void {
 }
 
 /** Leaves out properties that are undefined, so that absent stays absent. */
-export function present<T extends object>(record: T): { [K in keyof T]: Exclude<T[K], undefined> } {
-  return Object.fromEntries(Object.entries(record).filter(([, value]) => value !== undefined)) as {
-    [K in keyof T]: Exclude<T[K], undefined>;
-  };
+export function present<T extends object>(record: T): { [K in keyof T]?: Exclude<T[K], undefined> };
+export function present(record: object): object {
+  return Object.fromEntries(Object.entries(record).filter(([, value]) => value !== undefined));
 }

@@ -71,15 +71,13 @@ function frameOf(row: Row<typeof sections>, listed: ReadSheet, assembly: Assembl
     assembly.problems.add("top-below-base", { ...origin, column: "top", found });
     return undefined;
   }
-  const declared = present({
+  const declared = {
     title: cells.name ?? cells.section,
     datum: cells.datum ?? "",
     source: cells.source ?? "",
-    densityGCm3: cells.density_g_cm3,
     origin,
-    bottomM,
-    topM,
-  });
+    ...present({ densityGCm3: cells.density_g_cm3, bottomM, topM }),
+  };
   return { name: cells.section, ...scale, legs: new Map(), level: levelRegister(), declared };
 }
 

@@ -9,7 +9,7 @@ import { type Frames, frameFor } from "./frames.ts";
 import { lengthOf, type Slab, type SlabCells, slabOf } from "./position.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { rowsOf } from "./rows.ts";
-import { tellUngrouped, ungrouped } from "./taxa.ts";
+import { genusGroup, tellUngrouped, ungrouped } from "./taxa.ts";
 
 /** Every usable find by section, in the order of the file. Taxa met without a row are added to `taxa` as ungrouped. */
 export function readOccurrences(
@@ -59,11 +59,11 @@ export function placeOf(
   if (!sample) {
     if (hasOwnPlace && !samples.areListed) slabOf(cells, frame, { origin, assembly });
     else if (!samples.areListed) assembly.problems.add("sample-without-position", told);
-    else
-      assembly.problems.add("unknown-sample", {
-        ...told,
-        nearest: suggestName(cells.sample, known?.keys() ?? []),
-      });
+    else {
+      const nearest = suggestName(cells.sample, known?.keys() ?? []);
+      const subject = JSON.stringify([frame.name, cells.sample]);
+      assembly.problems.addOnce(subject, "unknown-sample", { ...told, nearest });
+    }
     return undefined;
   }
   const { baseM, topM, heightM } = sample;
@@ -98,8 +98,19 @@ function findOf(
   };
 }
 
+/** True for a find that is not identified to the species, and so never ends a range. */
+export const isToGenus = ({ qualifier }: Occurrence): boolean =>
+  qualifier === "sp." || qualifier === "spp." || qualifier === "indet.";
+
 function addTaxon(find: Occurrence, taxa: Map<string, Taxon>, assembly: Assembly): void {
-  const taxon: Taxon = { name: find.taxon, group: ungrouped, traits: {}, notes: "", origin: find.origin };
+  const group = isToGenus(find) ? genusGroup(find.taxon, taxa) : undefined;
+  const taxon: Taxon = {
+    name: find.taxon,
+    group: group ?? ungrouped,
+    traits: {},
+    notes: "",
+    origin: find.origin,
+  };
   taxa.set(find.taxon, taxon);
-  tellUngrouped(taxon, assembly);
+  if (group === undefined) tellUngrouped(taxon, assembly);
 }

@@ -1,4 +1,5 @@
 import { givenToHeight } from "../heights.ts";
+import type { HeightInterval } from "../intervals.ts";
 import { legHeight } from "../legs.ts";
 import type { Origin } from "../model.ts";
 import { suggestName } from "../nearest.ts";
@@ -56,12 +57,16 @@ export function slabOf(
   place: { readonly origin: Origin; readonly assembly: Assembly },
 ): Slab | undefined {
   const { position, base, top, leg } = cells;
-  if (base !== undefined && top !== undefined) return endsOf(base, top, { ...place, frame, leg });
+  if (base !== undefined && top !== undefined) {
+    const ends = endsOf(base, top, { ...place, frame, leg });
+    return ends && { ...ends, heightM: frame.level((ends.baseM + ends.topM) / 2) };
+  }
   if (position === undefined) return undefined;
   const heightM = heightOf(position, frame, { ...place, column: "position", leg });
   if (heightM === undefined) return undefined;
   const half = (lengthOf(cells.thickness, frame) ?? 0) / 2;
-  return { baseM: heightM - half, topM: heightM + half, heightM };
+  if (half === 0) return { baseM: heightM, topM: heightM, heightM };
+  return { baseM: frame.level(heightM - half), topM: frame.level(heightM + half), heightM };
 }
 
 interface Ends {
@@ -74,7 +79,7 @@ interface Ends {
 }
 
 /** Heights of base and top; top below base is told. */
-export function endsOf(base: number, top: number, ends: Ends): Slab | undefined {
+export function endsOf(base: number, top: number, ends: Ends): HeightInterval | undefined {
   const { origin, assembly, frame, leg, isPointAllowed = true } = ends;
   const baseM = heightOf(base, frame, { origin, column: "base", leg, assembly });
   const topM = heightOf(top, frame, { origin, column: "top", leg, assembly });
@@ -92,5 +97,5 @@ export function endsOf(base: number, top: number, ends: Ends): Slab | undefined 
     });
     return undefined;
   }
-  return { baseM, topM, heightM: frame.level((baseM + topM) / 2) };
+  return { baseM, topM };
 }

@@ -21,7 +21,10 @@ export function readIntervals(frames: Frames, assembly: Assembly): BySection<Roc
     const thicknessHighM = lengthOf(cells.thickness_high, frame);
     const { baseM, topM } = ends;
     gather(lists, frame.name, {
-      ...present({ kind: cells.kind, baseM, topM, thicknessLowM, thicknessHighM }),
+      kind: cells.kind,
+      baseM,
+      topM,
+      ...present({ thicknessLowM, thicknessHighM }),
       notes: cells.notes ?? "",
       origin,
     });

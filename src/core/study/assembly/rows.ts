@@ -12,15 +12,25 @@ export function rowsOf<T extends TableDeclaration & { readonly name: TableName }
   const read = assembly.sheets.get(table.name);
   if (!read) return [];
   const rows: Row<T>[] = [];
+  const columns = Object.entries(table.columns).map(([name, column]) => ({
+    name,
+    column,
+    index: read.sheet.columns.indexOf(name),
+  }));
   const seen = new Map<string, number>();
   for (const [index, cells] of read.sheet.rows.entries()) {
     const row = read.sheet.rowNumbers[index];
     if (isRepeated(cells, row, { seen, read, assembly })) continue;
-    const values = readRow(cells, row, { table, read, assembly });
-    if (values) rows.push({ cells: values as RowOf<T>, origin: { file: read.sheet.file, row } });
+    const values = readRow(cells, row, { table, columns, read, assembly });
+    if (values && isRowOf(values, table))
+      rows.push({ cells: values, origin: { file: read.sheet.file, row } });
   }
   return rows;
 }
+
+/** True where every declared column has its parsed value; `readRow` has checked each one's type. */
+const isRowOf = <T extends TableDeclaration>(values: object, table: T): values is RowOf<T> =>
+  Object.keys(table.columns).every((name) => Object.hasOwn(values, name));
 
 interface Repeats {
   readonly seen: Map<string, number>;
@@ -29,7 +39,7 @@ interface Repeats {
 }
 
 function isRepeated(cells: readonly string[], row: number, { seen, read, assembly }: Repeats): boolean {
-  const content = JSON.stringify(cells.map((cell) => cell.trim()));
+  const content = cells.map((cell) => cell.trim()).join("\u0000");
   const first = seen.get(content);
   if (first === undefined) {
     seen.set(content, row);
@@ -46,17 +56,22 @@ function isRepeated(cells: readonly string[], row: number, { seen, read, assembl
 
 interface Reading {
   readonly table: TableDeclaration;
+  /** The declared columns and where they stand in the sheet (-1: absent). */
+  readonly columns: readonly {
+    readonly name: string;
+    readonly column: ColumnDeclaration;
+    readonly index: number;
+  }[];
   readonly read: ReadSheet;
   readonly assembly: Assembly;
 }
 
 function readRow(cells: readonly string[], row: number, reading: Reading): object | undefined {
-  const { table, read, assembly } = reading;
-  const { file, columns } = read.sheet;
+  const { table, columns, read, assembly } = reading;
+  const { file } = read.sheet;
   const values = new Map<string, unknown>();
   let isUsable = true;
-  for (const [name, column] of Object.entries(table.columns)) {
-    const index = columns.indexOf(name);
+  for (const { name, column, index } of columns) {
     const text = index === -1 ? "" : (cells[index] ?? "");
     const { value, isGood } = readCell(text, column, { name, row, file, assembly, read });
     values.set(name, value);

@@ -11,6 +11,7 @@ export function readTaxa(assembly: Assembly): Map<string, Taxon> {
   const read = assembly.sheets.get("taxa");
   const list = new Map<string, Taxon>();
   if (!read) return list;
+  const traits = traitReader(read);
   for (const { cells, origin } of rowsOf(taxa, assembly)) {
     const name = cells.taxon;
     if (list.has(name)) {
@@ -26,7 +27,7 @@ export function readTaxa(assembly: Assembly): Map<string, Taxon> {
       name,
       group: cells.group ?? "",
       ...present({ accepted: cells.accepted, mixingLengthM: cells.mixing_length_m }),
-      traits: traitsOf(read, origin.row),
+      traits: traits(origin.row),
       notes: cells.notes ?? "",
       origin,
     });
@@ -35,13 +36,16 @@ export function readTaxa(assembly: Assembly): Map<string, Taxon> {
 }
 
 /** Every column of taxa.csv that is not declared is a trait. */
-function traitsOf({ sheet }: ReadSheet, row: number): Readonly<Record<string, string>> {
-  const cells = sheet.rows[sheet.rowNumbers.indexOf(row)] ?? [];
-  const traits = sheet.headers
-    .map((header, index) => [header.trim(), cells[index] ?? "", sheet.columns[index]] as const)
-    .filter(([header, cell, column]) => column === undefined && header !== "" && cell.trim() !== "")
-    .map(([header, cell]) => [header, cell.trim()] as const);
-  return Object.fromEntries(traits);
+function traitReader({ sheet }: ReadSheet): (row: number) => Readonly<Record<string, string>> {
+  const byRow = new Map(sheet.rowNumbers.map((row, index) => [row, sheet.rows[index]]));
+  const columns = sheet.headers
+    .map((header, index) => ({ trait: header.trim(), index }))
+    .filter(({ trait, index }) => sheet.columns[index] === undefined && trait !== "");
+  return (row) => {
+    const cells = byRow.get(row) ?? [];
+    const traits = columns.map(({ trait, index }) => [trait, (cells[index] ?? "").trim()] as const);
+    return Object.fromEntries(traits.filter(([, value]) => value !== ""));
+  };
 }
 
 function withGroups(list: Map<string, Taxon>, assembly: Assembly): Map<string, Taxon> {
@@ -62,6 +66,13 @@ function withGroups(list: Map<string, Taxon>, assembly: Assembly): Map<string, T
     if (group === ungrouped) tellUngrouped(taxon, assembly);
   }
   return list;
+}
+
+/** The group that all listed taxa of a genus share, for finds that are known to the genus only. */
+export function genusGroup(genus: string, taxa: ReadonlyMap<string, Taxon>): string | undefined {
+  const groups = new Set<string>();
+  for (const { name, group } of taxa.values()) if (name.startsWith(`${genus} `)) groups.add(group);
+  return groups.size === 1 ? [...groups][0] : undefined;
 }
 
 export function tellUngrouped({ name, origin }: Taxon, assembly: Assembly): void {
