@@ -180,8 +180,8 @@ export function exampleMeasurements(
     const isSlab = sample.kind === "slab";
     const isNear = Math.abs(kaAtHeight(section, sample.heightM)) < 90;
     const measurements: ExampleMeasurement[] = [];
-    if (isSlab || chance < (isNear ? 0.8 : 0.25)) measurements.push(iridium(sample, context));
-    if (isSlab || chance < (isNear ? 0.5 : 0.15)) measurements.push(nickel(sample, context));
+    if (isSlab || chance < (isNear ? 0.9 : 0.55)) measurements.push(iridium(sample, context));
+    if (isSlab || chance < (isNear ? 0.6 : 0.3)) measurements.push(nickel(sample, context));
     if (isSlab || (isNear && chance < 0.2))
       measurements.push(shockedQuartz(sample, context), spherules(sample, context));
     if (isSlab ? index % 2 === 0 : chance > 0.35) measurements.push(carbonIsotopes(sample, context));
