@@ -1,1 +1,13 @@
-export {};
+export { analyse } from "../core/analysis.ts";
+export type { Analysis } from "../core/analysis-result.ts";
+export type { Study } from "../core/study/model.ts";
+export type { Problem } from "../core/study/problem.ts";
+export { readStudy } from "../core/tables/read-study.ts";
+export { writeCsv } from "../core/tables/write-csv.ts";
+export { VERSION } from "../core/version.ts";
+export type { Finding } from "./findings/finding.ts";
+export { findings } from "./findings/index.ts";
+export { type RunFilesOptions, runFiles } from "./run-files.ts";
+export { resultTables } from "./tables/index.ts";
+export type { ResultTable } from "./tables/result-table.ts";
+export { plain, type Words } from "./wordings/words.ts";

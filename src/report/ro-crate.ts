@@ -1,6 +1,8 @@
 import type { Study } from "../core/study/model.ts";
 import { VERSION } from "../core/version.ts";
 
+export const CRATE_FILE = "ro-crate-metadata.json";
+
 const context = "https://w3id.org/ro/crate/1.2/context";
 const profile = "https://w3id.org/ro/crate/1.2";
 
@@ -21,7 +23,7 @@ export function roCrate(study: Study, files: readonly string[]): string {
   const tables = study.files.map(({ name }) => ({ "@id": `study/${name}` }));
   const graph = [
     {
-      "@id": "ro-crate-metadata.json",
+      "@id": CRATE_FILE,
       "@type": "CreativeWork",
       conformsTo: { "@id": profile },
       about: { "@id": "./" },
@@ -61,3 +63,26 @@ function formatOf(file: string): string {
   const ending = file.slice(file.lastIndexOf(".") + 1);
   return formats[ending] ?? "application/octet-stream";
 }
+
+/** The files that a folder's description says belong to it; empty where it cannot be read. */
+export function filesOfCrate(text: string): readonly string[] {
+  const graph = parsed(text)?.["@graph"];
+  if (!Array.isArray(graph)) return [];
+  const root: unknown = graph.find((entity) => isRecord(entity) && entity["@id"] === "./");
+  const parts = isRecord(root) && Array.isArray(root.hasPart) ? root.hasPart : [];
+  return parts.flatMap((part: unknown) =>
+    isRecord(part) && typeof part["@id"] === "string" ? [part["@id"]] : [],
+  );
+}
+
+function parsed(text: string): Record<string, unknown> | undefined {
+  try {
+    const content: unknown = JSON.parse(text);
+    return isRecord(content) ? content : undefined;
+  } catch {
+    return undefined;
+  }
+}
+
+const isRecord = (value: unknown): value is Record<string, unknown> =>
+  typeof value === "object" && value !== null;

@@ -11,7 +11,7 @@ export interface SummaryPart {
 
 /** The result as a person would tell it: the study, the fence, then each section. */
 export function summary(analysis: Analysis): readonly SummaryPart[] {
-  const all = findings(analysis);
+  const all = findings(analysis).filter((finding) => !finding.set?.startsWith("group:"));
   const part = (heading: string, chosen: typeof all): SummaryPart => ({
     heading,
     sentences: chosen.map((finding) => plain(finding.sentence)),

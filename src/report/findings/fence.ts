@@ -1,5 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import { cautionWords } from "../wordings/cautions.ts";
+import { weaknessOf } from "../wordings/cautions.ts";
 import { metres, offset, position } from "../wordings/numbers.ts";
 import { list, plural, say, strong } from "../wordings/words.ts";
 import type { Finding } from "./finding.ts";
@@ -24,7 +24,7 @@ export function fenceFinding({ study, alignment }: Analysis): Finding {
         ...(tie.horizon === datum ? {} : { note: `${offset(tie.residual)} m against the common scale` }),
       };
     }),
-    weaknesses: alignment.cautions.map((c) => ({ severity: "warning", words: cautionWords(c, study) })),
+    weaknesses: alignment.cautions.map((c) => weaknessOf(c, study)),
     methods: alignment.basis,
   };
 }

@@ -1,7 +1,7 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { MarkerHorizon } from "../../core/markers/result.ts";
 import type { Section } from "../../core/study/model.ts";
-import { cautionWords, flagWords, refersToWords } from "../wordings/cautions.ts";
+import { flagWords, refersToWords, weaknessOf } from "../wordings/cautions.ts";
 import { metres, offset, percent, position, positionInterval, significant } from "../wordings/numbers.ts";
 import { say, strong, type Words } from "../wordings/words.ts";
 import type { Finding, NumberLine } from "./finding.ts";
@@ -19,7 +19,7 @@ export function markersFinding({ study, markers }: Analysis, section: Section): 
     sentence: sentence(section, main, found),
     numbers: here.flatMap((h) => horizonLines(section, h, main)),
     weaknesses: [
-      ...cautions.map((c) => ({ severity: "warning" as const, words: cautionWords(c, study) })),
+      ...cautions.map((c) => weaknessOf(c, study)),
       ...flags.map((f) => ({ severity: "note" as const, words: flagWords(f) })),
     ],
     methods: markers.basis,
@@ -29,7 +29,7 @@ export function markersFinding({ study, markers }: Analysis, section: Section): 
 function sentence(section: Section, main: MarkerHorizon | undefined, found: readonly MarkerHorizon[]): Words {
   if (main === undefined)
     return say`The main horizon is ${strong("not placed")} in ${section.title}: its taxa are judged against no marker.`;
-  const place = strong(position(section, main.positionM));
+  const place = strong(position(section, main.positionM, main.highM - main.lowM));
   const interval = positionInterval(section, main.lowM, main.highM);
   const opening = say`In ${section.title} the main horizon lies at ${place} (${percent(main.level)}: ${interval}), `;
   const beside = found.find((h) => h !== main && h.horizon === main.horizon);
@@ -47,7 +47,7 @@ function horizonLines(section: Section, h: MarkerHorizon, main: MarkerHorizon | 
   const lines: NumberLine[] = [
     {
       label: title,
-      value: position(section, h.positionM),
+      value: position(section, h.positionM, h.highM - h.lowM),
       note: `${positionInterval(section, h.lowM, h.highM)}, ${h.source}, ${refersToWords(h.refersTo)}`,
     },
   ];

@@ -1,7 +1,7 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Role } from "../../core/study/finds-result.ts";
 import type { Section } from "../../core/study/model.ts";
-import { cautionWords } from "../wordings/cautions.ts";
+import { weaknessOf } from "../wordings/cautions.ts";
 import { percent } from "../wordings/numbers.ts";
 import { plural, say, strong, type Words } from "../wordings/words.ts";
 import type { Finding } from "./finding.ts";
@@ -28,7 +28,7 @@ export function rangesFinding(analysis: Analysis, section: Section): Finding {
     numbers: (Object.keys(roleWords) as Role[])
       .filter((role) => counts.has(role))
       .map((role) => ({ label: roleWords[role], value: String(counts.get(role)) })),
-    weaknesses: cautions.map((c) => ({ severity: "warning", words: cautionWords(c, study) })),
+    weaknesses: cautions.map((c) => weaknessOf(c, study)),
     methods: ranges.basis,
   };
 }

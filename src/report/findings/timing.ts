@@ -1,7 +1,7 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Section } from "../../core/study/model.ts";
 import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
-import { cautionWords } from "../wordings/cautions.ts";
+import { weaknessOf } from "../wordings/cautions.ts";
 import { metres, offset, percent, positionInterval, pValue } from "../wordings/numbers.ts";
 import { plural, say, strong, type Words } from "../wordings/words.ts";
 import type { Finding, NumberLine } from "./finding.ts";
@@ -23,9 +23,16 @@ export function timingFinding(analysis: Analysis, section: Section, set: string)
     set,
     sentence: sentence({ analysis, section, set, answers }),
     numbers: answers.flatMap((answer) => line(answer, section)),
-    weaknesses: cautions.map((c) => ({ severity: "warning", words: cautionWords(c, study) })),
+    weaknesses: cautions.map((c) => weaknessOf(c, study)),
     methods: timing.basis,
   };
+}
+
+/** The set in words: `39 candidates`, `8 taxa of ammonoids`, `27 taxa of open-shelf`. */
+function taxaOf(set: string, count: number): string {
+  if (set === "candidates") return plural(count, "candidate");
+  if (set === "candidates-closed") return `${plural(count, "candidate")} that end below the top`;
+  return `${plural(count, "taxon", "taxa")} of ${set.replace(/^group:/, "")}`;
 }
 
 interface Telling {
@@ -38,9 +45,9 @@ interface Telling {
 function sentence({ analysis, section, set, answers }: Telling): Words {
   const by = (method: TimingMethod) => answers.find((answer) => answer.method === method);
   const test = by("common-end");
-  const taxa = plural(test?.taxa ?? 0, "taxon", "taxa");
+  const taxa = taxaOf(set, test?.taxa ?? 0);
   if (test?.p === undefined)
-    return say`${strong(taxa)} of the set ${set} in ${section.title}: too few to ask whether they ended together.`;
+    return say`${strong(taxa)} in ${section.title}: too few to ask whether they ended together.`;
   const gate = analysis.timing.distrusted.includes(section.name)
     ? say`Finds thin out upward here, so the test of one level is not to be trusted. `
     : [];

@@ -3,13 +3,13 @@ import type { Analysis } from "../../core/analysis-result.ts";
 import { normalQuantile } from "../../core/numeric/normal.ts";
 import type { Section } from "../../core/study/model.ts";
 import { given } from "../wordings/rows.ts";
-import { declare, number, text } from "./result-table.ts";
+import { declare } from "./result-table.ts";
 
 export const alignmentTable = declare({
   name: "alignment",
   title: "Sections on one scale",
   rows: alignedRows,
-  columns: [
+  columns: ({ text, number }) => [
     text("section", "section", (r) => r.section.name),
     number("position_m", "stratigraphic height, m", (r) => r.heightM),
     number("position_given", "the same in the section's own axis and unit", (r) =>
@@ -28,7 +28,7 @@ export const tiesTable = declare({
   name: "ties",
   title: "Horizons that tie the sections",
   rows: (a) => a.alignment.ties,
-  columns: [
+  columns: ({ text, number }) => [
     text("section", "section", (t) => t.section),
     text("horizon", "shared horizon", (t) => t.horizon),
     number("position_m", "stratigraphic height, m", (t) => t.positionM),

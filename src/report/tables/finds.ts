@@ -1,12 +1,12 @@
 import { given, roleReason } from "../wordings/rows.ts";
-import { declare, integer, number, text, yesNo } from "./result-table.ts";
+import { declare } from "./result-table.ts";
 
 export const findsTable = declare({
   name: "finds",
   title: "Every find, and whether it counts",
   rows: (a) =>
     a.finds.map((find) => ({ find, section: a.study.sections.find((s) => s.name === find.section) })),
-  columns: [
+  columns: ({ text, number, integer }) => [
     text("file", "the table the find stands in", (r) => r.find.origin.file),
     integer("row", "its row, the header being row 1", (r) => r.find.origin.row),
     text("section", "section", (r) => r.find.section),
@@ -25,7 +25,7 @@ export const candidatesTable = declare({
   name: "candidates",
   title: "Which taxa count against the main horizon",
   rows: (a) => a.candidates,
-  columns: [
+  columns: ({ text, number, integer, yesNo }) => [
     text("section", "section", (c) => c.section),
     text("taxon", "accepted name", (c) => c.taxon),
     text("group", "group", (c) => c.group),

@@ -1,13 +1,13 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import { given } from "../wordings/rows.ts";
-import { declare, number, text, yesNo } from "./result-table.ts";
+import { declare } from "./result-table.ts";
 
 export const markersTable = declare({
   name: "markers",
   title: "Marker horizons, given and found",
   rows: (a) =>
     a.markers.horizons.map((h) => ({ h, section: a.study.sections.find((s) => s.name === h.section) })),
-  columns: [
+  columns: ({ text, number }) => [
     text("section", "section", ({ h }) => h.section),
     text("horizon", "its name in the section", ({ h }) => h.name),
     text("kind", "kind of horizon", ({ h }) => h.kind),
@@ -42,7 +42,7 @@ export const flagsTable = declare({
   name: "flags",
   title: "Quality flags, facts with their numbers",
   rows: (a) => a.markers.flags,
-  columns: [
+  columns: ({ text }) => [
     text("section", "section", (f) => f.section),
     text("horizon", "horizon or analyte", (f) => f.horizon),
     text("flag", "flag", (f) => f.flag),
@@ -59,7 +59,7 @@ export const anomaliesTable = declare({
   name: "anomalies",
   title: "Every measured sample against its background",
   rows: profileRows,
-  columns: [
+  columns: ({ text, number, yesNo }) => [
     text("section", "section", (r) => r.section),
     text("sample", "sample", (r) => r.sample.sample),
     text("analyte", "analyte", (r) => r.analyte),

@@ -1,10 +1,10 @@
-import { declare, integer, number, text } from "./result-table.ts";
+import { declare } from "./result-table.ts";
 
 export const rangeEndsTable = declare({
   name: "range-ends",
   title: "True end of each taxon's range",
   rows: (a) => a.ranges.ends,
-  columns: [
+  columns: ({ text, number, integer }) => [
     text("section", "section", (e) => e.section),
     text("taxon", "accepted name", (e) => e.taxon),
     text("group", "group", (e) => e.group),

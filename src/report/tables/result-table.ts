@@ -26,60 +26,37 @@ export interface ResultDeclaration {
 
 type ColumnOf<Row> = ResultColumn & { readonly cell: (row: Row) => Cell };
 
+/** Makes a column of one type; `of` picks its cell from a row. */
+type Maker<Row, Value> = (name: string, help: string, of: (row: Row) => Value) => ColumnOf<Row>;
+
+interface Makers<Row> {
+  readonly text: Maker<Row, string | undefined>;
+  readonly number: Maker<Row, number | undefined>;
+  readonly integer: Maker<Row, number | undefined>;
+  readonly yesNo: Maker<Row, boolean>;
+}
+
+const makers = <Row>(): Makers<Row> => ({
+  text: (name, help, cell) => ({ name, type: "text", help, cell }),
+  number: (name, help, cell) => ({ name, type: "number", help, cell }),
+  integer: (name, help, cell) => ({ name, type: "integer", help, cell }),
+  yesNo: (name, help, of) => ({ name, type: "yes-no", help, cell: (row) => (of(row) ? "yes" : "no") }),
+});
+
 export function declare<Row>(declaration: {
   readonly name: string;
   readonly title: string;
   readonly rows: (analysis: Analysis) => readonly Row[];
-  readonly columns: readonly ColumnOf<Row>[];
+  readonly columns: (make: Makers<Row>) => readonly ColumnOf<Row>[];
 }): ResultDeclaration {
   const { name, title, rows } = declaration;
-  const columns = declaration.columns.map(({ name, type, help }) => ({ name, type, help }));
+  const made = declaration.columns(makers());
+  const columns = made.map(({ cell: _cell, ...column }) => column);
   const fill = (analysis: Analysis) => ({
     name,
     title,
     columns,
-    rows: rows(analysis).map((row) => declaration.columns.map((column) => column.cell(row))),
+    rows: rows(analysis).map((row) => made.map((column) => column.cell(row))),
   });
   return { name, title, columns, fill };
 }
-
-/** Column makers; `of` picks the cell from a row. */
-export const text = <Row>(
-  name: string,
-  help: string,
-  of: (row: Row) => string | undefined,
-): ColumnOf<Row> => ({
-  name,
-  type: "text",
-  help,
-  cell: of,
-});
-
-export const number = <Row>(
-  name: string,
-  help: string,
-  of: (row: Row) => number | undefined,
-): ColumnOf<Row> => ({
-  name,
-  type: "number",
-  help,
-  cell: of,
-});
-
-export const integer = <Row>(
-  name: string,
-  help: string,
-  of: (row: Row) => number | undefined,
-): ColumnOf<Row> => ({
-  name,
-  type: "integer",
-  help,
-  cell: of,
-});
-
-export const yesNo = <Row>(name: string, help: string, of: (row: Row) => boolean): ColumnOf<Row> => ({
-  name,
-  type: "yes-no",
-  help,
-  cell: (row) => (of(row) ? "yes" : "no"),
-});

@@ -1,10 +1,10 @@
-import { declare, integer, number, text } from "./result-table.ts";
+import { declare } from "./result-table.ts";
 
 export const timingTable = declare({
   name: "timing",
   title: "Answers about the assemblage",
   rows: (a) => a.timing.answers,
-  columns: [
+  columns: ({ text, number, integer }) => [
     text("section", "section, or joint", (t) => t.section),
     text("set", "set of taxa", (t) => t.set),
     text("group", "group, where the set is one", (t) => t.group),

@@ -11,21 +11,24 @@ export function metres(value: number): string {
 }
 
 /** A position in the section's own axis and unit: `12.77 m`, `depth 812.3 ft`. */
-export function position(section: Section, heightM: number): string {
-  const given = heightToGiven(section, heightM);
-  const text = `${ownUnitNumber(section, given)} ${section.unit}`;
+export function position(section: Section, heightM: number, withinM = Number.POSITIVE_INFINITY): string {
+  const text = `${inOwnUnit(section, heightM, withinM)} ${section.unit}`;
   return section.axis === "depth" ? `depth ${text}` : text;
 }
 
 /** An interval in the section's own axis and unit, the stratigraphically lower end first: `12.71 to 12.83 m`. */
 export function positionInterval(section: Section, lowM: number, highM: number): string {
-  const [low, high] = [heightToGiven(section, lowM), heightToGiven(section, highM)];
-  return `${ownUnitNumber(section, low)} to ${ownUnitNumber(section, high)} ${section.unit}`;
+  const widthM = highM - lowM;
+  return `${inOwnUnit(section, lowM, widthM)} to ${inOwnUnit(section, highM, widthM)} ${section.unit}`;
 }
 
-function ownUnitNumber(section: Section, value: number): string {
-  const decimals = { m: 2, ft: 2, cm: 1, mm: 0 }[section.unit];
-  return minus(value.toFixed(decimals));
+/** Enough decimals to tell apart what lies `withinM` of each other, and no more than a millimetre needs. */
+function inOwnUnit(section: Section, heightM: number, withinM: number): string {
+  const usual = { m: 2, ft: 2, cm: 1, mm: 0 }[section.unit];
+  const finest = { m: 4, ft: 3, cm: 2, mm: 1 }[section.unit];
+  const isFine = withinM < 0.05;
+  const decimals = isFine ? Math.min(finest, usual + (withinM < 0.005 ? 2 : 1)) : usual;
+  return minus(heightToGiven(heightM, section).toFixed(decimals));
 }
 
 /** An offset with its sign: `+0.62 m`, `−1.30 m`. */

@@ -4,7 +4,7 @@ import type { Section } from "../../core/study/model.ts";
 
 /** A height in the section's own axis and unit. */
 export const given = (section: Section | undefined, heightM: number): number | undefined =>
-  section === undefined ? undefined : heightToGiven(section, heightM);
+  section === undefined ? undefined : heightToGiven(heightM, section);
 
 /** The rule behind a role in words, with the numbers it compared (metres of height). */
 export function roleReason({ reason, findsBelowCeiling }: Candidate): string {

@@ -1,0 +1,51 @@
+#!/usr/bin/env node
+import { Command, CommanderError } from "commander";
+import { VERSION } from "../core/version.ts";
+import { CallError } from "./call-error.ts";
+import { openScreen } from "./screen.ts";
+import { verbs } from "./verbs/index.ts";
+import type { Verb, VerbOptions } from "./verbs/verb.ts";
+
+const program = new Command("lastbed")
+  .description("When did each group really disappear, relative to a physical marker horizon?")
+  .version(VERSION)
+  .exitOverride();
+
+for (const verb of verbs) program.addCommand(commandOf(verb));
+
+function commandOf(verb: Verb): Command {
+  const command = new Command(verb.name)
+    .description(verb.summary)
+    .exitOverride()
+    .option("--json", "one JSON document on standard output; prose goes to standard error")
+    .option("--quiet", "no prose and no progress")
+    .option("--seed <number>", "seed of every random stream")
+    .option("--threads <number>", "worker threads")
+    .option("--set <path=value>", "a setting, as JSON or text; may be repeated", collect, [])
+    .option("--figures <formats>", "figure formats (svg)", "svg");
+  for (const parameter of verb.parameters) command.argument(parameter);
+  if (verb.needsOut) command.requiredOption("--out <folder>", "where results are written");
+  if (verb.name === "open") command.option("--port <number>", "port on this machine", "0");
+  return command.action(async (...args: unknown[]) => {
+    const words = args
+      .slice(0, verb.parameters.length)
+      .flat()
+      .filter((word) => typeof word === "string");
+    const options: VerbOptions = command.opts();
+    process.exitCode = await verb.act(words, options, openScreen(options));
+  });
+}
+
+function collect(value: string, earlier: readonly string[]): readonly string[] {
+  return [...earlier, value];
+}
+
+try {
+  await program.parseAsync();
+} catch (error) {
+  if (error instanceof CommanderError) process.exitCode = error.exitCode === 0 ? 0 : 2;
+  else if (error instanceof CallError) {
+    process.stderr.write(`${error.message}\n`);
+    process.exitCode = 2;
+  } else throw error;
+}

@@ -1,0 +1,25 @@
+import { mkdir, readdir, writeFile } from "node:fs/promises";
+import { basename, join, resolve } from "node:path";
+import { studyTemplate } from "../../core/tables/templates.ts";
+import { CallError } from "../call-error.ts";
+import type { Screen } from "../screen.ts";
+
+/** Writes a study to fill in: every table with its header and one worked row. Never writes over anything. */
+export async function newStudy(folder: string, screen: Screen): Promise<number> {
+  const entries: readonly string[] = await readdir(folder).catch(() => []);
+  if (entries.length > 0)
+    throw new CallError(`lastbed: expected a new or empty folder, got ${folder}, which holds ${entries[0]}`);
+  await mkdir(folder, { recursive: true });
+  const files = studyTemplate(basename(resolve(folder)));
+  for (const [name, text] of files) await writeFile(join(folder, name), text);
+  screen.say(`A study to fill in lies in ${folder}: ${[...files.keys()].join(", ")}.`);
+  screen.say("Each table holds one worked row: replace it. Delete the tables you do not need; then:");
+  screen.say(`  lastbed check ${folder}\n  lastbed run ${folder} --out <folder>`);
+  screen.document({
+    command: "new",
+    problems: [],
+    summary: { folder },
+    files: [...files.keys()].map((f) => join(folder, f)),
+  });
+  return 0;
+}

@@ -1,0 +1,41 @@
+import type { ReactElement } from "react";
+import type { Finding } from "../findings/finding.ts";
+import { Sentence } from "./words.tsx";
+
+/** A finding in the order of an argument: the sentence, its numbers, what weakens it. */
+export function FindingBlock({ finding }: { readonly finding: Finding }): ReactElement {
+  const { sentence, numbers, weaknesses } = finding;
+  return (
+    <div className="finding">
+      <p className="sentence">
+        <Sentence words={sentence} />
+      </p>
+      {numbers.length > 0 && (
+        <table className="numbers">
+          <tbody>
+            {numbers.map(({ label, value, note }, i) => (
+              <tr key={`${i}`}>
+                <th scope="row">{label}</th>
+                <td>{value}</td>
+                <td className="note">{note}</td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      )}
+      {weaknesses.length > 0 && (
+        <>
+          <h4>What weakens this</h4>
+          <ul className="weaknesses">
+            {weaknesses.map(({ severity, words }, i) => (
+              <li key={`${i}`} className={severity}>
+                <span className="sign">{severity === "warning" ? "\u25b3" : "\u25cb"}</span>
+                <Sentence words={words} />
+              </li>
+            ))}
+          </ul>
+        </>
+      )}
+    </div>
+  );
+}

@@ -1,0 +1,165 @@
+import type { Caution } from "../../core/basis.ts";
+import type { Flag, RefersTo } from "../../core/markers/result.ts";
+import type { Study } from "../../core/study/model.ts";
+import type { Weakness } from "../findings/finding.ts";
+import { metres, offset, pValue, significant } from "./numbers.ts";
+import { name, plural, say, strong, type Words } from "./words.ts";
+
+/** What a caution's sentence may draw on. */
+interface Told {
+  readonly section: string;
+  readonly subject: string;
+  /** A number behind the caution; 0 where absent. */
+  readonly n: (key: string) => number;
+  readonly text: (key: string) => string;
+}
+
+const taxa = ({ n }: Told) => strong(plural(n("taxa"), "taxon", "taxa"));
+
+/** The one table of wordings for everything that weakens a result. */
+const wordings: Readonly<Record<string, (told: Told) => Words>> = {
+  "zero-set-aside": ({ subject, n }) =>
+    say`${plural(n("measurements"), "value")} of ${subject} given as 0 set aside: a trace element is below a limit, not absent.`,
+  "overlapping-slabs": ({ subject, n }) =>
+    say`${plural(n("pairs"), "pair")} of samples measured for ${subject} overlap; the rock between them is counted twice.`,
+  "mixing-misfit": ({ subject, n }) =>
+    say`Box mixing fits ${subject} poorly (${pValue(n("p"))}); its intervals are widened ${significant(n("inflation"), 2)} times.`,
+  "profile-too-short": ({ subject, n }) =>
+    say`${subject} was measured in ${plural(n("samples"), "sample")}, fewer than the ${n("needed")} a background needs.`,
+  "no-main-horizon": () =>
+    say`No impact horizon is given and no iridium horizon was found: there is no main horizon.`,
+  "same-horizon-missing": ({ subject, text }) =>
+    say`${subject}, declared to be ${text("name")} in boundary.same, was not found here.`,
+  "main-horizon-ambiguous": (told) =>
+    say`More than one impact horizon is given (${givenNames(told)}): name the main one in boundary.horizon.`,
+  "horizon-twice": ({ subject, n }) =>
+    say`${subject} stands ${n("count")} times in this section; the lowest or best measured is used.`,
+  "boundary-horizon-unknown": ({ subject }) =>
+    say`${subject}, named in boundary.horizon, is placed in no section.`,
+  "given-found-differ": ({ subject, text, n }) =>
+    say`The found ${text("found")} lies ${offset(n("differenceM"))} m from the given ${subject}, more than two standard deviations.`,
+  "main-horizon-found": () =>
+    say`No impact horizon is given: the found iridium horizon of largest fluence is taken for the main one.`,
+  "main-horizon-by-section": ({ n }) =>
+    say`No impact horizon is given: each of ${plural(n("sections"), "section")} is judged against its own iridium horizon, until boundary.same declares them one.`,
+  "horizons-cross": ({ section, text }) =>
+    say`${text("lower")} lies below ${text("upper")} in ${section} but above it in ${text("other")}: sections cannot be lined up on both.`,
+  "datum-not-shared": () =>
+    say`The sections share no main horizon yet: declare the found horizons one in boundary.same to line them up.`,
+  "alignment-order-refused": ({ subject }) =>
+    say`${subject} cannot be placed in one upward order on the common scale: align on fewer horizons.`,
+  "section-without-datum": ({ section, subject }) => say`${section} has no ${subject} and is not lined up.`,
+  "range-base-not-placed": ({ subject }) =>
+    say`${subject}, the working base of ranges, is not placed here; first finds are used.`,
+  "range-base-above-finds": (told) =>
+    say`${taxa(told)} found below the working base keep their first find as base.`,
+  "range-finds-outside-searches": (told) =>
+    say`${plural(told.n("finds"), "find")} of ${taxa(told)} lie outside samples searched for their group and do not count in the method of sampled horizons.`,
+  "range-unequal-effort": ({ subject }) =>
+    say`Effort differs between the samples searched for ${subject}; the method of sampled horizons takes it as equal.`,
+  "range-few-horizons": (told) =>
+    say`${taxa(told)} with four horizons or fewer: their intervals mostly reflect the assumption.`,
+  "range-reaches-top": (told) => say`${taxa(told)} found up to the highest sample: their upper end is open.`,
+  "range-published-only": (told) => say`${taxa(told)} known from a published range alone, without the finds.`,
+  "range-bound-above-section": (told) =>
+    say`The interval of ${taxa(told)} ends above the section, where nobody searched.`,
+  "range-bound-in-gap": (told) =>
+    say`The interval of ${taxa(told)} ends inside rock that could not be searched; it is drawn to the top of it.`,
+  "range-bound-open": (told) =>
+    say`The interval of ${taxa(told)} is open by the method of sampled horizons: no barren horizon above closes it.`,
+  "timing-uninformative-taxa": (told) =>
+    say`${taxa(told)} with a single informative find left out of the tests; their finds still bound the common level from below.`,
+  "timing-ties": (told) =>
+    say`${taxa(told)} share the highest last find; the test rejects a little less often for it.`,
+  "timing-aligned-too-well": ({ n }) =>
+    say`Last finds agree better than chance allows (${pValue(n("p"))}): look for coarse sampling, a surface, or taxa chosen by their ends.`,
+  "timing-one-level-rejected": ({ n }) =>
+    say`One level is rejected (${pValue(n("p"))}): the level given below holds only if it is accepted all the same.`,
+  "timing-no-common-end": () => say`No level could be the end of all of them at this confidence.`,
+  "timing-box-rarest": ({ text, n }) =>
+    say`The longest duration rests on the rarest taxon used, ${name(text("taxon"))} with ${n("horizons")} horizons.`,
+  "timing-box-all-taxa": ({ n }) =>
+    say`Fewer than two taxa have ${n("horizons")} horizons, so the longest duration uses all of them and is wide.`,
+  "timing-recovery-declines": ({ n }) =>
+    say`${strong("Finds thin out upward")} (${pValue(n("p"))}): methods of uniform recovery put ends too low and reject one level too often.`,
+  "timing-reaches-top": ({ text, n }) =>
+    say`${plural(n("taxa"), "candidate")} found up to the highest sample (${name(text("names"))}); the answer stands with and without.`,
+  "timing-turns-on-top": ({ n }) =>
+    say`The answer turns on taxa that reach the top: ${pValue(n("all"))} with them, ${pValue(n("closed"))} without.`,
+  "timing-survivors": ({ text, n }) =>
+    say`${plural(n("taxa"), "survivor")} never enter a test: ${name(text("names"))}.`,
+  "timing-late-starts": ({ text, n }) =>
+    say`${plural(n("taxa"), "late start")} left out: ${name(text("names"))}.`,
+  "timing-too-few-horizons": ({ text, n }) =>
+    say`${plural(n("taxa"), "taxon", "taxa")} with too few horizons left out: ${name(text("names"))}.`,
+  "timing-window-widened": ({ n }) =>
+    say`timing.window does not span the last finds and was widened to ${metres(n("lowM"))} to ${metres(n("highM"))} m of height.`,
+  "timing-set-name-taken": ({ subject }) =>
+    say`The declared set ${subject} has a reserved name and was not used.`,
+  "timing-set-incomplete": ({ subject, n }) =>
+    say`${n("missing")} of the ${n("taxa")} taxa declared in ${subject} are not candidates here.`,
+};
+
+/** The codes that have words: a test holds that every caution of the core has some. */
+export const wordedCautions: ReadonlySet<string> = new Set(Object.keys(wordings));
+
+/** Facts to know, told as notes; every other caution is a warning: it can change the answer. */
+const notes: ReadonlySet<string> = new Set([
+  "horizon-twice",
+  "main-horizon-found",
+  "profile-too-short",
+  "range-base-above-finds",
+  "range-bound-above-section",
+  "range-bound-in-gap",
+  "range-bound-open",
+  "range-few-horizons",
+  "range-finds-outside-searches",
+  "range-published-only",
+  "range-reaches-top",
+  "timing-box-all-taxa",
+  "timing-box-rarest",
+  "timing-late-starts",
+  "timing-set-incomplete",
+  "timing-survivors",
+  "timing-ties",
+  "timing-too-few-horizons",
+  "timing-uninformative-taxa",
+  "timing-window-widened",
+  "zero-set-aside",
+]);
+
+export function weaknessOf(caution: Caution, study: Study): Weakness {
+  return { severity: notes.has(caution.code) ? "note" : "warning", words: cautionWords(caution, study) };
+}
+
+function cautionWords(caution: Caution, study: Study): Words {
+  const { numbers = {} } = caution;
+  const section = study.sections.find((s) => s.name === caution.section)?.title ?? caution.section ?? "";
+  const told: Told = {
+    section,
+    subject: caution.subject ?? "",
+    n: (key) => Number(numbers[key] ?? 0),
+    text: (key) => String(numbers[key] ?? ""),
+  };
+  return wordings[caution.code]?.(told) ?? say`${caution.code}`;
+}
+
+function givenNames({ n, text }: Told): string {
+  return Array.from({ length: n("count") }, (_, i) => text(`name${i + 1}`)).join(", ");
+}
+
+/** A flag with the quantities that raised it. */
+export function flagWords({ horizon, flag, numbers, consequence }: Flag): Words {
+  const quantities = Object.entries(numbers).map(([key, value]) => `${key} ${significant(value)}`);
+  const behind = quantities.length > 0 ? ` (${quantities.join(", ")})` : "";
+  return say`${flag.toLowerCase().replaceAll("_", " ")}, ${horizon}: ${consequence}${behind}.`;
+}
+
+export function refersToWords(refersTo: RefersTo): string {
+  return {
+    "event-surface": "the event surface",
+    "base-of-smear": "the base of the smear",
+    contact: "a contact",
+    level: "the level itself",
+  }[refersTo];
+}

@@ -1,0 +1,72 @@
+// Runs everything that `npm test` promises: types, lint, format, unused code, a build, and every kind of test,
+// the real-browser ones too. The last line counts them.
+import { spawnSync } from "node:child_process";
+import { existsSync, mkdtempSync, readFileSync, rmSync } from "node:fs";
+import { tmpdir } from "node:os";
+import { join } from "node:path";
+import { BROWSER_HINT, findBrowser } from "./app/browser.mjs";
+
+const counts = { passed: 0, failed: 0, skipped: 0 };
+
+const call = (command, words, options = {}) => spawnSync(command, words, { stdio: "inherit", ...options }).status === 0;
+
+function step(title, command, words) {
+  console.log(`\n== ${title}`);
+  const isFine = call(command, words);
+  counts[isFine ? "passed" : "failed"] += 1;
+  return isFine;
+}
+
+/** An installed browser; as root on a Debian-like system the packaged one is installed first. */
+function browser() {
+  const found = findBrowser();
+  if (found !== undefined) return found;
+  const isRoot = process.getuid?.() === 0;
+  if (!isRoot || !existsSync("/usr/bin/apt-get")) return undefined;
+  console.log("\n== No Chromium or Chrome found: installing the packaged Chromium (apt-get install chromium)");
+  const env = { ...process.env, DEBIAN_FRONTEND: "noninteractive" };
+  call("apt-get", ["update", "-qq"], { env });
+  call("apt-get", ["install", "-y", "-qq", "chromium"], { env });
+  return findBrowser();
+}
+
+function tests(hasBrowser) {
+  console.log("\n== Tests");
+  const folder = mkdtempSync(join(tmpdir(), "lastbed-tests-"));
+  const file = join(folder, "result.json");
+  const without = hasBrowser ? [] : ["--exclude", "tests/app/**/*.test.ts"];
+  const isFine = call("npx", ["vitest", "run", "--reporter=default", "--reporter=json", `--outputFile.json=${file}`, ...without]);
+  const result = existsSync(file) ? JSON.parse(readFileSync(file, "utf8")) : undefined;
+  rmSync(folder, { recursive: true, force: true });
+  if (result === undefined) {
+    counts.failed += 1;
+    return;
+  }
+  counts.passed += result.numPassedTests;
+  counts.skipped += result.numPendingTests + result.numTodoTests;
+  const brokenFiles = result.testResults.filter((one) => one.status === "failed" && one.assertionResults.length === 0).length;
+  counts.failed += result.numFailedTests + brokenFiles;
+  if (!isFine && result.numFailedTests + brokenFiles === 0) counts.failed += 1;
+}
+
+step("Types", "npx", ["tsc", "-b"]);
+step("Format", "npx", ["biome", "check"]);
+step("Lint", "npx", ["oxlint", "--type-aware", "--deny-warnings"]);
+step("Unused code", "npx", ["knip"]);
+step("Build", "npm", ["run", "--silent", "build"]);
+const found = browser();
+tests(found !== undefined);
+if (found === undefined) {
+  console.log(`\n${BROWSER_HINT}`);
+  counts.skipped += readdirCount();
+}
+
+/** How many test files of the page were left out. */
+function readdirCount() {
+  const { stdout } = spawnSync("npx", ["vitest", "list", "--filesOnly", "tests/app"], { encoding: "utf8" });
+  return stdout.split("\n").filter((line) => line.includes(".test.")).length;
+}
+
+const skipped = counts.skipped > 0 ? `, ${counts.skipped} skipped` : "";
+console.log(`\n${counts.passed} passed, ${counts.failed} failed${skipped}`);
+process.exitCode = counts.failed > 0 || found === undefined ? 1 : 0;
