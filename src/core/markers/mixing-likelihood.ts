@@ -24,8 +24,8 @@ export interface Likelihood {
   /** Cells and their standard deviations. */
   readonly cells: readonly MixingCell[];
   readonly sds: readonly number[];
-  /** `response[i]` is the mean excess of cell i per unit fluence (g/cm2 inverted). */
-  readonly fit: (response: readonly number[]) => LinearFit;
+  /** `response[i]` is the mean excess of cell i per unit fluence (cm2/g); it may be reused by the caller. */
+  readonly fit: (response: Float64Array) => LinearFit;
 }
 
 const halfLogTwoPi = 0.9189385332046727;
@@ -38,33 +38,41 @@ const maximumIterations = 60;
  * exactly (2 x 2 weighted least squares) or, with censored cells, by Newton's method.
  */
 export function likelihoodOf(cells: readonly MixingCell[], sds: readonly number[]): Likelihood {
-  const hasCensored = cells.some((cell) => cell.isCensored);
-  const constant = cells.reduce(
-    (sum, cell, i) => (cell.isCensored ? sum : sum - log(sds[i]) - halfLogTwoPi),
-    0,
-  );
-  const backgroundOnly = () => {
-    const zero = cells.map(() => 0);
-    const start = { fluence: 0, background: weightedLine(cells, sds, zero).background };
-    return hasCensored ? newton({ cells, sds, response: zero }, start, constant) : exact(zero, start);
+  const measured = cells.flatMap((cell, i) => (cell.isCensored ? [] : [i]));
+  const hasCensored = measured.length < cells.length;
+  const constant = measured.reduce((sum, i) => sum - log(sds[i]) - halfLogTwoPi, 0);
+  const columns: Columns = {
+    measured: Uint32Array.from(measured),
+    isCensored: Uint8Array.from(cells, (cell) => (cell.isCensored ? 1 : 0)),
+    values: Float64Array.from(cells, (cell) => cell.value),
+    sds: Float64Array.from(sds),
   };
-  const exact = (response: readonly number[], line: Line): LinearFit => ({
-    ...line,
-    logLikelihood: constant + misfit(cells, sds, { ...line, response }),
-  });
+  const best = (response: Float64Array, line: Line): LinearFit =>
+    hasCensored
+      ? newton(columns, response, { start: line, constant })
+      : { ...line, logLikelihood: constant + misfit(columns, response, line) };
   let withoutLayer: LinearFit | undefined;
-  const fit = (response: readonly number[]): LinearFit => {
-    const line = weightedLine(cells, sds, response);
+  const fit = (response: Float64Array): LinearFit => {
+    const line = weightedLine(columns, response);
     if (line.fluence > 0 || hasCensored) {
-      const fitted = hasCensored
-        ? newton({ cells, sds, response }, { ...line, fluence: Math.max(0, line.fluence) }, constant)
-        : exact(response, line);
+      const fitted = best(response, { ...line, fluence: Math.max(0, line.fluence) });
       if (fitted.fluence > 0) return fitted;
     }
-    withoutLayer ??= backgroundOnly();
+    if (withoutLayer === undefined) {
+      const none = new Float64Array(cells.length);
+      withoutLayer = best(none, weightedLine(columns, none));
+    }
     return withoutLayer;
   };
   return { cells, sds, fit };
+}
+
+interface Columns {
+  /** Indices of the measured cells. */
+  readonly measured: Uint32Array;
+  readonly isCensored: Uint8Array;
+  readonly values: Float64Array;
+  readonly sds: Float64Array;
 }
 
 interface Line {
@@ -73,71 +81,66 @@ interface Line {
 }
 
 function misfit(
-  cells: readonly MixingCell[],
-  sds: readonly number[],
-  { fluence, background, response }: Line & { response: readonly number[] },
+  { measured, values, sds }: Columns,
+  response: Float64Array,
+  { fluence, background }: Line,
 ): number {
   let sum = 0;
-  for (let i = 0; i < cells.length; i++) {
-    if (cells[i].isCensored) continue;
-    const r = (cells[i].value - fluence * response[i] - background) / sds[i];
+  for (const i of measured) {
+    const r = (values[i] - fluence * response[i] - background) / sds[i];
     sum -= 0.5 * r * r;
   }
   return sum;
 }
 
 /** Weighted least squares over the measured cells. */
-function weightedLine(
-  cells: readonly MixingCell[],
-  sds: readonly number[],
-  response: readonly number[],
-): Line {
+function weightedLine({ measured, values, sds }: Columns, response: Float64Array): Line {
   let w = 0;
   let wu = 0;
   let wc = 0;
-  for (let i = 0; i < cells.length; i++) {
-    if (cells[i].isCensored) continue;
+  for (const i of measured) {
     const weight = 1 / (sds[i] * sds[i]);
     w += weight;
     wu += weight * response[i];
-    wc += weight * cells[i].value;
+    wc += weight * values[i];
   }
   if (w === 0) return { fluence: 0, background: 0 };
   const centreU = wu / w;
   const centreC = wc / w;
   let uu = 0;
   let uc = 0;
-  for (let i = 0; i < cells.length; i++) {
-    if (cells[i].isCensored) continue;
+  for (const i of measured) {
     const weight = 1 / (sds[i] * sds[i]);
     const u = response[i] - centreU;
     uu += weight * u * u;
-    uc += weight * u * (cells[i].value - centreC);
+    uc += weight * u * (values[i] - centreC);
   }
   if (!(uu > 0)) return { fluence: 0, background: centreC };
   const fluence = uc / uu;
   return { fluence, background: centreC - fluence * centreU };
 }
 
-interface Problem {
-  readonly cells: readonly MixingCell[];
-  readonly sds: readonly number[];
-  readonly response: readonly number[];
+interface NewtonStart {
+  readonly start: Line;
+  readonly constant: number;
 }
 
-function newton(problem: Problem, start: Line, constant: number): LinearFit {
+function newton(columns: Columns, response: Float64Array, { start, constant }: NewtonStart): LinearFit {
   let { fluence, background } = start;
-  let state = slopes(problem, fluence, background);
+  let state = slopes(columns, response, { fluence, background });
   for (let pass = 0; pass < maximumIterations; pass++) {
     const determinant = state.ff * state.bb - state.fb * state.fb;
     const isFlat = !(determinant > 1e-14 * state.ff * state.bb);
     const stepF = isFlat ? 0 : (state.bb * state.f - state.fb * state.b) / determinant;
     const stepB = isFlat ? state.b / state.bb : (state.ff * state.b - state.fb * state.f) / determinant;
     let share = 1;
-    let next = slopes(problem, fluence + stepF, background + stepB);
+    let next = slopes(columns, response, { fluence: fluence + stepF, background: background + stepB });
     while (next.value < state.value && share > 1e-10) {
       share /= 2;
-      next = slopes(problem, fluence + share * stepF, background + share * stepB);
+      next = slopes(columns, response, {
+        fluence: fluence + share * stepF,
+        background: background + share * stepB,
+      });
     }
     if (next.value <= state.value) break;
     const gain = next.value - state.value;
@@ -150,19 +153,19 @@ function newton(problem: Problem, start: Line, constant: number): LinearFit {
 }
 
 /** Log-likelihood (without the constant), its first derivatives, and the negative second ones. */
-function slopes({ cells, sds, response }: Problem, fluence: number, background: number) {
+function slopes({ isCensored, values, sds }: Columns, response: Float64Array, { fluence, background }: Line) {
   let value = 0;
   let f = 0;
   let b = 0;
   let ff = 0;
   let fb = 0;
   let bb = 0;
-  for (let i = 0; i < cells.length; i++) {
+  for (let i = 0; i < values.length; i++) {
     const u = response[i];
-    const z = (cells[i].value - fluence * u - background) / sds[i];
+    const z = (values[i] - fluence * u - background) / sds[i];
     let slope = z / sds[i];
     let bend = 1;
-    if (cells[i].isCensored) {
+    if (isCensored[i] === 1) {
       const logShare = logNormalCdf(z);
       const mills = exp(-0.5 * z * z - logSqrtTwoPi - logShare);
       value += logShare;

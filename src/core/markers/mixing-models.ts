@@ -52,7 +52,7 @@ export function searchRange(
 
 /** M0: background only. */
 export function fitBackgroundOnly(likelihood: Likelihood): LinearFit {
-  return likelihood.fit(likelihood.cells.map(() => 0));
+  return likelihood.fit(new Float64Array(likelihood.cells.length));
 }
 
 /** M1: the whole layer inside one sample, without mixing; the sample with the highest likelihood. */
@@ -62,7 +62,9 @@ export function fitThinLayer(likelihood: Likelihood): ThinLayerFit {
   const fits = cells.flatMap((cell, at) => {
     const thickness = cell.topCm > cell.baseCm ? cell.topCm - cell.baseCm : widths[at];
     if (cell.isCensored || !(thickness > 0)) return [];
-    return [{ ...likelihood.fit(cells.map((_, i) => (i === at ? 1 / (cell.density * thickness) : 0))), at }];
+    const response = new Float64Array(cells.length);
+    response[at] = 1 / (cell.density * thickness);
+    return [{ ...likelihood.fit(response), at }];
   });
   if (fits.length === 0) throw new RangeError("fitThinLayer: expected a measured sample, got none");
   return fits.reduce((a, b) => (b.logLikelihood > a.logLikelihood ? b : a));
@@ -70,8 +72,12 @@ export function fitThinLayer(likelihood: Likelihood): ThinLayerFit {
 
 /** The likelihood of box mixing at one base and length, fluence and background at their best. */
 export function boxFitAt(likelihood: Likelihood, baseCm: number, lengthCm: number): BoxFit {
-  const response = likelihood.cells.map((cell) => boxSlabMean(cell, { baseCm, lengthCm }) / cell.density);
-  return { ...likelihood.fit(response), baseCm, lengthCm };
+  const { cells, fit } = likelihood;
+  const response = new Float64Array(cells.length);
+  const mixing = { baseCm, lengthCm };
+  for (let i = 0; i < cells.length; i++) response[i] = boxSlabMean(cells[i], mixing) / cells[i].density;
+  const { logLikelihood, fluence, background } = fit(response);
+  return { logLikelihood, fluence, background, baseCm, lengthCm };
 }
 
 /**
