@@ -64,13 +64,16 @@ const hints = (header: string, column: ColumnDeclaration, unit: string | undefin
   };
 };
 
-/** Recognises header cells by declared name, synonym or Darwin Core term, and by a unit written in them. */
+/**
+ * Recognises header cells by declared name, synonym or Darwin Core term, without regard to case, spaces, hyphens and
+ * underscores, and by a unit written in them.
+ */
 export function recogniseColumns(
   headers: readonly string[],
   table: TableDeclaration,
 ): readonly RecognisedColumn[] {
   const names = knownNames(table);
-  return headers.map((header) => {
+  const recognised = headers.map((header) => {
     const trimmed = header.trim();
     const whole = names.get(plainName(trimmed));
     if (whole !== undefined)
@@ -80,4 +83,16 @@ export function recogniseColumns(
     if (part === undefined) return { header };
     return { header, column: part, ...hints(name, table.columns[part], unit) };
   });
+  return withoutRivals(recognised);
+}
+
+/** A column named as declared stands before those known by another name; they are kept and not used. */
+function withoutRivals(recognised: readonly RecognisedColumn[]): readonly RecognisedColumn[] {
+  const isDeclared = ({ header, column }: RecognisedColumn) =>
+    column !== undefined &&
+    [header.trim(), partUnit(header.trim()).name].some((name) => plainName(name) === plainName(column));
+  const declared = new Set(recognised.filter(isDeclared).map(({ column }) => column));
+  return recognised.map((one) =>
+    declared.has(one.column) && !isDeclared(one) ? { header: one.header } : one,
+  );
 }

@@ -66,10 +66,12 @@ export function withoutPath(value: unknown, [name, ...rest]: readonly string[]):
   return Object.fromEntries(entries);
 }
 
+const isPart = (value: unknown): boolean =>
+  typeof value === "object" && value !== null && !Array.isArray(value);
+
 /** The second settings over the first, part by part; lists and single values are replaced whole. */
 export function mergeSettings(under: unknown, over: unknown): unknown {
   if (over === undefined) return under;
-  const isPart = (value: unknown) => typeof value === "object" && value !== null && !Array.isArray(value);
   if (!isPart(under) || !isPart(over)) return over;
   const merged = entriesOf(under);
   for (const [name, value] of entriesOf(over)) merged.set(name, mergeSettings(merged.get(name), value));

@@ -6,7 +6,7 @@ import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
 import { type Assembly, type BySection, gather, present, type ReadSheet, type Row } from "./context.ts";
 import { type Frames, frameFor } from "./frames.ts";
-import { type Place, placeOf } from "./occurrences.ts";
+import { type Place, placeOf } from "./place.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { rowsOf } from "./rows.ts";
 

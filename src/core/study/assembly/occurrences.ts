@@ -1,12 +1,11 @@
-import { sameLevelM } from "../legs.ts";
-import type { Occurrence, Origin, Sample, Taxon } from "../model.ts";
-import { suggestName } from "../nearest.ts";
-import { parseName } from "../open-nomenclature.ts";
+import type { Occurrence, Origin, Taxon } from "../model.ts";
+import { type ParsedName, parseName } from "../open-nomenclature.ts";
 import type { RowOf } from "../tables/declare.ts";
 import { occurrences } from "../tables/occurrences.ts";
 import { type Assembly, type BySection, gather, present, type SectionFrame } from "./context.ts";
 import { type Frames, frameFor } from "./frames.ts";
-import { lengthOf, type Slab, type SlabCells, slabOf } from "./position.ts";
+import { type Place, placeOf } from "./place.ts";
+import { lengthOf } from "./position.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { rowsOf } from "./rows.ts";
 import { genusGroup, tellUngrouped, ungrouped } from "./taxa.ts";
@@ -20,11 +19,12 @@ export function readOccurrences(
   const read = assembly.sheets.get("occurrences");
   const lists = new Map<string, Occurrence[]>();
   if (!read) return lists;
+  const nameOf = nameReader();
   for (const { cells, origin } of rowsOf(occurrences, assembly)) {
     const frame = frameFor(cells.section, origin, { frames, read, assembly });
     const place = frame && placeOf(cells, frame, { origin, samples, assembly });
     if (!frame || !place) continue;
-    const find = findOf(cells, origin, { place, frame });
+    const find = findOf(cells, origin, { place, frame, name: nameOf(cells.taxon, cells.qualifier) });
     if (find.count === 0) {
       assembly.problems.addOnce("count", "count-zero", { ...origin, column: "count", found: "0" });
     }
@@ -34,62 +34,28 @@ export function readOccurrences(
   return lists;
 }
 
-/** Where a find or measurement stands: in a sample, or at a position. */
-export interface Place extends Slab {
-  readonly sample?: Sample;
-}
-
-export interface PlaceSearch {
-  readonly origin: Origin;
-  readonly samples: SampleLists;
-  readonly assembly: Assembly;
-}
-
-/** The place of a row that names a sample, a position, or both; both must agree. */
-export function placeOf(
-  cells: SlabCells & { readonly sample?: string },
-  frame: SectionFrame,
-  { origin, samples, assembly }: PlaceSearch,
-): Place | undefined {
-  const hasOwnPlace = cells.position !== undefined || (cells.base !== undefined && cells.top !== undefined);
-  if (cells.sample === undefined) return slabOf(cells, frame, { origin, assembly });
-  const known = samples.bySection.get(frame.name);
-  const sample = known?.get(cells.sample);
-  const told = { ...origin, column: "sample", found: cells.sample };
-  if (!sample) {
-    if (hasOwnPlace && !samples.areListed) slabOf(cells, frame, { origin, assembly });
-    else if (!samples.areListed) assembly.problems.add("sample-without-position", told);
-    else {
-      const nearest = suggestName(cells.sample, known?.keys() ?? []);
-      const subject = JSON.stringify([frame.name, cells.sample]);
-      assembly.problems.addOnce(subject, "unknown-sample", { ...told, nearest });
-    }
-    return undefined;
-  }
-  const { baseM, topM, heightM } = sample;
-  if (!hasOwnPlace) return { baseM, topM, heightM, sample };
-  const own = slabOf(cells, frame, { origin, assembly });
-  if (!own) return undefined;
-  if (own.heightM < baseM - sameLevelM || own.heightM > topM + sameLevelM) {
-    const detail = `row ${sample.origin.row} of ${sample.origin.file}`;
-    assembly.problems.add("sample-elsewhere", { ...told, detail });
-    return undefined;
-  }
-  return cells.base === undefined ? { baseM, topM, heightM, sample } : { ...own, sample };
+/** Parses each distinct name once. */
+function nameReader(): typeof parseName {
+  const known = new Map<string, ParsedName>();
+  return (text, qualifier = "") => {
+    const key = `${text}\u0000${qualifier}`;
+    const name = known.get(key) ?? parseName(text, qualifier);
+    known.set(key, name);
+    return name;
+  };
 }
 
 function findOf(
   cells: RowOf<typeof occurrences>,
   origin: Origin,
-  { place, frame }: { readonly place: Place; readonly frame: SectionFrame },
+  { place, frame, name }: { readonly place: Place; readonly frame: SectionFrame; readonly name: ParsedName },
 ): Occurrence {
-  const { name, qualifier } = parseName(cells.taxon, cells.qualifier);
   const positionErrorM = lengthOf(cells.position_error, frame) ?? place.sample?.positionErrorM;
   const leg = cells.leg ?? place.sample?.leg;
   return {
     verbatim: cells.taxon,
-    taxon: name,
-    ...present({ qualifier, sample: place.sample?.name }),
+    taxon: name.name,
+    ...present({ qualifier: name.qualifier, sample: place.sample?.name }),
     heightM: place.heightM,
     ...present({ positionErrorM, leg, count: cells.count, abundance: cells.abundance }),
     reworked: cells.reworked ?? "no",

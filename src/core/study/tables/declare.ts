@@ -60,7 +60,8 @@ export const sectionColumn = {
   type: "text",
   required: true,
   help: "The section's name, the same in every table.",
-  synonyms: ["locality", "site", "core", "well", "borehole", "hole", "profile", "parentEventID"],
+  synonyms: ["locality", "site", "core", "well", "borehole", "hole", "profile"],
+  dwc: "parentEventID",
   example: "Orsk Ledge",
 } as const satisfies ColumnDeclaration;
 
