@@ -34,7 +34,7 @@ export function highestLast(ranges: readonly EffectiveRange[]): number {
 
 /** -2 sum ln V_i at a common end: T at the highest last find. */
 export function endStatistic(ranges: readonly EffectiveRange[], end: number): number {
-  return -2 * compensatedSum(ranges.map((range) => logPivot(range, end)));
+  return 2 * compensatedSum(ranges.map((range) => -logPivot(range, end)));
 }
 
 /**

@@ -49,7 +49,7 @@ export function durationLowerBound(
 
 function durationStatistic(kept: readonly PlacedRange[], coordinate: Coordinate, levelM: number): number {
   const level = coordinate.toEffective(levelM);
-  return -2 * compensatedSum(kept.map((range) => (range.lastM < levelM ? logPivot(range, level) : 0)));
+  return 2 * compensatedSum(kept.map((range) => (range.lastM < levelM ? -logPivot(range, level) : 0)));
 }
 
 /**

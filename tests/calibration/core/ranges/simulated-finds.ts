@@ -77,7 +77,7 @@ export function drawFinds({ baseM, endM, horizons }: Truth, coordinate: Coordina
     const heightM = coordinate.toHeight(base + (end - base) * g.uniform(), "upper");
     if (heightM === undefined) throw new Error("drawFinds: expected recovery to continue");
     return heightM;
-  }).sort((a, b) => a - b);
+  }).toSorted((a, b) => a - b);
 }
 
 /** The range as the methods see it, from the first find or from the true base. */

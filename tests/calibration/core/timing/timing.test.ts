@@ -169,9 +169,10 @@ describe("20 taxa that end together at 30 m, and 3 survivors found up to 45 m", 
   });
 });
 
+const declining = (n: number, g: Generator) =>
+  Array.from({ length: n }, () => 1 - Math.sqrt(g.uniform())).toSorted((a, b) => a - b);
+
 it("centroid gains power by pooling: a linear decline is seen in most assemblages, in few single taxa", () => {
-  const declining = (n: number, g: Generator) =>
-    Array.from({ length: n }, () => 1 - Math.sqrt(g.uniform())).sort((a, b) => a - b);
   const single = rateOf((g) => (centroid(rescaledInterior(declining(10, g)))?.p ?? 1) <= 0.05);
   const pooled = rateOf((g) => {
     const interior = Array.from({ length: 12 }, () => rescaledInterior(declining(10, g))).flat();

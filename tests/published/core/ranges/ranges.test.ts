@@ -1,3 +1,4 @@
+import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { pieceCoordinate } from "../../../../src/core/ranges/coordinate.ts";
 import type { EffectiveRange } from "../../../../src/core/ranges/pivot.ts";
@@ -9,7 +10,6 @@ import {
   uniformPoint,
 } from "../../../../src/core/ranges/uniform.ts";
 import { persistence } from "../../../../src/core/ranges/window.ts";
-import cases from "./ranges.json" with { type: "json" };
 
 interface Inputs {
   readonly n: number;
@@ -79,6 +79,16 @@ const quantities: Record<string, (inputs: Inputs) => unknown> = {
   count,
 };
 
+interface Case {
+  readonly case: string;
+  readonly quantity: string;
+  readonly inputs: Inputs;
+  readonly expected: unknown;
+  readonly tolerance: number;
+}
+
+const cases: readonly Case[] = JSON.parse(readFileSync(new URL("./ranges.json", import.meta.url), "utf8"));
+
 /** Every number of `expected` is met within tolerance x max(1, |expected|); null is met by null or undefined alone. */
 function expectClose(got: unknown, expected: unknown, tolerance: number): void {
   if (expected === null) expect(got ?? null).toBeNull();
@@ -94,6 +104,6 @@ describe("range ends against outside values (sources in ranges.json)", () => {
   it.each(cases)("$quantity: $case", ({ quantity, inputs, expected, tolerance }) => {
     const compute = quantities[quantity];
     expect(compute).toBeDefined();
-    expectClose(compute(inputs as unknown as Inputs), expected, tolerance);
+    expectClose(compute(inputs), expected, tolerance);
   });
 });

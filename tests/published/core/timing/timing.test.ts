@@ -12,7 +12,6 @@ import {
 } from "../../../../src/core/timing/common-end.ts";
 import { levelTest } from "../../../../src/core/timing/confidence-levels.ts";
 import { durationBox, durationLowerBound } from "../../../../src/core/timing/duration.ts";
-import cases from "./timing.json" with { type: "json" };
 
 interface Inputs {
   readonly set: string;
@@ -114,6 +113,16 @@ const quantities: Record<string, (inputs: Inputs) => unknown> = {
   pooled: ({ set }) => centroid(taxaOf(set).flatMap(rescaledInterior))?.z,
 };
 
+interface Case {
+  readonly case: string;
+  readonly quantity: string;
+  readonly inputs: Inputs;
+  readonly expected: unknown;
+  readonly tolerance: number;
+}
+
+const cases: readonly Case[] = JSON.parse(readFileSync(new URL("./timing.json", import.meta.url), "utf8"));
+
 /** Every number asked for is met within tolerance x max(1, |expected|); null is met by null or undefined alone. */
 function expectClose(got: unknown, expected: unknown, tolerance: number): void {
   if (expected === null) expect(got ?? null).toBeNull();
@@ -129,6 +138,6 @@ describe("timing against outside values (sources in timing.json)", () => {
   it.each(cases)("$quantity: $case", ({ quantity, inputs, expected, tolerance }) => {
     const compute = quantities[quantity];
     expect(compute).toBeDefined();
-    expectClose(compute(inputs as unknown as Inputs), expected, tolerance);
+    expectClose(compute(inputs), expected, tolerance);
   });
 });
