@@ -7,7 +7,7 @@ const LOW = 1 - HIGH;
 /** Sign, exponent and the upper 20 fraction bits of a double, as a signed 32-bit integer. */
 export function highWord(x: number): number {
   float[0] = x;
-  return words[HIGH]!;
+  return words[HIGH];
 }
 
 /** The double with the same lower word and the given upper word. */
@@ -27,7 +27,7 @@ export function headOf(x: number): number {
 function powerOfTwo(exponent: number): number {
   words[HIGH] = (exponent + 1023) << 20;
   words[LOW] = 0;
-  return float[0]!;
+  return float[0];
 }
 
 /** y · 2^k with a single rounding, for |k| ≤ 2000 and y in [½, 2]; the result may be subnormal, zero or infinite. */

@@ -79,7 +79,7 @@ function integratePanel(
   const centre = 0.5 * (low + high);
   const half = 0.5 * (high - low);
   let sum = 0;
-  for (let i = 0; i < nodes.length; i++) sum += weights[i]! * f(centre + half * nodes[i]!);
+  for (let i = 0; i < nodes.length; i++) sum += weights[i] * f(centre + half * nodes[i]);
   return half * sum;
 }
 
@@ -95,6 +95,6 @@ export function integrate(
   const rule = gaussLegendre(nodes);
   const ends = [a, ...breakpoints.filter((x) => x > a && x < b).toSorted((x, y) => x - y), b];
   let sum = 0;
-  for (let i = 1; i < ends.length; i++) sum += integratePanel(f, rule, [ends[i - 1]!, ends[i]!]);
+  for (let i = 1; i < ends.length; i++) sum += integratePanel(f, rule, [ends[i - 1], ends[i]]);
   return sum;
 }

@@ -4,16 +4,15 @@ function requireDomain(name: string, mean: number, n: number): void {
   }
 }
 
-/** Densities f_{n+1}(x − j), j = 0 … n of the sum of n + 1 uniforms, by a recurrence of positive terms only. */
+/** Densities f_{n+1}(x − j), j = 0 … ⌊x⌋, of the sum of n + 1 uniforms, by a recurrence of positive terms only. */
 function shiftedDensities(x: number, n: number): Float64Array {
-  const densities = new Float64Array(n + 1);
-  const whole = Math.min(n, Math.floor(x));
+  const whole = Math.floor(x);
+  const densities = new Float64Array(whole + 2);
   densities[whole] = 1;
   for (let m = 2; m <= n + 1; m++) {
     for (let j = 0; j <= whole; j++) {
       const at = x - j;
-      const inside = at < m ? (at * densities[j]! + (m - at) * (densities[j + 1] ?? 0)) / (m - 1) : 0;
-      densities[j] = inside;
+      densities[j] = (at * densities[j] + (m - at) * densities[j + 1]) / (m - 1);
     }
   }
   return densities;

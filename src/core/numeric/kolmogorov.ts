@@ -14,12 +14,12 @@ function multiply(a: Scaled, b: Scaled, size: number): Scaled {
   const values = new Float64Array(size * size);
   for (let i = 0; i < size; i++) {
     for (let k = 0; k < size; k++) {
-      const factor = a.values[i * size + k]!;
+      const factor = a.values[i * size + k];
       if (factor === 0) continue;
-      for (let j = 0; j < size; j++) values[i * size + j]! += factor * b.values[k * size + j]!;
+      for (let j = 0; j < size; j++) values[i * size + j] += factor * b.values[k * size + j];
     }
   }
-  const middle = values[(size >> 1) * size + (size >> 1)]!;
+  const middle = values[(size >> 1) * size + (size >> 1)];
   if (middle < 1e140) return { values, exponent: a.exponent + b.exponent };
   return { values: values.map((value) => value * 1e-140), exponent: a.exponent + b.exponent + 140 };
 }
@@ -38,19 +38,19 @@ function transition(h: number, size: number): Float64Array {
   let powerOfH = 1;
   for (let i = 0; i < size; i++) {
     powerOfH *= h;
-    values[i * size]! -= powerOfH;
-    values[(size - 1) * size + (size - 1 - i)]! -= powerOfH;
+    values[i * size] -= powerOfH;
+    values[(size - 1) * size + (size - 1 - i)] -= powerOfH;
   }
   if (2 * h - 1 > 0) {
     let corner = 1;
     for (let i = 0; i < size; i++) corner *= 2 * h - 1;
-    values[(size - 1) * size]! += corner;
+    values[(size - 1) * size] += corner;
   }
   for (let i = 0; i < size; i++) {
     let factorial = 1;
     for (let j = i; j >= 0; j--) {
       factorial *= i - j + 1;
-      values[i * size + j]! /= factorial;
+      values[i * size + j] /= factorial;
     }
   }
   return values;
@@ -62,7 +62,7 @@ function lowerByMatrix(d: number, n: number): number {
   const size = 2 * k - 1;
   const h = k - n * d;
   const raised = power({ values: transition(h, size), exponent: 0 }, n, size);
-  let value = raised.values[(k - 1) * size + (k - 1)]!;
+  let value = raised.values[(k - 1) * size + (k - 1)];
   let exponent = raised.exponent;
   for (let i = 1; i <= n; i++) {
     value *= i / n;

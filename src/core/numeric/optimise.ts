@@ -29,7 +29,7 @@ function vertexAt(f: Objective, point: readonly number[]): Vertex {
 }
 
 function blend(from: readonly number[], to: readonly number[], share: number): number[] {
-  return from.map((x, i) => x + share * (to[i]! - x));
+  return from.map((x, i) => x + share * (to[i] - x));
 }
 
 function firstSimplex(f: Objective, start: readonly number[], steps: readonly number[]): Vertex[] {
@@ -43,11 +43,11 @@ function firstSimplex(f: Objective, start: readonly number[], steps: readonly nu
 }
 
 function isSmall(simplex: readonly Vertex[], xTolerance: number, fTolerance: number): boolean {
-  const best = simplex[0]!;
+  const best = simplex[0];
   return simplex.every(
     ({ point, value }) =>
       Math.abs(value - best.value) <= fTolerance * (1 + Math.abs(best.value)) &&
-      point.every((x, i) => Math.abs(x - best.point[i]!) <= xTolerance * (1 + Math.abs(best.point[i]!))),
+      point.every((x, i) => Math.abs(x - best.point[i]) <= xTolerance * (1 + Math.abs(best.point[i]))),
   );
 }
 
@@ -56,10 +56,10 @@ function replacement(f: Objective, simplex: readonly Vertex[]): Vertex | undefin
   const worst = simplex.at(-1)!;
   const others = simplex.slice(0, -1);
   const centre = worst.point.map(
-    (_, i) => others.reduce((sum, { point }) => sum + point[i]!, 0) / others.length,
+    (_, i) => others.reduce((sum, { point }) => sum + point[i], 0) / others.length,
   );
   const reflected = vertexAt(f, blend(centre, worst.point, -1));
-  if (reflected.value < simplex[0]!.value) {
+  if (reflected.value < simplex[0].value) {
     const expanded = vertexAt(f, blend(centre, worst.point, -2));
     return expanded.value < reflected.value ? expanded : reflected;
   }
@@ -71,7 +71,7 @@ function replacement(f: Objective, simplex: readonly Vertex[]): Vertex | undefin
 
 function nextSimplex(f: Objective, simplex: readonly Vertex[]): Vertex[] {
   const better = replacement(f, simplex);
-  const best = simplex[0]!;
+  const best = simplex[0];
   const next = better
     ? [...simplex.slice(0, -1), better]
     : [best, ...simplex.slice(1).map(({ point }) => vertexAt(f, blend(best.point, point, 0.5)))];
@@ -97,7 +97,7 @@ export function nelderMead(f: Objective, start: readonly number[], options: Simp
       }
       simplex = nextSimplex(f, simplex);
     }
-    return simplex[0]!;
+    return simplex[0];
   };
   let best = descend(start);
   for (;;) {

@@ -46,8 +46,8 @@ export function quantile(values: readonly number[] | Float64Array, p: number): n
   const sorted = Float64Array.from(values).toSorted();
   const position = (sorted.length - 1) * p;
   const below = Math.floor(position);
-  const lower = sorted[below]!;
-  const upper = sorted[Math.min(below + 1, sorted.length - 1)]!;
+  const lower = sorted[below];
+  const upper = sorted[Math.min(below + 1, sorted.length - 1)];
   return lower + (position - below) * (upper - lower);
 }
 
@@ -56,7 +56,7 @@ export function median(values: readonly number[] | Float64Array): number {
   requireSome("median", values);
   const sorted = Float64Array.from(values).toSorted();
   const half = sorted.length >> 1;
-  return sorted.length % 2 === 1 ? sorted[half]! : 0.5 * (sorted[half - 1]! + sorted[half]!);
+  return sorted.length % 2 === 1 ? sorted[half] : 0.5 * (sorted[half - 1] + sorted[half]);
 }
 
 /** Median of |xᵢ − median|, not scaled: 1.4826 times it estimates the standard deviation of normal data. */
