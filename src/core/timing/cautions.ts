@@ -3,13 +3,19 @@ import type { Candidate } from "../study/finds-result.ts";
 import { commonEndJoint, commonEndTest, informative } from "./common-end.ts";
 import { TOO_WELL_ALIGNED } from "./common-end-answers.ts";
 import { boxTaxa, widestTaxon } from "./duration-answers.ts";
+import { effortCautions } from "./effort-caution.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
 import type { SetCase } from "./set-case.ts";
 import { allCandidates, closedCandidates } from "./sets.ts";
 
 /** What weakens the answers about one set of one section. */
 export function setCaseCautions(setCase: SetCase): Caution[] {
-  return [...oneLevelCautions(setCase), ...boxCautions(setCase), ...declineCautions(setCase)];
+  return [
+    ...declineCautions(setCase),
+    ...effortCautions(setCase),
+    ...oneLevelCautions(setCase),
+    ...boxCautions(setCase),
+  ];
 }
 
 function oneLevelCautions({ section, set, confidence }: SetCase): Caution[] {

@@ -82,6 +82,10 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`Fewer than two taxa have ${n("horizons")} horizons, so the longest duration uses all of them and is wide.`,
   "timing-recovery-declines": ({ n }) =>
     say`${strong("Finds thin out upward")} (${pValue(n("p"))}): methods of uniform recovery put ends too low and reject one level too often.`,
+  "timing-less-effort-above": ({ text, n }) =>
+    say`${strong(`Samples just above the highest find are small`)} for ${text("group")} (${significant(n("above"))} against ${significant(
+      n("below"),
+    )} ${text("unit")} below): taxa may go unseen there and the common level be put too low.`,
   "timing-reaches-top": ({ text, n }) =>
     say`${plural(n("taxa"), "candidate")} found up to the highest sample (${name(text("names"))}); the answer stands with and without.`,
   "timing-turns-on-top": ({ n }) =>
