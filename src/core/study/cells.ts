@@ -8,6 +8,9 @@ export type ParsedCell =
   | { readonly value: CellValue }
   | { readonly code: ProblemCode; readonly detail?: string };
 
+/** No section reaches further from its zero, in any unit (the Earth's radius is 6.4e9 mm). */
+const largestPosition = 1e10;
+
 const decimal = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?$/;
 const notFinite = /^[+-]?(?:nan|inf|infinity)$/i;
 const missing = new Set(["", "na", "NA", "n/a", "N/A"]);
@@ -51,6 +54,9 @@ function parseNumberCell(cell: string, column: ColumnDeclaration): ParsedCell {
   const { minimum, maximum } = column;
   if (minimum !== undefined && value < minimum) return { code: "out-of-limits", detail: limits(column) };
   if (maximum !== undefined && value > maximum) return { code: "out-of-limits", detail: limits(column) };
+  if (column.unit === "section" && Math.abs(value) > largestPosition) {
+    return { code: "out-of-limits", detail: `within ${largestPosition} of zero` };
+  }
   return { value: value === 0 ? 0 : value };
 }
 

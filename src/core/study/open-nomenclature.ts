@@ -34,11 +34,11 @@ const signOf = (word: string): string | undefined => signs.find(([form]) => form
 interface Words {
   readonly plain: string[];
   sign?: string;
-  /** The number of plain words before the sign. */
+  /** The number of plain words before the sign; of a question mark, before the word it doubts. */
   at: number;
 }
 
-/** Parts the words of a name from the first sign; a question mark belongs to the word it touches. */
+/** Parts the words of a name from the first sign; a question mark doubts the word it touches, else the next. */
 function wordsOf(text: string): Words {
   const words: Words = { plain: [], at: 0 };
   for (const word of joined(text).split(/\s+/).filter(Boolean)) {
@@ -47,8 +47,7 @@ function wordsOf(text: string): Words {
     const plain = word.replace(/^\?+|\(\?\)$|\?+$/g, "");
     if (words.sign === undefined && (sign !== undefined || isQuestioned)) {
       words.sign = sign ?? "?";
-      words.at = words.plain.length + (sign === undefined && word.endsWith("?") && plain !== "" ? 1 : 0);
-      if (sign === undefined && !word.endsWith("?") && plain === "") words.at = words.plain.length;
+      words.at = words.plain.length;
       if (sign === undefined && plain !== "") words.plain.push(plain);
     } else if (sign === undefined && plain !== "") words.plain.push(plain);
   }
@@ -93,9 +92,8 @@ function named({ plain, sign, at }: Words, written: string): ParsedName {
     case "aff.":
       return name === "" ? { name: written, rank } : { name, qualifier: sign, rank };
     case "?":
-      return name === ""
-        ? { name: written, rank }
-        : { name, qualifier: at <= 1 && rank !== "above-species" ? isGenusDoubt(plain, at) : "?", rank };
+      if (name === "") return { name: written, rank };
+      return { name, qualifier: at === 0 && rank !== "above-species" ? "? genus" : "?", rank };
     case "sp.":
       return plain.length > at
         ? { name: [...plain.slice(0, at), "sp.", ...plain.slice(at)].join(" "), rank: "species" }
@@ -112,7 +110,3 @@ function named({ plain, sign, at }: Words, written: string): ParsedName {
       return { name: written, rank };
   }
 }
-
-/** A question mark before or after the genus doubts the genus; one before the epithet doubts the species. */
-const isGenusDoubt = (plain: readonly string[], at: number): Qualifier =>
-  at === 1 && plain.length === 1 ? "?" : "? genus";

@@ -6,6 +6,10 @@ import { defaultSettings, type Settings, settingsSchema } from "./settings.ts";
 
 /** Settings with every default written out. A setting that cannot be used is told and takes its default; the rest stands. */
 export function readSettings(raw: unknown, file: string, problems: ProblemList): Settings {
+  if (Array.isArray(raw)) {
+    problems.add("bad-setting", { file, found: JSON.stringify(raw), detail: "an object of settings" });
+    return defaultSettings;
+  }
   let left = raw;
   for (;;) {
     const result = v.safeParse(settingsSchema, left);
@@ -37,6 +41,6 @@ function tellIssue(issue: v.BaseIssue<unknown>, path: string, { file, problems }
     problems.add("unknown-setting", { file, column: path, found: path, nearest });
   } else {
     const found = JSON.stringify(issue.input) ?? "nothing";
-    problems.add("bad-setting", { file, column: path, found, detail: issue.message });
+    problems.add("bad-setting", { file, column: path, found, detail: issue.expected ?? issue.message });
   }
 }

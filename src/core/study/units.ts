@@ -1,13 +1,13 @@
 import type { LengthUnit, Quantity } from "./model.ts";
 
-/** Metres in one unit as a ratio of two exact numbers; the US survey foot only where it is named. */
-const lengths = new Map<string, readonly [number, number]>([
-  ["m", [1, 1]],
-  ["cm", [1, 100]],
-  ["mm", [1, 1000]],
-  ["ft", [3048, 10000]],
-  ["in", [254, 10000]],
-  ["us_survey_ft", [1200, 3937]],
+/** Metres in one unit; the US survey foot only where it is named. */
+const lengths = new Map<string, { readonly metres: number } | { readonly perMetre: number }>([
+  ["m", { perMetre: 1 }],
+  ["cm", { perMetre: 100 }],
+  ["mm", { perMetre: 1000 }],
+  ["ft", { metres: 0.3048 }],
+  ["in", { metres: 0.0254 }],
+  ["us_survey_ft", { metres: 1200 / 3937 }],
 ]);
 
 const lengthNames = new Map<string, string>([
@@ -33,17 +33,17 @@ export function lengthUnit(written: string): LengthUnit | undefined {
  * Metres of a length. `unit`: m, cm, mm, ft (0.3048 m exactly), in, us_survey_ft (1200/3937 m); throws on any other.
  */
 export function toMetres(value: number, unit: string): number {
-  const [numerator, denominator] = lengthRatio(unit);
-  return numerator === 1 ? value / denominator : (value * numerator) / denominator;
+  const ratio = lengthRatio(unit);
+  return "perMetre" in ratio ? value / ratio.perMetre : value * ratio.metres;
 }
 
 /** The length in `unit` of a length in metres. */
 export function fromMetres(metres: number, unit: string): number {
-  const [numerator, denominator] = lengthRatio(unit);
-  return numerator === 1 ? metres * denominator : (metres * denominator) / numerator;
+  const ratio = lengthRatio(unit);
+  return "perMetre" in ratio ? metres * ratio.perMetre : metres / ratio.metres;
 }
 
-function lengthRatio(unit: string): readonly [number, number] {
+function lengthRatio(unit: string) {
   const ratio = lengths.get(unit);
   if (!ratio) throw new RangeError(`units.ts: expected m, cm, mm, ft, in or us_survey_ft, got ${unit}`);
   return ratio;

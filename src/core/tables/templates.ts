@@ -2,13 +2,15 @@ import { type TableDeclaration, tables } from "../study/tables/index.ts";
 import { tableResource, writeDataPackage } from "./data-package.ts";
 import { writeCsv } from "./write-csv.ts";
 
-/** A table to fill in: the header and one worked row. */
+/** A table to fill in: the header and one worked row (a leg takes two). */
 export function tableTemplate(table: TableDeclaration): string {
   const columns = Object.entries(table.columns);
   const worked = columns.map(([, column]) => column.example);
+  const { secondRow } = table;
+  const second = secondRow && columns.map(([name, column]) => secondRow[name] ?? column.example);
   return writeCsv(
     columns.map(([name]) => name),
-    [worked],
+    second ? [worked, second] : [worked],
   ).text;
 }
 

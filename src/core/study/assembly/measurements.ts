@@ -71,13 +71,20 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
   if (reading.kind === "value" && reading.value === 0 && isTrace(unit)) {
     assembly.problems.addOnce(analyte, "trace-zero", { ...origin, column: "value", found: cells.value });
   }
-  return {
+  const value = {
     reading: scaleReading(reading, unit.factor),
     unit,
     givenUnit,
     sigma: sigmaOf(cells, reading, unit),
   };
+  if (hasFiniteNumbers(value, (cells.detection_limit ?? 0) * unit.factor)) return value;
+  assembly.problems.add("not-finite", { ...origin, column: "value", found: cells.value });
+  return undefined;
 }
+
+/** False where the canonical unit takes a number beyond the largest double. */
+const hasFiniteNumbers = ({ reading, sigma }: Value, limit: number): boolean =>
+  [readingSize(reading), sigma ?? 0, limit].every((number) => Number.isFinite(number));
 
 /** Trials bound the successes; an error must say what it is. */
 function isSound({ cells, origin }: MeasurementRow, reading: Reading, assembly: Assembly): boolean {

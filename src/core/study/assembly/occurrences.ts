@@ -35,7 +35,7 @@ export function readOccurrences(
 }
 
 /** Parses each distinct name once. */
-function nameReader(): typeof parseName {
+function nameReader(): (text: string, qualifier?: string) => ParsedName {
   const known = new Map<string, ParsedName>();
   return (text, qualifier = "") => {
     const key = `${text}\u0000${qualifier}`;

@@ -71,7 +71,9 @@ function withGroups(list: Map<string, Taxon>, assembly: Assembly): Map<string, T
 /** The group that all listed taxa of a genus share, for finds that are known to the genus only. */
 export function genusGroup(genus: string, taxa: ReadonlyMap<string, Taxon>): string | undefined {
   const groups = new Set<string>();
-  for (const { name, group } of taxa.values()) if (name.startsWith(`${genus} `)) groups.add(group);
+  for (const { name, group } of taxa.values()) {
+    if (group !== ungrouped && name.startsWith(`${genus} `)) groups.add(group);
+  }
   return groups.size === 1 ? [...groups][0] : undefined;
 }
 

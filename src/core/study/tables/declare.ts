@@ -33,6 +33,8 @@ export interface TableDeclaration {
     readonly table: string;
     readonly to: readonly string[];
   }[];
+  /** Cells of a second worked row, over those of the first, for a table whose rows come in pairs. */
+  readonly secondRow?: Readonly<Record<string, string>>;
   /** True where a further column is a trait instead of unused. */
   readonly furtherColumns?: boolean;
 }

@@ -6,6 +6,7 @@ export const legs = table({
   help: "Two or more rows a leg tie its own readings to positions of the section; linear between. For traverses, dip-corrected and overlapping legs, driller's and spliced depth.",
   key: ["section", "leg", "reading"],
   references: inSections,
+  secondRow: { reading: "10", position: "9.4" },
   columns: {
     section: sectionColumn,
     leg: { ...legColumn, required: true, example: "A" },

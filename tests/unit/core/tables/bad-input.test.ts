@@ -9,6 +9,13 @@ const good = "Orsk Ledge,Velorites orskensis,1.5,2";
 const heights = (study: ReturnType<typeof studyFrom>) =>
   onlySection(study).occurrences.map(({ heightM }) => heightM);
 
+const beds = (axis: string) =>
+  studyFrom({
+    "sections.csv": lines("section,axis,unit", `Orsk Ledge,${axis},m`),
+    "beds.csv": lines("section,base,top,lithology", "Orsk Ledge,5,4,marl", "Orsk Ledge,4,5,chalk"),
+    "occurrences.csv": finds(good),
+  });
+
 describe("read without remark", () => {
   it("takes a byte-order mark and CRLF line ends", () => {
     const plain = studyFrom({
@@ -107,12 +114,6 @@ describe("an error on the row, the rest goes on", () => {
   });
 
   it("leaves out top below base, in height and in depth", () => {
-    const beds = (axis: string) =>
-      studyFrom({
-        "sections.csv": lines("section,axis,unit", `Orsk Ledge,${axis},m`),
-        "beds.csv": lines("section,base,top,lithology", "Orsk Ledge,5,4,marl", "Orsk Ledge,4,5,chalk"),
-        "occurrences.csv": finds(good),
-      });
     const [inHeight, inDepth] = [beds("height"), beds("depth")];
     expect(problemsOf(inHeight, "top-below-base")).toMatchObject([
       { severity: "error", row: 2, column: "top", found: "base 5, top 4" },
