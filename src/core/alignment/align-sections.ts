@@ -77,7 +77,7 @@ function placedHorizons(section: string, names: readonly string[], markers: Mark
   const placed: Placed[] = [];
   for (const name of names) {
     const isMain = name === markers.main.name;
-    const horizon = isMain ? markers.main.bySection[section] : horizonIn(section, name, markers.horizons);
+    const horizon = isMain ? markers.main.bySection.get(section) : horizonIn(section, name, markers.horizons);
     if (horizon !== undefined) placed.push({ name, horizon });
   }
   return placed.toSorted((a, b) => a.horizon.positionM - b.horizon.positionM);

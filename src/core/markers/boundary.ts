@@ -9,7 +9,7 @@ import { reworkingCeiling } from "./reworking.ts";
  * where mixing is accepted. Undefined where the section has no H.
  */
 export function boundaryIn(section: string, markers: Markers, study: Study): Boundary | undefined {
-  const main = markers.main.bySection[section];
+  const main = markers.main.bySection.get(section);
   if (main === undefined) return undefined;
   const mixing =
     main.mixing ??

@@ -49,7 +49,7 @@ function chooseMain(horizons: readonly MarkerHorizon[], declared: string | undef
   if (names.length === 1) return byName(horizons, names[0], "given-impact");
   if (names.length > 1) {
     const listed = Object.fromEntries(names.map((name, i) => [`name${i + 1}`, name]));
-    const main: MainHorizon = { settledBy: "ambiguous", isShared: false, bySection: {} };
+    const main: MainHorizon = { settledBy: "ambiguous", isShared: false, bySection: new Map() };
     return {
       main,
       cautions: [{ code: "main-horizon-ambiguous", numbers: { count: names.length, ...listed } }],
@@ -60,19 +60,19 @@ function chooseMain(horizons: readonly MarkerHorizon[], declared: string | undef
 
 function byName(horizons: readonly MarkerHorizon[], name: string, settledBy: "setting" | "given-impact") {
   const cautions: Caution[] = [];
-  const bySection: Record<string, MarkerHorizon> = {};
+  const bySection = new Map<string, MarkerHorizon>();
   for (const section of sectionsOf(horizons)) {
     const here = horizons.filter((h) => h.section === section && h.horizon === name);
     if (here.length === 0) continue;
     const given = here.filter((h) => h.source !== "found");
     const found = here.filter((h) => h.source === "found").toSorted(byFluence);
-    bySection[section] = given[0] ?? found[0];
+    bySection.set(section, given[0] ?? found[0]);
     for (const kind of [given, found])
       if (kind.length > 1)
         cautions.push({ code: "horizon-twice", section, subject: name, numbers: { count: kind.length } });
     if (given.length > 0 && found.length > 0) cautions.push(...difference(given[0], found[0]));
   }
-  if (Object.keys(bySection).length === 0) cautions.push({ code: "boundary-horizon-unknown", subject: name });
+  if (bySection.size === 0) cautions.push({ code: "boundary-horizon-unknown", subject: name });
   const main: MainHorizon = { name, settledBy, isShared: true, bySection };
   return { main, cautions };
 }
@@ -97,7 +97,7 @@ function bySectionFluence(horizons: readonly MarkerHorizon[]) {
     (section) => iridium.filter((h) => h.section === section).toSorted(byFluence)[0],
   );
   if (chosen.length === 0) {
-    const main: MainHorizon = { settledBy: "none", isShared: false, bySection: {} };
+    const main: MainHorizon = { settledBy: "none", isShared: false, bySection: new Map() };
     return { main, cautions: [{ code: "no-main-horizon" }] };
   }
   const isDeclared = chosen.every((h) => h.horizon === chosen[0].horizon && h.horizon !== h.name);
@@ -105,7 +105,7 @@ function bySectionFluence(horizons: readonly MarkerHorizon[]) {
     ...(isDeclared || chosen.length === 1 ? { name: chosen[0].horizon } : {}),
     settledBy: "found-iridium",
     isShared: isDeclared || chosen.length === 1,
-    bySection: Object.fromEntries(chosen.map((h) => [h.section, h])),
+    bySection: new Map(chosen.map((h) => [h.section, h])),
   };
   const code = main.isShared ? "main-horizon-found" : "main-horizon-by-section";
   const cautions: readonly Caution[] = [{ code, numbers: { sections: chosen.length } }];

@@ -160,7 +160,7 @@ export interface MainHorizon {
   readonly settledBy: "setting" | "given-impact" | "found-iridium" | "none" | "ambiguous";
   /** False where sections were never declared to share it: then they are answered one by one. */
   readonly isShared: boolean;
-  readonly bySection: Readonly<Record<string, MarkerHorizon>>;
+  readonly bySection: ReadonlyMap<string, MarkerHorizon>;
 }
 
 export interface Markers {

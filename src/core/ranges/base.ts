@@ -27,7 +27,7 @@ export function sectionBase(section: Section, settings: Settings, markers: Marke
   const name = settings.ranges.base;
   if (name === "first") return { base: { kind: "first" }, isPlaced: true };
   if (name === "section-bottom") return { base: { kind: "level", heightM: section.bottomM }, isPlaced: true };
-  const main = markers.main.bySection[section.name];
+  const main = markers.main.bySection.get(section.name);
   const horizon =
     main?.horizon === name
       ? main

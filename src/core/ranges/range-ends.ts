@@ -56,7 +56,7 @@ function sectionCases(
 ): RangeCase[] {
   const coordinate = recoveryCoordinate(section);
   const { base } = sectionBase(section, study.settings, markers);
-  const horizon = markers.main.bySection[section.name];
+  const horizon = markers.main.bySection.get(section.name);
   const ofSection = taxa.filter((t) => t.section === section.name && t.heightsM.length > 0);
   const byGroup = groupBy(ofSection, (t) => t.group);
   const horizons = new Map(

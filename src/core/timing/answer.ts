@@ -104,7 +104,7 @@ function sectionCases(
     confidence: settings.confidence,
     durationHorizons,
   }));
-  const horizon = markers.main.bySection[section.name];
+  const horizon = markers.main.bySection.get(section.name);
   return {
     cases,
     window: ranges.length === 0 ? undefined : timingWindow(window, ranges, { section, horizon }),
@@ -119,7 +119,7 @@ function placedHorizons(section: string, markers: Markers): readonly PlacedHoriz
   const here = markers.horizons.filter(
     (h) => h.section === section && Number.isFinite(h.lowM) && Number.isFinite(h.highM),
   );
-  const main = markers.main.bySection[section];
+  const main = markers.main.bySection.get(section);
   return here.map((marker) => ({ name: nameAmong(marker, here, main), marker }));
 }
 

@@ -9,7 +9,7 @@ import type { Finding, NumberLine } from "./finding.ts";
 /** Where the marker horizons of a section lie, and what they rest on. */
 export function markersFinding({ study, markers }: Analysis, section: Section): Finding {
   const here = markers.horizons.filter((h) => h.section === section.name);
-  const main = markers.main.bySection[section.name];
+  const main = markers.main.bySection.get(section.name);
   const found = here.filter((h) => h.source === "found");
   const flags = markers.flags.filter((flag) => flag.section === section.name);
   const cautions = markers.cautions.filter((c) => c.section === undefined || c.section === section.name);

@@ -58,7 +58,7 @@ export function reachOf({ candidates, ranges, study }: Analysis, section: Sectio
 }
 
 function sentence(analysis: Analysis, section: Section): Words {
-  const main = analysis.markers.main.bySection[section.name];
+  const main = analysis.markers.main.bySection.get(section.name);
   const counted = analysis.candidates.filter(
     (c) => c.section === section.name && c.role === "candidate",
   ).length;

@@ -86,7 +86,7 @@ function notRejected(
       ? say` How long their local disappearance took cannot be bounded from above.`
       : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(`${metres(longest.high)} m`)} cannot be excluded.`;
   if (where?.low === undefined || where.high === undefined) return [...opening, ".", ...longestWords];
-  const main = analysis.markers.main.bySection[section.name];
+  const main = analysis.markers.main.bySection.get(section.name);
   const place =
     main === undefined
       ? say`; it lies at ${strong(positionInterval(section, where.low, where.high))}.`

@@ -37,6 +37,6 @@ describe.each(truth.sections)("the layer found in $section", (section) => {
 
   it("answers to the name of the main horizon", () => {
     expect(found[0]?.horizon).toBe(truth.horizon);
-    expect(markers.main.bySection[section.section]?.horizon).toBe(truth.horizon);
+    expect(markers.main.bySection.get(section.section)?.horizon).toBe(truth.horizon);
   });
 });

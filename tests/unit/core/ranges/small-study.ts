@@ -137,7 +137,7 @@ export function markers(main?: MarkerHorizon, others: readonly MarkerHorizon[] =
     main: {
       settledBy: main === undefined ? "none" : "given-impact",
       isShared: main !== undefined,
-      bySection: main === undefined ? {} : { [main.section]: main },
+      bySection: new Map(main === undefined ? [] : [[main.section, main] as const]),
       ...(main === undefined ? {} : { name: main.horizon }),
     },
     cautions: [],
