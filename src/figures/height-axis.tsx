@@ -3,7 +3,7 @@ import type { ReactElement } from "react";
 import { type HeightScale, spanOf } from "./height-scale.ts";
 import { round } from "./numbers.ts";
 import { PlateText } from "./plate-text.tsx";
-import { capHeight } from "./text.ts";
+import { capHeight, textWidth } from "./text.ts";
 import { COLOURS, TEXT } from "./theme.ts";
 
 /** How the axis reads: own height or depth in its own unit, or metres from a horizon. */
@@ -83,11 +83,20 @@ interface HeightAxisProps {
   readonly x: number;
   readonly y: HeightScale;
   readonly reading: AxisReading;
+  /** A second axis, which stands back. */
+  readonly isQuiet?: boolean;
 }
 
 const TICK = 4;
 
-export function HeightAxis({ x, y, reading }: HeightAxisProps): ReactElement {
+/** Width of an axis with its labels, left of its line, in points. */
+export function heightAxisWidth(y: HeightScale, reading: AxisReading): number {
+  const labels = [reading.unit, ...axisTicks(y, reading).labelled.map((tick) => tick.label)];
+  return TICK + 2 + Math.max(...labels.map((label) => textWidth(label, TEXT.unit)));
+}
+
+export function HeightAxis({ x, y, reading, isQuiet = false }: HeightAxisProps): ReactElement {
+  const colour = isQuiet ? COLOURS.soft : COLOURS.ink;
   const { top, bottom } = spanOf(y);
   const { labelled, between } = axisTicks(y, reading);
   const long = labelled.map((tick) => `M${round(x - TICK)} ${round(tick.y)}h${TICK}`).join("");
@@ -98,11 +107,11 @@ export function HeightAxis({ x, y, reading }: HeightAxisProps): ReactElement {
       <path
         d={`M${round(x)} ${round(top)}V${round(bottom)}${long}${short}`}
         fill="none"
-        stroke={COLOURS.ink}
-        strokeWidth={0.5}
+        stroke={colour}
+        strokeWidth={isQuiet ? 0.35 : 0.5}
       />
       {labelled.map((tick) => (
-        <PlateText key={round(tick.y)} x={x - TICK - 2} y={tick.y + lift} style={TEXT.unit} anchor="end">
+        <PlateText key={round(tick.y)} x={x - TICK - 2} y={tick.y + lift} style={TEXT.unit} anchor="end" colour={colour}>
           {tick.label}
         </PlateText>
       ))}

@@ -3,7 +3,9 @@ import { type ContactKind, contactPath, contactStroke } from "./columns/contact.
 import { filledTick, openTick } from "./columns/search-rail.tsx";
 import type { PatternId } from "./lithology/pattern-tiles.ts";
 import { patternFill } from "./lithology/patterns.tsx";
+import { levelSetPaint } from "./columns/level-column.tsx";
 import { arrowPath, boxPath, markPath } from "./marks/mark-path.ts";
+import { barPaint, type RangeBar } from "./marks/taper.tsx";
 import { round } from "./numbers.ts";
 import { PlateText } from "./plate-text.tsx";
 import { COLOURS, TEXT } from "./theme.ts";
@@ -17,8 +19,14 @@ export type LegendSign =
       readonly kind: "found" | "barren" | "find" | "open-find" | "taper" | "reaches-top";
       readonly colour: string;
     }
+  | { readonly kind: "group"; readonly colour: string; readonly letter: string }
+  | { readonly kind: "bar"; readonly colour: string; readonly bar: RangeBar }
+  | { readonly kind: "survivor" | "cut-off" | "interval-end"; readonly colour: string }
   | {
       readonly kind:
+        | "set-if-one"
+        | "set-joint"
+        | "duration"
         | "main-horizon"
         | "other-horizon"
         | "value"
@@ -89,7 +97,33 @@ function swatch(plateId: string, sign: LegendSign): ReactElement {
     case "taper":
       return <path d={taper} fill={sign.colour} fillOpacity={0.3} />;
     case "reaches-top":
+    case "survivor":
       return <path d={markPath("triangle", middleX, middleY, 2.2)} fill={sign.colour} />;
+    case "cut-off":
+      return (
+        <path
+          d={markPath("triangle", middleX, middleY, 2.2)}
+          fill={COLOURS.paper}
+          stroke={sign.colour}
+          strokeWidth={0.6}
+        />
+      );
+    case "interval-end":
+      return <path d={`M${middleX - 4} ${middleY}h8`} stroke={sign.colour} strokeWidth={0.9} />;
+    case "bar":
+      return <path d={boxPath(0, middleY - 2.3, SWATCH_WIDTH, 4.6)} {...barPaint(sign.bar, sign.colour)} />;
+    case "group":
+      return (
+        <PlateText x={middleX} y={middleY + 2.5} style={TEXT.labelStrong} anchor="middle" colour={sign.colour}>
+          {sign.letter}
+        </PlateText>
+      );
+    case "set-if-one":
+      return <path d={boxPath(middleX - 4, 0, 8, SWATCH_HEIGHT)} {...levelSetPaint("if-one")} />;
+    case "set-joint":
+      return <path d={boxPath(middleX - 4, 0, 8, SWATCH_HEIGHT)} {...levelSetPaint("joint")} />;
+    case "duration":
+      return <path d={`M${middleX - 3} 0h6m-3 0v${SWATCH_HEIGHT}m-3 0h6`} fill="none" stroke={COLOURS.ink} strokeWidth={0.7} />;
     case "main-horizon":
       return (
         <>

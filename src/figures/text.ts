@@ -56,16 +56,31 @@ export function capHeight({ face, size }: TextStyle): number {
   return (height / unitsPerEm) * size;
 }
 
+/** Kerning never narrows a line by more than this. */
+const KERNING_ALLOWANCE = 1.25;
+
 /** The text, or as much of it as fits `width` with an ellipsis. */
 export function fitText(text: string, width: number, style: TextStyle): string {
   if (textWidth(text, style) <= width) return text;
-  const characters = Array.from(text);
+  const characters = charactersWithin(text, width, style);
   while (characters.length > 0) {
     characters.pop();
     const shortened = `${characters.join("").trimEnd()}…`;
     if (textWidth(shortened, style) <= width) return shortened;
   }
   return "";
+}
+
+/** The characters from the left that `width` has room for, one too many at most: a cell of any length is cut in one pass. */
+function charactersWithin(text: string, width: number, style: TextStyle): string[] {
+  const characters: string[] = [];
+  let total = 0;
+  for (const character of text) {
+    characters.push(character);
+    total += textWidth(character, style);
+    if (total > width * KERNING_ALLOWANCE + style.size) break;
+  }
+  return characters;
 }
 
 /** Lines of at most `width`, broken at spaces; one word wider than that stands alone on its line. */

@@ -20,6 +20,7 @@ export const COLOURS = {
 export const SMALLEST_TEXT = 7;
 
 export const TEXT = {
+  title: { face: "sansSemibold", size: 10.5 },
   heading: { face: "sansSemibold", size: 8 },
   label: { face: "sans", size: 7.5 },
   labelStrong: { face: "sansSemibold", size: 7.5 },

@@ -43,7 +43,7 @@ export function HorizonLine(props: HorizonLineProps): ReactElement | null {
         />
       )}
       <path d={`M${round(x)} ${round(y(heightM))}h${round(width)}`} stroke={colour} {...stroke} />
-      <HorizonLabel {...props} colour={colour} />
+      {horizon.label !== "" && <HorizonLabel {...props} colour={colour} />}
     </g>
   );
 }

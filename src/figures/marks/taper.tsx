@@ -30,6 +30,22 @@ interface TaperProps {
   readonly occurrencesM: readonly number[];
   /** Finds not counted: doubtful, reworked, set aside. Drawn open. */
   readonly openOccurrencesM?: readonly number[];
+  /** How the bar is drawn; default filled. The others stand for ranges that are not in question. */
+  readonly bar?: RangeBar;
+}
+
+export type RangeBar = "filled" | "outlined" | "dashed" | "dotted";
+
+const OUTLINES: Readonly<Record<Exclude<RangeBar, "filled">, string | undefined>> = {
+  outlined: undefined,
+  dashed: "3 1.6",
+  dotted: "0.6 1.4",
+};
+
+/** How a bar of ranges is painted. */
+export function barPaint(bar: RangeBar, colour: string) {
+  if (bar === "filled") return { fill: colour, fillOpacity: 0.3 };
+  return { fill: "none", stroke: colour, strokeWidth: 0.5, strokeDasharray: OUTLINES[bar] };
 }
 
 const HALF_OVERHANG = 0.6;
@@ -39,12 +55,12 @@ const HALF_OVERHANG = 0.6;
  * passed, with a tick where the interval ends. One path for the bar, one for the finds.
  */
 export function Taper(props: TaperProps): ReactElement {
-  const { x, width, y, colour, occurrencesM, openOccurrencesM = [] } = props;
+  const { x, width, y, colour, occurrencesM, openOccurrencesM = [], bar = "filled" } = props;
   const finds = occurrencesM.filter((heightM) => isInFrame(y, heightM));
   const open = openOccurrencesM.filter((heightM) => isInFrame(y, heightM));
   return (
     <g>
-      <path d={taperPath(props)} fill={colour} fillOpacity={0.3} />
+      <path d={taperPath(props)} {...barPaint(bar, colour)} />
       <IntervalEnds {...props} />
       {finds.length > 0 && (
         <path

@@ -16,6 +16,12 @@ export interface View {
   readonly fontFaces?: string;
 }
 
+export interface SectionView extends View {
+  readonly section: string;
+  /** Points between the upper and the lower end of the section; default a tall page. */
+  readonly bodyHeight?: number;
+}
+
 /** Where one section stands on a plate: between `left` and `right` its heights map through `scale` to y, in points. */
 export interface Panel {
   readonly section: string;

@@ -1,0 +1,28 @@
+import type { Analysis } from "../../core/analysis-result.ts";
+import type { Drawing, View } from "./drawing.ts";
+import { fenceDiagram } from "./fence-diagram.tsx";
+import { markerPlate } from "./marker-plate.tsx";
+import { rangeChartPages } from "./range-chart.tsx";
+import { MAIN_SETS, timingPlate } from "./timing-plate.tsx";
+
+/** A plate with the place it is written to. */
+export interface PlateFile {
+  readonly file: string;
+  readonly drawing: Drawing;
+}
+
+/** Every plate of a run: a fence, and for each section its range chart, its markers and the timing of its main sets. */
+export function plates(analysis: Analysis, view: View = {}): readonly PlateFile[] {
+  const declared = Object.keys(analysis.study.settings.timing.sets);
+  const wanted = new Set<string>([...MAIN_SETS, ...declared]);
+  const drawings = analysis.study.sections.flatMap(({ name, measurements }) => {
+    const sets = analysis.timing.sets.filter((set) => set.section === name && wanted.has(set.set));
+    return [
+      ...rangeChartPages(analysis, { ...view, section: name }),
+      ...(measurements.length > 0 ? [markerPlate(analysis, { ...view, section: name })] : []),
+      ...sets.map(({ set }) => timingPlate(analysis, { ...view, section: name, set })),
+    ];
+  });
+  const fence = analysis.study.sections.length > 1 ? [fenceDiagram(analysis, view)] : [];
+  return [...fence, ...drawings].map((drawing) => ({ file: `figures/${drawing.id}.svg`, drawing }));
+}
