@@ -21,32 +21,41 @@ export function logBeta(a: number, b: number): number {
   );
 }
 
-/** The continued fraction of I_x(a, b) by Lentz's evaluation; wants x < (a + 1)/(a + b + 2). */
-function betaFraction(x: number, a: number, b: number): number {
-  let c = 1;
-  let d = 1 / (1 - ((a + b) * x) / (a + 1));
-  let product = d;
-  for (let m = 1; m < MAXIMUM_TERMS; m++) {
-    const even = (m * (b - m) * x) / ((a + 2 * m - 1) * (a + 2 * m));
-    d = 1 / (1 + even * d);
-    c = 1 + even / c;
-    product *= c * d;
-    const odd = (-(a + m) * (a + b + m) * x) / ((a + 2 * m) * (a + 2 * m + 1));
-    d = 1 / (1 + odd * d);
-    c = 1 + odd / c;
-    product *= c * d;
-    if (Math.abs(c * d - 1) < 2e-16) return product;
+/**
+ * I_x(a, b) B(a, b) / (x^a (1 − x)^b) by the continued fraction of Didonato & Morris, whose leading term a − (a + b)x
+ * is formed from the smaller of x and 1 − x, so that large a or b cost no digits.
+ */
+function betaFraction({ p: x, complement: y }: Share, a: number, b: number): number {
+  const c = 1 + (x < y ? a - (a + b) * x : (a + b) * y - b);
+  const c1 = 1 + 1 / a;
+  let [before, value] = [0, 1];
+  let [denominatorBefore, denominator] = [1, c / c1];
+  let ratio = c1 / c;
+  for (let n = 1; n < MAXIMUM_TERMS; n++) {
+    const s = a + 2 * n - 1;
+    const p = 1 + (n - 1) / a;
+    const w = n * (b - n) * x;
+    const alpha = p * (p + b / a) * (a / s) * (a / s) * (w * x);
+    const beta = n + w / s + ((1 + n / a) / (c1 + (2 * n) / a)) * (c + n * (1 + y));
+    [before, value] = [value, alpha * before + beta * value];
+    [denominatorBefore, denominator] = [denominator, alpha * denominatorBefore + beta * denominator];
+    const next = value / denominator;
+    if (Math.abs(next - ratio) <= 2e-16 * next) return next;
+    ratio = next;
+    before /= denominator;
+    denominatorBefore /= denominator;
+    [value, denominator] = [ratio, 1];
   }
   throw new Error(
     `regularisedBeta: expected convergence within ${MAXIMUM_TERMS} terms (x ${x}, a ${a}, b ${b})`,
   );
 }
 
-/** x^a (1 − x)^b / (a B(a, b)) times the fraction. */
+/** x^a (1 − x)^b / B(a, b) times the fraction. */
 function directBeta(share: Share, a: number, b: number): number {
   // Γ(a + b) / (Γ(a) Γ(b)) = ab/(a + b) · Γ(a + b + 1) / (Γ(a + 1) Γ(b + 1))
   const term = exp(logBinomialTerm(a, a + b, share));
-  return ((term * b) / (a + b)) * betaFraction(share.p, a, b);
+  return term * (a / (a + b)) * b * betaFraction(share, a, b);
 }
 
 /** I_x(a, b) with x and 1 − x given apart, so that neither end loses digits. */
@@ -62,7 +71,8 @@ export function regularisedBetaOf(share: Share, a: number, b: number): number {
  * Regularised incomplete beta function, I_x(a, b) = ∫₀ˣ t^(a−1) (1 − t)^(b−1) dt / B(a, b), in [0, 1].
  * The lower tail keeps its relative precision; the upper one is I_{1−x}(b, a).
  * @throws RangeError unless 0 ≤ x ≤ 1 and a, b > 0; Error when the fraction does not converge.
- * Source: continued fraction, NIST Digital Library of Mathematical Functions 8.17.22; prefactor after Loader 2000.
+ * Source: Didonato & Morris 1992, algorithm 708, ACM Trans. Math. Software 18:360–373, doi 10.1145/131766.131776;
+ * prefactor after Loader 2000.
  */
 export function regularisedBeta(x: number, a: number, b: number): number {
   if (!(x >= 0 && x <= 1 && a > 0 && b > 0)) {

@@ -1,42 +1,33 @@
-import { exp, log } from "./elementary.ts";
+import { log } from "./elementary.ts";
 import { regularisedGammaQ } from "./gamma.ts";
-import { logGamma } from "./log-gamma.ts";
 import { findRoot } from "./roots.ts";
+import { poissonTerm } from "./saddle-point.ts";
 
-/** From these on e^(−x/2) or the largest term would leave the doubles' range, so the terms are summed in logs. */
-const LARGE_X = 1000;
-const LARGE_HALF_DEGREES = 300;
+/** Terms below this share of the largest can no longer change the sum. */
+const NEGLIGIBLE = 1e-18;
 
-/** log Σ_{i<v} (x/2)^i / i!, the terms taken relative to the largest one. */
-function logOfTerms(half: number, v: number): number {
+/**
+ * e^(−h) Σ_{i<v} h^i/i! from its largest term outward by ratios: neither e^(−h) nor a power over a factorial is
+ * ever formed alone, so nothing leaves the range of the doubles on the way.
+ */
+function evenUpperTail(half: number, v: number): number {
+  if (half === 0) return 1;
   const largest = Math.min(v - 1, Math.floor(half));
   let sum = 1;
-  for (let i = largest, term = 1; i > 0 && term > 1e-18; i--) {
+  for (let i = largest, term = 1; i > 0 && term > NEGLIGIBLE; i--) {
     term *= i / half;
     sum += term;
   }
-  for (let i = largest + 1, term = 1; i < v && term > 1e-18; i++) {
+  for (let i = largest + 1, term = 1; i < v && term > NEGLIGIBLE; i++) {
     term *= half / i;
     sum += term;
   }
-  return largest * log(half) - logGamma(largest + 1) + log(sum);
-}
-
-function evenUpperTail(half: number, v: number): number {
-  if (half === 0) return 1;
-  if (2 * half > LARGE_X || v > LARGE_HALF_DEGREES) return Math.min(1, exp(logOfTerms(half, v) - half));
-  let term = 1;
-  let sum = 1;
-  for (let i = 1; i < v; i++) {
-    term *= half / i;
-    sum += term;
-  }
-  return Math.min(1, exp(-half) * sum);
+  return Math.min(1, poissonTerm(largest, half) * sum);
 }
 
 /**
  * Upper tail of the chi-square distribution, P(χ²_ν > x). For even ν = 2v it is the finite sum
- * e^(−x/2) Σ_{i<v} (x/2)^i / i!; for odd ν the incomplete gamma function Q(ν/2, x/2). Cost linear in ν when even.
+ * e^(−x/2) Σ_{i<v} (x/2)^i / i!; for odd ν the incomplete gamma function Q(ν/2, x/2). Cost at most linear in ν when even.
  * @throws RangeError unless x ≥ 0 and ν is a whole number from 1.
  * Source: Abramowitz & Stegun 1964, 26.4.5.
  */

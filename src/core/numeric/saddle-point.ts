@@ -10,11 +10,11 @@ function stirlingError(n: number): number {
   return n >= 10 ? stirlingRest(n) : logGamma(n + 1) - (n + 0.5) * log(n) + n - HALF_LOG_TWO_PI;
 }
 
-/** Deviance n log(n/m) + m − n, summed as a series where n and m are close. */
-function deviance(n: number, m: number): number {
-  if (Math.abs(n - m) >= 0.1 * (n + m)) return n * log(n / m) + m - n;
-  const v = (n - m) / (n + m);
-  let sum = (n - m) * v;
+/** Deviance n log(n/m) + m − n, summed as a series where n and m are close; their difference n − m counts most. */
+function deviance(n: number, m: number, difference: number): number {
+  if (Math.abs(difference) >= 0.1 * (n + m)) return n * log(n / m) - difference;
+  const v = difference / (n + m);
+  let sum = difference * v;
   let power = 2 * n * v;
   for (let odd = 3; odd < 100; odd += 2) {
     power *= v * v;
@@ -29,7 +29,7 @@ function deviance(n: number, m: number): number {
 export function poissonTerm(a: number, x: number): number {
   if (a === 0) return exp(-x);
   if (a < 1e-8) return exp(a * log(x) - x - logGamma(a + 1));
-  return exp(-stirlingError(a) - deviance(a, x)) / Math.sqrt(TWO_PI * a);
+  return exp(-stirlingError(a) - deviance(a, x, a - x)) / Math.sqrt(TWO_PI * a);
 }
 
 export interface Share {
@@ -47,5 +47,8 @@ export function logBinomialTerm(k: number, n: number, { p, complement }: Share):
     return k * log(p) + rest * log(complement) + logGamma(n + 1) - logGamma(k + 1) - logGamma(rest + 1);
   }
   const errors = stirlingError(n) - stirlingError(k) - stirlingError(rest);
-  return errors - deviance(k, n * p) - deviance(rest, n * complement) - 0.5 * log((TWO_PI * k * rest) / n);
+  // The smaller of p and 1 − p carries the difference more exactly.
+  const difference = p < complement ? k - n * p : n * complement - rest;
+  const deviances = deviance(k, n * p, difference) + deviance(rest, n * complement, -difference);
+  return errors - deviances - 0.5 * log((TWO_PI * k * rest) / n);
 }

@@ -18,11 +18,11 @@ describe("elementary functions against correctly rounded values", () => {
   for (const name of ["exp", "expm1", "log", "log10", "log1p", "sin", "cos"] as const) {
     it(`${name} stays within 1 ulp, from the smallest subnormal to the largest double`, () => {
       expect(table[name].length).toBeGreaterThan(250);
-      expect(worst(table[name], (x) => functions[name](x!))).toBeLessThanOrEqual(1);
+      expect(worst(table[name], (x) => functions[name](x))).toBeLessThanOrEqual(1);
     });
   }
   it("pow stays within 1 ulp, for bases near 1 with huge exponents and for results near the ends", () => {
     expect(table.pow).toHaveLength(500);
-    expect(worst(table.pow, (x, y) => pow(x!, y!))).toBeLessThanOrEqual(1);
+    expect(worst(table.pow, (x, y) => pow(x, y))).toBeLessThanOrEqual(1);
   });
 });
