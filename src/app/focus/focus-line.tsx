@@ -1,0 +1,59 @@
+import type { ReactElement } from "react";
+import type { Analysis } from "../../core/analysis-result.ts";
+import { type Focus, setTitle } from "../state/focus.ts";
+import { usePage } from "../state/page-context.ts";
+import { SCALES } from "../state/place.ts";
+import { scaleTitle } from "../state/scale-title.ts";
+import { Picker } from "./picker.tsx";
+import styles from "./focus-line.module.css";
+
+/** What every plate is about: section, main horizon, set of taxa and vertical scale, the same at every station. */
+export function FocusLine(): ReactElement {
+  const { open } = usePage();
+  return (
+    <div className={styles.line} role="group" aria-label="Focus">
+      {open === undefined ? <span className={styles.item}>No study is open yet.</span> : <Focused {...open} />}
+    </div>
+  );
+}
+
+function Focused({ analysis, focus }: { readonly analysis: Analysis; readonly focus: Focus }): ReactElement {
+  const { go } = usePage();
+  const { sections } = analysis.study;
+  const isFence = focus.station === "fence";
+  return (
+    <>
+      <Picker
+        label={isFence ? `All ${sections.length} sections, read in` : "Section"}
+        value={focus.section?.name ?? ""}
+        choices={sections.map(({ name, title }) => ({ value: name, title }))}
+        choose={(section) => go({ section })}
+      />
+      <span className={styles.item}>
+        <span className={styles.label}>Main horizon</span>
+        <span className={styles.horizon}>
+          <span aria-hidden="true" className={styles.sign} />
+          {horizonWords(analysis, focus)}
+        </span>
+      </span>
+      <Picker
+        label="Taxa"
+        value={focus.set?.set ?? ""}
+        choices={focus.sets.map(({ set, taxa }) => ({ value: set, title: `${setTitle(set)} (${taxa.length})` }))}
+        choose={(set) => go({ set })}
+      />
+      <Picker
+        label="Scale"
+        value={focus.scale}
+        choices={SCALES.map((scale) => ({ value: scale, title: scaleTitle(scale, focus.section) }))}
+        choose={(value) => go({ scale: SCALES.find((scale) => scale === value) })}
+      />
+    </>
+  );
+}
+
+function horizonWords(analysis: Analysis, { section }: Focus): string {
+  const here = section && analysis.markers.main.bySection.get(section.name);
+  if (here === undefined) return "not placed here";
+  return analysis.markers.main.name ?? here.name;
+}

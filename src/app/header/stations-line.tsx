@@ -1,0 +1,69 @@
+import { type KeyboardEvent, type ReactElement, useEffect, useRef } from "react";
+import type { Station } from "../../report/findings/finding.ts";
+import { usePage } from "../state/page-context.ts";
+import { hashOf, STATIONS } from "../state/place.ts";
+import { STATE_WORDS, type StationState, stationState } from "../state/station-state.ts";
+import styles from "./stations-line.module.css";
+
+/** The line of work: every station with how far it is, told by shape and in words. */
+export function StationsLine(): ReactElement {
+  const { state, open } = usePage();
+  const line = useRef<HTMLOListElement>(null);
+  const current = state.place.station;
+
+  useEffect(() => {
+    line.current
+      ?.querySelector("[aria-current]")
+      ?.scrollIntoView({ block: "nearest", inline: "center" });
+  }, [current]);
+
+  const stateOf = (station: Station): StationState =>
+    open === undefined ? "waiting" : stationState(station, open);
+  return (
+    <nav className={styles.nav} aria-label="Stations">
+      <ol ref={line} className={styles.line} onKeyDown={walk}>
+        {STATIONS.map(({ id, title }, index) => (
+          <li key={id}>
+            <a
+              href={hashOf({ ...state.place, station: id })}
+              aria-current={id === current ? "page" : undefined}
+              aria-keyshortcuts={String(index + 1)}
+            >
+              <StateSign state={stateOf(id)} />
+              <span className={styles.title} data-title={title}>
+                {title}
+              </span>
+              <span className={styles.words}>, {STATE_WORDS[stateOf(id)]}</span>
+            </a>
+          </li>
+        ))}
+      </ol>
+    </nav>
+  );
+}
+
+/** Left and right arrows walk along the line. */
+function walk(event: KeyboardEvent<HTMLOListElement>): void {
+  const by = event.key === "ArrowRight" ? 1 : event.key === "ArrowLeft" ? -1 : 0;
+  if (by === 0) return;
+  const links = [...event.currentTarget.querySelectorAll("a")];
+  const next = links[links.findIndex((link) => link === document.activeElement) + by];
+  if (next === undefined) return;
+  event.preventDefault();
+  next.focus();
+}
+
+function StateSign({ state }: { readonly state: StationState }): ReactElement {
+  return (
+    <svg className={styles[state]} width="11" height="11" viewBox="0 0 11 11" aria-hidden="true">
+      <title>{STATE_WORDS[state]}</title>
+      {state === "done" && <circle cx="5.5" cy="5.5" r="4" fill="currentColor" />}
+      {state === "look" && (
+        <path d="M5.5 1.3L10 9.500H1z" fill="none" stroke="currentColor" strokeWidth="1.6" strokeLinejoin="round" />
+      )}
+      {state === "waiting" && (
+        <circle cx="5.5" cy="5.5" r="3.600" fill="none" stroke="currentColor" strokeWidth="1.2" strokeDasharray="2 1.600" />
+      )}
+    </svg>
+  );
+}

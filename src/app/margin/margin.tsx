@@ -1,0 +1,64 @@
+import { PanelRightClose, PanelRightOpen } from "lucide-react";
+import { memo, type ReactElement } from "react";
+import type { Finding } from "../../report/findings/finding.ts";
+import { usePage, type Opened } from "../state/page-context.ts";
+import { findingOf } from "../state/station-state.ts";
+import { Problems } from "../tables/problems.tsx";
+import { Choices } from "./choices.tsx";
+import styles from "./margin.module.css";
+import { Methods } from "./methods.tsx";
+import { Numbers } from "./numbers.tsx";
+import { Weaknesses } from "./weaknesses.tsx";
+import { WordsText } from "./words-text.tsx";
+
+/** The notes beside a plate, in the order of an argument; they can be put away. */
+export function Margin(): ReactElement {
+  const { state, dispatch, open } = usePage();
+  const { isMarginOpen } = state;
+  const label = isMarginOpen ? "Close the margin" : "Open the margin";
+  return (
+    <aside className={isMarginOpen ? styles.margin : styles.closed} aria-label="Margin">
+      <button
+        type="button"
+        className={styles.turn}
+        aria-expanded={isMarginOpen}
+        aria-label={label}
+        title={`${label} (m)`}
+        onClick={() => dispatch({ kind: "margin-turned" })}
+      >
+        {isMarginOpen ? <PanelRightClose aria-hidden size={16} /> : <PanelRightOpen aria-hidden size={16} />}
+      </button>
+      {isMarginOpen && open !== undefined && <Notes open={open} />}
+    </aside>
+  );
+}
+
+const Notes = memo(function Notes({ open }: { readonly open: Opened }): ReactElement {
+  const finding = findingOf(open.all, open.focus);
+  // A person scrolls the margin with the keyboard too.
+  return (
+    // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex
+    <div className={styles.notes} tabIndex={0} role="region" aria-label="Notes on the plate">
+      {finding === undefined ? (
+        <p className={styles.finding}>This station has nothing to say about what is in focus.</p>
+      ) : (
+        <Argument finding={finding} open={open} />
+      )}
+    </div>
+  );
+});
+
+function Argument({ finding, open }: { readonly finding: Finding; readonly open: Opened }): ReactElement {
+  return (
+    <>
+      <p className={styles.finding} data-testid="finding">
+        <WordsText words={finding.sentence} />
+      </p>
+      <Numbers lines={finding.numbers} />
+      {finding.station === "tables" && <Problems analysis={open.analysis} />}
+      <Weaknesses weaknesses={finding.weaknesses} />
+      <Methods methods={finding.methods} />
+      <Choices analysis={open.analysis} station={finding.station} />
+    </>
+  );
+}

@@ -1,0 +1,25 @@
+import type { ReactElement } from "react";
+import type { NumberLine } from "../../report/findings/finding.ts";
+import styles from "./margin.module.css";
+
+export function Numbers({ lines }: { readonly lines: readonly NumberLine[] }): ReactElement | null {
+  if (lines.length === 0) return null;
+  return (
+    <section className={styles.part}>
+      <h2>Numbers</h2>
+      <table className={styles.numbers}>
+        <tbody>
+          {lines.map(({ label, value, note }, place) => (
+            <tr key={`${place} ${label}`}>
+              <th scope="row">
+                {label}
+                {note && <small>{note}</small>}
+              </th>
+              <td>{value}</td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </section>
+  );
+}

@@ -1,0 +1,74 @@
+import { type ReactElement, useEffect, useMemo, useReducer } from "react";
+import { findings } from "../report/findings/index.ts";
+import styles from "./page.module.css";
+import { FocusLine } from "./focus/focus-line.tsx";
+import { Status } from "./footer/status.tsx";
+import { GoTo } from "./go-to/go-to.tsx";
+import { Header } from "./header/header.tsx";
+import { WorkBar } from "./header/work-bar.tsx";
+import { actionsOf } from "./state/actions.ts";
+import { focusOf } from "./state/focus.ts";
+import { PageProvider, type PageContents } from "./state/page-context.ts";
+import { type PageState, step } from "./state/page-state.ts";
+import { placeOf } from "./state/place.ts";
+import { keptTheme, useTheme } from "./state/theme.ts";
+import { usePlace } from "./state/use-place.ts";
+import { useShortcuts } from "./state/use-shortcuts.ts";
+import { Station } from "./station.tsx";
+import { bundledStudy } from "./study/bundled-study.ts";
+import { DropTarget } from "./study/drop-target.tsx";
+import { useStudy } from "./study/use-study.ts";
+
+const opening = (): PageState => ({
+  place: placeOf(location.hash),
+  isMarginOpen: true,
+  isGoToOpen: false,
+  theme: keptTheme(),
+  work: { kind: "idle" },
+});
+
+/** The whole page: one line of stations, one focus, a plate with its margin, and what lies under the reading line. */
+export function Page(): ReactElement {
+  const [state, dispatch] = useReducer(step, undefined, opening);
+  const study = useStudy(dispatch);
+  const go = usePlace(state.place, dispatch);
+  const { analysis, open: openStudy } = study;
+
+  useEffect(() => openStudy("the example", bundledStudy), [openStudy]);
+  useTheme(state.theme);
+
+  const all = useMemo(() => (analysis === undefined ? [] : findings(analysis)), [analysis]);
+  const focus = useMemo(
+    () => (analysis === undefined ? undefined : focusOf(state.place, analysis)),
+    [analysis, state.place],
+  );
+  const open = useMemo(
+    () => (analysis === undefined || focus === undefined ? undefined : { analysis, focus, all }),
+    [analysis, focus, all],
+  );
+  const page = useMemo<PageContents>(
+    () => ({ state, dispatch, go, study, open }),
+    [state, go, study, open],
+  );
+  const actions = useMemo(() => actionsOf(page), [page]);
+  useShortcuts(actions, () => dispatch({ kind: "go-to-turned", isOpen: true }));
+
+  useEffect(() => {
+    document.title = analysis === undefined ? "Lastbed" : `${analysis.study.name} · Lastbed`;
+  }, [analysis]);
+
+  return (
+    <PageProvider value={page}>
+      <DropTarget>
+        <div className={styles.page}>
+          <Header actions={actions} />
+          <FocusLine />
+          <WorkBar />
+          <Station />
+          <Status />
+        </div>
+        <GoTo actions={actions} />
+      </DropTarget>
+    </PageProvider>
+  );
+}

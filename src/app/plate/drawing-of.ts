@@ -1,0 +1,24 @@
+import type { Analysis } from "../../core/analysis-result.ts";
+import { fenceDiagram, markerPlate, rangeChart, timingPlate } from "../../figures/index.ts";
+import type { Drawing, View } from "../../figures/plates/drawing.ts";
+import type { Focus } from "../state/focus.ts";
+
+/** The plate of a station for what is in focus; undefined where it has none. */
+export function drawingOf(focus: Focus, analysis: Analysis, view: View): Drawing | undefined {
+  const { station, section, set } = focus;
+  if (section === undefined || station === "tables") return undefined;
+  switch (station) {
+    case "markers":
+      return markerPlate(analysis, { section: section.name, ...view });
+    case "fence":
+      return fenceDiagram(analysis, view);
+    case "ranges":
+      return rangeChart(analysis, { section: section.name, ...view });
+    case "timing":
+      return set === undefined
+        ? undefined
+        : timingPlate(analysis, { section: section.name, set: set.set, ...view });
+    default:
+      return station satisfies never;
+  }
+}

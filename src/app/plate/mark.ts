@@ -1,0 +1,43 @@
+import type { Analysis } from "../../core/analysis-result.ts";
+import type { TableName } from "../../core/study/tables/index.ts";
+import type { Place } from "../state/place.ts";
+
+/** Something drawn on a plate that stands for rows of a table. */
+export interface Mark {
+  readonly kind: "row" | "sample" | "taxon" | "horizon";
+  readonly name: string;
+}
+
+export const MARK_SELECTOR = "[data-row], [data-sample], [data-taxon], [data-horizon]";
+
+/** The most particular thing an element of a plate says it is. */
+export function markOf(element: Element | null): Mark | undefined {
+  if (element === null) return undefined;
+  for (const kind of ["row", "sample", "taxon", "horizon"] as const) {
+    const name = element.getAttribute(`data-${kind}`);
+    if (name !== null && name !== "") return { kind, name };
+  }
+  return undefined;
+}
+
+/** The rows of a mark: its table, and the row itself or its name as the words looked for. */
+export function placeOfMark({ kind, name }: Mark, { study }: Analysis): Partial<Place> {
+  const fileOf = (table: TableName) => study.sheets.find((sheet) => sheet.table === table)?.file;
+  const at = { station: "tables", row: undefined, find: undefined } as const;
+  switch (kind) {
+    case "row": {
+      const [, file, row] = /^(.*):(\d+)$/.exec(name) ?? [];
+      return { ...at, table: file, row: row === undefined ? undefined : Number(row) };
+    }
+    case "sample":
+      return { ...at, table: fileOf("samples") ?? fileOf("occurrences"), find: name };
+    case "taxon":
+      return { ...at, table: fileOf("occurrences") ?? fileOf("published-ranges"), find: name };
+    case "horizon":
+      return study.sections.some(({ horizons }) => horizons.some((horizon) => horizon.name === name))
+        ? { ...at, table: fileOf("horizons"), find: name }
+        : { ...at, table: "markers", find: name };
+    default:
+      return kind satisfies never;
+  }
+}

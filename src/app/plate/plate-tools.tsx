@@ -1,0 +1,54 @@
+import { Download, Maximize2, ZoomIn, ZoomOut } from "lucide-react";
+import { type ReactElement, useState } from "react";
+import type { Drawing } from "../../figures/plates/drawing.ts";
+import { type Action, actionsOf } from "../state/actions.ts";
+import { type Opened, usePage } from "../state/page-context.ts";
+import { downloadPlate } from "./download-plate.ts";
+import styles from "./plate.module.css";
+
+const ICONS = { nearer: ZoomIn, further: ZoomOut, whole: Maximize2 } as const;
+
+/** The plate's title, the keys of its frame as buttons, and the way to take it along as a file. */
+export function PlateTools({ drawing, open }: { readonly drawing: Drawing; readonly open: Opened }): ReactElement {
+  const page = usePage();
+  const [failure, setFailure] = useState("");
+  const actions = actionsOf(page).filter(({ id }) => id in ICONS);
+  return (
+    <figcaption className={styles.tools}>
+      <span className={styles.caption}>{drawing.title}</span>
+      <span role="alert">{failure}</span>
+      <span className={styles.buttons}>
+        {actions.map((action) => (
+          <FrameButton key={action.id} action={action} />
+        ))}
+        <button
+          type="button"
+          className={styles.download}
+          onClick={() => {
+            setFailure("");
+            downloadPlate(open, page.state.frame).catch((error: unknown) => setFailure(String(error)));
+          }}
+        >
+          <Download aria-hidden size={14} /> SVG
+        </button>
+      </span>
+    </figcaption>
+  );
+}
+
+function FrameButton({ action }: { readonly action: Action }): ReactElement | null {
+  const { id, label, shortcut, isAvailable, act } = action;
+  const Icon = id === "nearer" || id === "further" || id === "whole" ? ICONS[id] : undefined;
+  if (Icon === undefined) return null;
+  return (
+    <button
+      type="button"
+      aria-label={label}
+      title={`${label} (${shortcut})`}
+      aria-disabled={!isAvailable}
+      onClick={() => isAvailable && act()}
+    >
+      <Icon aria-hidden size={15} />
+    </button>
+  );
+}

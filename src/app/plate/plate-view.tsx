@@ -1,0 +1,71 @@
+import { type CSSProperties, type ReactElement, useRef } from "react";
+import type { Drawing } from "../../figures/plates/drawing.ts";
+import type { Opened } from "../state/page-context.ts";
+import { usePage } from "../state/page-context.ts";
+import { MarkLabel } from "./mark-label.tsx";
+import { MarksList } from "./marks-list.tsx";
+import { PlateTools } from "./plate-tools.tsx";
+import styles from "./plate.module.css";
+import { ReadingLine } from "./reading-line.tsx";
+import { useMarks } from "./use-marks.ts";
+import { usePlateScale } from "./use-plate-scale.ts";
+import { usePlateZoom } from "./use-plate-zoom.ts";
+import { useReading } from "./use-reading.ts";
+
+interface PlateProps {
+  readonly drawing: Drawing;
+  readonly open: Opened;
+}
+
+/** The plate as it will be exported, with the reading line and the names of marks laid over it. */
+export function PlateView({ drawing, open }: PlateProps): ReactElement {
+  const { state } = usePage();
+  const frame = useRef<HTMLDivElement>(null);
+  const sheet = useRef<HTMLDivElement>(null);
+  const pixelsPerPoint = usePlateScale(frame, drawing);
+  const reading = useReading(drawing, open);
+  const marks = useMarks(sheet, drawing);
+  usePlateZoom(frame, reading);
+  return (
+    <figure className={styles.figure}>
+      <PlateTools drawing={drawing} open={open} />
+      <div
+        ref={frame}
+        className={styles.frame}
+        role="group"
+        aria-label={`${drawing.title}: arrow keys move the reading line`}
+        // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex
+        tabIndex={0}
+        onKeyDown={reading.onKeyDown}
+      >
+        <div
+          ref={sheet}
+          className={styles.sheet}
+          style={sizeOf(drawing, pixelsPerPoint)}
+          onPointerMove={(event) => {
+            reading.onPointer(event, pixelsPerPoint);
+            marks.onPointer(event);
+          }}
+          onPointerDown={(event) => reading.onPointer(event, pixelsPerPoint)}
+          onPointerLeave={marks.onLeave}
+          onDoubleClick={marks.onOpen}
+        >
+          {drawing.element}
+          {state.reading && <ReadingLine drawing={drawing} reading={reading} pixelsPerPoint={pixelsPerPoint} />}
+          <MarkLabel mark={marks.pointed} sheet={sheet} drawing={drawing} />
+        </div>
+      </div>
+      <MarksList marks={marks} />
+    </figure>
+  );
+}
+
+interface SheetSize extends CSSProperties {
+  readonly "--sheet-width": string;
+  readonly "--sheet-height": string;
+}
+
+const sizeOf = ({ width, height }: Drawing, pixelsPerPoint: number): SheetSize => ({
+  "--sheet-width": `${width * pixelsPerPoint}px`,
+  "--sheet-height": `${height * pixelsPerPoint}px`,
+});

@@ -1,0 +1,21 @@
+import { type RefObject, useLayoutEffect, useState } from "react";
+import type { Drawing } from "../../figures/plates/drawing.ts";
+
+/** Below this a plate's smallest letters (7 pt) cannot be read on a screen: it scrolls instead. */
+const LEAST = 1.15;
+const MOST = 2;
+
+/** Pixels of the page for a point of the plate: the plate fills the width it has, as far as it stays readable. */
+export function usePlateScale(frame: RefObject<HTMLElement | null>, { width }: Drawing): number {
+  const [room, setRoom] = useState(0);
+  useLayoutEffect(() => {
+    const element = frame.current;
+    if (element === null) return;
+    const measure = () => setRoom(element.clientWidth);
+    measure();
+    const observer = new ResizeObserver(measure);
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [frame]);
+  return Math.min(MOST, Math.max(LEAST, room / width));
+}

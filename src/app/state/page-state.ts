@@ -1,0 +1,77 @@
+import type { Level } from "./level.ts";
+import type { Place } from "./place.ts";
+
+export type Theme = "system" | "light" | "dark";
+
+/** What the worker is doing, or how its last work ended. */
+export type Work =
+  | { readonly kind: "idle" }
+  | { readonly kind: "busy"; readonly name: string; readonly step: string; readonly share: number }
+  | { readonly kind: "cancelled"; readonly name: string }
+  | { readonly kind: "failed"; readonly message: string };
+
+/** The part of the section a plate shows, lower end first. */
+export interface Frame {
+  readonly low: Level;
+  readonly high: Level;
+}
+
+/** All that the page remembers besides the study's bytes and its analysis. */
+export interface PageState {
+  readonly place: Place;
+  readonly reading?: Level;
+  readonly frame?: Frame;
+  readonly isMarginOpen: boolean;
+  readonly isGoToOpen: boolean;
+  readonly theme: Theme;
+  readonly work: Work;
+}
+
+export type PageEvent =
+  | { readonly kind: "placed"; readonly place: Place }
+  | { readonly kind: "read"; readonly level: Level }
+  | { readonly kind: "framed"; readonly frame: Frame | undefined }
+  | { readonly kind: "margin-turned" }
+  | { readonly kind: "go-to-turned"; readonly isOpen: boolean }
+  | { readonly kind: "theme-set"; readonly theme: Theme }
+  | { readonly kind: "work-began"; readonly name: string }
+  | { readonly kind: "work-went-on"; readonly step: string; readonly share: number }
+  | { readonly kind: "work-ended" }
+  | { readonly kind: "work-cancelled" }
+  | { readonly kind: "work-failed"; readonly message: string }
+  | { readonly kind: "message-read" };
+
+export function step(state: PageState, event: PageEvent): PageState {
+  switch (event.kind) {
+    case "placed":
+      return { ...state, place: event.place };
+    case "read":
+      return { ...state, reading: event.level };
+    case "framed":
+      return { ...state, frame: event.frame };
+    case "margin-turned":
+      return { ...state, isMarginOpen: !state.isMarginOpen };
+    case "go-to-turned":
+      return { ...state, isGoToOpen: event.isOpen };
+    case "theme-set":
+      return { ...state, theme: event.theme };
+    case "work-began":
+      return { ...state, work: { kind: "busy", name: event.name, step: "reading the tables", share: 0 } };
+    case "work-went-on":
+      return state.work.kind === "busy"
+        ? { ...state, work: { ...state.work, step: event.step, share: event.share } }
+        : state;
+    case "work-ended":
+      return { ...state, work: { kind: "idle" }, reading: undefined, frame: undefined };
+    case "work-cancelled":
+      return state.work.kind === "busy"
+        ? { ...state, work: { kind: "cancelled", name: state.work.name } }
+        : state;
+    case "work-failed":
+      return { ...state, work: { kind: "failed", message: event.message } };
+    case "message-read":
+      return { ...state, work: { kind: "idle" } };
+    default:
+      return event satisfies never;
+  }
+}

@@ -1,0 +1,62 @@
+import { type ReactElement, useState } from "react";
+import type { Analysis } from "../../core/analysis-result.ts";
+import type { Problem } from "../../core/study/problem.ts";
+import marginStyles from "../margin/margin.module.css";
+import { usePage } from "../state/page-context.ts";
+import styles from "./tables.module.css";
+
+const SHOWN_AT_ONCE = 40;
+
+/** Every problem of the input: where, what stands there, what was expected, how to mend it. */
+export function Problems({ analysis }: { readonly analysis: Analysis }): ReactElement {
+  const [most, setMost] = useState(SHOWN_AT_ONCE);
+  const { problems } = analysis.study;
+  const sorted = problems.toSorted((a, b) => rank(a) - rank(b));
+  return (
+    <section className={marginStyles.part}>
+      <h2>Problems</h2>
+      {problems.length === 0 && <p>None: every row was read as it stands.</p>}
+      <ul className={styles.problems}>
+        {sorted.slice(0, most).map((problem, place) => (
+          <li key={`${place} ${problem.file} ${problem.row} ${problem.code}`}>
+            <ProblemButton problem={problem} />
+          </li>
+        ))}
+      </ul>
+      {problems.length > most && (
+        <button type="button" className={styles.more} onClick={() => setMost(most + SHOWN_AT_ONCE)}>
+          {problems.length - most} more
+        </button>
+      )}
+    </section>
+  );
+}
+
+const rank = ({ severity }: Problem) => (severity === "error" ? 0 : 1);
+
+function ProblemButton({ problem }: { readonly problem: Problem }): ReactElement {
+  const { go } = usePage();
+  const { severity, file, row, column, found, expected, mend } = problem;
+  const where = [file, row !== undefined && `row ${row}`, column].filter(Boolean).join(" · ");
+  return (
+    <button
+      type="button"
+      className={styles.problem}
+      data-severity={severity}
+      onClick={() => go({ station: "tables", table: file, row: row ?? 1, find: undefined })}
+    >
+      <span className={severity === "error" ? styles.errorSign : styles.cautionSign} aria-hidden="true">
+        {severity === "error" ? "△" : "○"}
+      </span>
+      <b>
+        <span className={styles.said}>{severity}: </span>
+        {where}
+      </b>
+      <span>
+        {found === "" ? "Nothing stands there" : `Found “${found.slice(0, 120)}${found.length > 120 ? "…" : ""}”`};
+        expected {expected}.
+      </span>
+      <span className={styles.mend}>{mend}</span>
+    </button>
+  );
+}

@@ -1,0 +1,63 @@
+import { readdir, readFile } from "node:fs/promises";
+import { join } from "node:path";
+import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import type { Analysis } from "../../src/core/analysis-result.ts";
+import { fontFaceCss } from "../../src/figures/faces.ts";
+import { fenceDiagram, markerPlate, rangeChart, renderPlate, timingPlate } from "../../src/figures/index.ts";
+import { inlineRunner } from "../../src/run/inline.ts";
+import { findBrowser } from "./browser.ts";
+import { EXAMPLE, finding, openPage, type OpenedPage } from "./opened-page.ts";
+
+async function analysedExample(): Promise<Analysis> {
+  const names = (await readdir(EXAMPLE.folder)).filter((file) => /\.(csv|json)$/.test(file)).toSorted();
+  const files = await Promise.all(
+    names.map(async (file) => [file, new Uint8Array(await readFile(join(EXAMPLE.folder, file)))] as const),
+  );
+  return inlineRunner.analyse({ name: EXAMPLE.name, files: new Map(files) });
+}
+
+async function carriedFaces(): Promise<string> {
+  const bytes = async (file: string) =>
+    (await readFile(new URL(`../../src/figures/fonts/${file}`, import.meta.url))).toString("base64");
+  return fontFaceCss({
+    sans: await bytes("lastbed-sans-regular.ttf"),
+    sansSemibold: await bytes("lastbed-sans-semibold.ttf"),
+    serifItalic: await bytes("lastbed-serif-italic.ttf"),
+  });
+}
+
+describe.skipIf(findBrowser() === undefined)("the file a plate is saved as", () => {
+  let opened: OpenedPage;
+  let analysis: Analysis;
+  beforeAll(async () => {
+    [opened, analysis] = await Promise.all([openPage(), analysedExample()]);
+    await finding(opened.page);
+  }, 120_000);
+  afterAll(() => opened?.close());
+
+  it("is byte for byte what Node draws from the same study", async () => {
+    const { page } = opened;
+    const section = analysis.study.sections[0]?.name ?? "";
+    const set = analysis.timing.sets.find((candidate) => candidate.section === section)?.set ?? "";
+    const view = { vertical: "from-horizon", fontFaces: await carriedFaces() } as const;
+    const drawings = {
+      markers: markerPlate(analysis, { section, ...view }),
+      fence: fenceDiagram(analysis, view),
+      ranges: rangeChart(analysis, { section, ...view }),
+      timing: timingPlate(analysis, { section, set, ...view }),
+    };
+    for (const [station, drawing] of Object.entries(drawings)) {
+      await page.evaluate((station) => {
+        location.hash = `#${station}`;
+      }, station);
+      await page.locator(`figure svg#${drawing.id}`).waitFor();
+      const [download] = await Promise.all([
+        page.waitForEvent("download"),
+        page.getByRole("button", { name: "SVG" }).click(),
+      ]);
+      expect(download.suggestedFilename()).toBe(`${drawing.id}.svg`);
+      const saved = await readFile(await download.path(), "utf8");
+      expect(saved === renderPlate(drawing.element), `${station}: the page's file equals Node's`).toBe(true);
+    }
+  });
+});
