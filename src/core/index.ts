@@ -4,7 +4,7 @@ export { suggestName } from "./study/nearest.ts";
 export type { Problem } from "./study/problem.ts";
 export { knownSettingPaths, mergeSettings, type SetSetting, setSetting } from "./study/setting-path.ts";
 export { defaultSettings, type Settings, settingsSchema } from "./study/settings.ts";
-export { columnKind, tablesGuide } from "./study/table-guide.ts";
+export { tablesGuide } from "./study/table-guide.ts";
 export { tableSchema } from "./study/table-schema.ts";
 export {
   type ColumnDeclaration,

@@ -1,7 +1,7 @@
 import { excerpt, type ProblemCode } from "./problem-wordings.ts";
 import type { ColumnDeclaration } from "./tables/declare.ts";
 
-export type CellValue = string | number | boolean | undefined;
+type CellValue = string | number | boolean | undefined;
 
 /** A cell's value, or the code of what is wrong with it and what the wording needs. */
 export type ParsedCell =

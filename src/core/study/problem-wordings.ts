@@ -1,7 +1,7 @@
 import type { Problem } from "./problem.ts";
 
 /** Where a problem stands and what its sentence needs. */
-export interface ProblemPlace {
+interface ProblemPlace {
   readonly file: string;
   readonly row?: number;
   readonly column?: string;
@@ -115,6 +115,13 @@ const wordings = {
   "section-left-out": (p) =>
     error(`a section that can be used`, `Mend section ${p.found} first: ${p.detail}.`),
   "top-below-base": (p) => error("top above base", p.detail ?? "Exchange base and top, or correct them."),
+  "half-slab": () =>
+    error("both base and top, or neither", "Fill in the one that lacks, or take the other out."),
+  "position-outside-slab": () =>
+    error(
+      "a position between base and top",
+      "Correct the position, base or top, or leave the position blank.",
+    ),
   "last-below-first": (p) =>
     error("last above first", p.detail ?? "Exchange first and last, or correct them."),
   "unknown-leg": (p) =>
@@ -221,7 +228,7 @@ export function excerpt(text: string): string {
 }
 
 /** A problem in the words of its code. */
-export function problem(code: ProblemCode, place: ProblemPlace): Problem {
+function problem(code: ProblemCode, place: ProblemPlace): Problem {
   const wording: Wording = wordings[code];
   const { severity, expected, mend } = wording(place);
   return {

@@ -2,7 +2,7 @@ import type { ColumnDeclaration, TableDeclaration } from "./tables/declare.ts";
 import { tables } from "./tables/index.ts";
 
 /** What a person may write in a column, in a few words. */
-export function columnKind(column: ColumnDeclaration): string {
+function columnKind(column: ColumnDeclaration): string {
   const unit =
     column.unit === undefined ? "" : column.unit === "section" ? ", section's unit" : `, ${column.unit}`;
   switch (column.type) {

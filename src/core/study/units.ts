@@ -29,6 +29,21 @@ export function lengthUnit(written: string): LengthUnit | undefined {
   return lengthUnits.find((unit) => unit === name);
 }
 
+/** How the fixed units of columns are written in headers. */
+const fixedUnitNames = new Map<string, readonly string[]>([
+  ["g/cm3", ["g/cm3", "g/cm^3", "g cm-3", "g cm^-3", "g/cc", "t/m3"]],
+  ["%", ["%", "percent", "per cent", "wt%"]],
+  ["degrees", ["degrees", "degree", "deg", "°", "°n", "°e", "decimal degrees"]],
+  ["Ma", ["ma", "myr", "mya"]],
+]);
+
+/** True where a unit written in a header is the fixed unit of its column. */
+export const isFixedUnit = (written: string, unit: string): boolean =>
+  lengthUnit(written) === unit ||
+  (fixedUnitNames.get(unit) ?? []).includes(
+    written.trim().normalize("NFKC").replaceAll("\u2212", "-").toLowerCase(),
+  );
+
 /**
  * Metres of a length. `unit`: m, cm, mm, ft (0.3048 m exactly), in, us_survey_ft (1200/3937 m); throws on any other.
  */

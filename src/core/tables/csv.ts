@@ -9,7 +9,7 @@ export interface CsvRecords {
   readonly faults: readonly CsvFault[];
 }
 
-export interface CsvFault {
+interface CsvFault {
   readonly code: "unclosed-quote" | "malformed-quote";
   readonly row: number;
 }

@@ -2,7 +2,7 @@ import { tableSchema } from "../study/table-schema.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 
 /** The property of a resource that lists the columns in which `writeCsv` put apostrophes. */
-export const apostrophesProperty = "lastbed:apostrophes";
+const apostrophesProperty = "lastbed:apostrophes";
 
 /** A table in a folder, as datapackage.json tells it. */
 export interface PackageResource {

@@ -5,7 +5,7 @@ import { suggestName } from "../study/nearest.ts";
 import type { ProblemList } from "../study/problem-wordings.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 import type { TableName } from "../study/tables/index.ts";
-import { lengthUnits } from "../study/units.ts";
+import { isFixedUnit, lengthUnits } from "../study/units.ts";
 import { takeOffApostrophe } from "./apostrophes.ts";
 import { type CsvRecords, decodeText, otherDelimiter, parseCsv, unguardedHeaders } from "./csv.ts";
 
@@ -64,17 +64,12 @@ function areColumnsSound(columns: readonly RecognisedColumn[], source: SheetSour
       problems.add("duplicate-header", { file, row: 1, column: header, found: header });
       isSound = false;
     }
-    if (hasUnknownUnit(recognised, table)) {
+    const expected = unitsExpected(recognised, table);
+    if (expected !== undefined) {
       const found = recognised.bracket ?? "";
-      const nearest = suggestName(found, lengthUnits);
-      problems.add("unknown-unit", {
-        file,
-        row: 1,
-        column: header,
-        found,
-        detail: lengthUnits.join(", "),
-        nearest,
-      });
+      const nearest = suggestName(found, expected);
+      const place = { file, row: 1, column: header, found };
+      problems.add("unknown-unit", { ...place, detail: expected.join(", "), nearest });
       isSound = false;
     }
     if (column !== undefined) seen.add(column);
@@ -82,8 +77,16 @@ function areColumnsSound(columns: readonly RecognisedColumn[], source: SheetSour
   return tellMissing(columns, source) && isSound;
 }
 
-const hasUnknownUnit = ({ column, bracket }: RecognisedColumn, table: TableDeclaration): boolean =>
-  column !== undefined && bracket !== undefined && table.columns[column].unit === "section";
+/** The units that a header's column can have, where the one written is none of them. */
+function unitsExpected(
+  { column, bracket }: RecognisedColumn,
+  table: TableDeclaration,
+): readonly string[] | undefined {
+  const unit = column === undefined ? undefined : table.columns[column].unit;
+  if (unit === undefined || bracket === undefined) return undefined;
+  if (unit === "section") return lengthUnits;
+  return isFixedUnit(bracket, unit) ? undefined : [unit];
+}
 
 function tellUnused(header: string, { file, table, problems }: SheetSource): void {
   const name = header.trim();

@@ -3,7 +3,7 @@ import { tableResource, writeDataPackage } from "./data-package.ts";
 import { writeCsv } from "./write-csv.ts";
 
 /** A table to fill in: the header and one worked row (a leg takes two). */
-export function tableTemplate(table: TableDeclaration): string {
+function tableTemplate(table: TableDeclaration): string {
   const columns = Object.entries(table.columns);
   const worked = columns.map(([, column]) => column.example);
   const { secondRow } = table;

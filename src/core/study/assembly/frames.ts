@@ -1,18 +1,11 @@
 import { givenToHeight } from "../heights.ts";
 import { levelRegister } from "../legs.ts";
 import type { Axis, LengthUnit, Origin } from "../model.ts";
-import { suggestName } from "../nearest.ts";
 import { sections } from "../tables/sections.ts";
 import { type Assembly, present, type ReadSheet, type Row, type SectionFrame } from "./context.ts";
+import type { Frames } from "./frame-for.ts";
 import { readLegs } from "./read-legs.ts";
 import { rowsOf } from "./rows.ts";
-
-/** The sections of a study, each with what converts its positions; those that cannot be used with the reason. */
-export interface Frames {
-  readonly usable: ReadonlyMap<string, SectionFrame>;
-  readonly leftOut: ReadonlyMap<string, string>;
-  readonly areListed: boolean;
-}
 
 interface Scale {
   readonly axis: Axis;
@@ -26,7 +19,7 @@ export function readFrames(assembly: Assembly): Frames {
   const leftOut = new Map<string, string>();
   if (listed) readListed(assembly, { listed, usable, leftOut });
   else readNamed(assembly, usable, leftOut);
-  return { usable: readLegs(usable, assembly), leftOut, areListed: listed !== undefined };
+  return readLegs({ usable, leftOut }, assembly);
 }
 
 interface Listing {
@@ -139,51 +132,3 @@ function scaleOf(section: string, said: Partial<Scale>, search: ScaleSearch): Sc
 }
 
 const only = <T>(values: ReadonlySet<T>): T | undefined => (values.size === 1 ? [...values][0] : undefined);
-
-/** The frame a row's section has, or undefined with the problem told. */
-export function frameFor(
-  section: string,
-  origin: Origin,
-  { frames, read, assembly }: FrameSearch,
-): SectionFrame | undefined {
-  const frame = frames.usable.get(section);
-  if (!frame) {
-    tellMissing(section, origin, { frames, read, assembly });
-    return undefined;
-  }
-  return isContradicted(frame, origin, { frames, read, assembly }) ? undefined : frame;
-}
-
-export interface FrameSearch {
-  readonly frames: Frames;
-  readonly read: ReadSheet;
-  readonly assembly: Assembly;
-}
-
-function tellMissing(section: string, origin: Origin, { frames, assembly }: FrameSearch): void {
-  const reason = frames.leftOut.get(section);
-  const place = { ...origin, column: "section", found: section };
-  if (reason !== undefined) {
-    assembly.problems.addOnce(section, "section-left-out", { ...place, detail: reason });
-  } else {
-    const nearest = suggestName(section, frames.usable.keys());
-    assembly.problems.add("unlisted-section", { ...place, nearest });
-  }
-}
-
-/** A header that names another axis or unit than the section's: nothing is converted on a guess. */
-function isContradicted(frame: SectionFrame, origin: Origin, { read, assembly }: FrameSearch): boolean {
-  for (const { header, axis, unit } of read.hints.values()) {
-    const isOther = (axis ?? frame.axis) !== frame.axis || (unit ?? frame.unit) !== frame.unit;
-    if (!isOther) continue;
-    const detail = `${frame.axis} in ${frame.unit}, as section ${frame.name} says`;
-    assembly.problems.addOnce(frame.name, "axis-contradicted", {
-      ...origin,
-      column: header,
-      found: header,
-      detail,
-    });
-    return true;
-  }
-  return false;
-}

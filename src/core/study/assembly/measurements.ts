@@ -5,7 +5,7 @@ import type { RowOf } from "../tables/declare.ts";
 import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
 import { type Assembly, type BySection, gather, present, type ReadSheet, type Row } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { type Place, placeOf } from "./place.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { rowsOf } from "./rows.ts";
@@ -161,7 +161,7 @@ const symbols = new Map([
 ]);
 
 /** An analyte in lower case with hyphens; element symbols and isotope signs by their usual names. */
-export function plainAnalyte(written: string): string {
+function plainAnalyte(written: string): string {
   const plain = written
     .trim()
     .toLowerCase()

@@ -3,7 +3,7 @@ import { type ParsedName, parseName } from "../open-nomenclature.ts";
 import type { RowOf } from "../tables/declare.ts";
 import { occurrences } from "../tables/occurrences.ts";
 import { type Assembly, type BySection, gather, present, type SectionFrame } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { type Place, placeOf } from "./place.ts";
 import { lengthOf } from "./position.ts";
 import type { SampleLists } from "./read-samples.ts";

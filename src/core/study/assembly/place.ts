@@ -2,7 +2,7 @@ import { sameLevelM } from "../legs.ts";
 import type { Origin, Sample } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
-import { type Slab, type SlabCells, slabOf } from "./position.ts";
+import { isHalfSlab, type Slab, type SlabCells, slabOf } from "./position.ts";
 import type { SampleLists } from "./read-samples.ts";
 
 /** Where a find or measurement stands: in a sample, or at a position. */
@@ -38,6 +38,7 @@ export function placeOf(
     return undefined;
   }
   const { baseM, topM, heightM } = sample;
+  if (isHalfSlab(cells, { origin, assembly })) return undefined;
   if (!hasOwnPlace) return { baseM, topM, heightM, sample };
   const own = slabOf(cells, frame, { origin, assembly });
   if (!own) return undefined;

@@ -57,7 +57,13 @@ export function slabOf(
   place: { readonly origin: Origin; readonly assembly: Assembly },
 ): Slab | undefined {
   const { position, base, top, leg } = cells;
+  if (isHalfSlab(cells, place)) return undefined;
   if (base !== undefined && top !== undefined) {
+    if (position !== undefined && (position - base) * (position - top) > 0) {
+      const found = `position ${position}, base ${base}, top ${top}`;
+      place.assembly.problems.add("position-outside-slab", { ...place.origin, column: "position", found });
+      return undefined;
+    }
     const ends = endsOf(base, top, { ...place, frame, leg });
     return ends && { ...ends, heightM: frame.level((ends.baseM + ends.topM) / 2) };
   }
@@ -67,6 +73,17 @@ export function slabOf(
   const half = (lengthOf(cells.thickness, frame) ?? 0) / 2;
   if (half === 0) return { baseM: heightM, topM: heightM, heightM };
   return { baseM: frame.level(heightM - half), topM: frame.level(heightM + half), heightM };
+}
+
+/** True, and told, where one of base and top stands alone. */
+export function isHalfSlab(
+  { base, top }: SlabCells,
+  { origin, assembly }: { readonly origin: Origin; readonly assembly: Assembly },
+): boolean {
+  if ((base === undefined) === (top === undefined)) return false;
+  const [column, found] = base === undefined ? ["base", `top ${top}`] : ["top", `base ${base}`];
+  assembly.problems.add("half-slab", { ...origin, column, found });
+  return true;
 }
 
 interface Ends {

@@ -2,7 +2,7 @@ import type { PublishedRange, RecoveryPoint } from "../model.ts";
 import { publishedRanges } from "../tables/published-ranges.ts";
 import { recovery } from "../tables/recovery.ts";
 import { type Assembly, type BySection, gather, present } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { heightOf, lengthOf } from "./position.ts";
 import { rowsOf } from "./rows.ts";
 

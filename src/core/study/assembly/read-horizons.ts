@@ -2,7 +2,7 @@ import { oneSigma } from "../errors.ts";
 import type { GivenHorizon } from "../model.ts";
 import { horizons } from "../tables/horizons.ts";
 import { type Assembly, type BySection, gather, present, type Row } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { heightOf, lengthOf } from "./position.ts";
 import { rowsOf } from "./rows.ts";
 

@@ -1,36 +1,26 @@
 import { givenToHeight } from "../heights.ts";
-import { suggestName } from "../nearest.ts";
 import { legs } from "../tables/legs.ts";
 import { type Assembly, gather, type Row, type SectionFrame } from "./context.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { rowsOf } from "./rows.ts";
 
 type LegRow = Row<typeof legs>;
 
 /** The frames with their legs. A leg with a single row, or with one reading at two positions, is told. */
-export function readLegs(
-  frames: ReadonlyMap<string, SectionFrame>,
-  assembly: Assembly,
-): ReadonlyMap<string, SectionFrame> {
+export function readLegs(frames: Frames, assembly: Assembly): Frames {
+  const read = assembly.sheets.get("legs");
+  if (!read) return frames;
   const bySection = new Map<string, Map<string, LegRow[]>>();
   for (const row of rowsOf(legs, assembly)) {
     const { section, leg } = row.cells;
-    if (!frames.has(section)) {
-      const nearest = suggestName(section, frames.keys());
-      assembly.problems.add("unlisted-section", {
-        ...row.origin,
-        column: "section",
-        found: section,
-        nearest,
-      });
-      continue;
-    }
+    if (!frameFor(section, row.origin, { frames, read, assembly })) continue;
     const rows = bySection.get(section) ?? new Map<string, LegRow[]>();
     bySection.set(section, rows);
     gather(rows, leg, row);
   }
-  const withLegs = new Map<string, SectionFrame>();
-  for (const [name, frame] of frames) withLegs.set(name, legsOf(frame, bySection.get(name), assembly));
-  return withLegs;
+  const usable = new Map<string, SectionFrame>();
+  for (const [name, frame] of frames.usable) usable.set(name, legsOf(frame, bySection.get(name), assembly));
+  return { ...frames, usable };
 }
 
 function legsOf(frame: SectionFrame, rows: ReadonlyMap<string, LegRow[]> | undefined, assembly: Assembly) {

@@ -2,7 +2,7 @@ import { sameLevelM } from "../legs.ts";
 import type { Origin, Sample } from "../model.ts";
 import { samples } from "../tables/samples.ts";
 import { type Assembly, present, type SectionFrame } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { lengthOf, type SlabCells, slabOf } from "./position.ts";
 import { rowsOf } from "./rows.ts";
 

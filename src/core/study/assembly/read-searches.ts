@@ -2,7 +2,7 @@ import type { Occurrence, Sample, Search, Taxon } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import { searches } from "../tables/searches.ts";
 import { type Assembly, type BySection, gather, present } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { rowsOf } from "./rows.ts";
 import { ungrouped } from "./taxa.ts";

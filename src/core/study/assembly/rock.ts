@@ -2,7 +2,7 @@ import type { Bed, RockInterval } from "../model.ts";
 import { beds } from "../tables/beds.ts";
 import { intervals } from "../tables/intervals.ts";
 import { type Assembly, type BySection, gather, present } from "./context.ts";
-import { type Frames, frameFor } from "./frames.ts";
+import { type Frames, frameFor } from "./frame-for.ts";
 import { endsOf, lengthOf } from "./position.ts";
 import { rowsOf } from "./rows.ts";
 

@@ -59,6 +59,7 @@ function withGroups(list: Map<string, Taxon>, assembly: Assembly): Map<string, T
         found: taxon.accepted,
         nearest,
       });
+      if (taxon.group !== "") list.set(taxon.accepted, acceptedOf(taxon, taxon.accepted));
     }
     if (taxon.group !== "") continue;
     const group = accepted !== undefined && accepted.group !== "" ? accepted.group : ungrouped;
@@ -67,6 +68,15 @@ function withGroups(list: Map<string, Taxon>, assembly: Assembly): Map<string, T
   }
   return list;
 }
+
+/** An accepted name without a row of its own, in the group of its synonym. */
+const acceptedOf = ({ group, origin }: Taxon, name: string): Taxon => ({
+  name,
+  group,
+  traits: {},
+  notes: "",
+  origin,
+});
 
 /** The group that all listed taxa of a genus share, for finds that are known to the genus only. */
 export function genusGroup(genus: string, taxa: ReadonlyMap<string, Taxon>): string | undefined {

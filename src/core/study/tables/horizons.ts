@@ -1,3 +1,4 @@
+import { errorKinds } from "../errors.ts";
 import { inSections, notesColumn, positionColumn, sectionColumn, table } from "./declare.ts";
 
 export const horizons = table({
@@ -67,7 +68,7 @@ export const horizons = table({
     },
     age_error_kind: {
       type: "enum",
-      values: ["1s", "2s", "1s%", "2s%", "95%", "se"],
+      values: errorKinds,
       help: "What the age error is.",
     },
     age_error_tracer_ma: {

@@ -1,3 +1,4 @@
+import { errorKinds } from "../errors.ts";
 import {
   baseColumn,
   inSections,
@@ -64,7 +65,7 @@ export const measurements = table({
     },
     error_kind: {
       type: "enum",
-      values: ["1s", "2s", "1s%", "2s%", "95%", "se"],
+      values: errorKinds,
       help: "What the error is: one or two standard deviations (absolute or % of the value), a 95% half-width, or a standard error.",
       synonyms: ["error type", "uncertainty kind"],
     },

@@ -187,6 +187,38 @@ describe("an error on the row, the rest goes on", () => {
     expect(heights(study)).toEqual([1]);
   });
 
+  it.each([
+    ["Orsk Ledge,A,1,,0.5,,", "half-slab", "top"],
+    ["Orsk Ledge,A,,,,0.5,", "one-of", undefined],
+    ["Orsk Ledge,A,3,,1,2,", "position-outside-slab", "position"],
+  ])("leaves out a slab that is half told or contradicts its position: %s", (row, code, column) => {
+    const study = studyFrom({
+      "sections.csv": sections,
+      "samples.csv": samples(row, "Orsk Ledge,B,1.5,,1,2,"),
+      "occurrences.csv": finds(good),
+    });
+    expect(errorsOf(study).map((problem) => [problem.code, problem.column, problem.row])).toEqual([
+      [code, column, 2],
+    ]);
+    expect(onlySection(study).samples).toMatchObject([{ name: "B", baseM: 1, topM: 2, heightM: 1.5 }]);
+  });
+
+  it("leaves out a find whose position is not in its sample", () => {
+    const study = studyFrom({
+      "sections.csv": sections,
+      "samples.csv": samples("Orsk Ledge,A,1,0.2,,,"),
+      "occurrences.csv": lines(
+        "section,taxon,sample,position",
+        "Orsk Ledge,Orvella tenuis,A,1.05",
+        "Orsk Ledge,Orvella tenuis,A,1.2",
+      ),
+    });
+    expect(problemsOf(study, "sample-elsewhere")).toMatchObject([
+      { severity: "error", row: 3, column: "sample" },
+    ]);
+    expect(heights(study)).toEqual([1]);
+  });
+
   it("leaves out a row with more cells than the header, and reads a short one with a caution", () => {
     const study = studyFrom({
       "sections.csv": sections,

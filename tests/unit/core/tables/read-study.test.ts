@@ -78,6 +78,30 @@ describe("columns", () => {
     expect(study.sheets[0].columns).toEqual(["section", "taxon", undefined, "position", undefined]);
   });
 
+  it.each([
+    ["density (g/cm³)", true],
+    ["density (g cm−3)", true],
+    ["density (kg/m3)", false],
+    ["water depth (m)", true],
+    ["water_depth_m", true],
+    ["water depth (ft)", false],
+    ["water_depth_cm", false],
+  ])("takes a fixed unit in the header %s only where it is the column's own", (header, isGood) => {
+    const isBed = header.startsWith("water");
+    const study = studyFrom({
+      "sections.csv": sections,
+      [isBed ? "beds.csv" : "samples.csv"]: isBed
+        ? lines(`section,base,top,lithology,${header}`, "Orsk Ledge,1,2,marl,30")
+        : lines(`section,sample,position,${header}`, "Orsk Ledge,A,1,2.3"),
+      "occurrences.csv": lines("section,taxon,position", "Orsk Ledge,Orvella tenuis,1"),
+    });
+    expect(errorsOf(study).map(({ code, column }) => [code, column])).toEqual(
+      isGood ? [] : [["unknown-unit", header]],
+    );
+    const { beds, samples } = onlySection(study);
+    if (isGood) expect(isBed ? beds[0].waterDepthM : samples[0].densityGCm3).toBe(isBed ? 30 : 2.3);
+  });
+
   it("names the nearest for a missing column and an unknown file", () => {
     const study = studyFrom({
       "occurrences.csv": lines("section,taxn,height (m)", "Orsk Ledge,Orvella tenuis,1"),
@@ -226,6 +250,17 @@ describe("searches", () => {
     expect(onlySection(study).searches).toMatchObject([
       { sample: "a", effort: 20, effortUnit: "g", counting: "count", derived: false },
     ]);
+  });
+
+  it("gives an accepted name without a row the group of its synonym, with a caution", () => {
+    const study = studyFrom({
+      ...base,
+      "taxa.csv": lines("taxon,group,accepted", "Orvella gracilis,foraminifera,Orvella tenuis"),
+    });
+    expect(problemsOf(study, "accepted-unlisted")).toMatchObject([
+      { severity: "caution", row: 2, found: "Orvella tenuis" },
+    ]);
+    expect(study.taxa.get("Orvella tenuis")?.group).toBe("foraminifera");
   });
 
   it("tells taxa without a group once", () => {

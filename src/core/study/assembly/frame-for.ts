@@ -1,0 +1,57 @@
+import type { Origin } from "../model.ts";
+import { suggestName } from "../nearest.ts";
+import type { Assembly, ReadSheet, SectionFrame } from "./context.ts";
+
+/** The sections of a study, each with what converts its positions; those that cannot be used with the reason. */
+export interface Frames {
+  readonly usable: ReadonlyMap<string, SectionFrame>;
+  readonly leftOut: ReadonlyMap<string, string>;
+}
+
+/** The frame a row's section has, or undefined with the problem told. */
+export function frameFor(
+  section: string,
+  origin: Origin,
+  { frames, read, assembly }: FrameSearch,
+): SectionFrame | undefined {
+  const frame = frames.usable.get(section);
+  if (!frame) {
+    tellMissing(section, origin, { frames, read, assembly });
+    return undefined;
+  }
+  return isContradicted(frame, origin, { frames, read, assembly }) ? undefined : frame;
+}
+
+export interface FrameSearch {
+  readonly frames: Frames;
+  readonly read: ReadSheet;
+  readonly assembly: Assembly;
+}
+
+function tellMissing(section: string, origin: Origin, { frames, assembly }: FrameSearch): void {
+  const reason = frames.leftOut.get(section);
+  const place = { ...origin, column: "section", found: section };
+  if (reason !== undefined) {
+    assembly.problems.addOnce(section, "section-left-out", { ...place, detail: reason });
+  } else {
+    const nearest = suggestName(section, frames.usable.keys());
+    assembly.problems.add("unlisted-section", { ...place, nearest });
+  }
+}
+
+/** A header that names another axis or unit than the section's: nothing is converted on a guess. */
+function isContradicted(frame: SectionFrame, origin: Origin, { read, assembly }: FrameSearch): boolean {
+  for (const { header, axis, unit } of read.hints.values()) {
+    const isOther = (axis ?? frame.axis) !== frame.axis || (unit ?? frame.unit) !== frame.unit;
+    if (!isOther) continue;
+    const detail = `${frame.axis} in ${frame.unit}, as section ${frame.name} says`;
+    assembly.problems.addOnce(frame.name, "axis-contradicted", {
+      ...origin,
+      column: header,
+      found: header,
+      detail,
+    });
+    return true;
+  }
+  return false;
+}
