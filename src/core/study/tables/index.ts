@@ -34,4 +34,4 @@ export const tables = [
 ] as const;
 
 export type TableName = (typeof tables)[number]["name"];
-export type { ColumnDeclaration, RowOf, TableDeclaration } from "./declare.ts";
+export type { ColumnDeclaration, TableDeclaration } from "./declare.ts";
