@@ -3,6 +3,7 @@ import { exp, log, log10, pow } from "../numeric/elementary.ts";
 import { normalQuantile } from "../numeric/normal.ts";
 import { median, medianAbsoluteDeviation, quantile } from "../numeric/sums.ts";
 import { fitCensoredNormal } from "./censored-normal.ts";
+import { productLimit, productLimitQuantile } from "./kaplan-meier.ts";
 
 /** One concentration: its value, or its limit where `censored` is `left`. */
 export interface Concentration {
@@ -38,6 +39,9 @@ export interface NoBackground {
 
 export const clippingWidth = 3;
 const smallestLogSd = 0.02;
+/** Cells tied at one detection limit make the shortest half too short: the start is then at least this wide. */
+const narrowestCensoredStart = 0.1;
+const upperQuartileOfNormal = 0.6745;
 const maximumPasses = 20;
 const fewestSamples = 5;
 const fewestDetects = 3;
@@ -98,6 +102,10 @@ export function shortestHalf(values: readonly number[]): { centre: number; scale
  * the start at their limit and the estimate through the likelihood; they are never substituted. Readings above an
  * upper limit are left out.
  *
+ * With censored cells the kept set is one-sided and settled by the product-limit median and upper quartile
+ * (`(q75 - q50)/0.6745`), as far as they can be estimated: a mixing tail is spread evenly in lg C, and the likelihood,
+ * which it widens, would let the kept set creep up the tail. The reported m and s are the likelihood's on that set.
+ *
  * Refused (`no-background`) with fewer than 5 samples, fewer than 3 measured values kept, or more than 80 % of the
  * kept cells below detection (after Helsel 2012).
  */
@@ -109,7 +117,8 @@ export function background(cells: readonly Concentration[]): BackgroundFit | NoB
   const all = { y, isCensored, usable };
   if (count < fewestSamples) return refusal(all, usable, "too-few");
   const { centre, scale } = shortestHalf(y.filter((_, i) => usable[i]));
-  return clip(all, { m: centre, s: scale });
+  const hasCensored = isCensored.some((c, i) => c && usable[i]);
+  return clip(all, { m: centre, s: hasCensored ? Math.max(scale, narrowestCensoredStart) : scale });
 }
 
 interface Cells {
@@ -129,26 +138,34 @@ function clip(cells: Cells, start: LogLaw): BackgroundFit | NoBackground {
   let before: readonly boolean[] = [];
   for (let pass = 1; pass <= maximumPasses; pass++) {
     const next = keepSet(cells, law);
-    if (isSame(next, kept)) return settle(cells, kept, { law, pass, isUnsettled: false });
-    if (isSame(next, before)) {
-      const smaller = size(next) < size(kept) ? next : kept;
-      const settled = estimate(cells, smaller);
-      if (settled === undefined) return refusal(cells, smaller, "censored-heavy");
-      return settle(cells, smaller, { law: settled, pass, isUnsettled: false });
-    }
-    const estimated = estimate(cells, next);
+    if (isSame(next, kept)) return settle(cells, kept, { pass, isUnsettled: false });
+    if (isSame(next, before))
+      return settle(cells, size(next) < size(kept) ? next : kept, { pass, isUnsettled: false });
+    const estimated = clippingLaw(cells, next);
     if (estimated === undefined) return refusal(cells, next, "censored-heavy");
     before = kept;
     kept = next;
     law = estimated;
   }
-  return settle(cells, kept, { law, pass: maximumPasses, isUnsettled: true });
+  return settle(cells, kept, { pass: maximumPasses, isUnsettled: true });
 }
 
 function keepSet({ y, isCensored, usable }: Cells, { m, s }: LogLaw): readonly boolean[] {
   const hasCensored = isCensored.some((c, i) => c && usable[i]);
   const limit = clippingWidth * s;
   return y.map((v, i) => usable[i] && v - m <= limit && (hasCensored || m - v <= limit));
+}
+
+/** Centre and scale that decide the next kept set. */
+function clippingLaw(cells: Cells, kept: readonly boolean[]): LogLaw | undefined {
+  const values = cells.y.filter((_, i) => kept[i]);
+  const censored = cells.isCensored.filter((_, i) => kept[i]);
+  if (!censored.some(Boolean)) return estimate(cells, kept);
+  const steps = productLimit(values, censored);
+  const middle = productLimitQuantile(steps, 0.5);
+  const upper = productLimitQuantile(steps, 0.75);
+  if (middle === undefined || upper === undefined) return estimate(cells, kept);
+  return { m: middle, s: Math.max((upper - middle) / upperQuartileOfNormal, smallestLogSd) };
 }
 
 function estimate({ y, isCensored }: Cells, kept: readonly boolean[]): LogLaw | undefined {
@@ -162,12 +179,11 @@ function estimate({ y, isCensored }: Cells, kept: readonly boolean[]): LogLaw | 
     return { m: mean, s: Math.max(sd, smallestLogSd) };
   }
   const mad = madToSd * medianAbsoluteDeviation(detects);
-  const quartiles = (quantile(detects, 0.75) - quantile(detects, 0.25)) / 2 / 0.6745;
+  const quartiles = (quantile(detects, 0.75) - quantile(detects, 0.25)) / 2 / upperQuartileOfNormal;
   return { m: median(detects), s: Math.max(mad > 0 ? mad : quartiles, smallestLogSd) };
 }
 
 interface Settled {
-  readonly law: LogLaw;
   readonly pass: number;
   readonly isUnsettled: boolean;
 }
@@ -175,12 +191,14 @@ interface Settled {
 function settle(
   cells: Cells,
   kept: readonly boolean[],
-  { law, pass, isUnsettled }: Settled,
+  { pass, isUnsettled }: Settled,
 ): BackgroundFit | NoBackground {
   const censoredKept = cells.isCensored.filter((c, i) => c && kept[i]).length;
   const count = size(kept);
   if (count < fewestSamples) return refusal(cells, kept, "too-few");
   if (censoredKept > heaviestCensoring * count) return refusal(cells, kept, "censored-heavy");
+  const law = estimate(cells, kept);
+  if (law === undefined) return refusal(cells, kept, "censored-heavy");
   return {
     kind: "background",
     logMedian: law.m,

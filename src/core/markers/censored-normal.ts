@@ -9,7 +9,9 @@ export interface CensoredNormal {
 
 const logSqrtTwoPi = 0.9189385332046727;
 const maximumIterations = 200;
-const tolerance = 1e-12;
+const tolerance = 1e-11;
+const rounding = 1e-14;
+const smallestShare = 1e-12;
 
 /**
  * Maximum likelihood of a normal law where some values are only known to lie below a limit (left-censored).
@@ -32,26 +34,22 @@ export function fitCensoredNormal(values: readonly number[], isCensored: readonl
   let state = derivatives(scaled, isCensored, [gamma, eta]);
   for (let pass = 0; pass < maximumIterations; pass++) {
     const [stepGamma, stepEta] = newtonStep(state);
-    let share = 1;
-    let next = state;
-    for (; share > 1e-12; share /= 2) {
-      if (eta + share * stepEta <= 0) continue;
+    const near = rounding * (1 + Math.abs(state.value));
+    let share = eta + stepEta > 0 ? 1 : (-0.5 * eta) / stepEta;
+    let next = derivatives(scaled, isCensored, [gamma + share * stepGamma, eta + share * stepEta]);
+    while (next.value < state.value - near && share > smallestShare) {
+      share /= 2;
       next = derivatives(scaled, isCensored, [gamma + share * stepGamma, eta + share * stepEta]);
-      if (next.value >= state.value) break;
     }
     gamma += share * stepGamma;
     eta += share * stepEta;
     state = next;
-    if (Math.abs(stepGamma) + Math.abs(stepEta) < tolerance * (1 + Math.abs(gamma) + eta)) {
+    if (share * (Math.abs(stepGamma) + Math.abs(stepEta)) < tolerance * (1 + Math.abs(gamma) + eta)) {
       const logLikelihood = state.value - detects.length * log(spread);
       return { mean: centre + (spread * gamma) / eta, sd: spread / eta, logLikelihood };
     }
-    if (share <= 1e-12) break;
   }
-  const isFlat = Math.abs(state.first[0]) + Math.abs(state.first[1]) < 1e-6;
-  if (!isFlat) throw new Error(`fitCensoredNormal: no convergence in ${maximumIterations} passes`);
-  const logLikelihood = state.value - detects.length * log(spread);
-  return { mean: centre + (spread * gamma) / eta, sd: spread / eta, logLikelihood };
+  throw new Error(`fitCensoredNormal: expected convergence within ${maximumIterations} passes, got none`);
 }
 
 interface Derivatives {

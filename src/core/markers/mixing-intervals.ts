@@ -14,8 +14,8 @@ export interface ProfileInterval {
 
 export type ProfiledQuantity = "length" | "base" | "surface";
 
-const lengthGrid = 20;
-const baseGridSteps = 80;
+const lengthGrid = 16;
+const baseGridSteps = 60;
 const rootToleranceCm = 1e-5;
 
 /**
@@ -33,8 +33,8 @@ export function profileInterval(
   const cut = best.logLikelihood - drop;
   const { centre, lowest, highest } = extent(quantity, range, best);
   const f = (value: number) => profile(value) - cut;
-  const low = crossing(f, centre, { bound: lowest, step: range.finest / 16 });
-  const high = crossing(f, centre, { bound: highest, step: range.finest / 16 });
+  const low = crossing(f, centre, { bound: lowest, step: range.finest / 8 });
+  const high = crossing(f, centre, { bound: highest, step: range.finest / 8 });
   return { low: low.at, high: high.at, isOpenLow: low.isOpen, isOpenHigh: high.isOpen };
 }
 
@@ -97,7 +97,7 @@ function greatest(
     if (value > best) [best, bestAt] = [value, Math.min(x, high)];
   }
   const [from, to] = [Math.max(low, bestAt - step), Math.min(high, bestAt + step)];
-  const least = minimiseOnInterval((x) => -f(x), from, to, { tolerance: 1e-4 * (to - from) });
+  const least = minimiseOnInterval((x) => -f(x), from, to, { tolerance: 1e-3 * (to - from) });
   return Math.max(best, -least.value);
 }
 

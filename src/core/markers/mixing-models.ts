@@ -86,24 +86,26 @@ export function boxFitAt(likelihood: Likelihood, baseCm: number, lengthCm: numbe
  */
 export function fitBox(likelihood: Likelihood, range: SearchRange, start?: BoxFit): BoxFit {
   const starts = start === undefined ? gridStarts(likelihood, range) : [start];
-  const objective = ([base, logLength]: readonly number[]) => {
-    const length = exp(logLength);
-    const isInside =
-      base >= range.lowestBase &&
-      base <= range.highestBase &&
-      length >= range.shortest &&
-      length <= range.longest;
-    return isInside ? -boxFitAt(likelihood, base, length).logLikelihood : Number.POSITIVE_INFINITY;
+  const within = ([base, logLength]: readonly number[]): BoxFit =>
+    boxFitAt(
+      likelihood,
+      Math.min(Math.max(base, range.lowestBase), range.highestBase),
+      Math.min(Math.max(exp(logLength), range.shortest), range.longest),
+    );
+  const objective = (point: readonly number[]) => {
+    const fit = within(point);
+    const outside = Math.abs(point[0] - fit.baseCm) / range.finest + Math.abs(point[1] - log(fit.lengthCm));
+    return outside * outside - fit.logLikelihood;
   };
   const refined = starts.map(({ baseCm, lengthCm }) => {
     const steps = [range.finest / 4, lengthCm < range.longest / 2 ? 0.2 : -0.2];
     const { point } = nelderMead(objective, [baseCm, log(lengthCm)], {
       steps,
-      xTolerance: 1e-8,
-      fTolerance: 1e-10,
+      xTolerance: 1e-6,
+      fTolerance: 1e-8,
       maximumIterations: 20000,
     });
-    return boxFitAt(likelihood, point[0], exp(point[1]));
+    return within(point);
   });
   return refined.reduce((a, b) => (b.logLikelihood > a.logLikelihood ? b : a));
 }
