@@ -1,12 +1,13 @@
 import { alignSections } from "./alignment/align-sections.ts";
 import type { Analysis } from "./analysis-result.ts";
 import type { Progress } from "./basis.ts";
-import { findMarkers } from "./markers/find-markers.ts";
 import { boundaryIn } from "./markers/boundary.ts";
+import { findMarkers } from "./markers/find-markers.ts";
+import type { Markers } from "./markers/result.ts";
 import { estimateRanges } from "./ranges/range-ends.ts";
 import { settleFinds } from "./study/finds.ts";
-import { assignRoles, type Boundary, markBelowCeiling } from "./study/roles.ts";
 import type { Study } from "./study/model.ts";
+import { assignRoles, type Boundary, markBelowCeiling } from "./study/roles.ts";
 import { answerTiming } from "./timing/answer.ts";
 
 const quiet: Progress = () => {};
@@ -21,7 +22,11 @@ const quiet: Progress = () => {};
  * analysis.timing.answers.filter((answer) => answer.question === "one-level");
  */
 export function analyse(study: Study, progress: Progress = quiet): Analysis {
-  const markers = findMarkers(study, progress);
+  return analyseFrom(findMarkers(study, progress), study, progress);
+}
+
+/** The flow from the markers on: for callers that surveyed the sections apart. */
+export function analyseFrom(markers: Markers, study: Study, progress: Progress = quiet): Analysis {
   const alignment = alignSections(study, markers);
   const settled = settleFinds(study);
   const boundaries = new Map<string, Boundary>();

@@ -1,9 +1,6 @@
 export { analyse } from "../core/analysis.ts";
 export type { Analysis } from "../core/analysis-result.ts";
-export type { Study } from "../core/study/model.ts";
-export type { Problem } from "../core/study/problem.ts";
-export { readStudy } from "../core/tables/read-study.ts";
-export { writeCsv } from "../core/tables/write-csv.ts";
+export * from "../core/index.ts";
 export { VERSION } from "../core/version.ts";
 export type { Finding } from "./findings/finding.ts";
 export { findings } from "./findings/index.ts";

@@ -1,5 +1,6 @@
 import type { Basis, Caution, Progress } from "../basis.ts";
-import type { Study } from "../study/model.ts";
+import type { Section, Study } from "../study/model.ts";
+import type { Settings } from "../study/settings.ts";
 import { type AnomalyOptions, anomaliesOf, type JudgedAnomaly } from "./anomalies.ts";
 import { anomalyBasis } from "./anomaly-test.ts";
 import { backgroundBasis } from "./background.ts";
@@ -35,53 +36,79 @@ interface Examined {
   readonly anomalies: readonly JudgedAnomaly[];
 }
 
+/** What one section's measurements and given horizons say, before sections are compared. */
+export interface SectionSurvey {
+  readonly section: string;
+  readonly horizons: readonly MarkerHorizon[];
+  readonly profiles: readonly Profile[];
+  readonly flags: readonly Flag[];
+  readonly cautions: readonly Caution[];
+}
+
 /**
  * Marker horizons of every section: given ones as stated, found ones from iridium, and the main horizon H. Every
  * mass-fraction element with at least five samples in a section gets its profile; iridium is tested first and alone,
  * the other elements of a section share one family of tests. Pure: the same study gives the same bits.
  */
 export function findMarkers(study: Study, progress?: Progress): Markers {
-  const { confidence, replicates, seed, boundary } = study.settings;
-  const options = { level: confidence, replicates, seed };
-  const cautions: Caution[] = [];
-  const flags: Flag[] = [];
-  const horizons: MarkerHorizon[] = [];
-  const profiles: Profile[] = [];
-  study.sections.forEach((section, i) => {
+  const surveys = study.sections.map((section, i) => {
     progress?.("markers", i, study.sections.length);
-    horizons.push(...givenHorizons(section, confidence));
-    const elements = elementsOf(section.measurements);
-    const read = elements.map((analyte) => elementProfile(section, analyte));
-    cautions.push(...read.flatMap((profile) => profileCautions(profile)));
-    const usable = read.filter((profile) => profile.samples.length >= fewestSamples);
-    const tested = usable.map((profile) => testProfile(section, profile));
-    const first = judgeProfiles(tested.filter(({ profile }) => profile.analyte === horizonElement));
-    const others = judgeProfiles(tested.filter(({ profile }) => profile.analyte !== horizonElement));
-    for (const judged of [...first, ...others]) {
-      const examined = examine(judged, options);
-      profiles.push(reportedProfile(examined));
-      flags.push(...profileFlags(judged));
-      if (judged.profile.analyte !== horizonElement) continue;
-      const found = foundHorizons(judged, examined.anomalies, confidence);
-      horizons.push(...found);
-      for (const horizon of found) {
-        const anomaly = examined.anomalies.find((a) => a.anomaly.name === horizon.name);
-        if (anomaly === undefined) continue;
-        flags.push(...horizonFlags(judged, anomaly, horizon));
-        cautions.push(...misfitCautions(horizon, anomaly));
-      }
-    }
+    return surveySection(section, study.settings);
   });
   progress?.("markers", study.sections.length, study.sections.length);
-  const settled = settleMainHorizon(horizons, boundary);
+  return settleMarkers(surveys, study.settings);
+}
+
+/** Markers of a study from the surveys of its sections, in their order. */
+export function settleMarkers(surveys: readonly SectionSurvey[], { boundary }: Settings): Markers {
+  const settled = settleMainHorizon(
+    surveys.flatMap((survey) => survey.horizons),
+    boundary,
+  );
+  const profiles = surveys.flatMap((survey) => survey.profiles);
   return {
     horizons: settled.horizons,
     profiles,
-    flags,
+    flags: surveys.flatMap((survey) => survey.flags),
     main: settled.main,
-    cautions: [...cautions, ...settled.cautions],
+    cautions: [...surveys.flatMap((survey) => survey.cautions), ...settled.cautions],
     basis: profiles.length > 0 ? elementBasis : [],
   };
+}
+
+/** Horizons, profiles and flags of one section: it needs no other section, so sections can be surveyed apart. */
+export function surveySection(section: Section, { confidence, replicates, seed }: Settings): SectionSurvey {
+  const options = { level: confidence, replicates, seed };
+  const read = elementsOf(section.measurements).map((analyte) => elementProfile(section, analyte));
+  const tested = read
+    .filter((profile) => profile.samples.length >= fewestSamples)
+    .map((profile) => testProfile(section, profile));
+  const first = judgeProfiles(tested.filter(({ profile }) => profile.analyte === horizonElement));
+  const others = judgeProfiles(tested.filter(({ profile }) => profile.analyte !== horizonElement));
+  const examined = [...first, ...others].map((judged) => examine(judged, options));
+  const found = examined.flatMap((one) => foundIn(one, confidence));
+  return {
+    section: section.name,
+    horizons: [...givenHorizons(section, confidence), ...found.map(({ horizon }) => horizon)],
+    profiles: examined.map(reportedProfile),
+    flags: [
+      ...examined.flatMap(({ judged }) => profileFlags(judged)),
+      ...found.flatMap(({ judged, anomaly, horizon }) => horizonFlags(judged, anomaly, horizon)),
+    ],
+    cautions: [
+      ...read.flatMap(profileCautions),
+      ...found.flatMap(({ horizon, anomaly }) => misfitCautions(horizon, anomaly)),
+    ],
+  };
+}
+
+/** The horizons that an examined profile makes, each with the anomaly behind it; only iridium makes horizons. */
+function foundIn({ judged, anomalies }: Examined, confidence: number) {
+  if (judged.profile.analyte !== horizonElement) return [];
+  return foundHorizons(judged, anomalies, confidence).flatMap((horizon) => {
+    const anomaly = anomalies.find((a) => a.anomaly.name === horizon.name);
+    return anomaly === undefined ? [] : [{ judged, anomaly, horizon }];
+  });
 }
 
 function elementsOf(measurements: Study["sections"][number]["measurements"]): readonly string[] {

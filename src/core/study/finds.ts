@@ -26,7 +26,7 @@ function settleSection(section: Section, study: Study): SettledFinds {
   const taxa: LocalTaxon[] = [];
   for (const [name, ofTaxon] of byTaxon) {
     const merged = mergeHorizons(ofTaxon);
-    finds.push(...merged.map(({ strict: _strict, inclusive: _inclusive, ...find }) => find));
+    finds.push(...merged.map(({ named: _named, strict: _strict, inclusive: _inclusive, ...find }) => find));
     const used = merged.filter((find) => find.used === "yes");
     if (used.length > 0) taxa.push(localTaxon(name, { section, study, used, judged: ofTaxon, searched }));
   }
@@ -40,6 +40,8 @@ function settleSection(section: Section, study: Study): SettledFinds {
 }
 
 interface JudgedFind extends Find {
+  /** The name without qualifier, before synonymy. */
+  readonly named: string;
   readonly strict: boolean;
   readonly inclusive: boolean;
 }
@@ -50,6 +52,7 @@ function judge(occurrence: Occurrence, section: Section, study: Study): JudgedFi
   return {
     origin: occurrence.origin,
     section: section.name,
+    named: occurrence.taxon,
     verbatim: occurrence.verbatim,
     accepted: acceptedName(operationalName(occurrence), study.taxa),
     heightM: occurrence.heightM,
@@ -106,7 +109,7 @@ export function acceptedName(name: string, taxa: ReadonlyMap<string, Taxon>): st
   }
 }
 
-export function groupOf(taxon: string, study: Study): string {
+function groupOf(taxon: string, study: Study): string {
   return study.taxa.get(taxon)?.group ?? "ungrouped";
 }
 
@@ -135,7 +138,7 @@ interface Gathering {
 }
 
 function localTaxon(taxon: string, { section, study, used, judged, searched }: Gathering): LocalTaxon {
-  const group = groupOf(taxon, study);
+  const group = groupOf(study.taxa.has(taxon) ? taxon : judged[0].named, study);
   const upward = used.toSorted((a, b) => a.heightM - b.heightM);
   const lastStrictM = highest(judged.filter((find) => find.strict));
   return {
