@@ -42,6 +42,7 @@ const slowestRateMPerMa = 1;
 /** Normal cosmic rain of iridium, ng/cm2 per million years (Kyte & Wasson 1986, doi:10.1126/science.232.4755.1225). */
 const cosmicRain = 9;
 const fineSampleCm = 1;
+const rounding = 1e-7;
 const strongBioturbation = 3;
 
 /** Flags of a whole profile: its background, errors and densities. `horizon` names the element. */
@@ -171,7 +172,7 @@ function noTail({ section, profile }: JudgedProfile, { mixing, run }: JudgedAnom
   const thickestCm = Math.max(...near.map((s) => (s.topM - s.baseM) * centimetresPerMetre));
   const above = section.beds.find((bed) => bed.topM > horizon.positionM && bed.bioturbation !== undefined);
   const bioturbation = above?.bioturbation ?? 0;
-  return thickestCm <= fineSampleCm && bioturbation >= strongBioturbation
+  return thickestCm <= fineSampleCm + rounding && bioturbation >= strongBioturbation
     ? { lengthHighCm: upper, thickestCm, bioturbation }
     : undefined;
 }

@@ -31,6 +31,8 @@ export interface Likelihood {
 const halfLogTwoPi = 0.9189385332046727;
 const logSqrtTwoPi = halfLogTwoPi;
 const maximumIterations = 60;
+/** Beyond this many standard deviations under its limit a censored cell says nothing: 1 - Phi(7) is 1e-12. */
+const certain = 7;
 
 /**
  * Likelihood of `C_i = F u_i + B` with fluence F >= 0 and background B: measured cells `N(C_i; model, s_i^2)`,
@@ -166,6 +168,7 @@ function slopes({ isCensored, values, sds }: Columns, response: Float64Array, { 
     let slope = z / sds[i];
     let bend = 1;
     if (isCensored[i] === 1) {
+      if (z > certain) continue;
       const logShare = logNormalCdf(z);
       const mills = exp(-0.5 * z * z - logSqrtTwoPi - logShare);
       value += logShare;

@@ -27,6 +27,8 @@ function expectedOf(start: string): Record<string, unknown> & readonly unknown[]
   return row.expected as unknown as Record<string, unknown> & readonly unknown[];
 }
 
+const indices = (flags: readonly boolean[]) => flags.flatMap((flag, i) => (flag ? [i] : []));
+
 function fitted() {
   const fit = background(samples);
   if (fit.kind !== "background") throw new Error(fit.reason);
@@ -62,7 +64,6 @@ describe("background of the worked profile", () => {
 
   it("flags the published samples, by false discovery rate and strictly", () => {
     const p = anomalyTest(samples, fitted()).map((test) => test.p);
-    const indices = (flags: readonly boolean[]) => flags.flatMap((flag, i) => (flag ? [i] : []));
     expect(indices(benjaminiHochberg(p, 0.05).isFlagged)).toEqual(expectedOf("BH q=0.05"));
     expect(indices(holm(p, 0.05).isFlagged)).toEqual(expectedOf("Holm alpha"));
   });
