@@ -111,7 +111,14 @@ export function HeightAxis({ x, y, reading, isQuiet = false }: HeightAxisProps):
         strokeWidth={isQuiet ? 0.35 : 0.5}
       />
       {labelled.map((tick) => (
-        <PlateText key={round(tick.y)} x={x - TICK - 2} y={tick.y + lift} style={TEXT.unit} anchor="end" colour={colour}>
+        <PlateText
+          key={round(tick.y)}
+          x={x - TICK - 2}
+          y={tick.y + lift}
+          style={TEXT.unit}
+          anchor="end"
+          colour={colour}
+        >
           {tick.label}
         </PlateText>
       ))}

@@ -25,12 +25,12 @@ export { lithologyLegend, PATTERN_CREDIT } from "./lithology/lithology-legend.ts
 export { HorizonLine, type HorizonMark } from "./marks/horizon-line.tsx";
 export { Taper, type TaperStep } from "./marks/taper.tsx";
 export { Plate, POINTS_PER_MM } from "./plate.tsx";
-export { renderPlate } from "./render-plate.ts";
-export { fitText, type TextStyle, textWidth, wrapText } from "./text.ts";
-export { COLOURS, GROUP_SIGNS, type GroupSign, groupSign, SMALLEST_TEXT } from "./theme.ts";
 export { type PlateFile, plates } from "./plates/all-plates.ts";
 export type { Drawing, Panel, SectionView, VerticalScale, View } from "./plates/drawing.ts";
 export { fenceDiagram } from "./plates/fence-diagram.tsx";
 export { markerPlate } from "./plates/marker-plate.tsx";
 export { type PagedView, rangeChart, rangeChartPages } from "./plates/range-chart.tsx";
 export { type TimingView, timingPlate } from "./plates/timing-plate.tsx";
+export { renderPlate } from "./render-plate.ts";
+export { fitText, type TextStyle, textWidth, wrapText } from "./text.ts";
+export { COLOURS, GROUP_SIGNS, type GroupSign, groupSign, SMALLEST_TEXT } from "./theme.ts";

@@ -1,9 +1,9 @@
 import type { ReactElement } from "react";
 import { type ContactKind, contactPath, contactStroke } from "./columns/contact.ts";
+import { levelSetPaint } from "./columns/level-column.tsx";
 import { filledTick, openTick } from "./columns/search-rail.tsx";
 import type { PatternId } from "./lithology/pattern-tiles.ts";
 import { patternFill } from "./lithology/patterns.tsx";
-import { levelSetPaint } from "./columns/level-column.tsx";
 import { arrowPath, boxPath, markPath } from "./marks/mark-path.ts";
 import { barPaint, type RangeBar } from "./marks/taper.tsx";
 import { round } from "./numbers.ts";
@@ -114,7 +114,13 @@ function swatch(plateId: string, sign: LegendSign): ReactElement {
       return <path d={boxPath(0, middleY - 2.3, SWATCH_WIDTH, 4.6)} {...barPaint(sign.bar, sign.colour)} />;
     case "group":
       return (
-        <PlateText x={middleX} y={middleY + 2.5} style={TEXT.labelStrong} anchor="middle" colour={sign.colour}>
+        <PlateText
+          x={middleX}
+          y={middleY + 2.5}
+          style={TEXT.labelStrong}
+          anchor="middle"
+          colour={sign.colour}
+        >
           {sign.letter}
         </PlateText>
       );
@@ -123,7 +129,14 @@ function swatch(plateId: string, sign: LegendSign): ReactElement {
     case "set-joint":
       return <path d={boxPath(middleX - 4, 0, 8, SWATCH_HEIGHT)} {...levelSetPaint("joint")} />;
     case "duration":
-      return <path d={`M${middleX - 3} 0h6m-3 0v${SWATCH_HEIGHT}m-3 0h6`} fill="none" stroke={COLOURS.ink} strokeWidth={0.7} />;
+      return (
+        <path
+          d={`M${middleX - 3} 0h6m-3 0v${SWATCH_HEIGHT}m-3 0h6`}
+          fill="none"
+          stroke={COLOURS.ink}
+          strokeWidth={0.7}
+        />
+      );
     case "main-horizon":
       return (
         <>

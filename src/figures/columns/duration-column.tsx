@@ -26,7 +26,9 @@ export function DurationColumn({ x, y, fromM, leastM, mostM }: DurationColumnPro
     <g>
       <ColumnHead x={x} top={spanOf(y).top} title="Duration" unit="least, most" />
       {least !== "" && <path d={least} fill="none" stroke={COLOURS.ink} strokeWidth={1} />}
-      {most !== "" && <path d={most} fill="none" stroke={COLOURS.ink} strokeWidth={0.6} strokeDasharray="2 1.2" />}
+      {most !== "" && (
+        <path d={most} fill="none" stroke={COLOURS.ink} strokeWidth={0.6} strokeDasharray="2 1.2" />
+      )}
     </g>
   );
 }

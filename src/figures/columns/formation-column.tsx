@@ -60,7 +60,8 @@ export function namedRock(
   for (const bed of beds.toSorted((a, b) => a.baseM - b.baseM)) {
     const before = units.at(-1);
     if (bed.name === "") continue;
-    if (before !== undefined && before.name === bed.name) units[units.length - 1] = { ...before, topM: bed.topM };
+    if (before !== undefined && before.name === bed.name)
+      units[units.length - 1] = { ...before, topM: bed.topM };
     else units.push(bed);
   }
   return units;

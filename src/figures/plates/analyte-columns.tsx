@@ -16,8 +16,6 @@ interface AnalyteColumnOptions {
   /** Only these analytes; default all that were measured. */
   readonly only?: readonly string[];
   readonly width?: number;
-  /** Error bars of one standard deviation. */
-  readonly hasErrors?: boolean;
 }
 
 const LONGEST_HEAD = 90;
@@ -38,27 +36,34 @@ export function analyteColumns(
 function analyteColumn(
   series: AnalyteSeries,
   { y }: SectionFrame,
-  { width: wanted = WIDTH, hasErrors = false }: AnalyteColumnOptions,
+  { width: wanted = WIDTH }: AnalyteColumnOptions,
 ): readonly PlateColumn[] {
   const title = fitText(series.title, LONGEST_HEAD, TEXT.heading);
   const unit = fitText(headUnit(series), LONGEST_HEAD, TEXT.unit);
   const body = series.analyte === "iridium" ? wanted * 1.4 : series.kind === "polarity" ? 15 : wanted;
-  const points = hasErrors ? series.points : series.points.map(({ low: _, high: __, ...point }) => point);
-  const drawn = drawing({ ...series, points, title, unit }, body);
+  const drawn = drawing({ ...series, title, unit }, body);
   if (drawn === undefined) return [];
   return [
     {
       key: series.analyte,
       width: Math.max(body, columnHeadWidth(title, series.kind === "polarity" ? "" : unit)),
       draw: (x) => drawn(x, y),
-      legend: analyteLegend(series, hasErrors),
+      legend: analyteLegend(series),
     },
   ];
 }
 
-function headUnit({ kind, unit }: AnalyteSeries): string {
-  if (kind === "isotope" && unit === "‰") return "‰";
-  return kind === "concentration" ? `${unit}, log` : unit;
+function headUnit(series: AnalyteSeries): string {
+  return isLogarithmic(series) ? `${series.unit}, log` : series.unit;
+}
+
+const WIDE_RANGE = 20;
+
+/** Concentrations that span more than an order of magnitude; iridium always. */
+function isLogarithmic({ analyte, kind, points }: AnalyteSeries): boolean {
+  if (kind !== "concentration") return false;
+  const [low = 1, high = 1] = extent(points.map((point) => point.value).filter((value) => value > 0));
+  return analyte === "iridium" || high > WIDE_RANGE * low;
 }
 
 type Drawn = ((x: number, y: SectionFrame["y"]) => React.ReactNode) | undefined;
@@ -75,39 +80,56 @@ function drawing(series: AnalyteSeries, width: number): Drawn {
     return (x, y) => <CountColumn {...{ x, width, y, title, unit, bars }} {...column} />;
   }
   if (points.length === 0) return undefined;
-  const column = kind === "concentration" ? concentrationScale(series, width) : linearScale(series, width);
+  const column = isLogarithmic(series) ? logarithmicScale(series, width) : linearScale(series, width);
   return (x, y) => (
-    <ValueColumn {...{ x, width, y, title, unit, points, background, curve }} {...column} isJoined={kind === "isotope"} />
+    <ValueColumn
+      {...{ x, width, y, title, unit, points, background, curve }}
+      {...column}
+      isJoined={kind === "isotope"}
+    />
   );
 }
 
-/** Logarithmic from the smallest to the largest positive value, limit, background or fitted value. */
-function concentrationScale({ points, background = [], curve }: Omit<AnalyteSeries, "background"> & { readonly background?: readonly number[] }, width: number) {
+/** From the smallest to the largest positive value, limit, background or fitted value. */
+function logarithmicScale({ points, background, curve }: AnalyteSeries, width: number) {
   const values = [...points, ...curve].map((point) => point.value);
-  const [low, high] = extent([...values, ...background].filter((value) => value > 0));
+  const [low, high] = extent([...values, ...(background ?? [])].filter((value) => value > 0));
   if (low === undefined || high === undefined) return linearColumn([0, 1], width);
   return logColumn([low / LOG_FACTOR, high * LOG_FACTOR], width);
 }
 
-function linearScale({ points, kind }: AnalyteSeries, width: number) {
-  const values = points.map((point) => point.value);
-  const [low = 0, high = 1] = extent(kind === "share" ? [0, ...values] : values);
+function linearScale({ points, kind, background }: AnalyteSeries, width: number) {
+  const startsAtZero = kind === "share" || kind === "concentration";
+  const values = [...points.map((point) => point.value), ...(background ?? []), ...(startsAtZero ? [0] : [])];
+  const [low = 0, high = 1] = extent(values);
   const room = (high - low || Math.abs(high) || 1) * 0.06;
-  return linearColumn([kind === "share" ? 0 : low - room, high + room], width);
+  return linearColumn([startsAtZero ? Math.min(0, low) : low - room, high + room], width);
 }
 
-function analyteLegend({ points, background, curve, analyte }: AnalyteSeries, hasErrors: boolean): readonly LegendEntry[] {
+type ValueSign = "value" | "anomaly" | "limit" | "background" | "curve";
+
+function entry(kind: ValueSign, label: string): LegendEntry {
+  return { sign: { kind }, label };
+}
+
+function analyteLegend({ points, background, curve, analyte }: AnalyteSeries): readonly LegendEntry[] {
   if (analyte === "polarity") return [];
-  const entry = (kind: "value" | "anomaly" | "limit" | "background" | "curve", label: string): LegendEntry => ({
-    sign: { kind },
-    label,
-  });
-  const hasBars = hasErrors && points.some((point) => point.low !== undefined);
   return [
-    ...(points.length > 0 ? [entry("value", hasBars ? "measured, ± 1 standard deviation" : "measured")] : []),
+    ...(points.length > 0 ? [entry("value", "measured")] : []),
     ...(points.some((point) => point.isAnomaly) ? [entry("anomaly", "above background")] : []),
     ...(points.some((point) => point.censored) ? [entry("limit", "limit only")] : []),
     ...(background ? [entry("background", "background")] : []),
     ...(curve.length > 0 ? [entry("curve", "fitted mixing")] : []),
   ];
+}
+
+/** What the bars through measured values are, where any is drawn. */
+export function errorBarNotes({ section }: SectionFrame, only?: readonly string[]): readonly string[] {
+  const hasErrors = section.measurements.some(
+    ({ analyte, sigma, trials }) =>
+      sigma !== undefined && trials === undefined && (only?.includes(analyte) ?? true),
+  );
+  return hasErrors
+    ? ["Bars through measured values, where longer than the mark: one standard deviation each way."]
+    : [];
 }

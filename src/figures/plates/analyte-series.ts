@@ -19,7 +19,17 @@ export interface AnalyteSeries {
 }
 
 /** Order in which columns stand; whatever else was measured follows. */
-const ORDER = ["iridium", "nickel", "shocked-quartz", "spherules", "d13c", "d18o", "mercury", "toc", "polarity"];
+const ORDER = [
+  "iridium",
+  "nickel",
+  "shocked-quartz",
+  "spherules",
+  "d13c",
+  "d18o",
+  "mercury",
+  "toc",
+  "polarity",
+];
 
 export function analyteSeries(analysis: Analysis, section: Section): readonly AnalyteSeries[] {
   const byAnalyte = group(section.measurements, (measurement) => measurement.analyte);
@@ -37,13 +47,20 @@ function seriesOf(measurements: readonly Measurement[], profile: Profile | undef
   const analyte = measurements[0]?.analyte ?? "";
   const kind = kindOf(measurements);
   const unit = kind === "share" || kind === "rate" ? { unit: "", factor: 1 } : drawnUnit(measurements);
-  const flagged = new Set(profile?.samples.filter((sample) => sample.flagged).map((sample) => sample.heightM));
+  const flagged = new Set(
+    profile?.samples.filter((sample) => sample.flagged).map((sample) => sample.heightM),
+  );
   const base = { analyte, kind, title: analyteTitle(analyte), ...fitted(profile, unit) };
   if (kind === "share")
     return { ...base, unit: "% of grains", points: measurements.flatMap(sharePoint), bars: [] };
   if (kind === "rate") {
     const massUnit = measurements[0]?.amountUnit;
-    return { ...base, unit: massUnit ? `per ${massUnit}` : "count", points: [], bars: measurements.flatMap(rateBar) };
+    return {
+      ...base,
+      unit: massUnit ? `per ${massUnit}` : "count",
+      points: [],
+      bars: measurements.flatMap(rateBar),
+    };
   }
   const points = measurements.map((measurement) => ({
     ...valuePoint(measurement, unit),

@@ -7,9 +7,12 @@ const LONGEST = 120;
 export function axisWords({ section, vertical, main, second }: SectionFrame): string {
   const own = `${section.axis} in ${section.unit}${section.datum === "" ? "" : ` from ${section.datum.slice(0, LONGEST)}`}`;
   const horizon = main?.horizon.slice(0, LONGEST) ?? "";
-  if (vertical === "common") return `Metres on the common scale, 0 at ${horizon || "the datum"}; small figures: ${own}.`;
+  if (vertical === "common")
+    return `Metres on the common scale, 0 at ${horizon || "the datum"}; small figures: ${own}.`;
   if (vertical === "from-horizon" && main !== undefined)
     return `Metres from ${horizon}, placed at ${formatGiven(main.positionM, section)}; small figures: ${own}.`;
   const capital = own.slice(0, 1).toUpperCase() + own.slice(1);
-  return second && main ? `${capital}; small figures: metres from ${horizon}.` : `${capital}; no main horizon is placed here.`;
+  return second && main
+    ? `${capital}; small figures: metres from ${horizon}.`
+    : `${capital}; no main horizon is placed here.`;
 }

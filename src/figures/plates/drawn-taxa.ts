@@ -87,6 +87,8 @@ function openFinds(finds: readonly Find[], section: string): ReadonlyMap<string,
 
 /** Names in a section that rest on finds set aside alone: they have no range to draw. */
 export function namesWithoutRange(analysis: Analysis, section: string): readonly string[] {
-  const drawn = new Set(analysis.taxa.filter((taxon) => taxon.section === section).map((taxon) => taxon.taxon));
+  const drawn = new Set(
+    analysis.taxa.filter((taxon) => taxon.section === section).map((taxon) => taxon.taxon),
+  );
   return [...openFinds(analysis.finds, section).keys()].filter((name) => !drawn.has(name)).toSorted();
 }

@@ -1,37 +1,42 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import { HeightAxis, heightAxisWidth } from "../height-axis.tsx";
-import { horizonLegend } from "./horizon-labels.tsx";
 import type { Drawing, View } from "./drawing.ts";
+import { FenceLabels, labelColumns, labelColumnWidth } from "./fence-labels.tsx";
 import { correlations } from "./fence-lines.ts";
-import { FenceLabels, fenceLabels, fenceLabelsWidth } from "./fence-labels.tsx";
-import { FenceTies } from "./fence-ties.tsx";
 import { type FencePosts, fencePosts } from "./fence-posts.ts";
-import { PostPanel, postPanel } from "./post-panel.tsx";
-import { placeColumns, type PlateColumn } from "./plate-columns.ts";
+import { FenceTies } from "./fence-ties.tsx";
+import { horizonLegend } from "./horizon-labels.tsx";
+import { type PlateColumn, placeColumns } from "./plate-columns.ts";
 import { BODY_TOP, MARGIN, setSheet } from "./plate-sheet.tsx";
+import { PostPanel, postPanel } from "./post-panel.tsx";
 import { scaleColumn } from "./scale-column.tsx";
 import { horizonReading } from "./section-frame.ts";
 
 const BODY_HEIGHT = 400;
-const GAP = 64;
+const GAP = 84;
+const HEADS = 14;
 
 /** Sections side by side, flattened on the datum, with the horizons they share. */
-export function fenceDiagram(analysis: Analysis, view: View & { readonly bodyHeight?: number } = {}): Drawing {
-  const span = { top: BODY_TOP, bottom: BODY_TOP + (view.bodyHeight ?? BODY_HEIGHT) };
+export function fenceDiagram(
+  analysis: Analysis,
+  view: View & { readonly bodyHeight?: number } = {},
+): Drawing {
+  const top = BODY_TOP + HEADS;
+  const span = { top, bottom: top + (view.bodyHeight ?? BODY_HEIGHT) };
   const fence = fencePosts(analysis, view, span);
   const axis = placeColumns(axisOf(fence), MARGIN);
   const panels = placePanels(analysis, fence, axis.right + 20);
   const datum = fence.commonY && analysis.alignment.datum;
   const ties = fence.commonY ? correlations(panels, analysis.alignment.horizons) : [];
   const right = panels.at(-1)?.right ?? MARGIN;
-  const labels = fenceLabels(panels, datum);
+  const labels = labelColumns(panels, datum);
   const marks = panels.flatMap(({ horizons }) => horizons).map(({ horizon }) => rankOf(horizon === datum));
   return setSheet({
     id: "fence",
     title: `${analysis.study.name}: fence diagram`.slice(0, 200),
     subtitle: subtitleOf(datum),
     description: describe(analysis, panels.length, datum),
-    right: right + fenceLabelsWidth(labels),
+    right: right + labelColumnWidth(labels.at(-1)),
     bottom: span.bottom + 12,
     columns: axis.placed,
     body: (
@@ -40,10 +45,15 @@ export function fenceDiagram(analysis: Analysis, view: View & { readonly bodyHei
         {panels.map((panel) => (
           <PostPanel key={panel.section.name} panel={panel} datum={datum} />
         ))}
-        <FenceLabels span={span} labels={labels} />
+        {labels.map((column) => (
+          <FenceLabels key={column.x} span={span} column={column} />
+        ))}
       </g>
     ),
-    legend: [...panels.flatMap(({ columns }) => columns.flatMap((column) => column.legend ?? [])), ...horizonLegend(marks)],
+    legend: [
+      ...panels.flatMap(({ columns }) => columns.flatMap((column) => column.legend ?? [])),
+      ...horizonLegend(marks),
+    ],
     patterns: panels.flatMap(({ columns }) => columns.flatMap((column) => column.patterns ?? [])),
     notes: notesOf(fence, analysis),
     panels: panels.map(({ section, left, right: end, y }) => ({
@@ -59,7 +69,13 @@ export function fenceDiagram(analysis: Analysis, view: View & { readonly bodyHei
 }
 
 function rankOf(isMain: boolean) {
-  return { name: "", label: "", detail: "", heightM: 0, rank: isMain ? ("main" as const) : ("other" as const) };
+  return {
+    name: "",
+    label: "",
+    detail: "",
+    heightM: 0,
+    rank: isMain ? ("main" as const) : ("other" as const),
+  };
 }
 
 function axisOf({ commonY, lens, posts }: FencePosts): readonly PlateColumn[] {
@@ -94,7 +110,8 @@ function placePanels(analysis: Analysis, { posts }: FencePosts, left: number) {
 }
 
 function subtitleOf(datum: string | undefined): string {
-  if (datum === undefined) return "Each section stands on its own base: no datum places them against each other.";
+  if (datum === undefined)
+    return "Each section stands on its own base: no datum places them against each other.";
   return `Metres from ${datum.slice(0, 120)}, on which the sections are flattened; each section's own readings beside it.`;
 }
 
@@ -107,10 +124,18 @@ function describe(analysis: Analysis, drawn: number, datum: string | undefined):
 function notesOf({ unaligned, posts, commonY }: FencePosts, { alignment }: Analysis): readonly string[] {
   return [
     ...(posts.length === 0 ? ["The study has no section to draw."] : []),
-    ...(posts.length > 0 && commonY === undefined ? ["Heights of different sections cannot be compared here: declare one horizon for them all."] : []),
-    ...(unaligned.length > 0 ? [`Not drawn, since the datum is not placed there: ${unaligned.map((name) => name.slice(0, 80)).join(", ")}.`] : []),
+    ...(posts.length > 0 && commonY === undefined
+      ? ["Heights of different sections cannot be compared here: declare one horizon for them all."]
+      : []),
+    ...(unaligned.length > 0
+      ? [
+          `Not drawn, since the datum is not placed there: ${unaligned.map((name) => name.slice(0, 80)).join(", ")}.`,
+        ]
+      : []),
     ...(commonY && alignment.sections.length > 1
-      ? ["Solid ties: horizons the sections were lined up on. Dashed ties: the same name in neighbouring sections, not used."]
+      ? [
+          "Solid ties: horizons the sections were lined up on. Dashed ties: the same name in neighbouring sections, not used.",
+        ]
       : []),
   ];
 }

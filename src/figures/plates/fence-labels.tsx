@@ -14,83 +14,96 @@ export interface FenceLabel {
   readonly detail: string;
   readonly y: number;
   readonly isDatum: boolean;
-  /** Right edge of the section the label stands beside. */
+}
+
+/** What stands at the right of one section: labels, and the ties that leave it, which labels keep clear of. */
+export interface LabelColumn {
   readonly x: number;
-  readonly isLast: boolean;
+  readonly labels: readonly FenceLabel[];
+  readonly tiesY: readonly number[];
 }
 
 const LONGEST = 110;
-const LONGEST_BETWEEN = 50;
+const LONGEST_BETWEEN = 70;
 const LEAD = 10;
 const LINE = 8.4;
 const STEP = 2 * LINE + 2.6;
 
-export function fenceLabels(panels: readonly PlacedPost[], datum: string | undefined): readonly FenceLabel[] {
-  const labels = new Map<string, FenceLabel>();
-  panels.forEach(({ section, horizons, y, right }, i) => {
-    const isLast = i === panels.length - 1;
-    const room = isLast ? LONGEST : LONGEST_BETWEEN;
-    for (const { horizon, positionM } of horizons) {
-      if (!isInFrame(y, positionM)) continue;
-      const text = fitText(horizon, room, TEXT.labelStrong);
-      const detail = fitText(formatGiven(positionM, section), room, TEXT.unit);
-      labels.set(horizon, { name: horizon, text, detail, y: y(positionM), isDatum: horizon === datum, x: right, isLast });
-    }
+export function labelColumns(
+  panels: readonly PlacedPost[],
+  datum: string | undefined,
+): readonly LabelColumn[] {
+  const lastWith = new Map(
+    panels.flatMap((panel, i) => shownHorizons(panel).map(({ horizon }) => [horizon, i] as const)),
+  );
+  return panels.map((panel, i) => {
+    const room = i === panels.length - 1 ? LONGEST : LONGEST_BETWEEN;
+    const labels = shownHorizons(panel)
+      .filter(({ horizon }) => lastWith.get(horizon) === i)
+      .map(({ horizon, positionM }) => ({
+        name: horizon,
+        text: fitText(horizon, room, TEXT.labelStrong),
+        detail: fitText(formatGiven(positionM, panel.section), room, TEXT.unit),
+        y: panel.y(positionM),
+        isDatum: horizon === datum,
+      }));
+    const leaving = shownHorizons(panel).filter(({ horizon }) => lastWith.get(horizon) !== i);
+    return { x: panel.right, labels, tiesY: leaving.map(({ positionM }) => panel.y(positionM)) };
   });
-  return [...labels.values()];
 }
 
-export function fenceLabelsWidth(labels: readonly FenceLabel[]): number {
-  const widths = labels
-    .filter((label) => label.isLast)
-    .flatMap(({ text, detail }) => [textWidth(text, TEXT.labelStrong), textWidth(detail, TEXT.unit)]);
+function shownHorizons({ horizons, y }: PlacedPost) {
+  return horizons.filter((horizon) => isInFrame(y, horizon.positionM));
+}
+
+/** Room the labels of the last section need, in points. */
+export function labelColumnWidth(column: LabelColumn | undefined): number {
+  const widths = (column?.labels ?? []).flatMap(({ text, detail }) => [
+    textWidth(text, TEXT.labelStrong),
+    textWidth(detail, TEXT.unit),
+  ]);
   return widths.length === 0 ? 0 : LEAD + Math.max(...widths);
 }
 
 interface FenceLabelsProps {
   readonly span: Span;
-  readonly labels: readonly FenceLabel[];
+  readonly column: LabelColumn;
 }
 
-/** Labels beside each section, moved apart where they would touch. */
-export function FenceLabels({ span, labels }: FenceLabelsProps) {
-  const edges = [...new Set(labels.map((label) => label.x))];
+/** Labels beside a section, moved apart where they would touch each other or a tie. */
+export function FenceLabels({ span, column }: FenceLabelsProps) {
+  const { x, labels, tiesY } = column;
+  const most = Math.max(1, Math.floor((span.bottom - span.top) / STEP) - tiesY.length);
+  const kept = labels.slice(0, most);
+  const wanted = [...kept.map((label) => label.y), ...tiesY];
+  const places = spaceOut(wanted, STEP, [span.top + LINE, span.bottom - LINE]);
   return (
     <g>
-      {edges.map((edge) => (
-        <LabelColumn key={edge} edge={edge} span={span} labels={labels.filter((label) => label.x === edge)} />
+      {kept.map((label, i) => (
+        <FenceWords key={label.name} x={x} label={label} middle={places[i]} />
       ))}
     </g>
   );
 }
 
-interface LabelColumnProps {
-  readonly edge: number;
-  readonly span: Span;
-  readonly labels: readonly FenceLabel[];
+interface FenceWordsProps {
+  readonly x: number;
+  readonly label: FenceLabel;
+  readonly middle: number;
 }
 
-function LabelColumn({ edge, span, labels }: LabelColumnProps) {
-  const kept = labels.slice(0, Math.max(1, Math.floor((span.bottom - span.top) / STEP)));
-  const places = spaceOut(kept.map((label) => label.y), STEP, [span.top + LINE, span.bottom - LINE]);
-  return kept.map((label, i) => {
-    const colour = label.isDatum ? COLOURS.rust : COLOURS.ink;
-    const middle = places[i];
-    return (
-      <g key={label.name} data-horizon={label.name}>
-        <path
-          d={`M${round(edge + 1)} ${round(label.y)}L${round(edge + LEAD - 2)} ${round(middle)}`}
-          fill="none"
-          stroke={colour}
-          strokeWidth={0.4}
-        />
-        <PlateText x={edge + LEAD} y={middle - 1} style={TEXT.labelStrong} colour={colour}>
-          {label.text}
-        </PlateText>
-        <PlateText x={edge + LEAD} y={middle + LINE - 1.4} style={TEXT.unit} colour={COLOURS.soft}>
-          {label.detail}
-        </PlateText>
-      </g>
-    );
-  });
+function FenceWords({ x, label, middle }: FenceWordsProps) {
+  const colour = label.isDatum ? COLOURS.rust : COLOURS.ink;
+  const lead = `M${round(x + 1)} ${round(label.y)}L${round(x + LEAD - 2)} ${round(middle)}`;
+  return (
+    <g data-horizon={label.name}>
+      <path d={lead} fill="none" stroke={colour} strokeWidth={0.4} />
+      <PlateText x={x + LEAD} y={middle - 1} style={TEXT.labelStrong} colour={colour}>
+        {label.text}
+      </PlateText>
+      <PlateText x={x + LEAD} y={middle + LINE - 1.4} style={TEXT.unit} colour={COLOURS.soft}>
+        {label.detail}
+      </PlateText>
+    </g>
+  );
 }

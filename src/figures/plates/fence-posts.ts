@@ -34,7 +34,8 @@ export function fencePosts(analysis: Analysis, view: View, span: Span): FencePos
   const ends = aligned.flatMap(({ section, own }) =>
     extentM(section).map((heightM) => toCommon(own, heightM, { beyond }).common),
   );
-  const [bottomM, topM] = view.frame && view.frame[1] > view.frame[0] ? view.frame : [Math.min(...ends), Math.max(...ends)];
+  const [bottomM, topM] =
+    view.frame && view.frame[1] > view.frame[0] ? view.frame : [Math.min(...ends), Math.max(...ends)];
   const lens = commonLens(view, [bottomM, topM]);
   const commonY = heightScale({ bottomM, topM, ...span }, lens);
   const posts = aligned.flatMap(({ section, own }) => {
@@ -63,7 +64,10 @@ function withinSpan(y: HeightScale, { top, bottom }: Span): HeightScale | undefi
     .filter(isOn)
     .toSorted((a, b) => a.heightM - b.heightM);
   if (kept.length < 2 || kept[0].heightM === kept[kept.length - 1].heightM) return undefined;
-  return y.copy().domain(kept.map((knot) => knot.heightM)).range(kept.map((knot) => knot.at));
+  return y
+    .copy()
+    .domain(kept.map((knot) => knot.heightM))
+    .range(kept.map((knot) => knot.at));
 }
 
 function ownPosts(analysis: Analysis, { top, bottom }: Span): readonly FencePost[] {
@@ -81,6 +85,8 @@ function ownPosts(analysis: Analysis, { top, bottom }: Span): readonly FencePost
 function placedOnce(analysis: Analysis, { name }: Section): readonly MarkerHorizon[] {
   const main = mainHorizonOf(analysis, name);
   const here = analysis.markers.horizons.filter((horizon) => horizon.section === name);
-  const byName = new Map([...here.toReversed(), ...(main ? [main] : [])].map((horizon) => [horizon.horizon, horizon]));
+  const byName = new Map(
+    [...here.toReversed(), ...(main ? [main] : [])].map((horizon) => [horizon.horizon, horizon]),
+  );
   return [...byName.values()];
 }

@@ -15,17 +15,21 @@ export function FenceTies({ ties }: { readonly ties: readonly Tie[] }) {
   );
 }
 
+function at(x: number, y: number): string {
+  return `${round(x)} ${round(y)}`;
+}
+
 function TieLine({ tie }: { readonly tie: Tie }) {
-  const { from, to, isDatum, isUsed, horizon } = tie;
+  const { from, to, rockX, isDatum, isUsed, horizon } = tie;
   const colour = isDatum ? COLOURS.rust : COLOURS.ink;
   const hasBand = from.bottom - from.top > THINNEST_BAND || to.bottom - to.top > THINNEST_BAND;
-  const at = (x: number, y: number) => `${round(x)} ${round(y)}`;
   const band = `M${at(from.x, from.top)}L${at(to.x, to.top)}L${at(to.x, to.bottom)}L${at(from.x, from.bottom)}z`;
   return (
     <g data-horizon={horizon}>
       {hasBand && <path d={band} fill={colour} opacity={isDatum ? 0.13 : 0.07} />}
       <path
-        d={`M${at(from.x, from.y)}L${at(to.x, to.y)}`}
+        d={`M${at(from.x, from.y)}L${at(to.x, to.y)}${rockX === undefined ? "" : `H${round(rockX)}`}`}
+        fill="none"
         stroke={colour}
         strokeWidth={isDatum ? 0.9 : 0.6}
         strokeDasharray={isUsed ? undefined : "4 2.5"}

@@ -44,12 +44,17 @@ export function drawnHorizons(
   ];
 }
 
-function smearBases(horizons: readonly (MarkerHorizon | undefined)[], section: Section): readonly DrawnHorizon[] {
+function smearBases(
+  horizons: readonly (MarkerHorizon | undefined)[],
+  section: Section,
+): readonly DrawnHorizon[] {
   return horizons.flatMap((horizon) => {
     if (horizon?.mixing === undefined || horizon.refersTo === "base-of-smear") return [];
     const { baseM, lengthM } = horizon.mixing;
     const detail = `${formatGiven(baseM, section)}, mixed over ${roundedWords(100 * lengthM)} cm`;
-    return [{ name: horizon.horizon, label: "base of the smear", detail, heightM: baseM, rank: "other" as const }];
+    return [
+      { name: horizon.horizon, label: "base of the smear", detail, heightM: baseM, rank: "other" as const },
+    ];
   });
 }
 
@@ -82,7 +87,9 @@ const REFERS: Readonly<Record<MarkerHorizon["refersTo"], string>> = {
 };
 
 function detailOf({ name, positionM, refersTo }: MarkerHorizon, section: Section): string {
-  const given = section.horizons.find((candidate) => candidate.name === name && candidate.heightM === positionM);
+  const given = section.horizons.find(
+    (candidate) => candidate.name === name && candidate.heightM === positionM,
+  );
   const position = `${REFERS[refersTo]}${formatGiven(positionM, section)}`;
   if (given?.ageMa === undefined) return position;
   const error = given.ageSigmaMa === undefined ? "" : ` ± ${trimmed(2 * given.ageSigmaMa)}`;
@@ -99,7 +106,10 @@ const LEAD = 10;
 
 /** Room the labels need at the right of the body, in points. */
 export function horizonLabelsWidth(horizons: readonly DrawnHorizon[]): number {
-  const widths = horizons.flatMap(({ label, detail }) => [textWidth(label, TEXT.labelStrong), textWidth(detail, DETAIL)]);
+  const widths = horizons.flatMap(({ label, detail }) => [
+    textWidth(label, TEXT.labelStrong),
+    textWidth(detail, DETAIL),
+  ]);
   return widths.length === 0 ? 0 : LEAD + Math.max(...widths);
 }
 
@@ -117,7 +127,11 @@ export function Horizons({ left, right, y, horizons }: HorizonsProps) {
   const { top, bottom } = spanOf(y);
   const step = 2 * LINE + GAP;
   const kept = shown.slice(0, Math.max(1, Math.floor((bottom - top) / step)));
-  const places = spaceOut(kept.map((horizon) => y(horizon.heightM)), step, [top + LINE, bottom - LINE]);
+  const places = spaceOut(
+    kept.map((horizon) => y(horizon.heightM)),
+    step,
+    [top + LINE, bottom - LINE],
+  );
   return (
     <g>
       {shown.toReversed().map((horizon, i) => (
@@ -126,7 +140,11 @@ export function Horizons({ left, right, y, horizons }: HorizonsProps) {
         </g>
       ))}
       {kept.map((horizon, i) => (
-        <HorizonWords key={`${horizon.label} ${horizon.heightM} ${i}`} {...{ horizon, right, y }} middle={places[i]} />
+        <HorizonWords
+          key={`${horizon.label} ${horizon.heightM} ${i}`}
+          {...{ horizon, right, y }}
+          middle={places[i]}
+        />
       ))}
     </g>
   );

@@ -5,5 +5,7 @@ import type { SectionFrame } from "./section-frame.ts";
 export function lensNotes({ lens }: SectionFrame): readonly string[] {
   if (lens === undefined) return [];
   const thickness = roundedWords(lens.topM - lens.baseM);
-  return [`Between the two breaks ${thickness} m are drawn ${roundedWords(lens.magnification)} times magnified.`];
+  return [
+    `Between the two breaks ${thickness} m are drawn ${roundedWords(lens.magnification)} times magnified.`,
+  ];
 }

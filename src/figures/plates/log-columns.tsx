@@ -1,14 +1,19 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import { FORMATION_WIDTH, FormationColumn, namedRock } from "../columns/formation-column.tsx";
 import { LithologyColumn, lithologyPatterns } from "../columns/lithology-column.tsx";
-import { type SearchedGroup, SearchRail, searchRailPatterns, searchRailWidth } from "../columns/search-rail.tsx";
+import {
+  type SearchedGroup,
+  SearchRail,
+  searchRailPatterns,
+  searchRailWidth,
+} from "../columns/search-rail.tsx";
 import { HeightAxis, heightAxisWidth } from "../height-axis.tsx";
 import type { LegendEntry } from "../legend.tsx";
 import { lithologyLegend } from "../lithology/lithology-legend.ts";
 import { COLOURS } from "../theme.ts";
 import type { PlacedColumn, PlateColumn } from "./plate-columns.ts";
-import type { SectionFrame } from "./section-frame.ts";
 import { searchedGroups } from "./searched-groups.ts";
+import type { SectionFrame } from "./section-frame.ts";
 
 const LOG_WIDTH = 24;
 const AXIS_GAP = 4;
@@ -39,12 +44,14 @@ export function logColumns(plateId: string, { section, y, hidden }: SectionFrame
   ];
   const named = names
     .filter(({ units }) => units.length > 0)
-    .map(({ key, units }): PlateColumn => ({
-      key,
-      width: FORMATION_WIDTH,
-      gap: 0,
-      draw: (x) => <FormationColumn x={x} y={y} units={units} />,
-    }));
+    .map(
+      ({ key, units }): PlateColumn => ({
+        key,
+        width: FORMATION_WIDTH,
+        gap: 0,
+        draw: (x) => <FormationColumn x={x} y={y} units={units} />,
+      }),
+    );
   if (beds.length === 0 && hidden.length === 0) return named;
   const log: PlateColumn = {
     key: "log",
@@ -90,10 +97,12 @@ export function railColumn(plateId: string, analysis: Analysis, frame: SectionFr
 function railLegend(groups: readonly SearchedGroup[]): readonly LegendEntry[] {
   const colour = COLOURS.soft;
   return [
-    ...groups.map(({ name, sign }): LegendEntry => ({
-      sign: { kind: "group", colour: sign.colour, letter: sign.letter },
-      label: name,
-    })),
+    ...groups.map(
+      ({ name, sign }): LegendEntry => ({
+        sign: { kind: "group", colour: sign.colour, letter: sign.letter },
+        label: name,
+      }),
+    ),
     { sign: { kind: "found", colour }, label: "searched, found" },
     { sign: { kind: "barren", colour }, label: "searched, none found" },
   ];

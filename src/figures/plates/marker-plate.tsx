@@ -2,11 +2,11 @@ import type { Analysis } from "../../core/analysis-result.ts";
 import { formatGiven } from "../../core/study/heights.ts";
 import { TICK_LABEL_DEPTH } from "../columns/column-ground.tsx";
 import { LensBreak } from "../marks/lens-break.tsx";
-import { analyteColumns } from "./analyte-columns.tsx";
+import { analyteColumns, errorBarNotes } from "./analyte-columns.tsx";
 import { axisWords } from "./axis-words.ts";
 import { defaultLens } from "./default-lens.ts";
 import type { Drawing, SectionView } from "./drawing.ts";
-import { drawnHorizons, horizonLabelsWidth, horizonLegend, Horizons } from "./horizon-labels.tsx";
+import { drawnHorizons, Horizons, horizonLabelsWidth, horizonLegend } from "./horizon-labels.tsx";
 import { lensNotes } from "./lens-notes.ts";
 import { axisColumns, lineLeft, logColumns } from "./log-columns.tsx";
 import { placeColumns } from "./plate-columns.ts";
@@ -24,7 +24,7 @@ export function markerPlate(analysis: Analysis, view: SectionView): Drawing {
   const span = { top: BODY_TOP, bottom: BODY_TOP + (view.bodyHeight ?? BODY_HEIGHT) };
   const lens = view.lens ?? (view.frame ? undefined : defaultLens(analysis, view.section));
   const frame = sectionFrame(analysis, view.section, { view: { ...view, lens }, span });
-  const analytes = analyteColumns(analysis, frame, { hasErrors: true, width: 40 });
+  const analytes = analyteColumns(analysis, frame, { width: 40 });
   const { placed, right } = placeColumns(
     [...axisColumns(frame), ...logColumns(id, frame), ...analytes, scaleColumn(frame.y, frame.lens)],
     MARGIN,
@@ -47,10 +47,14 @@ export function markerPlate(analysis: Analysis, view: SectionView): Drawing {
       </g>
     ),
     legend: horizonLegend(horizons),
-    notes: [...(analytes.length === 0 ? ["Nothing was measured in this section."] : []), ...lensNotes(frame)],
+    notes: [...emptyNotes(frame), ...errorBarNotes(frame), ...lensNotes(frame)],
     panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
     view,
   });
+}
+
+function emptyNotes({ section }: SectionFrame): readonly string[] {
+  return section.measurements.length === 0 ? ["Nothing was measured in this section."] : [];
 }
 
 function describe({ section, main }: SectionFrame): string {

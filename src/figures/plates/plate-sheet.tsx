@@ -40,7 +40,9 @@ export function setSheet(parts: SheetParts): Drawing {
   const { id, title, description, columns = [], panels, view } = parts;
   const width = Math.max(parts.right + MARGIN, NARROWEST);
   const room = width - 2 * MARGIN;
-  const patterns = [...new Set([...columns.flatMap((column) => column.patterns ?? []), ...(parts.patterns ?? [])])];
+  const patterns = [
+    ...new Set([...columns.flatMap((column) => column.patterns ?? []), ...(parts.patterns ?? [])]),
+  ];
   const entries = distinct([...(parts.legend ?? []), ...columns.flatMap((column) => column.legend ?? [])]);
   const legend = legendLayout(entries, room);
   const notes = (parts.notes ?? []).flatMap((note) => wrapText(shortened(note), room, TEXT.unit));
@@ -80,7 +82,9 @@ const LONGEST_NOTE = 900;
 
 /** A note made of somebody's 200 kB cell still fits a plate. */
 function shortened(note: string): string {
-  return note.length <= LONGEST_NOTE ? note : `${Array.from(note.slice(0, LONGEST_NOTE)).slice(0, -1).join("")}…`;
+  return note.length <= LONGEST_NOTE
+    ? note
+    : `${Array.from(note.slice(0, LONGEST_NOTE)).slice(0, -1).join("")}…`;
 }
 
 function isStandardPattern(pattern: PatternId): boolean {

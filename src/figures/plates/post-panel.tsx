@@ -30,7 +30,13 @@ const TITLE = TEXT.heading;
 export function postPanel(analysis: Analysis, post: FencePost, left: number): PlacedPost {
   const { section, y } = post;
   const reading = ownReading(section);
-  const frame: SectionFrame = { section, vertical: "own", y, axis: { scale: y, reading }, hidden: hiddenRock(section) };
+  const frame: SectionFrame = {
+    section,
+    vertical: "own",
+    y,
+    axis: { scale: y, reading },
+    hidden: hiddenRock(section),
+  };
   const log = logColumns("fence", frame).filter((column) => column.key !== "member");
   const iridium = analyteColumns(analysis, frame, { only: ["iridium"], width: IRIDIUM_WIDTH });
   const { placed, right } = placeColumns([...axisColumns(frame), ...log, ...iridium], left);
@@ -94,5 +100,12 @@ function PostHorizons({ panel, datum }: PostPanelProps) {
 }
 
 function HiatusLine({ x, width, at }: { readonly x: number; readonly width: number; readonly at: number }) {
-  return <path d={contactPath("erosive", { x, y: at, width })} fill="none" stroke={COLOURS.rust} strokeWidth={0.8} />;
+  return (
+    <path
+      d={contactPath("erosive", { x, y: at, width })}
+      fill="none"
+      stroke={COLOURS.rust}
+      strokeWidth={0.8}
+    />
+  );
 }

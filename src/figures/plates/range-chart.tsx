@@ -2,17 +2,18 @@ import type { Analysis } from "../../core/analysis-result.ts";
 import { formatGiven } from "../../core/study/heights.ts";
 import { TICK_LABEL_DEPTH } from "../columns/column-ground.tsx";
 import { LensBreak } from "../marks/lens-break.tsx";
-import { analyteColumns } from "./analyte-columns.tsx";
+import { analyteColumns, errorBarNotes } from "./analyte-columns.tsx";
+import { axisWords } from "./axis-words.ts";
 import type { Drawing, SectionView } from "./drawing.ts";
 import { type DrawnTaxon, drawnTaxa, namesWithoutRange } from "./drawn-taxa.ts";
-import { drawnHorizons, horizonLabelsWidth, horizonLegend, Horizons } from "./horizon-labels.tsx";
+import { drawnHorizons, Horizons, horizonLabelsWidth, horizonLegend } from "./horizon-labels.tsx";
+import { lensNotes } from "./lens-notes.ts";
 import { axisColumns, lineLeft, logColumns, railColumn } from "./log-columns.tsx";
 import { placeColumns } from "./plate-columns.ts";
 import { BODY_TOP, MARGIN, setSheet } from "./plate-sheet.tsx";
-import { lensNotes } from "./lens-notes.ts";
-import { type SectionFrame, sectionFrame } from "./section-frame.ts";
+import { scaleColumn } from "./scale-column.tsx";
 import { groupSigns } from "./searched-groups.ts";
-import { axisWords } from "./axis-words.ts";
+import { type SectionFrame, sectionFrame } from "./section-frame.ts";
 import { slugOf } from "./slugs.ts";
 import { layTaxa, TaxaBlock } from "./taxa-block.tsx";
 import { PITCH, rangeLegend } from "./taxon-range.tsx";
@@ -64,6 +65,7 @@ function chartPage(analysis: Analysis, view: SectionView, { taxa, page, pages }:
       ...logColumns(id, frame),
       ...railColumn(id, analysis, frame),
       ...analyteColumns(analysis, frame, { only: MARKER_COLUMNS }),
+      ...(lens ? [scaleColumn(y, lens)] : []),
     ],
     MARGIN,
   );
@@ -74,7 +76,8 @@ function chartPage(analysis: Analysis, view: SectionView, { taxa, page, pages }:
   const from = placed[0]?.x ?? MARGIN;
   return setSheet({
     id,
-    title: pages > 1 ? `${section.title}: range chart, page ${page} of ${pages}` : `${section.title}: range chart`,
+    title:
+      pages > 1 ? `${section.title}: range chart, page ${page} of ${pages}` : `${section.title}: range chart`,
     subtitle: axisWords(frame),
     description: describe(section.title, taxa, frame),
     right: Math.max(right + horizonLabelsWidth(horizons), layout.namesRight),
@@ -88,7 +91,11 @@ function chartPage(analysis: Analysis, view: SectionView, { taxa, page, pages }:
       </g>
     ),
     legend: [...rangeLegend(taxa, y), ...horizonLegend(horizons)],
-    notes: [...chartNotes(analysis, section.name, taxa), ...lensNotes(frame)],
+    notes: [
+      ...chartNotes(analysis, section.name, taxa),
+      ...errorBarNotes(frame, MARKER_COLUMNS),
+      ...lensNotes(frame),
+    ],
     panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
     view,
   });

@@ -5,9 +5,11 @@ import { TEXT } from "../theme.ts";
 import type { PlateColumn } from "./plate-columns.ts";
 import { roundedWords } from "./rounded-words.ts";
 
-const LONGEST_BAR = 90;
+const LONGEST_BAR = 70;
 const INSET = 3;
 const LABEL_X = 7;
+/** `scaleBarLength` gives a third of what it is asked for. */
+const THIRDS = 2.4;
 
 interface Bar {
   readonly y: number;
@@ -36,7 +38,11 @@ function belowLens(y: HeightScale, lens: Lens): Bar {
   const { top, bottom } = spanOf(y);
   const [above, below] = [y(lens.topM) - top, bottom - y(lens.baseM)];
   const foot = below >= above ? bottom - INSET : y(lens.topM) - INSET;
-  return bar(foot, Math.min(LONGEST_BAR, Math.max(above, below) - 2 * INSET), pointsPerMetre(y, lens) / lens.magnification);
+  return bar(
+    foot,
+    Math.min(LONGEST_BAR, Math.max(above, below) - 2 * INSET),
+    pointsPerMetre(y, lens) / lens.magnification,
+  );
 }
 
 function insideLens(y: HeightScale, lens: Lens): Bar {
@@ -46,13 +52,15 @@ function insideLens(y: HeightScale, lens: Lens): Bar {
 }
 
 function pointsPerMetre(y: HeightScale, lens?: Lens): number {
-  const [low = 0, high = 1] = lens ? [lens.baseM, lens.topM] : [Math.min(...y.domain()), Math.max(...y.domain())];
+  const [low, high] = lens ? [lens.baseM, lens.topM] : [Math.min(...y.domain()), Math.max(...y.domain())];
   return Math.abs(y(high) - y(low)) / (high - low);
 }
 
 /** The longest round bar within `room` points. */
 function bar(y: number, room: number, scale: number): Bar {
-  const metres = scaleBarLength((Math.max(room, 1) / scale) * 0.9);
+  const longest = Math.max(room, 1) / scale;
+  const metres =
+    scaleBarLength(longest * THIRDS) > longest ? scaleBarLength(longest) : scaleBarLength(longest * THIRDS);
   return { y, length: metres * scale, label: lengthLabel(metres) };
 }
 

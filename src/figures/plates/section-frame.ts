@@ -33,7 +33,8 @@ export interface SectionFrame {
 
 export function sectionNamed(analysis: Analysis, name: string): Section {
   const section = analysis.study.sections.find((candidate) => candidate.name === name);
-  if (section === undefined) throw new RangeError(`plates: expected a section of the study, got ${name.slice(0, 80)}`);
+  if (section === undefined)
+    throw new RangeError(`plates: expected a section of the study, got ${name.slice(0, 80)}`);
   return section;
 }
 
@@ -42,7 +43,11 @@ export function mainHorizonOf({ markers }: Analysis, section: string): MarkerHor
   return markers.main.bySection.get(section);
 }
 
-export function sectionFrame(analysis: Analysis, name: string, options: { view: View; span: Span }): SectionFrame {
+export function sectionFrame(
+  analysis: Analysis,
+  name: string,
+  options: { view: View; span: Span },
+): SectionFrame {
   const { view, span } = options;
   const section = sectionNamed(analysis, name);
   const main = mainHorizonOf(analysis, name);
@@ -50,9 +55,16 @@ export function sectionFrame(analysis: Analysis, name: string, options: { view: 
   const vertical = verticalOf(view.vertical ?? "from-horizon", main, alignment);
   const base = { section, vertical, main, hidden: hiddenRock(section) };
   if (vertical === "common" && alignment !== undefined)
-    return { ...base, alignment, ...commonFrame(section, alignment, { beyond: analysis.alignment.beyond, view, span, main }) };
+    return {
+      ...base,
+      alignment,
+      ...commonFrame(section, alignment, { beyond: analysis.alignment.beyond, view, span, main }),
+    };
   const zeroM = vertical === "from-horizon" ? (main?.positionM ?? 0) : 0;
-  const extent = frameExtent(extentM(section), view.frame?.map((value) => value + zeroM));
+  const extent = frameExtent(
+    extentM(section),
+    view.frame?.map((value) => value + zeroM),
+  );
   const lens = lensIn(extent, main?.positionM, view);
   const y = heightScale({ bottomM: extent[0], topM: extent[1], ...span }, lens);
   const own = { scale: y, reading: ownReading(section) };
@@ -99,7 +111,12 @@ function lensIn(
 }
 
 export function ownReading({ unit, axis }: Section): AxisReading {
-  return { unit: axis === "depth" ? `${unit} depth` : unit, metresPerUnit: toMetres(1, unit), zeroM: 0, direction: axis };
+  return {
+    unit: axis === "depth" ? `${unit} depth` : unit,
+    metresPerUnit: toMetres(1, unit),
+    zeroM: 0,
+    direction: axis,
+  };
 }
 
 export function horizonReading(zeroM: number): AxisReading {
@@ -141,13 +158,19 @@ export function onCommon(
     .map((heightM, i) => ({ heightM, common: alignment.targets[i] }))
     .filter(({ heightM }) => heightM > low && heightM < high);
   const known = [{ heightM: low, common: common(low) }, ...inside, { heightM: high, common: common(high) }];
-  const heightAt = scaleLinear(known.map((knot) => knot.common), known.map((knot) => knot.heightM));
+  const heightAt = scaleLinear(
+    known.map((knot) => knot.common),
+    known.map((knot) => knot.heightM),
+  );
   const breaks = commonY
     .domain()
     .map((value) => ({ heightM: heightAt(value), common: value }))
     .filter(({ heightM }) => heightM > low && heightM < high);
   const knots = [...known, ...breaks].toSorted((a, b) => a.heightM - b.heightM || a.common - b.common);
-  return scaleLinear(knots.map((knot) => knot.heightM), knots.map((knot) => commonY(knot.common)));
+  return scaleLinear(
+    knots.map((knot) => knot.heightM),
+    knots.map((knot) => commonY(knot.common)),
+  );
 }
 
 export function hiddenRock({ intervals }: Section): readonly HiddenRock[] {

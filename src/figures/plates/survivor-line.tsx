@@ -1,11 +1,13 @@
 import { markPath } from "../marks/mark-path.ts";
 import { PlateText } from "../plate-text.tsx";
-import { wrapText } from "../text.ts";
+import { textWidth, wrapText } from "../text.ts";
 import { COLOURS, TEXT } from "../theme.ts";
 import { taxonLabel } from "./taxon-range.tsx";
 
 const LINE = 10;
-const INDENT = 9;
+const WORD = "Survivors, not in the test:";
+const WORD_X = 9;
+const INDENT = WORD_X + textWidth(WORD, TEXT.unit) + 4;
 const MOST_LINES = 4;
 
 /** Names of the survivors in lines of the width given; the last says how many more there are. */
@@ -37,6 +39,9 @@ export function SurvivorLine({ x, y, lines }: SurvivorLineProps) {
   return (
     <g>
       <path d={markPath("triangle", x + 3, y - 2.4, 2.2)} fill={COLOURS.ink} />
+      <PlateText x={x + WORD_X} y={y} style={TEXT.unit} colour={COLOURS.soft}>
+        {WORD}
+      </PlateText>
       {lines.map((line, i) => (
         <PlateText key={line} x={x + INDENT} y={y + i * LINE} style={TEXT.taxon}>
           {line}

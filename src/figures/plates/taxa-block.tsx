@@ -1,8 +1,8 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import { ColumnHead } from "../columns/column-head.tsx";
 import { type HeightScale, spanOf } from "../height-scale.ts";
 import { slantedDepth, slantedOverhang } from "../layout/slanted-names.ts";
 import { GroupBracket } from "../marks/group-bracket.tsx";
-import { ColumnHead } from "../columns/column-head.tsx";
 import { TEXT } from "../theme.ts";
 import type { DrawnTaxon } from "./drawn-taxa.ts";
 import { groupLabel, groupSigns } from "./searched-groups.ts";
@@ -67,7 +67,14 @@ export function TaxaBlock({ analysis, layout, left, y, title }: TaxaBlockProps) 
       {layout.groups.map(({ group, x, width }) => {
         const sign = signs.get(group);
         return (
-          sign && <GroupBracket key={group} {...{ x, width, sign }} y={top - BRACKET_LIFT} name={groupLabel(group)} />
+          sign && (
+            <GroupBracket
+              key={group}
+              {...{ x, width, sign }}
+              y={top - BRACKET_LIFT}
+              name={groupLabel(group)}
+            />
+          )
         );
       })}
       {layout.places.map(({ taxon, x }) => (

@@ -80,12 +80,36 @@ export function rangeLegend(taxa: readonly DrawnTaxon[], y: HeightScale): readon
     isUsed: boolean,
   ): readonly LegendEntry[] => (isUsed ? [{ sign: { kind, colour }, label }] : []);
   return [
-    ...sign("find", "find", has(({ findsM }) => findsM.length > 0)),
-    ...sign("open-find", "find set aside", has(({ openM }) => openM.length > 0)),
-    ...sign("taper", "taper: chance that the taxon was still here", has(({ taper }) => taper !== undefined)),
-    ...sign("interval-end", "end of the interval", has(({ taper }) => taper?.endM !== undefined && isInFrame(y, taper.endM))),
-    ...sign("survivor", "survivor", has(({ role }) => role === "survivor")),
-    ...sign("cut-off", "found in the highest sample searched", has(({ role, reachesTop }) => role !== "survivor" && reachesTop)),
+    ...sign(
+      "find",
+      "find",
+      has(({ findsM }) => findsM.length > 0),
+    ),
+    ...sign(
+      "open-find",
+      "find set aside",
+      has(({ openM }) => openM.length > 0),
+    ),
+    ...sign(
+      "taper",
+      "taper: chance that the taxon was still here",
+      has(({ taper }) => taper !== undefined),
+    ),
+    ...sign(
+      "interval-end",
+      "end of the interval",
+      has(({ taper }) => taper?.endM !== undefined && isInFrame(y, taper.endM)),
+    ),
+    ...sign(
+      "survivor",
+      "survivor",
+      has(({ role }) => role === "survivor"),
+    ),
+    ...sign(
+      "cut-off",
+      "found in the highest sample searched",
+      has(({ role, reachesTop }) => role !== "survivor" && reachesTop),
+    ),
     ...bar("aftermath", "first found after the horizon"),
     ...bar("late-start", "starts late"),
     ...bar("too-few", "too few horizons"),

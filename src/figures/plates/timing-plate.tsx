@@ -1,18 +1,20 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import { columnHeadWidth } from "../columns/column-head.tsx";
 import { TICK_LABEL_DEPTH } from "../columns/column-ground.tsx";
+import { columnHeadWidth } from "../columns/column-head.tsx";
 import { DURATION_WIDTH, DurationColumn } from "../columns/duration-column.tsx";
 import { LevelColumn, levelColumnWidth } from "../columns/level-column.tsx";
 import type { LegendEntry } from "../legend.tsx";
 import { LensBreak } from "../marks/lens-break.tsx";
 import { axisWords } from "./axis-words.ts";
+import { defaultLens } from "./default-lens.ts";
 import type { Drawing, SectionView } from "./drawing.ts";
 import { type DrawnTaxon, drawnTaxa } from "./drawn-taxa.ts";
-import { drawnHorizons, horizonLabelsWidth, horizonLegend, Horizons } from "./horizon-labels.tsx";
+import { drawnHorizons, Horizons, horizonLabelsWidth, horizonLegend } from "./horizon-labels.tsx";
 import { lensNotes } from "./lens-notes.ts";
 import { axisColumns, lineLeft, logColumns, railColumn } from "./log-columns.tsx";
 import { type PlateColumn, placeColumns } from "./plate-columns.ts";
 import { BODY_TOP, MARGIN, setSheet } from "./plate-sheet.tsx";
+import { scaleColumn } from "./scale-column.tsx";
 import { groupSigns } from "./searched-groups.ts";
 import { type SectionFrame, sectionFrame } from "./section-frame.ts";
 import { slugOf } from "./slugs.ts";
@@ -41,10 +43,14 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
   const lines = survivorLines(survivors, SURVIVOR_WIDTH);
   const top = BODY_TOP + survivorDepth(lines);
   const span = { top, bottom: top + (view.bodyHeight ?? BODY_HEIGHT) };
-  const frame = sectionFrame(analysis, view.section, { view, span });
+  const magnified = view.lens ?? (view.frame ? undefined : defaultLens(analysis, view.section));
+  const frame = sectionFrame(analysis, view.section, { view: { ...view, lens: magnified }, span });
   const { section, y, lens } = frame;
   const timing = drawnTiming(answersOf(analysis, view));
-  const columns = placeColumns([...axisColumns(frame), ...logColumns(id, frame), ...railColumn(id, analysis, frame)], MARGIN);
+  const columns = placeColumns(
+    [...axisColumns(frame), ...logColumns(id, frame), ...railColumn(id, analysis, frame)],
+    MARGIN,
+  );
   const left = columns.right + 10;
   const layout = layTaxa(taxa, left);
   const answers = placeColumns(
@@ -70,7 +76,7 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
         <Horizons left={from} right={right} y={y} horizons={horizons} />
       </g>
     ),
-    legend: [...rangeLegend(taxa, y), ...survivorLegend(survivors), ...horizonLegend(horizons)],
+    legend: [...rangeLegend(taxa, y), ...horizonLegend(horizons)],
     notes: [...notesOf(analysis, { taxa, timing, frame }), ...lensNotes(frame)],
     panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
     view,
@@ -107,13 +113,18 @@ interface Answered {
   readonly frame: SectionFrame;
 }
 
-function answerColumns(analysis: Analysis, view: TimingView, { timing, taxa, frame }: Answered): readonly PlateColumn[] {
+function answerColumns(
+  analysis: Analysis,
+  view: TimingView,
+  { timing, taxa, frame }: Answered,
+): readonly PlateColumn[] {
   const { y } = frame;
   const level = levelColumn(analysis, view, { timing, taxa, frame });
   const { durationLower, durationBoxes } = timing;
   const leastM = durationLower?.low;
   const mostM = durationBoxes[0]?.high;
-  if (taxa.length === 0 || (leastM === undefined && mostM === undefined)) return level;
+  const scale = frame.lens ? [scaleColumn(y, frame.lens)] : [];
+  if (taxa.length === 0 || (leastM === undefined && mostM === undefined)) return [...level, ...scale];
   const fromM = Math.max(...taxa.map((taxon) => taxon.lastM));
   const duration: PlateColumn = {
     key: "duration",
@@ -121,11 +132,17 @@ function answerColumns(analysis: Analysis, view: TimingView, { timing, taxa, fra
     draw: (x) => <DurationColumn {...{ x, y, fromM, leastM, mostM }} />,
     legend: [{ sign: { kind: "duration" }, label: "height between the first and the last disappearance" }],
   };
-  return [...level, duration];
+  return [...level, duration, ...scale];
 }
 
-function levelColumn(analysis: Analysis, view: TimingView, { timing, frame }: Answered): readonly PlateColumn[] {
-  const curve = analysis.timing.curves.find(({ section, set }) => section === view.section && set === view.set);
+function levelColumn(
+  analysis: Analysis,
+  view: TimingView,
+  { timing, frame }: Answered,
+): readonly PlateColumn[] {
+  const curve = analysis.timing.curves.find(
+    ({ section, set }) => section === view.section && set === view.set,
+  );
   const toSet = ({ low, high }: { readonly low?: number; readonly high?: number } = {}) =>
     low === undefined ? [] : [{ baseM: low, topM: high ?? frame.section.topM }];
   const [ifOne, joint] = [toSet(timing.ifOne), timing.joint.flatMap(toSet)];
@@ -138,7 +155,14 @@ function levelColumn(analysis: Analysis, view: TimingView, { timing, frame }: An
     {
       key: "level",
       width: Math.max(levelColumnWidth(LEVEL_WIDTH), columnHeadWidth(title, unit)),
-      draw: (x) => <LevelColumn {...{ x, y, title, unit, limit, joint }} width={LEVEL_WIDTH} curve={points} ifOne={ifOne[0]} />,
+      draw: (x) => (
+        <LevelColumn
+          {...{ x, y, title, unit, limit, joint }}
+          width={LEVEL_WIDTH}
+          curve={points}
+          ifOne={ifOne[0]}
+        />
+      ),
       legend: levelLegend(points.length > 0, ifOne.length > 0, joint.length > 0),
     },
   ];
@@ -152,15 +176,14 @@ function levelLegend(hasCurve: boolean, hasIfOne: boolean, hasJoint: boolean): r
   ];
 }
 
-function survivorLegend(survivors: readonly string[]): readonly LegendEntry[] {
-  return survivors.length === 0 ? [] : [{ sign: { kind: "survivor", colour: "#22252a" }, label: "survivors, not in the test" }];
-}
-
 function notesOf(analysis: Analysis, { taxa, timing, frame }: Answered): readonly string[] {
   const { section } = frame;
-  if (taxa.length === 0) return ["No taxon of this set is in question in this section: nothing can be asked."];
+  if (taxa.length === 0)
+    return ["No taxon of this set is in question in this section: nothing can be asked."];
   const distrusted = analysis.timing.distrusted.includes(section.name)
-    ? ["Recovery declines upward in this section (centroid): the levels and durations above it must not be trusted."]
+    ? [
+        "Recovery declines upward in this section (centroid): the levels and durations above it must not be trusted.",
+      ]
     : [];
   return [...distrusted, ...timingNotes(timing, section)];
 }

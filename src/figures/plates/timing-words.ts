@@ -33,7 +33,8 @@ export function timingNotes(timing: DrawnTiming, section: Section): readonly str
 
 function oneLevelWords(answer: TimingAnswer | undefined): string {
   if (answer === undefined) return "Whether they could have ended at one level was not asked.";
-  if (answer.p === undefined) return "Whether they could have ended at one level cannot be answered from these finds.";
+  if (answer.p === undefined)
+    return "Whether they could have ended at one level cannot be answered from these finds.";
   return `All at one level (common-end, ${answer.taxa} taxa): p ${pWords(answer.p)}.`;
 }
 
@@ -45,7 +46,8 @@ function whereWords({ ifOne, joint }: DrawnTiming, section: Section): string {
   const given = levelsWords(ifOne, section);
   const single = given === "" ? "" : `If they did, between ${given} (common-end-given).`;
   const isEmpty = joint.some((answer) => answer.outcome === "empty");
-  if (isEmpty) return `${single} No single level fits these finds: the joint set is empty (common-end-joint).`.trim();
+  if (isEmpty)
+    return `${single} No single level fits these finds: the joint set is empty (common-end-joint).`.trim();
   const parts = joint.map((answer) => levelsWords(answer, section)).filter((words) => words !== "");
   if (parts.length === 0) return single;
   return `${single} Levels not excluded: ${parts.join(" and ")} (common-end-joint).`.trim();
@@ -54,7 +56,10 @@ function whereWords({ ifOne, joint }: DrawnTiming, section: Section): string {
 function levelsWords(answer: TimingAnswer | undefined, section: Section): string {
   if (answer?.low === undefined) return "";
   const high = answer.high === undefined ? "above the section" : formatGiven(answer.high, section);
-  return `${formatGiven(answer.low, section)} and ${high}`.replace(" and above", " and beyond the section, above");
+  return `${formatGiven(answer.low, section)} and ${high}`.replace(
+    " and above",
+    " and beyond the section, above",
+  );
 }
 
 function durationWords({ durationLower, durationBoxes }: DrawnTiming): string {
@@ -64,10 +69,14 @@ function durationWords({ durationLower, durationBoxes }: DrawnTiming): string {
     ...(least === undefined ? [] : [`at least ${roundedWords(least)} m (duration-lower)`]),
     ...(most.length === 0 ? [] : [`${most.join(", ")} (duration-box)`]),
   ];
-  return words.length === 0 ? "" : `Height between the first and the last disappearance: ${words.join("; ")}.`;
+  return words.length === 0
+    ? ""
+    : `Height between the first and the last disappearance: ${words.join("; ")}.`;
 }
 
 function boxWords({ high, taxa, outcome }: TimingAnswer): string {
   if (high !== undefined) return `at most ${roundedWords(high)} m for ${taxa} taxa`;
-  return outcome === "undefined" ? `no upper bound for ${taxa} taxa` : `no upper bound inside the section for ${taxa} taxa`;
+  return outcome === "undefined"
+    ? `no upper bound for ${taxa} taxa`
+    : `no upper bound inside the section for ${taxa} taxa`;
 }
