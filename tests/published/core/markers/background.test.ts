@@ -11,6 +11,7 @@ import {
 } from "../../../../src/core/markers/false-discovery.ts";
 import { productLimit, productLimitQuantile } from "../../../../src/core/markers/kaplan-meier.ts";
 import rows from "./background.json" with { type: "json" };
+import { expectedValues } from "./expected-values.ts";
 
 /** The rows' sources: own Python with numpy and scipy (make-background.py), the likelihood and product limit also in R. */
 const concentrations = [
@@ -21,12 +22,8 @@ const samples = concentrations.map((value) => ({ value, censored: "none" as cons
 const censoredValues = [0.05, 0.05, 0.05, 0.06, 0.08, 0.09, 0.1, 0.1, 0.11, 0.14, 0.17, 0.2, 0.26, 0.35];
 const isBelow = [1, 1, 1, 0, 0, 0, 1, 1, 0, 0, 0, 0, 0, 0].map((c) => c === 1);
 
-function expectedOf(start: string): Record<string, unknown> & readonly unknown[] {
-  const row = rows.find((r) => r.case.startsWith(start));
-  if (row === undefined) throw new Error(`no row ${start}`);
-  return row.expected as unknown as Record<string, unknown> & readonly unknown[];
-}
-
+const expected = expectedValues(rows);
+const mle = (key: string) => expected.number("censored lognormal MLE", key);
 const indices = (flags: readonly boolean[]) => flags.flatMap((flag, i) => (flag ? [i] : []));
 
 function fitted() {
@@ -38,24 +35,22 @@ function fitted() {
 describe("background of the worked profile", () => {
   it("starts from the shortest half", () => {
     const { centre, scale } = shortestHalf(concentrations.map(Math.log10));
-    const expected = expectedOf("shorth start");
-    expect(centre).toBeCloseTo(Number(expected.m0), 9);
-    expect(scale).toBeCloseTo(Number(expected.s0), 9);
+    expect(centre).toBeCloseTo(expected.number("shorth start", "m0"), 9);
+    expect(scale).toBeCloseTo(expected.number("shorth start", "s0"), 9);
   });
 
   it("clips to the published kept set, median and scale", () => {
     const fit = fitted();
-    const expected = expectedOf("background by shorth start");
-    expect(fit.logMedian).toBeCloseTo(Number(expected.median_log10), 9);
-    expect(fit.logSd).toBeCloseTo(Number(expected.s_log10), 9);
-    expect(fit.isKept.flatMap((kept, i) => (kept ? [i] : []))).toEqual(expected.kept0);
-    expect(fit.passes).toBe(expected.passes);
+    const start = "background by shorth start";
+    expect(fit.logMedian).toBeCloseTo(expected.number(start, "median_log10"), 9);
+    expect(fit.logSd).toBeCloseTo(expected.number(start, "s_log10"), 9);
+    expect(fit.isKept.flatMap((kept, i) => (kept ? [i] : []))).toEqual(expected.numbers(start, "kept0"));
+    expect(fit.passes).toBe(expected.number(start, "passes"));
   });
 
   it("has the published t and p for every sample", () => {
     const tests = anomalyTest(samples, fitted());
-    const expected = expectedOf("predictive t");
-    const [t, p] = [expected.t as number[], expected.p as number[]];
+    const [t, p] = ["t", "p"].map((key) => expected.numbers("predictive t", key));
     tests.forEach((test, i) => {
       expect(test.t).toBeCloseTo(t[i], 6);
       expect(Math.abs(test.p / p[i] - 1)).toBeLessThan(1e-4);
@@ -64,27 +59,31 @@ describe("background of the worked profile", () => {
 
   it("flags the published samples, by false discovery rate and strictly", () => {
     const p = anomalyTest(samples, fitted()).map((test) => test.p);
-    expect(indices(benjaminiHochberg(p, 0.05).isFlagged)).toEqual(expectedOf("BH q=0.05"));
-    expect(indices(holm(p, 0.05).isFlagged)).toEqual(expectedOf("Holm alpha"));
+    expect(indices(benjaminiHochberg(p, 0.05).isFlagged)).toEqual(expected.numbers("BH q=0.05"));
+    expect(indices(holm(p, 0.05).isFlagged)).toEqual(expected.numbers("Holm alpha"));
   });
 
   it("has the published enrichment and excess of the largest sample", () => {
     const measured = { value: 3.9, sigma: 0.06 * 3.9 };
-    const enrichment = expectedOf("enrichment factor");
     const { factor, sigmaLog } = enrichmentFactor(measured, fitted());
-    expect(factor).toBeCloseTo(Number(enrichment.EF), 6);
-    expect(sigmaLog).toBeCloseTo(Number(enrichment.sigma_log10), 9);
-    const excess = expectedOf("excess and sigma");
-    expect(excessOf(measured, fitted()).excess).toBeCloseTo(Number(excess.excess_ng_g), 9);
-    expect(excessOf(measured, fitted()).sigma).toBeCloseTo(Number(excess.sigma_ng_g), 9);
+    expect(factor).toBeCloseTo(expected.number("enrichment factor", "EF"), 6);
+    expect(sigmaLog).toBeCloseTo(expected.number("enrichment factor", "sigma_log10"), 9);
+    expect(excessOf(measured, fitted()).excess).toBeCloseTo(
+      expected.number("excess and sigma", "excess_ng_g"),
+      9,
+    );
+    expect(excessOf(measured, fitted()).sigma).toBeCloseTo(
+      expected.number("excess and sigma", "sigma_ng_g"),
+      9,
+    );
   });
 });
 
 describe("many tests", () => {
   const sizes = [20, 50, 100, 200, 500];
   it("has the published Sidak quantiles and chances of a false 3-sigma flag", () => {
-    const quantiles = expectedOf("Sidak") as unknown as number[];
-    const chances = expectedOf("chance of") as unknown as number[];
+    const quantiles = expected.numbers("Sidak");
+    const chances = expected.numbers("chance of");
     sizes.forEach((n, i) => {
       expect(sidakQuantile(n, 0.05)).toBeCloseTo(quantiles[i], 6);
       expect(falseThreeSigmaChance(n)).toBeCloseTo(chances[i], 8);
@@ -95,29 +94,26 @@ describe("many tests", () => {
 describe("values below detection", () => {
   it("has the published product-limit table and quantiles", () => {
     const steps = productLimit(censoredValues, isBelow);
-    const table = expectedOf("KM left-censored") as unknown as number[][];
+    const table = expected.table("KM left-censored");
     steps.forEach((s, i) => {
       const got = [s.value, s.atRisk, s.detects, s.atOrBelow, s.below];
       got.forEach((v, k) => expect(v).toBeCloseTo(table[i][k], 9));
     });
     expect(steps).toHaveLength(table.length);
-    const quantiles = expectedOf("KM quantiles");
-    expect(productLimitQuantile(steps, 0.5)).toBe(quantiles.q50);
-    expect(productLimitQuantile(steps, 0.75)).toBe(quantiles.q75);
+    expect(productLimitQuantile(steps, 0.5)).toBe(expected.number("KM quantiles", "q50"));
+    expect(productLimitQuantile(steps, 0.75)).toBe(expected.number("KM quantiles", "q75"));
     expect(productLimitQuantile(steps, 0.25)).toBeUndefined();
   });
 
   it("has the published censored lognormal maximum likelihood", () => {
     const fit = fitCensoredNormal(censoredValues.map(Math.log), isBelow);
-    const expected = expectedOf("censored lognormal MLE");
     const jacobian = censoredValues.reduce((sum, v, i) => (isBelow[i] ? sum : sum - Math.log(v)), 0);
-    expect(Math.abs(fit.mean - Number(expected.mu_ln))).toBeLessThan(1e-5);
-    expect(Math.abs(fit.sd - Number(expected.sigma_ln))).toBeLessThan(1e-5);
-    expect(Math.abs(fit.logLikelihood + jacobian - Number(expected.loglik))).toBeLessThan(1e-5);
+    expect(Math.abs(fit.mean - mle("mu_ln"))).toBeLessThan(1e-5);
+    expect(Math.abs(fit.sd - mle("sigma_ln"))).toBeLessThan(1e-5);
+    expect(Math.abs(fit.logLikelihood + jacobian - mle("loglik"))).toBeLessThan(1e-5);
   });
 
   it("has the published mean below a detection limit", () => {
-    const row = rows.find((r) => r.case.startsWith("E[C | C<DL]"));
-    expect(meanBelowLimit(0.05, { mean: -2.5, sd: 0.7 })).toBeCloseTo(Number(row?.expected), 10);
+    expect(meanBelowLimit(0.05, { mean: -2.5, sd: 0.7 })).toBeCloseTo(expected.number("E[C | C<DL]"), 10);
   });
 });

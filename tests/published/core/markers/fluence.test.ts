@@ -1,14 +1,11 @@
 import { describe, expect, it } from "vitest";
 import { type FluenceCell, integratedExcess, tailAbove } from "../../../../src/core/markers/fluence.ts";
 import { simulateFluence } from "../../../../src/core/markers/fluence-simulation.ts";
+import { expectedValues } from "./expected-values.ts";
 import rows from "./fluence.json" with { type: "json" };
 
 /** The rows' source: own Python with numpy (make-fluence.py). */
-function expectedOf(start: string): unknown {
-  const row = rows.find((r) => r.case.startsWith(start));
-  if (row === undefined) throw new Error(`no row ${start}`);
-  return row.expected;
-}
+const expected = expectedValues(rows);
 
 const errors = { sigma: 0, densitySigma: 0, densityCommonSigma: 0, boundarySigmaCm: 0 };
 const base = [0, 2, 4, 5, 6, 7, 8, 10, 13, 17];
@@ -35,32 +32,30 @@ const exact = (mean: number) => ({ background: { mean, sigma: 0 }, calibration: 
 
 describe("fluence", () => {
   it("sums the worked channel samples", () => {
-    expect(integratedExcess(channel).value).toBeCloseTo(Number(expectedOf("slab sum")), 9);
+    expect(integratedExcess(channel).value).toBeCloseTo(expected.number("slab sum"), 9);
   });
 
   it("has the published variance terms", () => {
     const { variance, sigma } = integratedExcess(channel);
-    const expected = expectedOf("variance terms") as Record<string, number>;
-    expect(variance.analytic).toBeCloseTo(expected.analytic, 9);
-    expect(variance.background).toBeCloseTo(expected.background, 9);
-    expect(variance.densityIndependent).toBeCloseTo(expected.rho_independent, 9);
-    expect(variance.densityCommon).toBeCloseTo(expected.rho_common, 9);
-    expect(variance.calibration).toBeCloseTo(expected.calibration, 9);
-    expect(variance.boundaries).toBeCloseTo(expected.boundaries, 8);
-    expect(sigma).toBeCloseTo(expected.total_sd, 8);
+    expect(variance.analytic).toBeCloseTo(expected.number("variance terms", "analytic"), 9);
+    expect(variance.background).toBeCloseTo(expected.number("variance terms", "background"), 9);
+    expect(variance.densityIndependent).toBeCloseTo(expected.number("variance terms", "rho_independent"), 9);
+    expect(variance.densityCommon).toBeCloseTo(expected.number("variance terms", "rho_common"), 9);
+    expect(variance.calibration).toBeCloseTo(expected.number("variance terms", "calibration"), 9);
+    expect(variance.boundaries).toBeCloseTo(expected.number("variance terms", "boundaries"), 8);
+    expect(sigma).toBeCloseTo(expected.number("variance terms", "total_sd"), 8);
   });
 
   it("simulates the published distribution", () => {
     const got = simulateFluence(channel, { replicates: 20000, seed: 1, level: 0.95 });
-    const expected = expectedOf("Monte Carlo") as Record<string, number>;
     const pairs = [
-      [got.mean, expected.mean],
-      [got.sd, expected.sd],
-      [got.low, expected.q025],
-      [got.low68, expected.q16],
-      [got.median, expected.q50],
-      [got.high68, expected.q84],
-      [got.high95, expected.q975],
+      [got.mean, expected.number("Monte Carlo", "mean")],
+      [got.sd, expected.number("Monte Carlo", "sd")],
+      [got.low, expected.number("Monte Carlo", "q025")],
+      [got.low68, expected.number("Monte Carlo", "q16")],
+      [got.median, expected.number("Monte Carlo", "q50")],
+      [got.high68, expected.number("Monte Carlo", "q84")],
+      [got.high95, expected.number("Monte Carlo", "q975")],
     ];
     for (const [value, reference] of pairs) expect(Math.abs(value - reference)).toBeLessThan(0.15);
   });
@@ -70,7 +65,7 @@ describe("fluence", () => {
     const values = [0.03, 0.05, 3.8, 2.9, 1.7, 0.8, 0.2, 0.04];
     const cells = heights.map((h, i) => ({ ...errors, baseCm: h, topCm: h, value: values[i], density: 2.2 }));
     const got = integratedExcess({ cells, ...exact(0.035) });
-    expect(got.value).toBeCloseTo(Number(expectedOf("point samples, trapezoid")), 9);
+    expect(got.value).toBeCloseTo(expected.number("point samples, trapezoid"), 9);
     expect(got.zeroFill).toBeCloseTo(got.value, 9);
     expect(got.coverage).toBe(1);
   });
@@ -83,26 +78,24 @@ describe("fluence", () => {
     ];
     const cells = edges.map(([baseCm, topCm, value]) => ({ ...errors, baseCm, topCm, value, density: 2 }));
     const got = integratedExcess({ cells, ...exact(0) });
-    const expected = expectedOf("gap 2-3 cm") as Record<string, number>;
-    expect(got.zeroFill).toBeCloseTo(expected.zero, 9);
-    expect(got.value).toBeCloseTo(expected.linear, 9);
-    expect(got.nearestFill).toBeCloseTo(expected.nearest, 9);
-    expect(got.coverage).toBeCloseTo(expected.coverage, 9);
+    expect(got.zeroFill).toBeCloseTo(expected.number("gap 2-3 cm", "zero"), 9);
+    expect(got.value).toBeCloseTo(expected.number("gap 2-3 cm", "linear"), 9);
+    expect(got.nearestFill).toBeCloseTo(expected.number("gap 2-3 cm", "nearest"), 9);
+    expect(got.coverage).toBeCloseTo(expected.number("gap 2-3 cm", "coverage"), 9);
   });
 
   it("bounds a slab below detection", () => {
     const cell = { ...errors, baseCm: 0, topCm: 5, value: 0.03, limit: 0.05, density: 2 };
     const got = integratedExcess({ cells: [cell], ...exact(0.02) });
-    const expected = expectedOf("censored slab bounds") as Record<string, number>;
-    expect(got.lowCensored).toBeCloseTo(expected.lo, 9);
-    expect(got.highCensored).toBeCloseTo(expected.hi, 9);
+    expect(got.lowCensored).toBeCloseTo(expected.number("censored slab bounds", "lo"), 9);
+    expect(got.highCensored).toBeCloseTo(expected.number("censored slab bounds", "hi"), 9);
   });
 
   it("has the published tail and unit", () => {
-    expect(tailAbove(0.2, 4, 2)).toBeCloseTo(Number(expectedOf("tail beyond")), 12);
+    expect(tailAbove(0.2, 4, 2)).toBeCloseTo(expected.number("tail beyond"), 12);
     const cell = { ...errors, baseCm: 0, topCm: 1.5, value: 5, density: 2.2 };
     expect(integratedExcess({ cells: [cell], ...exact(0) }).value).toBeCloseTo(
-      Number(expectedOf("excess 5 ng/g")),
+      expected.number("excess 5 ng/g"),
       12,
     );
   });

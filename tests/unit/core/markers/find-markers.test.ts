@@ -108,6 +108,11 @@ describe("a found iridium horizon", () => {
   });
 });
 
+const flagsOf = (section: Section) => findMarkers(handMadeStudy([section])).flags.map((f) => f.flag);
+
+const width = ({ fluence }: MarkerHorizon) =>
+  fluence === undefined ? 0 : (fluence.high - fluence.low) / fluence.value;
+
 describe("flags", () => {
   const origin = { file: "beds.csv", row: 2 };
   const bed = (baseM: number, topM: number, part: object) => ({
@@ -118,7 +123,6 @@ describe("flags", () => {
     origin,
     ...part,
   });
-  const flagsOf = (section: Section) => findMarkers(handMadeStudy([section])).flags.map((f) => f.flag);
 
   it("name the single sample, the unresolved mixing and the coarse sampling of a thin layer", () => {
     const flags = flagsOf(sectionWith(thin));
@@ -140,8 +144,6 @@ describe("flags", () => {
     const section = { ...sectionWith(smear, { beds }), densityGCm3: undefined };
     const assumed = found(section);
     expect(flagsOf(section)).toContain("ASSUMED_DENSITY");
-    const width = ({ fluence }: MarkerHorizon) =>
-      fluence === undefined ? 0 : (fluence.high - fluence.low) / fluence.value;
     expect(width(assumed)).toBeGreaterThan(2 * width(stated));
   });
 

@@ -34,8 +34,8 @@ export function measurementsOf(analyte: string, samples: readonly HandMadeSample
 
 export function handMadeSection(part: Partial<Section> = {}): Section {
   return {
-    name: "Orsk Ledge",
-    title: "Orsk Ledge",
+    name: "Orskel Ledge",
+    title: "Orskel Ledge",
     axis: "height",
     unit: "m",
     datum: "base of the ledge",

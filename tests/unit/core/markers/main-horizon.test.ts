@@ -31,7 +31,7 @@ const same = [
   {
     name: "veyra-impact",
     horizons: [
-      ["Orsk Ledge", "iridium-1"],
+      ["Orskel Ledge", "iridium-1"],
       ["Tamber Quarry", "iridium-2"],
     ] as [string, string][],
   },
@@ -40,15 +40,18 @@ const codes = (cautions: readonly { code: string }[]) => cautions.map((c) => c.c
 
 describe("the main horizon", () => {
   it("is the one given impact name, wherever it is placed", () => {
-    const given = [horizon("Orsk Ledge", "veyra-impact"), horizon("Tamber Quarry", "ash-1", { kind: "ash" })];
+    const given = [
+      horizon("Orskel Ledge", "veyra-impact"),
+      horizon("Tamber Quarry", "ash-1", { kind: "ash" }),
+    ];
     const { main } = settleMainHorizon(given, plain);
     expect(main).toMatchObject({ name: "veyra-impact", settledBy: "given-impact", isShared: true });
-    expect([...main.bySection.keys()]).toEqual(["Orsk Ledge"]);
+    expect([...main.bySection.keys()]).toEqual(["Orskel Ledge"]);
   });
 
   it("is ambiguous with two given impact names, which are listed", () => {
     const { main, cautions } = settleMainHorizon(
-      [horizon("Orsk Ledge", "first"), horizon("Tamber Quarry", "second")],
+      [horizon("Orskel Ledge", "first"), horizon("Tamber Quarry", "second")],
       plain,
     );
     expect(main.settledBy).toBe("ambiguous");
@@ -60,31 +63,34 @@ describe("the main horizon", () => {
   });
 
   it("is the declared name, even beside two given impacts", () => {
-    const two = [horizon("Orsk Ledge", "first"), horizon("Tamber Quarry", "second")];
+    const two = [horizon("Orskel Ledge", "first"), horizon("Tamber Quarry", "second")];
     const { main } = settleMainHorizon(two, { ...plain, horizon: "second" });
     expect(main).toMatchObject({ name: "second", settledBy: "setting" });
     expect([...main.bySection.keys()]).toEqual(["Tamber Quarry"]);
   });
 
   it("names a declared horizon that is nowhere", () => {
-    const { cautions } = settleMainHorizon([horizon("Orsk Ledge", "first")], { ...plain, horizon: "third" });
+    const { cautions } = settleMainHorizon([horizon("Orskel Ledge", "first")], {
+      ...plain,
+      horizon: "third",
+    });
     expect(cautions).toContainEqual({ code: "boundary-horizon-unknown", subject: "third" });
   });
 
   it("is, with none given, the found iridium of largest fluence in each section, not shared", () => {
     const all = [
-      found("Orsk Ledge", "iridium-1", 5),
-      found("Orsk Ledge", "iridium-2", 40),
+      found("Orskel Ledge", "iridium-1", 5),
+      found("Orskel Ledge", "iridium-2", 40),
       found("Tamber Quarry", "iridium-1", 30),
     ];
     const { main, cautions } = settleMainHorizon(all, plain);
     expect(main).toMatchObject({ settledBy: "found-iridium", isShared: false });
-    expect(main.bySection.get("Orsk Ledge")?.name).toBe("iridium-2");
+    expect(main.bySection.get("Orskel Ledge")?.name).toBe("iridium-2");
     expect(codes(cautions)).toEqual(["main-horizon-by-section"]);
   });
 
   it("is shared once the found horizons are declared one", () => {
-    const all = [found("Orsk Ledge", "iridium-1", 40), found("Tamber Quarry", "iridium-2", 30)];
+    const all = [found("Orskel Ledge", "iridium-1", 40), found("Tamber Quarry", "iridium-2", 30)];
     const { main, horizons } = settleMainHorizon(all, { ...plain, same });
     expect(main).toMatchObject({ name: "veyra-impact", isShared: true });
     expect(horizons.map((h) => h.horizon)).toEqual(["veyra-impact", "veyra-impact"]);
@@ -92,12 +98,12 @@ describe("the main horizon", () => {
 
   it("is the given one where a section has both; a difference beyond two sigma is said", () => {
     const all = [
-      horizon("Orsk Ledge", "veyra-impact"),
-      found("Orsk Ledge", "iridium-1", 40, 10.3),
+      horizon("Orskel Ledge", "veyra-impact"),
+      found("Orskel Ledge", "iridium-1", 40, 10.3),
       found("Tamber Quarry", "iridium-2", 30),
     ];
     const { main, cautions } = settleMainHorizon(all, { ...plain, same });
-    expect(main.bySection.get("Orsk Ledge")?.source).toBe("given");
+    expect(main.bySection.get("Orskel Ledge")?.source).toBe("given");
     expect(main.bySection.get("Tamber Quarry")?.source).toBe("found");
     expect(codes(cautions)).toEqual(["given-found-differ"]);
     const near = all.map((h) => (h.positionM === 10.3 ? { ...h, positionM: 10.1 } : h));
@@ -105,7 +111,7 @@ describe("the main horizon", () => {
   });
 
   it("tells of a declared member that was not found", () => {
-    const { cautions } = settleMainHorizon([found("Orsk Ledge", "iridium-1", 40)], { ...plain, same });
+    const { cautions } = settleMainHorizon([found("Orskel Ledge", "iridium-1", 40)], { ...plain, same });
     expect(cautions[0]).toMatchObject({
       code: "same-horizon-missing",
       section: "Tamber Quarry",
