@@ -1,3 +1,5 @@
+import { tables } from "../../../src/core/study/tables/index.ts";
+import { tableResource, writeDataPackage } from "../../../src/core/tables/data-package.ts";
 import { trueRange } from "./fossils.ts";
 import { choicesTable, settingsJson } from "./settings.ts";
 import { studyTables } from "./tables.ts";
@@ -25,5 +27,18 @@ export const trueLevels = (truth: Truth): TrueLevel[] =>
 /** The whole study folder from the text of truth.json: file name to contents. */
 export function exampleStudy(truthText: string): Map<string, string> {
   const truth = readTruth(truthText);
-  return studyTables(truth).set("choices.csv", choicesTable(truth)).set("settings.json", settingsJson(truth));
+  const files = studyTables(truth)
+    .set("choices.csv", choicesTable(truth))
+    .set("settings.json", settingsJson(truth));
+  return files.set("datapackage.json", packageJson([...files.keys()]));
+}
+
+/** What the folder holds, and the study's title. */
+function packageJson(files: readonly string[]): string {
+  const held = tables.filter(({ name }) => files.includes(`${name}.csv`));
+  return writeDataPackage(
+    "veyra-shelf",
+    held.map((table) => tableResource(table)),
+    "Veyra Shelf",
+  );
 }

@@ -65,8 +65,14 @@ const packageName = (name: string): string =>
 /** What our reading needs of a data package: per path, the columns that carry apostrophes. */
 export type Apostrophes = ReadonlyMap<string, ReadonlySet<string>>;
 
-/** Reads the apostrophe record; undefined where the text is not a data package in JSON. */
-export function readApostrophes(text: string): Apostrophes | undefined {
+/** A study folder as its data package describes it. */
+export interface DescribedPackage {
+  readonly title?: string;
+  readonly apostrophes: Apostrophes;
+}
+
+/** Reads the title and the apostrophe record; undefined where the text is not a data package in JSON. */
+export function readDataPackage(text: string): DescribedPackage | undefined {
   const descriptor = parseObject(text);
   if (descriptor === undefined) return undefined;
   const columns = new Map<string, ReadonlySet<string>>();
@@ -78,7 +84,8 @@ export function readApostrophes(text: string): Apostrophes | undefined {
       new Set(listOf(resource, apostrophesProperty).filter((name) => typeof name === "string")),
     );
   }
-  return columns;
+  const title = property(descriptor, "title");
+  return { ...(typeof title === "string" && title !== "" ? { title } : {}), apostrophes: columns };
 }
 
 function parseObject(text: string): object | undefined {

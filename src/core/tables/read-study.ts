@@ -8,11 +8,11 @@ import { mergeSettings } from "../study/setting-path.ts";
 import type { Settings } from "../study/settings.ts";
 import { type TableName, tables } from "../study/tables/index.ts";
 import { decodeText } from "./csv.ts";
-import { type Apostrophes, readApostrophes } from "./data-package.ts";
+import { type DescribedPackage, readDataPackage } from "./data-package.ts";
 import { readSheet } from "./read-sheet.ts";
 
 export interface ReadStudyOptions {
-  /** The study's name; absent: the folder that the files lie in, else "study". */
+  /** The study's name where datapackage.json gives no title; absent: the folder of the files, else "study". */
   readonly name?: string;
   /** Settings that stand over those of settings.json, in the same form. */
   readonly settings?: unknown;
@@ -23,17 +23,18 @@ export interface ReadStudyOptions {
  * leaves its row or its file out and takes nothing else with it. Never throws on bad input.
  *
  * @example
- * readStudy(new Map([["occurrences.csv", new TextEncoder().encode("section,taxon,height (m)\nOrsk Ledge,Velorites orskensis,1.2\n")]]))
+ * readStudy(new Map([["occurrences.csv", new TextEncoder().encode("section,taxon,height (m)\nOrskel Ledge,Velorites orskelensis,1.2\n")]]))
  */
 export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadStudyOptions = {}): Study {
   const problems = problemList();
   const settings = settingsOf(files, options.settings, problems);
-  const sheets = readSheets(files, problems);
+  const described = packageOf(files, problems);
+  const sheets = readSheets(files, described, problems);
   const assembly = { settings, problems, sheets };
   const assembled = assembleStudy(assembly);
   if (!hasData(sheets)) problems.add("no-data", { file: "study", found: "none of them can be used" });
   return {
-    name: options.name ?? folderOf(files) ?? "study",
+    name: described.title ?? options.name ?? folderOf(files) ?? "study",
     settings,
     ...assembled,
     problems: problems.problems(),
@@ -73,14 +74,17 @@ function parseSettings(file: string, bytes: Uint8Array, problems: ProblemList): 
   }
 }
 
-function apostrophesOf(files: ReadonlyMap<string, Uint8Array>, problems: ProblemList): Apostrophes {
+function packageOf(files: ReadonlyMap<string, Uint8Array>, problems: ProblemList): DescribedPackage {
   const [path, bytes] = find(files, "datapackage.json") ?? ["", undefined];
-  if (bytes === undefined) return new Map();
+  if (bytes === undefined) return { apostrophes: new Map() };
   const text = decodeText(bytes);
-  const apostrophes = text === undefined ? undefined : readApostrophes(text);
-  if (apostrophes === undefined)
+  const described = text === undefined ? undefined : readDataPackage(text);
+  if (described === undefined)
     problems.add("package-unreadable", { file: path, found: text ?? "bytes that are not UTF-8" });
-  return new Map([...(apostrophes ?? [])].map(([file, columns]) => [baseName(file), columns]));
+  const apostrophes = [...(described?.apostrophes ?? [])].map(
+    ([file, columns]) => [baseName(file), columns] as const,
+  );
+  return { ...described, apostrophes: new Map(apostrophes) };
 }
 
 const companions =
@@ -94,9 +98,9 @@ function tableNamed(file: string) {
 
 function readSheets(
   files: ReadonlyMap<string, Uint8Array>,
+  { apostrophes }: DescribedPackage,
   problems: ProblemList,
 ): ReadonlyMap<TableName, ReadSheet> {
-  const apostrophes = apostrophesOf(files, problems);
   const sheets = new Map<TableName, ReadSheet>();
   const first = new Map<TableName, string>();
   for (const [path, bytes] of files) {

@@ -11,7 +11,7 @@ h4{font-size:13px;margin:18px 0 4px;color:var(--soft)}
 h4.set{font-size:15px;color:var(--ink)}
 nav{display:flex;flex-wrap:wrap;gap:4px 18px}
 a{color:var(--rust)}
-.sentence{font-family:Source Serif 4,Georgia,serif;font-size:20px;line-height:1.45;max-width:40em}
+.sentence{font-family:Georgia,Times New Roman,serif;font-size:20px;line-height:1.45;max-width:40em}
 .numbers{max-width:760px}
 table{border-collapse:collapse;width:100%;font-size:13px;font-variant-numeric:tabular-nums}
 th,td{text-align:left;vertical-align:top;padding:4px 12px 4px 0;border-bottom:1px solid var(--hair)}

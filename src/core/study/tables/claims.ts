@@ -12,7 +12,7 @@ export const claims = table({
       example: "one-level",
     },
     value: { type: "text", required: true, help: "The published answer.", example: "0.21" },
-    section: { type: "text", help: "The section meant.", example: "Orsk Ledge" },
+    section: { type: "text", help: "The section meant.", example: "Orskel Ledge" },
     taxon: { type: "text", help: "The taxon meant.", synonyms: ["species"] },
     method: { type: "text", help: "The method used." },
     horizon: { type: "text", help: "The horizon meant." },

@@ -64,7 +64,7 @@ export const sectionColumn = {
   help: "The section's name, the same in every table.",
   synonyms: ["locality", "site", "core", "well", "borehole", "hole", "profile"],
   dwc: "parentEventID",
-  example: "Orsk Ledge",
+  example: "Orskel Ledge",
 } as const satisfies ColumnDeclaration;
 
 export const inSections = [{ columns: ["section"], table: "sections", to: ["section"] }] as const;

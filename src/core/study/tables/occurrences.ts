@@ -22,7 +22,7 @@ export const occurrences = table({
       help: "The name as written, with its signs of open nomenclature.",
       dwc: "scientificName",
       synonyms: ["species", "name", "taxon name", "verbatimIdentification", "fossil"],
-      example: "Velorites cf. orskensis",
+      example: "Velorites cf. orskelensis",
     },
     sample: {
       type: "text",

@@ -14,7 +14,7 @@ export const publishedRanges = table({
       help: "The taxon.",
       dwc: "scientificName",
       synonyms: ["species", "name", "taxon name"],
-      example: "Velorites orskensis",
+      example: "Velorites orskelensis",
     },
     first: {
       type: "number",

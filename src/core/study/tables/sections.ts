@@ -11,7 +11,7 @@ export const sections = table({
       type: "text",
       help: "The section's full name, as it should be printed.",
       synonyms: ["title"],
-      example: "Orsk Ledge, north face",
+      example: "Orskel Ledge, north face",
     },
     axis: {
       type: "enum",

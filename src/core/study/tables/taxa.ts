@@ -13,7 +13,7 @@ export const taxa = table({
       help: "The clean name, as finds carry it without signs of open nomenclature.",
       dwc: "scientificName",
       synonyms: ["species", "name", "taxon name"],
-      example: "Velorites orskensis",
+      example: "Velorites orskelensis",
     },
     group: { type: "text", help: "The group it is searched and tested with.", example: "ammonites" },
     accepted: {

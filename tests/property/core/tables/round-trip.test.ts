@@ -110,7 +110,7 @@ describe("reading never throws", () => {
         "1e308",
         "-1e308",
         "0",
-        "Orsk Ledge",
+        "Orskel Ledge",
         "A",
         "S1",
         "nd",
@@ -121,15 +121,15 @@ describe("reading never throws", () => {
       ),
     );
     const tables: Readonly<Record<string, string>> = {
-      "sections.csv": "section,axis,unit,bottom,top\nOrsk Ledge,height,m,0,20\nTarn Cut,depth,ft,,\n",
-      "legs.csv": "section,leg,reading,position\nOrsk Ledge,A,0,0\nOrsk Ledge,A,10,9\n",
+      "sections.csv": "section,axis,unit,bottom,top\nOrskel Ledge,height,m,0,20\nTarn Cut,depth,ft,,\n",
+      "legs.csv": "section,leg,reading,position\nOrskel Ledge,A,0,0\nOrskel Ledge,A,10,9\n",
       "samples.csv":
-        "section,sample,position,thickness,leg\nOrsk Ledge,S1,1,0.1,A\nOrsk Ledge,S2,2,0.1,\nTarn Cut,S1,10,,\n",
+        "section,sample,position,thickness,leg\nOrskel Ledge,S1,1,0.1,A\nOrskel Ledge,S2,2,0.1,\nTarn Cut,S1,10,,\n",
       "occurrences.csv":
-        "section,taxon,sample,position,count,qualifier\nOrsk Ledge,Orvella tenuis,S1,,3,cf.\nTarn Cut,Orvella tenuis,,11,,\n",
+        "section,taxon,sample,position,count,qualifier\nOrskel Ledge,Orvella tenuis,S1,,3,cf.\nTarn Cut,Orvella tenuis,,11,,\n",
       "measurements.csv":
-        "section,sample,analyte,value,unit,error,error_kind,detection_limit\nOrsk Ledge,S1,Ir,0.2,ppb,10,1s%,0.1\n",
-      "horizons.csv": "section,horizon,kind,position,below,above,age_ma\nOrsk Ledge,H,impact,5,0.1,0.1,66\n",
+        "section,sample,analyte,value,unit,error,error_kind,detection_limit\nOrskel Ledge,S1,Ir,0.2,ppb,10,1s%,0.1\n",
+      "horizons.csv": "section,horizon,kind,position,below,above,age_ma\nOrskel Ledge,H,impact,5,0.1,0.1,66\n",
     };
     const damage = fc.array(fc.tuple(fc.constantFrom(...Object.keys(tables)), fc.nat(30), cell), {
       minLength: 1,

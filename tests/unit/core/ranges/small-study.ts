@@ -4,7 +4,7 @@ import type { RockInterval, Sample, Search, Section, Study } from "../../../../s
 import { defaultSettings, type Settings } from "../../../../src/core/study/settings.ts";
 
 const origin = { file: "test.csv", row: 2 };
-export const sectionName = "Orsk Ledge";
+export const sectionName = "Orskel Ledge";
 
 /** A section from 0 to `topM` metres with a sample every metre, named by its height, searched for both groups. */
 export function section(options: Partial<Section> & { readonly efforts?: readonly number[] } = {}): Section {

@@ -3,21 +3,21 @@ import { parseName } from "../../../../src/core/study/open-nomenclature.ts";
 
 describe("open nomenclature", () => {
   it.each([
-    ["Velorites orskensis", "Velorites orskensis", undefined],
-    ["  Velorites   orskensis ", "Velorites orskensis", undefined],
-    ["Velorites cf. orskensis", "Velorites orskensis", "cf."],
-    ["Velorites cf orskensis", "Velorites orskensis", "cf."],
-    ["Velorites c.f. orskensis", "Velorites orskensis", "cf."],
-    ["cf. Velorites orskensis", "Velorites orskensis", "cf."],
-    ["Velorites aff. orskensis", "Velorites orskensis", "aff."],
-    ["Velorites orskensis?", "Velorites orskensis", "?"],
-    ["Velorites ?orskensis", "Velorites orskensis", "?"],
-    ["Velorites ? orskensis", "Velorites orskensis", "?"],
-    ["Velorites orskensis ?", "Velorites orskensis", "?"],
-    ["Velorites? orskensis", "Velorites orskensis", "? genus"],
-    ["?Velorites orskensis", "Velorites orskensis", "? genus"],
-    ["Velorites ex gr. orskensis", "Velorites orskensis", "ex gr."],
-    ["Velorites gr. orskensis", "Velorites orskensis", "ex gr."],
+    ["Velorites orskelensis", "Velorites orskelensis", undefined],
+    ["  Velorites   orskelensis ", "Velorites orskelensis", undefined],
+    ["Velorites cf. orskelensis", "Velorites orskelensis", "cf."],
+    ["Velorites cf orskelensis", "Velorites orskelensis", "cf."],
+    ["Velorites c.f. orskelensis", "Velorites orskelensis", "cf."],
+    ["cf. Velorites orskelensis", "Velorites orskelensis", "cf."],
+    ["Velorites aff. orskelensis", "Velorites orskelensis", "aff."],
+    ["Velorites orskelensis?", "Velorites orskelensis", "?"],
+    ["Velorites ?orskelensis", "Velorites orskelensis", "?"],
+    ["Velorites ? orskelensis", "Velorites orskelensis", "?"],
+    ["Velorites orskelensis ?", "Velorites orskelensis", "?"],
+    ["Velorites? orskelensis", "Velorites orskelensis", "? genus"],
+    ["?Velorites orskelensis", "Velorites orskelensis", "? genus"],
+    ["Velorites ex gr. orskelensis", "Velorites orskelensis", "ex gr."],
+    ["Velorites gr. orskelensis", "Velorites orskelensis", "ex gr."],
     ["Velorites sp.", "Velorites", "sp."],
     ["Velorites sp", "Velorites", "sp."],
     ["Velorites spp.", "Velorites", "spp."],
@@ -25,12 +25,12 @@ describe("open nomenclature", () => {
     ["Velorites sp. 1", "Velorites sp. 1", undefined],
     ["Velorites sp. nov.", "Velorites", "sp. nov."],
     ["Velorites n. sp.", "Velorites", "sp. nov."],
-    ["Velorites orskensis sp. nov.", "Velorites orskensis", "sp. nov."],
+    ["Velorites orskelensis sp. nov.", "Velorites orskelensis", "sp. nov."],
     ["Velorites indet.", "Velorites", "indet."],
-    ["Velorites orskensis s.l.", "Velorites orskensis", "s.l."],
-    ["Velorites orskensis s. s.", "Velorites orskensis", "s.s."],
-    ["Velorites orskensis sensu lato", "Velorites orskensis", "s.l."],
-    ['"Velorites" orskensis', '"Velorites" orskensis', undefined],
+    ["Velorites orskelensis s.l.", "Velorites orskelensis", "s.l."],
+    ["Velorites orskelensis s. s.", "Velorites orskelensis", "s.s."],
+    ["Velorites orskelensis sensu lato", "Velorites orskelensis", "s.l."],
+    ['"Velorites" orskelensis', '"Velorites" orskelensis', undefined],
     ["Species A", "Species A", undefined],
     ["?", "?", undefined],
     ["cf.", "cf.", undefined],
@@ -40,25 +40,25 @@ describe("open nomenclature", () => {
   });
 
   it("reads the qualifier column where the name carries no sign, with or without the epithet", () => {
-    expect(parseName("Velorites orskensis", "cf.")).toMatchObject({
-      name: "Velorites orskensis",
+    expect(parseName("Velorites orskelensis", "cf.")).toMatchObject({
+      name: "Velorites orskelensis",
       qualifier: "cf.",
     });
-    expect(parseName("Velorites", "aff. orskensis")).toMatchObject({
-      name: "Velorites orskensis",
+    expect(parseName("Velorites", "aff. orskelensis")).toMatchObject({
+      name: "Velorites orskelensis",
       qualifier: "aff.",
     });
-    expect(parseName("Velorites orskensis", "?")).toMatchObject({
-      name: "Velorites orskensis",
+    expect(parseName("Velorites orskelensis", "?")).toMatchObject({
+      name: "Velorites orskelensis",
       qualifier: "?",
     });
     expect(parseName("Velorites", "sp.")).toMatchObject({ name: "Velorites", qualifier: "sp." });
-    expect(parseName("Velorites aff. orskensis", "cf.")).toMatchObject({ qualifier: "aff." });
+    expect(parseName("Velorites aff. orskelensis", "cf.")).toMatchObject({ qualifier: "aff." });
   });
 
   it("tells the rank", () => {
-    expect(parseName("Velorites orskensis minor").rank).toBe("subspecies");
-    expect(parseName("Velorites cf. orskensis").rank).toBe("species");
+    expect(parseName("Velorites orskelensis minor").rank).toBe("subspecies");
+    expect(parseName("Velorites cf. orskelensis").rank).toBe("species");
     expect(parseName("Veloritidae indet.").rank).toBe("above-species");
   });
 });

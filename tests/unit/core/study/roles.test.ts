@@ -5,7 +5,7 @@ import { defaultSettings } from "../../../../src/core/study/settings.ts";
 import { sampleAt, searchOf, sectionWith } from "./sections.ts";
 
 const taxon = (heightsM: readonly number[], more: Partial<LocalTaxon> = {}): LocalTaxon => ({
-  section: "orsk-ledge",
+  section: "orskel-ledge",
   taxon: "Orvella tenuis",
   group: "ammonoids",
   heightsM,
@@ -59,14 +59,14 @@ describe("roles against the main horizon", () => {
     });
     const finds = [5, 10.5].map((heightM, i) => ({
       origin: { file: "occurrences.csv", row: i + 2 },
-      section: "orsk-ledge",
+      section: "orskel-ledge",
       verbatim: "Orvella tenuis",
       accepted: "Orvella tenuis",
       heightM,
       used: "yes" as const,
       reason: "used" as const,
     }));
-    const marked = markBelowCeiling(finds, result.candidates, new Map([["orsk-ledge", mixed]]));
+    const marked = markBelowCeiling(finds, result.candidates, new Map([["orskel-ledge", mixed]]));
     expect(marked.map((f) => f.reason)).toEqual(["used", "below-reworking-ceiling"]);
   });
 

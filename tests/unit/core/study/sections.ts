@@ -31,8 +31,8 @@ export const searchOf = (sample: Sample, group: string): Search => ({
 });
 
 export const sectionWith = (more: Partial<Section>): Section => ({
-  name: "orsk-ledge",
-  title: "Orsk Ledge",
+  name: "orskel-ledge",
+  title: "Orskel Ledge",
   axis: "height",
   unit: "m",
   datum: "base of the ledge",

@@ -5,14 +5,14 @@ import { errorsOf, lines, onlySection, problemsOf, sections, studyFrom } from ".
 const finds = (...rows: readonly string[]) => lines("section,taxon,position,count", ...rows);
 const samples = (...rows: readonly string[]) =>
   lines("section,sample,position,thickness,base,top,leg", ...rows);
-const good = "Orsk Ledge,Velorites orskensis,1.5,2";
+const good = "Orskel Ledge,Velorites orskelensis,1.5,2";
 const heights = (study: ReturnType<typeof studyFrom>) =>
   onlySection(study).occurrences.map(({ heightM }) => heightM);
 
 const beds = (axis: string) =>
   studyFrom({
-    "sections.csv": lines("section,axis,unit", `Orsk Ledge,${axis},m`),
-    "beds.csv": lines("section,base,top,lithology", "Orsk Ledge,5,4,marl", "Orsk Ledge,4,5,chalk"),
+    "sections.csv": lines("section,axis,unit", `Orskel Ledge,${axis},m`),
+    "beds.csv": lines("section,base,top,lithology", "Orskel Ledge,5,4,marl", "Orskel Ledge,4,5,chalk"),
     "occurrences.csv": finds(good),
   });
 
@@ -20,11 +20,11 @@ describe("read without remark", () => {
   it("takes a byte-order mark and CRLF line ends", () => {
     const plain = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds(good, "Orsk Ledge,Velorites orskensis,2,1"),
+      "occurrences.csv": finds(good, "Orskel Ledge,Velorites orskelensis,2,1"),
     });
     const dressed = studyFrom({
       "sections.csv": `\uFEFF${sections.replaceAll("\n", "\r\n")}`,
-      "occurrences.csv": `\uFEFF${finds(good, "Orsk Ledge,Velorites orskensis,2,1").replaceAll("\n", "\r\n")}`,
+      "occurrences.csv": `\uFEFF${finds(good, "Orskel Ledge,Velorites orskelensis,2,1").replaceAll("\n", "\r\n")}`,
     });
     expect(dressed.sections).toEqual(plain.sections);
     expect(dressed.problems).toEqual(plain.problems);
@@ -34,7 +34,7 @@ describe("read without remark", () => {
   it("counts rows as a spreadsheet does: quoted line breaks do not shift, blank rows do", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "samples.csv": 'section,sample,position,notes\nOrsk Ledge,A,1,"two\nlines"\n\nOrsk Ledge,B,x,\n',
+      "samples.csv": 'section,sample,position,notes\nOrskel Ledge,A,1,"two\nlines"\n\nOrskel Ledge,B,x,\n',
       "occurrences.csv": finds(good),
     });
     expect(problemsOf(study, "not-a-number")).toMatchObject([
@@ -48,7 +48,7 @@ describe("caution, and used", () => {
   it("uses a duplicated identical row once", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds(good, good, "Orsk Ledge,Velorites orskensis,3,1"),
+      "occurrences.csv": finds(good, good, "Orskel Ledge,Velorites orskelensis,3,1"),
     });
     expect(problemsOf(study, "duplicate-row")).toMatchObject([{ severity: "caution", row: 3 }]);
     expect(heights(study)).toEqual([1.5, 3]);
@@ -57,7 +57,7 @@ describe("caution, and used", () => {
   it("keeps count 0 as looked for and not found", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds("Orsk Ledge,Velorites orskensis,1.5,0"),
+      "occurrences.csv": finds("Orskel Ledge,Velorites orskelensis,1.5,0"),
     });
     expect(problemsOf(study, "count-zero")).toMatchObject([{ severity: "caution", row: 2, column: "count" }]);
     expect(onlySection(study).occurrences[0].count).toBe(0);
@@ -66,13 +66,17 @@ describe("caution, and used", () => {
   it("tells a taxon with all finds at one level, and one with a single find", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds(good, "Orsk Ledge,Velorites orskensis,1.5,7", "Orsk Ledge,Orvella tenuis,9,1"),
+      "occurrences.csv": finds(
+        good,
+        "Orskel Ledge,Velorites orskelensis,1.5,7",
+        "Orskel Ledge,Orvella tenuis,9,1",
+      ),
     });
     expect(problemsOf(study, "one-level")).toMatchObject([
-      { severity: "caution", found: "Velorites orskensis in Orsk Ledge" },
+      { severity: "caution", found: "Velorites orskelensis in Orskel Ledge" },
     ]);
     expect(problemsOf(study, "one-occurrence")).toMatchObject([
-      { severity: "caution", found: "Orvella tenuis in Orsk Ledge" },
+      { severity: "caution", found: "Orvella tenuis in Orskel Ledge" },
     ]);
     expect(heights(study)).toEqual([1.5, 1.5, 9]);
   });
@@ -90,7 +94,7 @@ describe("an error on the row, the rest goes on", () => {
   ])("leaves out a row with %s for a number", (text, code) => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds(`Orsk Ledge,Velorites orskensis,${text},1`, good),
+      "occurrences.csv": finds(`Orskel Ledge,Velorites orskelensis,${text},1`, good),
     });
     expect(problemsOf(study, code)).toMatchObject([
       { severity: "error", file: "occurrences.csv", row: 2, column: "position", found: text },
@@ -101,8 +105,8 @@ describe("an error on the row, the rest goes on", () => {
   it("leaves out a negative thickness and a count that is no whole number", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "samples.csv": samples("Orsk Ledge,A,1,-0.1,,,", "Orsk Ledge,B,2,0.1,,,"),
-      "occurrences.csv": finds(good, "Orsk Ledge,Velorites orskensis,2,1.5"),
+      "samples.csv": samples("Orskel Ledge,A,1,-0.1,,,", "Orskel Ledge,B,2,0.1,,,"),
+      "occurrences.csv": finds(good, "Orskel Ledge,Velorites orskelensis,2,1.5"),
     });
     expect(problemsOf(study, "out-of-limits")).toMatchObject([
       { severity: "error", file: "samples.csv", row: 2, column: "thickness" },
@@ -127,18 +131,18 @@ describe("an error on the row, the rest goes on", () => {
   it("leaves out an unlisted section and names the nearest", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds("Orsk Lege,Velorites orskensis,1,1", good),
+      "occurrences.csv": finds("Orsk Lege,Velorites orskelensis,1,1", good),
     });
     const [problem] = problemsOf(study, "unlisted-section");
     expect(problem).toMatchObject({ severity: "error", row: 2, column: "section", found: "Orsk Lege" });
-    expect(problem.mend).toContain("Orsk Ledge");
+    expect(problem.mend).toContain("Orskel Ledge");
     expect(heights(study)).toEqual([1.5]);
   });
 
   it("leaves out the second row of a sample with other content", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "samples.csv": samples("Orsk Ledge,A,1,,,,", "Orsk Ledge,A,2,,,,"),
+      "samples.csv": samples("Orskel Ledge,A,1,,,,", "Orskel Ledge,A,2,,,,"),
       "occurrences.csv": finds(good),
     });
     expect(problemsOf(study, "redefined")).toMatchObject([
@@ -150,8 +154,12 @@ describe("an error on the row, the rest goes on", () => {
   it("leaves out a reading outside its leg", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "legs.csv": lines("section,leg,reading,position", "Orsk Ledge,A,0,10", "Orsk Ledge,A,5,14"),
-      "samples.csv": samples("Orsk Ledge,in,2.5,,,,A", "Orsk Ledge,out,5.1,,,,A", "Orsk Ledge,lost,1,,,,B"),
+      "legs.csv": lines("section,leg,reading,position", "Orskel Ledge,A,0,10", "Orskel Ledge,A,5,14"),
+      "samples.csv": samples(
+        "Orskel Ledge,in,2.5,,,,A",
+        "Orskel Ledge,out,5.1,,,,A",
+        "Orskel Ledge,lost,1,,,,B",
+      ),
       "occurrences.csv": finds(good),
     });
     expect(problemsOf(study, "outside-leg")).toMatchObject([
@@ -172,12 +180,12 @@ describe("an error on the row, the rest goes on", () => {
   it("leaves out a find in an unknown sample, and a row with neither sample nor position", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "samples.csv": samples("Orsk Ledge,A1,1,,,,"),
+      "samples.csv": samples("Orskel Ledge,A1,1,,,,"),
       "occurrences.csv": lines(
         "section,taxon,sample,position",
-        "Orsk Ledge,Orvella tenuis,A2,",
-        "Orsk Ledge,Orvella tenuis,,",
-        "Orsk Ledge,Orvella tenuis,A1,",
+        "Orskel Ledge,Orvella tenuis,A2,",
+        "Orskel Ledge,Orvella tenuis,,",
+        "Orskel Ledge,Orvella tenuis,A1,",
       ),
     });
     expect(problemsOf(study, "unknown-sample")).toMatchObject([{ severity: "error", row: 2, found: "A2" }]);
@@ -188,13 +196,13 @@ describe("an error on the row, the rest goes on", () => {
   });
 
   it.each([
-    ["Orsk Ledge,A,1,,0.5,,", "half-slab", "top"],
-    ["Orsk Ledge,A,,,,0.5,", "one-of", undefined],
-    ["Orsk Ledge,A,3,,1,2,", "position-outside-slab", "position"],
+    ["Orskel Ledge,A,1,,0.5,,", "half-slab", "top"],
+    ["Orskel Ledge,A,,,,0.5,", "one-of", undefined],
+    ["Orskel Ledge,A,3,,1,2,", "position-outside-slab", "position"],
   ])("leaves out a slab that is half told or contradicts its position: %s", (row, code, column) => {
     const study = studyFrom({
       "sections.csv": sections,
-      "samples.csv": samples(row, "Orsk Ledge,B,1.5,,1,2,"),
+      "samples.csv": samples(row, "Orskel Ledge,B,1.5,,1,2,"),
       "occurrences.csv": finds(good),
     });
     expect(errorsOf(study).map((problem) => [problem.code, problem.column, problem.row])).toEqual([
@@ -206,11 +214,11 @@ describe("an error on the row, the rest goes on", () => {
   it("leaves out a find whose position is not in its sample", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "samples.csv": samples("Orsk Ledge,A,1,0.2,,,"),
+      "samples.csv": samples("Orskel Ledge,A,1,0.2,,,"),
       "occurrences.csv": lines(
         "section,taxon,sample,position",
-        "Orsk Ledge,Orvella tenuis,A,1.05",
-        "Orsk Ledge,Orvella tenuis,A,1.2",
+        "Orskel Ledge,Orvella tenuis,A,1.05",
+        "Orskel Ledge,Orvella tenuis,A,1.2",
       ),
     });
     expect(problemsOf(study, "sample-elsewhere")).toMatchObject([
@@ -222,7 +230,7 @@ describe("an error on the row, the rest goes on", () => {
   it("leaves out a row with more cells than the header, and reads a short one with a caution", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds(`${good},surplus`, "Orsk Ledge,Orvella tenuis,4"),
+      "occurrences.csv": finds(`${good},surplus`, "Orskel Ledge,Orvella tenuis,4"),
     });
     expect(problemsOf(study, "too-many-cells")).toMatchObject([{ severity: "error", row: 2 }]);
     expect(problemsOf(study, "too-few-cells")).toMatchObject([{ severity: "caution", row: 3 }]);
@@ -236,18 +244,18 @@ describe("an error on the file, the others go on", () => {
     ["an empty file", "", "empty-file"],
     ["a file of blank lines", "\n\n", "empty-file"],
     ["a header alone", "section,sample,position\n", "header-only"],
-    ["an unknown unit", "section,sample,height (furlong)\nOrsk Ledge,A,1\n", "unknown-unit"],
-    ["semicolons", "section;sample;position\nOrsk Ledge;A;1,5\n", "wrong-delimiter"],
-    ["tabs", "section\tsample\tposition\nOrsk Ledge\tA\t1\n", "wrong-delimiter"],
-    ["a decimal comma", 'section,sample,position\nOrsk Ledge,A,"1,5"\nOrsk Ledge,B,2\n', "decimal-comma"],
+    ["an unknown unit", "section,sample,height (furlong)\nOrskel Ledge,A,1\n", "unknown-unit"],
+    ["semicolons", "section;sample;position\nOrskel Ledge;A;1,5\n", "wrong-delimiter"],
+    ["tabs", "section\tsample\tposition\nOrskel Ledge\tA\t1\n", "wrong-delimiter"],
+    ["a decimal comma", 'section,sample,position\nOrskel Ledge,A,"1,5"\nOrskel Ledge,B,2\n', "decimal-comma"],
     [
       "a quote that never closes",
-      'section,sample,position\nOrsk Ledge,"A,1\nOrsk Ledge,B,2\n',
+      'section,sample,position\nOrskel Ledge,"A,1\nOrskel Ledge,B,2\n',
       "unclosed-quote",
     ],
-    ["a missing column", "section,position\nOrsk Ledge,1\n", "missing-column"],
-    ["no position at all", "section,sample\nOrsk Ledge,A\n", "missing-column"],
-    ["a doubled column", "section,sample,position,Position\nOrsk Ledge,A,1,2\n", "duplicate-header"],
+    ["a missing column", "section,position\nOrskel Ledge,1\n", "missing-column"],
+    ["no position at all", "section,sample\nOrskel Ledge,A\n", "missing-column"],
+    ["a doubled column", "section,sample,position,Position\nOrskel Ledge,A,1,2\n", "duplicate-header"],
   ])("names %s", (_, text, code) => {
     const study = studyFrom({ ...beside, "samples.csv": text });
     expect(errorsOf(study)).toMatchObject([{ code, file: "samples.csv" }]);
@@ -275,7 +283,7 @@ describe("an error on the file, the others go on", () => {
   it("takes one comma number among points for a slip of its row", () => {
     const study = studyFrom({
       ...beside,
-      "samples.csv": 'section,sample,position\nOrsk Ledge,A,"1,5"\nOrsk Ledge,B,2.5\n',
+      "samples.csv": 'section,sample,position\nOrskel Ledge,A,"1,5"\nOrskel Ledge,B,2.5\n',
     });
     expect(errorsOf(study)).toMatchObject([{ code: "not-a-number", row: 2 }]);
     expect(onlySection(study).samples.map(({ name }) => name)).toEqual(["B"]);
@@ -312,7 +320,7 @@ describe("awkward text stays text", () => {
     const long = "x".repeat(200_000);
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": finds(`Orsk Ledge,${long},1,1`, `Orsk Ledge,Orvella tenuis,${long},1`),
+      "occurrences.csv": finds(`Orskel Ledge,${long},1,1`, `Orskel Ledge,Orvella tenuis,${long},1`),
     });
     expect(onlySection(study).occurrences[0].verbatim).toHaveLength(200_000);
     for (const problem of study.problems) expect(problem.found.length).toBeLessThan(300);

@@ -2,7 +2,7 @@ import { describe, expect, it } from "vitest";
 import { samples } from "../../../../src/core/study/tables/samples.ts";
 import { readWrittenCsv } from "../../../../src/core/tables/csv.ts";
 import {
-  readApostrophes,
+  readDataPackage,
   tableResource,
   writeDataPackage,
 } from "../../../../src/core/tables/data-package.ts";
@@ -53,7 +53,7 @@ describe("writing CSV", () => {
 
 describe("apostrophes in a study", () => {
   const taxon = "=cmd|' /C calc'!A0";
-  const { text, guarded } = writeCsv(["section", "taxon", "position"], [["Orsk Ledge", taxon, 1]]);
+  const { text, guarded } = writeCsv(["section", "taxon", "position"], [["Orskel Ledge", taxon, 1]]);
   const resource = { ...tableResource(samples, guarded), name: "occurrences", path: "occurrences.csv" };
 
   it("are taken off where datapackage.json records them, and only there", () => {
@@ -72,7 +72,7 @@ describe("apostrophes in a study", () => {
   it("are kept where datapackage.json cannot be read, with a caution", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "occurrences.csv": lines("section,taxon,position", "Orsk Ledge,Orvella tenuis,1"),
+      "occurrences.csv": lines("section,taxon,position", "Orskel Ledge,Orvella tenuis,1"),
       "datapackage.json": "{",
     });
     expect(study.problems).toMatchObject([
@@ -92,8 +92,10 @@ describe("apostrophes in a study", () => {
         { name: "occurrences", path: "occurrences.csv", type: "table", "lastbed:apostrophes": ["taxon"] },
       ],
     });
-    expect(readApostrophes(descriptor)).toEqual(new Map([["occurrences.csv", new Set(["taxon"])]]));
-    expect(readApostrophes("[]")).toBeUndefined();
-    expect(readApostrophes('{"resources":[{"path":1},null,"x"]}')).toEqual(new Map());
+    expect(readDataPackage(descriptor)?.apostrophes).toEqual(
+      new Map([["occurrences.csv", new Set(["taxon"])]]),
+    );
+    expect(readDataPackage("[]")).toBeUndefined();
+    expect(readDataPackage('{"resources":[{"path":1},null,"x"]}')?.apostrophes).toEqual(new Map());
   });
 });

@@ -54,7 +54,7 @@ describe("table declarations", () => {
     expect(study.problems.filter(({ severity }) => severity === "error")).toEqual([]);
     expect(study.problems.map(({ code }) => code)).toEqual(["one-occurrence"]);
     expect(study.sections[0]).toMatchObject({
-      name: "Orsk Ledge",
+      name: "Orskel Ledge",
       samples: [{ name: "OL-031" }],
       horizons: [{ name: "Veyra impact" }],
     });

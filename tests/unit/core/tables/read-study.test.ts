@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { errorsOf, lines, onlySection, problemsOf, sections, studyFrom } from "./study-files.ts";
 
-const one = (header: string, cells = "Orsk Ledge,Orvella tenuis,100") =>
+const one = (header: string, cells = "Orskel Ledge,Orvella tenuis,100") =>
   studyFrom({ "occurrences.csv": lines(header, cells) });
 
 describe("axis and unit", () => {
@@ -21,12 +21,12 @@ describe("axis and unit", () => {
     for (const header of ["section,taxon,position", "section,taxon,height", "section,taxon,position_cm"]) {
       const study = one(header);
       expect(problemsOf(study, "axis-unknown")).toMatchObject([
-        { severity: "error", file: "occurrences.csv", row: 2, found: "Orsk Ledge" },
+        { severity: "error", file: "occurrences.csv", row: 2, found: "Orskel Ledge" },
       ]);
       expect(study.sections).toEqual([]);
     }
     const told = studyFrom(
-      { "occurrences.csv": lines("section,taxon,position", "Orsk Ledge,Orvella tenuis,100") },
+      { "occurrences.csv": lines("section,taxon,position", "Orskel Ledge,Orvella tenuis,100") },
       { sections: { axis: "depth", unit: "cm" } },
     );
     expect(onlySection(told)).toMatchObject({ axis: "depth", unit: "cm", bottomM: -1, topM: -1 });
@@ -37,8 +37,8 @@ describe("axis and unit", () => {
       "sections.csv": sections,
       "occurrences.csv": lines(
         "section,taxon,depth (m)",
-        "Orsk Ledge,Orvella tenuis,1",
-        "Orsk Ledge,Orvella tenuis,2",
+        "Orskel Ledge,Orvella tenuis,1",
+        "Orskel Ledge,Orvella tenuis,2",
       ),
     });
     expect(problemsOf(study, "axis-contradicted")).toMatchObject([
@@ -49,10 +49,10 @@ describe("axis and unit", () => {
 
   it("a section whose own row is wrong says so at the rows that need it", () => {
     const study = studyFrom({
-      "sections.csv": lines("section,axis,unit", "Orsk Ledge,height,furlong", "Tarn Cut,height,m"),
+      "sections.csv": lines("section,axis,unit", "Orskel Ledge,height,furlong", "Tarn Cut,height,m"),
       "occurrences.csv": lines(
         "section,taxon,position",
-        "Orsk Ledge,Orvella tenuis,1",
+        "Orskel Ledge,Orvella tenuis,1",
         "Tarn Cut,Orvella tenuis,1",
       ),
     });
@@ -69,12 +69,14 @@ describe("columns", () => {
     const study = studyFrom({
       "occurrences.csv": lines(
         "section,taxon,species,height (m),colour",
-        "Orsk Ledge,Orvella tenuis,Orvella robusta,1,grey",
+        "Orskel Ledge,Orvella tenuis,Orvella robusta,1,grey",
       ),
     });
     expect(onlySection(study).occurrences[0].taxon).toBe("Orvella tenuis");
     expect(problemsOf(study, "unknown-column").map(({ found }) => found)).toEqual(["species", "colour"]);
-    expect(study.sheets[0].rows).toEqual([["Orsk Ledge", "Orvella tenuis", "Orvella robusta", "1", "grey"]]);
+    expect(study.sheets[0].rows).toEqual([
+      ["Orskel Ledge", "Orvella tenuis", "Orvella robusta", "1", "grey"],
+    ]);
     expect(study.sheets[0].columns).toEqual(["section", "taxon", undefined, "position", undefined]);
   });
 
@@ -91,9 +93,9 @@ describe("columns", () => {
     const study = studyFrom({
       "sections.csv": sections,
       [isBed ? "beds.csv" : "samples.csv"]: isBed
-        ? lines(`section,base,top,lithology,${header}`, "Orsk Ledge,1,2,marl,30")
-        : lines(`section,sample,position,${header}`, "Orsk Ledge,A,1,2.3"),
-      "occurrences.csv": lines("section,taxon,position", "Orsk Ledge,Orvella tenuis,1"),
+        ? lines(`section,base,top,lithology,${header}`, "Orskel Ledge,1,2,marl,30")
+        : lines(`section,sample,position,${header}`, "Orskel Ledge,A,1,2.3"),
+      "occurrences.csv": lines("section,taxon,position", "Orskel Ledge,Orvella tenuis,1"),
     });
     expect(errorsOf(study).map(({ code, column }) => [code, column])).toEqual(
       isGood ? [] : [["unknown-unit", header]],
@@ -104,7 +106,7 @@ describe("columns", () => {
 
   it("names the nearest for a missing column and an unknown file", () => {
     const study = studyFrom({
-      "occurrences.csv": lines("section,taxn,height (m)", "Orsk Ledge,Orvella tenuis,1"),
+      "occurrences.csv": lines("section,taxn,height (m)", "Orskel Ledge,Orvella tenuis,1"),
       "sample.csv": "x\n",
       "notes.txt": "x",
       "README.md": "x",
@@ -120,7 +122,7 @@ describe("columns", () => {
   });
 
   it("takes file names with folders, and the second file of a table for an error", () => {
-    const text = lines("section,taxon,height (m)", "Orsk Ledge,Orvella tenuis,1");
+    const text = lines("section,taxon,height (m)", "Orskel Ledge,Orvella tenuis,1");
     const study = studyFrom({ "veyra/occurrences.csv": text, "veyra/old/Occurrences.csv": text });
     expect(problemsOf(study, "duplicate-table")).toMatchObject([
       { severity: "error", file: "veyra/old/Occurrences.csv" },
@@ -135,21 +137,21 @@ describe("legs and depth", () => {
       "sections.csv": sections,
       "legs.csv": lines(
         "section,leg,reading,position",
-        "Orsk Ledge,A,0,0",
-        "Orsk Ledge,A,10,9.1",
-        "Orsk Ledge,B,0,5",
-        "Orsk Ledge,B,10,14.1",
+        "Orskel Ledge,A,0,0",
+        "Orskel Ledge,A,10,9.1",
+        "Orskel Ledge,B,0,5",
+        "Orskel Ledge,B,10,14.1",
       ),
       "samples.csv": lines(
         "section,sample,leg,position",
-        "Orsk Ledge,S1,A,7",
-        "Orsk Ledge,S1,B,1.5054945054945055",
-        "Orsk Ledge,S2,B,1.5054945054945055",
+        "Orskel Ledge,S1,A,7",
+        "Orskel Ledge,S1,B,1.5054945054945055",
+        "Orskel Ledge,S2,B,1.5054945054945055",
       ),
       "occurrences.csv": lines(
         "section,taxon,sample",
-        "Orsk Ledge,Orvella tenuis,S1",
-        "Orsk Ledge,Orvella tenuis,S2",
+        "Orskel Ledge,Orvella tenuis,S1",
+        "Orskel Ledge,Orvella tenuis,S2",
       ),
     });
     expect(errorsOf(study)).toEqual([]);
@@ -195,9 +197,9 @@ describe("legs and depth", () => {
   it("takes the ends from what was sampled, measured, logged and found", () => {
     const study = studyFrom({
       "sections.csv": sections,
-      "beds.csv": lines("section,base,top,lithology", "Orsk Ledge,0.5,2,marl"),
-      "samples.csv": lines("section,sample,position,thickness", "Orsk Ledge,a,9,0.2"),
-      "measurements.csv": lines("section,analyte,value,unit,position", "Orsk Ledge,Ir,0.2,ppb,3"),
+      "beds.csv": lines("section,base,top,lithology", "Orskel Ledge,0.5,2,marl"),
+      "samples.csv": lines("section,sample,position,thickness", "Orskel Ledge,a,9,0.2"),
+      "measurements.csv": lines("section,analyte,value,unit,position", "Orskel Ledge,Ir,0.2,ppb,3"),
     });
     expect(onlySection(study)).toMatchObject({ bottomM: 0.5, topM: 9.1 });
   });
@@ -209,14 +211,14 @@ describe("searches", () => {
     "taxa.csv": lines(
       "taxon,group,accepted",
       "Orvella tenuis,foraminifera,",
-      "Velorites orskensis,ammonites,",
+      "Velorites orskelensis,ammonites,",
       "Orvella gracilis,,Orvella tenuis",
     ),
-    "samples.csv": lines("section,sample,position", "Orsk Ledge,a,1", "Orsk Ledge,b,2"),
+    "samples.csv": lines("section,sample,position", "Orskel Ledge,a,1", "Orskel Ledge,b,2"),
     "occurrences.csv": lines(
       "section,taxon,sample",
-      "Orsk Ledge,Orvella gracilis,a",
-      "Orsk Ledge,Orvella sp.,b",
+      "Orskel Ledge,Orvella gracilis,a",
+      "Orskel Ledge,Orvella sp.,b",
     ),
   };
 
@@ -237,8 +239,8 @@ describe("searches", () => {
       ...base,
       "searches.csv": lines(
         "section,sample,group,effort,effort_unit,counting",
-        "Orsk Ledge,a,foraminifera,20,g,count",
-        "Orsk Ledge,z,foraminifera,20,g,count",
+        "Orskel Ledge,a,foraminifera,20,g,count",
+        "Orskel Ledge,z,foraminifera,20,g,count",
       ),
     });
     expect(problemsOf(study, "unknown-sample")).toMatchObject([
@@ -264,7 +266,7 @@ describe("searches", () => {
   });
 
   it("tells taxa without a group once", () => {
-    const study = studyFrom({ ...base, "taxa.csv": lines("taxon,group", "Velorites orskensis,ammonites") });
+    const study = studyFrom({ ...base, "taxa.csv": lines("taxon,group", "Velorites orskelensis,ammonites") });
     expect(problemsOf(study, "ungrouped")).toMatchObject([
       { severity: "caution", found: "Orvella gracilis (and 1 more row)" },
     ]);
@@ -274,11 +276,11 @@ describe("searches", () => {
 
 const measured = (...rows: readonly string[]) =>
   studyFrom({
-    "sections.csv": lines("section,axis,unit,density_g_cm3", "Orsk Ledge,height,m,2.3"),
+    "sections.csv": lines("section,axis,unit,density_g_cm3", "Orskel Ledge,height,m,2.3"),
     "samples.csv": lines(
       "section,sample,position,thickness,density_g_cm3",
-      "Orsk Ledge,a,1,0.1,",
-      "Orsk Ledge,b,2,0.1,2.5",
+      "Orskel Ledge,a,1,0.1,",
+      "Orskel Ledge,b,2,0.1,2.5",
     ),
     "measurements.csv": lines(
       "section,sample,analyte,value,unit,error,error_kind,detection_limit,trials",
@@ -289,10 +291,10 @@ const measured = (...rows: readonly string[]) =>
 describe("measurements", () => {
   it("come in the canonical unit with one standard deviation, the text as written kept", () => {
     const study = measured(
-      "Orsk Ledge,a,Ir,2.5,ppm,10,2s%,0.01,",
-      "Orsk Ledge,b,d13C,-1.2,‰,0.1,2s,,",
-      "Orsk Ledge,b,shocked quartz,3,grains,,,,40",
-      "Orsk Ledge,b,iridium,bdl,ppb,,,0.05,",
+      "Orskel Ledge,a,Ir,2.5,ppm,10,2s%,0.01,",
+      "Orskel Ledge,b,d13C,-1.2,‰,0.1,2s,,",
+      "Orskel Ledge,b,shocked quartz,3,grains,,,,40",
+      "Orskel Ledge,b,iridium,bdl,ppb,,,0.05,",
     );
     expect(errorsOf(study)).toEqual([]);
     const [iridium, carbon, quartz, below] = onlySection(study).measurements;
@@ -319,26 +321,26 @@ describe("measurements", () => {
   });
 
   it.each([
-    ["Orsk Ledge,a,Ir,1,furlongs,,,,", "unknown-unit", "unit"],
-    ["Orsk Ledge,a,Ir,1,,,,,", "blank-cell", "unit"],
-    ["Orsk Ledge,a,d13C,1,ppt,,,,", "ambiguous-ppt", "unit"],
-    ["Orsk Ledge,a,Ir,nd,ppb,,,,", "nd-ambiguous", "value"],
-    ["Orsk Ledge,a,Ir,bdl,ppb,,,,", "no-detection-limit", "value"],
-    ["Orsk Ledge,a,Ir,tr,ppb,,,,", "trace-limits", "value"],
-    ["Orsk Ledge,a,Ir,1,ppb,0.1,,,", "error-kind-missing", "error_kind"],
-    ["Orsk Ledge,a,shocked-quartz,9,grains,,,,8", "more-successes", "value"],
+    ["Orskel Ledge,a,Ir,1,furlongs,,,,", "unknown-unit", "unit"],
+    ["Orskel Ledge,a,Ir,1,,,,,", "blank-cell", "unit"],
+    ["Orskel Ledge,a,d13C,1,ppt,,,,", "ambiguous-ppt", "unit"],
+    ["Orskel Ledge,a,Ir,nd,ppb,,,,", "nd-ambiguous", "value"],
+    ["Orskel Ledge,a,Ir,bdl,ppb,,,,", "no-detection-limit", "value"],
+    ["Orskel Ledge,a,Ir,tr,ppb,,,,", "trace-limits", "value"],
+    ["Orskel Ledge,a,Ir,1,ppb,0.1,,,", "error-kind-missing", "error_kind"],
+    ["Orskel Ledge,a,shocked-quartz,9,grains,,,,8", "more-successes", "value"],
   ])("leave out %s", (row, code, column) => {
-    const study = measured(row, "Orsk Ledge,b,Ir,1,ppb,,,,");
+    const study = measured(row, "Orskel Ledge,b,Ir,1,ppb,,,,");
     expect(errorsOf(study)).toMatchObject([{ code, column, row: 2, file: "measurements.csv" }]);
     expect(onlySection(study).measurements).toHaveLength(1);
   });
 
   it("ask about a plain 0 of a trace element and tell missing values, once each", () => {
     const study = measured(
-      "Orsk Ledge,a,Ir,0,ppb,,,,",
-      "Orsk Ledge,b,Ir,0,ppb,,,,",
-      "Orsk Ledge,b,Ni,,ppm,,,,",
-      "Orsk Ledge,b,spherules,0,count,,,,",
+      "Orskel Ledge,a,Ir,0,ppb,,,,",
+      "Orskel Ledge,b,Ir,0,ppb,,,,",
+      "Orskel Ledge,b,Ni,,ppm,,,,",
+      "Orskel Ledge,b,spherules,0,count,,,,",
     );
     expect(problemsOf(study, "trace-zero")).toMatchObject([
       { severity: "caution", row: 2, found: "0 (and 1 more row)" },

@@ -11,7 +11,7 @@ export const studyFrom = (files: Record<string, string>, settings?: unknown): St
 /** Lines as a CSV text. */
 export const lines = (...rows: readonly string[]): string => `${rows.join("\n")}\n`;
 
-export const sections = lines("section,axis,unit,datum", "Orsk Ledge,height,m,lowest bed");
+export const sections = lines("section,axis,unit,datum", "Orskel Ledge,height,m,lowest bed");
 
 export const problemsOf = (study: Study, code: string): readonly Problem[] =>
   study.problems.filter((problem) => problem.code === code);
