@@ -1,6 +1,8 @@
 import { mkdir, readdir, readFile, rm, writeFile } from "node:fs/promises";
 import { dirname, join, relative, resolve, sep } from "node:path";
+import type { Analysis } from "../core/analysis-result.ts";
 import { tables } from "../core/study/tables/index.ts";
+import { writeCsv } from "../core/tables/write-csv.ts";
 import { CRATE_FILE, filesOfCrate } from "../report/ro-crate.ts";
 import { CallError } from "./call-error.ts";
 
@@ -26,6 +28,41 @@ export async function writeRun(
     await mkdir(dirname(path), { recursive: true });
     await writeFile(path, content);
   }
+}
+
+/** One row a study, section and set: the answers to one level and how gradual, so that studies can be set side by side. */
+export async function writeSummary(folder: string, analyses: readonly Analysis[]): Promise<void> {
+  const headers = [
+    "study",
+    "section",
+    "set",
+    "question",
+    "method",
+    "taxa",
+    "p",
+    "low",
+    "high",
+    "unit",
+    "outcome",
+  ];
+  const rows = analyses.flatMap(({ study, timing }) =>
+    timing.answers
+      .filter(({ question }) => question === "one-level" || question === "how-gradual")
+      .map((a) => [
+        study.name,
+        a.section,
+        a.set,
+        a.question,
+        a.method,
+        a.taxa,
+        a.p,
+        a.low,
+        a.high,
+        a.unit,
+        a.outcome,
+      ]),
+  );
+  await writeFile(join(folder, "summary.csv"), writeCsv(headers, rows).text);
 }
 
 /** A path inside the folder; a name that would leave it is refused. */

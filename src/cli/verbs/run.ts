@@ -10,7 +10,7 @@ import { countOption, jobOf } from "../job.ts";
 import { plateFaces } from "../plate-faces.ts";
 import { hasErrors, problemCount, problemLines } from "../problem-lines.ts";
 import type { Screen } from "../screen.ts";
-import { refuseStudyFolder, writeRun } from "../study-out.ts";
+import { refuseStudyFolder, writeRun, writeSummary } from "../study-out.ts";
 import { summaryText } from "../summary-text.ts";
 import type { VerbOptions } from "./verb.ts";
 
@@ -30,6 +30,11 @@ export async function run(paths: readonly string[], options: VerbOptions, screen
     const runs: StudyRun[] = [];
     for (const [i, path] of paths.entries())
       runs.push(await runOne({ path, out: folders[i], options, runner, screen }));
+    if (paths.length > 1)
+      await writeSummary(
+        out,
+        runs.map(({ analysis }) => analysis),
+      );
     screen.document({
       command: "run",
       problems: runs.flatMap(({ analysis }) => analysis.study.problems),

@@ -54,9 +54,15 @@ function samplingCautions({ section, study, cases }: SectionRanges): Caution[] {
       numbers: { finds, taxa: unsampled.length },
     });
   }
-  for (const group of new Set(cases.map(({ taxon }) => taxon.group)))
-    if (hasUnequalEffort(section, group))
-      cautions.push({ code: "range-unequal-effort", section: section.name, subject: group });
+  const unequal = [...new Set(cases.map(({ taxon }) => taxon.group))].filter((group) =>
+    hasUnequalEffort(section, group),
+  );
+  if (unequal.length > 0)
+    cautions.push({
+      code: "range-unequal-effort",
+      section: section.name,
+      numbers: { groups: unequal.join(", ") },
+    });
   return cautions;
 }
 

@@ -55,8 +55,8 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${taxa(told)} found below the working base keep their first find as base.`,
   "range-finds-outside-searches": (told) =>
     say`${plural(told.n("finds"), "find")} of ${taxa(told)} lie outside samples searched for their group and do not count in the method of sampled horizons.`,
-  "range-unequal-effort": ({ subject }) =>
-    say`Effort differs between the samples searched for ${subject}; the method of sampled horizons takes it as equal.`,
+  "range-unequal-effort": ({ text }) =>
+    say`Effort differs between the samples searched for ${text("groups")}; the method of sampled horizons takes it as equal.`,
   "range-few-horizons": (told) =>
     say`${taxa(told)} with four horizons or fewer: their intervals mostly reflect the assumption.`,
   "range-reaches-top": (told) => say`${taxa(told)} found up to the highest sample: their upper end is open.`,
