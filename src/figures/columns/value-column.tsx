@@ -41,6 +41,8 @@ interface ValueColumnProps {
   readonly background?: readonly [low: number, high: number];
   /** A fitted curve with its band, in rust. */
   readonly curve?: readonly CurvePoint[];
+  /** Several of them, each with its own ends. */
+  readonly curves?: readonly (readonly CurvePoint[])[];
   /** Join the points from below upward, in ink. */
   readonly isJoined?: boolean;
   readonly shape?: MarkShape;
@@ -49,7 +51,7 @@ interface ValueColumnProps {
 
 /** Measured values against height: background as a band, limits as soft arrows, anomalies and the fitted curve in rust. */
 export function ValueColumn(props: ValueColumnProps): ReactElement {
-  const { x, width, y, scale, title, unit, background, curve = [], tickLabels } = props;
+  const { x, width, y, scale, title, unit, background, curve = [], curves = [], tickLabels } = props;
   const { top } = spanOf(y);
   return (
     <g>
@@ -57,7 +59,12 @@ export function ValueColumn(props: ValueColumnProps): ReactElement {
       <ColumnGround x={x} width={width} y={y} scale={scale} {...(tickLabels ? { tickLabels } : {})}>
         {background && <BackgroundBand x={x} y={y} scale={scale} ends={background} />}
       </ColumnGround>
-      {curve.length > 0 && <FittedCurve x={x} y={y} scale={scale} curve={curve} />}
+      {[curve, ...curves].map(
+        (points) =>
+          points.length > 0 && (
+            <FittedCurve key={points[0]?.heightM} x={x} y={y} scale={scale} curve={points} />
+          ),
+      )}
       <ValueMarks {...props} />
     </g>
   );

@@ -69,7 +69,7 @@ function isLogarithmic({ analyte, kind, points }: AnalyteSeries): boolean {
 type Drawn = ((x: number, y: SectionFrame["y"]) => React.ReactNode) | undefined;
 
 function drawing(series: AnalyteSeries, width: number): Drawn {
-  const { kind, title, unit, points, bars, background, curve } = series;
+  const { kind, title, unit, points, bars, background, curves } = series;
   if (kind === "polarity") {
     const samples = points.map(({ heightM, value }) => ({ heightM, isNormal: value > 0 }));
     return (x, y) => <PolarityColumn {...{ x, width, y, samples }} />;
@@ -83,7 +83,7 @@ function drawing(series: AnalyteSeries, width: number): Drawn {
   const column = isLogarithmic(series) ? logarithmicScale(series, width) : linearScale(series, width);
   return (x, y) => (
     <ValueColumn
-      {...{ x, width, y, title, unit, points, background, curve }}
+      {...{ x, width, y, title, unit, points, background, curves }}
       {...column}
       isJoined={kind === "isotope"}
     />
@@ -91,8 +91,8 @@ function drawing(series: AnalyteSeries, width: number): Drawn {
 }
 
 /** From the smallest to the largest positive value, limit, background or fitted value. */
-function logarithmicScale({ points, background, curve }: AnalyteSeries, width: number) {
-  const values = [...points, ...curve].map((point) => point.value);
+function logarithmicScale({ points, background, curves }: AnalyteSeries, width: number) {
+  const values = [...points, ...curves.flat()].map((point) => point.value);
   const [low, high] = extent([...values, ...(background ?? [])].filter((value) => value > 0));
   if (low === undefined || high === undefined) return linearColumn([0, 1], width);
   return logColumn([low / LOG_FACTOR, high * LOG_FACTOR], width);
@@ -112,14 +112,14 @@ function entry(kind: ValueSign, label: string): LegendEntry {
   return { sign: { kind }, label };
 }
 
-function analyteLegend({ points, background, curve, analyte }: AnalyteSeries): readonly LegendEntry[] {
+function analyteLegend({ points, background, curves, analyte }: AnalyteSeries): readonly LegendEntry[] {
   if (analyte === "polarity") return [];
   return [
     ...(points.length > 0 ? [entry("value", "measured")] : []),
     ...(points.some((point) => point.isAnomaly) ? [entry("anomaly", "above background")] : []),
     ...(points.some((point) => point.censored) ? [entry("limit", "limit only")] : []),
     ...(background ? [entry("background", "background")] : []),
-    ...(curve.length > 0 ? [entry("curve", "fitted mixing")] : []),
+    ...(curves.some((curve) => curve.length > 0) ? [entry("curve", "fitted mixing")] : []),
   ];
 }
 

@@ -15,7 +15,8 @@ export interface AnalyteSeries {
   readonly points: readonly ValuePoint[];
   readonly bars: readonly CountBar[];
   readonly background?: readonly [number, number];
-  readonly curve: readonly CurvePoint[];
+  /** Of each anomaly whose mixing was accepted. */
+  readonly curves: readonly (readonly CurvePoint[])[];
 }
 
 /** Order in which columns stand; whatever else was measured follows. */
@@ -111,15 +112,15 @@ function rateBar({ baseM, topM, reading, amount }: Measurement): readonly CountB
 /** Background and accepted mixing curve of a profile, as they were fitted. */
 function fitted(profile: Profile | undefined, { factor }: DrawnUnit) {
   const { background, anomalies = [] } = profile ?? {};
-  const curve = anomalies.flatMap(({ models, accepted }) => {
+  const curves = anomalies.map(({ models, accepted }) => {
     const model = models.find((candidate) => candidate.id === accepted);
     return (model?.curve?.heightsM ?? []).map((heightM, i) => ({
       heightM,
       value: (model?.curve?.values[i] ?? 0) / factor,
     }));
   });
-  if (background === undefined) return { curve };
+  if (background === undefined) return { curves };
   const ceiling = background.threshold / factor;
   const median = background.median / factor;
-  return { curve, background: [median ** 2 / ceiling, ceiling] as const };
+  return { curves, background: [median ** 2 / ceiling, ceiling] as const };
 }

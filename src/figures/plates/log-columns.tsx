@@ -12,7 +12,7 @@ import type { LegendEntry } from "../legend.tsx";
 import { lithologyLegend } from "../lithology/lithology-legend.ts";
 import { COLOURS } from "../theme.ts";
 import type { PlacedColumn, PlateColumn } from "./plate-columns.ts";
-import { searchedGroups } from "./searched-groups.ts";
+import { groupEntry, searchedGroups } from "./searched-groups.ts";
 import type { SectionFrame } from "./section-frame.ts";
 
 const LOG_WIDTH = 24;
@@ -97,12 +97,7 @@ export function railColumn(plateId: string, analysis: Analysis, frame: SectionFr
 function railLegend(groups: readonly SearchedGroup[]): readonly LegendEntry[] {
   const colour = COLOURS.soft;
   return [
-    ...groups.map(
-      ({ name, sign }): LegendEntry => ({
-        sign: { kind: "group", colour: sign.colour, letter: sign.letter },
-        label: name,
-      }),
-    ),
+    ...groups.map(({ name, sign }) => groupEntry(name, sign)),
     { sign: { kind: "found", colour }, label: "searched, found" },
     { sign: { kind: "barren", colour }, label: "searched, none found" },
   ];

@@ -15,7 +15,7 @@ import { scaleColumn } from "./scale-column.tsx";
 import { groupSigns } from "./searched-groups.ts";
 import { type SectionFrame, sectionFrame } from "./section-frame.ts";
 import { slugOf } from "./slugs.ts";
-import { layTaxa, TaxaBlock } from "./taxa-block.tsx";
+import { groupLegend, layTaxa, TaxaBlock } from "./taxa-block.tsx";
 import { PITCH, rangeLegend } from "./taxon-range.tsx";
 
 const BODY_HEIGHT = 400;
@@ -90,7 +90,7 @@ function chartPage(analysis: Analysis, view: SectionView, { taxa, page, pages }:
         <Horizons left={lineLeft(placed)} right={right} y={y} horizons={horizons} />
       </g>
     ),
-    legend: [...rangeLegend(taxa, y), ...horizonLegend(horizons)],
+    legend: [...groupLegend(analysis, layout), ...rangeLegend(taxa, y), ...horizonLegend(horizons)],
     notes: [
       ...chartNotes(analysis, section.name, taxa),
       ...errorBarNotes(frame, MARKER_COLUMNS),

@@ -1,6 +1,7 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Section } from "../../core/study/model.ts";
 import type { SearchedGroup } from "../columns/search-rail.tsx";
+import type { LegendEntry } from "../legend.tsx";
 import { type GroupSign, groupSign } from "../theme.ts";
 
 /** The groups of a study in the order of its taxa, each with its sign: the same on every plate. */
@@ -16,6 +17,11 @@ export function groupLabel(group: string): string {
   return group === "" ? "no group given" : group;
 }
 
+/** A group's letter and name in a legend. */
+export function groupEntry(group: string, { colour, letter }: GroupSign): LegendEntry {
+  return { sign: { kind: "group", colour, letter }, label: groupLabel(group) };
+}
+
 /** Every search of a section by group, and whether anything that counts was found. */
 export function searchedGroups(analysis: Analysis, section: Section): readonly SearchedGroup[] {
   const found = foundSamples(analysis, section.name);
@@ -23,7 +29,7 @@ export function searchedGroups(analysis: Analysis, section: Section): readonly S
     const samples = section.searches
       .filter((search) => search.group === group)
       .map((search) => ({ heightM: search.heightM, isFound: found.get(group)?.has(search.sample) === true }));
-    return samples.length === 0 ? [] : [{ name: groupLabel(group), sign, samples }];
+    return samples.length === 0 ? [] : [{ name: group, sign, samples }];
   });
 }
 

@@ -2,10 +2,11 @@ import type { Analysis } from "../../core/analysis-result.ts";
 import { ColumnHead } from "../columns/column-head.tsx";
 import { type HeightScale, spanOf } from "../height-scale.ts";
 import { slantedDepth, slantedOverhang } from "../layout/slanted-names.ts";
+import type { LegendEntry } from "../legend.tsx";
 import { GroupBracket } from "../marks/group-bracket.tsx";
 import { TEXT } from "../theme.ts";
 import type { DrawnTaxon } from "./drawn-taxa.ts";
-import { groupLabel, groupSigns } from "./searched-groups.ts";
+import { groupEntry, groupLabel, groupSigns } from "./searched-groups.ts";
 import { BAR_WIDTH, PITCH, TaxonRange, taxonLabel } from "./taxon-range.tsx";
 
 /** Where the bars of a block stand, and what room the block takes. */
@@ -45,6 +46,15 @@ export function layTaxa(taxa: readonly DrawnTaxon[], left: number): TaxaLayout {
     namesRight: Math.max(left, ...places.map((place, i) => place.x + slantedOverhang(names[i], TEXT.taxon))),
     namesDepth: names.length === 0 ? 0 : NAMES_DROP + slantedDepth(names, TEXT.taxon),
   };
+}
+
+/** The letters of the groups that are drawn. */
+export function groupLegend(analysis: Analysis, { groups }: TaxaLayout): readonly LegendEntry[] {
+  const signs = groupSigns(analysis);
+  return groups.flatMap(({ group }) => {
+    const sign = signs.get(group);
+    return sign ? [groupEntry(group, sign)] : [];
+  });
 }
 
 interface TaxaBlockProps {

@@ -19,7 +19,7 @@ import { groupSigns } from "./searched-groups.ts";
 import { type SectionFrame, sectionFrame } from "./section-frame.ts";
 import { slugOf } from "./slugs.ts";
 import { SurvivorLine, survivorDepth, survivorLines } from "./survivor-line.tsx";
-import { layTaxa, TaxaBlock } from "./taxa-block.tsx";
+import { groupLegend, layTaxa, TaxaBlock } from "./taxa-block.tsx";
 import { rangeLegend } from "./taxon-range.tsx";
 import { type DrawnTiming, drawnTiming, timingNotes } from "./timing-words.ts";
 
@@ -64,7 +64,7 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
     id,
     title: `${section.title}: timing, ${setWords(view.set)}`,
     subtitle: axisWords(frame),
-    description: `${taxa.length} taxa of ${section.title}. ${timingNotes(timing, section)[0]}`,
+    description: `${taxa.length} taxa of ${section.title}. ${timingNotes(timing, section, analysis.study.settings.confidence)[0]}`,
     right: Math.max(right + horizonLabelsWidth(horizons), layout.namesRight, MARGIN + SURVIVOR_WIDTH),
     bottom: span.bottom + Math.max(TICK_LABEL_DEPTH, layout.namesDepth),
     columns: [...columns.placed, ...answers.placed],
@@ -76,7 +76,7 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
         <Horizons left={from} right={right} y={y} horizons={horizons} />
       </g>
     ),
-    legend: [...rangeLegend(taxa, y), ...horizonLegend(horizons)],
+    legend: [...groupLegend(analysis, layout), ...rangeLegend(taxa, y), ...horizonLegend(horizons)],
     notes: [...notesOf(analysis, { taxa, timing, frame }), ...lensNotes(frame)],
     panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
     view,
@@ -185,5 +185,5 @@ function notesOf(analysis: Analysis, { taxa, timing, frame }: Answered): readonl
         "Recovery declines upward in this section (centroid): the levels and durations above it must not be trusted.",
       ]
     : [];
-  return [...distrusted, ...timingNotes(timing, section)];
+  return [...distrusted, ...timingNotes(timing, section, analysis.study.settings.confidence)];
 }

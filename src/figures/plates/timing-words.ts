@@ -25,17 +25,21 @@ export function drawnTiming(answers: readonly TimingAnswer[]): DrawnTiming {
 }
 
 /** The same answers in words, each with its method; what could not be answered says so. */
-export function timingNotes(timing: DrawnTiming, section: Section): readonly string[] {
-  return [oneLevelWords(timing.oneLevel), whereWords(timing, section), durationWords(timing)].filter(
-    (words) => words !== "",
-  );
+export function timingNotes(timing: DrawnTiming, section: Section, confidence: number): readonly string[] {
+  return [
+    oneLevelWords(timing.oneLevel, confidence),
+    whereWords(timing, section),
+    durationWords(timing),
+  ].filter((words) => words !== "");
 }
 
-function oneLevelWords(answer: TimingAnswer | undefined): string {
+function oneLevelWords(answer: TimingAnswer | undefined, confidence: number): string {
   if (answer === undefined) return "Whether they could have ended at one level was not asked.";
   if (answer.p === undefined)
     return "Whether they could have ended at one level cannot be answered from these finds.";
-  return `All at one level (common-end, ${answer.taxa} taxa): p ${pWords(answer.p)}.`;
+  const test = `common-end, ${answer.taxa} taxa, p ${pWords(answer.p)}`;
+  if (answer.p < 1 - confidence) return `One level for all of them is rejected (${test}).`;
+  return `They cannot be told from one level (${test}).`;
 }
 
 function pWords(p: number): string {
@@ -44,7 +48,7 @@ function pWords(p: number): string {
 
 function whereWords({ ifOne, joint }: DrawnTiming, section: Section): string {
   const given = levelsWords(ifOne, section);
-  const single = given === "" ? "" : `If they did, between ${given} (common-end-given).`;
+  const single = given === "" ? "" : `If there was one level, it lies from ${given} (common-end-given).`;
   const isEmpty = joint.some((answer) => answer.outcome === "empty");
   if (isEmpty)
     return `${single} No single level fits these finds: the joint set is empty (common-end-joint).`.trim();
@@ -55,11 +59,9 @@ function whereWords({ ifOne, joint }: DrawnTiming, section: Section): string {
 
 function levelsWords(answer: TimingAnswer | undefined, section: Section): string {
   if (answer?.low === undefined) return "";
-  const high = answer.high === undefined ? "above the section" : formatGiven(answer.high, section);
-  return `${formatGiven(answer.low, section)} and ${high}`.replace(
-    " and above",
-    " and beyond the section, above",
-  );
+  const high =
+    answer.high === undefined ? "beyond the top of the section" : formatGiven(answer.high, section);
+  return `${formatGiven(answer.low, section)} to ${high}`;
 }
 
 function durationWords({ durationLower, durationBoxes }: DrawnTiming): string {
