@@ -2,6 +2,7 @@ import { assembleStudy } from "../study/assembly/assemble-study.ts";
 import type { ReadSheet } from "../study/assembly/context.ts";
 import type { Study } from "../study/model.ts";
 import { suggestName } from "../study/nearest.ts";
+import type { Problem } from "../study/problem.ts";
 import { type ProblemList, problemList } from "../study/problem-wordings.ts";
 import { readSettings } from "../study/read-settings.ts";
 import { mergeSettings } from "../study/setting-path.ts";
@@ -37,10 +38,17 @@ export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadS
     name: described.title ?? options.name ?? folderOf(files) ?? "study",
     settings,
     ...assembled,
-    problems: problems.problems(),
+    problems: problems.problems().map((problem) => asWritten(problem, sheets)),
     sheets: [...sheets.values()].map(({ sheet }) => sheet),
     files: [...files].map(([name, bytes]) => ({ name, bytes })),
   };
+}
+
+/** The problem with its column called as the file's own header calls it. */
+function asWritten(problem: Problem, sheets: ReadonlyMap<TableName, ReadSheet>): Problem {
+  const sheet = [...sheets.values()].find((read) => read.sheet.file === problem.file)?.sheet;
+  const place = problem.column === undefined ? -1 : (sheet?.columns.indexOf(problem.column) ?? -1);
+  return place < 0 ? problem : { ...problem, column: sheet?.headers[place] };
 }
 
 const baseName = (path: string): string => path.split(/[/\\]/).at(-1) ?? path;
