@@ -109,11 +109,21 @@ export function taperPath({ x, width, y, firstM, lastM, above = [], below = [] }
     { heightM: lastM, half },
     ...above.map(({ heightM, confidence }) => ({ heightM, half: half * (1 - confidence) })),
   ];
-  const shown = clippedEdges(edges, extentOf(y));
+  const shown = clippedEdges(bentAt(y.domain(), edges), extentOf(y));
   if (shown.length < 2) return "";
   const right = shown.map((edge) => `${round(x + edge.half)} ${round(y(edge.heightM))}`);
   const left = shown.toReversed().map((edge) => `${round(x - edge.half)} ${round(y(edge.heightM))}`);
   return `M${[...right, ...left].join("L")}z`;
+}
+
+/** Where a lens begins and ends the scale bends, and so must a slanting outline. */
+function bentAt(knots: readonly number[], edges: readonly Edge[]): readonly Edge[] {
+  const isNew = (heightM: number) => edges.every((edge) => edge.heightM !== heightM);
+  const bends = knots
+    .slice(1, -1)
+    .filter(isNew)
+    .flatMap((heightM) => edgeAt(edges, heightM));
+  return bends.length === 0 ? edges : [...edges, ...bends].toSorted((a, b) => a.heightM - b.heightM);
 }
 
 function clippedEdges(edges: readonly Edge[], [bottomM, topM]: readonly [number, number]): readonly Edge[] {

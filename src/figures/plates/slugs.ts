@@ -5,6 +5,7 @@ function slug(name: string): string {
   return name
     .slice(0, 4 * LONGEST)
     .normalize("NFKD")
+    .replaceAll(/\p{M}/gu, "")
     .toLowerCase()
     .replaceAll(/[^a-z0-9]+/g, "-")
     .slice(0, LONGEST)

@@ -4,6 +4,7 @@ import { type HeightScale, spanOf } from "../height-scale.ts";
 import { slantedDepth, slantedOverhang } from "../layout/slanted-names.ts";
 import type { LegendEntry } from "../legend.tsx";
 import { GroupBracket } from "../marks/group-bracket.tsx";
+import { fitText } from "../text.ts";
 import { TEXT } from "../theme.ts";
 import type { DrawnTaxon } from "./drawn-taxa.ts";
 import { groupEntry, groupLabel, groupSigns } from "./searched-groups.ts";
@@ -65,6 +66,14 @@ interface TaxaBlockProps {
   readonly title: string;
 }
 
+const LETTER_ROOM = 12;
+
+/** The name where it fits whole; else its letter, which the legend names, says it alone. */
+function bracketName(group: string, width: number): string {
+  const name = groupLabel(group);
+  return fitText(name, width - LETTER_ROOM, TEXT.unit) === name ? name : "";
+}
+
 const BRACKET_LIFT = 9;
 const HEAD_LIFT = 8;
 
@@ -82,7 +91,7 @@ export function TaxaBlock({ analysis, layout, left, y, title }: TaxaBlockProps) 
               key={group}
               {...{ x, width, sign }}
               y={top - BRACKET_LIFT}
-              name={groupLabel(group)}
+              name={bracketName(group, width)}
             />
           )
         );
