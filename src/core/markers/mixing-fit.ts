@@ -2,6 +2,7 @@ import type { Basis } from "../basis.ts";
 import { chiSquareQuantile, chiSquareUpperTail } from "../numeric/chi-square.ts";
 import { exp } from "../numeric/elementary.ts";
 import { ln10 } from "./background.ts";
+import { effectiveWidths } from "./fluence.ts";
 import { boxSlabMean } from "./mixing.ts";
 import { type ProfileInterval, profileInterval } from "./mixing-intervals.ts";
 import { type Likelihood, type LinearFit, likelihoodOf, type MixingCell } from "./mixing-likelihood.ts";
@@ -59,6 +60,8 @@ export interface MixingFit {
 /** Mixing is preferred over a thin layer only beyond this difference of AICc. */
 export const acceptanceDelta = 6;
 const refits = 3;
+/** The layer's fluence is at most this many times the excess seen. */
+const largestHiddenShare = 20;
 /** Below this p of the chi-square misfit the model is taken to be too simple and its intervals are widened. */
 const misfitLevel = 0.01;
 
@@ -69,6 +72,7 @@ export const mixingBasis: Basis = {
   assumptions: [
     "the layer was laid at one moment and mixed by a constant top layer while sediment accumulated at a constant rate",
     "the marker moves with the fossils' size fraction; nothing was lost",
+    "no more than 20 times the excess seen hides in unsampled rock",
     "where the box does not fit (p < 0.01) its intervals are widened by the misfit",
   ],
   sources: [
@@ -105,6 +109,7 @@ export function fitMixing(input: MixingInput): MixingFit {
   const first = likelihoodOf(
     cells,
     cells.map((cell) => Math.sqrt(cell.sigma ** 2 + scatter ** 2)),
+    mostFluence(input),
   );
   const m0 = fitBackgroundOnly(first);
   const m1 = fitThinLayer(first);
@@ -135,13 +140,25 @@ export function fitMixing(input: MixingInput): MixingFit {
   };
 }
 
+/** Else a layer of any size could hide in a gap, with a thin slice of it in the sample beside. */
+function mostFluence({ cells, background }: MixingInput): number {
+  const widths = effectiveWidths(cells);
+  const observed = cells.reduce((sum, cell, i) => {
+    const excess = cell.isCensored ? 0 : Math.max(0, cell.value - background.median);
+    return sum + excess * cell.density * widths[i];
+  }, 0);
+  return largestHiddenShare * observed;
+}
+
 function refit(
-  { cells, background, errors }: MixingInput,
+  input: MixingInput,
   range: SearchRange,
   first: BoxFit,
 ): { likelihood: Likelihood; best: BoxFit } {
+  const { cells, background, errors } = input;
   let best = first;
-  let likelihood = likelihoodOf(cells, []);
+  const most = mostFluence(input);
+  let likelihood = likelihoodOf(cells, [], most);
   for (let pass = 0; pass < refits; pass++) {
     const level = best.background > 0 ? best.background : background.median;
     const scatter = background.logSd * ln10 * level;
@@ -150,7 +167,7 @@ function refit(
       const ratio = sigmaAt(errors, modelled) / sigmaAt(errors, cell.value);
       return Math.sqrt((cell.sigma * ratio) ** 2 + scatter ** 2);
     });
-    likelihood = likelihoodOf(cells, sds);
+    likelihood = likelihoodOf(cells, sds, most);
     best = fitBox(likelihood, range, best);
   }
   return { likelihood, best };

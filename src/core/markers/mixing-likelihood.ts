@@ -35,11 +35,15 @@ const maximumIterations = 60;
 const certain = 7;
 
 /**
- * Likelihood of `C_i = F u_i + B` with fluence F >= 0 and background B: measured cells `N(C_i; model, s_i^2)`,
+ * Likelihood of `C_i = F u_i + B` with fluence F from 0 to `mostFluence` and background B: measured cells `N(C_i; model, s_i^2)`,
  * censored ones `Phi((DL - model)/s_i)`. It is concave in F and B, so for a given shape u the best pair is found
  * exactly (2 x 2 weighted least squares) or, with censored cells, by Newton's method.
  */
-export function likelihoodOf(cells: readonly MixingCell[], sds: readonly number[]): Likelihood {
+export function likelihoodOf(
+  cells: readonly MixingCell[],
+  sds: readonly number[],
+  mostFluence: number,
+): Likelihood {
   const measured = cells.flatMap((cell, i) => (cell.isCensored ? [] : [i]));
   const hasCensored = measured.length < cells.length;
   const constant = measured.reduce((sum, i) => sum - log(sds[i]) - halfLogTwoPi, 0);
@@ -53,17 +57,26 @@ export function likelihoodOf(cells: readonly MixingCell[], sds: readonly number[
     hasCensored
       ? newton(columns, response, { start: line, constant })
       : { ...line, logLikelihood: constant + misfit(columns, response, line) };
+  const none = new Float64Array(cells.length);
+  /** The best background under a fixed fluence: that of what the layer leaves over. */
+  const atFluence = (fluence: number, response: Float64Array): LinearFit => {
+    const values = columns.values.map((value, i) => value - fluence * response[i]);
+    const left = { ...columns, values };
+    const start = weightedLine(left, none);
+    const { background, logLikelihood } = hasCensored
+      ? newton(left, none, { start, constant })
+      : { ...start, logLikelihood: constant + misfit(left, none, start) };
+    return { fluence, background, logLikelihood };
+  };
   let withoutLayer: LinearFit | undefined;
   const fit = (response: Float64Array): LinearFit => {
     const line = weightedLine(columns, response);
     if (line.fluence > 0 || hasCensored) {
       const fitted = best(response, { ...line, fluence: Math.max(0, line.fluence) });
+      if (fitted.fluence > mostFluence) return atFluence(mostFluence, response);
       if (fitted.fluence > 0) return fitted;
     }
-    if (withoutLayer === undefined) {
-      const none = new Float64Array(cells.length);
-      withoutLayer = best(none, weightedLine(columns, none));
-    }
+    withoutLayer ??= atFluence(0, none);
     return withoutLayer;
   };
   return { cells, sds, fit };

@@ -29,6 +29,8 @@ const startingLengths = [0.1, 0.25, 0.5, 1, 2, 3, 4, 6, 8, 12, 20, 40];
 const gridShareOfFinest = 0.25;
 const mostGridSteps = 160;
 const startsRefined = 3;
+/** A pull to the start too weak to matter, so that a search along a flat ridge comes to rest. */
+const flatness = 1e-6;
 
 export function searchRange(
   cells: readonly MixingCell[],
@@ -92,17 +94,18 @@ export function fitBox(likelihood: Likelihood, range: SearchRange, start?: BoxFi
       Math.min(Math.max(base, range.lowestBase), range.highestBase),
       Math.min(Math.max(exp(logLength), range.shortest), range.longest),
     );
-  const objective = (point: readonly number[]) => {
-    const fit = within(point);
-    const outside = Math.abs(point[0] - fit.baseCm) / range.finest + Math.abs(point[1] - log(fit.lengthCm));
-    return outside * outside - fit.logLikelihood;
-  };
   const refined = starts.map(({ baseCm, lengthCm }) => {
+    const objective = (point: readonly number[]) => {
+      const fit = within(point);
+      const outside = Math.abs(point[0] - fit.baseCm) / range.finest + Math.abs(point[1] - log(fit.lengthCm));
+      const away = ((point[0] - baseCm) / range.finest) ** 2 + (point[1] - log(lengthCm)) ** 2;
+      return outside * outside + flatness * away - fit.logLikelihood;
+    };
     const steps = [range.finest / 4, lengthCm < range.longest / 2 ? 0.2 : -0.2];
     const { point } = nelderMead(objective, [baseCm, log(lengthCm)], {
       steps,
-      xTolerance: 1e-6,
-      fTolerance: 1e-8,
+      xTolerance: 1e-4,
+      fTolerance: 1e-9,
       maximumIterations: 20000,
     });
     return within(point);

@@ -17,7 +17,7 @@ import {
   unevenSlabs,
 } from "./simulated-profiles.ts";
 
-const trials = isFull ? 2000 : 40;
+const trials = isFull ? 2000 : 30;
 const level = 0.95;
 const sharp: Laboratory = { relative: 0.07, floor: 0.002, detectionLimit: 0.005 };
 const blunt: Laboratory = { relative: 0.07, floor: 0.008, detectionLimit: 0.028 };

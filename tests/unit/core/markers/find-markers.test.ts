@@ -69,6 +69,16 @@ describe("a found iridium horizon", () => {
     expect(cautions.map((c) => c.code)).toContain("mixing-misfit");
   });
 
+  it("below an unsampled gap may lie in the gap too, and stays finite", () => {
+    const section = sectionWith([]);
+    const slab = { baseM: 9.9, topM: 9.95, value: 3, sigma: 0.2 };
+    const measurements = [...section.measurements, ...measurementsOf("iridium", [slab])];
+    const horizon = found({ ...section, measurements });
+    expect(horizon.lowM).toBeLessThanOrEqual(9.9);
+    expect(horizon.highM).toBeGreaterThan(9.96);
+    expect(horizon.highM).toBeLessThan(13);
+  });
+
   it("is absent from plain background", () => {
     const { horizons, main, cautions } = findMarkers(handMadeStudy([sectionWith(background)]));
     expect(horizons).toEqual([]);
