@@ -76,15 +76,15 @@ test("a sample searched for two groups can be barren for one", () => {
   expect(at(2.5)).toEqual([false, true]);
 });
 
+function nickelIn(units: readonly string[]) {
+  const measurements = units.map((givenUnit) => measured("nickel", 1, 40_000, { givenUnit }));
+  const own = section("s", { measurements });
+  return analyteSeries(analysisOf([own]), own)[0];
+}
+
 test("values are drawn in the unit as given where all agree, else in the canonical one", () => {
-  const series = (units: readonly string[]) => {
-    const own = section("s", {
-      measurements: units.map((givenUnit) => measured("nickel", 1, 40_000, { givenUnit })),
-    });
-    return analyteSeries(analysisOf([own]), own)[0];
-  };
-  expect(series(["ppm", "ppm"])?.points[0]?.value).toBe(40);
-  expect(series(["ppm", "ppb"])).toMatchObject({
+  expect(nickelIn(["ppm", "ppm"])?.points[0]?.value).toBe(40);
+  expect(nickelIn(["ppm", "ppb"])).toMatchObject({
     unit: "ng/g",
     points: [{ value: 40_000 }, { value: 40_000 }],
   });
