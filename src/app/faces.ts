@@ -1,4 +1,4 @@
-import { type FaceId, FACE_IDS, fontFaceCss, fontFaceLinks } from "../figures/faces.ts";
+import { FACE_IDS, type FaceId, fontFaceCss, fontFaceLinks } from "../figures/faces.ts";
 import sans from "../figures/fonts/lastbed-sans-regular.ttf?url";
 import sansSemibold from "../figures/fonts/lastbed-sans-semibold.ttf?url";
 import serifItalic from "../figures/fonts/lastbed-serif-italic.ttf?url";

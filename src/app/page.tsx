@@ -1,14 +1,14 @@
 import { type ReactElement, useEffect, useMemo, useReducer } from "react";
 import { findings } from "../report/findings/index.ts";
-import styles from "./page.module.css";
 import { FocusLine } from "./focus/focus-line.tsx";
 import { Status } from "./footer/status.tsx";
 import { GoTo } from "./go-to/go-to.tsx";
 import { Header } from "./header/header.tsx";
 import { WorkBar } from "./header/work-bar.tsx";
+import styles from "./page.module.css";
 import { actionsOf } from "./state/actions.ts";
 import { focusOf } from "./state/focus.ts";
-import { PageProvider, type PageContents } from "./state/page-context.ts";
+import { type PageContents, PageProvider } from "./state/page-context.ts";
 import { type PageState, step } from "./state/page-state.ts";
 import { placeOf } from "./state/place.ts";
 import { keptTheme, useTheme } from "./state/theme.ts";
@@ -46,10 +46,7 @@ export function Page(): ReactElement {
     () => (analysis === undefined || focus === undefined ? undefined : { analysis, focus, all }),
     [analysis, focus, all],
   );
-  const page = useMemo<PageContents>(
-    () => ({ state, dispatch, go, study, open }),
-    [state, go, study, open],
-  );
+  const page = useMemo<PageContents>(() => ({ state, dispatch, go, study, open }), [state, go, study, open]);
   const actions = useMemo(() => actionsOf(page), [page]);
   useShortcuts(actions, () => dispatch({ kind: "go-to-turned", isOpen: true }));
 

@@ -1,7 +1,7 @@
 import type { ReactElement } from "react";
+import { Empty } from "./empty.tsx";
 import { Margin } from "./margin/margin.tsx";
 import { PlateStation } from "./plate/plate-station.tsx";
-import { Empty } from "./empty.tsx";
 import { lackOf } from "./state/lack.ts";
 import { usePage } from "./state/page-context.ts";
 import styles from "./station.module.css";

@@ -2,7 +2,7 @@ import { AxeBuilder } from "@axe-core/playwright";
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { findBrowser } from "./browser.ts";
-import { finding, openPage, type OpenedPage } from "./opened-page.ts";
+import { finding, type OpenedPage, openPage } from "./opened-page.ts";
 
 const STATIONS = ["tables", "markers", "fence", "ranges", "timing"];
 const RULES = ["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"];
@@ -11,13 +11,19 @@ async function goTo(page: Page, station: string): Promise<void> {
   await page.evaluate((station) => {
     location.hash = `#${station}`;
   }, station);
-  await page.locator(`nav[aria-label=Stations] a[aria-current]`, { hasText: new RegExp(station, "i") }).waitFor();
+  await page
+    .locator(`nav[aria-label=Stations] a[aria-current]`, { hasText: new RegExp(station, "i") })
+    .waitFor();
   await page.locator(station === "tables" ? "table[aria-rowcount]" : "figure svg[role=img]").waitFor();
 }
 
+/** The scan leaves the inside of the plate alone: it is one image, with a title and a description. */
 async function violations(page: Page): Promise<string[]> {
-  const { violations: found } = await new AxeBuilder({ page }).withTags(RULES).analyze();
-  return found.flatMap(({ id, nodes }) => nodes.map(({ target, failureSummary }) => `${id} ${target}: ${failureSummary}`));
+  const scan = new AxeBuilder({ page }).withTags(RULES).exclude("figure svg[role=img] > g");
+  const { violations: found } = await scan.analyze();
+  return found.flatMap(({ id, nodes }) =>
+    nodes.map(({ target, failureSummary }) => `${id} ${target}: ${failureSummary}`),
+  );
 }
 
 describe.skipIf(findBrowser() === undefined)("every station", () => {
@@ -43,7 +49,11 @@ describe.skipIf(findBrowser() === undefined)("every station", () => {
   it("keeps the plate paper white in both themes", async () => {
     const { page } = opened;
     await goTo(page, "ranges");
-    const paper = () => page.locator("figure svg[role=img] > rect").first().evaluate((rect) => getComputedStyle(rect).fill);
+    const paper = () =>
+      page
+        .locator("figure svg[role=img] > rect")
+        .first()
+        .evaluate((rect) => getComputedStyle(rect).fill);
     await page.emulateMedia({ colorScheme: "light" });
     const light = await paper();
     await page.emulateMedia({ colorScheme: "dark" });
@@ -130,6 +140,9 @@ const clipped = (page: Page, selector: string) =>
     .locator(selector)
     .evaluateAll((elements) =>
       elements
-        .filter((element) => element.scrollWidth > element.clientWidth + 1 || element.scrollHeight > element.clientHeight + 1)
+        .filter(
+          (element) =>
+            element.scrollWidth > element.clientWidth + 1 || element.scrollHeight > element.clientHeight + 1,
+        )
         .map((element) => element.textContent ?? ""),
     );

@@ -39,6 +39,8 @@ const FLAGS = [
 export function startBrowser(): Promise<Browser> {
   const executablePath = findBrowser();
   if (executablePath === undefined)
-    throw new Error("startBrowser: expected an installed Chromium or Chrome, found none (set LASTBED_BROWSER)");
+    throw new Error(
+      "startBrowser: expected an installed Chromium or Chrome, found none (set LASTBED_BROWSER)",
+    );
   return chromium.launch({ executablePath, headless: true, args: FLAGS });
 }

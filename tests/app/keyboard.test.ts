@@ -1,7 +1,7 @@
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { findBrowser } from "./browser.ts";
-import { finding, openPage, type OpenedPage } from "./opened-page.ts";
+import { finding, type OpenedPage, openPage } from "./opened-page.ts";
 
 /** Presses Tab until the focus is on something of this name, as a person does. */
 async function tabTo(page: Page, name: RegExp, most = 60): Promise<void> {
@@ -35,7 +35,7 @@ describe.skipIf(findBrowser() === undefined)("the page by keyboard alone", () =>
 
   it("walks the stations with arrows and enters one", async () => {
     const { page } = opened;
-    await tabTo(page, /^Tables,/);
+    await tabTo(page, /Tables, /);
     expect(await focusIsVisible(page)).toBe(true);
     for (let i = 0; i < 4; i++) await page.keyboard.press("ArrowRight");
     await page.keyboard.press("Enter");
@@ -75,7 +75,11 @@ describe.skipIf(findBrowser() === undefined)("the page by keyboard alone", () =>
     const name = await page.evaluate(() => document.activeElement?.firstChild?.textContent ?? "");
     await page.keyboard.press("Enter");
     await page.waitForURL(/#tables/);
-    await page.getByRole("region", { name: /^Table / }).getByText(name).first().waitFor();
+    await page
+      .getByRole("region", { name: /^Table / })
+      .getByText(name)
+      .first()
+      .waitFor();
   });
 
   it("goes anywhere from one list", async () => {

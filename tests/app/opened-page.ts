@@ -23,13 +23,19 @@ export interface OpenOptions {
   readonly viewport?: { readonly width: number; readonly height: number };
 }
 
-export async function openPage({ hash = "", viewport = { width: 1440, height: 900 } }: OpenOptions = {}): Promise<OpenedPage> {
+export async function openPage({
+  hash = "",
+  viewport = { width: 1440, height: 900 },
+}: OpenOptions = {}): Promise<OpenedPage> {
   const built = at("dist/page");
   if (!existsSync(`${built}/index.html`))
-    throw new Error(`openPage: expected the built page in ${built}, got none; build it first (npm run build)`);
+    throw new Error(
+      `openPage: expected the built page in ${built}, got none; build it first (npm run build)`,
+    );
   const server: PageServer = await servePage(built, EXAMPLE);
   const browser: Browser = await startBrowser();
-  const page = await browser.newPage({ viewport, reducedMotion: "reduce", acceptDownloads: true });
+  const context = await browser.newContext({ viewport, reducedMotion: "reduce", acceptDownloads: true });
+  const page = await context.newPage();
   const hosts = new Set<string>();
   const complaints: string[] = [];
   page.on("request", (request) => {

@@ -4,7 +4,8 @@ const HOSTILE = '<img src=x onerror="document.title=1">';
 /** A study of one section that is worked out at once: five taxa that end near an impact at 10 m, and a hostile name. */
 export const smallStudy: Readonly<Record<string, string>> = {
   "sections.csv": "section,name,axis,unit,bottom,top\nlorn-bank,Lorn Bank,height,m,0,14\n",
-  "horizons.csv": "section,horizon,kind,position,below,above,shape\nlorn-bank,lorn-impact,impact,10,0.05,0.05,normal\n",
+  "horizons.csv":
+    "section,horizon,kind,position,below,above,shape\nlorn-bank,lorn-impact,impact,10,0.05,0.05,normal\n",
   "samples.csv": rows("section,sample,position", 28, (i) => `lorn-bank,LB-${i + 1},${(i + 1) * 0.5}`),
   "occurrences.csv": [
     "section,sample,taxon",

@@ -4,15 +4,19 @@ import { type Focus, setTitle } from "../state/focus.ts";
 import { usePage } from "../state/page-context.ts";
 import { SCALES } from "../state/place.ts";
 import { scaleTitle } from "../state/scale-title.ts";
-import { Picker } from "./picker.tsx";
 import styles from "./focus-line.module.css";
+import { Picker } from "./picker.tsx";
 
 /** What every plate is about: section, main horizon, set of taxa and vertical scale, the same at every station. */
 export function FocusLine(): ReactElement {
   const { open } = usePage();
   return (
     <div className={styles.line} role="group" aria-label="Focus">
-      {open === undefined ? <span className={styles.item}>No study is open yet.</span> : <Focused {...open} />}
+      {open === undefined ? (
+        <span className={styles.item}>No study is open yet.</span>
+      ) : (
+        <Focused {...open} />
+      )}
     </div>
   );
 }
@@ -24,7 +28,7 @@ function Focused({ analysis, focus }: { readonly analysis: Analysis; readonly fo
   return (
     <>
       <Picker
-        label={isFence ? `All ${sections.length} sections, read in` : "Section"}
+        label={isFence ? `All ${sections.length} sections, reading in` : "Section"}
         value={focus.section?.name ?? ""}
         choices={sections.map(({ name, title }) => ({ value: name, title }))}
         choose={(section) => go({ section })}
@@ -39,7 +43,10 @@ function Focused({ analysis, focus }: { readonly analysis: Analysis; readonly fo
       <Picker
         label="Taxa"
         value={focus.set?.set ?? ""}
-        choices={focus.sets.map(({ set, taxa }) => ({ value: set, title: `${setTitle(set)} (${taxa.length})` }))}
+        choices={focus.sets.map(({ set, taxa }) => ({
+          value: set,
+          title: `${setTitle(set)} (${taxa.length})`,
+        }))}
         choose={(set) => go({ set })}
       />
       <Picker

@@ -22,7 +22,9 @@ export function Status(): ReactElement {
         ) : (
           <>
             <b>{facts.own}</b>
-            {[facts.fromHorizon, facts.common, facts.rock].map((fact) => fact && <span key={fact}>{fact}</span>)}
+            {[facts.fromHorizon, facts.common, facts.rock].map(
+              (fact) => fact && <span key={fact}>{fact}</span>,
+            )}
             {facts.sample && (
               <span>
                 sample {facts.sample}

@@ -25,7 +25,13 @@ export function Header({ actions }: { readonly actions: readonly Action[] }): Re
           Go to…
         </button>
         {theme && (
-          <button type="button" className={styles.round} aria-label={theme.label} title={theme.label} onClick={theme.act}>
+          <button
+            type="button"
+            className={styles.round}
+            aria-label={theme.label}
+            title={theme.label}
+            onClick={theme.act}
+          >
             {isDark(state.theme) ? <Sun aria-hidden size={16} /> : <Moon aria-hidden size={16} />}
           </button>
         )}

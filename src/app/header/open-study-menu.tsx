@@ -54,7 +54,15 @@ export function OpenStudyMenu(): ReactElement {
   );
 }
 
-function Way({ title, help, act }: { readonly title: string; readonly help: string; readonly act: () => void }) {
+function Way({
+  title,
+  help,
+  act,
+}: {
+  readonly title: string;
+  readonly help: string;
+  readonly act: () => void;
+}) {
   return (
     <MenuItem className={styles.item} textValue={title} onAction={act}>
       <Text slot="label">{title}</Text>

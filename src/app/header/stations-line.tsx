@@ -12,9 +12,7 @@ export function StationsLine(): ReactElement {
   const current = state.place.station;
 
   useEffect(() => {
-    line.current
-      ?.querySelector("[aria-current]")
-      ?.scrollIntoView({ block: "nearest", inline: "center" });
+    line.current?.querySelector("[aria-current]")?.scrollIntoView({ block: "nearest", inline: "center" });
   }, [current]);
 
   const stateOf = (station: Station): StationState =>
@@ -59,10 +57,24 @@ function StateSign({ state }: { readonly state: StationState }): ReactElement {
       <title>{STATE_WORDS[state]}</title>
       {state === "done" && <circle cx="5.5" cy="5.5" r="4" fill="currentColor" />}
       {state === "look" && (
-        <path d="M5.5 1.3L10 9.500H1z" fill="none" stroke="currentColor" strokeWidth="1.6" strokeLinejoin="round" />
+        <path
+          d="M5.5 1.3L10 9.500H1z"
+          fill="none"
+          stroke="currentColor"
+          strokeWidth="1.6"
+          strokeLinejoin="round"
+        />
       )}
       {state === "waiting" && (
-        <circle cx="5.5" cy="5.5" r="3.600" fill="none" stroke="currentColor" strokeWidth="1.2" strokeDasharray="2 1.600" />
+        <circle
+          cx="5.5"
+          cy="5.5"
+          r="3.600"
+          fill="none"
+          stroke="currentColor"
+          strokeWidth="1.2"
+          strokeDasharray="2 1.600"
+        />
       )}
     </svg>
   );

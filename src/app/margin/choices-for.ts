@@ -19,13 +19,18 @@ const minus = (value: number) => String(value).replace("-", "−");
 
 /** The one table of how settings read beside a plate. */
 const wordings: Readonly<Record<string, Wording>> = {
-  confidence: { stations: ["markers", "fence", "ranges", "timing"], words: (s) => `${percent(s.confidence)} intervals` },
+  confidence: {
+    stations: ["markers", "fence", "ranges", "timing"],
+    words: (s) => `${percent(s.confidence)} intervals`,
+  },
   "taxa.reworked": {
     stations: ["tables", "ranges", "timing"],
     words: ({ taxa }) =>
-      ({ exclude: "Reworked and suspected out", "exclude-yes": "Reworked out, suspected in", include: "Reworked in" })[
-        taxa.reworked
-      ],
+      ({
+        exclude: "Reworked and suspected out",
+        "exclude-yes": "Reworked out, suspected in",
+        include: "Reworked in",
+      })[taxa.reworked],
   },
   "taxa.identification": {
     stations: ["tables", "ranges", "timing"],
@@ -35,7 +40,10 @@ const wordings: Readonly<Record<string, Wording>> = {
     stations: ["tables", "ranges", "timing"],
     words: ({ taxa }) => (taxa.doubtful === "exclude" ? "Doubtful finds out" : "Doubtful finds in"),
   },
-  "taxa.minimumHorizons": { stations: ["ranges", "timing"], words: ({ taxa }) => `n ≥ ${taxa.minimumHorizons}` },
+  "taxa.minimumHorizons": {
+    stations: ["ranges", "timing"],
+    words: ({ taxa }) => `n ≥ ${taxa.minimumHorizons}`,
+  },
   "boundary.horizon": {
     stations: ["markers", "fence", "timing"],
     words: ({ boundary }) => `Main horizon: ${boundary.horizon ?? "as placed"}`,
@@ -45,16 +53,22 @@ const wordings: Readonly<Record<string, Wording>> = {
     words: ({ boundary }) =>
       boundary.same.length === 0
         ? "No found horizons joined"
-        : boundary.same.map(({ name, horizons }) => `${name} = ${plural(horizons.length, "horizon")}`).join("; "),
+        : boundary.same
+            .map(({ name, horizons }) => `${name} = ${plural(horizons.length, "horizon")}`)
+            .join("; "),
   },
-  "ranges.methods": { stations: ["ranges", "timing"], words: ({ ranges }) => `Leading method: ${ranges.methods[0] ?? "none"}` },
+  "ranges.methods": {
+    stations: ["ranges", "timing"],
+    words: ({ ranges }) => `Leading method: ${ranges.methods[0] ?? "none"}`,
+  },
   "ranges.base": {
     stations: ["ranges", "timing"],
     words: ({ ranges }) => `Base: ${ranges.base === "first" ? "first find" : ranges.base}`,
   },
   "ranges.recovery": {
     stations: ["ranges", "timing"],
-    words: ({ ranges }) => (ranges.recovery === "uniform" ? "Recovery even where searched" : `Recovery: ${ranges.recovery}`),
+    words: ({ ranges }) =>
+      ranges.recovery === "uniform" ? "Recovery even where searched" : `Recovery: ${ranges.recovery}`,
   },
   "timing.window": {
     stations: ["timing"],
@@ -71,10 +85,15 @@ const wordings: Readonly<Record<string, Wording>> = {
   "alignment.horizons": {
     stations: ["fence"],
     words: ({ alignment }) =>
-      alignment.horizons.length === 0 ? "Hung on the main horizon alone" : `Hung on ${alignment.horizons.join(", ")}`,
+      alignment.horizons.length === 0
+        ? "Hung on the main horizon alone"
+        : `Hung on ${alignment.horizons.join(", ")}`,
   },
   "alignment.reference": { stations: ["fence"], words: ({ alignment }) => `Scale: ${alignment.reference}` },
-  "alignment.beyond": { stations: ["fence"], words: ({ alignment }) => `Beyond the horizons: ${alignment.beyond}` },
+  "alignment.beyond": {
+    stations: ["fence"],
+    words: ({ alignment }) => `Beyond the horizons: ${alignment.beyond}`,
+  },
 };
 
 export function choicesFor(station: Station, settings: Settings): readonly ChoiceInForce[] {

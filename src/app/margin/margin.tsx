@@ -1,7 +1,7 @@
 import { PanelRightClose, PanelRightOpen } from "lucide-react";
 import { memo, type ReactElement } from "react";
 import type { Finding } from "../../report/findings/finding.ts";
-import { usePage, type Opened } from "../state/page-context.ts";
+import { type Opened, usePage } from "../state/page-context.ts";
 import { findingOf } from "../state/station-state.ts";
 import { Problems } from "../tables/problems.tsx";
 import { Choices } from "./choices.tsx";

@@ -4,7 +4,11 @@ import { plain } from "../../report/wordings/words.ts";
 import styles from "./margin.module.css";
 import { WordsText } from "./words-text.tsx";
 
-export function Weaknesses({ weaknesses }: { readonly weaknesses: readonly Weakness[] }): ReactElement | null {
+export function Weaknesses({
+  weaknesses,
+}: {
+  readonly weaknesses: readonly Weakness[];
+}): ReactElement | null {
   if (weaknesses.length === 0) return null;
   return (
     <section className={styles.part}>

@@ -1,6 +1,9 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import { fenceDiagram, markerPlate, rangeChart, timingPlate } from "../../figures/index.ts";
 import type { Drawing, View } from "../../figures/plates/drawing.ts";
+import { fenceDiagram } from "../../figures/plates/fence-diagram.tsx";
+import { markerPlate } from "../../figures/plates/marker-plate.tsx";
+import { rangeChart } from "../../figures/plates/range-chart.tsx";
+import { timingPlate } from "../../figures/plates/timing-plate.tsx";
 import type { Focus } from "../state/focus.ts";
 
 /** The plate of a station for what is in focus; undefined where it has none. */

@@ -1,6 +1,6 @@
 import { type KeyboardEvent, type ReactElement, useState } from "react";
-import type { Marks } from "./use-marks.ts";
 import styles from "./plate.module.css";
+import type { Marks } from "./use-marks.ts";
 
 /** The marks of the plate for the keyboard: arrows walk through them, Enter opens their rows. */
 export function MarksList({ marks }: { readonly marks: Marks }): ReactElement | null {

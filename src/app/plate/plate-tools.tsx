@@ -8,31 +8,37 @@ import styles from "./plate.module.css";
 
 const ICONS = { nearer: ZoomIn, further: ZoomOut, whole: Maximize2 } as const;
 
-/** The plate's title, the keys of its frame as buttons, and the way to take it along as a file. */
-export function PlateTools({ drawing, open }: { readonly drawing: Drawing; readonly open: Opened }): ReactElement {
+/** The keys of its frame as buttons, and the way to take it along as a file. */
+export function PlateTools({
+  drawing,
+  open,
+}: {
+  readonly drawing: Drawing;
+  readonly open: Opened;
+}): ReactElement {
   const page = usePage();
   const [failure, setFailure] = useState("");
   const actions = actionsOf(page).filter(({ id }) => id in ICONS);
   return (
-    <figcaption className={styles.tools}>
-      <span className={styles.caption}>{drawing.title}</span>
-      <span role="alert">{failure}</span>
-      <span className={styles.buttons}>
-        {actions.map((action) => (
-          <FrameButton key={action.id} action={action} />
-        ))}
-        <button
-          type="button"
-          className={styles.download}
-          onClick={() => {
-            setFailure("");
-            downloadPlate(open, page.state.frame).catch((error: unknown) => setFailure(String(error)));
-          }}
-        >
-          <Download aria-hidden size={14} /> SVG
-        </button>
+    <div className={styles.tools} role="group" aria-label="Plate tools">
+      <span className={styles.failure} role="alert">
+        {failure}
       </span>
-    </figcaption>
+      {actions.map((action) => (
+        <FrameButton key={action.id} action={action} />
+      ))}
+      <button
+        type="button"
+        className={styles.download}
+        title={`Save ${drawing.title} as it is seen`}
+        onClick={() => {
+          setFailure("");
+          downloadPlate(open, page.state.frame).catch((error: unknown) => setFailure(String(error)));
+        }}
+      >
+        <Download aria-hidden size={14} /> SVG
+      </button>
+    </div>
   );
 }
 

@@ -4,8 +4,8 @@ import type { Opened } from "../state/page-context.ts";
 import { usePage } from "../state/page-context.ts";
 import { MarkLabel } from "./mark-label.tsx";
 import { MarksList } from "./marks-list.tsx";
-import { PlateTools } from "./plate-tools.tsx";
 import styles from "./plate.module.css";
+import { PlateTools } from "./plate-tools.tsx";
 import { ReadingLine } from "./reading-line.tsx";
 import { useMarks } from "./use-marks.ts";
 import { usePlateScale } from "./use-plate-scale.ts";
@@ -51,7 +51,9 @@ export function PlateView({ drawing, open }: PlateProps): ReactElement {
           onDoubleClick={marks.onOpen}
         >
           {drawing.element}
-          {state.reading && <ReadingLine drawing={drawing} reading={reading} pixelsPerPoint={pixelsPerPoint} />}
+          {state.reading && (
+            <ReadingLine drawing={drawing} reading={reading} pixelsPerPoint={pixelsPerPoint} />
+          )}
           <MarkLabel mark={marks.pointed} sheet={sheet} drawing={drawing} />
         </div>
       </div>

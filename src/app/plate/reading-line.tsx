@@ -15,7 +15,8 @@ interface ReadingLineProps {
 export function ReadingLine({ drawing, reading, pixelsPerPoint }: ReadingLineProps): ReactElement | null {
   const { open } = usePage();
   const { panel, section, heightM } = reading;
-  if (open === undefined || panel === undefined || section === undefined || heightM === undefined) return null;
+  if (open === undefined || panel === undefined || section === undefined || heightM === undefined)
+    return null;
   const y = panel.scale(heightM);
   if (y < panel.top - 0.5 || y > panel.bottom + 0.5) return null;
   const [lowest, highest] = extentOf(panel);

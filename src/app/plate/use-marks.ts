@@ -1,7 +1,14 @@
-import { type MouseEvent, type PointerEvent, type RefObject, useLayoutEffect, useMemo, useState } from "react";
+import {
+  type MouseEvent,
+  type PointerEvent,
+  type RefObject,
+  useLayoutEffect,
+  useMemo,
+  useState,
+} from "react";
 import type { Drawing } from "../../figures/plates/drawing.ts";
-import { type Mark, MARK_SELECTOR, markOf, placeOfMark } from "./mark.ts";
 import { usePage } from "../state/page-context.ts";
+import { MARK_SELECTOR, type Mark, markOf, placeOfMark } from "./mark.ts";
 
 export interface Marks {
   /** The marks on the plate that the keyboard walks through, each once, in the order drawn. */
@@ -25,7 +32,8 @@ export function useMarks(sheet: RefObject<HTMLElement | null>, drawing: Drawing)
     const found = new Map<string, Mark>();
     for (const element of sheet.current?.querySelectorAll("[data-taxon], [data-horizon]") ?? []) {
       const mark = markOf(element);
-      if (mark !== undefined && !found.has(`${mark.kind} ${mark.name}`)) found.set(`${mark.kind} ${mark.name}`, mark);
+      if (mark !== undefined && !found.has(`${mark.kind} ${mark.name}`))
+        found.set(`${mark.kind} ${mark.name}`, mark);
     }
     setListed([...found.values()]);
     point(undefined);

@@ -29,7 +29,10 @@ function turn(event: WheelEvent, page: PageContents, reading: Reading): boolean 
   if (!isZoom && (state.frame === undefined || event.shiftKey)) return false;
   const now = { focus: open.focus, frame: state.frame, analysis: open.analysis };
   const next = isZoom
-    ? moveFrame(now, { factor: Math.exp(Math.max(-60, Math.min(60, event.deltaY)) / 250), aboutM: inFocus(reading, page) })
+    ? moveFrame(now, {
+        factor: Math.exp(Math.max(-60, Math.min(60, event.deltaY)) / 250),
+        aboutM: inFocus(reading, page),
+      })
     : moveFrame(now, { shift: -event.deltaY / 1200 });
   dispatch({ kind: "framed", frame: next });
   return true;

@@ -21,7 +21,8 @@ export function readingFacts(analysis: Analysis, section: Section, heightM: numb
   const sample = nearest(section.samples, heightM);
   return {
     own: position(section, heightM),
-    fromHorizon: main === undefined ? undefined : `${offset(heightM - main.positionM)} m from the main horizon`,
+    fromHorizon:
+      main === undefined ? undefined : `${offset(heightM - main.positionM)} m from the main horizon`,
     common: commonWords(analysis, section, heightM),
     rock: rockWords(section, heightM),
     sample: sample && `${sample.name}${awayWords(sample.heightM - heightM)}`,
@@ -30,10 +31,14 @@ export function readingFacts(analysis: Analysis, section: Section, heightM: numb
   };
 }
 
-function nearest<T extends { readonly heightM: number }>(items: readonly T[], heightM: number): T | undefined {
+function nearest<T extends { readonly heightM: number }>(
+  items: readonly T[],
+  heightM: number,
+): T | undefined {
   let best: T | undefined;
   for (const item of items)
-    if (best === undefined || Math.abs(item.heightM - heightM) < Math.abs(best.heightM - heightM)) best = item;
+    if (best === undefined || Math.abs(item.heightM - heightM) < Math.abs(best.heightM - heightM))
+      best = item;
   return best;
 }
 

@@ -37,11 +37,21 @@ function plateActions({ state, dispatch, open }: PageContents): Action[] {
   const zoom = (factor: number) => {
     if (open === undefined) return;
     const now = { focus: open.focus, frame: state.frame, analysis: open.analysis };
-    dispatch({ kind: "framed", frame: moveFrame(now, { factor, aboutM: readingHeight(open, state.reading) }) });
+    dispatch({
+      kind: "framed",
+      frame: moveFrame(now, { factor, aboutM: readingHeight(open, state.reading) }),
+    });
   };
   const plate = { group: "Plate" };
   return [
-    { ...plate, id: "nearer", label: "Come nearer", shortcut: "+", isAvailable: isPlate, act: () => zoom(0.6) },
+    {
+      ...plate,
+      id: "nearer",
+      label: "Come nearer",
+      shortcut: "+",
+      isAvailable: isPlate,
+      act: () => zoom(0.6),
+    },
     {
       ...plate,
       id: "further",
@@ -114,8 +124,20 @@ function pageActions({ state, dispatch, study }: PageContents): Action[] {
       isAvailable: true,
       act: () => dispatch({ kind: "theme-set", theme: isDark(state.theme) ? "light" : "dark" }),
     },
-    { ...page, id: "example", label: "The study beside this page", isAvailable: true, act: () => study.open("the study beside this page", bundledStudy) },
-    { ...page, id: "cancel", label: "Cancel the work", isAvailable: state.work.kind === "busy", act: study.cancel },
+    {
+      ...page,
+      id: "example",
+      label: "The study beside this page",
+      isAvailable: true,
+      act: () => study.open("the study beside this page", bundledStudy),
+    },
+    {
+      ...page,
+      id: "cancel",
+      label: "Cancel the work",
+      isAvailable: state.work.kind === "busy",
+      act: study.cancel,
+    },
   ];
 }
 

@@ -12,7 +12,9 @@ export function lackOf(station: Station, focus: Focus, analysis: Analysis): Lack
   const { study, alignment, markers, taxa } = analysis;
   const { section } = focus;
   if (station === "tables")
-    return study.sheets.length > 0 ? undefined : lack("No table was read.", "Drop a study folder or CSV files anywhere.");
+    return study.sheets.length > 0
+      ? undefined
+      : lack("No table was read.", "Drop a study folder or CSV files anywhere.");
   if (section === undefined)
     return lack(
       "No section could be used.",

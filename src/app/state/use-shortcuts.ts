@@ -14,9 +14,12 @@ export function useShortcuts(actions: readonly Action[], openGoTo: () => void): 
         latest.current.openGoTo();
         return;
       }
-      if (event.ctrlKey || event.metaKey || event.altKey || event.defaultPrevented || takesKeys(event.target)) return;
+      if (event.ctrlKey || event.metaKey || event.altKey || event.defaultPrevented || takesKeys(event.target))
+        return;
       const key = event.key === "=" ? "+" : event.key;
-      const action = latest.current.actions.find(({ shortcut, isAvailable }) => shortcut === key && isAvailable);
+      const action = latest.current.actions.find(
+        ({ shortcut, isAvailable }) => shortcut === key && isAvailable,
+      );
       if (action === undefined) return;
       event.preventDefault();
       action.act();
@@ -28,4 +31,6 @@ export function useShortcuts(actions: readonly Action[], openGoTo: () => void): 
 
 const takesKeys = (target: EventTarget | null): boolean =>
   target instanceof Element &&
-  target.closest("input:not([type=radio]), select, textarea, [contenteditable], [role=menu], [role=dialog]") !== null;
+  target.closest(
+    "input:not([type=radio]), select, textarea, [contenteditable], [role=menu], [role=dialog]",
+  ) !== null;

@@ -11,7 +11,10 @@ export class NotAStudy extends Error {}
 export function studyOf(name: string, files: ReadonlyMap<string, Uint8Array>): GivenStudy {
   const isTable = (file: string) => /\.csv$/i.test(file);
   if (![...files.keys()].some(isTable)) {
-    const held = files.size === 0 ? "is empty" : `holds ${files.size} ${files.size === 1 ? "file" : "files"}, none of them CSV`;
+    const held =
+      files.size === 0
+        ? "is empty"
+        : `holds ${files.size} ${files.size === 1 ? "file" : "files"}, none of them CSV`;
     throw new NotAStudy(
       `${name} is not a study: it ${held}. A study is a folder of CSV tables, such as occurrences.csv and sections.csv, or those files themselves.`,
     );

@@ -47,7 +47,8 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
       });
       const result = await runner.analyse(given, { signal, onProgress });
       if (signal.aborted) return;
-      if (result.study.sheets.length === 0) throw new NotAStudy(nothingRead(given.name, result.study.problems));
+      if (result.study.sheets.length === 0)
+        throw new NotAStudy(nothingRead(given.name, result.study.problems));
       setAnalysis(result);
       dispatch({ kind: "work-ended" });
     };

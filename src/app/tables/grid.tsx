@@ -46,7 +46,12 @@ export function Grid({ table, places, row }: GridProps): ReactElement {
               <span className={styles.said}>Row</span>
             </th>
             {table.columns.map(({ header, meaning, isNumber }, column) => (
-              <th key={`${column}`} scope="col" title={meaning} className={isNumber ? styles.number : undefined}>
+              <th
+                key={`${column}`}
+                scope="col"
+                title={meaning}
+                className={isNumber ? styles.number : undefined}
+              >
                 <ProblemSign problems={problems.get(cellKey(1, column))} />
                 {short(header)}
                 {meaning !== header && !meaning.includes(" ") && <small> → {meaning}</small>}
@@ -85,18 +90,26 @@ function GridRow({ table, place, problems, isSought, rowIndex }: GridRowProps): 
   const row = table.rowNumbers[place] ?? 0;
   const cells = table.rows[place] ?? [];
   return (
-    <tr aria-rowindex={rowIndex} className={isSought ? styles.sought : undefined} aria-current={isSought || undefined}>
+    <tr
+      aria-rowindex={rowIndex}
+      className={isSought ? styles.sought : undefined}
+      aria-current={isSought || undefined}
+    >
       <th scope="row" className={styles.rowNumber}>
         <ProblemSign problems={problems.get(cellKey(row, -1))} />
         {row}
       </th>
-      {table.columns.map(({ isNumber }, column) => {
+      {table.columns.map(({ isNumber, meaning, header }, column) => {
         const own = problems.get(cellKey(row, column));
         const name = [isNumber && styles.number, own && styles[worst(own)]].filter(Boolean).join(" ");
         return (
           <td key={`${column}`} className={name || undefined}>
             <ProblemSign problems={own} />
-            {short(cells[column] ?? "")}
+            {meaning === "taxon" || header === "taxon" ? (
+              <i>{short(cells[column] ?? "")}</i>
+            ) : (
+              short(cells[column] ?? "")
+            )}
           </td>
         );
       })}
@@ -115,7 +128,11 @@ function Gap({ rows, columns }: { readonly rows: number; readonly columns: numbe
   );
 }
 
-function ProblemSign({ problems }: { readonly problems: readonly Problem[] | undefined }): ReactElement | null {
+function ProblemSign({
+  problems,
+}: {
+  readonly problems: readonly Problem[] | undefined;
+}): ReactElement | null {
   if (problems === undefined || problems.length === 0) return null;
   const words = problems.map(({ expected, mend }) => `expected ${expected}. ${mend}`).join(" ");
   return (
@@ -131,11 +148,13 @@ function ProblemSign({ problems }: { readonly problems: readonly Problem[] | und
 const worst = (problems: readonly Problem[]): Problem["severity"] =>
   problems.some(({ severity }) => severity === "error") ? "error" : "caution";
 
-const short = (text: string): string => (text.length > LONGEST_CELL ? `${text.slice(0, LONGEST_CELL)}…` : text);
+const short = (text: string): string =>
+  text.length > LONGEST_CELL ? `${text.slice(0, LONGEST_CELL)}…` : text;
 
 function widthOf({ columns, rows }: ShownTable, column: number): number {
   const { header = "", meaning = "" } = columns[column] ?? {};
-  const label = meaning === header || meaning.includes(" ") ? header.length : header.length + meaning.length + 3;
+  const label =
+    meaning === header || meaning.includes(" ") ? header.length : header.length + meaning.length + 3;
   const longest = rows.slice(0, 400).reduce((most, row) => Math.max(most, row[column]?.length ?? 0), 0);
   return Math.min(WIDEST_COLUMN, Math.max(label + 1, longest, 3));
 }

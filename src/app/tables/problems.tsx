@@ -53,8 +53,10 @@ function ProblemButton({ problem }: { readonly problem: Problem }): ReactElement
         {where}
       </b>
       <span>
-        {found === "" ? "Nothing stands there" : `Found “${found.slice(0, 120)}${found.length > 120 ? "…" : ""}”`};
-        expected {expected}.
+        {found === ""
+          ? "Nothing stands there"
+          : `Found “${found.slice(0, 120)}${found.length > 120 ? "…" : ""}”`}
+        ; expected {expected}.
       </span>
       <span className={styles.mend}>{mend}</span>
     </button>

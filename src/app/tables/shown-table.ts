@@ -28,12 +28,17 @@ export function studyTables({ study }: Analysis): readonly ShownTable[] {
     columns: headers.map((header, index) => ({
       header,
       meaning: columns[index] ?? "kept, not used",
-      isNumber: rows.length > 0 && rows.slice(0, 50).every((row) => /^[-+−]?[\d.,eE]*$/.test(row[index] ?? "")),
+      isNumber: holdsNumbers(rows.slice(0, 200).map((row) => row[index] ?? "")),
     })),
     rows,
     rowNumbers,
     problems: study.problems.filter((problem) => problem.file === file),
   }));
+}
+
+function holdsNumbers(cells: readonly string[]): boolean {
+  const filled = cells.filter((cell) => cell.trim() !== "");
+  return filled.length > 0 && filled.every((cell) => /^[-+−]?[\d.]+(e[-+]?\d+)?$/i.test(cell.trim()));
 }
 
 export function shownResults(analysis: Analysis): readonly ShownTable[] {

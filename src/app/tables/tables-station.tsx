@@ -2,7 +2,7 @@ import { type ReactElement, useDeferredValue, useMemo } from "react";
 import { plural } from "../../report/wordings/words.ts";
 import { usePage } from "../state/page-context.ts";
 import { Grid } from "./grid.tsx";
-import { rowsWith, shownResults, type ShownTable, studyTables } from "./shown-table.ts";
+import { rowsWith, type ShownTable, shownResults, studyTables } from "./shown-table.ts";
 import { TableTabs } from "./table-tabs.tsx";
 import styles from "./tables.module.css";
 
@@ -19,7 +19,13 @@ export function TablesStation(): ReactElement | null {
   if (table === undefined) return null;
   return (
     <div className={styles.station}>
-      <TableTabs groups={[["Study", sheets], ["Results", results]]} current={table.id} />
+      <TableTabs
+        groups={[
+          ["Study", sheets],
+          ["Results", results],
+        ]}
+        current={table.id}
+      />
       <div className={styles.finder}>
         <label>
           Find{" "}
@@ -32,7 +38,12 @@ export function TablesStation(): ReactElement | null {
         </label>
         <span role="status">{countWords(table, found.length)}</span>
       </div>
-      <Grid key={table.id} table={table} places={found} row={place.table === table.id ? place.row : undefined} />
+      <Grid
+        key={table.id}
+        table={table}
+        places={found}
+        row={place.table === table.id ? place.row : undefined}
+      />
     </div>
   );
 }
