@@ -8,10 +8,12 @@ const at = (path: string) => fileURLToPath(new URL(path, import.meta.url));
 
 const EXAMPLE = "datasets/veyra-shelf";
 
+const names = async () => (await readdir(at(EXAMPLE))).filter((name) => /\.(?:csv|json)$/.test(name));
+
+const index = async () => JSON.stringify({ name: "Veyra Shelf", files: await names() });
+
 /** The example study beside the page, listed in `study/index.json`; the command line lays the opened study over it. */
 function exampleStudy(): Plugin {
-  const names = async () => (await readdir(at(EXAMPLE))).filter((name) => /\.(?:csv|json)$/.test(name));
-  const index = async () => JSON.stringify({ name: "Veyra Shelf", files: await names() });
   return {
     name: "example-study",
     configureServer(server) {
@@ -24,7 +26,11 @@ function exampleStudy(): Plugin {
     async generateBundle() {
       this.emitFile({ type: "asset", fileName: "study/index.json", source: await index() });
       for (const name of await names())
-        this.emitFile({ type: "asset", fileName: `study/${name}`, source: await readFile(at(`${EXAMPLE}/${name}`)) });
+        this.emitFile({
+          type: "asset",
+          fileName: `study/${name}`,
+          source: await readFile(at(`${EXAMPLE}/${name}`)),
+        });
     },
   };
 }

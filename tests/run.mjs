@@ -8,7 +8,8 @@ import { BROWSER_HINT, findBrowser } from "./app/browser.mjs";
 
 const counts = { passed: 0, failed: 0, skipped: 0 };
 
-const call = (command, words, options = {}) => spawnSync(command, words, { stdio: "inherit", ...options }).status === 0;
+const call = (command, words, options = {}) =>
+  spawnSync(command, words, { stdio: "inherit", ...options }).status === 0;
 
 function step(title, command, words) {
   console.log(`\n== ${title}`);
@@ -23,7 +24,9 @@ function browser() {
   if (found !== undefined) return found;
   const isRoot = process.getuid?.() === 0;
   if (!isRoot || !existsSync("/usr/bin/apt-get")) return undefined;
-  console.log("\n== No Chromium or Chrome found: installing the packaged Chromium (apt-get install chromium)");
+  console.log(
+    "\n== No Chromium or Chrome found: installing the packaged Chromium (apt-get install chromium)",
+  );
   const env = { ...process.env, DEBIAN_FRONTEND: "noninteractive" };
   call("apt-get", ["update", "-qq"], { env });
   call("apt-get", ["install", "-y", "-qq", "chromium"], { env });
@@ -35,7 +38,14 @@ function tests(hasBrowser) {
   const folder = mkdtempSync(join(tmpdir(), "lastbed-tests-"));
   const file = join(folder, "result.json");
   const without = hasBrowser ? [] : ["--exclude", "tests/app/**/*.test.ts"];
-  const isFine = call("npx", ["vitest", "run", "--reporter=default", "--reporter=json", `--outputFile.json=${file}`, ...without]);
+  const isFine = call("npx", [
+    "vitest",
+    "run",
+    "--reporter=default",
+    "--reporter=json",
+    `--outputFile.json=${file}`,
+    ...without,
+  ]);
   const result = existsSync(file) ? JSON.parse(readFileSync(file, "utf8")) : undefined;
   rmSync(folder, { recursive: true, force: true });
   if (result === undefined) {
@@ -44,7 +54,9 @@ function tests(hasBrowser) {
   }
   counts.passed += result.numPassedTests;
   counts.skipped += result.numPendingTests + result.numTodoTests;
-  const brokenFiles = result.testResults.filter((one) => one.status === "failed" && one.assertionResults.length === 0).length;
+  const brokenFiles = result.testResults.filter(
+    (one) => one.status === "failed" && one.assertionResults.length === 0,
+  ).length;
   counts.failed += result.numFailedTests + brokenFiles;
   if (!isFine && result.numFailedTests + brokenFiles === 0) counts.failed += 1;
 }

@@ -18,7 +18,7 @@ export async function readStudyFiles(path: string): Promise<StudyOnDisk> {
   const names = entries
     .filter((entry) => entry.isFile() && !entry.name.startsWith("."))
     .map((entry) => entry.name)
-    .sort();
+    .toSorted();
   const files = new Map<string, Uint8Array>();
   for (const file of names) if (isStudyFile(file)) files.set(file, await readFile(join(path, file)));
   if (files.size === 0)

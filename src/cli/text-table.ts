@@ -1,6 +1,6 @@
 /** Text without control characters, shortened to `most`, so that no cell can write to the terminal. */
 export function tame(text: string, most = 60): string {
-  const safe = text.replace(/[\u0000-\u001f\u007f-\u009f]+/g, " ");
+  const safe = text.replace(/\p{Cc}+/gu, " ");
   return safe.length > most ? `${safe.slice(0, most - 1)}…` : safe;
 }
 

@@ -20,7 +20,7 @@ export function compareTables(
   after: ReadonlyMap<string, string>,
   readCells: CellReader,
 ): readonly Difference[] {
-  const names = [...new Set([...before.keys(), ...after.keys()])].sort();
+  const names = [...new Set([...before.keys(), ...after.keys()])].toSorted();
   return names.flatMap((table) => {
     const [was, now] = [before.get(table), after.get(table)];
     if (was === now) return [];

@@ -32,5 +32,5 @@ function shortAuthors(authors: string): string {
 /** The list of references of a run, alphabetical, without repeats. */
 export function references(analysis: Analysis): readonly string[] {
   const all = basesOf(analysis).flatMap((basis) => basis.sources.map(reference));
-  return [...new Set(all)].sort((a, b) => a.localeCompare(b, "en"));
+  return [...new Set(all)].toSorted((a, b) => a.localeCompare(b, "en"));
 }

@@ -55,7 +55,7 @@ function surveyAll(
   { onProgress, signal }: Watch,
 ): Promise<SectionSurvey[]> {
   const total = study.sections.length;
-  const surveys = new Array<SectionSurvey>(total);
+  const surveys: SectionSurvey[] = [];
   if (total === 0) return Promise.resolve(surveys);
   let next = 0;
   let done = 0;

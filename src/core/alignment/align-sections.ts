@@ -186,6 +186,7 @@ function tiesOf(alignment: SectionAlignment): Tie[] {
     horizon,
     positionM: alignment.heightsM[k],
     common: alignment.targets[k],
-    residual: alignment.heightsM[k] - alignment.heightsM[datum] - (alignment.targets[k] - alignment.targets[datum]),
+    residual:
+      alignment.heightsM[k] - alignment.heightsM[datum] - (alignment.targets[k] - alignment.targets[datum]),
   }));
 }

@@ -51,7 +51,7 @@ function solve(matrix: Float64Array[]): number[] {
       for (let k = column; k <= size; k++) matrix[row][k] -= factor * matrix[column][k];
     }
   }
-  const solution = new Array<number>(size).fill(0);
+  const solution = Array.from({ length: size }, () => 0);
   for (let row = size - 1; row >= 0; row--) {
     let rest = matrix[row][size];
     for (let k = row + 1; k < size; k++) rest -= matrix[row][k] * solution[k];

@@ -74,18 +74,17 @@ function weightsAt(alignment: SectionAlignment, heightM: number, beyond: "rigid"
   return weights.set(k + 1, { onHeight: gain * u, onTarget: u });
 }
 
+/** The interval of thickness that holds a height, or the nearest one beyond the outermost horizons. */
 function segmentAt(alignment: SectionAlignment, heightM: number, beyond: "rigid" | "gain"): Segment {
   const { heightsM: m, targets: R } = alignment;
   const last = m.length - 1;
   const isBelow = heightM < m[0];
-  const isAbove = heightM >= m[last];
-  if (last === 0 || (beyond === "rigid" && (isBelow || heightM > m[last])))
-    return { index: isBelow ? 0 : last, gain: 1, isRigid: true };
-  let k = 0;
-  if (isAbove) k = last - 1;
-  else if (!isBelow) while (heightM >= m[k + 1]) k++;
-  while (k > 0 && isAbove && m[k + 1] === m[k]) k--;
-  while (k < last - 1 && isBelow && m[k + 1] === m[k]) k++;
-  if (m[k + 1] === m[k]) return { index: isBelow ? 0 : last, gain: 1, isRigid: true };
+  const isOutside = isBelow || heightM > m[last];
+  const outer: Segment = { index: isBelow ? 0 : last, gain: 1, isRigid: true };
+  if (isOutside && beyond === "rigid") return outer;
+  const thick = m.flatMap((height, k) => (k < last && m[k + 1] > height ? [k] : []));
+  if (thick.length === 0) return outer;
+  const holding = isBelow ? thick[0] : thick.findLast((k) => m[k] <= heightM);
+  const k = holding ?? thick[0];
   return { index: k, gain: (R[k + 1] - R[k]) / (m[k + 1] - m[k]), isRigid: false };
 }

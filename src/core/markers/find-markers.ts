@@ -20,6 +20,8 @@ import { sigmaBasis } from "./sigmas.ts";
 /** The element that makes horizons; it is tested alone, before the others. */
 const horizonElement = "iridium";
 const fewestSamples = 5;
+/** What carries or dilutes trace elements: it sets their background and marks no event of its own. */
+const carriers: ReadonlySet<string> = new Set(["toc", "tic", "carbonate", "sulfur", "aluminium"]);
 
 const elementBasis: readonly Basis[] = [
   densityBasis,
@@ -112,7 +114,9 @@ function foundIn({ judged, anomalies }: Examined, confidence: number) {
 }
 
 function elementsOf(measurements: Study["sections"][number]["measurements"]): readonly string[] {
-  const names = measurements.filter((m) => m.quantity === "mass-fraction").map((m) => m.analyte);
+  const names = measurements
+    .filter((m) => m.quantity === "mass-fraction" && !carriers.has(m.analyte))
+    .map((m) => m.analyte);
   return [...new Set(names)].toSorted((a, b) => (a < b ? -1 : a > b ? 1 : 0));
 }
 

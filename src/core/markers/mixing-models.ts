@@ -1,4 +1,5 @@
 import { exp, log } from "../numeric/elementary.ts";
+import { NotConverged } from "../numeric/not-converged.ts";
 import { nelderMead } from "../numeric/optimise.ts";
 import { effectiveWidths } from "./fluence.ts";
 import { boxSlabMean } from "./mixing.ts";
@@ -102,15 +103,28 @@ export function fitBox(likelihood: Likelihood, range: SearchRange, start?: BoxFi
       return outside * outside + flatness * away - fit.logLikelihood;
     };
     const steps = [range.finest / 4, lengthCm < range.longest / 2 ? 0.2 : -0.2];
-    const { point } = nelderMead(objective, [baseCm, log(lengthCm)], {
+    return within(lowestPoint(objective, [baseCm, log(lengthCm)], steps));
+  });
+  return refined.reduce((a, b) => (b.logLikelihood > a.logLikelihood ? b : a));
+}
+
+/** The lowest point near a start; the start itself where the simplex does not come to rest on a flat ridge. */
+function lowestPoint(
+  objective: (point: readonly number[]) => number,
+  start: readonly number[],
+  steps: readonly number[],
+): readonly number[] {
+  try {
+    return nelderMead(objective, start, {
       steps,
       xTolerance: 1e-4,
       fTolerance: 1e-9,
       maximumIterations: 20000,
-    });
-    return within(point);
-  });
-  return refined.reduce((a, b) => (b.logLikelihood > a.logLikelihood ? b : a));
+    }).point;
+  } catch (error) {
+    if (error instanceof NotConverged) return start;
+    throw error;
+  }
 }
 
 function gridStarts(likelihood: Likelihood, range: SearchRange): readonly BoxFit[] {

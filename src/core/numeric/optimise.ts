@@ -1,3 +1,4 @@
+import { NotConverged } from "./not-converged.ts";
 export interface Minimum {
   readonly point: readonly number[];
   readonly value: number;
@@ -92,9 +93,7 @@ export function nelderMead(f: Objective, start: readonly number[], options: Simp
   const descend = (from: readonly number[]): Vertex => {
     let simplex = firstSimplex(f, from, steps);
     while (!isSmall(simplex, xTolerance, fTolerance)) {
-      if (++iterations > maximumIterations) {
-        throw new Error(`nelderMead: expected convergence within ${maximumIterations} iterations, got none`);
-      }
+      if (++iterations > maximumIterations) throw new NotConverged("nelderMead", maximumIterations);
       simplex = nextSimplex(f, simplex);
     }
     return simplex[0];

@@ -61,34 +61,44 @@ interface Limits {
   readonly ceilingM: number | undefined;
 }
 
+interface GivenRole {
+  readonly role: Role;
+  readonly reason: RoleReason;
+}
+
+const given = (
+  role: Role,
+  rule: RoleReason["rule"],
+  [value, limit]: readonly [number, number],
+): GivenRole => ({
+  role,
+  reason: { rule, value, limit },
+});
+
 function roleOf(
   taxon: LocalTaxon,
   boundary: Boundary | undefined,
   { settings, ceilingM }: Limits,
-): { role: Role; reason: RoleReason } {
+): GivenRole {
   const first = taxon.heightsM[0];
   const horizons = horizonCount(taxon);
   const minimum = settings.taxa.minimumHorizons;
-  const given = (role: Role, rule: RoleReason["rule"], value: number, limit: number) => ({
-    role,
-    reason: { rule, value, limit },
-  });
   if (boundary !== undefined) {
     const { positionM, highM, smearBaseM } = boundary;
     if (smearBaseM !== undefined && first > smearBaseM)
-      return given("aftermath", "first-above-base-of-smear", first, smearBaseM);
-    if (first > positionM) return given("aftermath", "first-above-horizon", first, positionM);
+      return given("aftermath", "first-above-base-of-smear", [first, smearBaseM]);
+    if (first > positionM) return given("aftermath", "first-above-horizon", [first, positionM]);
     const last = taxon.lastStrictM;
     const limit = Math.max(highM, ceilingM ?? highM);
     if (last !== undefined && last > limit)
-      return given("survivor", limit > highM ? "last-above-ceiling" : "last-above-interval", last, limit);
+      return given("survivor", limit > highM ? "last-above-ceiling" : "last-above-interval", [last, limit]);
     const start = positionM + settings.timing.startBelow;
-    if (first > start) return given("late-start", "first-above-start", first, start);
+    if (first > start) return given("late-start", "first-above-start", [first, start]);
   }
-  if (horizons < minimum) return given("too-few", "horizons-under-minimum", horizons, minimum);
+  if (horizons < minimum) return given("too-few", "horizons-under-minimum", [horizons, minimum]);
   return boundary === undefined
-    ? given("candidate", "no-horizon-here", horizons, minimum)
-    : given("candidate", "ends-in-question", taxon.heightsM[taxon.heightsM.length - 1], boundary.highM);
+    ? given("candidate", "no-horizon-here", [horizons, minimum])
+    : given("candidate", "ends-in-question", [taxon.heightsM[taxon.heightsM.length - 1], boundary.highM]);
 }
 
 /** n counts horizons, never specimens; a range published without its finds brings its own number. */

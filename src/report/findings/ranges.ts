@@ -14,6 +14,8 @@ const roleWords: Readonly<Record<Role, string>> = {
   "too-few": "Too few horizons",
 };
 
+const roles: readonly Role[] = ["candidate", "survivor", "aftermath", "late-start", "too-few"];
+
 /** Which taxa count in a section, and which could have lived to the main horizon. */
 export function rangesFinding(analysis: Analysis, section: Section): Finding {
   const { candidates, ranges, study } = analysis;
@@ -25,7 +27,7 @@ export function rangesFinding(analysis: Analysis, section: Section): Finding {
     station: "ranges",
     section: section.name,
     sentence: sentence(analysis, section),
-    numbers: (Object.keys(roleWords) as Role[])
+    numbers: roles
       .filter((role) => counts.has(role))
       .map((role) => ({ label: roleWords[role], value: String(counts.get(role)) })),
     weaknesses: cautions.map((c) => weaknessOf(c, study)),

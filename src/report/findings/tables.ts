@@ -35,5 +35,5 @@ function reasons(finds: Analysis["finds"]): string[] {
   const counts = new Map<string, number>();
   for (const find of finds)
     if (find.used === "no") counts.set(find.reason, (counts.get(find.reason) ?? 0) + 1);
-  return [...counts].sort((a, b) => b[1] - a[1]).map(([reason, count]) => `${count} ${reason}`);
+  return [...counts].toSorted((a, b) => b[1] - a[1]).map(([reason, count]) => `${count} ${reason}`);
 }

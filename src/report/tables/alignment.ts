@@ -63,5 +63,5 @@ function alignedRows({ study, alignment }: Analysis) {
 function levelsOf(section: Section, horizons: readonly number[]): number[] {
   const samples = section.samples.map((sample) => sample.heightM);
   const contacts = section.beds.flatMap((bed) => [bed.baseM, bed.topM]);
-  return [...new Set([...samples, ...contacts, ...horizons])].sort((a, b) => a - b);
+  return [...new Set([...samples, ...contacts, ...horizons])].toSorted((a, b) => a - b);
 }

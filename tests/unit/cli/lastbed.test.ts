@@ -141,7 +141,7 @@ describe("run and repeat", () => {
     lastbed("run", example, "--out", folder, "--quiet");
     writeFileSync(join(folder, "mine.txt"), "kept");
     expect(lastbed("run", smallStudy(), "--out", folder, "--quiet").status).toBe(0);
-    expect(readdirSync(join(folder, "study")).sort()).toEqual(["horizons.csv", "occurrences.csv"]);
+    expect(readdirSync(join(folder, "study")).toSorted()).toEqual(["horizons.csv", "occurrences.csv"]);
     expect(existsSync(join(folder, "figures", "fence.svg"))).toBe(false);
     expect(readFileSync(join(folder, "mine.txt"), "utf8")).toBe("kept");
   });
@@ -152,7 +152,7 @@ describe("run and repeat", () => {
     for (const folder of [a, b]) cpSync(smallStudy(), folder, { recursive: true });
     const results = join(parent, "results");
     expect(lastbed("run", a, b, "--out", results).status).toBe(0);
-    expect(readdirSync(results).sort()).toEqual(["a", "b", "summary.csv"]);
+    expect(readdirSync(results).toSorted()).toEqual(["a", "b", "summary.csv"]);
   });
 
   it("a setting of the call is kept in the sheet and repeated", () => {

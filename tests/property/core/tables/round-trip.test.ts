@@ -129,7 +129,8 @@ describe("reading never throws", () => {
         "section,taxon,sample,position,count,qualifier\nOrskel Ledge,Orvella tenuis,S1,,3,cf.\nTarn Cut,Orvella tenuis,,11,,\n",
       "measurements.csv":
         "section,sample,analyte,value,unit,error,error_kind,detection_limit\nOrskel Ledge,S1,Ir,0.2,ppb,10,1s%,0.1\n",
-      "horizons.csv": "section,horizon,kind,position,below,above,age_ma\nOrskel Ledge,H,impact,5,0.1,0.1,66\n",
+      "horizons.csv":
+        "section,horizon,kind,position,below,above,age_ma\nOrskel Ledge,H,impact,5,0.1,0.1,66\n",
     };
     const damage = fc.array(fc.tuple(fc.constantFrom(...Object.keys(tables)), fc.nat(30), cell), {
       minLength: 1,
