@@ -22,7 +22,7 @@ async function violations(page: Page): Promise<string[]> {
   const scan = new AxeBuilder({ page }).withTags(RULES).exclude("figure svg[role=img] > g");
   const { violations: found } = await scan.analyze();
   return found.flatMap(({ id, nodes }) =>
-    nodes.map(({ target, failureSummary }) => `${id} ${target}: ${failureSummary}`),
+    nodes.map(({ target, failureSummary }) => `${id} ${JSON.stringify(target)}: ${failureSummary}`),
   );
 }
 

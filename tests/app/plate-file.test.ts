@@ -17,13 +17,15 @@ async function analysedExample(): Promise<Analysis> {
 }
 
 async function carriedFaces(): Promise<string> {
-  const bytes = async (file: string) =>
-    (await readFile(new URL(`../../src/figures/fonts/${file}`, import.meta.url))).toString("base64");
   return fontFaceCss({
-    sans: await bytes("lastbed-sans-regular.ttf"),
-    sansSemibold: await bytes("lastbed-sans-semibold.ttf"),
-    serifItalic: await bytes("lastbed-serif-italic.ttf"),
+    sans: await base64Of("lastbed-sans-regular.ttf"),
+    sansSemibold: await base64Of("lastbed-sans-semibold.ttf"),
+    serifItalic: await base64Of("lastbed-serif-italic.ttf"),
   });
+}
+
+async function base64Of(file: string): Promise<string> {
+  return (await readFile(new URL(`../../src/figures/fonts/${file}`, import.meta.url))).toString("base64");
 }
 
 describe.skipIf(findBrowser() === undefined)("the file a plate is saved as", () => {

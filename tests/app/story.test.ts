@@ -54,7 +54,7 @@ describe.skipIf(findBrowser() === undefined)("a person lives through the page", 
     await slider.focus();
     await page.keyboard.press("ArrowUp");
     expect(Number(await slider.getAttribute("aria-valuenow"))).toBeGreaterThan(height);
-    const told = await page.getByRole("group", { name: "Under the reading line" }).textContent();
+    const told = await page.getByRole("region", { name: "Under the reading line" }).textContent();
     expect(told).toMatch(/from the main horizon/);
     expect(told).toMatch(/sample/);
     const before = await slider.getAttribute("aria-valuetext");

@@ -11,13 +11,13 @@ import { Picker } from "./picker.tsx";
 export function FocusLine(): ReactElement {
   const { open } = usePage();
   return (
-    <div className={styles.line} role="group" aria-label="Focus">
+    <section className={styles.line} aria-label="Focus">
       {open === undefined ? (
         <span className={styles.item}>No study is open yet.</span>
       ) : (
         <Focused {...open} />
       )}
-    </div>
+    </section>
   );
 }
 

@@ -16,7 +16,7 @@ export function Status(): ReactElement {
   }, [open, reading]);
   return (
     <footer className={styles.status}>
-      <div className={styles.facts} aria-label="Under the reading line" role="group">
+      <section className={styles.facts} aria-label="Under the reading line">
         {facts === undefined ? (
           <span>The reading line follows the pointer, or the up and down arrows on a plate.</span>
         ) : (
@@ -34,7 +34,7 @@ export function Status(): ReactElement {
             {facts.iridium && <span>{facts.iridium}</span>}
           </>
         )}
-      </div>
+      </section>
       <span className={styles.promise}>offline · nothing leaves this machine</span>
     </footer>
   );

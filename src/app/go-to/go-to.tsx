@@ -29,6 +29,7 @@ export function GoTo({ actions }: { readonly actions: readonly Action[] }): Reac
       <Modal className={styles.modal}>
         <Dialog className={styles.dialog} aria-label="Go to">
           <Autocomplete filter={contains}>
+            {/* oxlint-disable-next-line jsx-a11y/no-autofocus -- a person who asks for this list is about to type */}
             <SearchField className={styles.field} aria-label="Go to" autoFocus>
               <Input className={styles.input} placeholder="Go to a station, section, set…" />
             </SearchField>

@@ -1,4 +1,4 @@
-import { type KeyboardEvent, type ReactElement, useEffect, useRef } from "react";
+import type { KeyboardEvent, ReactElement } from "react";
 import type { Station } from "../../report/findings/finding.ts";
 import { usePage } from "../state/page-context.ts";
 import { hashOf, STATIONS } from "../state/place.ts";
@@ -8,24 +8,21 @@ import styles from "./stations-line.module.css";
 /** The line of work: every station with how far it is, told by shape and in words. */
 export function StationsLine(): ReactElement {
   const { state, open } = usePage();
-  const line = useRef<HTMLOListElement>(null);
   const current = state.place.station;
-
-  useEffect(() => {
-    line.current?.querySelector("[aria-current]")?.scrollIntoView({ block: "nearest", inline: "center" });
-  }, [current]);
 
   const stateOf = (station: Station): StationState =>
     open === undefined ? "waiting" : stationState(station, open);
   return (
     <nav className={styles.nav} aria-label="Stations">
-      <ol ref={line} className={styles.line} onKeyDown={walk}>
+      <ol className={styles.line}>
         {STATIONS.map(({ id, title }, index) => (
           <li key={id}>
             <a
               href={hashOf({ ...state.place, station: id })}
               aria-current={id === current ? "page" : undefined}
               aria-keyshortcuts={String(index + 1)}
+              ref={id === current ? bringIntoView : undefined}
+              onKeyDown={walk}
             >
               <StateSign state={stateOf(id)} />
               <span className={styles.title} data-title={title}>
@@ -40,11 +37,16 @@ export function StationsLine(): ReactElement {
   );
 }
 
+/** On a narrow page the line scrolls. */
+function bringIntoView(link: HTMLElement | null): void {
+  link?.scrollIntoView({ block: "nearest", inline: "center" });
+}
+
 /** Left and right arrows walk along the line. */
-function walk(event: KeyboardEvent<HTMLOListElement>): void {
+function walk(event: KeyboardEvent<HTMLElement>): void {
   const by = event.key === "ArrowRight" ? 1 : event.key === "ArrowLeft" ? -1 : 0;
   if (by === 0) return;
-  const links = [...event.currentTarget.querySelectorAll("a")];
+  const links = [...(event.currentTarget.closest("ol")?.querySelectorAll("a") ?? [])];
   const next = links[links.findIndex((link) => link === document.activeElement) + by];
   if (next === undefined) return;
   event.preventDefault();

@@ -9,7 +9,7 @@ export function WorkBar(): ReactElement {
   const still = open === undefined ? "" : ` ${open.analysis.study.name} is still shown.`;
   return (
     <div className={styles.place}>
-      <div role="status" aria-live="polite" className={work.kind === "failed" ? styles.none : undefined}>
+      <output className={work.kind === "failed" ? styles.none : undefined}>
         {work.kind === "busy" && (
           <div className={styles.bar}>
             <span>
@@ -31,7 +31,7 @@ export function WorkBar(): ReactElement {
             </button>
           </div>
         )}
-      </div>
+      </output>
       <div role="alert">
         {work.kind === "failed" && (
           <div className={`${styles.bar} ${styles.failed}`}>

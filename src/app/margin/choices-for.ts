@@ -67,8 +67,7 @@ const wordings: Readonly<Record<string, Wording>> = {
   },
   "ranges.recovery": {
     stations: ["ranges", "timing"],
-    words: ({ ranges }) =>
-      ranges.recovery === "uniform" ? "Recovery even where searched" : `Recovery: ${ranges.recovery}`,
+    words: ({ ranges }) => ({ uniform: "Recovery even where searched" })[ranges.recovery],
   },
   "timing.window": {
     stations: ["timing"],

@@ -35,16 +35,15 @@ export function Margin(): ReactElement {
 
 const Notes = memo(function Notes({ open }: { readonly open: Opened }): ReactElement {
   const finding = findingOf(open.all, open.focus);
-  // A person scrolls the margin with the keyboard too.
   return (
-    // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex
-    <div className={styles.notes} tabIndex={0} role="region" aria-label="Notes on the plate">
+    // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- the keyboard scrolls it
+    <section className={styles.notes} tabIndex={0} aria-label="Notes on the plate">
       {finding === undefined ? (
         <p className={styles.finding}>This station has nothing to say about what is in focus.</p>
       ) : (
         <Argument finding={finding} open={open} />
       )}
-    </div>
+    </section>
   );
 });
 

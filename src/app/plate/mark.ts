@@ -41,3 +41,35 @@ export function placeOfMark({ kind, name }: Mark, { study }: Analysis): Partial<
       return kind satisfies never;
   }
 }
+
+export const isSameMark = (one: Mark, other: Mark | undefined): boolean =>
+  one.kind === other?.kind && one.name === other.name;
+
+/** The part of the sheet that all elements of a mark take up, in pixels from its upper left corner. */
+export interface MarkBox {
+  readonly left: number;
+  readonly top: number;
+  readonly width: number;
+  readonly height: number;
+  /** Whether it lies in the right half, so that its name stands on its left. */
+  readonly isRight: boolean;
+}
+
+const ROOM = 2;
+
+export function markBox({ kind, name }: Mark, sheet: HTMLElement): MarkBox | undefined {
+  const origin = sheet.getBoundingClientRect();
+  const parts = [...sheet.querySelectorAll(`[data-${kind}="${CSS.escape(name)}"]`)]
+    .map((part) => part.getBoundingClientRect())
+    .filter(({ width, height }) => width > 0 || height > 0);
+  if (parts.length === 0) return undefined;
+  const left = Math.min(...parts.map((part) => part.left)) - origin.left;
+  const top = Math.min(...parts.map((part) => part.top)) - origin.top;
+  return {
+    left: left - ROOM,
+    top: top - ROOM,
+    width: Math.max(...parts.map((part) => part.right)) - origin.left - left + 2 * ROOM,
+    height: Math.max(...parts.map((part) => part.bottom)) - origin.top - top + 2 * ROOM,
+    isRight: left > origin.width / 2,
+  };
+}

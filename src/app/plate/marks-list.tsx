@@ -7,22 +7,23 @@ export function MarksList({ marks }: { readonly marks: Marks }): ReactElement | 
   const [current, setCurrent] = useState(0);
   if (marks.listed.length === 0) return null;
   const place = Math.min(current, marks.listed.length - 1);
-  const walk = (event: KeyboardEvent<HTMLUListElement>) => {
+  const walk = (event: KeyboardEvent<HTMLElement>) => {
     const next = walked(event.key, place, marks.listed.length);
     if (next === undefined) return;
     event.preventDefault();
     setCurrent(next);
-    event.currentTarget.querySelectorAll("button")[next]?.focus();
+    event.currentTarget.closest("ul")?.querySelectorAll("button")[next]?.focus();
   };
   return (
     <div className={styles.marks}>
       <h2 id="marks-title">On this plate</h2>
-      <ul aria-labelledby="marks-title" onKeyDown={walk}>
+      <ul aria-labelledby="marks-title">
         {marks.listed.map((mark, index) => (
           <li key={`${mark.kind} ${mark.name}`}>
             <button
               type="button"
               tabIndex={index === place ? 0 : -1}
+              onKeyDown={walk}
               onFocus={() => {
                 setCurrent(index);
                 marks.point(mark);

@@ -20,7 +20,7 @@ export function PlateTools({
   const [failure, setFailure] = useState("");
   const actions = actionsOf(page).filter(({ id }) => id in ICONS);
   return (
-    <div className={styles.tools} role="group" aria-label="Plate tools">
+    <div className={styles.tools}>
       <span className={styles.failure} role="alert">
         {failure}
       </span>

@@ -8,8 +8,8 @@ import styles from "./plate.module.css";
 import { PlateTools } from "./plate-tools.tsx";
 import { ReadingLine } from "./reading-line.tsx";
 import { useMarks } from "./use-marks.ts";
+import { usePlateKeys } from "./use-plate-keys.ts";
 import { usePlateScale } from "./use-plate-scale.ts";
-import { usePlateZoom } from "./use-plate-zoom.ts";
 import { useReading } from "./use-reading.ts";
 
 interface PlateProps {
@@ -25,18 +25,16 @@ export function PlateView({ drawing, open }: PlateProps): ReactElement {
   const pixelsPerPoint = usePlateScale(frame, drawing);
   const reading = useReading(drawing, open);
   const marks = useMarks(sheet, drawing);
-  usePlateZoom(frame, reading);
+  usePlateKeys(frame, reading);
   return (
     <figure className={styles.figure}>
       <PlateTools drawing={drawing} open={open} />
-      <div
+      <section
         ref={frame}
         className={styles.frame}
-        role="group"
         aria-label={`${drawing.title}: arrow keys move the reading line`}
-        // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex
+        // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- it scrolls, and its arrow keys move the line
         tabIndex={0}
-        onKeyDown={reading.onKeyDown}
       >
         <div
           ref={sheet}
@@ -54,9 +52,9 @@ export function PlateView({ drawing, open }: PlateProps): ReactElement {
           {state.reading && (
             <ReadingLine drawing={drawing} reading={reading} pixelsPerPoint={pixelsPerPoint} />
           )}
-          <MarkLabel mark={marks.pointed} sheet={sheet} drawing={drawing} />
+          <MarkLabel pointed={marks.pointed} />
         </div>
-      </div>
+      </section>
       <MarksList marks={marks} />
     </figure>
   );

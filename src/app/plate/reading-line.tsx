@@ -38,6 +38,7 @@ export function ReadingLine({ drawing, reading, pixelsPerPoint }: ReadingLinePro
       <div
         className={styles.tag}
         style={{ top: y * pixelsPerPoint, left: drawing.panels.length > 1 ? panel.left * pixelsPerPoint : 0 }}
+        // oxlint-disable-next-line jsx-a11y/prefer-tag-over-role -- a range input has no place at a height
         role="slider"
         tabIndex={0}
         aria-label="Reading line"

@@ -8,12 +8,19 @@ import {
 } from "react";
 import type { Drawing } from "../../figures/plates/drawing.ts";
 import { usePage } from "../state/page-context.ts";
-import { MARK_SELECTOR, type Mark, markOf, placeOfMark } from "./mark.ts";
+import { isSameMark, MARK_SELECTOR, type Mark, type MarkBox, markBox, markOf, placeOfMark } from "./mark.ts";
+
+/** A mark under the pointer or the focus, and where it is drawn. */
+export interface Pointed {
+  readonly mark: Mark;
+  readonly box: MarkBox;
+  readonly drawing: Drawing;
+}
 
 export interface Marks {
   /** The marks on the plate that the keyboard walks through, each once, in the order drawn. */
   readonly listed: readonly Mark[];
-  readonly pointed: Mark | undefined;
+  readonly pointed: Pointed | undefined;
   readonly point: (mark: Mark | undefined) => void;
   /** Opens the rows a mark stands for, at Tables. */
   readonly open: (mark: Mark) => void;
@@ -26,39 +33,46 @@ export interface Marks {
 export function useMarks(sheet: RefObject<HTMLElement | null>, drawing: Drawing): Marks {
   const { go, open: opened } = usePage();
   const [listed, setListed] = useState<readonly Mark[]>([]);
-  const [pointed, point] = useState<Mark>();
+  const [pointed, setPointed] = useState<Pointed>();
 
-  useLayoutEffect(() => {
-    const found = new Map<string, Mark>();
-    for (const element of sheet.current?.querySelectorAll("[data-taxon], [data-horizon]") ?? []) {
-      const mark = markOf(element);
-      if (mark !== undefined && !found.has(`${mark.kind} ${mark.name}`))
-        found.set(`${mark.kind} ${mark.name}`, mark);
-    }
-    setListed([...found.values()]);
-    point(undefined);
-  }, [sheet, drawing]);
+  // What a plate shows is known once it is drawn.
+  // oxlint-disable react/set-state-in-effect, react/exhaustive-effect-dependencies
+  useLayoutEffect(() => setListed(marksOn(sheet.current)), [sheet, drawing]);
+  // oxlint-enable react/set-state-in-effect, react/exhaustive-effect-dependencies
 
   return useMemo(() => {
+    const point = (mark: Mark | undefined) =>
+      setPointed((before) => {
+        if (before?.drawing === drawing && isSameMark(before.mark, mark)) return before;
+        const box = mark && sheet.current ? markBox(mark, sheet.current) : undefined;
+        return mark && box && { mark, box, drawing };
+      });
     const open = (mark: Mark) => {
       if (opened !== undefined) go(placeOfMark(mark, opened.analysis));
     };
-    const under = (target: EventTarget) =>
-      target instanceof Element ? markOf(target.closest(MARK_SELECTOR)) : undefined;
     return {
       listed,
-      pointed,
+      pointed: pointed?.drawing === drawing ? pointed : undefined,
       point,
       open,
-      onPointer: (event) => {
-        const mark = under(event.target);
-        point((before) => (before?.kind === mark?.kind && before?.name === mark?.name ? before : mark));
-      },
+      onPointer: (event) => point(markUnder(event.target)),
       onLeave: () => point(undefined),
       onOpen: (event) => {
-        const mark = under(event.target);
+        const mark = markUnder(event.target);
         if (mark !== undefined) open(mark);
       },
     };
-  }, [listed, pointed, opened, go]);
+  }, [listed, pointed, drawing, sheet, opened, go]);
+}
+
+const markUnder = (target: EventTarget): Mark | undefined =>
+  target instanceof Element ? markOf(target.closest(MARK_SELECTOR)) : undefined;
+
+function marksOn(sheet: HTMLElement | null): readonly Mark[] {
+  const found = new Map<string, Mark>();
+  for (const element of sheet?.querySelectorAll("[data-taxon], [data-horizon]") ?? []) {
+    const mark = markOf(element);
+    if (mark !== undefined) found.set(`${mark.kind} ${mark.name}`, mark);
+  }
+  return [...found.values()];
 }

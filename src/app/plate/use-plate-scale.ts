@@ -10,7 +10,7 @@ export function usePlateScale(frame: RefObject<HTMLElement | null>, { width }: D
   const [room, setRoom] = useState(0);
   useLayoutEffect(() => {
     const element = frame.current;
-    if (element === null) return;
+    if (element === null) return undefined;
     const measure = () => setRoom(element.clientWidth);
     measure();
     const observer = new ResizeObserver(measure);

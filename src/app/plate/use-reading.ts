@@ -1,4 +1,4 @@
-import { type KeyboardEvent, type PointerEvent, useMemo } from "react";
+import { type PointerEvent, useMemo } from "react";
 import type { Section } from "../../core/study/model.ts";
 import type { Drawing, Panel } from "../../figures/plates/drawing.ts";
 import { heightOf, levelAt } from "../state/level.ts";

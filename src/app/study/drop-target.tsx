@@ -3,11 +3,12 @@ import { usePage } from "../state/page-context.ts";
 import styles from "./drop-target.module.css";
 import { droppedStudy } from "./dropped-study.ts";
 
+const carriesFiles = ({ dataTransfer }: DragEvent) => dataTransfer.types.includes("Files");
+
 /** Takes a study dropped anywhere on the page. */
 export function DropTarget({ children }: { readonly children: ReactNode }): ReactElement {
   const { study } = usePage();
   const [isOver, setIsOver] = useState(false);
-  const carriesFiles = ({ dataTransfer }: DragEvent) => dataTransfer.types.includes("Files");
   return (
     <div
       className={styles.target}

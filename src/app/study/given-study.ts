@@ -7,9 +7,10 @@ export interface GivenStudy {
 /** Said to the person who gave something that is no study. */
 export class NotAStudy extends Error {}
 
+const isTable = (file: string) => /\.csv$/i.test(file);
+
 /** Takes the study's own files: those of the top level, hidden ones and folders of results left alone. */
 export function studyOf(name: string, files: ReadonlyMap<string, Uint8Array>): GivenStudy {
-  const isTable = (file: string) => /\.csv$/i.test(file);
   if (![...files.keys()].some(isTable)) {
     const held =
       files.size === 0

@@ -1,4 +1,4 @@
-import { type CSSProperties, type ReactElement, useEffect, useMemo, useRef } from "react";
+import { type ReactElement, useEffect, useMemo, useRef } from "react";
 import type { Problem } from "../../core/study/problem.ts";
 import { cellKey, problemsByCell, type ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
@@ -31,8 +31,8 @@ export function Grid({ table, places, row }: GridProps): ReactElement {
   }, [row, places, table]);
 
   return (
-    // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex
-    <div ref={frame} className={styles.frame} tabIndex={0} role="region" aria-label={`Table ${table.title}`}>
+    // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- the keyboard scrolls it
+    <section ref={frame} className={styles.frame} tabIndex={0} aria-label={`Table ${table.title}`}>
       <table className={styles.grid} aria-rowcount={places.length + 1}>
         <colgroup>
           <col style={{ width: "6ch" }} />
@@ -60,7 +60,7 @@ export function Grid({ table, places, row }: GridProps): ReactElement {
           </tr>
         </thead>
         <tbody>
-          <Gap rows={first} columns={table.columns.length} />
+          <Gap rows={first} />
           {places.slice(first, last).map((place, index) => (
             <GridRow
               key={place}
@@ -71,10 +71,10 @@ export function Grid({ table, places, row }: GridProps): ReactElement {
               rowIndex={first + index + 2}
             />
           ))}
-          <Gap rows={places.length - last} columns={table.columns.length} />
+          <Gap rows={places.length - last} />
         </tbody>
       </table>
-    </div>
+    </section>
   );
 }
 
@@ -118,14 +118,8 @@ function GridRow({ table, place, problems, isSought, rowIndex }: GridRowProps): 
 }
 
 /** Stands for the rows that are not drawn. */
-function Gap({ rows, columns }: { readonly rows: number; readonly columns: number }): ReactElement | null {
-  if (rows <= 0) return null;
-  const style: CSSProperties = { height: rows * ROW_HEIGHT };
-  return (
-    <tr aria-hidden="true">
-      <td className={styles.gap} style={style} colSpan={columns + 1} />
-    </tr>
-  );
+function Gap({ rows }: { readonly rows: number }): ReactElement | null {
+  return rows > 0 ? <tr aria-hidden="true" style={{ height: rows * ROW_HEIGHT }} /> : null;
 }
 
 function ProblemSign({
@@ -152,7 +146,7 @@ const short = (text: string): string =>
   text.length > LONGEST_CELL ? `${text.slice(0, LONGEST_CELL)}…` : text;
 
 function widthOf({ columns, rows }: ShownTable, column: number): number {
-  const { header = "", meaning = "" } = columns[column] ?? {};
+  const { header, meaning } = columns[column] ?? { header: "", meaning: "" };
   const label =
     meaning === header || meaning.includes(" ") ? header.length : header.length + meaning.length + 3;
   const longest = rows.slice(0, 400).reduce((most, row) => Math.max(most, row[column]?.length ?? 0), 0);

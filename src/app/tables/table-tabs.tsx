@@ -1,4 +1,4 @@
-import { type ReactElement, useEffect, useRef } from "react";
+import type { ReactElement } from "react";
 import { usePage } from "../state/page-context.ts";
 import { hashOf } from "../state/place.ts";
 import type { ShownTable } from "./shown-table.ts";
@@ -12,12 +12,8 @@ interface TableTabsProps {
 /** Every table is a place of its own, so its tab is a link. */
 export function TableTabs({ groups, current }: TableTabsProps): ReactElement {
   const { state } = usePage();
-  const tabs = useRef<HTMLElement>(null);
-  useEffect(() => {
-    tabs.current?.querySelector("[aria-current]")?.scrollIntoView({ block: "nearest", inline: "nearest" });
-  }, [current]);
   return (
-    <nav ref={tabs} className={styles.tabs} aria-label="Tables">
+    <nav className={styles.tabs} aria-label="Tables">
       {groups.map(([title, tables]) => (
         <div key={title} className={styles.group}>
           <span className={styles.groupTitle} id={`tables-${title}`}>
@@ -29,6 +25,7 @@ export function TableTabs({ groups, current }: TableTabsProps): ReactElement {
                 <a
                   href={hashOf({ ...state.place, table: id, row: undefined, find: undefined })}
                   aria-current={id === current ? "true" : undefined}
+                  ref={id === current ? bringIntoView : undefined}
                 >
                   {id.replace(/\.csv$/, "")}
                   {problems.length > 0 && <ProblemCount problems={problems} />}
@@ -40,6 +37,10 @@ export function TableTabs({ groups, current }: TableTabsProps): ReactElement {
       ))}
     </nav>
   );
+}
+
+function bringIntoView(tab: HTMLElement | null): void {
+  tab?.scrollIntoView({ block: "nearest", inline: "nearest" });
 }
 
 function ProblemCount({ problems }: Pick<ShownTable, "problems">): ReactElement {

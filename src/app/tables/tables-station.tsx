@@ -36,7 +36,7 @@ export function TablesStation(): ReactElement | null {
             onChange={(event) => go({ find: event.currentTarget.value, table: table.id, row: undefined })}
           />
         </label>
-        <span role="status">{countWords(table, found.length)}</span>
+        <output>{countWords(table, found.length)}</output>
       </div>
       <Grid
         key={table.id}

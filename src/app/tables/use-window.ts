@@ -10,7 +10,7 @@ export function useWindow(
   const [{ top, height }, setView] = useState({ top: 0, height: 900 });
   useEffect(() => {
     const element = frame.current;
-    if (element === null) return;
+    if (element === null) return undefined;
     const look = () => setView({ top: element.scrollTop, height: element.clientHeight });
     look();
     const observer = new ResizeObserver(look);

@@ -3,8 +3,11 @@ import { type PageContents, usePage } from "../state/page-context.ts";
 import { moveFrame } from "../state/zoom.ts";
 import type { Reading } from "./use-reading.ts";
 
-/** The wheel with Ctrl comes nearer about the reading line; alone it moves a frame that shows a part. */
-export function usePlateZoom(frame: RefObject<HTMLElement | null>, reading: Reading): void {
+/**
+ * The wheel with Ctrl comes nearer about the reading line; alone it moves a frame that shows a part. Up and down move
+ * the line.
+ */
+export function usePlateKeys(frame: RefObject<HTMLElement | null>, reading: Reading): void {
   const page = usePage();
   const latest = useRef({ page, reading });
   useEffect(() => {
@@ -12,13 +15,18 @@ export function usePlateZoom(frame: RefObject<HTMLElement | null>, reading: Read
   });
   useEffect(() => {
     const element = frame.current;
-    if (element === null) return;
+    if (element === null) return undefined;
     const onWheel = (event: WheelEvent) => {
       const { page, reading } = latest.current;
       if (turn(event, page, reading)) event.preventDefault();
     };
+    const onKeyDown = (event: KeyboardEvent) => latest.current.reading.onKeyDown(event);
     element.addEventListener("wheel", onWheel, { passive: false });
-    return () => element.removeEventListener("wheel", onWheel);
+    element.addEventListener("keydown", onKeyDown);
+    return () => {
+      element.removeEventListener("wheel", onWheel);
+      element.removeEventListener("keydown", onKeyDown);
+    };
   }, [frame]);
 }
 
