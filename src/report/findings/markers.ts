@@ -17,7 +17,7 @@ export function markersFinding({ study, markers }: Analysis, section: Section): 
     station: "markers",
     section: section.name,
     sentence: sentence(section, main, found),
-    numbers: here.flatMap((h) => horizonLines(section, h, main)),
+    numbers: mainFirst(here, main).flatMap((h) => horizonLines(section, h, main)),
     weaknesses: [
       ...cautions.map((c) => weaknessOf(c, study)),
       ...flags.map((f) => ({ severity: "note" as const, words: flagWords(f) })),
@@ -40,6 +40,15 @@ function sentence(section: Section, main: MarkerHorizon | undefined, found: read
     return [...opening, ...own, ...say` The ${beside.evidence} found beside it lies ${away} from there.`];
   }
   return [...opening, ...say`found by ${main.evidence}; it dates ${refersToWords(main.refersTo)}.`];
+}
+
+/** The main horizon and what was found of it, then the others from above downward. */
+function mainFirst(
+  horizons: readonly MarkerHorizon[],
+  main: MarkerHorizon | undefined,
+): readonly MarkerHorizon[] {
+  const rank = (h: MarkerHorizon) => (h === main ? 0 : h.horizon === main?.horizon ? 1 : 2);
+  return horizons.toSorted((a, b) => rank(a) - rank(b) || b.positionM - a.positionM);
 }
 
 function horizonLines(section: Section, h: MarkerHorizon, main: MarkerHorizon | undefined): NumberLine[] {

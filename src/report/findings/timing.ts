@@ -22,10 +22,24 @@ export function timingFinding(analysis: Analysis, section: Section, set: string)
     section: section.name,
     set,
     sentence: sentence({ analysis, section, set, answers }),
-    numbers: answers.flatMap((answer) => line(answer, section)),
+    numbers: mainFirst(answers, analysis, section).flatMap((answer) => line(answer, section)),
     weaknesses: cautions.map((c) => weaknessOf(c, study)),
     methods: timing.basis,
   };
+}
+
+/** The answers in their order, but of the horizons the main one first. */
+function mainFirst(
+  answers: readonly TimingAnswer[],
+  analysis: Analysis,
+  section: Section,
+): readonly TimingAnswer[] {
+  const main = analysis.markers.main.bySection.get(section.name);
+  const isMain = ({ horizon }: TimingAnswer) => horizon !== undefined && horizon === main?.horizon;
+  const first = answers.findIndex((answer) => answer.method === "confidence-levels");
+  if (first < 0) return answers;
+  const rest = answers.slice(first);
+  return [...answers.slice(0, first), ...rest.filter(isMain), ...rest.filter((answer) => !isMain(answer))];
 }
 
 /** The set in words: `39 candidates`, `8 taxa of ammonoids`, `27 taxa of open-shelf`. */

@@ -44,7 +44,7 @@ export function probability(p: number): string {
 export const pValue = (p: number): string =>
   p < 0.001 || p > 0.999 ? `p ${probability(p)}` : `p = ${probability(p)}`;
 
-export const percent = (share: number): string => `${Number((100 * share).toPrecision(4))} %`;
+export const percent = (share: number): string => `${Number((100 * share).toPrecision(4))}\u00a0%`;
 
 export const significant = (value: number, digits = 3): string =>
   minus(String(Number(value.toPrecision(digits))));
