@@ -48,7 +48,7 @@ const page = {
   base: "./",
   plugins: [react(), exampleStudy()],
   worker: { format: "es" as const },
-  build: { outDir: at("dist/page"), emptyOutDir: true, assetsInlineLimit: 0 },
+  build: { outDir: at("dist/page"), emptyOutDir: true, assetsInlineLimit: 0, chunkSizeWarningLimit: 2000 },
 };
 
 const node = {

@@ -1,5 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import type { Role } from "../../core/study/finds-result.ts";
+import type { Candidate, Role } from "../../core/study/finds-result.ts";
 import type { Section } from "../../core/study/model.ts";
 import { weaknessOf } from "../wordings/cautions.ts";
 import { percent } from "../wordings/numbers.ts";
@@ -60,14 +60,34 @@ export function reachOf({ candidates, ranges, study }: Analysis, section: Sectio
 }
 
 function sentence(analysis: Analysis, section: Section): Words {
-  const main = analysis.markers.main.bySection.get(section.name);
-  const counted = analysis.candidates.filter(
-    (c) => c.section === section.name && c.role === "candidate",
-  ).length;
-  if (counted === 0) return say`No taxon of ${section.title} has an end in question.`;
-  if (main === undefined)
-    return say`${strong(plural(counted, "taxon", "taxa"))} of ${section.title} can be judged; the main horizon is not placed here.`;
+  const here = analysis.candidates.filter((c) => c.section === section.name);
+  const counted = here.filter((c) => c.role === "candidate").length;
+  const opening = say`Of ${plural(here.length, "taxon", "taxa")} in ${section.title} ${strong(
+    `${counted} ${counted === 1 ? "has its end" : "have their end"}`,
+  )} in question${besideWords(here)}.`;
+  if (counted === 0) return opening;
+  if (analysis.markers.main.bySection.get(section.name) === undefined)
+    return [...opening, ...say` The main horizon is not placed here.`];
   const { taxa, reaching } = reachOf(analysis, section);
   const level = percent(analysis.study.settings.confidence);
-  return say`${strong(`${reaching.length} of ${taxa}`)} taxa whose end is in question in ${section.title} could have lived to the main horizon: their ${level} interval reaches it.`;
+  return [
+    ...opening,
+    ...say` ${strong(`${reaching.length} of ${taxa}`)} could have lived to the main horizon: their ${level} interval reaches it.`,
+  ];
+}
+
+const beside: readonly (readonly [Role, string])[] = [
+  ["survivor", "survive"],
+  ["aftermath", "begin above the main horizon"],
+  ["late-start", "begin too late"],
+  ["too-few", "have too few horizons"],
+];
+
+/** Why the others do not count: ` (7 survive, 6 begin above the main horizon)`. */
+function besideWords(candidates: readonly Candidate[]): string {
+  const parts = beside.flatMap(([role, words]) => {
+    const count = candidates.filter((candidate) => candidate.role === role).length;
+    return count === 0 ? [] : [`${count} ${words}`];
+  });
+  return parts.length === 0 ? "" : ` (${parts.join(", ")})`;
 }
