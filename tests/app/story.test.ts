@@ -1,7 +1,7 @@
 import { readFile } from "node:fs/promises";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { findBrowser } from "./browser.ts";
-import { dropFiles, finding, type OpenedPage, openPage } from "./opened-page.ts";
+import { dropFiles, EXAMPLE, finding, type OpenedPage, openPage } from "./opened-page.ts";
 import { faultyStudy, hostileName, smallStudy } from "./small-study.ts";
 
 describe.skipIf(findBrowser() === undefined)("a person lives through the page", () => {
@@ -119,7 +119,7 @@ describe.skipIf(findBrowser() === undefined)("a person lives through the page", 
   it("loads a dropped study and shows hostile names as text", async () => {
     const { page } = opened;
     await dropFiles(page, smallStudy);
-    await page.locator("header h1", { hasText: "4 files" }).waitFor({ timeout: 60_000 });
+    await page.locator("header h1", { hasText: "Dropped tables" }).waitFor({ timeout: 60_000 });
     expect(await page.getByLabel("Section", { exact: true }).textContent()).toBe("Lorn Bank");
     await page.keyboard.press("1");
     await page.getByRole("navigation", { name: "Tables" }).getByText("occurrences").click();
@@ -135,6 +135,15 @@ describe.skipIf(findBrowser() === undefined)("a person lives through the page", 
     await page.getByRole("navigation", { name: "Stations" }).getByText("Ranges", { exact: true }).click();
     await page.getByRole("button", { name: /^__proto__ ?, open its rows$/ }).waitFor();
     expect(await page.locator("img").count()).toBe(0);
+  });
+
+  it("says at Fence what one section lacks, and where it would come from", async () => {
+    const { page } = opened;
+    await page.keyboard.press("3");
+    await page.getByRole("heading", { name: "A fence needs two sections or more." }).waitFor();
+    expect(await page.locator("main").textContent()).toContain("sections.csv");
+    const fence = page.getByRole("navigation", { name: "Stations" }).getByRole("link", { name: /Fence/ });
+    expect(await fence.textContent()).toMatch(/not yet$/);
   });
 
   it("marks a problem at its cell and lists it with how to mend it", async () => {
@@ -162,6 +171,13 @@ describe.skipIf(findBrowser() === undefined)("a person lives through the page", 
     const svg = await readFile(await download.path(), "utf8");
     expect(svg).toMatch(/^<\?xml version="1.0" encoding="UTF-8"\?>\n<svg /);
     expect(svg.replaceAll('xmlns="http://www.w3.org/2000/svg"', "")).not.toMatch(/https?:\/\//);
+  });
+
+  it("loads a folder chosen from the disk", async () => {
+    const { page } = opened;
+    await page.getByTestId("study-folder").setInputFiles(EXAMPLE.folder);
+    await page.locator("header h1", { hasText: "Veyra Shelf" }).waitFor({ timeout: 60_000 });
+    expect(await page.getByLabel("Section", { exact: true }).locator("option").count()).toBe(4);
   });
 
   it("asked nobody but this machine, and complained of nothing", () => {

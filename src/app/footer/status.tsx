@@ -22,6 +22,7 @@ export function Status(): ReactElement {
         ) : (
           <>
             <b>{facts.own}</b>
+            {facts.beyond && <span>{facts.beyond}</span>}
             {[facts.fromHorizon, facts.common, facts.rock].map(
               (fact) => fact && <span key={fact}>{fact}</span>,
             )}

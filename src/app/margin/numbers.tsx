@@ -2,6 +2,8 @@ import type { ReactElement } from "react";
 import type { NumberLine } from "../../report/findings/finding.ts";
 import styles from "./margin.module.css";
 
+const LONGEST_ON_ONE_LINE = 22;
+
 export function Numbers({ lines }: { readonly lines: readonly NumberLine[] }): ReactElement | null {
   if (lines.length === 0) return null;
   return (
@@ -15,7 +17,7 @@ export function Numbers({ lines }: { readonly lines: readonly NumberLine[] }): R
                 {label}
                 {note && <small>{note}</small>}
               </th>
-              <td>{value}</td>
+              <td className={value.length <= LONGEST_ON_ONE_LINE ? styles.short : undefined}>{value}</td>
             </tr>
           ))}
         </tbody>

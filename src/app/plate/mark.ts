@@ -56,10 +56,16 @@ export interface MarkBox {
 }
 
 const ROOM = 2;
+/** The letters of a name lean far away from its range: what is framed is what is drawn. */
+const SHAPES = "path, rect, line, circle, polygon";
 
 export function markBox({ kind, name }: Mark, sheet: HTMLElement): MarkBox | undefined {
   const origin = sheet.getBoundingClientRect();
-  const parts = [...sheet.querySelectorAll(`[data-${kind}="${CSS.escape(name)}"]`)]
+  const drawn = [...sheet.querySelectorAll(`[data-${kind}="${CSS.escape(name)}"]`)];
+  const shapes = drawn
+    .flatMap((part) => [part, ...part.querySelectorAll("*")])
+    .filter((part) => part.matches(SHAPES));
+  const parts = (shapes.length > 0 ? shapes : drawn)
     .map((part) => part.getBoundingClientRect())
     .filter(({ width, height }) => width > 0 || height > 0);
   if (parts.length === 0) return undefined;

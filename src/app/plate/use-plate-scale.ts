@@ -2,8 +2,8 @@ import { type RefObject, useLayoutEffect, useState } from "react";
 import type { Drawing } from "../../figures/plates/drawing.ts";
 
 /** Below this a plate's smallest letters (7 pt) cannot be read on a screen: it scrolls instead. */
-const LEAST = 1.15;
-const MOST = 2;
+const LEAST = 1.08;
+const MOST = 1.5;
 
 /** Pixels of the page for a point of the plate: the plate fills the width it has, as far as it stays readable. */
 export function usePlateScale(frame: RefObject<HTMLElement | null>, { width }: Drawing): number {

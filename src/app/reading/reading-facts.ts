@@ -1,11 +1,13 @@
 import { toCommon } from "../../core/alignment/flatten.ts";
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Measurement, RockInterval, Sample, Section } from "../../core/study/model.ts";
-import { offset, position } from "../../report/wordings/numbers.ts";
+import { metres, offset, position } from "../../report/wordings/numbers.ts";
 
 /** What lies under the reading line, in words. */
 export interface ReadingFacts {
   readonly own: string;
+  /** Said instead of the rest where the line lies above or below all of the section. */
+  readonly beyond?: string;
   readonly fromHorizon?: string;
   readonly common?: string;
   readonly rock?: string;
@@ -18,6 +20,8 @@ export interface ReadingFacts {
 /** Everything that the tables say about one height of a section. */
 export function readingFacts(analysis: Analysis, section: Section, heightM: number): ReadingFacts {
   const main = analysis.markers.main.bySection.get(section.name);
+  if (heightM > section.topM || heightM < section.bottomM)
+    return { own: position(section, heightM), beyond: beyondWords(section, heightM) };
   const sample = nearest(section.samples, heightM);
   return {
     own: position(section, heightM),
@@ -29,6 +33,12 @@ export function readingFacts(analysis: Analysis, section: Section, heightM: numb
     search: sample && searchWords(analysis, section, sample),
     iridium: iridiumWords(analysis, section, heightM),
   };
+}
+
+function beyondWords({ title, bottomM, topM }: Section, heightM: number): string {
+  return heightM > topM
+    ? `${metres(heightM - topM)} m above the top of ${title}`
+    : `${metres(bottomM - heightM)} m below the bottom of ${title}`;
 }
 
 function nearest<T extends { readonly heightM: number }>(

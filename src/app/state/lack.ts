@@ -9,7 +9,7 @@ export interface Lack {
 }
 
 export function lackOf(station: Station, focus: Focus, analysis: Analysis): Lack | undefined {
-  const { study, alignment, markers, taxa } = analysis;
+  const { study, markers, taxa } = analysis;
   const { section } = focus;
   if (station === "tables")
     return study.sheets.length > 0
@@ -29,12 +29,7 @@ export function lackOf(station: Station, focus: Focus, analysis: Analysis): Lack
             "Horizons given by hand belong in horizons.csv; contents, ratios and grain counts in measurements.csv.",
           );
     case "fence":
-      return alignment.datum !== undefined && alignment.sections.length > 0
-        ? undefined
-        : lack(
-            "No horizon is shared between the sections, so they cannot hang on one datum.",
-            "Give the same horizon name in each section in horizons.csv, or declare found horizons one in settings.json (boundary.same).",
-          );
+      return fenceLack(analysis);
     case "ranges":
       return taxa.some((taxon) => taxon.section === section.name)
         ? undefined
@@ -55,3 +50,16 @@ export function lackOf(station: Station, focus: Focus, analysis: Analysis): Lack
 }
 
 const lack = (what: string, where: string): Lack => ({ what, where });
+
+function fenceLack({ alignment, study }: Analysis): Lack | undefined {
+  if (study.sections.length < 2)
+    return lack(
+      "A fence needs two sections or more.",
+      "Each section is a row of sections.csv, or a name in the other tables.",
+    );
+  if (alignment.datum !== undefined && alignment.sections.length > 0) return undefined;
+  return lack(
+    "No horizon is shared between the sections, so they cannot hang on one datum.",
+    "Give the same horizon name in each section in horizons.csv, or declare found horizons one in settings.json (boundary.same).",
+  );
+}
