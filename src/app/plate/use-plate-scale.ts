@@ -1,8 +1,9 @@
 import { type RefObject, useLayoutEffect, useState } from "react";
 import type { Drawing } from "../../figures/plates/drawing.ts";
 
-/** Below this a plate's smallest letters (7 pt) cannot be read on a screen: it scrolls instead. */
+/** Below this a plate's smallest letters (7 pt) cannot be read: it keeps its physical size and scrolls instead. */
 const LEAST = 1.08;
+const PHYSICAL = 4 / 3;
 const MOST = 1.5;
 
 /** Pixels of the page for a point of the plate: the plate fills the width it has, as far as it stays readable. */
@@ -17,5 +18,6 @@ export function usePlateScale(frame: RefObject<HTMLElement | null>, { width }: D
     observer.observe(element);
     return () => observer.disconnect();
   }, [frame]);
-  return Math.min(MOST, Math.max(LEAST, room / width));
+  const fitting = room / width;
+  return fitting < LEAST ? PHYSICAL : Math.min(MOST, fitting);
 }
