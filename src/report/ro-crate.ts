@@ -3,6 +3,8 @@ import { VERSION } from "../core/version.ts";
 
 export const CRATE_FILE = "ro-crate-metadata.json";
 
+const PROGRAM = "#lastbed";
+
 const context = "https://w3id.org/ro/crate/1.2/context";
 const profile = "https://w3id.org/ro/crate/1.2";
 
@@ -14,7 +16,7 @@ const profile = "https://w3id.org/ro/crate/1.2";
  */
 export function roCrate(study: Study, files: readonly string[]): string {
   const program = {
-    "@id": "#lastbed",
+    "@id": PROGRAM,
     "@type": "SoftwareApplication",
     name: "Lastbed",
     softwareVersion: VERSION,
@@ -40,7 +42,7 @@ export function roCrate(study: Study, files: readonly string[]): string {
       "@id": "#run",
       "@type": "CreateAction",
       name: "analysis",
-      instrument: { "@id": "#lastbed" },
+      instrument: { "@id": PROGRAM },
       object: tables,
       result: results,
     },
@@ -64,10 +66,14 @@ function formatOf(file: string): string {
   return formats[ending] ?? "application/octet-stream";
 }
 
-/** The files that a folder's description says belong to it; empty where it cannot be read. */
+/** The files of a run by its folder's description; empty where it cannot be read or tells of no run of ours. */
 export function filesOfCrate(text: string): readonly string[] {
   const graph = parsed(text)?.["@graph"];
   if (!Array.isArray(graph)) return [];
+  const isOurs = graph.some(
+    (entity) => isRecord(entity) && entity["@id"] === PROGRAM && entity.name === "Lastbed",
+  );
+  if (!isOurs) return [];
   const root: unknown = graph.find((entity) => isRecord(entity) && entity["@id"] === "./");
   const parts = isRecord(root) && Array.isArray(root.hasPart) ? root.hasPart : [];
   return parts.flatMap((part: unknown) =>

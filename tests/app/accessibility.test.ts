@@ -1,7 +1,7 @@
 import { AxeBuilder } from "@axe-core/playwright";
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
-import { findBrowser } from "./browser.ts";
+import { findBrowser } from "./find-browser.mjs";
 import { finding, type OpenedPage, openPage } from "./opened-page.ts";
 
 const STATIONS = ["tables", "markers", "fence", "ranges", "timing"];

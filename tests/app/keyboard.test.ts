@@ -1,6 +1,6 @@
 import type { Page } from "playwright-core";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
-import { findBrowser } from "./browser.ts";
+import { findBrowser } from "./find-browser.mjs";
 import { finding, type OpenedPage, openPage } from "./opened-page.ts";
 
 /** Presses Tab until the focus is on something of this name, as a person does. */

@@ -5,7 +5,7 @@ import type { Analysis } from "../../src/core/analysis-result.ts";
 import { fontFaceCss } from "../../src/figures/faces.ts";
 import { fenceDiagram, markerPlate, rangeChart, renderPlate, timingPlate } from "../../src/figures/index.ts";
 import { inlineRunner } from "../../src/run/inline.ts";
-import { findBrowser } from "./browser.ts";
+import { findBrowser } from "./find-browser.mjs";
 import { EXAMPLE, finding, type OpenedPage, openPage } from "./opened-page.ts";
 
 async function analysedExample(): Promise<Analysis> {

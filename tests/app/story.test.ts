@@ -1,6 +1,6 @@
 import { readFile } from "node:fs/promises";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
-import { findBrowser } from "./browser.ts";
+import { findBrowser } from "./find-browser.mjs";
 import { dropFiles, EXAMPLE, finding, type OpenedPage, openPage } from "./opened-page.ts";
 import { faultyStudy, hostileName, smallStudy } from "./small-study.ts";
 

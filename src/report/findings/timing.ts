@@ -163,7 +163,8 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
     case "duration-box":
       return [
         {
-          label: "It took at most",
+          label:
+            answer.taxa === answer.taxaOfSet ? "It took at most" : "It took at most, of the best sampled",
           value: answer.high === undefined ? `not bounded (${answer.outcome})` : `${metres(answer.high)} m`,
           note: `${level}${answer.taxa} of ${answer.taxaOfSet} taxa`,
         },

@@ -154,9 +154,25 @@ function givenNames({ n, text }: Told): string {
 
 /** A flag with the quantities that raised it. */
 export function flagWords({ horizon, flag, numbers, consequence }: Flag): Words {
-  const quantities = Object.entries(numbers).map(([key, value]) => `${key} ${significant(value)}`);
+  const quantities = Object.entries(numbers).map(([key, value]) => quantityWords(key, value));
   const behind = quantities.length > 0 ? ` (${quantities.join(", ")})` : "";
-  return say`${flag.toLowerCase().replaceAll("_", " ")}, ${horizon}: ${consequence}${behind}.`;
+  return say`${horizon}, ${flag.toLowerCase().replaceAll("_", " ")}: ${consequence}${behind}.`;
+}
+
+/** Endings of the names of quantities, and the unit each stands for. */
+const unitEndings: readonly (readonly [RegExp, string])[] = [
+  [/GCm3$/, " g/cm\u00b3"],
+  [/CmPerKa$/, " cm/ka"],
+  [/Cm$/, " cm"],
+  [/Ma$/, " Ma"],
+  [/M$/, " m"],
+];
+
+/** `thickestCm: 3` as `thickest 3 cm`, `sameLithology: 24` as `same lithology 24`. */
+function quantityWords(key: string, value: number): string {
+  const [ending, unit] = unitEndings.find(([pattern]) => pattern.test(key)) ?? [/$^/, ""];
+  const words = key.replace(ending, "").replace(/[A-Z]/g, (letter) => ` ${letter.toLowerCase()}`);
+  return `${words} ${significant(value)}${unit}`;
 }
 
 export function refersToWords(refersTo: RefersTo): string {

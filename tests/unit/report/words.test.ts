@@ -1,4 +1,5 @@
 import { describe, expect, it } from "vitest";
+import { flagWords } from "../../../src/report/wordings/cautions.ts";
 import {
   metres,
   offset,
@@ -53,5 +54,20 @@ describe("numbers", () => {
     expect(probability(0.0000012)).toBe("< 0.001");
     expect(pValue(0.4599)).toBe("p = 0.46");
     expect(pValue(0.0104)).toBe("p = 0.010");
+  });
+});
+
+describe("flags", () => {
+  it("tell their quantities in words with units", () => {
+    const flag = {
+      section: "orskel-ledge",
+      horizon: "iridium-1",
+      flag: "COARSE_SAMPLING",
+      numbers: { thickestCm: 12.3456, sameLithology: 24, densityGCm3: 2.3 },
+      consequence: "sampling too coarse",
+    };
+    expect(plain(flagWords(flag))).toBe(
+      "iridium-1, coarse sampling: sampling too coarse (thickest 12.3 cm, same lithology 24, density 2.3 g/cm\u00b3).",
+    );
   });
 });
