@@ -18,7 +18,9 @@ export function summary(analysis: Analysis): readonly SummaryPart[] {
     warnings: [
       ...new Set(
         chosen.flatMap((finding) =>
-          finding.weaknesses.filter((w) => w.severity === "warning").map((w) => plain(w.words)),
+          finding.weaknesses
+            .filter(({ severity, code }) => severity === "warning" || code === "timing-survivors")
+            .map((weakness) => plain(weakness.words)),
         ),
       ),
     ],

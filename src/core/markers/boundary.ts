@@ -1,6 +1,7 @@
 import type { LocalTaxon } from "../study/finds-result.ts";
 import type { Study } from "../study/model.ts";
 import type { Boundary } from "../study/roles.ts";
+import { byFluence } from "./main-horizon.ts";
 import type { Markers, Mixing } from "./result.ts";
 import { reworkingCeiling } from "./reworking.ts";
 
@@ -13,9 +14,9 @@ export function boundaryIn(section: string, markers: Markers, study: Study): Bou
   if (main === undefined) return undefined;
   const mixing =
     main.mixing ??
-    markers.horizons.find(
-      (h) => h.section === section && h.horizon === main.horizon && h.mixing !== undefined,
-    )?.mixing;
+    markers.horizons
+      .filter((h) => h.section === section && h.horizon === main.horizon && h.mixing !== undefined)
+      .toSorted(byFluence)[0]?.mixing;
   const base = { positionM: main.positionM, highM: main.highM };
   if (mixing === undefined) return { ...base, ceilingOf: () => undefined };
   return {

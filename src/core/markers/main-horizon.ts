@@ -112,7 +112,8 @@ function bySectionFluence(horizons: readonly MarkerHorizon[]) {
   return { main, cautions };
 }
 
-function byFluence(a: MarkerHorizon, b: MarkerHorizon): number {
+/** The horizon of largest fluence first; of equal ones the lowest. */
+export function byFluence(a: MarkerHorizon, b: MarkerHorizon): number {
   return (b.fluence?.value ?? 0) - (a.fluence?.value ?? 0) || a.positionM - b.positionM;
 }
 

@@ -97,7 +97,7 @@ function greatest(
     if (value > best) [best, bestAt] = [value, Math.min(x, high)];
   }
   const [from, to] = [Math.max(low, bestAt - step), Math.min(high, bestAt + step)];
-  const least = minimiseOnInterval((x) => -f(x), from, to, { tolerance: 5e-3 * (to - from) });
+  const least = minimiseOnInterval((x) => -f(x), from, to, { tolerance: 2e-4 * (to - from) });
   return Math.max(best, -least.value);
 }
 

@@ -36,9 +36,12 @@ export interface LocalTaxon {
   readonly heightsM: readonly number[];
   /** The samples behind them; undefined where a find was given by position alone or its sample was not searched. */
   readonly samples: readonly (string | undefined)[];
-  /** Highest level under the strict and under the inclusive reading of names, whichever the settings use. */
+  /** Highest in-place level under the strict reading of names (reworked finds never count), whatever the settings. */
   readonly lastStrictM?: number;
+  /** Highest level under the inclusive reading. */
   readonly lastInclusiveM: number;
+  /** Distinct levels under the inclusive reading; absent where it adds none. */
+  readonly inclusiveHeightsM?: readonly number[];
   /** Number of horizons stated by a published range without its finds. */
   readonly publishedHorizons?: number;
 }

@@ -59,7 +59,9 @@ function judge(occurrence: Occurrence, section: Section, study: Study): JudgedFi
     ...(occurrence.sample === undefined ? {} : { sample: occurrence.sample }),
     used: asRead === undefined ? "yes" : "no",
     reason: asRead ?? "used",
-    strict: reasonAgainst(occurrence, section, study.settings, "strict") === undefined,
+    strict:
+      occurrence.reworked === "no" &&
+      reasonAgainst(occurrence, section, study.settings, "strict") === undefined,
     inclusive: reasonAgainst(occurrence, section, study.settings, "inclusive") === undefined,
   };
 }
@@ -87,7 +89,8 @@ export function hasNoRecovery(interval: RockInterval): boolean {
   return interval.kind === "covered" || interval.kind === "core-loss" || interval.kind === "not-searched";
 }
 
-function isWithin(heightM: number, interval: RockInterval): boolean {
+/** Inside an interval, its ends left out. */
+export function isWithin(heightM: number, interval: RockInterval): boolean {
   return heightM > interval.baseM + LEVEL_TOLERANCE_M && heightM < interval.topM - LEVEL_TOLERANCE_M;
 }
 
@@ -141,6 +144,7 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
   const group = groupOf(study.taxa.has(taxon) ? taxon : judged[0].named, study);
   const upward = used.toSorted((a, b) => a.heightM - b.heightM);
   const lastStrictM = highest(judged.filter((find) => find.strict));
+  const inclusive = levelsOf(judged.filter((find) => find.inclusive));
   return {
     section: section.name,
     taxon,
@@ -150,7 +154,8 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
       sample !== undefined && searched.has(searchKey(sample, group)) ? sample : undefined,
     ),
     ...(lastStrictM === undefined ? {} : { lastStrictM }),
-    lastInclusiveM: highest(judged.filter((find) => find.inclusive)) ?? upward[upward.length - 1].heightM,
+    lastInclusiveM: inclusive.at(-1) ?? upward[upward.length - 1].heightM,
+    ...(inclusive.length > upward.length ? { inclusiveHeightsM: inclusive } : {}),
   };
 }
 
@@ -167,6 +172,12 @@ function publishedTaxon(taxon: string, range: PublishedRange, section: Section, 
     lastInclusiveM: range.lastM,
     publishedHorizons: range.horizons,
   };
+}
+
+/** Distinct heights from below upward. */
+function levelsOf(finds: readonly JudgedFind[]): readonly number[] {
+  const heights = finds.map((find) => find.heightM).toSorted((a, b) => a - b);
+  return heights.filter((height, i) => i === 0 || height - heights[i - 1] > LEVEL_TOLERANCE_M);
 }
 
 function highest(finds: readonly JudgedFind[]): number | undefined {

@@ -36,24 +36,24 @@ export function assignRoles(input: RolesInput): AssignedRoles {
 
 function assignRole(taxon: LocalTaxon, { section, boundary, settings }: RolesInput) {
   const ceilingM = boundary?.ceilingOf(taxon);
-  const { role, reason } = roleOf(taxon, boundary, { settings, ceilingM });
-  const kept =
-    role === "candidate" && boundary !== undefined ? belowCeiling(taxon, boundary, ceilingM) : taxon;
+  const kept = boundary === undefined ? taxon : withoutSmeared(taxon, boundary, ceilingM);
+  const { role, reason } = roleOf({ taxon, kept }, boundary, { settings, ceilingM });
+  const counted = role === "candidate" || role === "too-few" ? kept : taxon;
   const candidate: Candidate = {
     section: taxon.section,
     taxon: taxon.taxon,
     group: taxon.group,
     role,
-    reachesTop: reachesTop(kept, section),
-    horizons: horizonCount(kept),
-    firstM: kept.heightsM[0],
-    lastM: kept.heightsM[kept.heightsM.length - 1],
-    lastInclusiveM: taxon.lastInclusiveM,
+    reachesTop: reachesTop(counted, section),
+    horizons: horizonCount(counted),
+    firstM: counted.heightsM[0],
+    lastM: counted.heightsM[counted.heightsM.length - 1],
+    lastInclusiveM: counted.lastInclusiveM,
     ...(ceilingM === undefined ? {} : { reworkingCeilingM: ceilingM }),
-    findsBelowCeiling: taxon.heightsM.length - kept.heightsM.length,
+    findsBelowCeiling: taxon.heightsM.length - counted.heightsM.length,
     reason,
   };
-  return { candidate, taxon: kept };
+  return { candidate, taxon: counted };
 }
 
 interface Limits {
@@ -76,12 +76,12 @@ const given = (
 });
 
 function roleOf(
-  taxon: LocalTaxon,
+  { taxon, kept }: { readonly taxon: LocalTaxon; readonly kept: LocalTaxon },
   boundary: Boundary | undefined,
   { settings, ceilingM }: Limits,
 ): GivenRole {
   const first = taxon.heightsM[0];
-  const horizons = horizonCount(taxon);
+  const horizons = horizonCount(kept);
   const minimum = settings.taxa.minimumHorizons;
   if (boundary !== undefined) {
     const { positionM, highM, smearBaseM } = boundary;
@@ -98,7 +98,7 @@ function roleOf(
   if (horizons < minimum) return given("too-few", "horizons-under-minimum", [horizons, minimum]);
   return boundary === undefined
     ? given("candidate", "no-horizon-here", [horizons, minimum])
-    : given("candidate", "ends-in-question", [taxon.heightsM[taxon.heightsM.length - 1], boundary.highM]);
+    : given("candidate", "ends-in-question", [kept.heightsM[kept.heightsM.length - 1], boundary.highM]);
 }
 
 /** n counts horizons, never specimens; a range published without its finds brings its own number. */
@@ -107,15 +107,26 @@ export function horizonCount(taxon: LocalTaxon): number {
 }
 
 /**
- * Where mixing smears the layer upward it smears fossils too, so a candidate's finds above H are neither survival nor
- * its end: they are taken out. Without accepted mixing nothing is taken out.
+ * Where mixing smears the layer upward it smears fossils too, so the finds of a taxon above H and up to its ceiling
+ * are neither survival nor its end: they are taken out. Without accepted mixing nothing is taken out.
  */
-function belowCeiling(taxon: LocalTaxon, boundary: Boundary, ceilingM: number | undefined): LocalTaxon {
+function withoutSmeared(taxon: LocalTaxon, boundary: Boundary, ceilingM: number | undefined): LocalTaxon {
   if (ceilingM === undefined || taxon.publishedHorizons !== undefined) return taxon;
-  const count = taxon.heightsM.filter((height) => height <= boundary.positionM).length;
-  if (count === taxon.heightsM.length) return taxon;
-  return { ...taxon, heightsM: taxon.heightsM.slice(0, count), samples: taxon.samples.slice(0, count) };
+  const isKept = (heightM: number) => !isSmeared(heightM, boundary, ceilingM);
+  const places = [...taxon.heightsM.keys()].filter((i) => isKept(taxon.heightsM[i]));
+  if (places.length === taxon.heightsM.length || places.length === 0) return taxon;
+  const heightsM = places.map((i) => taxon.heightsM[i]);
+  const inclusive = (taxon.inclusiveHeightsM ?? []).filter(isKept);
+  return {
+    ...taxon,
+    heightsM,
+    samples: places.map((i) => taxon.samples[i]),
+    lastInclusiveM: Math.max(heightsM[heightsM.length - 1], ...inclusive),
+  };
 }
+
+const isSmeared = (heightM: number, { positionM }: Boundary, ceilingM: number) =>
+  heightM > positionM && heightM <= ceilingM;
 
 /** Marks the finds that the roles took out, so that every find's fate is told in one list. */
 export function markBelowCeiling(
@@ -123,14 +134,19 @@ export function markBelowCeiling(
   candidates: readonly Candidate[],
   boundaries: ReadonlyMap<string, Boundary>,
 ): readonly Find[] {
-  const trimmed = new Set(
-    candidates.filter((c) => c.findsBelowCeiling > 0).map((c) => `${c.section}\u0000${c.taxon}`),
+  const key = (section: string, taxon: string) => `${section}\u0000${taxon}`;
+  const trimmed = new Map(
+    candidates
+      .filter((c) => c.findsBelowCeiling > 0)
+      .map((c) => [key(c.section, c.taxon), c.reworkingCeilingM]),
   );
   return finds.map((find) => {
     const boundary = boundaries.get(find.section);
-    const isAbove = boundary !== undefined && find.heightM > boundary.positionM;
-    if (find.used === "no" || !isAbove || !trimmed.has(`${find.section}\u0000${find.accepted}`)) return find;
-    return { ...find, used: "no", reason: "below-reworking-ceiling" };
+    const ceilingM = trimmed.get(key(find.section, find.accepted));
+    if (find.used === "no" || boundary === undefined || ceilingM === undefined) return find;
+    return isSmeared(find.heightM, boundary, ceilingM)
+      ? { ...find, used: "no", reason: "below-reworking-ceiling" }
+      : find;
   });
 }
 

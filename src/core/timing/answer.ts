@@ -48,7 +48,7 @@ interface AnsweredSection {
   readonly cases: readonly SetCase[];
   readonly answers: readonly TimingAnswer[];
   readonly curves: readonly LevelCurve[];
-  readonly distrusted: readonly string[];
+  readonly distrusted: Timing["distrusted"];
   readonly cautions: readonly Caution[];
 }
 
@@ -65,14 +65,21 @@ function answerSection(section: Section, study: Study, input: TimingInput): Answ
     ...setCautions(section.name, ranges, declared),
     ...beside,
   ];
-  const pooled = pooledCentroid(ranges);
   return {
     cases,
     answers: cases.flatMap(answerSet),
     curves: cases.flatMap((setCase) => (window === undefined ? [] : (levelCurve(setCase, window) ?? []))),
-    distrusted: pooled !== undefined && pooled.p < DECLINE_GATE ? [section.name] : [],
+    distrusted: cases
+      .filter(({ set }) => declines(set.ranges))
+      .map(({ set }) => ({ section: section.name, set: set.set })),
     cautions,
   };
+}
+
+/** True where the pre-check of these taxa says that recovery falls upward. */
+function declines(ranges: Parameters<typeof pooledCentroid>[0]): boolean {
+  const pooled = pooledCentroid(ranges);
+  return pooled !== undefined && pooled.p < DECLINE_GATE;
 }
 
 function answerSet(setCase: SetCase): TimingAnswer[] {

@@ -1,7 +1,12 @@
 import type { Caution } from "../basis.ts";
 import type { Candidate } from "../study/finds-result.ts";
-import { commonEndJoint, commonEndTest, informative } from "./common-end.ts";
-import { TOO_WELL_ALIGNED } from "./common-end-answers.ts";
+import {
+  commonEndJoint,
+  commonEndTest,
+  informative,
+  isAlignedTooWell,
+  rejectsOneLevel,
+} from "./common-end.ts";
 import { boxTaxa, widestTaxon } from "./duration-answers.ts";
 import { effortCautions } from "./effort-caution.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
@@ -27,8 +32,9 @@ function oneLevelCautions({ section, set, confidence }: SetCase): Caution[] {
   if (test === undefined) return cautions;
   const { p, tied } = test;
   if (tied > 1) cautions.push({ code: "timing-ties", ...place, numbers: { taxa: tied } });
-  if (p > TOO_WELL_ALIGNED) cautions.push({ code: "timing-aligned-too-well", ...place, numbers: { p } });
-  if (p <= 1 - confidence) cautions.push({ code: "timing-one-level-rejected", ...place, numbers: { p } });
+  if (isAlignedTooWell(p)) cautions.push({ code: "timing-aligned-too-well", ...place, numbers: { p } });
+  if (rejectsOneLevel(p, confidence))
+    cautions.push({ code: "timing-one-level-rejected", ...place, numbers: { p } });
   if (commonEndJoint(set.ranges, confidence).kind === "empty")
     cautions.push({ code: "timing-no-common-end", ...place });
   return cautions;

@@ -6,12 +6,10 @@ import {
   type EndSet,
   highestLast,
   informative,
+  isAlignedTooWell,
 } from "./common-end.ts";
 import type { TimingAnswer } from "./result.ts";
 import { commonFields, type SetCase } from "./set-case.ts";
-
-/** A p this near 1 says that ends are aligned too well for one level and independent finds. */
-export const TOO_WELL_ALIGNED = 0.975;
 
 /** `one-level`: could all have ended together? */
 export function oneLevelAnswer(setCase: SetCase): TimingAnswer {
@@ -34,7 +32,7 @@ export function oneLevelAnswer(setCase: SetCase): TimingAnswer {
     note: note(
       droppedNote(ranges.length - kept),
       test.tied > 1 && `${test.tied} taxa share the highest last find`,
-      test.p > TOO_WELL_ALIGNED && "ends aligned very well: binning, truncation or choice of taxa?",
+      isAlignedTooWell(test.p) && "ends aligned very well: binning, truncation or choice of taxa?",
     ),
   };
 }

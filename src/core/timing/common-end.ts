@@ -102,3 +102,11 @@ function cut(set: EndSet, all: readonly EffectiveRange[]): EndSet {
   const low = Math.max(set.low, highestLast(all));
   return low > set.high ? { kind: "empty" } : { kind: "interval", low, high: set.high };
 }
+
+/** True where one common level is rejected at a confidence. */
+export const rejectsOneLevel = (p: number, confidence: number): boolean => p <= 1 - confidence;
+
+/** Last finds agree better than chance allows beyond this p: the model fails from the other side. */
+export const isAlignedTooWell = (p: number): boolean => p > TOO_WELL_ALIGNED;
+
+const TOO_WELL_ALIGNED = 0.975;

@@ -55,8 +55,8 @@ export interface Timing {
   readonly sets: readonly TaxonSet[];
   readonly answers: readonly TimingAnswer[];
   readonly curves: readonly LevelCurve[];
-  /** Sections whose pooled centroid pre-check says that recovery declines upward (p < 0.1). */
-  readonly distrusted: readonly string[];
+  /** Sets whose own pooled centroid pre-check says that recovery declines upward (p < 0.1). */
+  readonly distrusted: readonly { readonly section: string; readonly set: string }[];
   readonly cautions: readonly Caution[];
   readonly basis: readonly Basis[];
 }

@@ -77,7 +77,7 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
       </g>
     ),
     legend: [...groupLegend(analysis, layout), ...rangeLegend(taxa, y), ...horizonLegend(horizons)],
-    notes: [...notesOf(analysis, { taxa, timing, frame }), ...lensNotes(frame)],
+    notes: [...notesOf(analysis, view.set, { taxa, timing, frame }), ...lensNotes(frame)],
     panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
     view,
   });
@@ -176,13 +176,13 @@ function levelLegend(hasCurve: boolean, hasIfOne: boolean, hasJoint: boolean): r
   ];
 }
 
-function notesOf(analysis: Analysis, { taxa, timing, frame }: Answered): readonly string[] {
+function notesOf(analysis: Analysis, set: string, { taxa, timing, frame }: Answered): readonly string[] {
   const { section } = frame;
   if (taxa.length === 0)
     return ["No taxon of this set is in question in this section: nothing can be asked."];
-  const distrusted = analysis.timing.distrusted.includes(section.name)
+  const distrusted = analysis.timing.distrusted.some((one) => one.section === section.name && one.set === set)
     ? [
-        "Recovery declines upward in this section (centroid): the levels and durations above it must not be trusted.",
+        "Recovery of these taxa declines upward (centroid): the levels and durations given here must not be trusted.",
       ]
     : [];
   return [...distrusted, ...timingNotes(timing, section, analysis.study.settings.confidence)];

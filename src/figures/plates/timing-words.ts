@@ -1,5 +1,6 @@
 import { formatGiven } from "../../core/study/heights.ts";
 import type { Section } from "../../core/study/model.ts";
+import { rejectsOneLevel } from "../../core/timing/common-end.ts";
 import type { TimingAnswer } from "../../core/timing/result.ts";
 import { roundedWords } from "./rounded-words.ts";
 
@@ -38,7 +39,7 @@ function oneLevelWords(answer: TimingAnswer | undefined, confidence: number): st
   if (answer.p === undefined)
     return "Whether they could have ended at one level cannot be answered from these finds.";
   const test = `common-end, ${answer.taxa} taxa, p ${pWords(answer.p)}`;
-  if (answer.p < 1 - confidence) return `One level for all of them is rejected (${test}).`;
+  if (rejectsOneLevel(answer.p, confidence)) return `One level for all of them is rejected (${test}).`;
   return `They cannot be told from one level (${test}).`;
 }
 

@@ -11,6 +11,8 @@ export interface NumberLine {
 }
 
 export interface Weakness {
+  /** The caution's code; absent for a flag. */
+  readonly code?: string;
   readonly severity: "warning" | "note";
   readonly words: Words;
 }

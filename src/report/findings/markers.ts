@@ -2,7 +2,7 @@ import type { Analysis } from "../../core/analysis-result.ts";
 import type { MarkerHorizon } from "../../core/markers/result.ts";
 import type { Section } from "../../core/study/model.ts";
 import { flagWords, refersToWords, weaknessOf } from "../wordings/cautions.ts";
-import { metres, offset, percent, position, positionInterval, significant } from "../wordings/numbers.ts";
+import { offset, percent, position, positionInterval, significant } from "../wordings/numbers.ts";
 import { say, strong, type Words } from "../wordings/words.ts";
 import type { Finding, NumberLine } from "./finding.ts";
 
@@ -72,7 +72,7 @@ function horizonLines(section: Section, h: MarkerHorizon, main: MarkerHorizon | 
     lines.push({
       label: "Mixing length",
       value: `${significant(100 * h.mixing.lengthM)} cm`,
-      note: `${significant(100 * h.mixing.lowM)} to ${significant(100 * h.mixing.highM)}; base of the smear ${metres(h.mixing.baseM)} m`,
+      note: `${significant(100 * h.mixing.lowM)} to ${significant(100 * h.mixing.highM)}; base of the smear ${position(section, h.mixing.baseM, h.mixing.lengthM)}`,
     });
   return lines;
 }

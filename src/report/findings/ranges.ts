@@ -35,14 +35,15 @@ export function rangesFinding(analysis: Analysis, section: Section): Finding {
   };
 }
 
-export interface Reach {
+interface Reach {
   readonly taxa: number;
   readonly reaching: readonly string[];
   readonly short: readonly string[];
 }
 
 /** Which candidates' intervals by the leading method reach the main horizon at the study's confidence. */
-export function reachOf({ candidates, ranges, study }: Analysis, section: Section): Reach {
+function reachOf({ candidates, markers, ranges, study }: Analysis, section: Section): Reach {
+  const main = markers.main.bySection.get(section.name);
   const reaching: string[] = [];
   const short: string[] = [];
   for (const candidate of candidates) {
@@ -53,6 +54,7 @@ export function reachOf({ candidates, ranges, study }: Analysis, section: Sectio
     const leading = study.settings.ranges.methods
       .map((method) => ends.find((end) => end.method === method))
       .find((end) => end !== undefined);
+    if (main !== undefined && candidate.lastM >= main.positionM) reaching.push(candidate.taxon);
     if (leading?.reachLevel === undefined) continue;
     (leading.reachLevel <= study.settings.confidence ? reaching : short).push(candidate.taxon);
   }

@@ -1,5 +1,6 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Section } from "../../core/study/model.ts";
+import { isAlignedTooWell, rejectsOneLevel } from "../../core/timing/common-end.ts";
 import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
 import { weaknessOf } from "../wordings/cautions.ts";
 import { metres, offset, percent, positionInterval, pValue } from "../wordings/numbers.ts";
@@ -62,24 +63,32 @@ function sentence({ analysis, section, set, answers }: Telling): Words {
   const taxa = taxaOf(set, test?.taxa ?? 0);
   if (test?.p === undefined)
     return say`${strong(taxa)} in ${section.title}: too few to ask whether they ended together.`;
-  const gate = analysis.timing.distrusted.includes(section.name)
-    ? say`Finds thin out upward here, so the test of one level is not to be trusted. `
+  const { confidence } = analysis.study.settings;
+  const isDistrusted = analysis.timing.distrusted.some(
+    (one) => one.section === section.name && one.set === set,
+  );
+  const gate = isDistrusted
+    ? say`${strong("Finds of these taxa thin out upward")}, so what follows is not to be trusted. `
     : [];
-  const isRejected = test.p < 1 - analysis.study.settings.confidence;
-  if (isRejected) return [...gate, ...rejected(taxa, test, by("duration-lower"))];
-  return [
-    ...gate,
-    ...notRejected({ analysis, section, taxa, test }, by("common-end-given"), by("duration-box")),
-  ];
+  if (rejectsOneLevel(test.p, confidence)) return [...gate, ...rejected(taxa, test, by("duration-lower"))];
+  const told = isAlignedTooWell(test.p)
+    ? alignedTooWell(taxa, test)
+    : notRejected({ analysis, section, taxa, test }, by("common-end-given"));
+  return [...gate, ...told, ...longestWords(by("duration-box"))];
 }
 
 function rejected(taxa: string, test: TimingAnswer, shortest: TimingAnswer | undefined): Words {
-  const opening = say`${strong(taxa)} ${strong("did not all end at one level")} (${pValue(test.p ?? 0)}).`;
-  if (shortest?.low === undefined) return opening;
+  const opening = say`One level is ${strong("rejected")} for ${strong(taxa)} (${pValue(test.p ?? 0)}) if recovery is uniform`;
+  if (shortest?.low === undefined || shortest.level === undefined) return [...opening, "."];
   return [
     ...opening,
-    ...say` Their local disappearance took at least ${strong(`${metres(shortest.low)} m`)}.`,
+    ...say`; their local disappearance then took at least ${strong(`${metres(shortest.low)} m`)} (${percent(shortest.level)}).`,
   ];
+}
+
+/** Nothing is said about where: the model of uniform recovery fails from the other side. */
+function alignedTooWell(taxa: string, test: TimingAnswer): Words {
+  return say`${strong(taxa)} ${strong("cannot be told from one level")} (${pValue(test.p ?? 1)}), but their last finds agree better than chance allows, so no level is given.`;
 }
 
 interface Kept {
@@ -89,23 +98,29 @@ interface Kept {
   readonly test: TimingAnswer;
 }
 
-function notRejected(
-  { analysis, section, taxa, test }: Kept,
-  where: TimingAnswer | undefined,
-  longest: TimingAnswer | undefined,
-): Words {
+/** An offset from the main horizon reaches from one end of both intervals to the other. */
+function notRejected({ analysis, section, taxa, test }: Kept, where: TimingAnswer | undefined): Words {
   const opening = say`${strong(taxa)} ${strong("cannot be told from one level")} (${pValue(test.p ?? 1)})`;
-  const longestWords =
-    longest?.high === undefined
-      ? say` How long their local disappearance took cannot be bounded from above.`
-      : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(`${metres(longest.high)} m`)} cannot be excluded.`;
-  if (where?.low === undefined || where.high === undefined) return [...opening, ".", ...longestWords];
+  if (where?.low === undefined || where.high === undefined || where.level === undefined)
+    return [...opening, "."];
   const main = analysis.markers.main.bySection.get(section.name);
-  const place =
-    main === undefined
-      ? say`; it lies at ${strong(positionInterval(section, where.low, where.high))}.`
-      : say`; it lies ${strong(`${offset(where.low - main.positionM)} to ${offset(where.high - main.positionM)} m`)} from the main horizon.`;
-  return [...opening, ...place, ...longestWords];
+  const level = percent(where.level);
+  if (main === undefined)
+    return [
+      ...opening,
+      ...say`; if they ended together, it was at ${strong(positionInterval(section, where.low, where.high))} (${level}).`,
+    ];
+  const [low, high] = [where.low - main.highM, where.high - main.lowM];
+  return [
+    ...opening,
+    ...say`; if they ended together, it was ${strong(`${offset(low)} to ${offset(high)} m`)} from the main horizon (${level}).`,
+  ];
+}
+
+function longestWords(longest: TimingAnswer | undefined): Words {
+  return longest?.high === undefined
+    ? say` How long their local disappearance took cannot be bounded from above.`
+    : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(`${metres(longest.high)} m`)} cannot be excluded.`;
 }
 
 const longestOf = (longest: TimingAnswer) =>

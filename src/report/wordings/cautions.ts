@@ -74,10 +74,10 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "timing-aligned-too-well": ({ n }) =>
     say`Last finds agree better than chance allows (${pValue(n("p"))}): look for coarse sampling, a surface, or taxa chosen by their ends.`,
   "timing-one-level-rejected": ({ n }) =>
-    say`One level is rejected (${pValue(n("p"))}): the level given below holds only if it is accepted all the same.`,
+    say`One level is rejected (${pValue(n("p"))}): the common level among the numbers holds only if one is accepted all the same.`,
   "timing-no-common-end": () => say`No level could be the end of all of them at this confidence.`,
   "timing-box-rarest": ({ text, n }) =>
-    say`The longest duration rests on the rarest taxon used, ${name(text("taxon"))} with ${n("horizons")} horizons.`,
+    say`The longest duration rests on ${name(text("taxon"))}, with ${n("horizons")} horizons.`,
   "timing-box-all-taxa": ({ n }) =>
     say`Fewer than two taxa have ${n("horizons")} horizons, so the longest duration uses all of them and is wide.`,
   "timing-recovery-declines": ({ n }) =>
@@ -133,7 +133,8 @@ const notes: ReadonlySet<string> = new Set([
 ]);
 
 export function weaknessOf(caution: Caution, study: Study): Weakness {
-  return { severity: notes.has(caution.code) ? "note" : "warning", words: cautionWords(caution, study) };
+  const severity = notes.has(caution.code) ? "note" : "warning";
+  return { code: caution.code, severity, words: cautionWords(caution, study) };
 }
 
 function cautionWords(caution: Caution, study: Study): Words {

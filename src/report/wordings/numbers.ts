@@ -37,6 +37,7 @@ export const offset = (valueM: number): string => `${valueM > 0 ? "+" : ""}${met
 export function probability(p: number): string {
   if (p < 0.001) return "< 0.001";
   if (p > 0.999) return "> 0.999";
+  if (p > 0.99) return p.toFixed(3);
   return p < 0.1 ? p.toPrecision(2) : p.toFixed(2);
 }
 

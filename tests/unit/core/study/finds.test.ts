@@ -69,6 +69,18 @@ describe("which finds count", () => {
     expect(settleFinds(study).taxa[0].heightsM).toEqual(heights);
   });
 
+  it("a reworked find is never in place, whatever the settings count", () => {
+    const occurrences = [find("Orvella tenuis", 1), find("Orvella tenuis", 3, { reworked: "yes" })];
+    const study = studyOf(sectionWith({ occurrences }), { settings: withTaxa({ reworked: "include" }) });
+    expect(settleFinds(study).taxa[0]).toMatchObject({ heightsM: [1, 3], lastStrictM: 1 });
+  });
+
+  it("a taxon of its own takes the group of its name", () => {
+    const occurrences = [find("Orvella tenuis", 1, { qualifier: "s.l." })];
+    const study = studyOf(sectionWith({ occurrences }), { taxa: [taxonOf("Orvella tenuis", "ammonoids")] });
+    expect(settleFinds(study).taxa[0]).toMatchObject({ taxon: "Orvella tenuis s.l.", group: "ammonoids" });
+  });
+
   it("sets aside finds in covered rock and in a repeated passage, and says which", () => {
     const interval = { notes: "", origin: { file: "intervals.csv", row: 2 } };
     const section = sectionWith({

@@ -38,7 +38,7 @@ describe("roles against the main horizon", () => {
   });
 
   it("only a strict find above the ceiling makes a survivor where mixing is accepted", () => {
-    expect(roleOf(taxon([2, 5, 10.5]), mixed).role).toBe("candidate");
+    expect(roleOf(taxon([2, 5, 8, 10.5]), mixed).role).toBe("candidate");
     expect(roleOf(taxon([2, 5, 10.7]), mixed).role).toBe("survivor");
     expect(roleOf(taxon([2, 5, 8, 10.7], { lastStrictM: 8 }), mixed).role).toBe("candidate");
   });
@@ -94,5 +94,36 @@ describe("roles against the main horizon", () => {
 
   it("no role reads how close below H a last find lies", () => {
     for (const last of [3, 6, 9, 9.999]) expect(roleOf(taxon([1, 2, last]), unmixed).role).toBe("candidate");
+  });
+
+  it("counts horizons after the smeared finds were taken out", () => {
+    expect(roleOf(taxon([1, 5, 10.05]), mixed)).toMatchObject({
+      role: "too-few",
+      horizons: 2,
+      findsBelowCeiling: 1,
+    });
+  });
+
+  it("a find above the ceiling but inside H's interval is not smeared: it stays the end", () => {
+    const low: Boundary = { ...mixed, highM: 10.03, ceilingOf: () => 9.95 };
+    expect(roleOf(taxon([2, 5, 10.02]), low)).toMatchObject({
+      role: "candidate",
+      lastM: 10.02,
+      findsBelowCeiling: 0,
+    });
+  });
+
+  it("the inclusive end is the highest inclusive find that is not smeared", () => {
+    const t = taxon([2, 5, 8, 10.5], { inclusiveHeightsM: [2, 5, 8, 9, 10.2, 10.5], lastInclusiveM: 10.5 });
+    expect(roleOf(t, mixed).lastInclusiveM).toBe(9);
+    expect(roleOf(taxon([2, 5, 8, 10.5]), mixed).lastInclusiveM).toBe(8);
+  });
+
+  it("tells the find that decided, never one that was set aside", () => {
+    expect(roleOf(taxon([2, 5, 8, 10.5]), mixed).reason).toEqual({
+      rule: "ends-in-question",
+      value: 8,
+      limit: 10.02,
+    });
   });
 });

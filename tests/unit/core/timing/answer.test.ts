@@ -230,7 +230,7 @@ describe("can it be trusted", () => {
   it("distrusts a section whose finds crowd low in their ranges", () => {
     const low = ["a", "b", "c"].map((name) => taxon(`Orbula ${name}`, [0, 1, 2, 3, 4, 5, 30]));
     const result = timingOf(low);
-    expect(result.timing.distrusted).toEqual(["Orskel Ledge"]);
+    expect(result.timing.distrusted).toContainEqual({ section: "Orskel Ledge", set: "candidates" });
     expect(codesOf(result)).toContain("timing-recovery-declines");
     const pooled = result.rows("centroid").find((r) => r.taxon === undefined);
     expect(pooled?.testStatistic).toBeLessThan(-2);
