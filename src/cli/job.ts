@@ -1,3 +1,5 @@
+import { problemList } from "../core/study/problem-list.ts";
+import { readSettings } from "../core/study/read-settings.ts";
 import { setSetting } from "../core/study/setting-path.ts";
 import type { AnalysisJob } from "../run/runner.ts";
 import { CallError } from "./call-error.ts";
@@ -12,7 +14,17 @@ export async function jobOf(path: string, options: VerbOptions, under?: unknown)
 
 function settingsOfCall({ set = [], seed }: VerbOptions, under: unknown): unknown {
   const assignments = seed === undefined ? set : [...set, `seed=${seed}`];
+  refuseBadSettings(assignments.reduce<unknown>(assign, undefined));
   return assignments.reduce<unknown>(assign, under);
+}
+
+function refuseBadSettings(ofCall: unknown): void {
+  const problems = problemList();
+  readSettings(ofCall ?? {}, "the call", problems);
+  const [first] = problems.problems();
+  if (first === undefined) return;
+  const what = first.column === undefined ? "" : ` for ${first.column}`;
+  throw new CallError(`lastbed: expected ${first.expected}${what}, got ${first.found}`);
 }
 
 function assign(settings: unknown, assignment: string): unknown {
@@ -24,11 +36,15 @@ function assign(settings: unknown, assignment: string): unknown {
   throw new CallError(`lastbed: expected a known setting, got ${result.path}${hint}`);
 }
 
-/** A whole number of at least 1 from an option. */
-export function countOption(text: string | undefined, name: string, absent: number): number {
-  if (text === undefined) return absent;
-  const count = Number(text);
-  if (!Number.isInteger(count) || count < 1)
-    throw new CallError(`lastbed: expected --${name} to be a whole number of at least 1, got ${text}`);
-  return count;
+/** A whole number from 1 (to `most`) from an option; 1 where it is absent. */
+export function countOption(
+  text: string | undefined,
+  name: string,
+  { most = Number.MAX_SAFE_INTEGER }: { readonly most?: number } = {},
+): number {
+  if (text === undefined) return 1;
+  const count = /^\d+$/.test(text) ? Number(text) : 0;
+  if (count >= 1 && count <= most) return count;
+  const limit = most === Number.MAX_SAFE_INTEGER ? "of at least 1" : `from 1 to ${most}`;
+  throw new CallError(`lastbed: expected --${name} to be a whole number ${limit}, got ${text}`);
 }

@@ -1,8 +1,7 @@
 #!/usr/bin/env node
 import { Command, CommanderError } from "commander";
 import { VERSION } from "../core/version.ts";
-import { CallError } from "./call-error.ts";
-import { openScreen } from "./screen.ts";
+import { openScreen, surviveClosedOutput, tellFailure } from "./screen.ts";
 import { verbs } from "./verbs/index.ts";
 import type { Verb, VerbOptions } from "./verbs/verb.ts";
 
@@ -40,12 +39,11 @@ function collect(value: string, earlier: readonly string[]): readonly string[] {
   return [...earlier, value];
 }
 
+surviveClosedOutput();
+
 try {
   await program.parseAsync();
 } catch (error) {
   if (error instanceof CommanderError) process.exitCode = error.exitCode === 0 ? 0 : 2;
-  else if (error instanceof CallError) {
-    process.stderr.write(`${error.message}\n`);
-    process.exitCode = 2;
-  } else throw error;
+  else tellFailure(error);
 }

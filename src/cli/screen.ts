@@ -1,5 +1,6 @@
 import type { Problem } from "../core/study/problem.ts";
 import { VERSION } from "../core/version.ts";
+import { failureOf } from "./failure.ts";
 
 export interface CommonOptions {
   readonly json?: boolean;
@@ -41,4 +42,23 @@ export function openScreen({ json = false, quiet = false }: CommonOptions): Scre
         process.stdout.write(`${JSON.stringify({ command, version: VERSION, ...content }, null, 2)}\n`);
     },
   };
+}
+
+/** Tells a failure on standard error and sets the exit code. */
+export function tellFailure(error: unknown): void {
+  const { message, exitCode } = failureOf(error);
+  process.stderr.write(`${message}\n`);
+  process.exitCode = exitCode;
+}
+
+const isClosed = (error: Error) => "code" in error && error.code === "EPIPE";
+
+/** Goes on with the work where nobody reads any more (`lastbed run ... | head`), and tells any other fault of writing. */
+export function surviveClosedOutput(): void {
+  process.stdout.on("error", (error) => {
+    if (isClosed(error)) return;
+    tellFailure(error);
+    process.exit();
+  });
+  process.stderr.on("error", () => {});
 }

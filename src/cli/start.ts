@@ -1,5 +1,5 @@
 import { fileURLToPath } from "node:url";
-import { openScreen } from "./screen.ts";
+import { openScreen, surviveClosedOutput, tellFailure } from "./screen.ts";
 import { open } from "./verbs/open.ts";
 import { run } from "./verbs/run.ts";
 
@@ -7,5 +7,11 @@ import { run } from "./verbs/run.ts";
 const example = fileURLToPath(new URL("../../datasets/veyra-shelf", import.meta.url));
 const screen = openScreen({});
 
-process.exitCode = await run([example], { out: "out/veyra-shelf" }, screen);
-if (!process.argv.includes("--once")) process.exitCode = await open(undefined, {}, screen);
+surviveClosedOutput();
+
+try {
+  process.exitCode = await run([example], { out: "out/veyra-shelf" }, screen);
+  if (!process.argv.includes("--once")) process.exitCode = await open(undefined, {}, screen);
+} catch (error) {
+  tellFailure(error);
+}

@@ -1,4 +1,4 @@
-import { mkdir, readdir, readFile, rm, writeFile } from "node:fs/promises";
+import { mkdir, readdir, readFile, rm, stat, writeFile } from "node:fs/promises";
 import { dirname, join, relative, resolve, sep } from "node:path";
 import type { Analysis } from "../core/analysis-result.ts";
 import { tables } from "../core/study/tables/index.ts";
@@ -6,9 +6,13 @@ import { writeCsv } from "../core/tables/write-csv.ts";
 import { CRATE_FILE, filesOfCrate } from "../report/ro-crate.ts";
 import { CallError } from "./call-error.ts";
 
-/** Refuses a folder whose top level holds study tables: a run never writes among what it reads. */
-export async function refuseStudyFolder(folder: string): Promise<void> {
-  const entries: readonly string[] = await readdir(folder).catch(() => []);
+/** Refuses what is no folder, and one whose top level holds study tables: a run never writes among what it reads. */
+export async function refuseOut(folder: string): Promise<void> {
+  if (folder.trim() === "") throw new CallError("lastbed: expected a folder after --out, got a blank");
+  const found = await stat(folder).catch(() => undefined);
+  if (found !== undefined && !found.isDirectory())
+    throw new CallError(`lastbed: expected --out to be a folder, got ${folder}, which is a file`);
+  const entries: readonly string[] = found === undefined ? [] : await readdir(folder);
   const table = entries.find((entry) => tables.some(({ name }) => entry.toLowerCase() === `${name}.csv`));
   if (table !== undefined)
     throw new CallError(
@@ -16,18 +20,44 @@ export async function refuseStudyFolder(folder: string): Promise<void> {
     );
 }
 
-/** Writes a run's files, after taking away those of an earlier run; anything else in the folder is left alone. */
+/** Writes a run's files in place of those of an earlier run; anything else in the folder is left alone, never written over. */
 export async function writeRun(
   folder: string,
   files: ReadonlyMap<string, string | Uint8Array>,
 ): Promise<void> {
   const earlier = filesOfCrate(await readFile(join(folder, CRATE_FILE), "utf8").catch(() => ""));
-  for (const name of earlier) await rm(within(folder, name), { force: true });
-  for (const [name, content] of files) {
+  await refuseForeign(folder, { ours: new Set(earlier), files });
+  for (const name of earlier) await removeFile(within(folder, name));
+  // The list of files comes first, so that a run that is cut short can still be replaced.
+  const list = [...files].filter(([name]) => name === CRATE_FILE);
+  for (const [name, content] of [...list, ...files]) {
     const path = within(folder, name);
     await mkdir(dirname(path), { recursive: true });
     await writeFile(path, content);
   }
+}
+
+interface Writing {
+  /** What an earlier run says it wrote. */
+  readonly ours: ReadonlySet<string>;
+  readonly files: ReadonlyMap<string, unknown>;
+}
+
+/** Refuses to write over a file that no run wrote. */
+async function refuseForeign(folder: string, { ours, files }: Writing): Promise<void> {
+  for (const name of files.keys()) {
+    if (ours.has(name)) continue;
+    const found = await stat(within(folder, name)).catch(() => undefined);
+    if (found !== undefined)
+      throw new CallError(
+        `lastbed: expected an --out folder without files of other origin, got ${folder}, which holds ${name}; name another folder, or take the file away`,
+      );
+  }
+}
+
+async function removeFile(path: string): Promise<void> {
+  const found = await stat(path).catch(() => undefined);
+  if (found?.isDirectory() !== true) await rm(path, { force: true });
 }
 
 /** One row a study, section and set: the answers to one level and how gradual, so that studies can be set side by side. */

@@ -89,6 +89,7 @@ export async function sheetDifferences(
   compare("program version", sheet.program.version, now.program.version);
   compare("schema version", String(sheet.schema), String(now.schema));
   compare("random block layout", String(sheet.blockLayout), String(now.blockLayout));
+  compare("seed beside the settings", String(sheet.seed), String(sheet.settings.seed));
   const [before, after] = [sheet.study.tables, now.study.tables];
   for (const name of new Set([...before, ...after].map((table) => table.name))) {
     const [was, is] = [before.find((t) => t.name === name), after.find((t) => t.name === name)];

@@ -1,4 +1,4 @@
-import { mkdir, readdir, writeFile } from "node:fs/promises";
+import { mkdir, readdir, stat, writeFile } from "node:fs/promises";
 import { basename, join, resolve } from "node:path";
 import { studyTemplate } from "../../core/tables/templates.ts";
 import { CallError } from "../call-error.ts";
@@ -6,7 +6,10 @@ import type { Screen } from "../screen.ts";
 
 /** Writes a study to fill in: every table with its header and one worked row. Never writes over anything. */
 export async function newStudy(folder: string, screen: Screen): Promise<number> {
-  const entries: readonly string[] = await readdir(folder).catch(() => []);
+  const found = await stat(folder).catch(() => undefined);
+  if (found !== undefined && !found.isDirectory())
+    throw new CallError(`lastbed: expected a new or empty folder, got ${folder}, which is a file`);
+  const entries: readonly string[] = found === undefined ? [] : await readdir(folder);
   if (entries.length > 0)
     throw new CallError(`lastbed: expected a new or empty folder, got ${folder}, which holds ${entries[0]}`);
   await mkdir(folder, { recursive: true });

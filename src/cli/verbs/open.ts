@@ -11,7 +11,9 @@ const page = fileURLToPath(new URL("../page/", import.meta.url));
 export async function open(path: string | undefined, options: VerbOptions, screen: Screen): Promise<number> {
   const study = path === undefined ? undefined : await readStudyFiles(path);
   const wanted =
-    options.port === undefined || options.port === "0" ? 0 : countOption(options.port, "port", 0);
+    options.port === undefined || options.port === "0"
+      ? 0
+      : countOption(options.port, "port", { most: 65535 });
   const { address, closed, close } = await servePage(page, { port: wanted, study });
   screen.say(`\nThe page: ${address}   (this machine only; Ctrl+C stops it)`);
   screen.document({ command: "open", problems: [], summary: { address }, files: [] });

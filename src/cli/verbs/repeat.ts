@@ -23,7 +23,7 @@ export async function repeat(
   const [sheetPath, studyPath = join(dirname(sheetPath), "study")] = words;
   const sheet = await readSheet(sheetPath);
   const job = await jobOf(studyPath, options, sheet.settings);
-  const runner = nodeRunner(countOption(options.threads, "threads", 1));
+  const runner = nodeRunner(countOption(options.threads, "threads"));
   try {
     const analysis = await runner.analyse(
       { ...job, name: sheet.study.name },
@@ -63,20 +63,24 @@ async function compareWith(sheet: RepeatSheet, folder: string, now: ReadonlyMap<
   const before = new Map<string, string>();
   const byDigest: Difference[] = [];
   const present = new Map<string, string>();
-  for (const { name, sha256 } of sheet.results) {
-    const text = await readFile(join(folder, name), "utf8").catch(() => undefined);
-    const fresh = now.get(name);
-    if (text === undefined && fresh !== undefined) {
+  const listed = new Map(sheet.results.map(({ name, sha256 }) => [name, sha256]));
+  for (const [name, fresh] of now) {
+    const sha256 = listed.get(name);
+    const text = sha256 === undefined ? undefined : await readBeside(folder, name);
+    if (text !== undefined) before.set(name, text);
+    if (text !== undefined || sha256 === undefined) present.set(name, fresh);
+    else {
       const got = await digest(fresh);
       if (got !== sha256) byDigest.push({ table: name, was: `SHA-256 ${sha256}`, now: `SHA-256 ${got}` });
-      continue;
     }
-    if (text !== undefined) before.set(name, text);
-    if (fresh !== undefined) present.set(name, fresh);
   }
-  const numbers = [...byDigest, ...compareTables(before, present, readWrittenCsv)];
-  return { numbers, isByDigest: before.size < sheet.results.length };
+  const isByDigest = before.size < now.size;
+  for (const name of listed.keys()) if (!now.has(name)) before.set(name, "");
+  return { numbers: [...byDigest, ...compareTables(before, present, readWrittenCsv)], isByDigest };
 }
+
+const readBeside = (folder: string, name: string): Promise<string | undefined> =>
+  readFile(join(folder, name), "utf8").catch(() => undefined);
 
 function report(differences: readonly Difference[], sheet: RepeatSheet, isByDigest: boolean): string {
   const tables = `${sheet.results.length} result tables`;

@@ -10,7 +10,7 @@ import { countOption, jobOf } from "../job.ts";
 import { plateFaces } from "../plate-faces.ts";
 import { hasErrors, problemCount, problemLines } from "../problem-lines.ts";
 import type { Screen } from "../screen.ts";
-import { refuseStudyFolder, writeRun, writeSummary } from "../study-out.ts";
+import { refuseOut, writeRun, writeSummary } from "../study-out.ts";
 import { summaryText } from "../summary-text.ts";
 import type { VerbOptions } from "./verb.ts";
 
@@ -23,9 +23,9 @@ export async function run(paths: readonly string[], options: VerbOptions, screen
     throw new CallError(
       `lastbed: expected --figures svg, got ${options.figures}; other formats are not made yet`,
     );
-  await refuseStudyFolder(out);
+  await refuseOut(out);
   const folders = outFolders(paths, out);
-  const runner = nodeRunner(countOption(options.threads, "threads", 1));
+  const runner = nodeRunner(countOption(options.threads, "threads"));
   try {
     const runs: StudyRun[] = [];
     for (const [i, path] of paths.entries())

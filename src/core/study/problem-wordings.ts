@@ -1,7 +1,7 @@
 import type { Problem } from "./problem.ts";
 
 /** Where a problem stands and what its sentence needs. */
-interface ProblemPlace {
+export interface ProblemPlace {
   readonly file: string;
   readonly row?: number;
   readonly column?: string;
@@ -112,6 +112,11 @@ const wordings = {
     ),
   "unlisted-section": (p) =>
     error("a section of sections.csv", `Add the section to sections.csv or correct the name.${nearest(p)}`),
+  "reserved-section": () =>
+    error(
+      "a section of another name",
+      "joint stands for all sections together in the results: rename the section.",
+    ),
   "section-left-out": (p) =>
     error(`a section that can be used`, `Mend section ${p.found} first: ${p.detail}.`),
   "top-below-base": (p) => error("top above base", p.detail ?? "Exchange base and top, or correct them."),
@@ -133,6 +138,11 @@ const wordings = {
     error(`two or more rows for leg ${p.found}`, "Add the leg's second reading to legs.csv."),
   "repeated-reading": () =>
     error("each reading of a leg once", "Correct the reading: one reading cannot stand at two positions."),
+  "leg-turns-back": (p) =>
+    caution(
+      "positions that go one way along the leg",
+      `Leg ${p.detail} turns back here: correct the reading or the position, or begin a new leg.`,
+    ),
   "outside-leg": (p) =>
     error(
       `a reading from ${p.detail}`,
@@ -160,6 +170,11 @@ const wordings = {
       "All finds stand at one level: no range can be estimated from them.",
     ),
   "one-occurrence": () => caution("two or more finds", "One find alone gives no range."),
+  "find-in-hidden-rock": (p) =>
+    caution(
+      `a find outside ${p.detail}`,
+      "It is set aside: correct its position, or base and top in intervals.csv.",
+    ),
   "not-searched": (p) =>
     caution(
       `a search for ${p.detail} in this sample`,
@@ -208,6 +223,21 @@ const wordings = {
     ),
   "accepted-unlisted": (p) =>
     caution("a taxon with a row of its own", `Add a row for the accepted name to taxa.csv.${nearest(p)}`),
+  "accepted-circle": (p) =>
+    caution(
+      "accepted names that end at one name",
+      `${p.detail}: each keeps its own name until one of them accepts none.`,
+    ),
+  "impact-ambiguous": (p) =>
+    error(
+      `one impact horizon, or the main one named in boundary.horizon`,
+      `Set boundary.horizon to one of ${p.detail}; if two names mean one horizon, declare it in boundary.same. No main horizon is used until then.`,
+    ),
+  "set-taxon-unknown": (p) =>
+    caution(
+      `a taxon of the study in set ${p.detail}`,
+      `It adds nothing to the set: correct its name.${nearest(p)}`,
+    ),
   "settings-unreadable": () => error("JSON", "Correct settings.json; the defaults are used until then."),
   "unknown-setting": (p) =>
     error("a known setting", `Take it out or correct its path; it is not used.${nearest(p)}`),
@@ -228,7 +258,7 @@ export function excerpt(text: string): string {
 }
 
 /** A problem in the words of its code. */
-function problem(code: ProblemCode, place: ProblemPlace): Problem {
+export function problem(code: ProblemCode, place: ProblemPlace): Problem {
   const wording: Wording = wordings[code];
   const { severity, expected, mend } = wording(place);
   return {
@@ -240,40 +270,5 @@ function problem(code: ProblemCode, place: ProblemPlace): Problem {
     found: excerpt(place.found),
     expected,
     mend,
-  };
-}
-
-/** Gathers problems in the order met; what repeats down a file is told once, with the number of rows. */
-export interface ProblemList {
-  add(code: ProblemCode, place: ProblemPlace): void;
-  /** Tells the first of all problems of one subject, and how many more rows share it. */
-  addOnce(subject: string, code: ProblemCode, place: ProblemPlace): void;
-  problems(): readonly Problem[];
-}
-
-export function problemList(): ProblemList {
-  const entries: { problem: Problem; more: number }[] = [];
-  const subjects = new Map<string, { problem: Problem; more: number }>();
-  return {
-    add: (code, place) => {
-      entries.push({ problem: problem(code, place), more: 0 });
-    },
-    addOnce: (subject, code, place) => {
-      const key = JSON.stringify([code, place.file, subject]);
-      const known = subjects.get(key);
-      if (known) {
-        known.more += 1;
-        return;
-      }
-      const entry = { problem: problem(code, place), more: 0 };
-      subjects.set(key, entry);
-      entries.push(entry);
-    },
-    problems: () =>
-      entries.map(({ problem, more }) =>
-        more === 0
-          ? problem
-          : { ...problem, found: `${problem.found} (and ${more} more ${more === 1 ? "row" : "rows"})` },
-      ),
   };
 }

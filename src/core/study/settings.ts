@@ -78,7 +78,14 @@ export const settingsSchema = v.strictObject({
         "working base of a range: first find, section-bottom, or a horizon's name",
       ),
       methods: says(
-        v.optional(v.array(v.picklist(["uniform", "window", "sampled"])), ["sampled", "uniform", "window"]),
+        v.optional(
+          v.pipe(
+            v.array(v.picklist(["uniform", "window", "sampled"])),
+            v.nonEmpty(),
+            v.check((methods) => new Set(methods).size === methods.length, "each method once"),
+          ),
+          ["sampled", "uniform", "window"],
+        ),
         "range-end methods, the leading one first",
       ),
       recovery: says(
@@ -91,7 +98,13 @@ export const settingsSchema = v.strictObject({
   timing: v.optional(
     v.strictObject({
       window: says(
-        v.optional(v.tuple([v.number(), v.number()]), [-20, 15]),
+        v.optional(
+          v.pipe(
+            v.tuple([v.number(), v.number()]),
+            v.check(([low, high]) => low < high, "the lower end before the upper one"),
+          ),
+          [-20, 15],
+        ),
         "window of end levels, m from H",
       ),
       startBelow: says(v.optional(v.number(), 0), "first finds above this level, m from H, are late starts"),

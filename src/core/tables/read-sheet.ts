@@ -2,7 +2,7 @@ import type { HeaderHint, ReadSheet } from "../study/assembly/context.ts";
 import { isDecimalComma, parseNumber } from "../study/cells.ts";
 import { type RecognisedColumn, recogniseColumns } from "../study/columns.ts";
 import { suggestName } from "../study/nearest.ts";
-import type { ProblemList } from "../study/problem-wordings.ts";
+import type { ProblemList } from "../study/problem-list.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 import type { TableName } from "../study/tables/index.ts";
 import { isFixedUnit, lengthUnits } from "../study/units.ts";

@@ -3,7 +3,7 @@ import type { ReadSheet } from "../study/assembly/context.ts";
 import type { Study } from "../study/model.ts";
 import { suggestName } from "../study/nearest.ts";
 import type { Problem } from "../study/problem.ts";
-import { type ProblemList, problemList } from "../study/problem-wordings.ts";
+import { type ProblemList, problemList } from "../study/problem-list.ts";
 import { readSettings } from "../study/read-settings.ts";
 import { mergeSettings } from "../study/setting-path.ts";
 import type { Settings } from "../study/settings.ts";
@@ -75,6 +75,7 @@ function parseSettings(file: string, bytes: Uint8Array, problems: ProblemList): 
   const text = decodeText(bytes);
   try {
     const value: unknown = JSON.parse(text ?? "");
+    JSON.stringify(value); // nested too deeply to be written is too deep to be read
     return value;
   } catch {
     problems.add("settings-unreadable", { file, found: text ?? "bytes that are not UTF-8" });

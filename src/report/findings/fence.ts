@@ -10,7 +10,7 @@ export function fenceFinding({ study, alignment }: Analysis): Finding {
   const sentence =
     sections.length === 0 || datum === undefined
       ? say`The sections are ${strong("not lined up")}: no horizon is shared between them yet.`
-      : say`${strong(plural(sections.length, "section"))} hang on ${strong(datum)}${
+      : say`${strong(plural(sections.length, "section"))} ${sections.length === 1 ? "hangs" : "hang"} on ${strong(datum)}${
           horizons.length > 1 ? ` and ${list(horizons.filter((h) => h !== datum))}` : ""
         }; the least certain pick is good to ${strong(`\u00b1${metres(Math.max(...sections.flatMap((s) => s.sigmasM)))} m`)} (one standard deviation).`;
   return {

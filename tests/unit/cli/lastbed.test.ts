@@ -5,6 +5,7 @@ import {
   mkdirSync,
   readdirSync,
   readFileSync,
+  rmSync,
   writeFileSync,
 } from "node:fs";
 import { join } from "node:path";
@@ -37,11 +38,19 @@ describe("a call that is wrong", () => {
     [["run", example, "--out", "x", "--figures", "gif"], "expected --figures svg"],
     [["repeat", "package.json"], "expected a repeat.json"],
     [["run", example, "--out", example], "expected an --out folder without study tables"],
+    [["run", example, "--out", "package.json"], "which is a file"],
+    [["run", example, "--out", "package.json/x"], "a part of the path is a file"],
+    [["run", example, "--out", ""], "expected a folder after --out"],
+    [["new", "package.json"], "which is a file"],
+    [["check", example, "--seed", "one"], "expected a number for seed"],
+    [["check", example, "--set", "confidence=2"], "for confidence, got 2"],
+    [["open", example, "--port", "99999"], "from 1 to 65535"],
     [["dance"], "unknown command"],
   ])("exits 2 and says what was expected: %j", (words, said) => {
     const { status, stderr } = lastbed(...words);
     expect(status).toBe(2);
     expect(stderr).toContain(said);
+    expect(stderr).not.toMatch(/\n\s+at /);
   });
 
   it("help is not an error", () => {
@@ -144,6 +153,54 @@ describe("run and repeat", () => {
     expect(readdirSync(join(folder, "study")).toSorted()).toEqual(["horizons.csv", "occurrences.csv"]);
     expect(existsSync(join(folder, "figures", "fence.svg"))).toBe(false);
     expect(readFileSync(join(folder, "mine.txt"), "utf8")).toBe("kept");
+  });
+
+  it("never writes over a file that no run wrote, nor takes one away that another program's crate lists", () => {
+    const folder = freshFolder();
+    const crate = { "@graph": [{ "@id": "./", hasPart: [{ "@id": "field.txt" }] }] };
+    writeFileSync(join(folder, "field.txt"), "kept");
+    writeFileSync(join(folder, "ro-crate-metadata.json"), JSON.stringify(crate));
+    const { status, stderr } = lastbed("run", smallStudy(), "--out", folder, "--quiet");
+    expect(status).toBe(2);
+    expect(stderr).toContain("which holds ro-crate-metadata.json");
+    expect(readdirSync(folder).toSorted()).toEqual(["field.txt", "ro-crate-metadata.json"]);
+  });
+
+  it("a run that was cut short can be replaced", () => {
+    const folder = freshFolder();
+    lastbed("run", smallStudy(), "--out", folder, "--quiet");
+    rmSync(join(folder, "report.html"));
+    expect(lastbed("run", smallStudy(), "--out", folder, "--quiet").status).toBe(0);
+    expect(existsSync(join(folder, "report.html"))).toBe(true);
+  });
+
+  it("ends well where nobody reads its output", async () => {
+    const checking = start("check", example);
+    checking.stdout.destroy();
+    let told = "";
+    checking.stderr.on("data", (chunk) => (told += String(chunk)));
+    const status = await new Promise((resolve) => checking.once("close", resolve));
+    expect(told).toBe("");
+    expect(status).toBe(0);
+  });
+
+  it("repeat tells a result table that the sheet lacks or alone has, and a seed that its settings contradict", () => {
+    const folder = freshFolder();
+    lastbed("run", smallStudy(), "--out", folder, "--quiet");
+    const path = join(folder, "repeat.json");
+    const sheet = JSON.parse(readFileSync(path, "utf8"));
+    const results = [
+      ...sheet.results.filter(({ name }: { name: string }) => name !== "ties.csv"),
+      { name: "gone.csv", sha256: "0" },
+    ];
+    writeFileSync(path, JSON.stringify({ ...sheet, seed: 77, results }));
+    const { status, stdout } = lastbed("repeat", path, "--json");
+    expect(status).toBe(1);
+    expect(JSON.parse(stdout).summary.differences).toEqual([
+      { table: "seed beside the settings", was: "77", now: "1" },
+      { table: "gone.csv", was: "a table", now: "no such table" },
+      { table: "ties.csv", was: "no such table", now: "a table" },
+    ]);
   });
 
   it("several studies get a folder each", () => {

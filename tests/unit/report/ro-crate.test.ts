@@ -29,6 +29,7 @@ describe("the folder's description", () => {
       "[]",
       '{"@graph":3}',
       '{"@graph":[{"@id":"./","hasPart":[null,{"@id":3}]}]}',
+      '{"@graph":[{"@id":"./","hasPart":[{"@id":"field.txt"}]},{"@id":"#other","name":"Other"}]}',
     ])
       expect(filesOfCrate(text)).toEqual([]);
   });

@@ -1,5 +1,5 @@
 import type { Axis, Leg, LengthUnit, Origin, Section, Sheet } from "../model.ts";
-import type { ProblemList } from "../problem-wordings.ts";
+import type { ProblemList } from "../problem-list.ts";
 import type { Settings } from "../settings.ts";
 import type { RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";

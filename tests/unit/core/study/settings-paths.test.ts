@@ -1,6 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { editDistance, suggestName } from "../../../../src/core/study/nearest.ts";
-import { problemList } from "../../../../src/core/study/problem-wordings.ts";
+import { problemList } from "../../../../src/core/study/problem-list.ts";
 import { readSettings } from "../../../../src/core/study/read-settings.ts";
 import { knownSettingPaths, mergeSettings, setSetting } from "../../../../src/core/study/setting-path.ts";
 import { defaultSettings } from "../../../../src/core/study/settings.ts";
