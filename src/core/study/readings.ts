@@ -91,6 +91,21 @@ export function scaleReading(reading: Reading, factor: number): Reading {
   }
 }
 
+/** Every number of a reading. */
+export function readingNumbers(reading: Reading): readonly number[] {
+  switch (reading.kind) {
+    case "value":
+      return [reading.value];
+    case "below":
+    case "above":
+      return [reading.limit];
+    case "between":
+      return [reading.low, reading.high];
+    default:
+      return reading satisfies never;
+  }
+}
+
 /** The size of a reading that a percent error refers to: the value, the limit, or the middle. */
 export function readingSize(reading: Reading): number {
   switch (reading.kind) {

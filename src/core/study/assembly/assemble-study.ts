@@ -1,6 +1,6 @@
 import type { Section, Study } from "../model.ts";
 import { planes } from "../tables/planes.ts";
-import { checkSection } from "./checks.ts";
+import { checkSection, checkStudy } from "./checks.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
 import { readFrames } from "./frames.ts";
 import { readMeasurements } from "./measurements.ts";
@@ -53,6 +53,7 @@ export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "tax
     checkSection(section, assembly);
     return section;
   });
+  checkStudy({ sections, taxa }, assembly);
   return { sections, taxa, choices: readChoices(assembly), claims: readClaims(assembly) };
 }
 

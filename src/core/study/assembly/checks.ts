@@ -1,6 +1,9 @@
+import { acceptedName, hasNoRecovery, isWithin } from "../finds.ts";
 import { formatGiven } from "../heights.ts";
 import { sameLevelM } from "../legs.ts";
-import type { Occurrence, Section } from "../model.ts";
+import type { Occurrence, Section, Study, Taxon } from "../model.ts";
+import { suggestName } from "../nearest.ts";
+import { excerpt } from "../problem-wordings.ts";
 import { type Assembly, gather } from "./context.ts";
 import { isToGenus } from "./occurrences.ts";
 
@@ -8,6 +11,14 @@ import { isToGenus } from "./occurrences.ts";
 export function checkSection(section: Section, assembly: Assembly): void {
   checkLevels(section, assembly);
   checkEnds(section, assembly);
+  checkHiddenFinds(section, assembly);
+}
+
+/** Cautions and errors that need every section. */
+export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: Assembly): void {
+  checkImpacts(study.sections, assembly);
+  checkSets(study, assembly);
+  checkSynonyms(study.taxa, assembly);
 }
 
 function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
@@ -36,6 +47,85 @@ function checkEnds(section: Section, assembly: Assembly): void {
       column: "position",
       found,
       detail,
+    });
+  }
+}
+
+/** Finds inside rock that nobody could search. */
+function checkHiddenFinds(section: Section, assembly: Assembly): void {
+  const hidden = section.intervals.filter(hasNoRecovery);
+  for (const find of section.occurrences) {
+    if (find.count === 0) continue;
+    const interval = hidden.find((each) => isWithin(find.heightM, each));
+    if (interval === undefined) continue;
+    const ends = [interval.baseM, interval.topM].map((heightM) => formatGiven(heightM, section));
+    assembly.problems.addOnce(`${section.name} ${interval.origin.row}`, "find-in-hidden-rock", {
+      ...find.origin,
+      column: find.sample === undefined ? "position" : "sample",
+      found: `${find.taxon} at ${formatGiven(find.heightM, section)}`,
+      detail: `the ${interval.kind} interval (${ends.join(" to ")})`,
+    });
+  }
+}
+
+/** Two names for the main horizon: nobody but the person can say which is meant. */
+function checkImpacts(sections: readonly Section[], { settings, problems }: Assembly): void {
+  if (settings.boundary.horizon !== undefined) return;
+  const declared = new Map(
+    settings.boundary.same.flatMap(({ name, horizons }) =>
+      horizons.map((member) => [JSON.stringify(member), name] as const),
+    ),
+  );
+  const impacts = sections.flatMap((section) =>
+    section.horizons
+      .filter(({ kind }) => kind === "impact")
+      .map(({ name, origin }) => ({
+        name: declared.get(JSON.stringify([section.name, name])) ?? name,
+        origin,
+      })),
+  );
+  impacts.sort((a, b) => a.origin.row - b.origin.row);
+  const names = [...new Set(impacts.map(({ name }) => name))];
+  const second = impacts.find(({ name }) => name !== names[0]);
+  if (second === undefined) return;
+  const detail = names.map((name) => excerpt(name)).join(", ");
+  problems.add("impact-ambiguous", { ...second.origin, column: "horizon", found: names.join(", "), detail });
+}
+
+/** Declared sets that name a taxon which no table holds. */
+function checkSets(
+  { sections, taxa }: Pick<Study, "sections" | "taxa">,
+  { settings, problems }: Assembly,
+): void {
+  const known = new Set(taxa.keys());
+  for (const { occurrences, publishedRanges } of sections) {
+    for (const { taxon, qualifier } of occurrences) if (qualifier) known.add(`${taxon} ${qualifier}`);
+    for (const { taxon } of publishedRanges) known.add(taxon);
+  }
+  for (const [set, members] of Object.entries(settings.timing.sets))
+    for (const member of members) {
+      if (known.has(member)) continue;
+      const nearest = suggestName(member, known);
+      const column = `timing.sets.${set}`;
+      problems.add("set-taxon-unknown", {
+        file: "settings.json",
+        column,
+        found: member,
+        detail: set,
+        nearest,
+      });
+    }
+}
+
+/** Synonyms that accept each other in a circle. */
+function checkSynonyms(taxa: ReadonlyMap<string, Taxon>, { problems }: Assembly): void {
+  for (const { name, accepted, origin } of taxa.values()) {
+    if (accepted === undefined || accepted === name || acceptedName(name, taxa) !== name) continue;
+    problems.addOnce("circle", "accepted-circle", {
+      ...origin,
+      column: "accepted",
+      found: accepted,
+      detail: `${excerpt(name)} and ${excerpt(accepted)} lead back to each other`,
     });
   }
 }

@@ -7,6 +7,8 @@ import type { Frames } from "./frame-for.ts";
 import { readLegs } from "./read-legs.ts";
 import { rowsOf } from "./rows.ts";
 
+const reservedSection = "joint";
+
 interface Scale {
   readonly axis: Axis;
   readonly unit: LengthUnit;
@@ -43,6 +45,7 @@ function readListed(assembly: Assembly, { listed, usable, leftOut }: Listing): v
       });
       continue;
     }
+    if (isReserved(section, row.origin, { assembly, leftOut })) continue;
     const frame = frameOf(row, listed, assembly);
     if (!frame) continue;
     usable.set(section, frame);
@@ -85,6 +88,7 @@ function readNamed(
     for (const [name, origin] of namesIn(read)) if (!names.has(name)) names.set(name, origin);
   }
   for (const [name, origin] of names) {
+    if (isReserved(name, origin, { assembly, leftOut })) continue;
     const scale = scaleOf(name, {}, { assembly, origin });
     if (!scale) leftOut.set(name, "its axis and unit are not stated");
     else {
@@ -92,6 +96,18 @@ function readNamed(
       usable.set(name, { name, ...scale, legs: new Map(), level: levelRegister(), declared });
     }
   }
+}
+
+/** The name that the results give to all sections together cannot be a section's own. */
+function isReserved(
+  name: string,
+  origin: Origin,
+  { assembly, leftOut }: { readonly assembly: Assembly; readonly leftOut: Map<string, string> },
+): boolean {
+  if (name !== reservedSection) return false;
+  assembly.problems.add("reserved-section", { ...origin, column: "section", found: name });
+  leftOut.set(name, "it needs another name");
+  return true;
 }
 
 /** The section names of a sheet, each with the row it is first met in. */

@@ -1,6 +1,6 @@
 import { oneSigma } from "../errors.ts";
 import type { Measurement, Reading } from "../model.ts";
-import { readingSize, readPolarityCell, readValueCell, scaleReading } from "../readings.ts";
+import { readingNumbers, readingSize, readPolarityCell, readValueCell, scaleReading } from "../readings.ts";
 import type { RowOf } from "../tables/declare.ts";
 import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
@@ -77,14 +77,27 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
     givenUnit,
     sigma: sigmaOf(cells, reading, unit),
   };
-  if (hasFiniteNumbers(value, (cells.detection_limit ?? 0) * unit.factor)) return value;
-  assembly.problems.add("not-finite", { ...origin, column: "value", found: cells.value });
+  const largest = unit.quantity === "mass-fraction" ? wholeRockNgG : largestReading;
+  const sizes = [
+    ...readingNumbers(value.reading),
+    value.sigma ?? 0,
+    (cells.detection_limit ?? 0) * unit.factor,
+  ];
+  const tooLarge = sizes.some((size) => !(Math.abs(size) <= largest));
+  const isLimitless = reading.kind === "below" && unit.quantity === "mass-fraction" && !(reading.limit > 0);
+  if (!tooLarge && !isLimitless) return value;
+  const detail = isLimitless
+    ? "above 0 as the limit of detection"
+    : `within ${largest / unit.factor} of zero, its error and detection limit too,`;
+  assembly.problems.add("out-of-limits", { ...origin, column: "value", found: cells.value, detail });
   return undefined;
 }
 
-/** False where the canonical unit takes a number beyond the largest double. */
-const hasFiniteNumbers = ({ reading, sigma }: Value, limit: number): boolean =>
-  [readingSize(reading), sigma ?? 0, limit].every((number) => Number.isFinite(number));
+/** A content of 100 % by mass. */
+const wholeRockNgG = 1e9;
+
+/** No isotope ratio, count or other reading is larger; squares of it are still far from the largest double. */
+const largestReading = 1e15;
 
 /** Trials bound the successes; an error must say what it is. */
 function isSound({ cells, origin }: MeasurementRow, reading: Reading, assembly: Assembly): boolean {

@@ -31,6 +31,7 @@ function legsOf(frame: SectionFrame, rows: ReadonlyMap<string, LegRow[]> | undef
       assembly.problems.add("short-leg", { ...sorted[0].origin, column: "leg", found: name });
       continue;
     }
+    tellTurns(name, sorted, assembly);
     read.set(name, {
       name,
       readings: sorted.map(({ cells }) => cells.reading),
@@ -49,4 +50,18 @@ function distinctReadings(rows: readonly LegRow[], assembly: Assembly): readonly
     } else byReading.set(reading, row);
   }
   return [...byReading.values()].toSorted((a, b) => a.cells.reading - b.cells.reading);
+}
+
+/** A leg whose positions go up and then down: one of its readings is likely to be a slip. */
+function tellTurns(leg: string, rows: readonly LegRow[], assembly: Assembly): void {
+  const positions = rows.map(({ cells }) => cells.position);
+  const way = Math.sign(positions[positions.length - 1] - positions[0]);
+  const turn = positions.findIndex((position, i) => i > 0 && (position - positions[i - 1]) * (way || 1) < 0);
+  if (turn > 0)
+    assembly.problems.add("leg-turns-back", {
+      ...rows[turn].origin,
+      column: "position",
+      found: String(positions[turn]),
+      detail: leg,
+    });
 }

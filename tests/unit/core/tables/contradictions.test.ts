@@ -1,0 +1,149 @@
+import { describe, expect, it } from "vitest";
+import { lines, problemsOf, sections, studyFrom } from "./study-files.ts";
+
+const finds = (...rows: readonly string[]) => lines("section,taxon,position", ...rows);
+const horizonsOf = (...rows: readonly string[]) => lines("section,horizon,kind,position", ...rows);
+
+describe("two impact horizons", () => {
+  const two = {
+    "sections.csv": sections,
+    "occurrences.csv": finds("Orskel Ledge,Velorites orskelensis,1.2"),
+    "horizons.csv": horizonsOf("Orskel Ledge,Rim,impact,9", "Orskel Ledge,Rum,impact,7"),
+  };
+
+  it("are an error that lists them", () => {
+    expect(problemsOf(studyFrom(two), "impact-ambiguous")).toMatchObject([
+      { severity: "error", file: "horizons.csv", row: 3, column: "horizon", found: "Rim, Rum" },
+    ]);
+  });
+
+  it("are none where the main one is named, or both are declared one horizon", () => {
+    const named = studyFrom(two, { boundary: { horizon: "Rim" } });
+    const pairs = [
+      ["Orskel Ledge", "Rim"],
+      ["Orskel Ledge", "Rum"],
+    ];
+    const same = studyFrom(two, { boundary: { same: [{ name: "one", horizons: pairs }] } });
+    for (const study of [named, same]) expect(problemsOf(study, "impact-ambiguous")).toEqual([]);
+  });
+});
+
+describe("a section named joint", () => {
+  it.each([
+    ["in sections.csv", { "sections.csv": lines("section,axis,unit", "joint,height,m") }],
+    ["without it", {}],
+  ])("is left out, %s: the results use the name", (_, files) => {
+    const study = studyFrom({
+      ...files,
+      "occurrences.csv": lines("section,taxon,height (m)", "joint,Velorites orskelensis,1"),
+    });
+    expect(problemsOf(study, "reserved-section")).toHaveLength(1);
+    expect(study.sections).toEqual([]);
+  });
+});
+
+describe("rock, legs and names that contradict each other", () => {
+  it("a find inside rock that nobody could search is told, one at its edge is not", () => {
+    const study = studyFrom({
+      "sections.csv": sections,
+      "intervals.csv": lines("section,kind,base,top", "Orskel Ledge,covered,2,4"),
+      "occurrences.csv": finds(
+        "Orskel Ledge,Velorites orskelensis,2",
+        "Orskel Ledge,Velorites orskelensis,3",
+        "Orskel Ledge,Velorites orskelensis,3.5",
+      ),
+    });
+    expect(problemsOf(study, "find-in-hidden-rock")).toMatchObject([
+      {
+        severity: "caution",
+        row: 3,
+        found: "Velorites orskelensis at 3 m (and 1 more row)",
+        expected: "a find outside the covered interval (2 m to 4 m)",
+      },
+    ]);
+  });
+
+  it.each([
+    ["turns back", ["0,0", "5,9", "9,2"], 1],
+    ["is measured downward", ["0,9", "5,5", "9,0"], 0],
+    ["runs along a bed", ["0,0", "5,4", "9,4"], 0],
+  ])("a leg that %s", (_, rows, count) => {
+    const study = studyFrom({
+      "sections.csv": sections,
+      "legs.csv": lines("section,leg,reading,position", ...rows.map((row) => `Orskel Ledge,A,${row}`)),
+      "occurrences.csv": finds("Orskel Ledge,Velorites orskelensis,2"),
+    });
+    expect(problemsOf(study, "leg-turns-back")).toHaveLength(count);
+  });
+
+  it("synonyms that accept each other in a circle are told; a chain is none", () => {
+    const taxaOf = (...rows: readonly string[]) =>
+      studyFrom({ "taxa.csv": lines("taxon,group,accepted", ...rows) });
+    const circle = taxaOf("Velor a,g,Velor b", "Velor b,g,Velor a");
+    expect(problemsOf(circle, "accepted-circle")).toMatchObject([
+      { row: 2, found: "Velor b (and 1 more row)" },
+    ]);
+    expect(
+      problemsOf(taxaOf("Velor a,g,Velor b", "Velor b,g,Velor c", "Velor c,g,"), "accepted-circle"),
+    ).toEqual([]);
+  });
+
+  it("a declared set with a taxon that no table holds names the nearest", () => {
+    const study = studyFrom(
+      { "sections.csv": sections, "occurrences.csv": finds("Orskel Ledge,Velorites orskelensis,2") },
+      { timing: { sets: { last: ["Velorites orskelensis", "Velorites orskelensus"] } } },
+    );
+    expect(problemsOf(study, "set-taxon-unknown")).toMatchObject([
+      {
+        column: "timing.sets.last",
+        found: "Velorites orskelensus",
+        mend: expect.stringContaining("Did you mean"),
+      },
+    ]);
+  });
+});
+
+describe("contents that rock cannot have", () => {
+  const measured = (value: string, unit = "ng/g", limit = "") =>
+    studyFrom({
+      "sections.csv": sections,
+      "measurements.csv": lines(
+        "section,analyte,value,unit,position,detection_limit",
+        `Orskel Ledge,iridium,${value},${unit},1,${limit}`,
+      ),
+    });
+
+  it.each([
+    ["1e300", "ng/g", ""],
+    ["101", "wt%", ""],
+    ["0.1", "ng/g", "1e12"],
+    ["<0", "ng/g", ""],
+    ["bdl", "ng/g", "0"],
+  ])("%s %s is an error of its row", (value, unit, limit) => {
+    const study = measured(value, unit, limit);
+    expect(problemsOf(study, "out-of-limits")).toHaveLength(1);
+    expect(study.sections[0].measurements).toEqual([]);
+  });
+
+  it("100 wt% is not", () => {
+    expect(measured("100", "wt%").sections[0].measurements).toHaveLength(1);
+  });
+});
+
+describe("settings that no analysis can use", () => {
+  it.each([
+    [{ ranges: { methods: [] } }, "ranges.methods"],
+    [{ ranges: { methods: ["window", "window"] } }, "ranges.methods"],
+    [{ timing: { window: [15, -20] } }, "timing.window"],
+    [JSON.parse('{"timing":{"sets":{"__proto__":["Velor a"]}}}'), "timing.sets.__proto__"],
+  ])("%j is told and takes its default", (settings, column) => {
+    const study = studyFrom({ "sections.csv": sections }, settings);
+    expect(problemsOf(study, "bad-setting")).toMatchObject([{ severity: "error", column }]);
+    expect(study.settings).toEqual(studyFrom({}).settings);
+  });
+
+  it("a file nested beyond reading is told, not thrown", () => {
+    const study = studyFrom({ "settings.json": "[".repeat(20_000) + "]".repeat(20_000) });
+    expect(problemsOf(study, "settings-unreadable")).toHaveLength(1);
+  });
+});
