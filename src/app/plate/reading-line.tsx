@@ -48,7 +48,7 @@ export function ReadingLine({ drawing, reading, pixelsPerPoint }: ReadingLinePro
         aria-valuenow={heightM}
         aria-valuetext={position(section, heightM)}
       >
-        {position(section, heightM).replace("depth ", "")}
+        {position(section, heightM).replace("depth\u00a0", "")}
       </div>
     </>
   );
@@ -56,5 +56,5 @@ export function ReadingLine({ drawing, reading, pixelsPerPoint }: ReadingLinePro
 
 function valueIn(panel: Panel, y: number, sections: readonly Parameters<typeof position>[0][]): string {
   const section = sections.find(({ name }) => name === panel.section);
-  return section === undefined ? "" : position(section, panel.scale.invert(y)).replace("depth ", "");
+  return section === undefined ? "" : position(section, panel.scale.invert(y)).replace("depth\u00a0", "");
 }

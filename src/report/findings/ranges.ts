@@ -8,9 +8,9 @@ import type { Finding } from "./finding.ts";
 
 const roleWords: Readonly<Record<Role, string>> = {
   candidate: "Candidates: end in question",
-  survivor: "Survivors, found above H",
-  aftermath: "Aftermath, first found above H",
-  "late-start": "Late starts",
+  survivor: "Survivors: found above the main horizon",
+  aftermath: "Aftermath: first found above it",
+  "late-start": "Late starts: first found too high to count",
   "too-few": "Too few horizons",
 };
 
@@ -63,6 +63,8 @@ function reachOf({ candidates, markers, ranges, study }: Analysis, section: Sect
 
 function sentence(analysis: Analysis, section: Section): Words {
   const here = analysis.candidates.filter((c) => c.section === section.name);
+  if (here.length === 0)
+    return say`No find counts in ${section.title}: there are ${strong("no ranges")} here.`;
   const counted = here.filter((c) => c.role === "candidate").length;
   const opening = say`Of ${plural(here.length, "taxon", "taxa")} in ${section.title} ${strong(
     `${counted} ${counted === 1 ? "has its end" : "have their end"}`,
@@ -74,22 +76,22 @@ function sentence(analysis: Analysis, section: Section): Words {
   const level = percent(analysis.study.settings.confidence);
   return [
     ...opening,
-    ...say` ${strong(`${reaching.length} of ${taxa}`)} could have lived to the main horizon: their ${level} interval reaches it.`,
+    ...say` ${strong(`${reaching.length} of ${taxa}`)} could have lived to the main horizon: ${reaching.length === 1 ? "its" : "their"} ${level} interval reaches it.`,
   ];
 }
 
-const beside: readonly (readonly [Role, string])[] = [
-  ["survivor", "survive"],
-  ["aftermath", "begin above the main horizon"],
-  ["late-start", "begin too late"],
-  ["too-few", "have too few horizons"],
+const beside: readonly (readonly [role: Role, one: string, many: string])[] = [
+  ["survivor", "survives", "survive"],
+  ["aftermath", "begins above the main horizon", "begin above the main horizon"],
+  ["late-start", "begins too late", "begin too late"],
+  ["too-few", "has too few horizons", "have too few horizons"],
 ];
 
 /** Why the others do not count: ` (7 survive, 6 begin above the main horizon)`. */
 function besideWords(candidates: readonly Candidate[]): string {
-  const parts = beside.flatMap(([role, words]) => {
+  const parts = beside.flatMap(([role, one, many]) => {
     const count = candidates.filter((candidate) => candidate.role === role).length;
-    return count === 0 ? [] : [`${count} ${words}`];
+    return count === 0 ? [] : [`${count}\u00a0${count === 1 ? one : many}`];
   });
   return parts.length === 0 ? "" : ` (${parts.join(", ")})`;
 }

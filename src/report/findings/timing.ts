@@ -3,7 +3,7 @@ import type { Section } from "../../core/study/model.ts";
 import { isAlignedTooWell, rejectsOneLevel } from "../../core/timing/common-end.ts";
 import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
 import { weaknessOf } from "../wordings/cautions.ts";
-import { metres, offset, percent, positionInterval, pValue } from "../wordings/numbers.ts";
+import { inMetres, offsetInterval, percent, positionInterval, pValue } from "../wordings/numbers.ts";
 import { plural, say, strong, type Words } from "../wordings/words.ts";
 import type { Finding, NumberLine } from "./finding.ts";
 
@@ -74,7 +74,7 @@ function sentence({ analysis, section, set, answers }: Telling): Words {
   const told = isAlignedTooWell(test.p)
     ? alignedTooWell(taxa, test)
     : notRejected({ analysis, section, taxa, test }, by("common-end-given"));
-  return [...gate, ...told, ...longestWords(by("duration-box"))];
+  return [...gate, ...told, ...longestWords(by("duration-box"), section)];
 }
 
 function rejected(taxa: string, test: TimingAnswer, shortest: TimingAnswer | undefined): Words {
@@ -82,13 +82,13 @@ function rejected(taxa: string, test: TimingAnswer, shortest: TimingAnswer | und
   if (shortest?.low === undefined || shortest.level === undefined) return [...opening, "."];
   return [
     ...opening,
-    ...say`; their local disappearance then took at least ${strong(`${metres(shortest.low)} m`)} (${percent(shortest.level)}).`,
+    ...say`; their local disappearance then took at least ${strong(inMetres(shortest.low))} (${percent(shortest.level)}).`,
   ];
 }
 
 /** Nothing is said about where: the model of uniform recovery fails from the other side. */
 function alignedTooWell(taxa: string, test: TimingAnswer): Words {
-  return say`${strong(taxa)} ${strong("cannot be told from one level")} (${pValue(test.p ?? 1)}), but their last finds agree better than chance allows, so no level is given.`;
+  return say`${strong(taxa)} ${strong("cannot be told from one level")} (${pValue(test.p ?? 1)}), but their last finds agree better than chance allows: where they would have ended together is not to be trusted.`;
 }
 
 interface Kept {
@@ -113,15 +113,21 @@ function notRejected({ analysis, section, taxa, test }: Kept, where: TimingAnswe
   const [low, high] = [where.low - main.highM, where.high - main.lowM];
   return [
     ...opening,
-    ...say`; if they ended together, it was ${strong(`${offset(low)} to ${offset(high)} m`)} from the main horizon (${level}).`,
+    ...say`; if they ended together, it was ${strong(offsetInterval(low, high))} from the main horizon (${level}).`,
   ];
 }
 
-function longestWords(longest: TimingAnswer | undefined): Words {
-  return longest?.high === undefined
-    ? say` How long their local disappearance took cannot be bounded from above.`
-    : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(`${metres(longest.high)} m`)} cannot be excluded.`;
+/** A duration that the section is too short to hold is told as that: its number says nothing about the rock. */
+function longestWords(longest: TimingAnswer | undefined, section: Section): Words {
+  if (longest?.high === undefined)
+    return say` How long their local disappearance took cannot be bounded from above.`;
+  return isBeyond(longest, section)
+    ? say` A local disappearance of ${longestOf(longest)} spread over ${strong("more than the whole section")} cannot be excluded.`
+    : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(inMetres(longest.high))} cannot be excluded.`;
 }
+
+const isBeyond = ({ high }: TimingAnswer, { bottomM, topM }: Section) =>
+  high !== undefined && high > topM - bottomM;
 
 const longestOf = (longest: TimingAnswer) =>
   longest.taxa === longest.taxaOfSet ? "these taxa" : `the ${longest.taxa} best sampled of them`;
@@ -140,7 +146,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
             {
               label: "All at one level?",
               value: pValue(answer.p),
-              note: `${answer.taxa} taxa, exact chi-square`,
+              note: `${answer.taxa} taxa, exact chi\u2011square`,
             },
           ];
     case "common-end-given":
@@ -156,7 +162,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
         {
           label: "Levels at which all could have ended",
           value: answer.outcome === "empty" ? "none" : (interval ?? answer.outcome),
-          note: `${level}empty where one level is refuted`,
+          note: `${level}none where one level is refuted`,
         },
       ];
     case "confidence-levels":
@@ -164,14 +170,14 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
         {
           label: `All at ${answer.horizon ?? "the horizon"}?`,
           value: answer.p === undefined ? answer.outcome : pValue(answer.p),
-          note: `${answer.taxa} taxa, exact Kolmogorov-Smirnov`,
+          note: `${answer.taxa} taxa, exact Kolmogorov\u2011Smirnov`,
         },
       ];
     case "duration-lower":
       return [
         {
           label: "It took at least",
-          value: answer.low === undefined ? answer.outcome : `${metres(answer.low)} m`,
+          value: answer.low === undefined ? answer.outcome : inMetres(answer.low),
           note: `${level}all taxa`,
         },
       ];
@@ -180,8 +186,8 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
         {
           label:
             answer.taxa === answer.taxaOfSet ? "It took at most" : "It took at most, of the best sampled",
-          value: answer.high === undefined ? `not bounded (${answer.outcome})` : `${metres(answer.high)} m`,
-          note: `${level}${answer.taxa} of ${answer.taxaOfSet} taxa`,
+          value: answer.high === undefined ? `not bounded (${answer.outcome})` : inMetres(answer.high),
+          note: `${level}${answer.taxa} of ${answer.taxaOfSet} taxa${isBeyond(answer, section) ? ", longer than the section" : ""}`,
         },
       ];
     case "centroid":

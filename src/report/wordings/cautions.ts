@@ -37,7 +37,7 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "boundary-horizon-unknown": ({ subject }) =>
     say`${subject}, named in boundary.horizon, is placed in no section.`,
   "given-found-differ": ({ subject, text, n }) =>
-    say`The found ${text("found")} lies ${offset(n("differenceM"))} m from the given ${subject}, more than two standard deviations.`,
+    say`The found ${text("found")} lies ${offset(n("differenceM"))}\u00a0m from the given ${subject}, more than two standard deviations.`,
   "main-horizon-found": () =>
     say`No impact horizon is given: the found iridium horizon of largest fluence is taken for the main one.`,
   "main-horizon-by-section": ({ n }) =>
@@ -91,7 +91,7 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "timing-turns-on-top": ({ n }) =>
     say`The answer turns on taxa that reach the top: ${pValue(n("all"))} with them, ${pValue(n("closed"))} without.`,
   "timing-survivors": ({ text, n }) =>
-    say`${plural(n("taxa"), "survivor")} never enter a test: ${name(text("names"))}.`,
+    say`${plural(n("taxa"), "survivor")} never ${n("taxa") === 1 ? "enters" : "enter"} a test: ${name(text("names"))}.`,
   "timing-late-starts": ({ text, n }) =>
     say`${plural(n("taxa"), "late start")} left out: ${name(text("names"))}.`,
   "timing-too-few-horizons": ({ text, n }) =>

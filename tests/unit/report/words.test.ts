@@ -3,6 +3,7 @@ import { flagWords } from "../../../src/report/wordings/cautions.ts";
 import {
   metres,
   offset,
+  offsetInterval,
   position,
   positionInterval,
   probability,
@@ -38,22 +39,23 @@ describe("numbers", () => {
   const core = sectionWith({ axis: "depth", unit: "ft" });
 
   it("a position keeps the section's own axis and unit", () => {
-    expect(position(sectionWith({}), 12.7712)).toBe("12.77 m");
-    expect(position(core, -125.687)).toBe("depth 412.36 ft");
+    expect(position(sectionWith({}), 12.7712)).toBe("12.77\u00a0m");
+    expect(position(core, -125.687)).toBe("depth\u00a0412.36\u00a0ft");
   });
 
   it("an interval has the stratigraphically lower end first and shows its width", () => {
-    expect(positionInterval(core, -126, -125)).toBe("413.39 to 410.10 ft");
-    expect(positionInterval(sectionWith({}), 28.8562, 28.8634)).toBe("28.856 to 28.863 m");
+    expect(positionInterval(core, -126, -125)).toBe("413.39 to 410.10\u00a0ft");
+    expect(positionInterval(sectionWith({}), 28.8562, 28.8634)).toBe("28.856 to 28.863\u00a0m");
   });
 
   it("offsets carry their sign and probabilities their size", () => {
     expect(offset(0.624)).toBe("+0.62");
     expect(offset(-1.3)).toBe("\u22121.30");
+    expect(offsetInterval(-0.0132, 0.144)).toBe("\u22120.013 to +0.144\u00a0m");
     expect(metres(0.0128)).toBe("0.013");
-    expect(probability(0.0000012)).toBe("< 0.001");
-    expect(pValue(0.4599)).toBe("p = 0.46");
-    expect(pValue(0.0104)).toBe("p = 0.010");
+    expect(probability(0.0000012)).toBe("<\u00a00.001");
+    expect(pValue(0.4599)).toBe("p\u00a0=\u00a00.46");
+    expect(pValue(0.0104)).toBe("p\u00a0=\u00a00.010");
   });
 });
 
