@@ -71,7 +71,7 @@ function report(analysis: Analysis, drawn: readonly PlateFile[], fontFaces: stri
   return renderReport({
     analysis,
     findings: findings(analysis),
-    drawings: drawn.map(({ drawing }) => drawing),
+    plates: drawn,
     tables: resultTables(analysis),
     fontFaces,
   });

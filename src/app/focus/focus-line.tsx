@@ -1,6 +1,7 @@
 import type { ReactElement } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
-import { type Focus, setTitle } from "../state/focus.ts";
+import { setTitle } from "../../report/wordings/set-title.ts";
+import type { Focus } from "../state/focus.ts";
 import { usePage } from "../state/page-context.ts";
 import { SCALES } from "../state/place.ts";
 import { scaleTitle } from "../state/scale-title.ts";

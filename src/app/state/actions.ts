@@ -1,5 +1,5 @@
+import { setTitle } from "../../report/wordings/set-title.ts";
 import { bundledStudy } from "../study/bundled-study.ts";
-import { setTitle } from "./focus.ts";
 import { heightOf } from "./level.ts";
 import type { Opened, PageContents } from "./page-context.ts";
 import { SCALES, STATIONS } from "./place.ts";

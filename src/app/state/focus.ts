@@ -21,10 +21,3 @@ export function focusOf(place: Place, analysis: Analysis): Focus {
   const set = sets.find((set) => set.set === place.set) ?? sets[0];
   return { station: place.station, section, set, sets, scale: place.scale };
 }
-
-/** A set's name as a person reads it. */
-export function setTitle(set: string): string {
-  if (set === "candidates") return "Candidates";
-  if (set === "candidates-closed") return "Candidates, without those that reach the top";
-  return set.startsWith("group:") ? `Group: ${set.slice("group:".length)}` : set;
-}

@@ -118,7 +118,8 @@ function subtitleOf(datum: string | undefined): string {
 function describe(analysis: Analysis, drawn: number, datum: string | undefined): string {
   const count = `${drawn} ${drawn === 1 ? "section" : "sections"}`;
   if (datum === undefined) return `${count}, each on its own: no datum is shared.`;
-  return `${count} flattened on ${datum}, with ${analysis.alignment.horizons.length} shared horizon(s) used.`;
+  const used = analysis.alignment.horizons.length;
+  return `${count} flattened on ${datum}, ${used} shared ${used === 1 ? "horizon" : "horizons"} used.`;
 }
 
 function notesOf({ unaligned, posts, commonY }: FencePosts, { alignment }: Analysis): readonly string[] {

@@ -12,30 +12,32 @@ export function ChoicesSection({ study }: { readonly study: Study }): ReactEleme
       {study.choices.length === 0 ? (
         <p>No choice made by hand is recorded in choices.csv.</p>
       ) : (
-        <table>
-          <thead>
-            <tr>
-              <th>Choice</th>
-              <th>Was</th>
-              <th>Became</th>
-              <th>Reason</th>
-              <th>By</th>
-              <th>After results were seen</th>
-            </tr>
-          </thead>
-          <tbody>
-            {study.choices.map((choice) => (
-              <tr key={choice.order}>
-                <td>{choice.choice}</td>
-                <td>{choice.old}</td>
-                <td>{choice.new}</td>
-                <td>{choice.reason}</td>
-                <td>{choice.by}</td>
-                <td>{choice.afterResults ? "yes" : "no"}</td>
+        <div className="wide">
+          <table>
+            <thead>
+              <tr>
+                <th>Choice</th>
+                <th>Was</th>
+                <th>Became</th>
+                <th>Reason</th>
+                <th>By</th>
+                <th>After results were seen</th>
               </tr>
-            ))}
-          </tbody>
-        </table>
+            </thead>
+            <tbody>
+              {study.choices.map((choice) => (
+                <tr key={choice.order}>
+                  <td>{choice.choice}</td>
+                  <td>{choice.old}</td>
+                  <td>{choice.new}</td>
+                  <td>{choice.reason}</td>
+                  <td>{choice.by}</td>
+                  <td>{choice.afterResults ? "yes" : "no"}</td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
       )}
       <h3>Settings in force</h3>
       <table>

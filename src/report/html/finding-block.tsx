@@ -4,12 +4,21 @@ import { Sentence } from "./words.tsx";
 
 /** A finding in the order of an argument: the sentence, its numbers, what weakens it. */
 export function FindingBlock({ finding }: { readonly finding: Finding }): ReactElement {
-  const { sentence, numbers, weaknesses } = finding;
   return (
     <div className="finding">
       <p className="sentence">
-        <Sentence words={sentence} />
+        <Sentence words={finding.sentence} />
       </p>
+      <FindingNotes finding={finding} />
+    </div>
+  );
+}
+
+/** The numbers of a finding, and what weakens it. */
+export function FindingNotes({ finding }: { readonly finding: Finding }): ReactElement {
+  const { numbers, weaknesses } = finding;
+  return (
+    <>
       {numbers.length > 0 && (
         <table className="numbers">
           <tbody>
@@ -36,6 +45,6 @@ export function FindingBlock({ finding }: { readonly finding: Finding }): ReactE
           </ul>
         </>
       )}
-    </div>
+    </>
   );
 }

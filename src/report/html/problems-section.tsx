@@ -11,32 +11,34 @@ export function ProblemsSection({ problems }: { readonly problems: readonly Prob
       {problems.length === 0 ? (
         <p>None.</p>
       ) : (
-        <table>
-          <thead>
-            <tr>
-              <th>Kind</th>
-              <th>File</th>
-              <th>Row</th>
-              <th>Column</th>
-              <th>Stands there</th>
-              <th>Expected</th>
-              <th>To mend it</th>
-            </tr>
-          </thead>
-          <tbody>
-            {problems.slice(0, MOST).map((problem, i) => (
-              <tr key={`${i}`}>
-                <td>{problem.severity}</td>
-                <td>{problem.file}</td>
-                <td>{problem.row}</td>
-                <td>{problem.column}</td>
-                <td className="cell">{problem.found.slice(0, 120)}</td>
-                <td>{problem.expected}</td>
-                <td>{problem.mend}</td>
+        <div className="wide">
+          <table>
+            <thead>
+              <tr>
+                <th>Kind</th>
+                <th>File</th>
+                <th>Row</th>
+                <th>Column</th>
+                <th>Stands there</th>
+                <th>Expected</th>
+                <th>To mend it</th>
               </tr>
-            ))}
-          </tbody>
-        </table>
+            </thead>
+            <tbody>
+              {problems.slice(0, MOST).map((problem, i) => (
+                <tr key={`${i}`}>
+                  <td>{problem.severity}</td>
+                  <td>{problem.file}</td>
+                  <td>{problem.row}</td>
+                  <td>{problem.column}</td>
+                  <td className="cell">{problem.found.slice(0, 120)}</td>
+                  <td>{problem.expected}</td>
+                  <td>{problem.mend}</td>
+                </tr>
+              ))}
+            </tbody>
+          </table>
+        </div>
       )}
       {problems.length > MOST && (
         <p>

@@ -1,30 +1,37 @@
 import type { ReactElement } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
 import { VERSION } from "../../core/version.ts";
-import type { Drawing } from "../../figures/index.ts";
+import type { PlateFile } from "../../figures/index.ts";
 import type { Finding } from "../findings/finding.ts";
 import type { ResultTable } from "../tables/result-table.ts";
+import { Block } from "./block.tsx";
 import { ChoicesSection } from "./choices-section.tsx";
-import { FindingBlock } from "./finding-block.tsx";
 import { MethodsSection } from "./methods-section.tsx";
 import { ProblemsSection } from "./problems-section.tsx";
 import { ResultTableBlock } from "./result-table-block.tsx";
 import { reportStyle } from "./style.ts";
+import { InShort, TimingPart } from "./timing-part.tsx";
 
 export interface ReportContent {
   readonly analysis: Analysis;
   readonly findings: readonly Finding[];
-  readonly drawings: readonly Drawing[];
+  readonly plates: readonly PlateFile[];
   readonly tables: readonly ResultTable[];
   readonly fontFaces: string;
 }
 
 /** The whole report as one page that needs nothing beside itself. */
-export function ReportPage({ analysis, findings, drawings, tables, fontFaces }: ReportContent): ReactElement {
+export function ReportPage({ analysis, findings, plates, tables, fontFaces }: ReportContent): ReactElement {
   const { study } = analysis;
   const of = (station: Finding["station"], section?: string) =>
     findings.filter((finding) => finding.station === station && finding.section === section);
-  const plate = (id: string) => drawings.filter((drawing) => drawing.id.startsWith(id));
+  const titleOf = (name: string) => study.sections.find((section) => section.name === name)?.title ?? name;
+  const drawn = (subject: PlateFile["subject"], section?: string, set?: string) =>
+    plates
+      .filter((plate) => plate.subject === subject && plate.section === section && plate.set === set)
+      .map(({ drawing }) => drawing);
+  const idOf = (name: string) =>
+    `section-${study.sections.findIndex((section) => section.name === name) + 1}`;
   return (
     <html lang="en">
       <head>
@@ -40,29 +47,24 @@ export function ReportPage({ analysis, findings, drawings, tables, fontFaces }: 
             Local disappearance against marker horizons. Worked out by Lastbed {VERSION}, seed{" "}
             {study.settings.seed}; <code>repeat.json</code> beside this page repeats every number.
           </p>
-          <Contents sections={study.sections.map((section) => [section.name, section.title])} />
+          <Contents sections={study.sections.map((section) => [idOf(section.name), section.title])} />
         </header>
         <main>
           <Block findings={of("tables")} />
+          <InShort findings={findings} titleOf={titleOf} idOf={idOf} />
           <h2 id="fence">Sections lined up</h2>
-          <Block findings={of("fence")} drawings={plate("fence")} />
+          <Block findings={of("fence")} drawings={drawn("fence")} />
           {study.sections.map((section) => (
             <section key={section.name} className="of-section">
-              <h2 id={`section-${section.name}`}>{section.title}</h2>
+              <h2 id={idOf(section.name)}>{section.title}</h2>
               <h3>Markers</h3>
-              <Block findings={of("markers", section.name)} drawings={plate(`markers-${section.name}`)} />
+              <Block findings={of("markers", section.name)} drawings={drawn("markers", section.name)} />
               <h3>Ranges</h3>
-              <Block findings={of("ranges", section.name)} drawings={plate(`range-chart-${section.name}`)} />
-              <h3>Timing</h3>
-              {of("timing", section.name).map((finding) => (
-                <div key={finding.set}>
-                  <h4 className="set">Set: {finding.set}</h4>
-                  <Block
-                    findings={[finding]}
-                    drawings={drawings.filter((d) => d.id === `timing-${section.name}-${finding.set}`)}
-                  />
-                </div>
-              ))}
+              <Block findings={of("ranges", section.name)} drawings={drawn("ranges", section.name)} />
+              <TimingPart
+                findings={of("timing", section.name)}
+                plateOf={(set) => drawn("timing", section.name, set)}
+              />
             </section>
           ))}
           <MethodsSection analysis={analysis} />
@@ -83,8 +85,9 @@ export function ReportPage({ analysis, findings, drawings, tables, fontFaces }: 
 
 function Contents({ sections }: { readonly sections: readonly (readonly [string, string])[] }): ReactElement {
   const entries = [
+    ["short", "In short"],
     ["fence", "Sections lined up"],
-    ...sections.map(([name, title]) => [`section-${name}`, title]),
+    ...sections,
     ["methods", "Methods"],
     ["choices", "Choices"],
     ["problems", "Problems of the input"],
@@ -98,28 +101,5 @@ function Contents({ sections }: { readonly sections: readonly (readonly [string,
         </a>
       ))}
     </nav>
-  );
-}
-
-interface BlockProps {
-  readonly findings: readonly Finding[];
-  readonly drawings?: readonly Drawing[];
-}
-
-function Block({ findings, drawings = [] }: BlockProps): ReactElement {
-  return (
-    <>
-      {findings.map((finding, i) => (
-        <FindingBlock key={`${i}`} finding={finding} />
-      ))}
-      {drawings.map((drawing) => (
-        <figure key={drawing.id}>
-          {drawing.element}
-          <figcaption>
-            <strong>{drawing.title}.</strong> {drawing.description}
-          </figcaption>
-        </figure>
-      ))}
-    </>
   );
 }
