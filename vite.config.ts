@@ -77,7 +77,7 @@ const test = {
   test: {
     root: at("."),
     include: ["tests/**/*.test.{ts,tsx}"],
-    testTimeout: 120_000,
+    testTimeout: process.env.CALIBRATION === "full" ? 3_600_000 : 120_000,
     hookTimeout: 120_000,
   },
 };

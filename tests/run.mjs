@@ -1,10 +1,12 @@
 // Runs everything that `npm test` promises: types, lint, format, unused code, a build, and every kind of test,
-// the real-browser ones too. The last line counts them.
+// the real-browser ones too; with --long calibration at full size. The last line counts them.
 import { spawnSync } from "node:child_process";
 import { existsSync, mkdtempSync, readFileSync, rmSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { browserHint, findBrowser } from "./app/find-browser.mjs";
+
+if (process.argv.includes("--long")) process.env.CALIBRATION = "full";
 
 const counts = { passed: 0, failed: 0, skipped: 0 };
 
