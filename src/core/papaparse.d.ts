@@ -11,6 +11,8 @@ declare module "papaparse" {
   }
   interface ParseOptions {
     readonly delimiter: string;
+    readonly quoteChar: string;
+    readonly escapeChar: string;
     readonly newline: "\n";
     readonly skipEmptyLines: false;
   }

@@ -26,8 +26,13 @@ export function parseNumber(text: string): number | "not-a-number" | "not-finite
   return Number.isFinite(value) ? value : "not-finite";
 }
 
-/** A number that uses a comma for its decimal point. */
-export const isDecimalComma = (text: string): boolean => /^[+-]?\d+,\d+$/.test(text.trim());
+const numeric = /^[\s<>≤≥=+\-\u2212\d,.eEuU]*$/;
+
+/** A cell of a file with decimal commas, with decimal points; undefined where it holds a decimal point already. */
+export function withDecimalPoint(text: string): string | undefined {
+  if (!numeric.test(text)) return text;
+  return /(?<!\.)\.(?!\.)/.test(text) ? undefined : text.replaceAll(",", ".");
+}
 
 /** Reads one cell as its column's declaration says. Blank is undefined. */
 export function parseCell(text: string, column: ColumnDeclaration): ParsedCell {

@@ -1,5 +1,6 @@
 import type { Problem } from "./problem.ts";
-import { type ProblemCode, type ProblemPlace, problem } from "./problem-wordings.ts";
+import { type ProblemCode, problem } from "./problem-wordings.ts";
+import type { ProblemPlace } from "./wording.ts";
 
 /** Gathers problems in the order met; what repeats down a file is told once, with the number of rows. */
 export interface ProblemList {

@@ -1,79 +1,12 @@
 import type { Problem } from "./problem.ts";
+import { sourceWordings } from "./source-wordings.ts";
+import { caution, error, nearest, type ProblemPlace, type Wording } from "./wording.ts";
 
-/** Where a problem stands and what its sentence needs. */
-export interface ProblemPlace {
-  readonly file: string;
-  readonly row?: number;
-  readonly column?: string;
-  readonly found: string;
-  /** The name, list or limit that the wording of this code speaks of. */
-  readonly detail?: string;
-  /** The nearest known name, where there is one. */
-  readonly nearest?: string;
-}
-
-type Words = Pick<Problem, "severity" | "expected" | "mend">;
-type Wording = (place: ProblemPlace) => Words;
-
-const error = (expected: string, mend: string): Words => ({ severity: "error", expected, mend });
-const caution = (expected: string, mend: string): Words => ({ severity: "caution", expected, mend });
 const column = (place: ProblemPlace) =>
   place.column === undefined ? "this column" : `column ${place.column}`;
-const nearest = (place: ProblemPlace) =>
-  place.nearest === undefined ? "" : ` Did you mean ${place.nearest}?`;
-
 /** The one table of wordings: every problem's expectation and mend, by code. */
 const wordings = {
-  "empty-file": () =>
-    error("a header row and at least one row", "Fill the file in, or take it out of the study."),
-  "header-only": () =>
-    error("at least one row below the header", "Add rows, or take the file out of the study."),
-  "undecodable-bytes": () =>
-    error("text in UTF-8", "Save the file again as CSV UTF-8 (in a spreadsheet: Save as, CSV UTF-8)."),
-  "wrong-delimiter": (p) =>
-    error(
-      "cells parted by commas",
-      `The cells are parted by ${p.detail ?? "another sign"}: save the file as comma-separated CSV.`,
-    ),
-  "decimal-comma": () =>
-    error(
-      "numbers with a decimal point",
-      "Write every number of this file with a point (12.5), or set the spreadsheet to a decimal point and save again.",
-    ),
-  "unclosed-quote": () =>
-    error(
-      "every opening quote to be closed",
-      "Close the quote that opens here; a quote inside a cell is written twice.",
-    ),
-  "malformed-quote": () =>
-    error(
-      "quotes only around a whole cell",
-      "Put the whole cell in quotes and write a quote inside it twice.",
-    ),
-  "too-many-cells": (p) =>
-    error(
-      `${p.detail ?? "as many"} cells, as in the header`,
-      "Put a cell that holds a comma in quotes, or take the further cells out.",
-    ),
-  "too-few-cells": (p) =>
-    caution(
-      `${p.detail ?? "as many"} cells, as in the header`,
-      "The cells that lack at the end are read as blank; fill them in if they should not be.",
-    ),
-  "duplicate-header": () =>
-    error("each column once", "Rename or take out one of the two columns that were read as the same."),
-  "missing-column": (p) =>
-    error(
-      `a column ${p.detail}`,
-      `Add the column ${p.detail}, or name the one that holds it so.${nearest(p)}`,
-    ),
-  "unknown-column": (p) => caution("a declared column", `The column is kept and not used.${nearest(p)}`),
-  "blank-header": () => caution("a name above every column", "Name the column; it is kept and not used."),
-  "duplicate-table": (p) =>
-    error("one file for each table", `${p.detail} was read already; put the rows into one file.`),
-  "unknown-file": (p) => caution("a table of the study", `The file is kept and not used.${nearest(p)}`),
-  "no-data": () =>
-    error("occurrences.csv, published-ranges.csv or measurements.csv", "Add at least one of these tables."),
+  ...sourceWordings,
   "unknown-unit": (p) => error(p.detail ?? "a known unit", `Write one of the units listed.${nearest(p)}`),
   "ambiguous-ppt": () =>
     error(
@@ -85,7 +18,7 @@ const wordings = {
   "not-a-number": (p) =>
     error(
       `a number in ${column(p)}`,
-      "Write digits with a decimal point, without a unit or other signs; leave it blank where there is none.",
+      `Write digits with a decimal ${p.detail ?? "point"}, without a unit or other signs; leave it blank where there is none.`,
     ),
   "not-finite": (p) =>
     error(`a finite number in ${column(p)}`, "Leave the cell blank where there is no number."),

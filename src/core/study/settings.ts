@@ -1,4 +1,5 @@
 import * as v from "valibot";
+import { tables } from "./tables/index.ts";
 
 const positiveInteger = v.pipe(v.number(), v.integer(), v.minValue(1));
 const share = v.pipe(v.number(), v.gtValue(0), v.ltValue(1));
@@ -13,6 +14,21 @@ export const settingsSchema = v.strictObject({
   ),
   confidence: says(v.optional(share, 0.95), "level of every interval"),
   replicates: says(v.optional(positiveInteger, 20000), "replicates of every simulation"),
+  tables: says(
+    v.optional(
+      v.record(
+        v.string(),
+        v.strictObject({
+          decimal: v.optional(v.picklist(["point", "comma"])),
+          delimiter: v.optional(v.picklist(["comma", "semicolon", "tab", "bar"])),
+          encoding: v.optional(v.picklist(["UTF-8", "UTF-16LE", "UTF-16BE", "Windows-1252"])),
+          table: v.optional(v.picklist(tables.map(({ name }) => name))),
+        }),
+      ),
+      {},
+    ),
+    "by file: its decimal sign, delimiter, encoding and the table it is, where the file leaves them open",
+  ),
   sections: v.optional(
     v.strictObject({
       axis: says(

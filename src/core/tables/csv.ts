@@ -1,12 +1,23 @@
 import Papa from "papaparse";
 import { takeOffApostrophe } from "./apostrophes.ts";
 
-/** Records of a comma-separated text: cells as written, with the row numbers a spreadsheet shows. */
+/** A row that holds something: cells as written, with the row number a spreadsheet shows. */
+export interface CsvRecord {
+  readonly cells: readonly string[];
+  readonly row: number;
+}
+
+/** Records of a delimited text; blank rows are passed over. */
 export interface CsvRecords {
-  readonly headers: readonly string[];
-  readonly rows: readonly (readonly string[])[];
-  readonly rowNumbers: readonly number[];
+  readonly records: readonly CsvRecord[];
   readonly faults: readonly CsvFault[];
+}
+
+export interface CsvWriting {
+  /** The sign between cells; a comma where absent. */
+  readonly delimiter?: string;
+  /** The sign around cells; a double quote where absent. */
+  readonly quote?: string;
 }
 
 interface CsvFault {
@@ -25,7 +36,7 @@ export function decodeText(bytes: Uint8Array): string | undefined {
 }
 
 /** Line ends outside quoted cells as single line feeds, so that CRLF, CR and LF read alike and quoted ones stay. */
-function plainLineEnds(text: string): string {
+function plainLineEnds(text: string, { delimiter, quote }: Required<CsvWriting>): string {
   if (!text.includes("\r")) return text;
   const parts: string[] = [];
   let from = 0;
@@ -34,9 +45,9 @@ function plainLineEnds(text: string): string {
   for (let i = 0; i < text.length; i++) {
     const sign = text[i];
     if (isQuoted) {
-      if (sign === '"' && text[i + 1] === '"') i += 1;
-      else if (sign === '"') isQuoted = false;
-    } else if (sign === '"' && isCellStart) isQuoted = true;
+      if (sign === quote && text[i + 1] === quote) i += 1;
+      else if (sign === quote) isQuoted = false;
+    } else if (sign === quote && isCellStart) isQuoted = true;
     else if (sign === "\r") {
       parts.push(text.slice(from, i), "\n");
       if (text[i + 1] === "\n") i += 1;
@@ -44,7 +55,7 @@ function plainLineEnds(text: string): string {
       isCellStart = true;
       continue;
     }
-    isCellStart = !isQuoted && (sign === "," || sign === "\n");
+    isCellStart = !isQuoted && (sign === delimiter || sign === "\n");
   }
   parts.push(text.slice(from));
   return parts.join("");
@@ -52,10 +63,12 @@ function plainLineEnds(text: string): string {
 
 const isBlank = (record: readonly string[]): boolean => record.every((cell) => cell.trim() === "");
 
-/** Parts comma-separated text into records. The first record with content is the header; blank rows are passed over. */
-export function parseCsv(text: string): CsvRecords {
-  const { data, errors } = Papa.parse(plainLineEnds(text), {
-    delimiter: ",",
+/** Parts delimited text into records. */
+export function parseRecords(text: string, { delimiter = ",", quote = '"' }: CsvWriting = {}): CsvRecords {
+  const { data, errors } = Papa.parse(plainLineEnds(text, { delimiter, quote }), {
+    delimiter,
+    quoteChar: quote,
+    escapeChar: quote,
     newline: "\n",
     skipEmptyLines: false,
   });
@@ -65,40 +78,23 @@ export function parseCsv(text: string): CsvRecords {
       code: code === "MissingQuotes" ? ("unclosed-quote" as const) : ("malformed-quote" as const),
       row: (row ?? 0) + 1,
     }));
-  const filled = data
+  const records = data
     .map((cells, index) => ({ cells, row: index + 1 }))
     .filter(({ cells }) => !isBlank(cells));
-  const [header, ...rows] = filled;
-  return {
-    headers: header?.cells ?? [],
-    rows: rows.map(({ cells }) => cells),
-    rowNumbers: rows.map(({ row }) => row),
-    faults,
-  };
+  return { records, faults };
 }
 
-const otherSigns: readonly (readonly [string, string])[] = [
-  [";", "semicolons"],
-  ["\t", "tabs"],
-  ["|", "bars"],
-];
-
-/** The sign that parts the header where it is not the comma, in words. */
-export function otherDelimiter(headers: readonly string[]): string | undefined {
-  const header = headers.join("");
-  const commas = headers.length - 1;
-  return otherSigns.find(([sign]) => header.split(sign).length - 1 > commas)?.[1];
+interface WrittenTable {
+  readonly headers: readonly string[];
+  readonly rows: readonly (readonly string[])[];
 }
 
 /** Cells of a table that `writeCsv` wrote, with its apostrophes taken off in the columns that were guarded. */
-export function readWrittenCsv(
-  text: string,
-  guarded: readonly string[] = [],
-): Pick<CsvRecords, "headers" | "rows"> {
-  const records = parseCsv(text);
-  const headers = unguardedHeaders(records.headers, new Set(guarded));
+export function readWrittenCsv(text: string, guarded: readonly string[] = []): WrittenTable {
+  const [header, ...below] = parseRecords(text).records;
+  const headers = unguardedHeaders(header?.cells ?? [], new Set(guarded));
   const isGuarded = headers.map((header) => guarded.includes(header));
-  const rows = records.rows.map((cells) =>
+  const rows = below.map(({ cells }) =>
     cells.map((cell, index) => (isGuarded[index] ? takeOffApostrophe(cell) : cell)),
   );
   return { headers, rows };

@@ -1,5 +1,7 @@
 import { tableSchema } from "../study/table-schema.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
+import { describeResource, listOf, property, type UnreadPart } from "./described-resource.ts";
+import type { DeclaredDialect } from "./dialect/declared.ts";
 
 /** The property of a resource that lists the columns in which `writeCsv` put apostrophes. */
 const apostrophesProperty = "lastbed:apostrophes";
@@ -65,27 +67,39 @@ const packageName = (name: string): string =>
 /** What our reading needs of a data package: per path, the columns that carry apostrophes. */
 export type Apostrophes = ReadonlyMap<string, ReadonlySet<string>>;
 
+/** A table of a data package: the name it goes by and how its file is written. */
+export interface DescribedResource {
+  readonly name: string;
+  readonly dialect: DeclaredDialect;
+}
+
 /** A study folder as its data package describes it. */
 export interface DescribedPackage {
   readonly title?: string;
   readonly apostrophes: Apostrophes;
+  /** By path. */
+  readonly resources: ReadonlyMap<string, DescribedResource>;
+  /** What of it is not read, and why. */
+  readonly unread: readonly UnreadPart[];
 }
 
-/** Reads the title and the apostrophe record; undefined where the text is not a data package in JSON. */
+/** Reads a data package of version 1 or 2: title, apostrophes, and what each resource says; undefined where it is none. */
 export function readDataPackage(text: string): DescribedPackage | undefined {
   const descriptor = parseObject(text);
   if (descriptor === undefined) return undefined;
-  const columns = new Map<string, ReadonlySet<string>>();
+  const apostrophes = new Map<string, ReadonlySet<string>>();
+  const resources = new Map<string, DescribedResource>();
+  const unread: UnreadPart[] = [];
   for (const resource of listOf(descriptor, "resources")) {
-    const path = property(resource, "path");
-    if (typeof path !== "string") continue;
-    columns.set(
-      path,
-      new Set(listOf(resource, apostrophesProperty).filter((name) => typeof name === "string")),
-    );
+    const { path, name, dialect, faults } = describeResource(resource);
+    unread.push(...faults);
+    if (path === undefined) continue;
+    resources.set(path, { name, dialect });
+    const guarded = listOf(resource, apostrophesProperty).filter((header) => typeof header === "string");
+    apostrophes.set(path, new Set(guarded));
   }
   const title = property(descriptor, "title");
-  return { ...(typeof title === "string" && title !== "" ? { title } : {}), apostrophes: columns };
+  return { ...(typeof title === "string" && title !== "" ? { title } : {}), apostrophes, resources, unread };
 }
 
 function parseObject(text: string): object | undefined {
@@ -95,14 +109,4 @@ function parseObject(text: string): object | undefined {
   } catch {
     return undefined;
   }
-}
-
-const property = (value: unknown, name: string): unknown =>
-  typeof value === "object" && value !== null
-    ? new Map<string, unknown>(Object.entries(value)).get(name)
-    : undefined;
-
-function listOf(value: unknown, name: string): readonly unknown[] {
-  const list = property(value, name);
-  return Array.isArray(list) ? list : [];
 }

@@ -1,13 +1,19 @@
 import type { HeaderHint, ReadSheet } from "../study/assembly/context.ts";
-import { isDecimalComma, parseNumber } from "../study/cells.ts";
 import { type RecognisedColumn, recogniseColumns } from "../study/columns.ts";
-import { suggestName } from "../study/nearest.ts";
+import type { Dialect } from "../study/model.ts";
 import type { ProblemList } from "../study/problem-list.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 import type { TableName } from "../study/tables/index.ts";
-import { isFixedUnit, lengthUnits } from "../study/units.ts";
 import { takeOffApostrophe } from "./apostrophes.ts";
-import { type CsvRecords, decodeText, otherDelimiter, parseCsv, unguardedHeaders } from "./csv.ts";
+import { areColumnsSound } from "./check-columns.ts";
+import { type CsvRecord, type CsvRecords, parseRecords, unguardedHeaders } from "./csv.ts";
+import { decimalSign } from "./dialect/decimal.ts";
+import { type DeclaredDialect, settingName } from "./dialect/declared.ts";
+import { bestParting, type Preview, previews, widest } from "./dialect/delimiter.ts";
+import { type DecodedText, decodeBytes } from "./dialect/encoding.ts";
+import { type FoundHeader, findHeader } from "./dialect/header.ts";
+import { tellDialect } from "./dialect/tell-dialect.ts";
+import { MOST_BYTES, MOST_COLUMNS, mebibytes } from "./limits.ts";
 
 export interface SheetSource {
   readonly file: string;
@@ -15,129 +21,153 @@ export interface SheetSource {
   readonly table: TableDeclaration & { readonly name: TableName };
   /** Columns whose text cells carry an apostrophe before a sign that starts a formula, by header. */
   readonly guarded: ReadonlySet<string>;
+  /** What is said about the file; the rest is found in it. */
+  readonly declared: DeclaredDialect;
   readonly problems: ProblemList;
 }
 
 /** Reads one table's bytes; undefined where the whole file cannot be used, with the reason told. */
 export function readSheet(source: SheetSource): ReadSheet | undefined {
-  const { file, bytes, problems, table } = source;
-  const text = decodeText(bytes);
-  if (text === undefined) {
-    problems.add("undecodable-bytes", { file, found: "bytes that are not UTF-8" });
+  const { file, table, declared, problems } = source;
+  const decoded = decodedSheet(source);
+  if (decoded === undefined) return undefined;
+  const ways = previews(decoded.text, declared);
+  if (!isOfBreadth(widest(ways), source)) return undefined;
+  const records = wholeRecords(decoded.text, ways, source);
+  if (records === undefined) return undefined;
+  const header = headerOf(records.records, source);
+  if (!isOfBreadth(header.headers.length, source)) return undefined;
+  const below = records.records.slice(header.below);
+  if (below.length === 0) {
+    problems.add("header-only", { file, found: "a header row alone" });
     return undefined;
   }
-  const written = parseCsv(text);
-  const records = { ...written, headers: unguardedHeaders(written.headers, source.guarded) };
-  if (!isWhole(records, source)) return undefined;
-  const columns = recogniseColumns(records.headers, table);
-  if (!areColumnsSound(columns, source)) return undefined;
-  const sheet = sheetOf(records, columns, source);
-  if (sheet === undefined) return undefined;
+  const headers = withoutEmptyEnd(unguardedHeaders(header.headers, source.guarded), below);
+  const columns = recogniseColumns(headers, table);
+  const row = records.records[header.from].row;
+  if (!areColumnsSound(columns, { file, row, table, problems })) return undefined;
+  const parts = { header, below, columns, delimiter: records.delimiter };
+  const dialect = dialectOf(decoded, records.records, parts, source);
+  if (dialect === undefined) return undefined;
+  const { rows, rowNumbers } = cellsOf(below, columns, records, source);
+  const declaredColumns = columns.map(({ column }) => column);
+  const sheet = { file, table: table.name, dialect, headers, columns: declaredColumns, rows, rowNumbers };
+  return { sheet, hints: hintsOf(columns) };
+}
+
+/** Text of bytes that are text and not too many; the reason is told where they are not. */
+function decodedSheet({ file, bytes, declared, problems }: SheetSource): DecodedText | undefined {
+  if (bytes.byteLength > MOST_BYTES) {
+    const found = mebibytes(bytes.byteLength);
+    problems.add("file-too-large", { file, found, detail: mebibytes(MOST_BYTES) });
+    return undefined;
+  }
+  const decoded = decodeBytes(bytes, declared.encoding);
+  if (decoded === undefined) problems.add("undecodable-bytes", { file, found: "bytes that are not text" });
+  return decoded;
+}
+
+function isOfBreadth(columns: number, { file, problems }: SheetSource): boolean {
+  if (columns <= MOST_COLUMNS) return true;
+  problems.add("too-many-columns", { file, found: `${columns} columns`, detail: String(MOST_COLUMNS) });
+  return false;
+}
+
+interface WholeRecords extends CsvRecords {
+  readonly delimiter: Dialect["delimiter"];
+}
+
+/** Every record of the file; undefined where there is none, or a quote never closes. */
+function wholeRecords(
+  text: string,
+  ways: readonly Preview[],
+  { file, table, declared, problems }: SheetSource,
+): WholeRecords | undefined {
+  const delimiter = bestParting(ways, table)?.delimiter ?? ",";
+  const read = parseRecords(text, { delimiter, quote: declared.quote });
+  const unclosed = read.faults.find(({ code }) => code === "unclosed-quote");
+  if (read.records.length === 0) problems.add("empty-file", { file, found: "an empty file" });
+  else if (unclosed) problems.add("unclosed-quote", { file, row: unclosed.row, found: '"' });
+  else return { ...read, delimiter };
+  return undefined;
+}
+
+const headerOf = (records: readonly CsvRecord[], { declared, table }: SheetSource): FoundHeader =>
+  declared.headers === undefined
+    ? findHeader(records, table)
+    : { headers: declared.headers, from: 0, below: 0, recognised: 0, isComplete: false };
+
+/** Headers without the blank ones at the end under which nothing stands. */
+function withoutEmptyEnd(headers: readonly string[], below: readonly CsvRecord[]): readonly string[] {
+  let width = headers.length;
+  while (width > 0 && headers[width - 1].trim() === "") width -= 1;
+  const isEmpty = below.every(({ cells }) => cells.slice(width).every((cell) => cell.trim() === ""));
+  return isEmpty ? headers.slice(0, width) : headers;
+}
+
+interface Parts {
+  readonly header: FoundHeader;
+  readonly below: readonly CsvRecord[];
+  readonly columns: readonly RecognisedColumn[];
+  readonly delimiter: Dialect["delimiter"];
+}
+
+/** The file's dialect, told where it is not the plain one; undefined where its decimal sign must be asked for. */
+function dialectOf(
+  { encoding, isTaken }: DecodedText,
+  records: readonly CsvRecord[],
+  { header, below, columns, delimiter }: Parts,
+  source: SheetSource,
+): Dialect | undefined {
+  const { file, declared, table, problems } = source;
+  const rows = below.map(({ cells }) => cells);
+  const sign =
+    declared.decimal === undefined
+      ? decimalSign(rows, columns, { table, delimiter })
+      : { kind: "decided" as const, decimal: declared.decimal };
+  if (sign.kind === "ambiguous") {
+    problems.add("decimal-ambiguous", { file, found: sign.found, detail: settingName(file) });
+    return undefined;
+  }
+  const dialect = {
+    encoding,
+    delimiter,
+    decimal: sign.decimal,
+    missing: declared.missing ?? [],
+    headerRows: records.slice(header.from, header.below).map(({ row }) => row),
+    notes: records.slice(0, header.from),
+  };
+  tellDialect(dialect, { file, declared, isEncodingTaken: isTaken, problems });
+  return dialect;
+}
+
+function hintsOf(columns: readonly RecognisedColumn[]): ReadonlyMap<string, HeaderHint> {
   const hints = new Map<string, HeaderHint>();
   for (const { column, header, axis, unit, bracket } of columns) {
     if (column !== undefined) hints.set(column, { header, axis, unit, bracket });
   }
-  return { sheet, hints };
+  return hints;
 }
 
-function isWhole({ headers, rows, faults }: CsvRecords, { file, problems }: SheetSource): boolean {
-  const unclosed = faults.find(({ code }) => code === "unclosed-quote");
-  const delimiter = otherDelimiter(headers);
-  if (headers.length === 0) problems.add("empty-file", { file, found: "an empty file" });
-  else if (unclosed) problems.add("unclosed-quote", { file, row: unclosed.row, found: '"' });
-  else if (delimiter !== undefined) {
-    problems.add("wrong-delimiter", { file, found: headers.join(","), detail: delimiter });
-  } else if (rows.length === 0) problems.add("header-only", { file, found: "a header row alone" });
-  else return true;
-  return false;
-}
-
-/** Tells every column that is missing, doubled, unknown or of unknown unit; false where the file cannot be used. */
-function areColumnsSound(columns: readonly RecognisedColumn[], source: SheetSource): boolean {
-  const { file, table, problems } = source;
-  const seen = new Set<string>();
-  let isSound = true;
-  for (const recognised of columns) {
-    const { header, column } = recognised;
-    if (column === undefined) tellUnused(header, source);
-    else if (seen.has(column)) {
-      problems.add("duplicate-header", { file, row: 1, column: header, found: header });
-      isSound = false;
-    }
-    const expected = unitsExpected(recognised, table);
-    if (expected !== undefined) {
-      const found = recognised.bracket ?? "";
-      const nearest = suggestName(found, expected);
-      const place = { file, row: 1, column: header, found };
-      problems.add("unknown-unit", { ...place, detail: expected.join(", "), nearest });
-      isSound = false;
-    }
-    if (column !== undefined) seen.add(column);
-  }
-  return tellMissing(columns, source) && isSound;
-}
-
-/** The units that a header's column can have, where the one written is none of them. */
-function unitsExpected(
-  { column, bracket }: RecognisedColumn,
-  table: TableDeclaration,
-): readonly string[] | undefined {
-  const unit = column === undefined ? undefined : table.columns[column].unit;
-  if (unit === undefined || bracket === undefined) return undefined;
-  if (unit === "section") return lengthUnits;
-  return isFixedUnit(bracket, unit) ? undefined : [unit];
-}
-
-function tellUnused(header: string, { file, table, problems }: SheetSource): void {
-  const name = header.trim();
-  if (name === "") problems.add("blank-header", { file, row: 1, found: "a blank cell" });
-  else if (!table.furtherColumns) {
-    const nearest = suggestName(name, Object.keys(table.columns));
-    problems.add("unknown-column", { file, row: 1, column: name, found: name, nearest });
-  }
-}
-
-function tellMissing(columns: readonly RecognisedColumn[], { file, table, problems }: SheetSource): boolean {
-  const found = new Set(columns.flatMap(({ column }) => column ?? []));
-  const hasUnitInHeader = columns.some(({ column, bracket }) => column === "value" && bracket !== undefined);
-  const missing = Object.entries(table.columns)
-    .filter(([name, { required }]) => required && !found.has(name) && !(name === "unit" && hasUnitInHeader))
-    .map(([name]) => name);
-  const isOneOfMet =
-    table.oneOf === undefined || table.oneOf.some((set) => set.every((name) => found.has(name)));
-  if (!isOneOfMet) missing.push((table.oneOf ?? []).map((set) => set.join(" and ")).join(", or "));
-  const unused = columns.filter(({ column }) => column === undefined).map(({ header }) => header);
-  for (const detail of missing) {
-    problems.add("missing-column", {
-      file,
-      row: 1,
-      found: columns.map(({ header }) => header).join(","),
-      detail,
-      nearest: suggestName(detail, unused),
-    });
-  }
-  return missing.length === 0;
-}
-
-function sheetOf(records: CsvRecords, columns: readonly RecognisedColumn[], source: SheetSource) {
-  const { file, table, problems } = source;
-  if (hasDecimalComma(records, columns, table)) {
-    problems.add("decimal-comma", { file, found: firstDecimalComma(records, columns, table) });
-    return undefined;
-  }
-  const malformed = new Set(records.faults.map(({ row }) => row));
+/** The cells below the header; rows that cannot be parted rightly are told and left out. */
+function cellsOf(
+  below: readonly CsvRecord[],
+  columns: readonly RecognisedColumn[],
+  { faults }: CsvRecords,
+  source: SheetSource,
+) {
+  const malformed = new Set(faults.map(({ row }) => row));
   const rows: string[][] = [];
   const rowNumbers: number[] = [];
-  for (const [index, cells] of records.rows.entries()) {
-    const row = records.rowNumbers[index];
-    if (malformed.has(row)) problems.add("malformed-quote", { file, row, found: cells.join(",") });
-    else if (isOfWidth(cells, row, { width: columns.length, source })) {
+  for (const { cells, row } of below) {
+    if (malformed.has(row)) {
+      source.problems.add("malformed-quote", { file: source.file, row, found: cells.join(",") });
+    } else if (isOfWidth(cells, row, { width: columns.length, source })) {
       rows.push(columns.map(({ header }, at) => takeOff(cells[at] ?? "", header, source)));
       rowNumbers.push(row);
     }
   }
-  const declared = columns.map(({ column }) => column);
-  return { file, table: table.name, headers: records.headers, columns: declared, rows, rowNumbers };
+  return { rows, rowNumbers };
 }
 
 const takeOff = (cell: string, header: string, { guarded }: SheetSource): string =>
@@ -158,36 +188,4 @@ function isOfWidth(
   if (cells.length < width)
     problems.add("too-few-cells", { file, row, found: `${cells.length} cells`, detail });
   return true;
-}
-
-/** The cells of columns that hold numbers. */
-function* numberCells({ rows }: CsvRecords, columns: readonly RecognisedColumn[], table: TableDeclaration) {
-  const indices = columns.flatMap(({ column }, index) => {
-    const type = column === undefined ? undefined : table.columns[column].type;
-    return type === "number" || type === "integer" || column === "value" ? [index] : [];
-  });
-  for (const cells of rows) for (const index of indices) yield cells[index] ?? "";
-}
-
-/** Decided per file: commas as decimal signs, and no number with a decimal point. */
-function hasDecimalComma(
-  records: CsvRecords,
-  columns: readonly RecognisedColumn[],
-  table: TableDeclaration,
-): boolean {
-  let hasComma = false;
-  for (const cell of numberCells(records, columns, table)) {
-    if (isDecimalComma(cell)) hasComma = true;
-    else if (cell.includes(".") && typeof parseNumber(cell) === "number") return false;
-  }
-  return hasComma;
-}
-
-function firstDecimalComma(
-  records: CsvRecords,
-  columns: readonly RecognisedColumn[],
-  table: TableDeclaration,
-): string {
-  for (const cell of numberCells(records, columns, table)) if (isDecimalComma(cell)) return cell;
-  return "";
 }

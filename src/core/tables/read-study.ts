@@ -1,22 +1,26 @@
 import { assembleStudy } from "../study/assembly/assemble-study.ts";
 import type { ReadSheet } from "../study/assembly/context.ts";
 import type { Study } from "../study/model.ts";
-import { suggestName } from "../study/nearest.ts";
 import type { Problem } from "../study/problem.ts";
 import { type ProblemList, problemList } from "../study/problem-list.ts";
 import { readSettings } from "../study/read-settings.ts";
 import { mergeSettings } from "../study/setting-path.ts";
 import type { Settings } from "../study/settings.ts";
-import { type TableName, tables } from "../study/tables/index.ts";
+import type { TableName } from "../study/tables/index.ts";
+import { baseName } from "./base-name.ts";
 import { decodeText } from "./csv.ts";
 import { type DescribedPackage, readDataPackage } from "./data-package.ts";
-import { readSheet } from "./read-sheet.ts";
+import { readSheets } from "./read-sheets.ts";
 
 export interface ReadStudyOptions {
   /** The study's name where datapackage.json gives no title; absent: the folder of the files, else "study". */
   readonly name?: string;
   /** Settings that stand over those of settings.json, in the same form. */
   readonly settings?: unknown;
+  /** The files as they were given, where those read were unpacked from them; they become the study's files. */
+  readonly originals?: ReadonlyMap<string, Uint8Array>;
+  /** What unpacking met. */
+  readonly problems?: readonly Problem[];
 }
 
 /**
@@ -30,7 +34,7 @@ export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadS
   const problems = problemList();
   const settings = settingsOf(files, options.settings, problems);
   const described = packageOf(files, problems);
-  const sheets = readSheets(files, described, problems);
+  const sheets = readSheets(files, { settings, described, problems });
   const assembly = { settings, problems, sheets };
   const assembled = assembleStudy(assembly);
   if (!hasData(sheets)) problems.add("no-data", { file: "study", found: "none of them can be used" });
@@ -38,9 +42,12 @@ export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadS
     name: described.title ?? options.name ?? folderOf(files) ?? "study",
     settings,
     ...assembled,
-    problems: problems.problems().map((problem) => asWritten(problem, sheets)),
+    problems: [
+      ...(options.problems ?? []),
+      ...problems.problems().map((problem) => asWritten(problem, sheets)),
+    ],
     sheets: [...sheets.values()].map(({ sheet }) => sheet),
-    files: [...files].map(([name, bytes]) => ({ name, bytes })),
+    files: [...(options.originals ?? files)].map(([name, bytes]) => ({ name, bytes })),
   };
 }
 
@@ -50,8 +57,6 @@ function asWritten(problem: Problem, sheets: ReadonlyMap<TableName, ReadSheet>):
   const place = problem.column === undefined ? -1 : (sheet?.columns.indexOf(problem.column) ?? -1);
   return place < 0 ? problem : { ...problem, column: sheet?.headers[place] };
 }
-
-const baseName = (path: string): string => path.split(/[/\\]/).at(-1) ?? path;
 
 function folderOf(files: ReadonlyMap<string, Uint8Array>): string | undefined {
   const folders = new Set([...files.keys()].map((path) => path.split(/[/\\]/).at(-2)));
@@ -83,60 +88,34 @@ function parseSettings(file: string, bytes: Uint8Array, problems: ProblemList): 
   }
 }
 
+const nothingDescribed: DescribedPackage = { apostrophes: new Map(), resources: new Map(), unread: [] };
+
 function packageOf(files: ReadonlyMap<string, Uint8Array>, problems: ProblemList): DescribedPackage {
   const [path, bytes] = find(files, "datapackage.json") ?? ["", undefined];
-  if (bytes === undefined) return { apostrophes: new Map() };
+  if (bytes === undefined) return nothingDescribed;
   const text = decodeText(bytes);
   const described = text === undefined ? undefined : readDataPackage(text);
   if (described === undefined)
     problems.add("package-unreadable", { file: path, found: text ?? "bytes that are not UTF-8" });
-  const apostrophes = [...(described?.apostrophes ?? [])].map(
-    ([file, columns]) => [baseName(file), columns] as const,
-  );
-  return { ...described, apostrophes: new Map(apostrophes) };
-}
-
-const companions =
-  /^(?:settings\.json|datapackage\.json|readme(?:\..*)?|licen[cs]e(?:\..*)?|citation\.cff|\..*)$/i;
-const tableFile = (name: string): string => `${name}.csv`;
-
-function tableNamed(file: string) {
-  const plain = file.toLowerCase().replace(/[\s_]+/g, "-");
-  return tables.find(({ name }) => plain === tableFile(name));
-}
-
-function readSheets(
-  files: ReadonlyMap<string, Uint8Array>,
-  { apostrophes }: DescribedPackage,
-  problems: ProblemList,
-): ReadonlyMap<TableName, ReadSheet> {
-  const sheets = new Map<TableName, ReadSheet>();
-  const first = new Map<TableName, string>();
-  for (const [path, bytes] of files) {
-    const file = baseName(path);
-    const table = tableNamed(file);
-    if (!table) {
-      tellUnknown(path, problems);
-      continue;
-    }
-    const earlier = first.get(table.name);
-    if (earlier !== undefined) {
-      problems.add("duplicate-table", { file: path, found: file, detail: earlier });
-      continue;
-    }
-    first.set(table.name, path);
-    const read = readSheet({ file, bytes, table, guarded: apostrophes.get(file) ?? new Set(), problems });
-    if (read) sheets.set(table.name, read);
+  if (described === undefined) return nothingDescribed;
+  for (const { path: unread, reason } of described.unread)
+    problems.add("resource-unread", { file: path, found: unread, detail: reason });
+  const present = new Set([...files.keys()].map(baseName));
+  for (const [file, { name }] of described.resources) {
+    const isOwnTemplate = file === `${name}.csv`; // a study need not hold every table
+    if (!present.has(baseName(file)) && !isOwnTemplate)
+      problems.add("resource-unread", {
+        file: path,
+        found: file,
+        detail: "the file is not among those given",
+      });
   }
-  return sheets;
+  return {
+    ...described,
+    apostrophes: byBaseName(described.apostrophes),
+    resources: byBaseName(described.resources),
+  };
 }
 
-function tellUnknown(path: string, problems: ProblemList): void {
-  const file = baseName(path);
-  if (companions.test(file)) return;
-  const nearest = suggestName(
-    file,
-    tables.map(({ name }) => tableFile(name)),
-  );
-  problems.add("unknown-file", { file: path, found: file, nearest });
-}
+const byBaseName = <T>(byPath: ReadonlyMap<string, T>): ReadonlyMap<string, T> =>
+  new Map([...byPath].map(([path, value]) => [baseName(path), value]));

@@ -1,4 +1,4 @@
-import { parseCell } from "../cells.ts";
+import { type ParsedCell, parseCell, withDecimalPoint } from "../cells.ts";
 import { suggestName } from "../nearest.ts";
 import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";
@@ -99,7 +99,7 @@ const isToldElsewhere = (place: CellPlace): boolean =>
 
 function readCell(text: string, column: ColumnDeclaration, place: CellPlace) {
   const { name, row, file, assembly } = place;
-  const parsed = parseCell(text, column);
+  const parsed = parseWritten(text, column, place);
   if ("code" in parsed) {
     const nearest = parsed.code === "not-in-list" ? suggestName(text.trim(), column.values ?? []) : undefined;
     assembly.problems.add(parsed.code, {
@@ -120,6 +120,16 @@ function readCell(text: string, column: ColumnDeclaration, place: CellPlace) {
     value: parsed.value ?? (isToldElsewhere(place) && column.required ? "" : undefined),
     isGood: true,
   };
+}
+
+/** The cell as its column and the file's dialect say. */
+function parseWritten(text: string, column: ColumnDeclaration, { name, read }: CellPlace): ParsedCell {
+  const { decimal, missing } = read.sheet.dialect;
+  if (missing.includes(text)) return { value: undefined };
+  const isNumber = column.type === "number" || column.type === "integer" || name === "value";
+  if (decimal === "point" || !isNumber) return parseCell(text, column);
+  const pointed = withDecimalPoint(text);
+  return pointed === undefined ? { code: "not-a-number", detail: "comma" } : parseCell(pointed, column);
 }
 
 const hasOneOf = (table: TableDeclaration, values: ReadonlyMap<string, unknown>): boolean =>

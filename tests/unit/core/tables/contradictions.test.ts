@@ -4,6 +4,17 @@ import { lines, problemsOf, sections, studyFrom } from "./study-files.ts";
 const finds = (...rows: readonly string[]) => lines("section,taxon,position", ...rows);
 const horizonsOf = (...rows: readonly string[]) => lines("section,horizon,kind,position", ...rows);
 
+const taxaOf = (...rows: readonly string[]) =>
+  studyFrom({ "taxa.csv": lines("taxon,group,accepted", ...rows) });
+const measured = (value: string, unit = "ng/g", limit = "") =>
+  studyFrom({
+    "sections.csv": sections,
+    "measurements.csv": lines(
+      "section,analyte,value,unit,position,detection_limit",
+      `Orskel Ledge,iridium,${value},${unit},1,${limit}`,
+    ),
+  });
+
 describe("two impact horizons", () => {
   const two = {
     "sections.csv": sections,
@@ -77,8 +88,6 @@ describe("rock, legs and names that contradict each other", () => {
   });
 
   it("synonyms that accept each other in a circle are told; a chain is none", () => {
-    const taxaOf = (...rows: readonly string[]) =>
-      studyFrom({ "taxa.csv": lines("taxon,group,accepted", ...rows) });
     const circle = taxaOf("Velor a,g,Velor b", "Velor b,g,Velor a");
     expect(problemsOf(circle, "accepted-circle")).toMatchObject([
       { row: 2, found: "Velor b (and 1 more row)" },
@@ -104,15 +113,6 @@ describe("rock, legs and names that contradict each other", () => {
 });
 
 describe("contents that rock cannot have", () => {
-  const measured = (value: string, unit = "ng/g", limit = "") =>
-    studyFrom({
-      "sections.csv": sections,
-      "measurements.csv": lines(
-        "section,analyte,value,unit,position,detection_limit",
-        `Orskel Ledge,iridium,${value},${unit},1,${limit}`,
-      ),
-    });
-
   it.each([
     ["1e300", "ng/g", ""],
     ["101", "wt%", ""],

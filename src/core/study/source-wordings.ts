@@ -1,0 +1,85 @@
+import { caution, error, nearest, type Wording } from "./wording.ts";
+
+/** Wordings of what is wrong with a whole file, its dialect or its header, by code. */
+export const sourceWordings = {
+  "empty-file": () =>
+    error("a header row and at least one row", "Fill the file in, or take it out of the study."),
+  "header-only": () =>
+    error("at least one row below the header", "Add rows, or take the file out of the study."),
+  "undecodable-bytes": () =>
+    error(
+      "text in UTF-8, UTF-16 with a byte-order mark, or Windows-1252",
+      "Save the file again as CSV UTF-8 (in a spreadsheet: Save as, CSV UTF-8).",
+    ),
+  "file-too-large": (p) =>
+    error(`a file of at most ${p.detail}`, "Part the table into several studies, or thin it out."),
+  "too-many-columns": (p) =>
+    error(`at most ${p.detail} columns`, "Take the columns out that the study does not need."),
+  "read-as": (p) =>
+    caution(
+      "comma-separated UTF-8 with a decimal point and the header in row 1",
+      `It was read as found; where that is wrong, say what is right under tables.${p.detail} in the settings (decimal, delimiter, encoding).`,
+    ),
+  "read-as-windows-1252": (p) =>
+    caution(
+      "text in UTF-8",
+      `It was read as Windows-1252: look at its accented letters, or save it as CSV UTF-8. Settle it with tables.${p.detail}.encoding.`,
+    ),
+  "notes-above": (p) =>
+    caution(
+      `the header in row 1`,
+      `The header was found in row ${p.detail}; what stands above is kept, not used.`,
+    ),
+  "decimal-ambiguous": (p) =>
+    error(
+      "a number that can be read in one way",
+      `The sign in ${p.found} can part decimals or thousands. Set tables.${p.detail}.decimal to point or comma (and take signs between thousands out).`,
+    ),
+  "taken-as": (p) =>
+    caution(
+      "a file named as its table",
+      `By its columns it was taken to be ${p.detail}; name it ${p.detail}.csv, or set tables.${p.nearest}.table, if it is another.`,
+    ),
+  "resource-unread": (p) =>
+    caution("a resource that can be read", `It is not used as the data package says: ${p.detail}.`),
+  "table-setting-unused": (p) =>
+    caution("a file of the study under tables", `No file is named so; correct the name.${nearest(p)}`),
+  "unclosed-quote": () =>
+    error(
+      "every opening quote to be closed",
+      "Close the quote that opens here; a quote inside a cell is written twice.",
+    ),
+  "malformed-quote": () =>
+    error(
+      "quotes only around a whole cell",
+      "Put the whole cell in quotes and write a quote inside it twice.",
+    ),
+  "too-many-cells": (p) =>
+    error(
+      `${p.detail ?? "as many"} cells, as in the header`,
+      "Put a cell that holds the sign between cells in quotes, or take the further cells out.",
+    ),
+  "too-few-cells": (p) =>
+    caution(
+      `${p.detail ?? "as many"} cells, as in the header`,
+      "The cells that lack at the end are read as blank; fill them in if they should not be.",
+    ),
+  "duplicate-header": () =>
+    error("each column once", "Rename or take out one of the two columns that were read as the same."),
+  "missing-column": (p) =>
+    error(
+      `a column ${p.detail}`,
+      `Add the column ${p.detail}, or name the one that holds it so.${nearest(p)}`,
+    ),
+  "unknown-column": (p) => caution("a declared column", `The column is kept and not used.${nearest(p)}`),
+  "blank-header": () => caution("a name above every column", "Name the column; it is kept and not used."),
+  "duplicate-table": (p) =>
+    error("one file for each table", `${p.detail} was read already; put the rows into one file.`),
+  "unknown-file": (p) =>
+    caution(
+      "a table of the study",
+      `The file is kept and not used.${p.detail === undefined ? "" : ` It could be ${p.detail}: name it so.`}${nearest(p)}`,
+    ),
+  "no-data": () =>
+    error("occurrences.csv, published-ranges.csv or measurements.csv", "Add at least one of these tables."),
+} satisfies Record<string, Wording>;

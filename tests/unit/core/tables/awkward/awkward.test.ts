@@ -1,0 +1,27 @@
+import { describe, expect, it } from "vitest";
+import { readStudy } from "../../../../../src/core/tables/read-study.ts";
+import { bytesOf } from "./awkward-file.ts";
+import { dialects } from "./dialects.ts";
+
+/** What any study of few finds is told. */
+const usual = new Set(["one-occurrence", "one-level", "ungrouped", "searches-derived"]);
+
+describe("awkward files", () => {
+  it.each(dialects)("$title", ({ files, settings, finds, told }) => {
+    const study = readStudy(
+      new Map(Object.entries(files).map(([name, content]) => [name, bytesOf(content)])),
+      {
+        settings,
+      },
+    );
+    const found = study.sections.flatMap((section) =>
+      section.occurrences.map(({ verbatim, heightM }) => [
+        section.name,
+        verbatim,
+        Number(heightM.toFixed(9)),
+      ]),
+    );
+    expect(study.problems.map(({ code }) => code).filter((code) => !usual.has(code))).toEqual(told);
+    expect(found).toEqual(finds);
+  });
+});
