@@ -27,6 +27,7 @@ const isSystemError = (error: unknown): error is SystemError =>
   error instanceof Error && "syscall" in error && "code" in error && typeof error.code === "string";
 
 const reasons: Readonly<Record<string, string>> = {
+  ENOENT: "there is no such file",
   EACCES: "the system does not allow it",
   EPERM: "the system does not allow it",
   EROFS: "the disk is read-only",

@@ -1,5 +1,6 @@
 import { readdir, readFile, stat } from "node:fs/promises";
 import { basename, join, resolve } from "node:path";
+import { tables } from "../core/study/tables/index.ts";
 import { CallError } from "./call-error.ts";
 
 export interface StudyOnDisk {
@@ -16,12 +17,13 @@ export async function readStudyFiles(path: string): Promise<StudyOnDisk> {
   if (!found.isDirectory()) return readSingleTable(path, name);
   const entries = await readdir(path, { withFileTypes: true });
   const names = entries
-    .filter((entry) => entry.isFile() && !entry.name.startsWith("."))
+    .filter((entry) => (entry.isFile() || entry.isSymbolicLink()) && !entry.name.startsWith("."))
     .map((entry) => entry.name)
+    .filter((file) => isStudyFile(file) || isTableElsewise(file))
     .toSorted();
   const files = new Map<string, Uint8Array>();
-  for (const file of names) if (isStudyFile(file)) files.set(file, await readFile(join(path, file)));
-  if (files.size === 0)
+  for (const file of names) files.set(file, await readFile(join(path, file)));
+  if (!names.some(isStudyFile))
     throw new CallError(
       `lastbed: expected tables (.csv) in ${path}, got none; \`lastbed new <folder>\` writes templates to fill in`,
     );
@@ -35,3 +37,9 @@ async function readSingleTable(path: string, name: string): Promise<StudyOnDisk>
 }
 
 const isStudyFile = (name: string) => /\.(?:csv|json)$/i.test(name);
+
+/** A table kept in another form, which reading must name rather than pass over. */
+function isTableElsewise(file: string): boolean {
+  const [, stem] = /^(.+)\.(?:tsv|tab|txt|xlsx?|ods)$/i.exec(file) ?? [];
+  return stem !== undefined && tables.some(({ name }) => name === stem.toLowerCase().replace(/[\s_]+/g, "-"));
+}

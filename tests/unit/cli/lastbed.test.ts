@@ -6,6 +6,7 @@ import {
   readdirSync,
   readFileSync,
   rmSync,
+  symlinkSync,
   writeFileSync,
 } from "node:fs";
 import { join } from "node:path";
@@ -71,6 +72,17 @@ describe("new and check", () => {
     expect(version).toMatch(/^\d+\.\d+\.\d+$/);
     expect(problems.filter((p: { severity: string }) => p.severity === "error")).toEqual([]);
     expect(lastbed("new", folder).status).toBe(2);
+  });
+
+  it("a table behind a link is read, and one kept in another form is named", () => {
+    const [folder, study] = [smallStudy(), freshFolder()];
+    for (const file of ["occurrences.csv", "horizons.csv"])
+      symlinkSync(join(folder, file), join(study, file));
+    writeFileSync(join(study, "Samples.xlsx"), "a workbook");
+    const { stdout } = lastbed("check", study, "--json");
+    const { summary, problems } = JSON.parse(stdout);
+    expect(summary.sections).toMatchObject([{ section: "Orskel Ledge", occurrences: 12 }]);
+    expect(problems).toContainEqual(expect.objectContaining({ file: "Samples.xlsx" }));
   });
 
   it("errors are told with file, row, column and a way to mend them, and exit 1", () => {
