@@ -34,7 +34,11 @@ export type LegendSign =
         | "limit"
         | "background"
         | "curve"
-        | "density";
+        | "density"
+        | "level-limit"
+        | "normal"
+        | "reversed"
+        | "unknown-polarity";
     };
 
 export const SWATCH_WIDTH = 16;
@@ -47,6 +51,7 @@ interface LegendSwatchProps {
   readonly sign: LegendSign;
 }
 
+const POLARITY_FILLS = { normal: COLOURS.ink, reversed: COLOURS.paper, "unknown-polarity": COLOURS.band };
 const box = boxPath(0, 0, SWATCH_WIDTH, SWATCH_HEIGHT);
 const middleX = SWATCH_WIDTH / 2;
 const middleY = SWATCH_HEIGHT / 2;
@@ -72,6 +77,19 @@ function swatch(plateId: string, sign: LegendSign): ReactElement {
           {...contactStroke(sign.contact)}
         />
       );
+    case "level-limit":
+      return (
+        <path
+          d={`M${middleX} 0V${SWATCH_HEIGHT}`}
+          stroke={COLOURS.soft}
+          strokeWidth={0.5}
+          strokeDasharray="2 1.5"
+        />
+      );
+    case "normal":
+    case "reversed":
+    case "unknown-polarity":
+      return <path d={box} fill={POLARITY_FILLS[sign.kind]} stroke={COLOURS.ink} strokeWidth={0.45} />;
     case "found":
       return <path d={filledTick(middleX - 3.5, middleY)} fill={sign.colour} />;
     case "barren":

@@ -106,14 +106,29 @@ function linearScale({ points, kind, background }: AnalyteSeries, width: number)
   return linearColumn([startsAtZero ? Math.min(0, low) : low - room, high + room], width);
 }
 
-type ValueSign = "value" | "anomaly" | "limit" | "background" | "curve";
+type ValueSign =
+  | "value"
+  | "anomaly"
+  | "limit"
+  | "background"
+  | "curve"
+  | "normal"
+  | "reversed"
+  | "unknown-polarity";
 
 function entry(kind: ValueSign, label: string): LegendEntry {
   return { sign: { kind }, label };
 }
 
 function analyteLegend({ points, background, curves, analyte }: AnalyteSeries): readonly LegendEntry[] {
-  if (analyte === "polarity") return [];
+  if (analyte === "polarity")
+    return points.length === 0
+      ? []
+      : [
+          entry("normal", "normal polarity"),
+          entry("reversed", "reversed"),
+          entry("unknown-polarity", "polarity unknown"),
+        ];
   return [
     ...(points.length > 0 ? [entry("value", "measured")] : []),
     ...(points.some((point) => point.isAnomaly) ? [entry("anomaly", "above background")] : []),

@@ -5,7 +5,7 @@ import { PATTERN_CREDIT } from "../lithology/lithology-legend.ts";
 import { PATTERN_TILES, type PatternId } from "../lithology/pattern-tiles.ts";
 import { Plate } from "../plate.tsx";
 import { PlateText } from "../plate-text.tsx";
-import { fitText, wrapText } from "../text.ts";
+import { fitText, textWidth, wrapText } from "../text.ts";
 import { COLOURS, TEXT } from "../theme.ts";
 import type { Drawing, Panel, View } from "./drawing.ts";
 import type { PlacedColumn } from "./plate-columns.ts";
@@ -34,11 +34,14 @@ export interface SheetParts {
 }
 
 const NARROWEST = 300;
+/** A sheet grows to hold its subtitle, up to this. */
+const WIDEST_SUBTITLE = 420;
 
 /** Title above, legend, notes and credits beneath: a drawing that can be published as it stands. */
 export function setSheet(parts: SheetParts): Drawing {
   const { id, title, description, columns = [], panels, view } = parts;
-  const width = Math.max(parts.right + MARGIN, NARROWEST);
+  const subtitleWidth = Math.min(textWidth(parts.subtitle, TEXT.unit) + 1, WIDEST_SUBTITLE);
+  const width = Math.max(parts.right + MARGIN, NARROWEST, subtitleWidth + 2 * MARGIN);
   const room = width - 2 * MARGIN;
   const patterns = [
     ...new Set([...columns.flatMap((column) => column.patterns ?? []), ...(parts.patterns ?? [])]),

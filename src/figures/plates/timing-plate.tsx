@@ -163,14 +163,29 @@ function levelColumn(
           ifOne={ifOne[0]}
         />
       ),
-      legend: levelLegend(points.length > 0, ifOne.length > 0, joint.length > 0),
+      legend: levelLegend({
+        limit,
+        hasCurve: points.length > 0,
+        hasIfOne: ifOne.length > 0,
+        hasJoint: joint.length > 0,
+      }),
     },
   ];
 }
 
-function levelLegend(hasCurve: boolean, hasIfOne: boolean, hasJoint: boolean): readonly LegendEntry[] {
+interface LevelSigns {
+  /** The p below which a level is refuted. */
+  readonly limit: number;
+  readonly hasCurve: boolean;
+  readonly hasIfOne: boolean;
+  readonly hasJoint: boolean;
+}
+
+function levelLegend({ limit, hasCurve, hasIfOne, hasJoint }: LevelSigns): readonly LegendEntry[] {
+  const limitWords = `p = ${Number(limit.toPrecision(3))}`;
   return [
     ...(hasCurve ? [{ sign: { kind: "density" }, label: "p that all ended at this level" } as const] : []),
+    ...(hasCurve ? [{ sign: { kind: "level-limit" }, label: limitWords } as const] : []),
     ...(hasIfOne ? [{ sign: { kind: "set-if-one" }, label: "where, if there was one level" } as const] : []),
     ...(hasJoint ? [{ sign: { kind: "set-joint" }, label: "levels not excluded" } as const] : []),
   ];
