@@ -25,11 +25,12 @@ export function FocusLine(): ReactElement {
 function Focused({ analysis, focus }: { readonly analysis: Analysis; readonly focus: Focus }): ReactElement {
   const { go } = usePage();
   const { sections } = analysis.study;
+  const horizon = horizonName(analysis, focus);
   const isFence = focus.station === "fence";
   return (
     <>
       <Picker
-        label={isFence ? `All ${sections.length} sections, reading in` : "Section"}
+        label={isFence && sections.length > 1 ? `All ${sections.length} sections, reading in` : "Section"}
         value={focus.section?.name ?? ""}
         choices={sections.map(({ name, title }) => ({ value: name, title }))}
         choose={(section) => go({ section })}
@@ -37,8 +38,10 @@ function Focused({ analysis, focus }: { readonly analysis: Analysis; readonly fo
       <span className={styles.item}>
         <span className={styles.label}>Main horizon</span>
         <span className={styles.horizon}>
-          <span aria-hidden="true" className={styles.sign} />
-          {horizonWords(analysis, focus)}
+          {horizon !== undefined && <span aria-hidden="true" className={styles.sign} />}
+          <span className={styles.horizonName} title={horizon}>
+            {horizon ?? "not placed here"}
+          </span>
         </span>
       </span>
       <Picker
@@ -60,8 +63,8 @@ function Focused({ analysis, focus }: { readonly analysis: Analysis; readonly fo
   );
 }
 
-function horizonWords(analysis: Analysis, { section }: Focus): string {
+function horizonName(analysis: Analysis, { section }: Focus): string | undefined {
   const here = section && analysis.markers.main.bySection.get(section.name);
-  if (here === undefined) return "not placed here";
+  if (here === undefined) return undefined;
   return analysis.markers.main.name ?? here.name;
 }

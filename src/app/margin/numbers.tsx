@@ -9,19 +9,15 @@ export function Numbers({ lines }: { readonly lines: readonly NumberLine[] }): R
   return (
     <section className={styles.part}>
       <h2>Numbers</h2>
-      <table className={styles.numbers}>
-        <tbody>
-          {lines.map(({ label, value, note }, place) => (
-            <tr key={`${place} ${label}`}>
-              <th scope="row">
-                {label}
-                {note && <small>{note}</small>}
-              </th>
-              <td className={value.length <= LONGEST_ON_ONE_LINE ? styles.short : undefined}>{value}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      <dl className={styles.numbers}>
+        {lines.map(({ label, value, note }, place) => (
+          <div key={`${place} ${label}`}>
+            <dt>{label}</dt>
+            <dd className={value.length <= LONGEST_ON_ONE_LINE ? styles.short : undefined}>{value}</dd>
+            {note && <dd className={styles.note}>{note}</dd>}
+          </div>
+        ))}
+      </dl>
     </section>
   );
 }

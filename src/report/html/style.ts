@@ -23,7 +23,7 @@ th{font-weight:600}
 .weaknesses li{padding:2px 0 2px 22px;position:relative}
 .weaknesses .sign{position:absolute;left:0;color:var(--soft)}
 .weaknesses .warning .sign{color:var(--rust)}
-figure{margin:18px 0;background:var(--paper);border:1px solid var(--hair);overflow-x:auto}
+figure{margin:18px 0;width:fit-content;max-width:100%;background:var(--paper);border:1px solid var(--hair);overflow-x:auto}
 figure svg{display:block;max-width:none}
 figcaption{padding:10px 16px;border-top:1px solid var(--hair);font-size:13px;position:sticky;left:0}
 .methods div{margin:0 0 10px}
@@ -44,5 +44,5 @@ code{font-size:.93em;overflow-wrap:anywhere}
 @page{size:A4;margin:14mm}
 @page plate{size:A4 landscape;margin:10mm}
 @media(max-width:700px){header,main{padding:16px}.numbers th,.numbers td{padding-right:8px}}
-@media print{body{background:none}header,main{padding:0}nav,details:not(.group),.files{display:none}.of-section>h2{break-before:page}h2,h3,h4,.sentence{break-after:avoid}figure,tr,.weaknesses li{break-inside:avoid}figure{page:plate;margin:0;border:0;overflow:visible}figure svg{max-width:100%;max-height:168mm;height:auto;margin:0 auto}}
+@media print{body{background:none}header,main{padding:0}nav,details:not(.group),.files{display:none}.of-section>h2{break-before:page}h2,h3,h4,.sentence{break-after:avoid}figure,tr,.weaknesses li{break-inside:avoid}figure{page:plate;margin:0;width:auto;border:0;overflow:visible}figure svg{max-width:100%;max-height:168mm;height:auto;margin:0 auto}}
 `;
