@@ -1,6 +1,7 @@
 import { readdir, readFile, stat } from "node:fs/promises";
-import { basename, join, resolve } from "node:path";
+import { basename, join, posix, resolve } from "node:path";
 import { tables } from "../core/study/tables/index.ts";
+import { readDataPackage } from "../core/tables/data-package.ts";
 import { CallError } from "./call-error.ts";
 
 export interface StudyOnDisk {
@@ -8,38 +9,91 @@ export interface StudyOnDisk {
   readonly files: ReadonlyMap<string, Uint8Array>;
 }
 
-/** Reads a study as it lies on disk: a folder of tables, or a single table. Nothing is interpreted here. */
+/** No file larger than this is taken into memory. */
+const MOST_BYTES = 2 ** 30;
+
+/** Reads a study as it lies on disk: a folder of tables, or one table, workbook or archive. Nothing is interpreted here. */
 export async function readStudyFiles(path: string): Promise<StudyOnDisk> {
   const found = await stat(path).catch(() => undefined);
   if (found === undefined)
     throw new CallError(`lastbed: expected a study folder or table, got ${path}, which does not exist`);
   const name = basename(resolve(path));
-  if (!found.isDirectory()) return readSingleTable(path, name);
+  return found.isDirectory() ? readFolder(path, name) : readSingleFile(path, name);
+}
+
+async function readFolder(path: string, name: string): Promise<StudyOnDisk> {
   const entries = await readdir(path, { withFileTypes: true });
-  const names = entries
+  const present = entries
     .filter((entry) => (entry.isFile() || entry.isSymbolicLink()) && !entry.name.startsWith("."))
     .map((entry) => entry.name)
-    .filter((file) => isStudyFile(file) || isTableElsewise(file))
     .toSorted();
-  const files = new Map<string, Uint8Array>();
-  for (const file of names) files.set(file, await readFile(join(path, file)));
-  if (!names.some(isStudyFile))
+  const names = studyNames(present);
+  if (names.every((file) => /\.json$/i.test(file)))
     throw new CallError(
-      `lastbed: expected tables (.csv) in ${path}, got none; \`lastbed new <folder>\` writes templates to fill in`,
+      `lastbed: expected tables (.csv, .tsv, .xlsx) in ${path}, got none; \`lastbed new <folder>\` writes templates to fill in`,
     );
+  const files = new Map<string, Uint8Array>();
+  for (const file of names) files.set(file, await readWhole(join(path, file)));
+  for (const file of describedElsewhere(files)) {
+    const bytes = await readWhole(join(path, file)).catch(absent);
+    if (bytes !== undefined) files.set(file, bytes);
+  }
   return { name, files };
 }
 
-async function readSingleTable(path: string, name: string): Promise<StudyOnDisk> {
-  if (!isStudyFile(name))
-    throw new CallError(`lastbed: expected a folder of tables or one .csv table, got ${path}`);
-  return { name: name.replace(/\.csv$/i, ""), files: new Map([[name, await readFile(path)]]) };
+/** A resource that is not there is told when the study is read. */
+function absent(error: unknown): undefined {
+  if (error instanceof CallError) throw error;
 }
 
-const isStudyFile = (name: string) => /\.(?:csv|json)$/i.test(name);
+async function readSingleFile(path: string, name: string): Promise<StudyOnDisk> {
+  if (!isStudyFile(name) && !isPacked(name))
+    throw new CallError(
+      `lastbed: expected a folder of tables, or one .csv, .tsv, .txt, .xlsx or .zip file, got ${path}`,
+    );
+  return { name: name.replace(/\.[a-z]+$/i, ""), files: new Map([[name, await readWhole(path)]]) };
+}
+
+async function readWhole(path: string): Promise<Uint8Array> {
+  const { size } = await stat(path);
+  if (size > MOST_BYTES)
+    throw new CallError(
+      `lastbed: expected files of at most 1 GiB, got ${path} of ${(size / 2 ** 30).toFixed(1)} GiB`,
+    );
+  return readFile(path);
+}
+
+const isStudyFile = (name: string) => /\.(?:csv|tsv|tab|json)$/i.test(name);
+const isPacked = (name: string) => /\.(?:txt|xlsx|xlsm|xls|ods|zip)$/i.test(name);
+
+/**
+ * The files of a folder that a study is read from: tables by their ending or name; the texts beside a meta.xml; where
+ * there is no table of its own, workbooks, texts and archives.
+ */
+function studyNames(present: readonly string[]): readonly string[] {
+  const isArchive = present.includes("meta.xml");
+  const hasTable = present.some((file) => isStudyFile(file) && !/\.json$/i.test(file));
+  return present.filter(
+    (file) =>
+      isStudyFile(file) ||
+      isTableElsewise(file) ||
+      (isArchive && /^meta\.xml$|\.txt$/i.test(file)) ||
+      (!hasTable && isPacked(file)),
+  );
+}
 
 /** A table kept in another form, which reading must name rather than pass over. */
 function isTableElsewise(file: string): boolean {
-  const [, stem] = /^(.+)\.(?:tsv|tab|txt|xlsx?|ods)$/i.exec(file) ?? [];
+  const [, stem] = /^(.+)\.(?:txt|xlsx?|ods)$/i.exec(file) ?? [];
   return stem !== undefined && tables.some(({ name }) => name === stem.toLowerCase().replace(/[\s_]+/g, "-"));
+}
+
+/** Files that a data package names and that were not read: those inside the folder. */
+function describedElsewhere(files: ReadonlyMap<string, Uint8Array>): readonly string[] {
+  const descriptor = files.get("datapackage.json");
+  const described =
+    descriptor === undefined ? undefined : readDataPackage(new TextDecoder().decode(descriptor));
+  return [...(described?.resources.keys() ?? [])]
+    .map((path) => posix.normalize(path))
+    .filter((path) => !posix.isAbsolute(path) && !path.startsWith("..") && !files.has(path));
 }

@@ -14,6 +14,7 @@ export {
 } from "./study/tables/index.ts";
 export { readWrittenCsv } from "./tables/csv.ts";
 export { type PackageResource, tableResource, writeDataPackage } from "./tables/data-package.ts";
+export { readSources } from "./tables/read-sources.ts";
 export { type ReadStudyOptions, readStudy } from "./tables/read-study.ts";
 export { studyTemplate } from "./tables/templates.ts";
 export { type CsvCell, type WrittenCsv, writeCsv } from "./tables/write-csv.ts";

@@ -2,7 +2,7 @@ import { Worker } from "node:worker_threads";
 import { analyseFrom } from "../core/analysis.ts";
 import { type SectionSurvey, settleMarkers } from "../core/markers/find-markers.ts";
 import type { Study } from "../core/study/model.ts";
-import { readStudy } from "../core/tables/read-study.ts";
+import { readSources } from "../core/tables/read-sources.ts";
 import { inlineRunner } from "./inline.ts";
 import type { AnalysisJob, Runner, Watch } from "./runner.ts";
 
@@ -27,7 +27,7 @@ export function nodeRunner(
   if (threads === 1) return inlineRunner;
   return {
     async analyse(job: AnalysisJob, { onProgress, signal }: Watch = {}) {
-      const study = readStudy(job.files, { name: job.name, settings: job.settings });
+      const study = await readSources(job.files, { name: job.name, settings: job.settings });
       const count = Math.min(threads, study.sections.length);
       const workers = Array.from({ length: count }, () => startThread(job));
       const stop = () => Promise.all(workers.map((worker) => worker.terminate()));

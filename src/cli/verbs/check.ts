@@ -1,4 +1,4 @@
-import { readStudy } from "../../core/tables/read-study.ts";
+import { readSources } from "../../core/tables/read-sources.ts";
 import { jobOf } from "../job.ts";
 import { hasErrors, problemCount, problemLines } from "../problem-lines.ts";
 import type { Screen } from "../screen.ts";
@@ -7,7 +7,7 @@ import type { VerbOptions } from "./verb.ts";
 /** Reads and validates a study, writes nothing; exit 1 on errors. */
 export async function check(path: string, options: VerbOptions, screen: Screen): Promise<number> {
   const { name, files, settings } = await jobOf(path, options);
-  const study = readStudy(files, { name, settings });
+  const study = await readSources(files, { name, settings });
   screen.say(`${study.name}: ${problemCount(study.problems)}`);
   screen.say(problemLines(study.problems));
   screen.document({

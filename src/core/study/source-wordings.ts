@@ -42,6 +42,29 @@ export const sourceWordings = {
     ),
   "resource-unread": (p) =>
     caution("a resource that can be read", `It is not used as the data package says: ${p.detail}.`),
+  "archive-broken": () => error("a whole zip archive", "Pack or save the file again; nothing of it is used."),
+  "archive-encrypted": () => error("an archive without a password", "Pack it again without a password."),
+  "archive-too-large": (p) =>
+    error(
+      `an archive of at most 1000 files and ${p.detail}, packed no tighter than tables are`,
+      "Give the tables as a folder, or take out what the study does not need.",
+    ),
+  "archive-inside": () =>
+    caution("tables or .xlsx workbooks", "It is kept and not opened: unpack it, or save it as .xlsx or CSV."),
+  "old-workbook": () =>
+    error(
+      "an .xlsx workbook without a password",
+      "Save it as .xlsx (in a spreadsheet: Save as, Excel workbook), without a password.",
+    ),
+  "workbook-unreadable": () =>
+    error("a workbook that can be read", "Open it in a spreadsheet and save it again as .xlsx, or as CSV."),
+  "cell-without-value": (p) =>
+    caution(
+      `a value in column ${p.column}`,
+      "The cell is read as blank: mend or work out its formula in the spreadsheet and save again.",
+    ),
+  "terms-unused": () =>
+    caution("terms that the table knows", "These terms are kept in the archive and not used."),
   "table-setting-unused": (p) =>
     caution("a file of the study under tables", `No file is named so; correct the name.${nearest(p)}`),
   "unclosed-quote": () =>

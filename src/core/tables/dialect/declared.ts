@@ -17,7 +17,7 @@ export type TableSetting = Settings["tables"][string];
 
 const delimiters = { comma: ",", semicolon: ";", tab: "\t", bar: "|" } as const;
 
-const withoutEnding = (file: string): string => file.replace(/\.[^.]*$/, "");
+const withoutEnding = (file: string): string => file.replace(/\.[^.\s]*$/, "");
 
 /** The name under which settings speak of a file: with or without its ending. */
 export const settingName = (file: string): string => withoutEnding(file);

@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
-import { readStudy } from "../../../../../src/core/tables/read-study.ts";
+import { readSources } from "../../../../../src/core/tables/read-sources.ts";
+import { archives } from "./archives.ts";
 import { bytesOf } from "./awkward-file.ts";
 import { dialects } from "./dialects.ts";
 
@@ -7,13 +8,9 @@ import { dialects } from "./dialects.ts";
 const usual = new Set(["one-occurrence", "one-level", "ungrouped", "searches-derived"]);
 
 describe("awkward files", () => {
-  it.each(dialects)("$title", ({ files, settings, finds, told }) => {
-    const study = readStudy(
-      new Map(Object.entries(files).map(([name, content]) => [name, bytesOf(content)])),
-      {
-        settings,
-      },
-    );
+  it.each([...dialects, ...archives])("$title", async ({ files, settings, finds, told }) => {
+    const given = new Map(Object.entries(files).map(([name, content]) => [name, bytesOf(content)]));
+    const study = await readSources(given, { settings });
     const found = study.sections.flatMap((section) =>
       section.occurrences.map(({ verbatim, heightM }) => [
         section.name,
@@ -23,5 +20,6 @@ describe("awkward files", () => {
     );
     expect(study.problems.map(({ code }) => code).filter((code) => !usual.has(code))).toEqual(told);
     expect(found).toEqual(finds);
+    expect(study.files).toEqual([...given].map(([name, bytes]) => ({ name, bytes })));
   });
 });
