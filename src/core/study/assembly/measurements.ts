@@ -83,12 +83,14 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
     value.sigma ?? 0,
     (cells.detection_limit ?? 0) * unit.factor,
   ];
-  const tooLarge = sizes.some((size) => !(Math.abs(size) <= largest));
+  const isBeyond = sizes.some(
+    (size) => !(Math.abs(size) <= largest) || (size !== 0 && Math.abs(size) < smallestReading),
+  );
   const isLimitless = reading.kind === "below" && unit.quantity === "mass-fraction" && !(reading.limit > 0);
-  if (!tooLarge && !isLimitless) return value;
+  if (!isBeyond && !isLimitless) return value;
   const detail = isLimitless
     ? "above 0 as the limit of detection"
-    : `within ${largest / unit.factor} of zero, its error and detection limit too,`;
+    : `within ${largest / unit.factor} of zero and no smaller than ${smallestReading / unit.factor}, its error and detection limit too,`;
   assembly.problems.add("out-of-limits", { ...origin, column: "value", found: cells.value, detail });
   return undefined;
 }
@@ -96,8 +98,9 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
 /** A content of 100 % by mass. */
 const wholeRockNgG = 1e9;
 
-/** No isotope ratio, count or other reading is larger; squares of it are still far from the largest double. */
+/** No isotope ratio, count or other reading is larger, and none but 0 smaller; their squares are far from what a double holds. */
 const largestReading = 1e15;
+const smallestReading = 1e-20;
 
 /** Trials bound the successes; an error must say what it is. */
 function isSound({ cells, origin }: MeasurementRow, reading: Reading, assembly: Assembly): boolean {

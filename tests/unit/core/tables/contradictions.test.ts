@@ -117,6 +117,7 @@ describe("contents that rock cannot have", () => {
     ["1e300", "ng/g", ""],
     ["101", "wt%", ""],
     ["0.1", "ng/g", "1e12"],
+    ["1e-300", "ng/g", ""],
     ["<0", "ng/g", ""],
     ["bdl", "ng/g", "0"],
   ])("%s %s is an error of its row", (value, unit, limit) => {
