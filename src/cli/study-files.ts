@@ -28,16 +28,16 @@ async function readFolder(path: string, name: string): Promise<StudyOnDisk> {
     .map((entry) => entry.name)
     .toSorted();
   const names = studyNames(present);
-  if (names.every((file) => /\.json$/i.test(file)))
-    throw new CallError(
-      `lastbed: expected tables (.csv, .tsv, .xlsx) in ${path}, got none; \`lastbed new <folder>\` writes templates to fill in`,
-    );
   const files = new Map<string, Uint8Array>();
   for (const file of names) files.set(file, await readWhole(join(path, file)));
   for (const file of describedElsewhere(files)) {
     const bytes = await readWhole(join(path, file)).catch(absent);
     if (bytes !== undefined) files.set(file, bytes);
   }
+  if ([...files.keys()].every((file) => /\.json$/i.test(file)))
+    throw new CallError(
+      `lastbed: expected tables (.csv, .tsv, .xlsx) in ${path}, got none; \`lastbed new <folder>\` writes templates to fill in`,
+    );
   return { name, files };
 }
 

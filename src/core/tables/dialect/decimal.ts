@@ -7,6 +7,7 @@ export type DecimalSign =
   /** Both readings are possible: the cell that could be either. */
   | { readonly kind: "ambiguous"; readonly found: string };
 
+const plain = /^-?\d+[.,]\d+$/;
 const comma = /^[+-]?\d*,\d+(?:[eE][+-]?\d+)?$/;
 const point = /^[+-]?(?:\d*\.\d+|\d+\.)(?:[eE][+-]?\d+)?$/;
 /** A number that could be grouped by thousands: 1,234 is 1.234 or 1234. */
@@ -48,7 +49,11 @@ function* numberTexts(
   for (const cells of rows) {
     for (const index of indices) {
       const cell = cells[index] ?? "";
-      if (!/[.,]/.test(cell)) continue;
+      if (!cell.includes(".") && !cell.includes(",")) continue;
+      if (plain.test(cell)) {
+        yield cell;
+        continue;
+      }
       for (const part of cell.replaceAll("\u2212", "-").split("..")) {
         yield part.trim().replace(/^(?:[<>]=?|≤|≥)\s*/, "");
       }
