@@ -16,5 +16,6 @@ export { readWrittenCsv } from "./tables/csv.ts";
 export { type PackageResource, tableResource, writeDataPackage } from "./tables/data-package.ts";
 export { readSources } from "./tables/read-sources.ts";
 export { type ReadStudyOptions, readStudy } from "./tables/read-study.ts";
+export { packStudy } from "./tables/sources/pack-study.ts";
 export { studyTemplate } from "./tables/templates.ts";
 export { type CsvCell, type WrittenCsv, writeCsv } from "./tables/write-csv.ts";

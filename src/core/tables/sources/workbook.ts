@@ -1,6 +1,6 @@
-import { zipSync } from "fflate";
 import type { ProblemList } from "../../study/problem-list.ts";
 import { MOST_COLUMNS } from "../limits.ts";
+import { storeFiles } from "./pack-study.ts";
 import { csvOf } from "./quoted-csv.ts";
 import { scanWorkbook } from "./workbook-scan.ts";
 
@@ -58,7 +58,7 @@ export async function readWorkbook(source: WorkbookSource): Promise<ReadonlyMap<
 async function sheetsOf({ path, parts, problems }: WorkbookSource) {
   const { default: readExcel } = await import("read-excel-file/universal");
   // Packed anew without compression, so that what is read is what was measured, and read without threads of its own.
-  const packed = zipSync(Object.fromEntries(parts), { level: 0 });
+  const packed = storeFiles(parts);
   try {
     return await readExcel(packed.buffer, { trim: false });
   } catch (error) {
@@ -73,9 +73,10 @@ const texts = (cells: readonly unknown[], width: number): readonly string[] =>
 
 function cellText(cell: unknown): string {
   if (cell === null || cell === undefined) return "";
-  if (cell instanceof Date) return Number.isNaN(cell.getTime()) ? "" : dateText(cell.toISOString());
   if (typeof cell === "string") return cell;
-  return typeof cell === "number" || typeof cell === "boolean" ? String(cell) : "";
+  if (typeof cell === "number" || typeof cell === "boolean") return String(cell);
+  const [, iso = ""] = /^"(.*)"$/.exec(JSON.stringify(cell) ?? "") ?? []; // a date; null where it is none
+  return dateText(iso);
 }
 
 const dateText = (iso: string): string => iso.replace(/T00:00:00\.000Z$/, "").replace(/\.000Z$/, "");

@@ -2,6 +2,8 @@ import * as fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { readSources } from "../../../../src/core/tables/read-sources.ts";
 import { readStudy } from "../../../../src/core/tables/read-study.ts";
+import { packStudy } from "../../../../src/core/tables/sources/pack-study.ts";
+import { unpackSources } from "../../../../src/core/tables/sources/unpack-sources.ts";
 import { workbook, zip } from "../../../unit/core/tables/awkward/packed.ts";
 
 const plain = "section,taxon,height (m)\nOrskel Ledge,Orvella tenuis,1.5\n";
@@ -73,6 +75,39 @@ describe("reading sources never throws", () => {
       expect(study.problems.length).toBeGreaterThan(0);
     });
     await fc.assert(property, { seed: 1, numRuns: 400 });
+  });
+});
+
+describe("a packed study", () => {
+  it("gives its files and its study back, and the same bytes in any order of its files", async () => {
+    const name = fc.constantFrom(
+      "occurrences.csv",
+      "samples.csv",
+      "settings.json",
+      "datapackage.json",
+      "logs/beds.csv",
+    );
+    const content = fc.oneof(fc.uint8Array({ maxLength: 80 }), fc.constant(encoder.encode(plain)));
+    const property = fc.asyncProperty(
+      fc.dictionary(name, content, { noNullPrototype: true }),
+      async (record) => {
+        const files = new Map(Object.entries(record));
+        const packed = packStudy(files);
+        expect(packStudy(new Map([...files].toReversed()))).toEqual(packed);
+        const { files: unpacked, problems } = await unpackSources(new Map([["s.zip", packed]]));
+        expect(problems).toEqual([]);
+        expect(new Map([...unpacked].map(([path, bytes]) => [path.replace("s.zip/", ""), bytes]))).toEqual(
+          files,
+        );
+        const sorted = new Map([...files].toSorted(([a], [b]) => (a < b ? -1 : 1)));
+        const [whole, again] = [readStudy(sorted), await readSources(new Map([["s.zip", packed]]))];
+        expect({ sheets: again.sheets, sections: again.sections }).toEqual({
+          sheets: whole.sheets,
+          sections: whole.sections,
+        });
+      },
+    );
+    await fc.assert(property, { seed: 1, numRuns: 200 });
   });
 });
 
