@@ -16,11 +16,6 @@ function expOfHalfSquare(x: number): number {
   return exp(-0.5 * head * head) * exp(-0.5 * (x - head) * (x + head));
 }
 
-/** Density of the standard normal at x: e^(−x²/2)/√(2π). */
-export function normalDensity(x: number): number {
-  return Math.abs(x) > 39 ? 0 : INVERSE_SQRT_TWO_PI * expOfHalfSquare(x);
-}
-
 /** log of x e^(x²/2) √(2π) Q(x), for x ≥ 1.8. */
 function logScaledSurvival(x: number): number {
   if (x < FAR_TAIL) return LOG_SQRT_TWO_PI - 0.34657359027997264 + logScaledTail(x * Math.SQRT1_2);

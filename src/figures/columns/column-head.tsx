@@ -12,9 +12,6 @@ interface ColumnHeadProps {
   readonly unit?: string;
 }
 
-/** Room a head takes above its column, in points. */
-export const HEAD_DEPTH = 27;
-
 export function ColumnHead({ x, top, title, unit }: ColumnHeadProps): ReactElement {
   return (
     <g>
