@@ -45,7 +45,8 @@ export function findHeader(records: readonly CsvRecord[], table: TableDeclaratio
     if (isSplit) {
       const headers = joined(shown[at].cells, after.headers, table);
       const both = judge(headers, { from: at, below: at + 2, table });
-      if (both.isComplete) return withUnits(both, records[at + 2], table);
+      const isMore = !here.isComplete || both.recognised > here.recognised;
+      if (both.isComplete && isMore) return withUnits(both, records[at + 2], table);
     }
     if (here.isComplete) return withUnits(here, records[at + 1], table);
   }

@@ -173,6 +173,18 @@ export const dialects: readonly AwkwardFile[] = [
     told: ["read-as"],
   },
   {
+    title: "cells that could be names of columns",
+    files: {
+      "samples.csv": "section,sample,height (m)\nCore,ID,1.5\n",
+      "occurrences.csv": "section,taxon,sample\nCore,fossil,ID\n,,\nCore,Orvella tenuis,ID\n",
+    },
+    finds: [
+      ["Core", "fossil", 1.5],
+      ["Core", "Orvella tenuis", 1.5],
+    ],
+    told: [],
+  },
+  {
     title: "empty columns and rows at the end",
     files: {
       "occurrences.csv": "section,taxon,height (m),,,\n\nOrskel Ledge,Orvella tenuis,1.5,,,\n,,,,,\n,,,,,\n",
