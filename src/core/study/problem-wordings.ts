@@ -161,6 +161,15 @@ const wordings = {
       "accepted names that end at one name",
       `${p.detail}: each keeps its own name until one of them accepts none.`,
     ),
+  "similar-name": (p) =>
+    caution(
+      `one spelling of each ${p.detail}`,
+      `${p.nearest} is written almost the same. If both are one ${p.detail}, write it alike everywhere${
+        p.detail === "taxon"
+          ? " or accept one for the other in taxa.csv; if they are two taxa, write its own name as accepted for one"
+          : ""
+      }. They stay apart until then.`,
+    ),
   "impact-ambiguous": (p) =>
     error(
       `one impact horizon, or the main one named in boundary.horizon`,

@@ -4,7 +4,9 @@ import { sameLevelM } from "../legs.ts";
 import type { Occurrence, Section, Study, Taxon } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import { excerpt } from "../problem-wordings.ts";
+import { checkNames } from "./check-names.ts";
 import { type Assembly, gather } from "./context.ts";
+import { declaredHorizons } from "./declared-horizons.ts";
 import { isToGenus } from "./occurrences.ts";
 
 /** Cautions on what is read well but gives little, or lies where it should not. */
@@ -19,6 +21,7 @@ export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: As
   checkImpacts(study.sections, assembly);
   checkSets(study, assembly);
   checkSynonyms(study.taxa, assembly);
+  checkNames(study, assembly);
 }
 
 function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
@@ -71,11 +74,7 @@ function checkHiddenFinds(section: Section, assembly: Assembly): void {
 /** Two names for the main horizon: nobody but the person can say which is meant. */
 function checkImpacts(sections: readonly Section[], { settings, problems }: Assembly): void {
   if (settings.boundary.horizon !== undefined) return;
-  const declared = new Map(
-    settings.boundary.same.flatMap(({ name, horizons }) =>
-      horizons.map((member) => [JSON.stringify(member), name] as const),
-    ),
-  );
+  const declared = declaredHorizons(settings);
   const impacts = sections.flatMap((section) =>
     section.horizons
       .filter(({ kind }) => kind === "impact")

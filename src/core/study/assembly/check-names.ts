@@ -1,0 +1,127 @@
+import { acceptedName } from "../finds.ts";
+import type { Origin, Section, Study, Taxon } from "../model.ts";
+import type { Assembly } from "./context.ts";
+import { declaredHorizons } from "./declared-horizons.ts";
+import { similarNames } from "./similar-names.ts";
+import { ungrouped } from "./taxa.ts";
+
+/** How often a name is used and where it stands first. */
+interface Use {
+  readonly origin: Origin;
+  uses: number;
+  /** Stands in the table that lists the names of its kind. */
+  readonly isListed: boolean;
+}
+
+interface Naming {
+  readonly kind: "taxon" | "section" | "sample" | "group" | "horizon";
+  readonly byLetter: boolean;
+  readonly areApart?: (first: string, second: string) => boolean;
+}
+
+/** Cautions on names that are almost alike. None is merged: only a person knows whether one thing is meant. */
+export function checkNames({ sections, taxa }: Pick<Study, "sections" | "taxa">, assembly: Assembly): void {
+  tellSimilar(taxonUses(sections, taxa, assembly), assembly, {
+    kind: "taxon",
+    byLetter: true,
+    areApart: (first, second) => areSettled(first, second, taxa),
+  });
+  tellSimilar(sectionUses(sections), assembly, { kind: "section", byLetter: true });
+  tellSimilar(groupUses(sections, taxa, assembly), assembly, { kind: "group", byLetter: true });
+  tellSimilar(horizonUses(sections, assembly), assembly, { kind: "horizon", byLetter: true });
+  for (const { samples } of sections) {
+    const uses = new Map<string, Use>();
+    for (const { name, origin } of samples) use(uses, name, origin);
+    tellSimilar(uses, assembly, { kind: "sample", byLetter: false });
+  }
+}
+
+function tellSimilar(uses: ReadonlyMap<string, Use>, { problems }: Assembly, naming: Naming): void {
+  const { kind, byLetter, areApart } = naming;
+  for (const { first, second } of similarNames([...uses.keys()], { byLetter })) {
+    if (areApart?.(first, second)) continue;
+    const [usual, odd] = rank(uses.get(second)) > rank(uses.get(first)) ? [second, first] : [first, second];
+    const at = uses.get(odd);
+    if (!at) continue;
+    problems.add("similar-name", { ...at.origin, column: kind, found: odd, detail: kind, nearest: usual });
+  }
+}
+
+/** A name that is listed, then one that is used more often, is the likelier to be meant. */
+const rank = (use: Use | undefined): number =>
+  use === undefined ? 0 : use.uses + (use.isListed ? Number.MAX_SAFE_INTEGER / 2 : 0);
+
+function use(uses: Map<string, Use>, name: string, origin: Origin, isListed = false): void {
+  const known = uses.get(name);
+  if (known) known.uses += 1;
+  else uses.set(name, { origin, uses: 1, isListed });
+}
+
+/** Names that end at one accepted name are settled; so are those of which one accepts itself. */
+function areSettled(first: string, second: string, taxa: ReadonlyMap<string, Taxon>): boolean {
+  const acceptsItself = (name: string) => taxa.get(name)?.accepted === name;
+  return (
+    acceptsItself(first) || acceptsItself(second) || acceptedName(first, taxa) === acceptedName(second, taxa)
+  );
+}
+
+const fileOf = (assembly: Assembly, table: "taxa") => assembly.sheets.get(table)?.sheet.file;
+
+function taxonUses(
+  sections: readonly Section[],
+  taxa: ReadonlyMap<string, Taxon>,
+  assembly: Assembly,
+): ReadonlyMap<string, Use> {
+  const uses = new Map<string, Use>();
+  const listed = fileOf(assembly, "taxa");
+  for (const { name, origin } of taxa.values()) {
+    if (origin.file === listed) use(uses, name, origin, true);
+  }
+  for (const { occurrences, publishedRanges } of sections) {
+    for (const { taxon, origin } of occurrences) use(uses, taxon, origin);
+    for (const { taxon, origin } of publishedRanges) use(uses, taxon, origin);
+  }
+  return uses;
+}
+
+function sectionUses(sections: readonly Section[]): ReadonlyMap<string, Use> {
+  const uses = new Map<string, Use>();
+  for (const section of sections) {
+    const { occurrences, measurements, publishedRanges, samples, horizons, beds } = section;
+    const lists = [occurrences, measurements, publishedRanges, samples, horizons, beds];
+    const origin = section.origin ?? lists.find((list) => list.length > 0)?.[0].origin;
+    if (origin === undefined) continue;
+    const count = lists.reduce((sum, { length }) => sum + length, 0);
+    uses.set(section.name, { origin, uses: count, isListed: false });
+  }
+  return uses;
+}
+
+function groupUses(
+  sections: readonly Section[],
+  taxa: ReadonlyMap<string, Taxon>,
+  assembly: Assembly,
+): ReadonlyMap<string, Use> {
+  const uses = new Map<string, Use>();
+  const listed = fileOf(assembly, "taxa");
+  for (const { group, origin } of taxa.values()) {
+    if (group !== ungrouped && origin.file === listed) use(uses, group, origin, true);
+  }
+  for (const { searches, recovery } of sections) {
+    for (const { group, origin } of searches) if (origin) use(uses, group, origin);
+    for (const { group, origin } of recovery) use(uses, group, origin);
+  }
+  return uses;
+}
+
+/** Horizons by the name they are correlated by. */
+function horizonUses(sections: readonly Section[], { settings }: Assembly): ReadonlyMap<string, Use> {
+  const uses = new Map<string, Use>();
+  const declared = declaredHorizons(settings);
+  for (const section of sections) {
+    for (const { name, origin } of section.horizons) {
+      if (!declared.has(JSON.stringify([section.name, name]))) use(uses, name, origin);
+    }
+  }
+  return uses;
+}
