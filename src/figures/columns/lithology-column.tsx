@@ -49,11 +49,18 @@ export function LithologyColumn(props: LithologyColumnProps): ReactElement {
   const letters = plainLetters(beds.map((bed) => bed.lithology));
   return (
     <g>
+      {rockAreas(props).map(({ pattern, area }) => (
+        <path
+          key={pattern ?? "plain"}
+          d={area}
+          fill={pattern === undefined ? COLOURS.paper : patternFill(plateId, pattern)}
+        />
+      ))}
       {beds.map((bed) => {
         const span = clippedSpan(y, bed.baseM, bed.topM);
         if (span === undefined) return null;
         const letter = letters.get(bed.lithology);
-        return <BedBlock key={`${bed.baseM} ${bed.topM}`} {...{ plateId, x, width, bed, span, letter }} />;
+        return <BedBlock key={`${bed.baseM} ${bed.topM}`} {...{ x, width, bed, span, letter }} />;
       })}
       {hidden.map(({ kind, baseM, topM }) => {
         const span = clippedSpan(y, baseM, topM);
@@ -64,8 +71,20 @@ export function LithologyColumn(props: LithologyColumnProps): ReactElement {
   );
 }
 
+/** The beds of each rock as one area: a print spells its pattern out once for every area that it fills. */
+function rockAreas({ beds, y, x, width }: LithologyColumnProps) {
+  const areas = new Map<PatternId | undefined, string>();
+  for (const bed of beds) {
+    const span = clippedSpan(y, bed.baseM, bed.topM);
+    if (span === undefined) continue;
+    const { pattern, weathering } = lithologyOf(bed.lithology);
+    const box = boxPath(x, span.top, width * weathering, span.bottom - span.top);
+    areas.set(pattern, (areas.get(pattern) ?? "") + box);
+  }
+  return [...areas].map(([pattern, area]) => ({ pattern, area }));
+}
+
 interface BedBlockProps {
-  readonly plateId: string;
   readonly x: number;
   readonly width: number;
   readonly bed: LoggedBed;
@@ -73,16 +92,11 @@ interface BedBlockProps {
   readonly letter: string | undefined;
 }
 
-function BedBlock({ plateId, x, width, bed, span, letter }: BedBlockProps): ReactElement {
-  const { pattern, weathering } = lithologyOf(bed.lithology);
-  const bedWidth = width * weathering;
+function BedBlock({ x, width, bed, span, letter }: BedBlockProps): ReactElement {
+  const bedWidth = width * lithologyOf(bed.lithology).weathering;
   const middle = (span.top + span.bottom) / 2 + capHeight(TEXT.unit) / 2;
   return (
     <>
-      <path
-        d={boxPath(x, span.top, bedWidth, span.bottom - span.top)}
-        fill={pattern === undefined ? COLOURS.paper : patternFill(plateId, pattern)}
-      />
       {letter !== undefined && span.bottom - span.top >= TEXT.unit.size && (
         <PlateText x={x + bedWidth / 2} y={middle} style={TEXT.unit} anchor="middle">
           {letter}
