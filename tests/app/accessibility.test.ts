@@ -44,6 +44,10 @@ describe.skipIf(!hasBrowser)("every station", () => {
         await page.setViewportSize({ width: 1440, height: 900 });
         await page.emulateMedia({ colorScheme: theme });
         await goTo(page, station);
+        await page.waitForFunction(
+          (scheme) => getComputedStyle(document.documentElement).colorScheme === scheme,
+          theme,
+        );
         // A theme changes colours and nothing else.
         expect(await violations(page, theme === "dark" ? ["color-contrast"] : undefined)).toEqual([]);
       });
