@@ -12,13 +12,13 @@ export function problemLines(problems: readonly Problem[], most = Number.POSITIV
       problem.file,
       problem.row === undefined ? "" : `row ${problem.row}`,
       problem.column ?? "",
-      tame(problem.found, 40),
+      tame(problem.found, 60),
     ],
   ]);
   const table = textTable([["kind", "file", "row", "column", "stands there"], ...rows]).split("\n");
   const lines = [table[0]];
   for (const [i, problem] of shown.entries()) {
-    lines.push(table[i + 1], `      expected ${tame(problem.expected, 200)}; ${tame(problem.mend, 300)}`);
+    lines.push(table[i + 1], `      expected ${tame(problem.expected, 200)}. ${tame(problem.mend, 300)}`);
   }
   if (shown.length < problems.length)
     lines.push(`  ${problems.length - shown.length} more: lastbed check lists them all`);

@@ -2,6 +2,7 @@ import { basename, join, resolve } from "node:path";
 import type { Analysis } from "../../core/analysis-result.ts";
 import { runFiles } from "../../report/run-files.ts";
 import { summary } from "../../report/summary.ts";
+import { plural } from "../../report/wordings/words.ts";
 import { nodeRunner } from "../../run/node.ts";
 import type { Runner } from "../../run/runner.ts";
 import { CallError } from "../call-error.ts";
@@ -92,6 +93,6 @@ function filesText(out: string, files: readonly string[]): string {
   return [
     `Written to ${out}:`,
     `  ${top.join(", ")}`,
-    `  figures/ (${count("figures")} plates), study/ (${count("study")} tables, as they were read)`,
+    `  figures/ (${plural(count("figures"), "plate")}), study/ (${plural(count("study"), "file")}, as read)`,
   ].join("\n");
 }

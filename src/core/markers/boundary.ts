@@ -26,10 +26,14 @@ export function boundaryIn(section: string, markers: Markers, study: Study): Bou
   };
 }
 
-/** Large shells are mixed less: `mixing_length_m` of taxa.csv stands in for the layer's own mixing length. */
+/**
+ * Large shells are mixed less: `mixing_length_m` of taxa.csv stands in for the layer's own mixing length, and 0 says
+ * that they are not mixed at all.
+ */
 function ceilingOf(taxon: LocalTaxon, mixing: Mixing, study: Study): number | undefined {
   const surfaceM = mixing.baseM + mixing.lengthM;
   const lengthM = study.taxa.get(taxon.taxon)?.mixingLengthM ?? mixing.lengthM;
+  if (lengthM === 0) return undefined;
   const ceiling = reworkingCeiling({ heightsM: taxon.heightsM, baseM: surfaceM - lengthM, lengthM });
   return ceiling.kind === "ceiling" ? ceiling.heightM : undefined;
 }

@@ -128,13 +128,14 @@ function withoutSmeared(taxon: LocalTaxon, boundary: Boundary, ceilingM: number 
 const isSmeared = (heightM: number, { positionM }: Boundary, ceilingM: number) =>
   heightM > positionM && heightM <= ceilingM;
 
+const key = (section: string, taxon: string) => `${section}\u0000${taxon}`;
+
 /** Marks the finds that the roles took out, so that every find's fate is told in one list. */
 export function markBelowCeiling(
   finds: readonly Find[],
   candidates: readonly Candidate[],
   boundaries: ReadonlyMap<string, Boundary>,
 ): readonly Find[] {
-  const key = (section: string, taxon: string) => `${section}\u0000${taxon}`;
   const trimmed = new Map(
     candidates
       .filter((c) => c.findsBelowCeiling > 0)

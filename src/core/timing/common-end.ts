@@ -93,6 +93,8 @@ function setAbove(kept: readonly EffectiveRange[], limit: number, lowest: number
   const alone = kept.map(({ base, last, exponent }) => last + (last - base) * expm1(limit / (2 * exponent)));
   const reach = (Math.min(...alone) - lowest) * (1 + 1e-9);
   if (!(reach > 0)) return { kind: "interval", low: lowest, high: lowest };
+  // Beside a very long base the last digits of a height can hide the crossing: the bound of the nearest term stands.
+  if (!(excess(lowest + reach) > 0)) return { kind: "interval", low: lowest, high: lowest + reach };
   const above = findRoot((x) => excess(lowest + x), 0, reach, { tolerance: 1e-13 * reach });
   return { kind: "interval", low: lowest, high: lowest + above };
 }

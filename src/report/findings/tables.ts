@@ -1,4 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { FindReason } from "../../core/study/finds-result.ts";
 import { list, plural, say, strong } from "../wordings/words.ts";
 import type { Finding } from "./finding.ts";
 
@@ -32,8 +33,26 @@ export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
 }
 
 function reasons(finds: Analysis["finds"]): string[] {
-  const counts = new Map<string, number>();
+  const counts = new Map<FindReason, number>();
   for (const find of finds)
     if (find.used === "no") counts.set(find.reason, (counts.get(find.reason) ?? 0) + 1);
-  return [...counts].toSorted((a, b) => b[1] - a[1]).map(([reason, count]) => `${count} ${reason}`);
+  return [...counts]
+    .toSorted((a, b) => b[1] - a[1])
+    .map(([reason, count]) => `${count} ${reasonWords[reason]}`);
 }
+
+const reasonWords: Readonly<Record<FindReason, string>> = {
+  used: "used",
+  "same-horizon": "of a horizon already counted",
+  "zero-count": "looked for and not found",
+  qualifier: "with cf. or ?",
+  "genus-doubtful": "of a doubtful genus",
+  affinity: "with aff.",
+  "not-to-species": "not named to species",
+  reworked: "reworked",
+  "reworking-suspected": "suspected of reworking",
+  doubtful: "doubtful",
+  "fault-repeat": "in a repeated passage",
+  "no-recovery": "in rock that could not be searched",
+  "below-reworking-ceiling": "within reach of mixing",
+};

@@ -1,4 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { Outcome } from "../../core/basis.ts";
 import type { Section } from "../../core/study/model.ts";
 import { isAlignedTooWell, rejectsOneLevel } from "../../core/timing/common-end.ts";
 import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
@@ -141,7 +142,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
   switch (answer.method) {
     case "common-end":
       return answer.p === undefined
-        ? [{ label: "All at one level?", value: answer.outcome }]
+        ? [{ label: "All at one level?", value: outcomeWords(answer.outcome) }]
         : [
             {
               label: "All at one level?",
@@ -153,7 +154,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
       return [
         {
           label: "The common level, if there is one",
-          value: interval ?? answer.outcome,
+          value: interval ?? outcomeWords(answer.outcome),
           note: `${level}all taxa pooled`,
         },
       ];
@@ -161,7 +162,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
       return [
         {
           label: "Levels at which all could have ended",
-          value: answer.outcome === "empty" ? "none" : (interval ?? answer.outcome),
+          value: answer.outcome === "empty" ? "none" : (interval ?? outcomeWords(answer.outcome)),
           note: `${level}none where one level is refuted`,
         },
       ];
@@ -169,7 +170,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
       return [
         {
           label: `All at ${answer.horizon ?? "the horizon"}?`,
-          value: answer.p === undefined ? answer.outcome : pValue(answer.p),
+          value: answer.p === undefined ? outcomeWords(answer.outcome) : pValue(answer.p),
           note: `${answer.taxa} taxa, exact Kolmogorov\u2011Smirnov`,
         },
       ];
@@ -177,7 +178,7 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
       return [
         {
           label: "It took at least",
-          value: answer.low === undefined ? answer.outcome : inMetres(answer.low),
+          value: answer.low === undefined ? outcomeWords(answer.outcome) : inMetres(answer.low),
           note: `${level}all taxa`,
         },
       ];
@@ -186,7 +187,10 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
         {
           label:
             answer.taxa === answer.taxaOfSet ? "It took at most" : "It took at most, of the best sampled",
-          value: answer.high === undefined ? `not bounded (${answer.outcome})` : inMetres(answer.high),
+          value:
+            answer.high === undefined
+              ? `not bounded (${outcomeWords(answer.outcome)})`
+              : inMetres(answer.high),
           note: `${level}${answer.taxa} of ${answer.taxaOfSet} taxa${isBeyond(answer, section) ? ", longer than the section" : ""}`,
         },
       ];
@@ -194,11 +198,23 @@ function line(answer: TimingAnswer, section: Section): NumberLine[] {
       return [
         {
           label: "Recovery falls upward?",
-          value: answer.p === undefined ? answer.outcome : pValue(answer.p),
+          value: answer.p === undefined ? outcomeWords(answer.outcome) : pValue(answer.p),
           note: "pooled centroid of finds, one-sided",
         },
       ];
     default:
       return answer.method satisfies never;
   }
+}
+
+function outcomeWords(outcome: Outcome): string {
+  return {
+    closed: "closed",
+    open: "open",
+    "leaves-section": "beyond the section",
+    "in-hiatus": "inside a gap",
+    empty: "none",
+    undefined: "cannot be asked of so few finds",
+    "not-applicable": "does not apply here",
+  }[outcome];
 }

@@ -59,7 +59,8 @@ export function probability(p: number): string {
 export const pValue = (p: number): string =>
   p < 0.001 || p > 0.999 ? `p${TIED}${probability(p)}` : `p${TIED}=${TIED}${probability(p)}`;
 
-export const percent = (share: number): string => `${Number((100 * share).toPrecision(4))}${TIED}%`;
+export const percent = (share: number): string =>
+  `${share < 1 && share >= 0.99995 ? "over 99.99" : Number((100 * share).toPrecision(4))}${TIED}%`;
 
 export const significant = (value: number, digits = 3): string =>
   minus(String(Number(value.toPrecision(digits))));
