@@ -161,6 +161,28 @@ const wordings = {
       "accepted names that end at one name",
       `${p.detail}: each keeps its own name until one of them accepts none.`,
     ),
+  "beds-overlap": () =>
+    caution("a base at the top of the bed below", "Correct base or top: two beds share this rock."),
+  "beds-gap": () =>
+    caution(
+      "beds that follow on each other",
+      "Correct base or top, or tell in intervals.csv what hides the rock between.",
+    ),
+  "samples-overlap": (p) =>
+    caution(
+      `samples ${p.detail} that share no rock`,
+      "Correct base and top, or the thickness. Both are used as they stand: what both hold counts twice.",
+    ),
+  "ages-out-of-order": (p) =>
+    caution(
+      `ages in ${p.detail} that do not increase upward by more than twice their error`,
+      "Correct the age, its error or the position of one of the two.",
+    ),
+  "horizon-order": (p) =>
+    caution(
+      `${p.detail}`,
+      "Correct a position or a name; where one name stands for two horizons, give them two names. Both are used as they stand.",
+    ),
   "similar-name": (p) =>
     caution(
       `one spelling of each ${p.detail}`,

@@ -5,6 +5,8 @@ import type { Occurrence, Section, Study, Taxon } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import { excerpt } from "../problem-wordings.ts";
 import { checkNames } from "./check-names.ts";
+import { checkAges, checkHorizonOrder } from "./check-order.ts";
+import { checkRock } from "./check-rock.ts";
 import { type Assembly, gather } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
 import { isToGenus } from "./occurrences.ts";
@@ -14,6 +16,8 @@ export function checkSection(section: Section, assembly: Assembly): void {
   checkLevels(section, assembly);
   checkEnds(section, assembly);
   checkHiddenFinds(section, assembly);
+  checkRock(section, assembly);
+  checkAges(section, assembly);
 }
 
 /** Cautions and errors that need every section. */
@@ -22,6 +26,7 @@ export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: As
   checkSets(study, assembly);
   checkSynonyms(study.taxa, assembly);
   checkNames(study, assembly);
+  checkHorizonOrder(study.sections, assembly);
 }
 
 function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
