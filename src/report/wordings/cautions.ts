@@ -59,7 +59,8 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`Effort differs between the samples searched for ${text("groups")}; the method of sampled horizons takes it as equal.`,
   "range-few-horizons": (told) =>
     say`${taxa(told)} with four horizons or fewer: such intervals mostly reflect the assumption.`,
-  "range-reaches-top": (told) => say`${taxa(told)} found up to the highest sample, where the upper end is open.`,
+  "range-reaches-top": (told) =>
+    say`${taxa(told)} found up to the highest sample, where the upper end is open.`,
   "range-published-only": (told) => say`${taxa(told)} known from a published range alone, without the finds.`,
   "range-bound-above-section": (told) =>
     say`The interval of ${taxa(told)} ends above the section, where nobody searched.`,
