@@ -183,6 +183,11 @@ const wordings = {
       `${p.detail}`,
       "Correct a position or a name; where one name stands for two horizons, give them two names. Both are used as they stand.",
     ),
+  "unknown-qualifier": () =>
+    caution(
+      "a sign of open nomenclature (cf., aff., ?, ex gr., sp., spp., indet., sp. nov., s.l., s.s.)",
+      "Write one of these signs; until then the find counts as if the cell were blank.",
+    ),
   "similar-name": (p) =>
     caution(
       `one spelling of each ${p.detail}`,
@@ -225,14 +230,18 @@ export function excerpt(text: string): string {
 export function problem(code: ProblemCode, place: ProblemPlace): Problem {
   const wording: Wording = wordings[code];
   const { severity, expected, mend } = wording(place);
+  const { file, row, column, now } = place;
   return {
     severity,
     code,
-    file: place.file,
-    ...(place.row === undefined ? {} : { row: place.row }),
-    ...(place.column === undefined ? {} : { column: place.column }),
+    file,
+    ...(row === undefined ? {} : { row }),
+    ...(column === undefined ? {} : { column }),
     found: excerpt(place.found),
     expected,
-    mend,
+    mend: now === undefined || place.nearest !== undefined ? mend : `${mend} Here: ${excerpt(now)}`,
+    ...(row === undefined || column === undefined || now === undefined
+      ? {}
+      : { fix: { file, row, column, now } }),
   };
 }

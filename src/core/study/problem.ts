@@ -11,4 +11,14 @@ export interface Problem {
   readonly expected: string;
   /** How to mend it. */
   readonly mend: string;
+  /** The cell's new content, where there is one mend alone and it is safe. */
+  readonly fix?: Fix;
+}
+
+/** One cell to be written anew. */
+export interface Fix {
+  readonly file: string;
+  readonly row: number;
+  readonly column: string;
+  readonly now: string;
 }

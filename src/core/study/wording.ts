@@ -10,6 +10,8 @@ export interface ProblemPlace {
   readonly detail?: string;
   /** The nearest known name, where there is one. */
   readonly nearest?: string;
+  /** What the cell must have been meant to hold, where that is one thing alone. */
+  readonly now?: string;
 }
 
 type Words = Pick<Problem, "severity" | "expected" | "mend">;

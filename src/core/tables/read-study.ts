@@ -55,7 +55,9 @@ export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadS
 function asWritten(problem: Problem, sheets: ReadonlyMap<TableName, ReadSheet>): Problem {
   const sheet = [...sheets.values()].find((read) => read.sheet.file === problem.file)?.sheet;
   const place = problem.column === undefined ? -1 : (sheet?.columns.indexOf(problem.column) ?? -1);
-  return place < 0 ? problem : { ...problem, column: sheet?.headers[place] };
+  const column = place < 0 ? undefined : sheet?.headers[place];
+  if (column === undefined) return problem;
+  return { ...problem, column, ...(problem.fix && { fix: { ...problem.fix, column } }) };
 }
 
 function folderOf(files: ReadonlyMap<string, Uint8Array>): string | undefined {

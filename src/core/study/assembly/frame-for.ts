@@ -1,11 +1,13 @@
 import type { Origin } from "../model.ts";
-import { suggestName } from "../nearest.ts";
 import type { Assembly, ReadSheet, SectionFrame } from "./context.ts";
+import type { MeantName } from "./meant-name.ts";
 
 /** The sections of a study, each with what converts its positions; those that cannot be used with the reason. */
 export interface Frames {
   readonly usable: ReadonlyMap<string, SectionFrame>;
   readonly leftOut: ReadonlyMap<string, string>;
+  /** The section that an unlisted name is likely to mean. */
+  readonly meant: (section: string) => MeantName;
 }
 
 /** The frame a row's section has, or undefined with the problem told. */
@@ -34,8 +36,7 @@ function tellMissing(section: string, origin: Origin, { frames, assembly }: Fram
   if (reason !== undefined) {
     assembly.problems.addOnce(section, "section-left-out", { ...place, detail: reason });
   } else {
-    const nearest = suggestName(section, frames.usable.keys());
-    assembly.problems.add("unlisted-section", { ...place, nearest });
+    assembly.problems.add("unlisted-section", { ...place, ...frames.meant(section) });
   }
 }
 

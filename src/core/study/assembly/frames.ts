@@ -4,6 +4,7 @@ import type { Axis, LengthUnit, Origin } from "../model.ts";
 import { sections } from "../tables/sections.ts";
 import { type Assembly, present, type ReadSheet, type Row, type SectionFrame } from "./context.ts";
 import type { Frames } from "./frame-for.ts";
+import { meantNames } from "./meant-name.ts";
 import { readLegs } from "./read-legs.ts";
 import { rowsOf } from "./rows.ts";
 
@@ -21,7 +22,23 @@ export function readFrames(assembly: Assembly): Frames {
   const leftOut = new Map<string, string>();
   if (listed) readListed(assembly, { listed, usable, leftOut });
   else readNamed(assembly, usable, leftOut);
-  return readLegs({ usable, leftOut }, assembly);
+  return readLegs({ usable, leftOut, meant: meantSections(usable, assembly) }, assembly);
+}
+
+/** A listed section that no row names has its own name in doubt: it is no certain mend. */
+function meantSections(usable: ReadonlyMap<string, SectionFrame>, assembly: Assembly): Frames["meant"] {
+  const find = meantNames(usable.keys());
+  let named: ReadonlySet<string> | undefined;
+  return (section) => {
+    const { now, ...meant } = find(section);
+    if (now === undefined) return meant;
+    named ??= new Set(
+      [...assembly.sheets].flatMap(([table, read]) =>
+        table === "sections" ? [] : [...namesIn(read).keys()],
+      ),
+    );
+    return named.has(now) ? { ...meant, now } : meant;
+  };
 }
 
 interface Listing {

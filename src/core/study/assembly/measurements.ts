@@ -6,6 +6,7 @@ import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
 import { type Assembly, type BySection, gather, present, type ReadSheet, type Row } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
+import { onlyNumber } from "./one-mend.ts";
 import { type Place, placeOf } from "./place.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { rowsOf } from "./rows.ts";
@@ -63,7 +64,8 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
     return undefined;
   }
   if (cell.kind === "problem") {
-    assembly.problems.add(cell.code, { ...origin, column: "value", found: cells.value });
+    const now = cell.code === "not-a-reading" ? onlyReading(cells, unit, read) : undefined;
+    assembly.problems.add(cell.code, { ...origin, column: "value", found: cells.value, now });
     return undefined;
   }
   const { reading } = cell;
@@ -93,6 +95,19 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
     : `within ${largest / unit.factor} of zero and no smaller than ${smallestReading / unit.factor}, its error and detection limit too,`;
   assembly.problems.add("out-of-limits", { ...origin, column: "value", found: cells.value, detail });
   return undefined;
+}
+
+/** A value that carries its unit, or the other decimal sign. */
+function onlyReading(
+  { value, analyte }: RowOf<typeof measurements>,
+  { factor, quantity }: MeasurementUnit,
+  { sheet }: ReadSheet,
+): string | undefined {
+  const isOwnUnit = (written: string) => {
+    const unit = measurementUnit(written, plainAnalyte(analyte));
+    return typeof unit === "object" && unit.factor === factor && unit.quantity === quantity;
+  };
+  return onlyNumber(value, { decimal: sheet.dialect.decimal, isOwnUnit });
 }
 
 /** A content of 100 % by mass. */

@@ -4,6 +4,7 @@ import type { RowOf } from "../tables/declare.ts";
 import { occurrences } from "../tables/occurrences.ts";
 import { type Assembly, type BySection, gather, present, type SectionFrame } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
+import { isQualifier, onlyQualifier } from "./one-mend.ts";
 import { type Place, placeOf } from "./place.ts";
 import { lengthOf } from "./position.ts";
 import type { SampleLists } from "./read-samples.ts";
@@ -28,6 +29,7 @@ export function readOccurrences(
     if (find.count === 0) {
       assembly.problems.addOnce("count", "count-zero", { ...origin, column: "count", found: "0" });
     }
+    if (cells.qualifier !== undefined) tellQualifier(cells.qualifier, origin, assembly);
     if (!taxa.has(find.taxon)) addTaxon(find, taxa, assembly);
     gather(lists, frame.name, find);
   }
@@ -43,6 +45,14 @@ function nameReader(): (text: string, qualifier?: string) => ParsedName {
     known.set(key, name);
     return name;
   };
+}
+
+/** A qualifier that is no sign of open nomenclature says nothing of the name. */
+function tellQualifier(written: string, origin: Origin, { problems }: Assembly): void {
+  if (isQualifier(written)) return;
+  const now = onlyQualifier(written);
+  const subject = JSON.stringify([written, now && origin.row]);
+  problems.addOnce(subject, "unknown-qualifier", { ...origin, column: "qualifier", found: written, now });
 }
 
 function findOf(

@@ -1,6 +1,5 @@
 import { sameLevelM } from "../legs.ts";
 import type { Origin, Sample } from "../model.ts";
-import { suggestName } from "../nearest.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
 import { isHalfSlab, type Slab, type SlabCells, slabOf } from "./position.ts";
 import type { SampleLists } from "./read-samples.ts";
@@ -31,9 +30,9 @@ export function placeOf(
     if (hasOwnPlace && !samples.areListed) slabOf(cells, frame, { origin, assembly });
     else if (!samples.areListed) assembly.problems.add("sample-without-position", told);
     else {
-      const nearest = suggestName(cells.sample, known?.keys() ?? []);
-      const subject = JSON.stringify([frame.name, cells.sample]);
-      assembly.problems.addOnce(subject, "unknown-sample", { ...told, nearest });
+      const meant = samples.meant(frame.name, cells.sample);
+      const subject = JSON.stringify([frame.name, cells.sample, meant.now && origin.row]);
+      assembly.problems.addOnce(subject, "unknown-sample", { ...told, ...meant });
     }
     return undefined;
   }

@@ -5,6 +5,7 @@ import type { Origin } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import { toMetres } from "../units.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
+import { sameButForForm } from "./one-mend.ts";
 
 export interface PositionCell {
   readonly origin: Origin;
@@ -22,7 +23,8 @@ export function heightOf(
   const leg = frame.legs.get(name);
   if (!leg) {
     const nearest = suggestName(name, frame.legs.keys());
-    assembly.problems.add("unknown-leg", { ...origin, column: "leg", found: name, nearest });
+    const now = sameButForForm(name, frame.legs.keys());
+    assembly.problems.add("unknown-leg", { ...origin, column: "leg", found: name, nearest, now });
     return undefined;
   }
   const height = legHeight(leg, position);

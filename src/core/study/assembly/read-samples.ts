@@ -3,6 +3,7 @@ import type { Origin, Sample } from "../model.ts";
 import { samples } from "../tables/samples.ts";
 import { type Assembly, present, type SectionFrame } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
+import { type MeantName, meantNames } from "./meant-name.ts";
 import { lengthOf, type SlabCells, slabOf } from "./position.ts";
 import { rowsOf } from "./rows.ts";
 
@@ -10,6 +11,8 @@ import { rowsOf } from "./rows.ts";
 export interface SampleLists {
   readonly bySection: ReadonlyMap<string, ReadonlyMap<string, Sample>>;
   readonly areListed: boolean;
+  /** The sample of a section that an unknown name is likely to mean. */
+  readonly meant: (section: string, sample: string) => MeantName;
 }
 
 /** Samples of samples.csv; without it, the samples that finds and measurements name with a position. */
@@ -17,7 +20,10 @@ export function readSamples(frames: Frames, assembly: Assembly): SampleLists {
   const read = assembly.sheets.get("samples");
   const bySection = new Map<string, Map<string, Sample>>();
   for (const name of frames.usable.keys()) bySection.set(name, new Map());
-  if (!read) return { bySection: deriveSamples(bySection, frames, assembly), areListed: false };
+  if (!read) {
+    deriveSamples(bySection, frames, assembly);
+    return { bySection, areListed: false, meant: meantIn(bySection) };
+  }
   for (const { cells, origin } of rowsOf(samples, assembly)) {
     const frame = frameFor(cells.section, origin, { frames, read, assembly });
     const slab = frame && slabOf(cells, frame, { origin, assembly });
@@ -33,7 +39,16 @@ export function readSamples(frames: Frames, assembly: Assembly): SampleLists {
     };
     addSample(sample, known, assembly);
   }
-  return { bySection, areListed: true };
+  return { bySection, areListed: true, meant: meantIn(bySection) };
+}
+
+function meantIn(bySection: SampleLists["bySection"]): SampleLists["meant"] {
+  const finders = new Map<string, (sample: string) => MeantName>();
+  return (section, sample) => {
+    const find = finders.get(section) ?? meantNames(bySection.get(section)?.keys() ?? []);
+    finders.set(section, find);
+    return find(sample);
+  };
 }
 
 /** A sample met again on another leg at the same level counts once; anything else of the same name is told. */
@@ -59,7 +74,7 @@ function addSample(sample: Sample, known: Map<string, Sample>, assembly: Assembl
 type Derived = Map<string, Map<string, Sample>>;
 
 /** Points where finds and measurements name both a sample and where it lies. Problems are told when those rows are read. */
-function deriveSamples(bySection: Derived, frames: Frames, assembly: Assembly): Derived {
+function deriveSamples(bySection: Derived, frames: Frames, assembly: Assembly): void {
   for (const table of ["occurrences", "measurements"] as const) {
     const read = assembly.sheets.get(table);
     if (!read) continue;
@@ -83,7 +98,6 @@ function deriveSamples(bySection: Derived, frames: Frames, assembly: Assembly): 
       if (slab) known.set(name, { name, ...slab, notes: "", origin });
     }
   }
-  return bySection;
 }
 
 function quietSlab(

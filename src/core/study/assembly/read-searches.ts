@@ -1,5 +1,4 @@
 import type { Occurrence, Sample, Search, Taxon } from "../model.ts";
-import { suggestName } from "../nearest.ts";
 import { searches } from "../tables/searches.ts";
 import { type Assembly, type BySection, gather, present } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
@@ -25,8 +24,8 @@ export function readSearches(frames: Frames, context: SearchContext, assembly: A
     if (!frame || !known) continue;
     const sample = known.get(cells.sample);
     if (!sample) {
-      const nearest = suggestName(cells.sample, known.keys());
-      assembly.problems.add("unknown-sample", { ...origin, column: "sample", found: cells.sample, nearest });
+      const meant = context.samples.meant(frame.name, cells.sample);
+      assembly.problems.add("unknown-sample", { ...origin, column: "sample", found: cells.sample, ...meant });
       continue;
     }
     const key = JSON.stringify([frame.name, sample.name, cells.group]);

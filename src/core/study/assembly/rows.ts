@@ -2,7 +2,10 @@ import { type ParsedCell, parseCell, withDecimalPoint } from "../cells.ts";
 import { suggestName } from "../nearest.ts";
 import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";
+import { isFixedUnit, lengthUnit } from "../units.ts";
 import type { Assembly, ReadSheet, Row } from "./context.ts";
+import { onlyNumber, onlyWord } from "./one-mend.ts";
+import { sectionUnit } from "./section-unit.ts";
 
 /** The validated rows of a declared table; rows with an error are left out, and every error is told. */
 export function rowsOf<T extends TableDeclaration & { readonly name: TableName }>(
@@ -73,7 +76,7 @@ function readRow(cells: readonly string[], row: number, reading: Reading): objec
   let isUsable = true;
   for (const { name, column, index } of columns) {
     const text = index === -1 ? "" : (cells[index] ?? "");
-    const { value, isGood } = readCell(text, column, { name, row, file, assembly, read });
+    const { value, isGood } = readCell(text, column, { name, row, file, assembly, read, cells });
     values.set(name, value);
     isUsable &&= isGood;
   }
@@ -91,6 +94,8 @@ interface CellPlace {
   readonly file: string;
   readonly assembly: Assembly;
   readonly read: ReadSheet;
+  /** The whole row. */
+  readonly cells: readonly string[];
 }
 
 /** A blank that another rule speaks of: a missing value is told by the reading, a unit can stand in the header. */
@@ -109,6 +114,7 @@ function readCell(text: string, column: ColumnDeclaration, place: CellPlace) {
       found: text,
       detail: parsed.detail,
       nearest,
+      now: onlyMend(text, column, place),
     });
     return { value: undefined, isGood: false };
   }
@@ -120,6 +126,19 @@ function readCell(text: string, column: ColumnDeclaration, place: CellPlace) {
     value: parsed.value ?? (isToldElsewhere(place) && column.required ? "" : undefined),
     isGood: true,
   };
+}
+
+/** The one content that a cell must have been meant to hold, if it is one alone and good. */
+function onlyMend(text: string, column: ColumnDeclaration, place: CellPlace): string | undefined {
+  const { unit, type } = column;
+  const isOwnUnit = (written: string) =>
+    unit === "section"
+      ? lengthUnit(written) !== undefined && lengthUnit(written) === sectionUnit(place)
+      : unit !== undefined && isFixedUnit(written, unit);
+  const { decimal } = place.read.sheet.dialect;
+  const now =
+    type === "enum" ? onlyWord(text, column.values ?? []) : onlyNumber(text, { decimal, isOwnUnit });
+  return now === undefined || "code" in parseWritten(now, column, place) ? undefined : now;
 }
 
 /** The cell as its column and the file's dialect say. */

@@ -1,7 +1,7 @@
 import type { Taxon } from "../model.ts";
-import { suggestName } from "../nearest.ts";
 import { taxa } from "../tables/taxa.ts";
 import { type Assembly, present, type ReadSheet } from "./context.ts";
+import { meantNames } from "./meant-name.ts";
 import { rowsOf } from "./rows.ts";
 
 export const ungrouped = "ungrouped";
@@ -49,15 +49,15 @@ function traitReader({ sheet }: ReadSheet): (row: number) => Readonly<Record<str
 }
 
 function withGroups(list: Map<string, Taxon>, assembly: Assembly): Map<string, Taxon> {
+  const meant = meantNames(list.keys());
   for (const [name, taxon] of list) {
     const accepted = taxon.accepted === undefined ? undefined : list.get(taxon.accepted);
     if (taxon.accepted !== undefined && !accepted) {
-      const nearest = suggestName(taxon.accepted, list.keys());
       assembly.problems.add("accepted-unlisted", {
         ...taxon.origin,
         column: "accepted",
         found: taxon.accepted,
-        nearest,
+        ...meant(taxon.accepted),
       });
       if (taxon.group !== "") list.set(taxon.accepted, acceptedOf(taxon, taxon.accepted));
     }
