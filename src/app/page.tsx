@@ -5,6 +5,8 @@ import { Status } from "./footer/status.tsx";
 import { GoTo } from "./go-to/go-to.tsx";
 import { Header } from "./header/header.tsx";
 import { WorkBar } from "./header/work-bar.tsx";
+import { KeepingBar } from "./keeping/keeping-bar.tsx";
+import { useKeeping } from "./keeping/use-keeping.ts";
 import styles from "./page.module.css";
 import { actionsOf } from "./state/actions.ts";
 import { focusOf } from "./state/focus.ts";
@@ -17,7 +19,9 @@ import { useShortcuts } from "./state/use-shortcuts.ts";
 import { Station } from "./station.tsx";
 import { bundledStudy } from "./study/bundled-study.ts";
 import { DropTarget } from "./study/drop-target.tsx";
+import { useReworking } from "./study/use-reworking.ts";
 import { useStudy } from "./study/use-study.ts";
+import { NO_HISTORY } from "./tables/history.ts";
 
 const opening = (): PageState => ({
   place: placeOf(location.hash),
@@ -25,6 +29,7 @@ const opening = (): PageState => ({
   isGoToOpen: false,
   theme: keptTheme(),
   work: { kind: "idle" },
+  history: NO_HISTORY,
 });
 
 /** The whole page: one line of stations, one focus, a plate with its margin, and what lies under the reading line. */
@@ -32,10 +37,13 @@ export function Page(): ReactElement {
   const [state, dispatch] = useReducer(step, undefined, opening);
   const study = useStudy(dispatch);
   const go = usePlace(state.place, dispatch);
-  const { analysis, open: openStudy } = study;
+  const { workedOut, open: openStudy } = study;
+  const analysis = workedOut?.analysis;
 
   useEffect(() => openStudy("the example", bundledStudy), [openStudy]);
   useTheme(state.theme);
+  useReworking(state.history, study);
+  const keeping = useKeeping(state.history, study, dispatch);
 
   const all = useMemo(() => (analysis === undefined ? [] : findings(analysis)), [analysis]);
   const focus = useMemo(
@@ -46,7 +54,10 @@ export function Page(): ReactElement {
     () => (analysis === undefined || focus === undefined ? undefined : { analysis, focus, all }),
     [analysis, focus, all],
   );
-  const page = useMemo<PageContents>(() => ({ state, dispatch, go, study, open }), [state, go, study, open]);
+  const page = useMemo<PageContents>(
+    () => ({ state, dispatch, go, study, keeping, open }),
+    [state, go, study, keeping, open],
+  );
   const actions = useMemo(() => actionsOf(page), [page]);
   useShortcuts(actions, () => dispatch({ kind: "go-to-turned", isOpen: true }));
 
@@ -60,7 +71,10 @@ export function Page(): ReactElement {
         <div className={styles.page}>
           <Header actions={actions} />
           <FocusLine />
-          <WorkBar />
+          <div>
+            <WorkBar />
+            <KeepingBar />
+          </div>
           <Station />
           <Status />
         </div>

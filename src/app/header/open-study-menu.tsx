@@ -22,7 +22,7 @@ export function OpenStudyMenu(): ReactElement {
         <Popover placement="bottom end">
           <Menu className={styles.menu}>
             <Way title="A study folder" help="all its tables at once" act={() => folder.current?.click()} />
-            <Way title="Tables" help="one or several CSV files" act={() => files.current?.click()} />
+            <Way title="Tables" help="CSV files, a workbook or a zip" act={() => files.current?.click()} />
             <Way
               title="The study beside this page"
               help="the one it opened with"
@@ -47,7 +47,7 @@ export function OpenStudyMenu(): ReactElement {
         data-testid="study-files"
         aria-label="Tables of a study"
         multiple
-        accept=".csv,.json,text/csv,application/json"
+        accept=".csv,.tsv,.tab,.json,.zip,.xlsx,text/csv,application/json"
         onChange={(event) => take(event.currentTarget)}
       />
     </>

@@ -1,9 +1,11 @@
 import { PanelRightClose, PanelRightOpen } from "lucide-react";
 import { memo, type ReactElement } from "react";
 import type { Finding } from "../../report/findings/finding.ts";
+import { KeptPart } from "../keeping/kept-part.tsx";
 import { type Opened, usePage } from "../state/page-context.ts";
 import { findingOf } from "../state/station-state.ts";
 import { Problems } from "../tables/problems.tsx";
+import { SetAsideList } from "../tables/set-aside-list.tsx";
 import { Choices } from "./choices.tsx";
 import styles from "./margin.module.css";
 import { Methods } from "./methods.tsx";
@@ -55,6 +57,8 @@ function Argument({ finding, open }: { readonly finding: Finding; readonly open:
       </p>
       <Numbers lines={finding.numbers} />
       {finding.station === "tables" && <Problems analysis={open.analysis} />}
+      {finding.station === "tables" && <SetAsideList />}
+      {finding.station === "tables" && <KeptPart />}
       <Weaknesses weaknesses={finding.weaknesses} />
       <Methods methods={finding.methods} />
       <Choices analysis={open.analysis} station={finding.station} />

@@ -1,4 +1,5 @@
 import { carriedFaces } from "../faces.ts";
+import { handOver } from "../hand-over.ts";
 import type { Opened } from "../state/page-context.ts";
 import type { Frame } from "../state/page-state.ts";
 import { viewOf } from "../state/zoom.ts";
@@ -12,10 +13,5 @@ export async function downloadPlate({ analysis, focus }: Opened, frame: Frame | 
   ]);
   const drawing = drawingOf(focus, analysis, { ...viewOf(focus, frame, analysis), fontFaces });
   if (drawing === undefined) throw new Error("downloadPlate: expected a plate in view, got none");
-  const address = URL.createObjectURL(new Blob([renderPlate(drawing.element)], { type: "image/svg+xml" }));
-  const link = document.createElement("a");
-  link.href = address;
-  link.download = `${drawing.id}.svg`;
-  link.click();
-  setTimeout(() => URL.revokeObjectURL(address), 10_000);
+  handOver(`${drawing.id}.svg`, renderPlate(drawing.element), "image/svg+xml");
 }

@@ -4,6 +4,7 @@ import { heightOf } from "./level.ts";
 import type { Opened, PageContents } from "./page-context.ts";
 import { SCALES, STATIONS } from "./place.ts";
 import { scaleTitle } from "./scale-title.ts";
+import { tableActions } from "./table-actions.ts";
 import { moveFrame } from "./zoom.ts";
 
 /** One thing a person can do: menus, keys and the Go to list all read it from here. */
@@ -11,14 +12,21 @@ export interface Action {
   readonly id: string;
   readonly label: string;
   readonly group: string;
-  /** The key, as `event.key` names it; with no modifier, outside of fields. */
+  /** The key outside of fields, as `event.key` names it, or `Control+` and that. */
   readonly shortcut?: string;
+  readonly otherShortcut?: string;
   readonly isAvailable: boolean;
   readonly act: () => void;
 }
 
 export function actionsOf(page: PageContents): readonly Action[] {
-  return [...stationActions(page), ...plateActions(page), ...focusActions(page), ...pageActions(page)];
+  return [
+    ...stationActions(page),
+    ...plateActions(page),
+    ...tableActions(page),
+    ...focusActions(page),
+    ...pageActions(page),
+  ];
 }
 
 function stationActions({ go, state, open }: PageContents): Action[] {

@@ -1,6 +1,7 @@
 import { createContext, type Dispatch, useContext } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Finding } from "../../report/findings/finding.ts";
+import type { Keeping } from "../keeping/use-keeping.ts";
 import type { OpenStudy } from "../study/use-study.ts";
 import type { Focus } from "./focus.ts";
 import type { PageEvent, PageState } from "./page-state.ts";
@@ -13,6 +14,7 @@ export interface PageContents {
   /** Goes to a place; what is not named stays. */
   readonly go: (change: Partial<Place>) => void;
   readonly study: OpenStudy;
+  readonly keeping: Keeping;
   /** Absent until a first study has been worked out. */
   readonly open?: Opened;
 }

@@ -1,3 +1,4 @@
+import { allUndone, type EditStep, type History, redone, undone, withStep } from "../tables/history.ts";
 import type { Level } from "./level.ts";
 import type { Place } from "./place.ts";
 
@@ -25,6 +26,8 @@ export interface PageState {
   readonly isGoToOpen: boolean;
   readonly theme: Theme;
   readonly work: Work;
+  /** Every edit of the study's tables. */
+  readonly history: History;
 }
 
 export type PageEvent =
@@ -36,6 +39,12 @@ export type PageEvent =
   | { readonly kind: "theme-set"; readonly theme: Theme }
   | { readonly kind: "work-began"; readonly name: string }
   | { readonly kind: "work-went-on"; readonly step: string; readonly share: number }
+  | { readonly kind: "study-opened"; readonly history: History }
+  | { readonly kind: "edited"; readonly step: EditStep }
+  | { readonly kind: "undone" }
+  | { readonly kind: "redone" }
+  | { readonly kind: "all-undone" }
+  | { readonly kind: "history-set"; readonly history: History }
   | { readonly kind: "work-ended" }
   | { readonly kind: "work-cancelled" }
   | { readonly kind: "work-failed"; readonly message: string }
@@ -61,8 +70,20 @@ export function step(state: PageState, event: PageEvent): PageState {
       return state.work.kind === "busy"
         ? { ...state, work: { ...state.work, step: event.step, share: event.share } }
         : state;
+    case "study-opened":
+      return { ...state, history: event.history, reading: undefined, frame: undefined };
+    case "edited":
+      return { ...state, history: withStep(state.history, event.step) };
+    case "undone":
+      return { ...state, history: undone(state.history) };
+    case "redone":
+      return { ...state, history: redone(state.history) };
+    case "all-undone":
+      return { ...state, history: allUndone(state.history) };
+    case "history-set":
+      return { ...state, history: event.history };
     case "work-ended":
-      return { ...state, work: { kind: "idle" }, reading: undefined, frame: undefined };
+      return { ...state, work: { kind: "idle" } };
     case "work-cancelled":
       return state.work.kind === "busy"
         ? { ...state, work: { kind: "cancelled", name: state.work.name } }

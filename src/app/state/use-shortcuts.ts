@@ -1,7 +1,7 @@
 import { useEffect, useRef } from "react";
 import type { Action } from "./actions.ts";
 
-/** Acts on the keys of the actions, but never while a person writes, chooses from a list, or holds a modifier. */
+/** Acts on the keys of the actions, but never while a person writes or chooses from a list. */
 export function useShortcuts(actions: readonly Action[], openGoTo: () => void): void {
   const latest = useRef({ actions, openGoTo });
   useEffect(() => {
@@ -14,11 +14,11 @@ export function useShortcuts(actions: readonly Action[], openGoTo: () => void): 
         latest.current.openGoTo();
         return;
       }
-      if (event.ctrlKey || event.metaKey || event.altKey || event.defaultPrevented || takesKeys(event.target))
-        return;
-      const key = event.key === "=" ? "+" : event.key;
+      if (event.altKey || event.defaultPrevented || takesKeys(event.target)) return;
+      const key = keyName(event);
       const action = latest.current.actions.find(
-        ({ shortcut, isAvailable }) => shortcut === key && isAvailable,
+        ({ shortcut, otherShortcut, isAvailable }) =>
+          (shortcut === key || otherShortcut === key) && isAvailable,
       );
       if (action === undefined) return;
       event.preventDefault();
@@ -27,6 +27,12 @@ export function useShortcuts(actions: readonly Action[], openGoTo: () => void): 
     addEventListener("keydown", onKey);
     return () => removeEventListener("keydown", onKey);
   }, []);
+}
+
+/** The key as actions name it, with Control before it where that is held. */
+function keyName({ key, ctrlKey, metaKey, shiftKey }: KeyboardEvent): string {
+  if (!ctrlKey && !metaKey) return key === "=" ? "+" : key;
+  return `Control+${shiftKey ? "Shift+" : ""}${key.toLowerCase()}`;
 }
 
 const takesKeys = (target: EventTarget | null): boolean =>

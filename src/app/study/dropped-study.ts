@@ -22,7 +22,7 @@ export async function chosenStudy(chosen: readonly File[]): Promise<GivenStudy> 
   if (first === undefined) throw new NotAStudy("Nothing was given: drop a study folder, or its CSV files.");
   const folder = first.webkitRelativePath.split("/")[0];
   const own = chosen.filter((file) => file.webkitRelativePath.split("/").length <= 2 && !isHidden(file.name));
-  const name = folder || (own.length === 1 ? first.name.replace(/\.csv$/i, "") : "Dropped tables");
+  const name = folder || (own.length === 1 ? first.name.replace(/\.[^.]*$/, "") : "Dropped tables");
   return studyOf(name, await bytesByName(own));
 }
 

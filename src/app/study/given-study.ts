@@ -7,7 +7,8 @@ export interface GivenStudy {
 /** Said to the person who gave something that is no study. */
 export class NotAStudy extends Error {}
 
-const isTable = (file: string) => /\.csv$/i.test(file);
+/** Tables, or what tables are packed in. */
+const isTable = (file: string) => /\.(?:csv|tsv|tab|zip|xlsx|xlsm)$/i.test(file);
 
 /** Takes the study's own files: those of the top level, hidden ones and folders of results left alone. */
 export function studyOf(name: string, files: ReadonlyMap<string, Uint8Array>): GivenStudy {
@@ -15,9 +16,9 @@ export function studyOf(name: string, files: ReadonlyMap<string, Uint8Array>): G
     const held =
       files.size === 0
         ? "is empty"
-        : `holds ${files.size} ${files.size === 1 ? "file" : "files"}, none of them CSV`;
+        : `holds ${files.size} ${files.size === 1 ? "file" : "files"}, none of them a table`;
     throw new NotAStudy(
-      `${name} is not a study: it ${held}. A study is a folder of CSV tables, such as occurrences.csv and sections.csv, or those files themselves.`,
+      `${name} is not a study: it ${held}. A study is a folder of CSV tables, such as occurrences.csv and sections.csv, those files themselves, a workbook or a zip.`,
     );
   }
   return { name, files };

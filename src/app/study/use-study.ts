@@ -1,25 +1,45 @@
 import { type Dispatch, useEffect, useMemo, useRef, useState } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { Sheet } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
 import { pageRunner } from "../../run/page.ts";
+import { keptHistory, studyKey } from "../keeping/kept-studies.ts";
 import type { PageEvent } from "../state/page-state.ts";
+import { type History, heldEdits, NO_HISTORY } from "../tables/history.ts";
+import { desk } from "./desk.ts";
 import { type GivenStudy, NotAStudy } from "./given-study.ts";
 
 const startWorker = () =>
   new Worker(new URL("../../run/page-worker.ts", import.meta.url), { type: "module" });
 
+/** A study that is worked out: as it was given, its tables before any edit, and what its last analysis rests on. */
+export interface WorkedOut {
+  readonly given: GivenStudy;
+  /** Under which its edits are kept; undefined where this browser keeps nothing. */
+  readonly key: string | undefined;
+  /** The edits that were kept when it was opened. */
+  readonly opened: History;
+  readonly sheets: readonly Sheet[];
+  readonly history: History;
+  readonly analysis: Analysis;
+}
+
 export interface OpenStudy {
-  /** The last analysis that was worked out; it stays until the next one is. */
-  readonly analysis: Analysis | undefined;
+  /** The last study that was worked out; it stays until the next one is. */
+  readonly workedOut: WorkedOut | undefined;
   /** Loads a study and works it out; the latest request wins. */
   readonly open: (name: string, load: (signal: AbortSignal) => Promise<GivenStudy>) => void;
+  /** Works the open study out again with the edits that its history holds; never stands before a study being opened. */
+  readonly rework: (history: History) => void;
   readonly cancel: () => void;
 }
 
 export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
-  const [analysis, setAnalysis] = useState<Analysis>();
+  const [workedOut, setWorkedOut] = useState<WorkedOut>();
+  const latest = useRef<WorkedOut>(undefined);
   const runner = useMemo(() => pageRunner(startWorker), []);
   const current = useRef<AbortController>(undefined);
+  const isOpening = useRef(false);
 
   useEffect(
     () => () => {
@@ -29,36 +49,87 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
     [runner],
   );
 
-  const { open, cancel } = useMemo(() => {
-    const open: OpenStudy["open"] = (name, load) => {
+  const actions = useMemo(() => {
+    const begin = (name: string, work: (signal: AbortSignal) => Promise<WorkedOut>) => {
       current.current?.abort();
       const controller = new AbortController();
       current.current = controller;
       dispatch({ kind: "work-began", name });
-      void work(load, controller.signal).catch((error: unknown) => {
-        if (controller.signal.aborted) return;
-        dispatch({ kind: "work-failed", message: error instanceof Error ? error.message : String(error) });
-      });
+      return work(controller.signal).then(
+        (result) => {
+          if (controller.signal.aborted) return;
+          latest.current = result;
+          setWorkedOut(result);
+          if (isOpening.current) dispatch({ kind: "study-opened", history: result.history });
+          isOpening.current = false;
+          dispatch({ kind: "work-ended" });
+        },
+        (error: unknown) => {
+          if (controller.signal.aborted) return;
+          isOpening.current = false;
+          dispatch({ kind: "work-failed", message: error instanceof Error ? error.message : String(error) });
+        },
+      );
     };
-    const work = async (load: (signal: AbortSignal) => Promise<GivenStudy>, signal: AbortSignal) => {
-      const given = await load(signal);
+    const analyse = async (given: GivenStudy, signal: AbortSignal) => {
       const onProgress = sparingly((step, share) => {
         if (!signal.aborted) dispatch({ kind: "work-went-on", step, share });
       });
-      const result = await runner.analyse(given, { signal, onProgress });
-      if (signal.aborted) return;
+      const result = await runner.analyse({ name: given.name, files: given.files }, { signal, onProgress });
       if (result.study.sheets.length === 0)
         throw new NotAStudy(nothingRead(given.name, result.study.problems));
-      setAnalysis(result);
-      dispatch({ kind: "work-ended" });
+      return result;
+    };
+    const open: OpenStudy["open"] = (name, load) => {
+      isOpening.current = true;
+      void begin(name, async (signal) => {
+        const given = await load(signal);
+        const { key, history } = await keptWork(given);
+        if (heldEdits(history).length === 0) {
+          const analysis = await analyse(given, signal);
+          return { given, key, sheets: analysis.study.sheets, opened: history, history, analysis };
+        }
+        const sheets = await desk().sheets(given.files);
+        const files = await editedFiles(given, sheets, history);
+        const analysis = await analyse({ name: given.name, files }, signal);
+        return { given, key, sheets, opened: history, history, analysis };
+      });
+    };
+    const rework: OpenStudy["rework"] = (history) => {
+      const now = latest.current;
+      if (now === undefined || isOpening.current) return;
+      void begin(now.analysis.study.name, async (signal) => {
+        const files = await editedFiles(now.given, now.sheets, history);
+        const analysis = await analyse({ name: now.given.name, files }, signal);
+        return { ...now, history, analysis };
+      });
     };
     const cancel = () => {
       current.current?.abort();
+      isOpening.current = false;
       dispatch({ kind: "work-cancelled" });
     };
-    return { open, cancel };
+    return { open, rework, cancel };
   }, [dispatch, runner]);
-  return useMemo(() => ({ analysis, open, cancel }), [analysis, open, cancel]);
+  return useMemo(() => ({ workedOut, ...actions }), [workedOut, actions]);
+}
+
+/** What this browser kept of a study; a browser that keeps nothing is no hindrance. */
+async function keptWork(given: GivenStudy): Promise<Pick<WorkedOut, "key" | "history">> {
+  try {
+    const key = await studyKey(given);
+    return { key, history: (key && (await keptHistory(key))) || NO_HISTORY };
+  } catch {
+    return { key: undefined, history: NO_HISTORY };
+  }
+}
+
+/** The files to work out: the edits made, each row with the number that it has on the page. */
+function editedFiles({ files }: GivenStudy, sheets: readonly Sheet[], history: History) {
+  const edits = heldEdits(history);
+  if (edits.length === 0) return files;
+  const forms = sheets.map(({ file, headers, dialect }) => ({ file, headers, dialect }));
+  return desk().edited(files, edits, { forms, keepsRowNumbers: true });
 }
 
 /** Lets through a new step, or one more hundredth of the same. */

@@ -1,4 +1,4 @@
-import { rowAt } from "./patch-csv.ts";
+import { rowAt, unquoted } from "./patch-csv.ts";
 
 const needsQuotes = /["\t\r\n]/;
 
@@ -31,6 +31,3 @@ function rowsOf(text: string): readonly (readonly string[])[] {
     from = next;
   }
 }
-
-const unquoted = (cell: string): string =>
-  /^"(?:[^"]|"")*"$/.test(cell) ? cell.slice(1, -1).replaceAll('""', '"') : cell;

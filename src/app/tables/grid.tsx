@@ -1,12 +1,15 @@
 import { type ReactElement, useEffect, useMemo, useRef } from "react";
-import type { Problem } from "../../core/study/problem.ts";
-import { cellKey, problemsByCell, type ShownTable } from "./shown-table.ts";
+import { GridHead } from "./grid-head.tsx";
+import { cellId, GridRow } from "./grid-row.tsx";
+import type { EditStep } from "./history.ts";
+import { blockOf, type Selection } from "./selection.ts";
+import { problemsByCell, type ShownTable, type Sorting } from "./shown-table.ts";
 import styles from "./tables.module.css";
+import { useGrid } from "./use-grid.ts";
 import { useWindow } from "./use-window.ts";
 
 const ROW_HEIGHT = 26;
-/** A cell shows this much of its text; the rest stays in the file. */
-const LONGEST_CELL = 300;
+const HEAD_HEIGHT = 31;
 const WIDEST_COLUMN = 40;
 
 interface GridProps {
@@ -15,62 +18,78 @@ interface GridProps {
   readonly places: readonly number[];
   /** The row to bring into view, as a spreadsheet counts. */
   readonly row?: number;
+  readonly selection: Selection;
+  readonly select: (selection: Selection) => void;
+  readonly edit: (step: EditStep) => void;
+  readonly tell: (words: string) => void;
+  readonly sort?: Sorting;
+  readonly sortBy: (column: number) => void;
 }
 
-/** A table of any length: only the rows in view are drawn. */
-export function Grid({ table, places, row }: GridProps): ReactElement {
-  const frame = useRef<HTMLDivElement>(null);
+/** A table of any length: only the rows in view are drawn. One tab stop; keys move within. */
+export function Grid(props: GridProps): ReactElement {
+  const { table, places, row, selection, select, sort, sortBy } = props;
+  const frame = useRef<HTMLElement>(null);
+  const grid = useRef<HTMLTableElement>(null);
   const { first, last } = useWindow(frame, { rowHeight: ROW_HEIGHT, count: places.length });
   const problems = useMemo(() => problemsByCell(table), [table]);
   const widths = useMemo(() => table.columns.map((_, column) => widthOf(table, column)), [table]);
+  const { active } = selection;
+  const activeIndex = places.indexOf(active.place);
+  const pageRows = () =>
+    Math.max(1, Math.floor(((frame.current?.clientHeight ?? 0) - HEAD_HEIGHT) / ROW_HEIGHT) - 1);
+  const view = { places, columns: table.columns.length };
+  const { editor, handlers } = useGrid(grid, { ...props, view, pageRows });
+  const block = blockOf(selection, places);
 
+  useSoughtRow({ row, table, places, frame, select });
   useEffect(() => {
-    const place = places.findIndex((index) => table.rowNumbers[index] === row);
-    if (row === undefined || place < 0) return;
-    frame.current?.scrollTo({ top: Math.max(0, (place - 4) * ROW_HEIGHT) });
-  }, [row, places, table]);
+    if (activeIndex >= 0 && grid.current?.contains(document.activeElement))
+      bringIntoView(frame.current, { index: activeIndex, column: active.column, widths });
+  }, [activeIndex, active.column, widths]);
 
   return (
-    // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- the keyboard scrolls it
-    <section ref={frame} className={styles.frame} tabIndex={0} aria-label={`Table ${table.title}`}>
-      <table className={styles.grid} aria-rowcount={places.length + 1}>
+    <section ref={frame} className={styles.frame} aria-label={`Table ${table.title}`}>
+      <table
+        ref={grid}
+        // oxlint-disable-next-line jsx-a11y/no-noninteractive-element-to-interactive-role -- a table that takes keys is a grid
+        role="grid"
+        className={styles.grid}
+        tabIndex={0}
+        aria-label={`${table.title}, Escape then Tab leaves it`}
+        aria-rowcount={places.length + 1}
+        aria-colcount={table.columns.length + 1}
+        aria-multiselectable="true"
+        aria-activedescendant={
+          activeIndex >= first && activeIndex < last ? cellId(active.place, active.column) : undefined
+        }
+        {...handlers}
+      >
         <colgroup>
           <col style={{ width: "6ch" }} />
           {widths.map((width, column) => (
             <col key={`${column}`} style={{ width: `calc(${width}ch + 18px)` }} />
           ))}
         </colgroup>
-        <thead>
-          <tr aria-rowindex={1}>
-            <th scope="col" className={styles.rowNumber}>
-              <span className={styles.said}>Row</span>
-            </th>
-            {table.columns.map(({ header, meaning, isNumber }, column) => (
-              <th
-                key={`${column}`}
-                scope="col"
-                title={meaning}
-                className={isNumber ? styles.number : undefined}
-              >
-                <ProblemSign problems={problems.get(cellKey(1, column))} />
-                {short(header)}
-                {meaning !== header && !meaning.includes(" ") && <small> → {meaning}</small>}
-              </th>
-            ))}
-          </tr>
-        </thead>
+        <GridHead table={table} problems={problems} sort={sort} sortBy={sortBy} />
         <tbody>
           <Gap rows={first} />
-          {places.slice(first, last).map((place, index) => (
-            <GridRow
-              key={place}
-              table={table}
-              place={place}
-              problems={problems}
-              isSought={table.rowNumbers[place] === row}
-              rowIndex={first + index + 2}
-            />
-          ))}
+          {places.slice(first, last).map((place, at) => {
+            const index = first + at;
+            return (
+              <GridRow
+                key={place}
+                table={table}
+                place={place}
+                problems={problems}
+                isSought={table.rowNumbers[place] === row}
+                rowIndex={index + 2}
+                selected={index >= block.rows[0] && index <= block.rows[1] ? block.columns : undefined}
+                activeColumn={index === activeIndex ? active.column : undefined}
+                editor={index === activeIndex ? editor : undefined}
+              />
+            );
+          })}
           <Gap rows={places.length - last} />
         </tbody>
       </table>
@@ -78,43 +97,50 @@ export function Grid({ table, places, row }: GridProps): ReactElement {
   );
 }
 
-interface GridRowProps {
-  readonly table: ShownTable;
-  readonly place: number;
-  readonly problems: ReadonlyMap<string, readonly Problem[]>;
-  readonly isSought: boolean;
-  readonly rowIndex: number;
+interface Sought extends Pick<GridProps, "row" | "table" | "places" | "select"> {
+  readonly frame: React.RefObject<HTMLElement | null>;
 }
 
-function GridRow({ table, place, problems, isSought, rowIndex }: GridRowProps): ReactElement {
-  const row = table.rowNumbers[place] ?? 0;
-  const cells = table.rows[place] ?? [];
-  return (
-    <tr
-      aria-rowindex={rowIndex}
-      className={isSought ? styles.sought : undefined}
-      aria-current={isSought || undefined}
-    >
-      <th scope="row" className={styles.rowNumber}>
-        <ProblemSign problems={problems.get(cellKey(row, -1))} />
-        {row}
-      </th>
-      {table.columns.map(({ isNumber, meaning, header }, column) => {
-        const own = problems.get(cellKey(row, column));
-        const name = [isNumber && styles.number, own && styles[worst(own)]].filter(Boolean).join(" ");
-        return (
-          <td key={`${column}`} className={name || undefined}>
-            <ProblemSign problems={own} />
-            {meaning === "taxon" || header === "taxon" ? (
-              <i>{short(cells[column] ?? "")}</i>
-            ) : (
-              short(cells[column] ?? "")
-            )}
-          </td>
-        );
-      })}
-    </tr>
-  );
+/** Goes to the row that the address names, once for each time it names another. */
+function useSoughtRow({ row, table, places, frame, select }: Sought): void {
+  const found = useRef<number>(undefined);
+  useEffect(() => {
+    if (row === found.current) return;
+    const index = places.findIndex((place) => table.rowNumbers[place] === row);
+    const place = places[index];
+    if (row !== undefined && place === undefined) return;
+    found.current = row;
+    if (place === undefined) return;
+    frame.current?.scrollTo({ top: Math.max(0, (index - 4) * ROW_HEIGHT) });
+    const problem = table.problems.find((problem) => problem.row === row);
+    const column = table.columns.findIndex(
+      ({ header, meaning }) => problem !== undefined && [header, meaning].includes(problem.column ?? ""),
+    );
+    const cell = { place, column: Math.max(0, column) };
+    select({ anchor: cell, active: cell });
+  }, [row, table, places, frame, select]);
+}
+
+interface Shown {
+  readonly index: number;
+  readonly column: number;
+  readonly widths: readonly number[];
+}
+
+/** Scrolls only as far as the cell needs, out from under the header and the row numbers. */
+function bringIntoView(frame: HTMLElement | null, { index, column, widths }: Shown): void {
+  if (frame === null) return;
+  const top = index * ROW_HEIGHT;
+  const room = frame.clientHeight - HEAD_HEIGHT - ROW_HEIGHT;
+  if (top < frame.scrollTop) frame.scrollTop = top;
+  else if (top > frame.scrollTop + room) frame.scrollTop = top - room;
+  const headers = [...frame.querySelectorAll<HTMLElement>("thead th")];
+  const [numbers, header] = [headers[0], headers[column + 1]];
+  if (numbers === undefined || header === undefined || widths.length === 0) return;
+  const left = headers.slice(0, column + 1).reduce((sum, { offsetWidth }) => sum + offsetWidth, 0);
+  if (left - numbers.offsetWidth < frame.scrollLeft) frame.scrollLeft = left - numbers.offsetWidth;
+  else if (left + header.offsetWidth > frame.scrollLeft + frame.clientWidth)
+    frame.scrollLeft = left + header.offsetWidth - frame.clientWidth;
 }
 
 /** Stands for the rows that are not drawn. */
@@ -122,33 +148,10 @@ function Gap({ rows }: { readonly rows: number }): ReactElement | null {
   return rows > 0 ? <tr aria-hidden="true" style={{ height: rows * ROW_HEIGHT }} /> : null;
 }
 
-function ProblemSign({
-  problems,
-}: {
-  readonly problems: readonly Problem[] | undefined;
-}): ReactElement | null {
-  if (problems === undefined || problems.length === 0) return null;
-  const words = problems.map(({ expected, mend }) => `expected ${expected}. ${mend}`).join(" ");
-  return (
-    <span className={styles.sign} title={words}>
-      <span aria-hidden="true">{worst(problems) === "error" ? "△ " : "○ "}</span>
-      <span className={styles.said}>
-        {worst(problems)}: {words}{" "}
-      </span>
-    </span>
-  );
-}
-
-const worst = (problems: readonly Problem[]): Problem["severity"] =>
-  problems.some(({ severity }) => severity === "error") ? "error" : "caution";
-
-const short = (text: string): string =>
-  text.length > LONGEST_CELL ? `${text.slice(0, LONGEST_CELL)}…` : text;
-
 function widthOf({ columns, rows }: ShownTable, column: number): number {
   const { header, meaning } = columns[column] ?? { header: "", meaning: "" };
   const label =
     meaning === header || meaning.includes(" ") ? header.length : header.length + meaning.length + 3;
   const longest = rows.slice(0, 400).reduce((most, row) => Math.max(most, row[column]?.length ?? 0), 0);
-  return Math.min(WIDEST_COLUMN, Math.max(label + 1, longest, 3));
+  return Math.min(WIDEST_COLUMN, Math.max(label + 3, longest, 3));
 }

@@ -15,20 +15,20 @@ export interface History {
 export const NO_HISTORY: History = { steps: [], held: 0 };
 
 /** A step more; what had been undone is gone. A step that changes nothing is none. */
-export const withStep = ({ steps, held }: History, step: EditStep): History =>
+export const withStep = (history: History, step: EditStep): History =>
   step.edits.every((edit) => edit.kind === "cell" && edit.was === edit.now)
-    ? { steps, held }
-    : { steps: [...steps.slice(0, held), step], held: held + 1 };
+    ? history
+    : { steps: [...history.steps.slice(0, history.held), step], held: history.held + 1 };
 
-export const undone = ({ steps, held }: History): History => ({ steps, held: Math.max(0, held - 1) });
+export const undone = (history: History): History =>
+  history.held === 0 ? history : { ...history, held: history.held - 1 };
 
-export const redone = ({ steps, held }: History): History => ({
-  steps,
-  held: Math.min(steps.length, held + 1),
-});
+export const redone = (history: History): History =>
+  history.held === history.steps.length ? history : { ...history, held: history.held + 1 };
 
 /** The tables as they were given; every step can be done again. */
-export const allUndone = ({ steps }: History): History => ({ steps, held: 0 });
+export const allUndone = (history: History): History =>
+  history.held === 0 ? history : { ...history, held: 0 };
 
 export const heldEdits = ({ steps, held }: History): readonly Edit[] =>
   steps.slice(0, held).flatMap(({ edits }) => edits);

@@ -62,6 +62,10 @@ function patchedRow(
 const written = (cell: string, delimiter: string): string =>
   cell.includes(delimiter) || /["\r\n]|^\s|\s$/.test(cell) ? `"${cell.replaceAll('"', '""')}"` : cell;
 
+/** A cell without the quotes of its writing. */
+export const unquoted = (cell: string): string =>
+  /^"(?:[^"]|"")*"$/.test(cell) ? cell.slice(1, -1).replaceAll('""', '"') : cell;
+
 /** One row of a delimited text, from a place in it. */
 export function rowAt(text: string, from: number, delimiter: string): CsvRow {
   const spans: number[] = [];

@@ -1,6 +1,8 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { Sheet } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
 import { resultTables } from "../../report/tables/index.ts";
+import { NO_EDITS, type TableEdits } from "./edits.ts";
 
 /** A table as the grid shows it: a sheet that was read, or a table of results. */
 export interface ShownTable {
@@ -12,6 +14,11 @@ export interface ShownTable {
   /** As a spreadsheet counts them, the header being row 1. */
   readonly rowNumbers: readonly number[];
   readonly problems: readonly Problem[];
+  readonly isEditable: boolean;
+  /** Why each row that is set aside is. */
+  readonly setAside: ReadonlyMap<number, string>;
+  /** The number that the next added row gets. */
+  readonly nextRow: number;
 }
 
 export interface ShownColumn {
@@ -21,19 +28,56 @@ export interface ShownColumn {
   readonly isNumber: boolean;
 }
 
-export function studyTables({ study }: Analysis): readonly ShownTable[] {
-  return study.sheets.map(({ file, headers, columns, rows, rowNumbers }) => ({
+/** The study's tables with the edits made, marked with the problems of the last analysis. */
+export function studyTables(
+  sheets: readonly Sheet[],
+  edits: ReadonlyMap<string, TableEdits>,
+  problems: readonly Problem[],
+): readonly ShownTable[] {
+  return sheets.map((sheet) =>
+    studyTable(
+      sheet,
+      edits.get(sheet.file) ?? NO_EDITS,
+      problems.filter(({ file }) => file === sheet.file),
+    ),
+  );
+}
+
+function studyTable(
+  { file, headers, columns, rows: read, rowNumbers: readNumbers }: Sheet,
+  { cells, added, setAside }: TableEdits,
+  problems: readonly Problem[],
+): ShownTable {
+  const rowNumbers = added.length === 0 ? readNumbers : [...readNumbers, ...added];
+  const told = problems.reduce((most, { row = 0 }) => Math.max(most, row), 1);
+  return {
     id: file,
     title: file,
     columns: headers.map((header, index) => ({
       header,
       meaning: columns[index] ?? "kept, not used",
-      isNumber: holdsNumbers(rows.slice(0, 200).map((row) => row[index] ?? "")),
+      isNumber: holdsNumbers(read.slice(0, 200).map((row) => row[index] ?? "")),
     })),
-    rows,
+    rows: cells.size === 0 && added.length === 0 ? read : editedRows(read, rowNumbers, { cells, headers }),
     rowNumbers,
-    problems: study.problems.filter((problem) => problem.file === file),
-  }));
+    problems,
+    isEditable: true,
+    setAside,
+    nextRow: Math.max(rowNumbers.at(-1) ?? 1, told) + 1,
+  };
+}
+
+function editedRows(
+  read: readonly (readonly string[])[],
+  rowNumbers: readonly number[],
+  { cells, headers }: Pick<TableEdits, "cells"> & Pick<Sheet, "headers">,
+): readonly (readonly string[])[] {
+  return rowNumbers.map((number, place) => {
+    const changed = cells.get(number);
+    const row = read[place];
+    if (changed === undefined && row !== undefined) return row;
+    return headers.map((_, column) => changed?.get(column) ?? row?.[column] ?? "");
+  });
 }
 
 function holdsNumbers(cells: readonly string[]): boolean {
@@ -53,6 +97,9 @@ export function shownResults(analysis: Analysis): readonly ShownTable[] {
     rows: rows.map((row) => row.map((cell) => (cell === undefined ? "" : String(cell)))),
     rowNumbers: rows.map((_, index) => index + 2),
     problems: [],
+    isEditable: false,
+    setAside: new Map(),
+    nextRow: rows.length + 2,
   }));
 }
 
@@ -71,10 +118,49 @@ export function problemsByCell({ columns, problems }: ShownTable): ReadonlyMap<s
 
 export const cellKey = (row: number, column: number): string => `${row}:${column}`;
 
-/** Places of the rows that hold the words in some cell; all of them where nothing is looked for. */
-export function rowsWith({ rows }: ShownTable, words: string): readonly number[] {
+export interface RowChoice {
+  readonly words: string;
+  readonly onlyProblems: boolean;
+  readonly sort?: Sorting;
+}
+
+/** An order of rows by a column, as they stood when it was asked for: rows do not jump while a person types. */
+export interface Sorting {
+  readonly column: number;
+  readonly isDown: boolean;
+  readonly places: readonly number[];
+}
+
+/** Places of the rows to show: those that hold the words in some cell, those with a problem, in the order asked for. */
+export function chosenRows(table: ShownTable, { words, onlyProblems, sort }: RowChoice): readonly number[] {
   const sought = words.trim().toLowerCase();
-  const places = [...rows.keys()];
-  if (sought === "") return places;
-  return places.filter((place) => rows[place]?.some((cell) => cell.toLowerCase().includes(sought)));
+  const places = ordered(table, sort);
+  if (sought === "" && !onlyProblems) return places;
+  const troubled = new Set(table.problems.map(({ row }) => row));
+  return places.filter(
+    (place) =>
+      (!onlyProblems || troubled.has(table.rowNumbers[place])) &&
+      (sought === "" || table.rows[place]?.some((cell) => cell.toLowerCase().includes(sought))),
+  );
+}
+
+function ordered({ rows }: ShownTable, sort: Sorting | undefined): readonly number[] {
+  if (sort === undefined) return [...rows.keys()];
+  const kept = sort.places.filter((place) => place < rows.length);
+  return [...kept, ...Array.from({ length: rows.length - kept.length }, (_, at) => kept.length + at)];
+}
+
+/** Numbers by size before texts by letter, blanks last in either direction. */
+export function sortedBy({ rows }: ShownTable, column: number, isDown: boolean): Sorting {
+  const sign = isDown ? -1 : 1;
+  const keys = rows.map((row) => (row[column] ?? "").trim());
+  const numbers = keys.map((key) => (key === "" ? Number.NaN : Number(key.replace(",", "."))));
+  const compare = (a: number, b: number): number => {
+    const [one, other] = [keys[a] ?? "", keys[b] ?? ""];
+    if (one === "" || other === "") return Number(one === "") - Number(other === "");
+    const [x, y] = [numbers[a] ?? Number.NaN, numbers[b] ?? Number.NaN];
+    if (Number.isNaN(x) !== Number.isNaN(y)) return sign * (Number.isNaN(x) ? 1 : -1);
+    return sign * (Number.isNaN(x) ? one.localeCompare(other) : x - y);
+  };
+  return { column, isDown, places: [...rows.keys()].toSorted(compare) };
 }

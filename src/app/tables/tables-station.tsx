@@ -1,31 +1,78 @@
-import { type ReactElement, useDeferredValue, useMemo } from "react";
+import { type ReactElement, useDeferredValue, useMemo, useState } from "react";
 import { plural } from "../../report/wordings/words.ts";
 import { usePage } from "../state/page-context.ts";
+import { editsByFile } from "./edits.ts";
 import { Grid } from "./grid.tsx";
-import { rowsWith, type ShownTable, shownResults, studyTables } from "./shown-table.ts";
+import { heldEdits } from "./history.ts";
+import { FIRST_CELL } from "./selection.ts";
+import {
+  chosenRows,
+  type ShownTable,
+  type Sorting,
+  shownResults,
+  sortedBy,
+  studyTables,
+} from "./shown-table.ts";
 import { TableTabs } from "./table-tabs.tsx";
+import { TableTools } from "./table-tools.tsx";
 import styles from "./tables.module.css";
 
-/** The study's tables as they were read, and the result tables, each problem marked at its cell. */
+/** The study's tables to work in, and the result tables, each problem marked at its cell. */
 export function TablesStation(): ReactElement | null {
-  const { state, go, open } = usePage();
-  const { place } = state;
+  const { state, study, open } = usePage();
+  const { place, history } = state;
+  const sheets = study.workedOut?.sheets;
   const analysis = open?.analysis;
-  const sheets = useMemo(() => (analysis === undefined ? [] : studyTables(analysis)), [analysis]);
+  const edits = useMemo(() => editsByFile(heldEdits(history)), [history]);
+  const tables = useMemo(
+    () =>
+      sheets === undefined || analysis === undefined
+        ? []
+        : studyTables(sheets, edits, analysis.study.problems),
+    [sheets, edits, analysis],
+  );
   const results = useMemo(() => (analysis === undefined ? [] : shownResults(analysis)), [analysis]);
-  const table = [...sheets, ...results].find(({ id }) => id === place.table) ?? sheets[0];
-  const find = useDeferredValue(place.find ?? "");
-  const found = useMemo(() => (table === undefined ? [] : rowsWith(table, find)), [table, find]);
+  const table = [...tables, ...results].find(({ id }) => id === place.table) ?? tables[0];
   if (table === undefined) return null;
   return (
     <div className={styles.station}>
       <TableTabs
         groups={[
-          ["Study", sheets],
+          ["Study", tables],
           ["Results", results],
         ]}
         current={table.id}
       />
+      <WorkedTable key={table.id} table={table} />
+    </div>
+  );
+}
+
+function WorkedTable({ table }: { readonly table: ShownTable }): ReactElement {
+  const { state, go, dispatch } = usePage();
+  const { place } = state;
+  const [selection, select] = useState(FIRST_CELL);
+  const [wantsProblems, setOnlyProblems] = useState(false);
+  const onlyProblems = wantsProblems && table.problems.length > 0;
+  const [sort, setSort] = useState<Sorting>();
+  const [told, tell] = useState("");
+  const words = useDeferredValue(place.find ?? "");
+  const places = useMemo(
+    () => chosenRows(table, { words, onlyProblems, sort }),
+    [table, words, onlyProblems, sort],
+  );
+  const sortBy = (column: number | undefined) =>
+    setSort(
+      column === undefined ? undefined : sortedBy(table, column, column === sort?.column && !sort.isDown),
+    );
+  const goToNew = () => {
+    const cell = { place: table.rows.length, column: 0 };
+    select({ anchor: cell, active: cell });
+    setOnlyProblems(false);
+    go({ table: table.id, row: table.nextRow, find: undefined });
+  };
+  return (
+    <>
       <div className={styles.finder}>
         <label>
           Find{" "}
@@ -36,15 +83,21 @@ export function TablesStation(): ReactElement | null {
             onChange={(event) => go({ find: event.currentTarget.value, table: table.id, row: undefined })}
           />
         </label>
-        <output>{countWords(table, found.length)}</output>
+        <TableTools
+          {...{ table, places, selection, onlyProblems, sort, sortBy, tell, goToNew }}
+          choose={setOnlyProblems}
+        />
+        <output>
+          {countWords(table, places.length)}
+          {told !== "" && ` · ${told}`}
+        </output>
       </div>
       <Grid
-        key={table.id}
-        table={table}
-        places={found}
+        {...{ table, places, selection, select, sort, sortBy, tell }}
         row={place.table === table.id ? place.row : undefined}
+        edit={(step) => dispatch({ kind: "edited", step })}
       />
-    </div>
+    </>
   );
 }
 

@@ -4,7 +4,7 @@ import { describeResource, listOf, property, type UnreadPart } from "./described
 import type { DeclaredDialect } from "./dialect/declared.ts";
 
 /** The property of a resource that lists the columns in which `writeCsv` put apostrophes. */
-const apostrophesProperty = "lastbed:apostrophes";
+export const apostrophesProperty = "lastbed:apostrophes";
 
 /** A table in a folder, as datapackage.json tells it. */
 export interface PackageResource {

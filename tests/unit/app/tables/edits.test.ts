@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import * as fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { applyEdits, type Edit, type TableForm } from "../../../../src/app/tables/edits.ts";
 import { patchCsv } from "../../../../src/app/tables/patch-csv.ts";
@@ -11,6 +11,7 @@ const form: TableForm = {
   dialect: { encoding: "UTF-8", delimiter: ",", decimal: "point", missing: [], headerRows: [1], notes: [] },
 };
 const bytes = (text: string) => new TextEncoder().encode(text);
+const add = (row: number): Edit => ({ kind: "row-added", file: FILE, row });
 const cell = (row: number, column: number, now: string, was = ""): Edit => ({
   kind: "cell",
   file: FILE,
@@ -40,7 +41,6 @@ describe("edits of a table's file", () => {
   });
 
   it("add rows below, beyond blank ones too", () => {
-    const add = (row: number): Edit => ({ kind: "row-added", file: FILE, row });
     expect(edited("a,b,c\n1,2,3\n", [add(3), cell(3, 1, "x"), add(4), cell(4, 0, "y")])).toBe(
       "a,b,c\n1,2,3\n,x,\ny,,\n",
     );
@@ -95,7 +95,7 @@ const ends = fc.constantFrom("\n", "\r\n", "\r");
 describe("any table", () => {
   it("reads back with the one cell changed and every other as it was", () => {
     fc.assert(
-      fc.property(table, ends, plain, fc.nat(), fc.nat(), (rows, end, now, r, c) => {
+      fc.property(table, ends, plain, fc.tuple(fc.nat(), fc.nat()), (rows, end, now, [r, c]) => {
         const text = rows.map((row) => row.map(quoted).join(",") + end).join("");
         const [row, column] = [(r % rows.length) + 1, c % 3];
         const patched = patchCsv(text, new Map([[row, { kind: "cells", cells: new Map([[column, now]]) }]]));

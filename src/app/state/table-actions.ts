@@ -1,0 +1,50 @@
+import { giveOutStudy } from "../study/give-out.ts";
+import type { Action } from "./actions.ts";
+import type { PageContents } from "./page-context.ts";
+
+/** What can be done with the edits of the tables, from anywhere. */
+export function tableActions({ state, dispatch, go, study }: PageContents): Action[] {
+  const { steps, held } = state.history;
+  const [last, next] = [steps[held - 1], steps[held]];
+  const tables = { group: "Tables" };
+  const shown = (file: string | undefined) => go({ station: "tables", table: file, find: undefined });
+  return [
+    {
+      ...tables,
+      id: "undo",
+      label: last === undefined ? "Undo" : `Undo ${last.label}`,
+      shortcut: "Control+z",
+      isAvailable: last !== undefined,
+      act: () => {
+        dispatch({ kind: "undone" });
+        if (state.place.station === "tables") shown(last?.edits[0]?.file);
+      },
+    },
+    {
+      ...tables,
+      id: "redo",
+      label: next === undefined ? "Redo" : `Redo ${next.label}`,
+      shortcut: "Control+y",
+      otherShortcut: "Control+Shift+z",
+      isAvailable: next !== undefined,
+      act: () => {
+        dispatch({ kind: "redone" });
+        if (state.place.station === "tables") shown(next?.edits[0]?.file);
+      },
+    },
+    {
+      ...tables,
+      id: "undo-all",
+      label: "Back to the tables as they were",
+      isAvailable: held > 0,
+      act: () => dispatch({ kind: "all-undone" }),
+    },
+    {
+      ...tables,
+      id: "give-out-study",
+      label: "Save the study as a zip",
+      isAvailable: study.workedOut !== undefined,
+      act: () => study.workedOut && void giveOutStudy(study.workedOut, state.history),
+    },
+  ];
+}
