@@ -1,7 +1,7 @@
 import { acceptedName, hasNoRecovery, isWithin } from "../finds.ts";
 import { formatGiven } from "../heights.ts";
 import { sameLevelM } from "../legs.ts";
-import type { Occurrence, Section, Study, Taxon } from "../model.ts";
+import type { Occurrence, Origin, Section, Study, Taxon } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import { excerpt } from "../problem-wordings.ts";
 import { checkNames } from "./check-names.ts";
@@ -42,20 +42,30 @@ function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
 
 function checkEnds(section: Section, assembly: Assembly): void {
   const detail = `${formatGiven(section.bottomM, section)} to ${formatGiven(section.topM, section)}`;
-  for (const { heightM, origin } of [
-    ...section.samples,
-    ...section.occurrences,
-    ...section.measurements,
-    ...section.horizons,
-  ]) {
+  for (const { heightM, origin, column } of placesOf(section)) {
     if (heightM >= section.bottomM - sameLevelM && heightM <= section.topM + sameLevelM) continue;
     const found = formatGiven(heightM, section);
-    assembly.problems.addOnce(section.name, "outside-section", {
-      ...origin,
-      column: "position",
-      found,
-      detail,
-    });
+    assembly.problems.addOnce(section.name, "outside-section", { ...origin, column, found, detail });
+  }
+}
+
+/** Every level that a section's rows place, with the column that places it. */
+function* placesOf(section: Section): Generator<{
+  readonly heightM: number;
+  readonly origin: Origin;
+  readonly column: string;
+}> {
+  const { samples, occurrences, measurements, horizons, beds, publishedRanges } = section;
+  for (const list of [samples, occurrences, measurements, horizons])
+    for (const { heightM, origin } of list) yield { heightM, origin, column: "position" };
+  for (const { baseM, topM, origin } of beds) {
+    // A bed goes on beyond the section's end; only one that lies wholly outside is odd.
+    if (baseM > section.bottomM) yield { heightM: baseM, origin, column: "base" };
+    else yield { heightM: topM, origin, column: "top" };
+  }
+  for (const { firstM, lastM, origin } of publishedRanges) {
+    yield { heightM: firstM, origin, column: "first" };
+    yield { heightM: lastM, origin, column: "last" };
   }
 }
 

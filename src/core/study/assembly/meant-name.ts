@@ -8,7 +8,7 @@ export interface MeantName {
 }
 
 /** Looking for the nearest name costs time for each known name, so it ends after so many unknown ones. */
-const mostSought = 500;
+const mostSought = 100;
 
 /** Finds what unknown names are meant to be, each once. */
 export function meantNames(known: Iterable<string>): (written: string) => MeantName {

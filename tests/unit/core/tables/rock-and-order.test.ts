@@ -184,3 +184,27 @@ describe("the order of horizons", () => {
     expect(inTwo([...base, ...other], same)).toHaveLength(1);
   });
 });
+
+describe("beds and published ranges outside the section's declared ends", () => {
+  it("are told with the end that lies outside; a bed that goes on beyond them is not", () => {
+    const study = studyFrom({
+      "sections.csv": lines("section,axis,unit,bottom,top", "Orskel Ledge,depth,m,40,10"),
+      "beds.csv": lines(
+        "section,base,top,lithology",
+        "Orskel Ledge,42,12,marl",
+        "Orskel Ledge,12,9,marl",
+        "Orskel Ledge,9,8,marl",
+      ),
+      "published-ranges.csv": lines(
+        "section,taxon,first,last,horizons",
+        "Orskel Ledge,Velorites alta,41,20,5",
+        "Orskel Ledge,Velorites lata,40,10,5",
+      ),
+    });
+    expect(problemsOf(study, "outside-section")).toMatchObject([
+      { severity: "caution", file: "beds.csv", row: 4, column: "base", found: "9 m depth" },
+      { severity: "caution", file: "published-ranges.csv", row: 2, column: "first", found: "41 m depth" },
+    ]);
+    expect(study.sections[0].publishedRanges).toHaveLength(2);
+  });
+});
