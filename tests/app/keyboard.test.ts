@@ -48,7 +48,7 @@ describe.skipIf(findBrowser() === undefined)("the page by keyboard alone", () =>
     await tabTo(page, /^Section$/);
     await page.keyboard.press("ArrowDown");
     await page.waitForURL(/section=/);
-    expect(await finding(page)).not.toBe(before);
+    await expect.poll(() => finding(page)).not.toBe(before);
   });
 
   it("moves the reading line from the plate", async () => {

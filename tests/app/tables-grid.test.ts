@@ -68,6 +68,19 @@ describe.skipIf(findBrowser() === undefined)("the tables by keyboard", () => {
     await told.waitFor({ state: "detached" });
   });
 
+  it("mends by one key what has one mend alone", async () => {
+    const { page } = opened;
+    await press(page, "Control+Home", "End", "ArrowDown");
+    await page.keyboard.type("1.25 m");
+    await press(page, "Enter");
+    await page.locator("aside").getByRole("button", { name: "Write “1.25”" }).click();
+    await problems(page, "1.25 m").waitFor({ state: "detached" });
+    await grid(page).getByText("1.25", { exact: true }).waitFor();
+    await grid(page).focus();
+    await press(page, "Control+z", "Control+z", "ArrowUp");
+    expect(await activeText(page)).toBe("1");
+  });
+
   it("writes in a cell, gives up, and takes", async () => {
     const { page } = opened;
     await press(page, "Control+Home", "End", "F2", "Backspace", "7", "Escape");

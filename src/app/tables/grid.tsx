@@ -32,7 +32,8 @@ export function Grid(props: GridProps): ReactElement {
   const frame = useRef<HTMLElement>(null);
   const grid = useRef<HTMLTableElement>(null);
   const { first, last } = useWindow(frame, { rowHeight: ROW_HEIGHT, count: places.length });
-  const problems = useMemo(() => problemsByCell(table), [table]);
+  const { columns } = table;
+  const problems = useMemo(() => problemsByCell(columns, table.problems), [columns, table.problems]);
   const widths = useMemo(() => table.columns.map((_, column) => widthOf(table, column)), [table]);
   const { active } = selection;
   const activeIndex = places.indexOf(active.place);

@@ -1,8 +1,10 @@
 import { type ReactElement, useState } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
-import type { Problem } from "../../core/study/problem.ts";
+import type { Fix, Problem } from "../../core/study/problem.ts";
 import marginStyles from "../margin/margin.module.css";
 import { usePage } from "../state/page-context.ts";
+import { editsByFile } from "./edits.ts";
+import { heldEdits } from "./history.ts";
 import styles from "./tables.module.css";
 
 const SHOWN_AT_ONCE = 40;
@@ -20,6 +22,7 @@ export function Problems({ analysis }: { readonly analysis: Analysis }): ReactEl
         {sorted.slice(0, most).map((problem, place) => (
           <li key={`${place} ${problem.file} ${problem.row} ${problem.code}`}>
             <ProblemButton problem={problem} />
+            {problem.fix && <Mend fix={problem.fix} />}
           </li>
         ))}
       </ul>
@@ -29,6 +32,26 @@ export function Problems({ analysis }: { readonly analysis: Analysis }): ReactEl
         </button>
       )}
     </section>
+  );
+}
+
+/** Writes what is safe to write where a problem has one mend alone. */
+function Mend({ fix }: { readonly fix: Fix }): ReactElement | null {
+  const { state, dispatch, study } = usePage();
+  const sheet = study.workedOut?.sheets.find(({ file }) => file === fix.file);
+  const column = sheet?.headers.indexOf(fix.column) ?? -1;
+  if (sheet === undefined || column < 0) return null;
+  const mend = () => {
+    const edited = editsByFile(heldEdits(state.history)).get(fix.file)?.cells.get(fix.row)?.get(column);
+    const was = edited ?? sheet.rows[sheet.rowNumbers.indexOf(fix.row)]?.[column] ?? "";
+    const { file, row, now } = fix;
+    const label = `mending ${file}, row ${row}`;
+    dispatch({ kind: "edited", step: { label, edits: [{ kind: "cell", file, row, column, was, now }] } });
+  };
+  return (
+    <button type="button" className={styles.more} onClick={mend}>
+      {fix.now === "" ? "Empty the cell" : `Write “${fix.now}”`}
+    </button>
   );
 }
 

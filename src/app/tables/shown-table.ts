@@ -28,42 +28,52 @@ export interface ShownColumn {
   readonly isNumber: boolean;
 }
 
-/** The study's tables with the edits made, marked with the problems of the last analysis. */
-export function studyTables(
-  sheets: readonly Sheet[],
-  edits: ReadonlyMap<string, TableEdits>,
-  problems: readonly Problem[],
-): readonly ShownTable[] {
-  return sheets.map((sheet) =>
-    studyTable(
+/** A table as it was read, with what the last analysis says of it: all that no edit changes. */
+export type ReadTable = Pick<ShownTable, "columns" | "problems"> & {
+  readonly sheet: Sheet;
+  /** The last row that was read or told of. */
+  readonly lastRow: number;
+};
+
+export function readTables(sheets: readonly Sheet[], problems: readonly Problem[]): readonly ReadTable[] {
+  return sheets.map((sheet) => {
+    const { file, headers, columns, rows, rowNumbers } = sheet;
+    const own = problems.filter((problem) => problem.file === file);
+    return {
       sheet,
-      edits.get(sheet.file) ?? NO_EDITS,
-      problems.filter(({ file }) => file === sheet.file),
-    ),
-  );
+      columns: headers.map((header, index) => ({
+        header,
+        meaning: columns[index] ?? "kept, not used",
+        isNumber: holdsNumbers(rows.slice(0, 200).map((row) => row[index] ?? "")),
+      })),
+      problems: own,
+      lastRow: own.reduce((most, { row = 0 }) => Math.max(most, row), rowNumbers.at(-1) ?? 1),
+    };
+  });
 }
 
+/** The study's tables with the edits made, marked with the problems of the last analysis. */
+export const studyTables = (
+  tables: readonly ReadTable[],
+  edits: ReadonlyMap<string, TableEdits>,
+): readonly ShownTable[] => tables.map((table) => studyTable(table, edits.get(table.sheet.file) ?? NO_EDITS));
+
 function studyTable(
-  { file, headers, columns, rows: read, rowNumbers: readNumbers }: Sheet,
+  { sheet, columns, problems, lastRow }: ReadTable,
   { cells, added, setAside }: TableEdits,
-  problems: readonly Problem[],
 ): ShownTable {
+  const { file, headers, rows: read, rowNumbers: readNumbers } = sheet;
   const rowNumbers = added.length === 0 ? readNumbers : [...readNumbers, ...added];
-  const told = problems.reduce((most, { row = 0 }) => Math.max(most, row), 1);
   return {
     id: file,
     title: file,
-    columns: headers.map((header, index) => ({
-      header,
-      meaning: columns[index] ?? "kept, not used",
-      isNumber: holdsNumbers(read.slice(0, 200).map((row) => row[index] ?? "")),
-    })),
+    columns,
     rows: cells.size === 0 && added.length === 0 ? read : editedRows(read, rowNumbers, { cells, headers }),
     rowNumbers,
     problems,
     isEditable: true,
     setAside,
-    nextRow: Math.max(rowNumbers.at(-1) ?? 1, told) + 1,
+    nextRow: Math.max(lastRow, added.at(-1) ?? 0) + 1,
   };
 }
 
@@ -104,7 +114,10 @@ export function shownResults(analysis: Analysis): readonly ShownTable[] {
 }
 
 /** The problems of each cell, by row number and place of the column; -1 where the whole row is meant. */
-export function problemsByCell({ columns, problems }: ShownTable): ReadonlyMap<string, readonly Problem[]> {
+export function problemsByCell(
+  columns: readonly ShownColumn[],
+  problems: readonly Problem[],
+): ReadonlyMap<string, readonly Problem[]> {
   const byCell = new Map<string, Problem[]>();
   for (const problem of problems) {
     const place = columns.findIndex(

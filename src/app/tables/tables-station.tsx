@@ -7,6 +7,7 @@ import { heldEdits } from "./history.ts";
 import { FIRST_CELL } from "./selection.ts";
 import {
   chosenRows,
+  readTables,
   type ShownTable,
   type Sorting,
   shownResults,
@@ -24,13 +25,11 @@ export function TablesStation(): ReactElement | null {
   const sheets = study.workedOut?.sheets;
   const analysis = open?.analysis;
   const edits = useMemo(() => editsByFile(heldEdits(history)), [history]);
-  const tables = useMemo(
-    () =>
-      sheets === undefined || analysis === undefined
-        ? []
-        : studyTables(sheets, edits, analysis.study.problems),
-    [sheets, edits, analysis],
+  const read = useMemo(
+    () => (sheets === undefined || analysis === undefined ? [] : readTables(sheets, analysis.study.problems)),
+    [sheets, analysis],
   );
+  const tables = useMemo(() => studyTables(read, edits), [read, edits]);
   const results = useMemo(() => (analysis === undefined ? [] : shownResults(analysis)), [analysis]);
   const table = [...tables, ...results].find(({ id }) => id === place.table) ?? tables[0];
   if (table === undefined) return null;
