@@ -18,6 +18,6 @@ export async function giveOutStudy(study: WorkedOut, history: History): Promise<
 }
 
 function parts({ given, sheets, analysis }: WorkedOut, history: History) {
-  const forms = sheets.map(({ file, table, headers, dialect }) => ({ file, table, headers, dialect }));
-  return { files: given.files, edits: heldEdits(history), to: { name: analysis.study.name, forms } };
+  const to = { name: analysis.study.name, forms: sheets };
+  return { files: given.files, edits: heldEdits(history), to };
 }

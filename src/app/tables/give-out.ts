@@ -2,7 +2,7 @@ import type { Sheet } from "../../core/study/model.ts";
 import { tables } from "../../core/study/tables/index.ts";
 import { needsApostrophe, putApostrophe } from "../../core/tables/apostrophes.ts";
 import { baseName } from "../../core/tables/base-name.ts";
-import { decodeText } from "../../core/tables/csv.ts";
+import { decodeText, readWrittenCsv } from "../../core/tables/csv.ts";
 import {
   apostrophesProperty,
   type PackageResource,
@@ -11,15 +11,19 @@ import {
   writeDataPackage,
 } from "../../core/tables/data-package.ts";
 import { decodeBytes } from "../../core/tables/dialect/encoding.ts";
-import { applyEdits, type Edit, type TableForm } from "./edits.ts";
+import { writeCsv } from "../../core/tables/write-csv.ts";
+import { blockText } from "./clipboard.ts";
+import { applyEdits, type Edit, editsByFile, type TableForm } from "./edits.ts";
 import { encodeText } from "./encode-text.ts";
 import { patchCsv, type RowPatch, rowAt, unquoted } from "./patch-csv.ts";
 
 const PACKAGE = "datapackage.json";
+/** Goes along for people to read; as every README it is no table of the study. */
+const SET_ASIDE = "README.set-aside.csv";
 
 export interface GivingOut {
   readonly name: string;
-  readonly forms: readonly (TableForm & Pick<Sheet, "table">)[];
+  readonly forms: readonly (TableForm & Pick<Sheet, "table" | "rows" | "rowNumbers">)[];
 }
 
 /**
@@ -52,8 +56,30 @@ export function filesGivenOut(
       ...tables.filter(({ name }) => name === form.table).map((t) => tableResource(t, own.guarded, to)),
     );
   }
+  const aside = setAsideText(edited, edits, forms);
+  if (aside !== undefined) written.set(SET_ASIDE, new TextEncoder().encode(aside));
   written.set(PACKAGE, new TextEncoder().encode(packageText(name, resources, described)));
   return written;
+}
+
+/** The rows that were set aside, now and before, with their reasons and what stood in them; undefined where there are none. */
+function setAsideText(
+  files: ReadonlyMap<string, Uint8Array>,
+  edits: readonly Edit[],
+  forms: GivingOut["forms"],
+): string | undefined {
+  const earlier = [...files].find(([path]) => baseName(path) === SET_ASIDE)?.[1];
+  const before = earlier === undefined ? [] : readWrittenCsv(decodeText(earlier) ?? "").rows;
+  const now = [...editsByFile(edits)].flatMap(([file, { setAside, cells }]) => {
+    const form = forms.find((form) => form.file === file);
+    return [...setAside].map(([row, reason]) => {
+      const read = form?.rows[form.rowNumbers.indexOf(row)] ?? [];
+      const own = form?.headers.map((_, column) => cells.get(row)?.get(column) ?? read[column] ?? "") ?? [];
+      return [file, String(row), reason, blockText([own])];
+    });
+  });
+  if (now.length === 0) return undefined;
+  return writeCsv(["file", "row", "reason", "cells"], [...before, ...now]).text;
 }
 
 /** A table's bytes with apostrophes where they are needed, and the headers of the columns that have some. */

@@ -28,7 +28,16 @@ describe("a study that is given out", () => {
   it("holds the edits, leaves out what was set aside, and changes nothing else", () => {
     const aside: Edit = { kind: "row-set-aside", file: "occurrences.csv", row: 2, reason: "float" };
     const out = giveOut(files, [noted("seen twice"), aside]);
-    expect([...out.keys()]).toEqual(["occurrences.csv", "settings.json", "datapackage.json"]);
+    expect([...out.keys()]).toEqual([
+      "occurrences.csv",
+      "settings.json",
+      "README.set-aside.csv",
+      "datapackage.json",
+    ]);
+    expect(text(out.get("README.set-aside.csv"))).toBe(
+      'file,row,reason,cells\noccurrences.csv,2,float,"Orsk\tVelorites a\t1.5\tas, found"\n',
+    );
+    expect(readStudy(out).problems.filter(({ file }) => file.startsWith("README"))).toEqual([]);
     expect(text(out.get("occurrences.csv"))).toBe(
       "section,taxon,height (m),notes\nOrsk,Velorites b,-2,seen twice\n",
     );
