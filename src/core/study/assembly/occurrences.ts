@@ -78,8 +78,10 @@ function findOf(
 export const isToGenus = ({ qualifier }: Occurrence): boolean =>
   qualifier === "sp." || qualifier === "spp." || qualifier === "indet.";
 
+/** A name without a row of its own takes the group of the row that spells it as the find does, or of its genus. */
 function addTaxon(find: Occurrence, taxa: Map<string, Taxon>, assembly: Assembly): void {
-  const group = isToGenus(find) ? genusGroup(find.taxon, taxa) : undefined;
+  const group =
+    taxa.get(find.verbatim)?.group ?? (isToGenus(find) ? genusGroup(find.taxon, taxa) : undefined);
   const taxon: Taxon = {
     name: find.taxon,
     group: group ?? ungrouped,

@@ -24,7 +24,11 @@ export function heightOf(
   if (!leg) {
     const nearest = suggestName(name, frame.legs.keys());
     const now = sameButForForm(name, frame.legs.keys());
-    assembly.problems.add("unknown-leg", { ...origin, column: "leg", found: name, nearest, now });
+    const place = { ...origin, column: "leg", found: name, nearest, now };
+    // Without any leg of the section it is one omission, not a mistake of each row.
+    if (frame.legs.size === 0)
+      assembly.problems.addOnce(JSON.stringify([frame.name, name]), "unknown-leg", place);
+    else assembly.problems.add("unknown-leg", place);
     return undefined;
   }
   const height = legHeight(leg, position);
