@@ -74,7 +74,7 @@ function sentence({ analysis, section, set, answers }: Telling): Words {
   if (rejectsOneLevel(test.p, confidence)) return [...gate, ...rejected(taxa, test, by("duration-lower"))];
   const told = isAlignedTooWell(test.p)
     ? alignedTooWell(taxa, test)
-    : notRejected({ analysis, section, taxa, test }, by("common-end-given"));
+    : notRejected({ analysis, section, set, taxa, test }, by("common-end-given"));
   return [...gate, ...told, ...longestWords(by("duration-box"), section)];
 }
 
@@ -95,28 +95,37 @@ function alignedTooWell(taxa: string, test: TimingAnswer): Words {
 interface Kept {
   readonly analysis: Analysis;
   readonly section: Section;
+  readonly set: string;
   readonly taxa: string;
   readonly test: TimingAnswer;
 }
 
 /** An offset from the main horizon reaches from one end of both intervals to the other. */
-function notRejected({ analysis, section, taxa, test }: Kept, where: TimingAnswer | undefined): Words {
+function notRejected({ analysis, section, set, taxa, test }: Kept, where: TimingAnswer | undefined): Words {
   const opening = say`${strong(taxa)} ${strong("cannot be told from one level")} (${pValue(test.p ?? 1)})`;
   if (where?.low === undefined || where.high === undefined || where.level === undefined)
     return [...opening, "."];
   const main = analysis.markers.main.bySection.get(section.name);
   const level = percent(where.level);
+  const orHigher = hasLessEffortAbove(analysis, section, set)
+    ? ", or higher, since the samples just above their last finds are small"
+    : "";
   if (main === undefined)
     return [
       ...opening,
-      ...say`; if they ended together, it was at ${strong(positionInterval(section, where.low, where.high))} (${level}).`,
+      ...say`; if they ended together, it was at ${strong(positionInterval(section, where.low, where.high))} (${level})${orHigher}.`,
     ];
   const [low, high] = [where.low - main.highM, where.high - main.lowM];
   return [
     ...opening,
-    ...say`; if they ended together, it was ${strong(offsetInterval(low, high))} from the main horizon (${level}).`,
+    ...say`; if they ended together, it was ${strong(offsetInterval(low, high))} from the main horizon (${level})${orHigher}.`,
   ];
 }
+
+const hasLessEffortAbove = ({ timing }: Analysis, section: Section, set: string) =>
+  timing.cautions.some(
+    (c) => c.code === "timing-less-effort-above" && c.section === section.name && c.subject === set,
+  );
 
 /** A duration that the section is too short to hold is told as that: its number says nothing about the rock. */
 function longestWords(longest: TimingAnswer | undefined, section: Section): Words {

@@ -1,0 +1,51 @@
+import { readdirSync, readFileSync } from "node:fs";
+import { describe, expect, it } from "vitest";
+import { analyse } from "../../../src/core/analysis.ts";
+import { readStudy } from "../../../src/core/tables/read-study.ts";
+import { findings } from "../../../src/report/findings/index.ts";
+import { plain } from "../../../src/report/wordings/words.ts";
+
+const folder = "datasets/veyra-shelf";
+const files = new Map(readdirSync(folder).map((name) => [name, readFileSync(`${folder}/${name}`)]));
+const all = findings(analyse(readStudy(files)));
+const timing = (section: string, set: string) =>
+  plain(
+    all.find((one) => one.station === "timing" && one.section === section && one.set === set)?.sentence ?? [],
+  );
+
+describe("what the findings say of the example", () => {
+  it("no finding claims that an end was sudden, simultaneous or an extinction", () => {
+    const texts = all.flatMap((one) => [plain(one.sentence), ...one.weaknesses.map((w) => plain(w.words))]);
+    expect(texts.length).toBeGreaterThan(100);
+    expect(texts.filter((text) => /sudden|simultaneous|extinct/i.test(text))).toEqual([]);
+  });
+
+  it("what is not rejected is followed by the longest duration that is not excluded", () => {
+    const text = timing("orskel-ledge", "open-shelf");
+    expect(text).toMatch(/cannot be told from one level .* if they ended together, it was .* \(95\u00a0%\)/);
+    expect(text).toMatch(/local disappearance of .* cannot be excluded\.$/);
+  });
+
+  it("what is rejected names the assumption and the level", () => {
+    expect(timing("orskel-ledge", "candidates")).toMatch(
+      /^One level is rejected for 39 candidates .* if recovery is uniform; .* took at least 0\.79.m \(95\u00a0%\)\.$/,
+    );
+  });
+
+  it("a set whose finds thin out upward is told so first", () => {
+    expect(timing("nirrel-cut", "shallow-water")).toMatch(
+      /^Finds of these taxa thin out upward, so what follows/,
+    );
+    expect(timing("nirrel-cut", "open-shelf")).not.toContain("thin out");
+  });
+
+  it("a level is said to lie higher where the samples above are small", () => {
+    expect(timing("tamber-quarry", "candidates")).toContain("or higher, since the samples just above");
+  });
+
+  it("no level is trusted where last finds agree better than chance allows", () => {
+    const text = timing("tamber-quarry", "open-shelf");
+    expect(text).toContain("agree better than chance allows");
+    expect(text).not.toContain("from the main horizon");
+  });
+});
