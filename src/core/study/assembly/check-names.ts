@@ -65,7 +65,8 @@ function areSettled(first: string, second: string, taxa: ReadonlyMap<string, Tax
   );
 }
 
-const fileOf = (assembly: Assembly, table: "taxa") => assembly.sheets.get(table)?.sheet.file;
+/** The file whose rows list taxa and groups; undefined where there is none. */
+const listingFile = (assembly: Assembly) => assembly.sheets.get("taxa")?.sheet.file;
 
 function taxonUses(
   sections: readonly Section[],
@@ -73,7 +74,7 @@ function taxonUses(
   assembly: Assembly,
 ): ReadonlyMap<string, Use> {
   const uses = new Map<string, Use>();
-  const listed = fileOf(assembly, "taxa");
+  const listed = listingFile(assembly);
   for (const { name, origin } of taxa.values()) {
     if (origin.file === listed) use(uses, name, origin, true);
   }
@@ -103,7 +104,7 @@ function groupUses(
   assembly: Assembly,
 ): ReadonlyMap<string, Use> {
   const uses = new Map<string, Use>();
-  const listed = fileOf(assembly, "taxa");
+  const listed = listingFile(assembly);
   for (const { group, origin } of taxa.values()) {
     if (group !== ungrouped && origin.file === listed) use(uses, group, origin, true);
   }
