@@ -18,7 +18,7 @@ export function Status(): ReactElement {
     <footer className={styles.status}>
       <section className={styles.facts} aria-label="Under the reading line">
         {facts === undefined ? (
-          <span>The reading line follows the pointer, or the up and down arrows on a plate.</span>
+          <span>Reading line: point at a plate, or use its up and down arrows.</span>
         ) : (
           <>
             <b>{facts.own}</b>
