@@ -1,31 +1,24 @@
-import type { Basis, Caution, Progress } from "../basis.ts";
+import type { Caution, Progress } from "../basis.ts";
 import type { Markers } from "../markers/result.ts";
 import type { Candidate, LocalTaxon } from "../study/finds-result.ts";
 import { groupBy } from "../study/grouping.ts";
 import type { Section, Study } from "../study/model.ts";
 import { sectionBase, workingRange } from "./base.ts";
-import { coordinateBasis, sampledBasis, uniformBasis, windowBasis } from "./basis.ts";
+import { coordinateBasis } from "./basis.ts";
 import { rangeCautions } from "./cautions.ts";
 import { recoveryCoordinate } from "./coordinate.ts";
+import { rangeMethods } from "./methods.ts";
 import { note, type RangeCase } from "./range-case.ts";
 import type { RangeEnd, RangeMethod, Ranges, Taper } from "./result.ts";
-import { sampledEnd } from "./sampled-end.ts";
 import { sampledHorizons, sampledRange } from "./sampled-horizons.ts";
 import { taper } from "./taper.ts";
 import { uniformEnd } from "./uniform-end.ts";
-import { windowEnd } from "./window-end.ts";
 
 export interface RangesInput {
   readonly taxa: readonly LocalTaxon[];
   readonly candidates: readonly Candidate[];
   readonly markers: Markers;
 }
-
-const methods: Readonly<Record<RangeMethod, { end: (c: RangeCase) => RangeEnd; basis: Basis }>> = {
-  uniform: { end: uniformEnd, basis: uniformBasis },
-  window: { end: windowEnd, basis: windowBasis },
-  sampled: { end: sampledEnd, basis: sampledBasis },
-};
 
 /**
  * The true upper end of every taxon in every section, a row for each method of `ranges.methods`, and a taper each by
@@ -39,13 +32,16 @@ export function estimateRanges(study: Study, input: RangesInput, progress?: Prog
     progress?.(`ranges: ${section.name}`, index, study.sections.length);
     const cases = sectionCases(section, study, input);
     const rows = cases.map((rangeCase) =>
-      study.settings.ranges.methods.map((m) => methods[m].end(rangeCase)),
+      study.settings.ranges.methods.map((m) => rangeMethods[m].end(rangeCase)),
     );
     ends.push(...rows.flatMap((ofTaxon, i) => [...ofTaxon, ...inclusiveEnds(cases[i])]));
     tapers.push(...cases.flatMap((rangeCase) => taperOf(rangeCase, study.settings.ranges.methods[0])));
     cautions.push(...rangeCautions({ section, study, markers: input.markers, cases, rows: rows.flat() }));
   });
-  const basis = [coordinateBasis, ...study.settings.ranges.methods.map((method) => methods[method].basis)];
+  const basis = [
+    coordinateBasis,
+    ...study.settings.ranges.methods.map((method) => rangeMethods[method].basis),
+  ];
   return { ends, tapers, cautions, basis };
 }
 
@@ -101,7 +97,7 @@ function inclusiveEnds(rangeCase: RangeCase): RangeEnd[] {
 /** The taper ends where the interval closes inside the section. */
 function taperOf(rangeCase: RangeCase, leading: RangeMethod): Taper[] {
   const endM = (method: RangeMethod) => {
-    const row = methods[method].end(rangeCase);
+    const row = rangeMethods[method].end(rangeCase);
     return row.outcome === "closed" || row.outcome === "in-hiatus" ? row.highM : undefined;
   };
   const drawn = taper(rangeCase, leading, endM);

@@ -1,6 +1,8 @@
 import type { Basis, Caution, Outcome } from "../basis.ts";
+import type { Settings } from "../study/settings.ts";
 
-export type RangeMethod = "uniform" | "window" | "sampled";
+/** The methods that `ranges.methods` may name. */
+export type RangeMethod = Settings["ranges"]["methods"][number];
 
 /** One true end of one taxon's range by one method: a row of range-ends.csv. */
 export interface RangeEnd {
@@ -8,7 +10,8 @@ export interface RangeEnd {
   readonly taxon: string;
   readonly group: string;
   readonly identification: "strict" | "inclusive";
-  readonly end: "top" | "base";
+  /** `both`: one interval that holds base and top together at its level. */
+  readonly end: "top" | "base" | "both";
   readonly method: RangeMethod;
   readonly horizons: number;
   readonly exponent: number;

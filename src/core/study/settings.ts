@@ -108,6 +108,14 @@ export const settingsSchema = v.strictObject({
         v.optional(v.picklist(["uniform"]), "uniform"),
         "shape of recovery where rock was searched",
       ),
+      tail: says(
+        v.optional(v.pipe(v.number(), v.gtValue(0)), 1),
+        "beta: near the end the density of finds falls as the distance to it to the power beta - 1",
+      ),
+      topFinds: says(
+        v.optional(v.pipe(v.number(), v.integer(), v.minValue(2)), 5),
+        "k: highest finds used by top-k",
+      ),
     }),
     {},
   ),
@@ -123,9 +131,44 @@ export const settingsSchema = v.strictObject({
         ),
         "window of end levels, m from H",
       ),
+      longestDuration: says(
+        v.optional(v.pipe(v.number(), v.gtValue(0)), 30),
+        "longest gradual disappearance thought possible, m",
+      ),
       startBelow: says(v.optional(v.number(), 0), "first finds above this level, m from H, are late starts"),
       durationHorizons: says(v.optional(positiveInteger, 10), "least horizons for the duration box"),
       sets: says(v.optional(v.record(v.string(), names), {}), "declared lists of taxa"),
+      steps: says(
+        v.optional(v.strictObject({ early: v.optional(names, []), late: v.optional(names, []) }), {}),
+        "taxa or groups declared beforehand to end in an earlier and a later step",
+      ),
+      pulses: says(
+        v.optional(v.pipe(v.number(), v.integer(), v.minValue(1), v.maxValue(4)), 2),
+        "most pulses that the scenarios go up to",
+      ),
+      priors: says(
+        v.optional(v.record(v.string(), v.pipe(v.number(), v.minValue(0))), {}),
+        "prior weight by scenario (at-horizon by horizon: `at-horizon:<name>`); equal where not named",
+      ),
+      horizonWeights: says(
+        v.optional(v.record(v.string(), v.pipe(v.number(), v.minValue(0))), {}),
+        "prior weight of each candidate horizon in among-horizons; equal where empty",
+      ),
+      contamination: says(
+        v.optional(v.pipe(v.number(), v.minValue(0), v.ltValue(1)), 0),
+        "chance that one find of a taxon is out of place",
+      ),
+      surfaces: says(
+        v.optional(
+          v.strictObject({
+            horizons: v.optional(names, []),
+            below: v.optional(v.pipe(v.number(), v.gtValue(0)), 1),
+            zone: v.optional(v.tuple([v.number(), v.number()])),
+          }),
+          {},
+        ),
+        "surfaces at which last finds may cluster, the window below each (m), and the zone asked about (m from H)",
+      ),
     }),
     {},
   ),

@@ -1,14 +1,39 @@
 import type { Basis, Caution, Outcome } from "../basis.ts";
 
-export type TimingQuestion = "one-level" | "where" | "at-horizon" | "how-gradual" | "recovery";
+export type TimingQuestion =
+  | "one-level"
+  | "where"
+  | "at-horizon"
+  | "how-gradual"
+  | "two-steps"
+  | "how-many"
+  | "rarity"
+  | "recovery"
+  | "surfaces"
+  | "isolated";
 export type TimingMethod =
   | "common-end"
   | "common-end-given"
   | "common-end-joint"
+  | "half-intervals"
+  | "two-highest"
   | "confidence-levels"
+  | "combined"
   | "duration-lower"
   | "duration-box"
-  | "centroid";
+  | "duration-posterior"
+  | "separation"
+  | "pulses-bootstrap"
+  | "pulses-posterior"
+  | "rank-correlation"
+  | "centroid"
+  | "gap-trend"
+  | "runs"
+  | "largest-gap"
+  | "distance"
+  | "binomial"
+  | "shift"
+  | "highest-find";
 
 /** One answer about an assemblage: a row of timing.csv. `section` may be "joint". Levels are metres of height. */
 export interface TimingAnswer {
@@ -36,6 +61,83 @@ export interface TimingAnswer {
   readonly note: string;
 }
 
+export type Scenario =
+  | "single"
+  | "pulses-2"
+  | "pulses-3"
+  | "pulses-4"
+  | "gradual"
+  | "at-horizon"
+  | "among-horizons"
+  | "independent";
+
+/** How well one scenario explains the last finds of a set: a row of scenarios.csv. */
+export interface ScenarioWeight {
+  readonly section: string;
+  readonly set: string;
+  readonly scenario: Scenario;
+  readonly horizon?: string;
+  /** Blank: the default form with declared priors; else which prior or form was changed. */
+  readonly variant?: string;
+  readonly prior?: number;
+  readonly logEvidence?: number;
+  /** Numerical error of `logEvidence`. */
+  readonly error?: number;
+  /** Posterior probability among the scenarios of the same variant that have a prior. */
+  readonly probability?: number;
+  readonly note: string;
+}
+
+/** Disappearance minus horizon, positive when younger than it: a row of offsets.csv. */
+export interface Offset {
+  readonly section: string;
+  readonly set: string;
+  readonly scenario: Scenario;
+  /** Rank of the pulse from below; absent where the scenario has one level. */
+  readonly pulse?: number;
+  readonly horizon: string;
+  readonly median: number;
+  readonly low: number;
+  readonly high: number;
+  readonly level: number;
+  readonly unit: "m" | "ka" | "Ma";
+  readonly probabilityAfter: number;
+}
+
+/** Chance that a taxon ended in a pulse: a row of membership.csv. */
+export interface Membership {
+  readonly section: string;
+  readonly set: string;
+  readonly scenario: Scenario;
+  readonly taxon: string;
+  readonly pulse: number;
+  readonly probability: number;
+}
+
+/** Posterior density of a level of one scenario along the height of a section, per metre. */
+export interface ScenarioDensity {
+  readonly section: string;
+  readonly set: string;
+  readonly scenario: Scenario;
+  readonly pulse?: number;
+  readonly heightsM: readonly number[];
+  readonly density: readonly number[];
+}
+
+/** Number of last finds above a level, against what one common end would give: a row of last-finds.csv. */
+export interface LastFindsPoint {
+  readonly section: string;
+  readonly set: string;
+  readonly positionM: number;
+  readonly observed: number;
+  readonly expected: number;
+  readonly low: number;
+  readonly high: number;
+  readonly lowAll: number;
+  readonly highAll: number;
+  readonly level: number;
+}
+
 /** p of confidence-levels along the height of a section: the curve of the timing plate. */
 export interface LevelCurve {
   readonly section: string;
@@ -55,6 +157,11 @@ export interface Timing {
   readonly sets: readonly TaxonSet[];
   readonly answers: readonly TimingAnswer[];
   readonly curves: readonly LevelCurve[];
+  readonly scenarios: readonly ScenarioWeight[];
+  readonly offsets: readonly Offset[];
+  readonly membership: readonly Membership[];
+  readonly densities: readonly ScenarioDensity[];
+  readonly lastFinds: readonly LastFindsPoint[];
   /** Sets whose own pooled centroid pre-check says that recovery declines upward (p < 0.1). */
   readonly distrusted: readonly { readonly section: string; readonly set: string }[];
   readonly cautions: readonly Caution[];

@@ -11,7 +11,7 @@ import type {
   Taxon,
 } from "../../../src/core/study/model.ts";
 import { defaultSettings } from "../../../src/core/study/settings.ts";
-import type { TimingAnswer } from "../../../src/core/timing/result.ts";
+import type { Timing, TimingAnswer } from "../../../src/core/timing/result.ts";
 
 const origin = { file: "made.csv", row: 2 };
 
@@ -38,6 +38,21 @@ export function section(name: string, parts: Partial<Section> = {}): Section {
     ...parts,
   };
 }
+
+/** An assemblage that nothing was asked of. */
+const noTiming: Timing = {
+  sets: [],
+  answers: [],
+  curves: [],
+  scenarios: [],
+  offsets: [],
+  membership: [],
+  densities: [],
+  lastFinds: [],
+  distrusted: [],
+  cautions: [],
+  basis: [],
+};
 
 /** A study of these sections with nothing found, aligned or asked. */
 export function analysisOf(sections: readonly Section[], parts: Partial<Analysis> = {}): Analysis {
@@ -66,7 +81,7 @@ export function analysisOf(sections: readonly Section[], parts: Partial<Analysis
     taxa: [],
     candidates: [],
     ranges: { ends: [], tapers: [], cautions: [], basis: [] },
-    timing: { sets: [], answers: [], curves: [], distrusted: [], cautions: [], basis: [] },
+    timing: noTiming,
     ...parts,
   };
 }
@@ -376,6 +391,7 @@ export function smallAnalysis(): Analysis {
       basis: [],
     },
     timing: {
+      ...noTiming,
       sets: [
         { section: "cliff", set: "candidates", taxa: ["Aurea prima", "Aurea secunda", "Bellona minor"] },
       ],
@@ -394,9 +410,6 @@ export function smallAnalysis(): Analysis {
           p: [0.3, 0.7, 0.2, 0.04, 0],
         },
       ],
-      distrusted: [],
-      cautions: [],
-      basis: [],
     },
   });
   return withTaxa(base, TAXA);

@@ -1,0 +1,20 @@
+import type { Basis } from "../basis.ts";
+import { sampledBasis, uniformBasis, windowBasis } from "./basis.ts";
+import type { RangeCase } from "./range-case.ts";
+import type { RangeEnd, RangeMethod } from "./result.ts";
+import { sampledEnd } from "./sampled-end.ts";
+import { uniformEnd } from "./uniform-end.ts";
+import { windowEnd } from "./window-end.ts";
+
+/** One estimator of a true upper end: its row for a case, and what it rests on. */
+export interface RangeEstimator {
+  readonly end: (rangeCase: RangeCase) => RangeEnd;
+  readonly basis: Basis;
+}
+
+/** Every method that `ranges.methods` may name. */
+export const rangeMethods: Readonly<Record<RangeMethod, RangeEstimator>> = {
+  uniform: { end: uniformEnd, basis: uniformBasis },
+  window: { end: windowEnd, basis: windowBasis },
+  sampled: { end: sampledEnd, basis: sampledBasis },
+};
