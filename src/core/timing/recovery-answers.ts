@@ -1,4 +1,4 @@
-import { type Centroid, centroid, rescaledInterior } from "./centroid.ts";
+import { type Centroid, centroid, rescaledInterior } from "../ranges/checks/centroid.ts";
 import type { TaxonRange } from "./range-data.ts";
 import type { TimingAnswer } from "./result.ts";
 import { commonFields, type SetCase } from "./set-case.ts";

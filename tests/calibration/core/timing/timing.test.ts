@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import type { Generator } from "../../../../src/core/numeric/streams.ts";
+import { centroid, rescaledInterior } from "../../../../src/core/ranges/checks/centroid.ts";
 import type { Coordinate } from "../../../../src/core/ranges/coordinate.ts";
-import { centroid, rescaledInterior } from "../../../../src/core/timing/centroid.ts";
 import {
   commonEndGiven,
   commonEndJoint,

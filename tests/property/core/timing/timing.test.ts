@@ -1,9 +1,9 @@
 import * as fc from "fast-check";
 import { describe, expect, it } from "vitest";
+import { centroid, rescaledInterior } from "../../../../src/core/ranges/checks/centroid.ts";
 import { uniformCoordinate } from "../../../../src/core/ranges/coordinate.ts";
 import type { EffectiveRange } from "../../../../src/core/ranges/pivot.ts";
 import { uniformBound } from "../../../../src/core/ranges/uniform.ts";
-import { centroid, rescaledInterior } from "../../../../src/core/timing/centroid.ts";
 import { commonEndGiven, commonEndJoint, commonEndTest } from "../../../../src/core/timing/common-end.ts";
 import { largestLevelP, levelTest } from "../../../../src/core/timing/confidence-levels.ts";
 import { durationBox, durationLowerBound } from "../../../../src/core/timing/duration.ts";

@@ -1,8 +1,8 @@
 import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
+import { centroid, rescaledInterior } from "../../../../src/core/ranges/checks/centroid.ts";
 import { pieceCoordinate, uniformCoordinate } from "../../../../src/core/ranges/coordinate.ts";
 import { type EffectiveRange, pivot } from "../../../../src/core/ranges/pivot.ts";
-import { centroid, rescaledInterior } from "../../../../src/core/timing/centroid.ts";
 import {
   commonEndGiven,
   commonEndJoint,

@@ -1,6 +1,6 @@
-import { irwinHallMeanCdf } from "../numeric/irwin-hall.ts";
-import { normalCdf } from "../numeric/normal.ts";
-import { compensatedSum } from "../numeric/sums.ts";
+import { irwinHallMeanCdf } from "../../numeric/irwin-hall.ts";
+import { normalCdf } from "../../numeric/normal.ts";
+import { compensatedSum } from "../../numeric/sums.ts";
 
 export interface Centroid {
   /** z below 0: finds concentrated low in the ranges, recovery declines upward. */
