@@ -1,6 +1,6 @@
 import { problemList } from "../core/study/problem-list.ts";
 import { readSettings } from "../core/study/read-settings.ts";
-import { setSetting } from "../core/study/setting-path.ts";
+import { partedAssignment, setSetting } from "../core/study/setting-path.ts";
 import type { AnalysisJob } from "../run/runner.ts";
 import { CallError } from "./call-error.ts";
 import { readStudyFiles } from "./study-files.ts";
@@ -28,9 +28,9 @@ function refuseBadSettings(ofCall: unknown): void {
 }
 
 function assign(settings: unknown, assignment: string): unknown {
-  const at = assignment.indexOf("=");
-  if (at < 1) throw new CallError(`lastbed: expected --set path=value, got ${assignment}`);
-  const result = setSetting(settings, assignment.slice(0, at), assignment.slice(at + 1));
+  const parts = partedAssignment(assignment);
+  if (parts === undefined) throw new CallError(`lastbed: expected --set path=value, got ${assignment}`);
+  const result = setSetting(settings, ...parts);
   if (result.kind === "set") return result.settings;
   const hint = result.nearest === undefined ? "" : `; did you mean ${result.nearest}?`;
   throw new CallError(`lastbed: expected a known setting, got ${result.path}${hint}`);

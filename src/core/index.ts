@@ -1,8 +1,8 @@
 export { formatGiven, givenToHeight, heightToGiven, type OwnScale } from "./study/heights.ts";
 export type * from "./study/model.ts";
 export { suggestName } from "./study/nearest.ts";
-export type { Problem } from "./study/problem.ts";
-export { knownSettingPaths, mergeSettings, type SetSetting, setSetting } from "./study/setting-path.ts";
+export type { Fix, Problem } from "./study/problem.ts";
+export { knownSettingPaths, mergeSettings, type SetSetting, setSetting, settingPath } from "./study/setting-path.ts";
 export { defaultSettings, type Settings, settingsSchema } from "./study/settings.ts";
 export { tablesGuide } from "./study/table-guide.ts";
 export { tableSchema } from "./study/table-schema.ts";

@@ -1,5 +1,6 @@
-import type { Axis, LengthUnit } from "./model.ts";
-import type { ColumnDeclaration, TableDeclaration } from "./tables/declare.ts";
+import { axisWords, headerLanguages } from "./header-languages.ts";
+import type { Axis, LengthUnit, ToldBy } from "./model.ts";
+import type { ColumnChoice, ColumnDeclaration, TableDeclaration } from "./tables/declare.ts";
 import { lengthUnit } from "./units.ts";
 
 /** What a header cell was taken to be. */
@@ -7,33 +8,53 @@ export interface RecognisedColumn {
   readonly header: string;
   /** The declared column; undefined: kept, not used. */
   readonly column?: string;
+  /** How it was told what the column is. */
+  readonly by?: ToldBy;
+  /** The language of a header in another language. */
+  readonly language?: string;
   readonly axis?: Axis;
   readonly unit?: LengthUnit;
   /** Text in brackets that is not a length unit. */
   readonly bracket?: string;
 }
 
-/** A name without case, spaces, points, hyphens and underscores. */
-const plainName = (name: string): string =>
+/** A name without case, accents, spaces, points, hyphens and underscores. */
+export const plainName = (name: string): string =>
   name
+    .normalize("NFD")
+    .replace(/\p{M}+/gu, "")
     .normalize("NFC")
     .toLowerCase()
     .replace(/[\s_.\-:]+/g, "");
 
-/** Every name a column is known by, plain, to the declared name. */
-function knownNames(table: TableDeclaration): ReadonlyMap<string, string> {
-  const names = new Map<string, string>();
-  for (const name of Object.keys(table.columns)) names.set(plainName(name), name);
-  for (const [name, column] of Object.entries(table.columns)) {
-    for (const other of [column.dwc, ...(column.synonyms ?? [])]) {
-      if (other !== undefined && !names.has(plainName(other))) names.set(plainName(other), name);
-    }
+interface KnownName {
+  readonly column: string;
+  readonly by: ToldBy;
+  readonly language?: string;
+}
+
+/** Every name a column is known by, plain, to what it is; the declared names come before those in other languages. */
+function knownNames(table: TableDeclaration): ReadonlyMap<string, KnownName> {
+  const names = new Map<string, KnownName>();
+  const add = (written: string, known: KnownName) => {
+    const name = plainName(written);
+    if (!names.has(name)) names.set(name, known);
+  };
+  const columns = Object.entries(table.columns);
+  for (const [column] of columns) add(column, { column, by: "name" });
+  for (const [column, { dwc, synonyms = [] }] of columns) {
+    if (dwc !== undefined) add(dwc, { column, by: "darwin-core" });
+    for (const other of synonyms) add(other, { column, by: "synonym" });
+  }
+  for (const { language, columns: own } of headerLanguages) {
+    for (const [column] of columns)
+      for (const other of own[column] ?? []) add(other, { column, by: "other-language", language });
   }
   return names;
 }
 
 /** Parts a trailing unit from a header: `height (m)`, `depth [ft]`, `position_cm`, `depth, ft`. */
-function partUnit(header: string): {
+export function partUnit(header: string): {
   readonly name: string;
   readonly unit?: string;
   readonly isBracketed: boolean;
@@ -47,10 +68,11 @@ function partUnit(header: string): {
 }
 
 /** The axis a header of a position says by itself. */
-function axisOf(header: string): Axis | undefined {
-  const name = header.toLowerCase();
-  if (name.includes("depth")) return "depth";
-  return name.includes("height") || name.includes("elevation") ? "height" : undefined;
+export function axisOf(header: string): Axis | undefined {
+  const name = plainName(header);
+  const says = (axis: Axis) => axisWords[axis].some((word) => name.includes(plainName(word)));
+  if (says("depth")) return "depth";
+  return says("height") ? "height" : undefined;
 }
 
 const hints = (header: string, column: ColumnDeclaration, unit: string | undefined) => {
@@ -65,34 +87,64 @@ const hints = (header: string, column: ColumnDeclaration, unit: string | undefin
 };
 
 /**
- * Recognises header cells by declared name, synonym or Darwin Core term, without regard to case, spaces, hyphens and
- * underscores, and by a unit written in them.
+ * Recognises header cells by what a person chose, by declared name, Darwin Core term, synonym or a usual header in
+ * another language, without regard to case, accents, spaces, hyphens and underscores, and by a unit written in them.
  */
 export function recogniseColumns(
   headers: readonly string[],
   table: TableDeclaration,
 ): readonly RecognisedColumn[] {
   const names = knownNames(table);
-  const recognised = headers.map((header) => {
-    const trimmed = header.trim();
-    const whole = names.get(plainName(trimmed));
-    if (whole !== undefined)
-      return { header, column: whole, ...hints(trimmed, table.columns[whole], undefined) };
-    const { name, unit } = partUnit(trimmed);
-    const part = unit === undefined ? undefined : names.get(plainName(name));
-    if (part === undefined) return { header };
-    return { header, column: part, ...hints(name, table.columns[part], unit) };
-  });
-  return withoutRivals(recognised);
+  return withoutRivals(headers.map((header) => recognise(header, names, table)));
 }
 
-/** A column named as declared stands before those known by another name; they are kept and not used. */
+function recognise(
+  header: string,
+  names: ReadonlyMap<string, KnownName>,
+  table: TableDeclaration,
+): RecognisedColumn {
+  const trimmed = header.trim();
+  const choice = table.chosen?.get(trimmed);
+  if (choice?.is === "unused") return { header, by: "chosen" };
+  const whole = choice?.is === undefined ? names.get(plainName(trimmed)) : undefined;
+  const { name, unit } = whole === undefined ? partUnit(trimmed) : { name: trimmed };
+  const byName =
+    whole ?? (unit === undefined || choice?.is !== undefined ? undefined : names.get(plainName(name)));
+  const known = choice?.is === undefined ? byName : { column: choice.is, by: choice.by };
+  const column = known && table.columns[known.column];
+  if (known === undefined || column === undefined) return { header };
+  return { header, ...known, ...hints(name, column, unit), ...chosenHints(column, choice) };
+}
+
+/** The unit and axis that a person chose stand over those of the header. */
+function chosenHints(column: ColumnDeclaration, choice: ColumnChoice | undefined) {
+  const { unit, axis } = choice ?? {};
+  const meant = unit === undefined || column.unit !== "section" ? undefined : lengthUnit(unit);
+  return {
+    ...(axis === undefined || column.measures !== "position" ? {} : { axis }),
+    ...(meant === undefined ? {} : { unit: meant, bracket: undefined }),
+    ...(unit === undefined || meant !== undefined ? {} : { bracket: unit }),
+  };
+}
+
+/**
+ * Of columns read as the same, one that was chosen stands before one named as declared, that before one known by
+ * another name, and that before one in another language; those that stand back are kept and not used.
+ */
 function withoutRivals(recognised: readonly RecognisedColumn[]): readonly RecognisedColumn[] {
-  const isDeclared = ({ header, column }: RecognisedColumn) =>
-    column !== undefined &&
-    [header.trim(), partUnit(header.trim()).name].some((name) => plainName(name) === plainName(column));
-  const declared = new Set(recognised.filter(isDeclared).map(({ column }) => column));
+  const best = new Map<string, number>();
+  for (const one of recognised) {
+    if (one.column !== undefined)
+      best.set(one.column, Math.min(best.get(one.column) ?? Infinity, rankOf(one)));
+  }
   return recognised.map((one) =>
-    declared.has(one.column) && !isDeclared(one) ? { header: one.header } : one,
+    one.column === undefined || rankOf(one) === best.get(one.column) ? one : { header: one.header },
   );
+}
+
+function rankOf({ header, column = "", by }: RecognisedColumn): number {
+  if (by === "chosen") return 0;
+  const names = [header.trim(), partUnit(header.trim()).name].map(plainName);
+  if (names.includes(plainName(column))) return 1;
+  return by === "other-language" ? 3 : by === "content" ? 4 : 2;
 }

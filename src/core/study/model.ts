@@ -28,6 +28,30 @@ export interface Dialect {
   readonly notes: readonly { readonly row: number; readonly cells: readonly string[] }[];
 }
 
+/** How it was told what a column is. */
+export type ToldBy = "name" | "synonym" | "darwin-core" | "other-language" | "content" | "chosen";
+
+/** Where the unit of a column was told. */
+export type UnitToldBy = "header" | "chosen" | "section";
+
+/** What one column of a file was taken to be, with some of its values to look at. */
+export interface Recognition {
+  readonly header: string;
+  /** The declared column; `taxon` for a column of a wide sheet that is one taxon. */
+  readonly is: string;
+  /** Absent where it is not used or further columns are traits. */
+  readonly by?: ToldBy;
+  readonly language?: string;
+  /** The unit of its numbers, as far as it was told. */
+  readonly unit?: string;
+  readonly axis?: Axis;
+  readonly unitBy?: UnitToldBy;
+  /** What has to be answered before its numbers can be used. */
+  readonly asks?: "unit" | "axis-and-unit";
+  /** Up to five values that differ. */
+  readonly values: readonly string[];
+}
+
 /** A table as it was read: every cell as text, nothing dropped. */
 export interface Sheet {
   readonly file: string;
@@ -36,9 +60,36 @@ export interface Sheet {
   /** Header cells as written, and the declared column each was taken to be (undefined: kept, not used). */
   readonly headers: readonly string[];
   readonly columns: readonly (string | undefined)[];
+  /** What each column was taken to be and why, in the order of the headers. */
+  readonly recognised: readonly Recognition[];
+  /** Absent for a table of one row a find, sample, value ... */
+  readonly wide?: WideReading;
+  /** The section that a file without a column for it was taken to be about. */
+  readonly section?: { readonly name: string; readonly by: "chosen" | "sections" | "name" };
   readonly rows: readonly (readonly string[])[];
   readonly rowNumbers: readonly number[];
 }
+
+/** How a sheet with a row or column for each taxon was read. */
+export interface WideReading {
+  readonly shape: "samples-down" | "taxa-down";
+  readonly samples: number;
+  readonly taxa: number;
+  /** What it says of a group that all its cells in a sample are blank. */
+  readonly blank: { readonly means: "not-found" | "not-searched"; readonly by: "default" | "chosen" };
+  /** Samples and groups of which all cells are blank. */
+  readonly allBlank: number;
+  /** Cells that are neither numbers nor the usual signs. */
+  readonly codes: readonly {
+    readonly code: string;
+    readonly cells: number;
+    /** Absent: it has to be asked. */
+    readonly means?: CodeMeaning;
+    readonly by?: "notes" | "scale" | "chosen";
+  }[];
+}
+
+export type CodeMeaning = "found" | "not-found" | "not-searched" | "doubtful" | "reworked";
 
 /** A file of the study as bytes were given: what the repeat sheet records. */
 export interface StudyFile {

@@ -84,9 +84,40 @@ export type SetSetting =
 
 /** Raw settings with one set by its path, from JSON or, where the text is not JSON, from the text itself. */
 export function setSetting(raw: unknown, path: string, text: string): SetSetting {
-  const names = path.split(".");
-  if (!isKnown(names)) return { kind: "unknown", path, nearest: suggestName(path, knownSettingPaths()) };
+  const names = partedPath(path);
+  if (names === undefined || !isKnown(names))
+    return { kind: "unknown", path, nearest: suggestName(path, knownSettingPaths()) };
   return { kind: "set", settings: withValue(raw ?? {}, names, jsonOrText(text)) };
+}
+
+/** A name as it stands in a path: in brackets and quotes where it holds more than letters, digits, hyphens. */
+const stepOf = (name: string): string =>
+  /^[\p{L}\p{N}_-]+$/u.test(name) ? `.${name}` : `[${JSON.stringify(name)}]`;
+
+/** The path of a setting as `setSetting` takes it: `tables["finds.csv"].decimal`. */
+export const settingPath = (names: readonly string[]): string =>
+  names.map(stepOf).join("").replace(/^\./, "");
+
+/** The names of a path; undefined where a bracket or a quote is not closed. */
+function partedPath(path: string): readonly string[] | undefined {
+  const names: string[] = [];
+  let rest = path;
+  while (rest !== "") {
+    const [step, quoted, plain = ""] =
+      /^\[("(?:[^"\\]|\\.)*")\](?:\.(?=[^.[]))?|^([^.[]*)(?:\.|(?=\[)|$)/.exec(rest) ?? [];
+    if (step === undefined || step === "") return undefined;
+    const name = quoted === undefined ? plain : jsonOrText(quoted);
+    if (typeof name !== "string") return undefined;
+    names.push(name);
+    rest = rest.slice(step.length);
+  }
+  return names;
+}
+
+/** A path and the text behind its equals sign; undefined where there is none. */
+export function partedAssignment(assignment: string): readonly [path: string, text: string] | undefined {
+  const parts = /^((?:[^="[]|\[(?:"(?:[^"\\]|\\.)*"\])?)+)=(.*)$/s.exec(assignment);
+  return parts === null ? undefined : [parts[1], parts[2]];
 }
 
 function jsonOrText(text: string): unknown {

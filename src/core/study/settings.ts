@@ -1,9 +1,23 @@
 import * as v from "valibot";
+import { suggestName } from "./nearest.ts";
 import { tables } from "./tables/index.ts";
 
 const positiveInteger = v.pipe(v.number(), v.integer(), v.minValue(1));
 const share = v.pipe(v.number(), v.gtValue(0), v.ltValue(1));
 const names = v.array(v.pipe(v.string(), v.nonEmpty()));
+/** Words for a column that is no declared one. */
+const columnWords = ["taxon", "unused"];
+const columnNames = [...new Set([...columnWords, ...tables.flatMap(({ columns }) => Object.keys(columns))])];
+const columnName = v.pipe(
+  v.string(),
+  v.check(
+    (name) => columnNames.includes(name),
+    ({ input }) => {
+      const nearest = suggestName(String(input), columnNames);
+      return `a declared column, taxon or unused${nearest === undefined ? "" : ` (did you mean ${nearest}?)`}`;
+    },
+  ),
+);
 const says = <T extends v.GenericSchema>(schema: T, words: string) => v.pipe(schema, v.description(words));
 
 /** The one declaration of every setting: its type, its default where absent, its words. */
@@ -23,11 +37,27 @@ export const settingsSchema = v.strictObject({
           delimiter: v.optional(v.picklist(["comma", "semicolon", "tab", "bar"])),
           encoding: v.optional(v.picklist(["UTF-8", "UTF-16LE", "UTF-16BE", "Windows-1252"])),
           table: v.optional(v.picklist(tables.map(({ name }) => name))),
+          shape: v.optional(v.picklist(["long", "samples-down", "taxa-down"])),
+          section: v.optional(v.pipe(v.string(), v.nonEmpty())),
+          blank: v.optional(v.picklist(["not-found", "not-searched"])),
+          codes: v.optional(
+            v.record(v.string(), v.picklist(["found", "not-found", "not-searched", "doubtful", "reworked"])),
+          ),
+          columns: v.optional(
+            v.record(
+              v.string(),
+              v.strictObject({
+                is: v.optional(columnName),
+                unit: v.optional(v.pipe(v.string(), v.nonEmpty())),
+                axis: v.optional(v.picklist(["height", "depth"])),
+              }),
+            ),
+          ),
         }),
       ),
       {},
     ),
-    "by file: its decimal sign, delimiter, encoding and the table it is, where the file leaves them open",
+    "by file, where it leaves them open: decimal sign, delimiter, encoding, the table it is; its section; what each column is (is, unit, axis); of a wide sheet the shape, what a blank sample says, what its codes mean",
   ),
   sections: v.optional(
     v.strictObject({

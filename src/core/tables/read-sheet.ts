@@ -14,6 +14,7 @@ import { type DecodedText, decodeBytes } from "./dialect/encoding.ts";
 import { type FoundHeader, findHeader } from "./dialect/header.ts";
 import { tellDialect } from "./dialect/tell-dialect.ts";
 import { MOST_BYTES, MOST_COLUMNS, mebibytes } from "./limits.ts";
+import { recognitions } from "./recognition.ts";
 
 export interface SheetSource {
   readonly file: string;
@@ -51,7 +52,17 @@ export function readSheet(source: SheetSource): ReadSheet | undefined {
   if (dialect === undefined) return undefined;
   const { rows, rowNumbers } = cellsOf(below, columns, records, source);
   const declaredColumns = columns.map(({ column }) => column);
-  const sheet = { file, table: table.name, dialect, headers, columns: declaredColumns, rows, rowNumbers };
+  const recognised = recognitions(columns, rows, table);
+  const sheet = {
+    file,
+    table: table.name,
+    dialect,
+    headers,
+    columns: declaredColumns,
+    recognised,
+    rows,
+    rowNumbers,
+  };
   return { sheet, hints: hintsOf(columns) };
 }
 

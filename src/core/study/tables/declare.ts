@@ -1,3 +1,14 @@
+import type { Axis, ToldBy } from "../model.ts";
+
+/** What a person (or a look at the content) says a column of a file is. */
+export interface ColumnChoice {
+  /** The declared column, or `unused`; absent: as its header says. */
+  readonly is?: string;
+  readonly by: ToldBy;
+  readonly unit?: string;
+  readonly axis?: Axis;
+}
+
 /** One column of a table, declared once: type, validation, schema, template, help and recognition follow from it. */
 export interface ColumnDeclaration {
   readonly type: "text" | "number" | "integer" | "enum" | "boolean";
@@ -33,10 +44,12 @@ export interface TableDeclaration {
     readonly table: string;
     readonly to: readonly string[];
   }[];
-  /** Cells of a second worked row, over those of the first, for a table whose rows come in pairs. */
+  /** Cells of a second worked row, over those of the first, for a table that needs two to make sense: the worked rows of all tables are one small, consistent study. */
   readonly secondRow?: Readonly<Record<string, string>>;
   /** True where a further column is a trait instead of unused. */
   readonly furtherColumns?: boolean;
+  /** What is chosen for columns of one file, by header. */
+  readonly chosen?: ReadonlyMap<string, ColumnChoice>;
 }
 
 type ValueOf<C extends ColumnDeclaration> = C["type"] extends "number" | "integer"
