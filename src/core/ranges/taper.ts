@@ -32,7 +32,7 @@ export function taper(
   const outline = method === "sampled" ? sampledOutline(rangeCase) : uniformOutline(rangeCase);
   const end = endM(method);
   return {
-    section: rangeCase.section.name,
+    section: rangeCase.section,
     taxon: rangeCase.taxon.taxon,
     method,
     ...outline,
@@ -41,9 +41,9 @@ export function taper(
 }
 
 /** Evenly spaced levels, mapped to height: dense where the chance falls fast; flat across rock without recovery. */
-function uniformOutline({ range, coordinate, section }: RangeCase): Outline {
+function uniformOutline({ range, coordinate, topM: sectionTopM }: RangeCase): Outline {
   const lowest = coordinate.toEffective(range.lastM);
-  const topM = Math.max(section.topM, range.lastM);
+  const topM = Math.max(sectionTopM, range.lastM);
   const highest = Math.min(
     coordinate.toEffective(topM),
     uniformBound(range, 1 - LEAST_CHANCE) ?? Number.POSITIVE_INFINITY,
@@ -63,7 +63,7 @@ function uniformOutline({ range, coordinate, section }: RangeCase): Outline {
 }
 
 /** Steps: the chance falls at each barren horizon sampled, and between them nobody looked. */
-function sampledOutline({ range, section, sampled }: RangeCase): Outline {
+function sampledOutline({ range, topM, sampled }: RangeCase): Outline {
   const heightsM = [range.lastM];
   const chances = [1];
   const barrenM = sampled?.barrenM ?? [];
@@ -74,8 +74,8 @@ function sampledOutline({ range, section, sampled }: RangeCase): Outline {
     chances.push(chances[chances.length - 1], steps[index + 1]);
   });
   const isDrawnOut = chances[chances.length - 1] >= LEAST_CHANCE;
-  if (isDrawnOut && section.topM > heightsM[heightsM.length - 1]) {
-    heightsM.push(section.topM);
+  if (isDrawnOut && topM > heightsM[heightsM.length - 1]) {
+    heightsM.push(topM);
     chances.push(chances[chances.length - 1]);
   }
   return { heightsM, chances };

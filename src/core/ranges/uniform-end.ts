@@ -1,5 +1,13 @@
 import { confidenceToReach } from "./pivot.ts";
-import { commonFields, metres, note, type RangeCase, reasonWithoutBound } from "./range-case.ts";
+import {
+  commonFields,
+  levelWords,
+  metres,
+  note,
+  type RangeCase,
+  reasonWithoutBound,
+  wordsOf,
+} from "./range-case.ts";
 import type { RangeEnd } from "./result.ts";
 import { uniformBound, uniformPoint } from "./uniform.ts";
 
@@ -14,7 +22,7 @@ export function uniformEnd(rangeCase: RangeCase): RangeEnd {
   const { range, coordinate, confidence } = rangeCase;
   const reach = reachLevel(rangeCase);
   const fields = { ...common, lowM: range.lastM, ...(reach === undefined ? {} : { reachLevel: reach }) };
-  if (rangeCase.reachesTop) return { ...fields, outcome: "leaves-section", note: cutOffNote };
+  if (rangeCase.reachesTop) return { ...fields, outcome: "leaves-section", note: cutOffNote(rangeCase) };
   const bound = uniformBound(range, confidence);
   const point = uniformPoint(range);
   const pointM = point === undefined ? undefined : coordinate.toHeight(point, "upper");
@@ -25,7 +33,11 @@ export function uniformEnd(rangeCase: RangeCase): RangeEnd {
   };
 }
 
-export const cutOffNote = "found in the highest sample searched: the end is open at the section's top";
+/** Why the end of a range that the section cuts off is open. */
+export function cutOffNote(rangeCase: RangeCase): string {
+  const { highest, sectionEnd } = wordsOf(rangeCase);
+  return `found in the ${highest} sample searched: the end is open at the ${sectionEnd}`;
+}
 
 /** Confidence at which the interval just reaches H; undefined where the last find lies above H or the end is cut off. */
 function reachLevel({ range, coordinate, horizon, reachesTop }: RangeCase): number | undefined {
@@ -44,20 +56,24 @@ export function fewNote(horizons: number): string | undefined {
  * but the outcome says that no rock of this section can confirm it.
  */
 export function boundFields(
-  { section, coordinate, range }: RangeCase,
+  rangeCase: RangeCase,
   bound: number | undefined,
   notes: readonly (string | undefined)[],
 ): Pick<RangeEnd, "highM" | "outcome" | "note"> {
+  const { coordinate, range, topM } = rangeCase;
   const highM = bound === undefined ? undefined : coordinate.toHeight(bound, "upper");
   if (bound === undefined || highM === undefined) return { outcome: "open", note: note(...notes) };
   const gap = coordinate.gapAt(bound);
   if (gap !== undefined) {
-    const words = `bound falls in a gap from ${metres(gap.baseM)} to ${metres(gap.topM)}`;
+    const edges = [levelWords(rangeCase, gap.baseM), levelWords(rangeCase, gap.topM)];
+    const [low, high] = rangeCase.end === "base" ? edges.toReversed() : edges;
+    const words = `bound falls in a gap from ${low} to ${high}`;
     return { highM, outcome: "in-hiatus", note: note(words, ...notes) };
   }
-  if (highM <= section.topM) return { highM, outcome: "closed", note: note(...notes) };
-  const atTop = confidenceToReach(range, coordinate.toEffective(section.topM));
-  const words = `bound lies ${metres(highM - section.topM)} above the section's top, reached at level ${round(atTop)}`;
+  if (highM <= topM) return { highM, outcome: "closed", note: note(...notes) };
+  const atTop = confidenceToReach(range, coordinate.toEffective(topM));
+  const { above, sectionEnd } = wordsOf(rangeCase);
+  const words = `bound lies ${metres(highM - topM)} ${above} the ${sectionEnd}, reached at level ${round(atTop)}`;
   return { highM, outcome: "leaves-section", note: note(words, ...notes) };
 }
 

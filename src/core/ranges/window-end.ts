@@ -1,4 +1,4 @@
-import { commonFields, metres, type RangeCase, reasonWithoutBound } from "./range-case.ts";
+import { commonFields, levelWords, type RangeCase, reasonWithoutBound, wordsOf } from "./range-case.ts";
 import type { RangeEnd } from "./result.ts";
 import { uniformBound } from "./uniform.ts";
 import { boundFields, cutOffNote } from "./uniform-end.ts";
@@ -15,7 +15,7 @@ export function windowEnd(rangeCase: RangeCase): RangeEnd {
   if (undefinedBecause !== undefined) return { ...common, outcome: "undefined", note: undefinedBecause };
   const { range, coordinate, confidence } = rangeCase;
   if (rangeCase.reachesTop)
-    return { ...common, lowM: range.lastM, outcome: "leaves-section", note: cutOffNote };
+    return { ...common, lowM: range.lastM, outcome: "leaves-section", note: cutOffNote(rangeCase) };
   const asked = levelAsked(rangeCase);
   const persists =
     asked.levelM > range.lastM ? persistence(range, coordinate.toEffective(asked.levelM)) : undefined;
@@ -35,12 +35,15 @@ interface LevelAsked {
   readonly words: string;
 }
 
-function levelAsked({ range, horizon, searchedTopM }: RangeCase): LevelAsked {
+function levelAsked(rangeCase: RangeCase): LevelAsked {
+  const { range, horizon, searchedTopM } = rangeCase;
+  const { highest, above } = wordsOf(rangeCase);
   const isAbove = horizon !== undefined && horizon.positionM > range.lastM;
   if (isAbove && horizon.positionM <= searchedTopM)
     return { levelM: horizon.positionM, isHorizon: true, words: `p at ${horizon.horizon}` };
+  const searched = `p at ${levelWords(rangeCase, searchedTopM)}, the ${highest} level searched`;
   const words = isAbove
-    ? `p at ${metres(searchedTopM)}, the highest level searched, below ${horizon.horizon}`
-    : `p at ${metres(searchedTopM)}, the highest level searched`;
+    ? `${searched}, ${above === "above" ? "below" : "above"} ${horizon.horizon}`
+    : searched;
   return { levelM: searchedTopM, isHorizon: false, words };
 }

@@ -49,7 +49,11 @@ function reachOf({ candidates, markers, ranges, study }: Analysis, section: Sect
   for (const candidate of candidates) {
     if (candidate.section !== section.name || candidate.role !== "candidate") continue;
     const ends = ranges.ends.filter(
-      (end) => end.section === section.name && end.taxon === candidate.taxon && end.reachLevel !== undefined,
+      (end) =>
+        end.end === "top" &&
+        end.section === section.name &&
+        end.taxon === candidate.taxon &&
+        end.reachLevel !== undefined,
     );
     const leading = study.settings.ranges.methods
       .map((method) => ends.find((end) => end.method === method))
