@@ -5,7 +5,7 @@ export const verbs: readonly Verb[] = [
   {
     name: "new",
     parameters: ["<folder>"],
-    summary: "a study to fill in: tables with headers and one worked row each",
+    summary: "a study to fill in: tables with headers and worked rows",
     act: async (words, _options, screen) => (await import("./new.ts")).newStudy(words[0], screen),
   },
   {

@@ -4,7 +4,7 @@ import { studyTemplate } from "../../core/tables/templates.ts";
 import { CallError } from "../call-error.ts";
 import type { Screen } from "../screen.ts";
 
-/** Writes a study to fill in: every table with its header and one worked row. Never writes over anything. */
+/** Writes a study to fill in: every table with its header and its worked rows. Never writes over anything. */
 export async function newStudy(folder: string, screen: Screen): Promise<number> {
   const found = await stat(folder).catch(() => undefined);
   if (found !== undefined && !found.isDirectory())
@@ -16,7 +16,7 @@ export async function newStudy(folder: string, screen: Screen): Promise<number> 
   const files = studyTemplate(basename(resolve(folder)));
   for (const [name, text] of files) await writeFile(join(folder, name), text);
   screen.say(`A study to fill in lies in ${folder}: ${[...files.keys()].join(", ")}.`);
-  screen.say("Each table holds one worked row: replace it. Delete the tables you do not need; then:");
+  screen.say("Each table holds a worked row or two: replace them. Delete the tables you do not need; then:");
   screen.say(`  lastbed check ${folder}\n  lastbed run ${folder} --out <folder>`);
   screen.document({
     command: "new",

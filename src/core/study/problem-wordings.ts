@@ -1,3 +1,4 @@
+import { legWordings } from "./leg-wordings.ts";
 import type { Problem } from "./problem.ts";
 import { sourceWordings } from "./source-wordings.ts";
 import { caution, error, nearest, type ProblemPlace, type Wording } from "./wording.ts";
@@ -7,6 +8,7 @@ const column = (place: ProblemPlace) =>
 /** The one table of wordings: every problem's expectation and mend, by code. */
 const wordings = {
   ...sourceWordings,
+  ...legWordings,
   "unknown-unit": (p) => error(p.detail ?? "a known unit", `Write one of the units listed.${nearest(p)}`),
   "ambiguous-ppt": () =>
     error(
@@ -62,25 +64,6 @@ const wordings = {
     ),
   "last-below-first": (p) =>
     error("last above first", p.detail ?? "Exchange first and last, or correct them."),
-  "unknown-leg": (p) =>
-    error(
-      "a leg of legs.csv in this section",
-      `Add two or more rows for the leg to legs.csv, or correct its name.${nearest(p)}`,
-    ),
-  "short-leg": (p) =>
-    error(`two or more rows for leg ${p.found}`, "Add the leg's second reading to legs.csv."),
-  "repeated-reading": () =>
-    error("each reading of a leg once", "Correct the reading: one reading cannot stand at two positions."),
-  "leg-turns-back": (p) =>
-    caution(
-      "positions that go one way along the leg",
-      `Leg ${p.detail} turns back here: correct the reading or the position, or begin a new leg.`,
-    ),
-  "outside-leg": (p) =>
-    error(
-      `a reading from ${p.detail}`,
-      "Correct the reading or the leg, or add a row to legs.csv that reaches it.",
-    ),
   "unknown-sample": (p) =>
     error(
       "a sample of this section in samples.csv",

@@ -2,7 +2,7 @@ import { type TableDeclaration, tables } from "../study/tables/index.ts";
 import { tableResource, writeDataPackage } from "./data-package.ts";
 import { writeCsv } from "./write-csv.ts";
 
-/** A table to fill in: the header and one worked row (a leg takes two). */
+/** A table to fill in: the header and one worked row (two where one alone would leave something to be said). */
 function tableTemplate(table: TableDeclaration): string {
   const columns = Object.entries(table.columns);
   const worked = columns.map(([, column]) => column.example);

@@ -30,6 +30,8 @@ export interface SectionFrame {
   readonly axis: Axis;
   readonly unit: LengthUnit;
   readonly legs: ReadonlyMap<string, Leg>;
+  /** Legs of legs.csv that an error keeps from use. */
+  readonly legsLeftOut?: ReadonlySet<string>;
   /** One number for levels within 1e-9 m. */
   readonly level: (heightM: number) => number;
   readonly declared: Pick<Section, "title" | "datum" | "source" | "densityGCm3" | "origin"> & {

@@ -22,6 +22,11 @@ export function heightOf(
   if (name === undefined) return frame.level(givenToHeight(position, frame));
   const leg = frame.legs.get(name);
   if (!leg) {
+    if (frame.legsLeftOut?.has(name)) {
+      const subject = JSON.stringify([frame.name, name]);
+      assembly.problems.addOnce(subject, "leg-left-out", { ...origin, column: "leg", found: name });
+      return undefined;
+    }
     const nearest = suggestName(name, frame.legs.keys());
     const now = sameButForForm(name, frame.legs.keys());
     const place = { ...origin, column: "leg", found: name, nearest, now };

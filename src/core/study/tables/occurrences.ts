@@ -13,6 +13,7 @@ export const occurrences = table({
   title: "Occurrences",
   help: "Every find: what, and in which sample or at which position.",
   references: inSections,
+  secondRow: { taxon: "Velorites orskelensis", sample: "OL-032", count: "1" },
   oneOf: [["sample"], ["position"]],
   columns: {
     section: sectionColumn,

@@ -16,6 +16,7 @@ export const samples = table({
   help: "Every sample taken, the barren ones too: by its middle (with thickness, or as a point) or by base and top.",
   key: ["section", "sample"],
   references: inSections,
+  secondRow: { sample: "OL-032", position: "13.1" },
   oneOf: [["position"], ["base", "top"]],
   columns: {
     section: sectionColumn,

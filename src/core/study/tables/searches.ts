@@ -6,6 +6,7 @@ export const searches = table({
   help: "A row says: this group was looked for in this sample. A sample without a row for a group was not searched for it.",
   key: ["section", "sample", "group"],
   references: [{ columns: ["section", "sample"], table: "samples", to: ["section", "sample"] }],
+  secondRow: { sample: "OL-032" },
   columns: {
     section: sectionColumn,
     sample: {
