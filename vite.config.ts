@@ -3,6 +3,7 @@ import { fileURLToPath } from "node:url";
 import react from "@vitejs/plugin-react";
 import type { Plugin } from "vite";
 import { defineConfig } from "vitest/config";
+import { kernelBytes } from "./src/kernels/compile.mjs";
 
 const at = (path: string) => fileURLToPath(new URL(path, import.meta.url));
 
@@ -46,13 +47,13 @@ function platesFaces(): Plugin {
 const page = {
   root: at("src/app"),
   base: "./",
-  plugins: [react(), exampleStudy()],
-  worker: { format: "es" as const },
+  plugins: [react(), exampleStudy(), kernelBytes()],
+  worker: { format: "es" as const, plugins: () => [kernelBytes()] },
   build: { outDir: at("dist/page"), emptyOutDir: true, assetsInlineLimit: 0, chunkSizeWarningLimit: 2000 },
 };
 
 const node = {
-  plugins: [react(), platesFaces()],
+  plugins: [react(), platesFaces(), kernelBytes()],
   ssr: { noExternal: true as const, target: "node" as const },
   build: {
     ssr: true,
@@ -73,7 +74,7 @@ const node = {
 };
 
 const test = {
-  plugins: [react()],
+  plugins: [react(), kernelBytes()],
   test: {
     root: at("."),
     include: ["tests/**/*.test.{ts,tsx}"],

@@ -23,7 +23,7 @@ const importsOf = ({ path, text }: SourceFile): readonly string[] =>
       : target,
   );
 
-const layers = ["core", "figures", "report", "run", "cli", "app"];
+const layers = ["kernels", "core", "figures", "report", "run", "cli", "app"];
 const stages = ["numeric", "study", "tables", "markers", "alignment", "ranges", "timing"];
 
 /** Place of a file in an order of folders, or of files directly in the parent. */
@@ -59,19 +59,20 @@ describe("the structure", () => {
     expect(wrong).toEqual([]);
   });
 
-  it("core imports nothing but itself, what parts and unpacks tables, and valibot", () => {
+  it("core imports nothing but itself, what parts and unpacks tables, valibot and the compiled kernels", () => {
     const packages = sources
       .filter(({ path }) => path.startsWith("core/"))
       .flatMap(importsOf)
       .filter((target) => !target.startsWith("core/"));
     expect(new Set(packages)).toEqual(
-      new Set(["fflate", "papaparse", "read-excel-file/universal", "valibot"]),
+      new Set(["fflate", "papaparse", "read-excel-file/universal", "valibot", "virtual:kernels"]),
     );
   });
 
   it("an index.ts stands at a layer's edge, or gathers a list", () => {
     const deep = sources.filter(({ path }) => path.endsWith("/index.ts")).map(({ path }) => path);
     const allowed = [
+      "kernels/index.ts",
       "core/index.ts",
       "figures/index.ts",
       "report/index.ts",

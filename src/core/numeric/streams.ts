@@ -1,7 +1,7 @@
 import { log } from "./elementary.ts";
 import { normalQuantile } from "./normal.ts";
 import { type FourWords, philox4x32 } from "./philox.ts";
-import { discard, type Sfc64, sfc64 } from "./sfc64.ts";
+import { discard, type Sfc64, type Sfc64State, sfc64 } from "./sfc64.ts";
 
 /** Each purpose draws from a stream of its own, so that no two ever share numbers. */
 export const streams = {
@@ -24,7 +24,8 @@ export type StreamName = keyof typeof streams;
 /** Replicates run in blocks of this size, one generator each: any number of workers gives the same bits. */
 export const BLOCK_SIZE = 1024;
 
-const DROPPED_OUTPUTS = 12;
+/** Outputs of a newly seeded generator that are thrown away. */
+export const DROPPED_OUTPUTS = 12;
 const TWO_32 = 4294967296;
 
 export interface Generator {
@@ -69,15 +70,21 @@ export function doubleOfWords(first: number, second: number): number {
   return ((first >>> 5) * 67108864 + (second >>> 6)) / 9007199254740992;
 }
 
-function seededSfc64(seed: number, stream: StreamName, block: number): Sfc64 {
+/** State of the fast generator of one block, before its first outputs are dropped. */
+export function seededState(seed: number, stream: StreamName, block: number): Sfc64State {
   const first = philoxAt(seed, { stream, chain: block, step: 0 });
   const second = philoxAt(seed, { stream, chain: block, step: 1 });
-  const generator = sfc64({
+  return {
     a: { low: first[0], high: first[1] },
     b: { low: first[2], high: first[3] },
     c: { low: second[0], high: second[1] },
     counter: { low: 1, high: 0 },
-  });
+  };
+}
+
+/** The fast generator of one block, ready to draw. */
+export function seededSfc64(seed: number, stream: StreamName, block: number): Sfc64 {
+  const generator = sfc64(seededState(seed, stream, block));
   discard(generator, DROPPED_OUTPUTS);
   return generator;
 }
