@@ -1,6 +1,6 @@
 import { readFile } from "node:fs/promises";
 import { fileURLToPath } from "node:url";
-import asc from "assemblyscript/asc";
+import { main } from "assemblyscript/asc";
 
 const here = fileURLToPath(new URL(".", import.meta.url));
 
@@ -15,7 +15,7 @@ const options =
 async function compileKernels() {
   let module;
   let said = "";
-  const { error } = await asc.main(["index.ts", "--baseDir", here, ...options.split(" ")], {
+  const { error } = await main(["index.ts", "--baseDir", here, ...options.split(" ")], {
     readFile: (name) => readFile(`${here}${name}`, "utf8").catch(() => null),
     writeFile: (_, contents) => {
       module = contents;
@@ -26,9 +26,7 @@ async function compileKernels() {
       },
     },
   });
-  if (error !== null || module === undefined)
-    throw new Error(`kernels: ${error?.message ?? ""}
-${said}`);
+  if (error !== null || module === undefined) throw new Error(`kernels: ${error?.message ?? ""} ${said}`);
   return module;
 }
 

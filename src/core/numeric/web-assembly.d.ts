@@ -4,12 +4,10 @@ declare module "virtual:kernels" {
 }
 
 declare namespace WebAssembly {
-  class Module {
-    constructor(bytes: Uint8Array);
-  }
+  const Module: new (bytes: Uint8Array) => object;
   /** `Exports`: what the module is known to export. */
   class Instance<Exports> {
-    constructor(module: Module, imports: object);
+    constructor(module: object, imports: object);
     readonly exports: Exports;
   }
   class Memory {
