@@ -80,6 +80,16 @@ const wordings = {
       "Correct the sample or the position, or leave the position blank.",
     ),
   "count-zero": () => caution("a find", "A count of 0 is read as looked for and not found, never as a find."),
+  "find-twice": (p) =>
+    caution(
+      "each taxon once in a sample",
+      `Row ${p.detail} names it too: take one out, or add the two counts up. They are one horizon as they stand.`,
+    ),
+  "count-against-abundance": () =>
+    caution(
+      "a count and an abundance that both say found, or both not found",
+      "Correct one of them. The count decides whether it is a find.",
+    ),
   "one-level": () =>
     caution(
       "finds at two or more levels",
@@ -107,6 +117,11 @@ const wordings = {
     caution(
       "a value above 0 in a trace element",
       "Does 0 mean not detected? Then write bdl and the detection_limit, or <limit. It is used as 0 until then.",
+    ),
+  "below-detection-limit": (p) =>
+    caution(
+      `a value of at least its detection_limit (${p.detail})`,
+      "Does it stand for not detected? Then write bdl, or <limit. It is used as the number it is until then.",
     ),
   "no-detection-limit": () =>
     error("a detection_limit beside bdl", "Give the detection_limit of the row, or write <limit."),

@@ -50,7 +50,7 @@ export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "tax
       recovery: lists.recovery.get(frame.name) ?? [],
     };
     const section = sectionOf(frame, own);
-    checkSection(section, assembly);
+    checkSection(section, frame.declared, assembly);
     return section;
   });
   checkStudy({ sections, taxa }, assembly);

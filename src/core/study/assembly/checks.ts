@@ -1,21 +1,22 @@
-import { acceptedName, hasNoRecovery, isWithin } from "../finds.ts";
+import { acceptedName } from "../finds.ts";
 import { formatGiven } from "../heights.ts";
 import { sameLevelM } from "../legs.ts";
-import type { Occurrence, Origin, Section, Study, Taxon } from "../model.ts";
+import type { Origin, Section, Study, Taxon } from "../model.ts";
 import { suggestName } from "../nearest.ts";
 import { excerpt } from "../problem-wordings.ts";
+import { checkFinds } from "./check-finds.ts";
 import { checkNames } from "./check-names.ts";
 import { checkAges, checkHorizonOrder } from "./check-order.ts";
 import { checkRock } from "./check-rock.ts";
-import { type Assembly, gather } from "./context.ts";
+import type { Assembly, SectionFrame } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
-import { isToGenus } from "./occurrences.ts";
+
+type DeclaredEnds = SectionFrame["declared"];
 
 /** Cautions on what is read well but gives little, or lies where it should not. */
-export function checkSection(section: Section, assembly: Assembly): void {
-  checkLevels(section, assembly);
-  checkEnds(section, assembly);
-  checkHiddenFinds(section, assembly);
+export function checkSection(section: Section, declared: DeclaredEnds, assembly: Assembly): void {
+  checkFinds(section, assembly);
+  checkEnds(section, declared, assembly);
   checkRock(section, assembly);
   checkAges(section, assembly);
 }
@@ -29,20 +30,9 @@ export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: As
   checkHorizonOrder(study.sections, assembly);
 }
 
-function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
-  const byTaxon = new Map<string, Occurrence[]>();
-  for (const find of occurrences) if (find.count !== 0 && !isToGenus(find)) gather(byTaxon, find.taxon, find);
-  for (const [taxon, finds] of byTaxon) {
-    if (finds.some(({ heightM }) => Math.abs(heightM - finds[0].heightM) > sameLevelM)) continue;
-    const code = finds.length === 1 ? "one-occurrence" : "one-level";
-    const found = `${taxon} in ${name}`;
-    assembly.problems.addOnce(name, code, { ...finds[0].origin, column: "taxon", found });
-  }
-}
-
-function checkEnds(section: Section, assembly: Assembly): void {
+function checkEnds(section: Section, { bottomM, topM }: DeclaredEnds, assembly: Assembly): void {
   const detail = `${formatGiven(section.bottomM, section)} to ${formatGiven(section.topM, section)}`;
-  for (const { heightM, origin, column } of placesOf(section)) {
+  for (const { heightM, origin, column } of placesOf(section, bottomM !== undefined && topM !== undefined)) {
     if (heightM >= section.bottomM - sameLevelM && heightM <= section.topM + sameLevelM) continue;
     const found = formatGiven(heightM, section);
     assembly.problems.addOnce(section.name, "outside-section", { ...origin, column, found, detail });
@@ -50,7 +40,10 @@ function checkEnds(section: Section, assembly: Assembly): void {
 }
 
 /** Every level that a section's rows place, with the column that places it. */
-function* placesOf(section: Section): Generator<{
+function* placesOf(
+  section: Section,
+  isDeclared: boolean,
+): Generator<{
   readonly heightM: number;
   readonly origin: Origin;
   readonly column: string;
@@ -58,31 +51,16 @@ function* placesOf(section: Section): Generator<{
   const { samples, occurrences, measurements, horizons, beds, publishedRanges } = section;
   for (const list of [samples, occurrences, measurements, horizons])
     for (const { heightM, origin } of list) yield { heightM, origin, column: "position" };
-  for (const { baseM, topM, origin } of beds) {
-    // A bed goes on beyond the section's end; only one that lies wholly outside is odd.
+  // Where no ends are declared, the section is what was searched and logged, and rock beyond it may be covered.
+  const intervals = isDeclared ? section.intervals : [];
+  for (const { baseM, topM, origin } of [...beds, ...intervals]) {
+    // A bed or a cover goes on beyond the section's end; only one that lies wholly outside is odd.
     if (baseM > section.bottomM) yield { heightM: baseM, origin, column: "base" };
     else yield { heightM: topM, origin, column: "top" };
   }
   for (const { firstM, lastM, origin } of publishedRanges) {
     yield { heightM: firstM, origin, column: "first" };
     yield { heightM: lastM, origin, column: "last" };
-  }
-}
-
-/** Finds inside rock that nobody could search. */
-function checkHiddenFinds(section: Section, assembly: Assembly): void {
-  const hidden = section.intervals.filter(hasNoRecovery);
-  for (const find of section.occurrences) {
-    if (find.count === 0) continue;
-    const interval = hidden.find((each) => isWithin(find.heightM, each));
-    if (interval === undefined) continue;
-    const ends = [interval.baseM, interval.topM].map((heightM) => formatGiven(heightM, section));
-    assembly.problems.addOnce(`${section.name} ${interval.origin.row}`, "find-in-hidden-rock", {
-      ...find.origin,
-      column: find.sample === undefined ? "position" : "sample",
-      found: `${find.taxon} at ${formatGiven(find.heightM, section)}`,
-      detail: `the ${interval.kind} interval (${ends.join(" to ")})`,
-    });
   }
 }
 

@@ -4,6 +4,8 @@ import { readingNumbers, readingSize, readPolarityCell, readValueCell, scaleRead
 import type { RowOf } from "../tables/declare.ts";
 import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
+import { plainAnalyte } from "./analyte-names.ts";
+import { isSound, tellBelowLimit } from "./check-readings.ts";
 import { type Assembly, type BySection, gather, present, type ReadSheet, type Row } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
 import { onlyNumber } from "./one-mend.ts";
@@ -70,6 +72,7 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
   }
   const { reading } = cell;
   if (!isSound({ cells, origin }, reading, assembly)) return undefined;
+  tellBelowLimit({ cells, origin }, reading, assembly);
   if (reading.kind === "value" && reading.value === 0 && isTrace(unit)) {
     assembly.problems.addOnce(analyte, "trace-zero", { ...origin, column: "value", found: cells.value });
   }
@@ -117,24 +120,6 @@ const wholeRockNgG = 1e9;
 const largestReading = 1e15;
 const smallestReading = 1e-20;
 
-/** Trials bound the successes; an error must say what it is. */
-function isSound({ cells, origin }: MeasurementRow, reading: Reading, assembly: Assembly): boolean {
-  if (cells.error !== undefined && cells.error_kind === undefined) {
-    assembly.problems.add("error-kind-missing", { ...origin, column: "error_kind", found: "" });
-    return false;
-  }
-  if (cells.trials === undefined || reading.kind !== "value") return true;
-  if (reading.value < 0 || reading.value > cells.trials || !Number.isInteger(reading.value)) {
-    assembly.problems.add("more-successes", {
-      ...origin,
-      column: "value",
-      found: `${cells.value} of ${cells.trials}`,
-    });
-    return false;
-  }
-  return true;
-}
-
 function sigmaOf(
   cells: RowOf<typeof measurements>,
   reading: Reading,
@@ -171,31 +156,4 @@ function measurementOf(
     ...present({ densityGCm3: place.sample?.densityGCm3 ?? density }),
     origin,
   };
-}
-
-const symbols = new Map([
-  ["ir", "iridium"],
-  ["ni", "nickel"],
-  ["hg", "mercury"],
-  ["cr", "chromium"],
-  ["co", "cobalt"],
-  ["pt", "platinum"],
-  ["os", "osmium"],
-  ["al", "aluminium"],
-  ["aluminum", "aluminium"],
-  ["ca", "calcium"],
-  ["fe", "iron"],
-  ["δ13c", "d13c"],
-  ["delta13c", "d13c"],
-  ["d13ccarb", "d13c"],
-  ["δ18o", "d18o"],
-]);
-
-/** An analyte in lower case with hyphens; element symbols and isotope signs by their usual names. */
-function plainAnalyte(written: string): string {
-  const plain = written
-    .trim()
-    .toLowerCase()
-    .replace(/[\s_]+/g, "-");
-  return symbols.get(plain) ?? plain;
 }

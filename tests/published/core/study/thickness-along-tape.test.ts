@@ -21,6 +21,8 @@ const cases = readWrittenCsv(
   thickness: Number(thickness),
 }));
 
+const turned = (bearing: number) => (bearing + 37.5) % 360;
+
 describe("thickness along a tape", () => {
   it.each(cases)("$name", ({ tape, angles, thickness }) => {
     expect(Math.abs(tape * thicknessAlongTape(angles) - thickness)).toBeLessThan(1e-12 * (1 + tape));
@@ -37,7 +39,6 @@ describe("thickness along a tape", () => {
 
   it("is the same whatever north both bearings are read from, and turns with the way of the tape", () => {
     for (const { angles } of cases.slice(12)) {
-      const turned = (bearing: number) => (bearing + 37.5) % 360;
       const magnetic = {
         ...angles,
         tapeBearing: turned(angles.tapeBearing),

@@ -131,6 +131,73 @@ describe("contents that rock cannot have", () => {
   });
 });
 
+describe("a value below its detection limit", () => {
+  it.each([
+    ["0.04", "0.05", 1],
+    ["0.05", "0.05", 0],
+    ["<0.05", "0.05", 0],
+    ["bdl", "0.05", 0],
+    ["-0.1", "0.05", 1],
+  ])("%s against %s is told and kept", (value, limit, count) => {
+    const study = measured(value, "ng/g", limit);
+    expect(problemsOf(study, "below-detection-limit")).toHaveLength(count);
+    expect(study.sections[0].measurements).toHaveLength(1);
+  });
+});
+
+const inSamples = (header: string, ...rows: readonly string[]) =>
+  studyFrom({
+    "sections.csv": sections,
+    "samples.csv": lines("section,sample,position", "Orskel Ledge,S1,1", "Orskel Ledge,S2,2"),
+    "occurrences.csv": lines(`section,sample,taxon,${header}`, ...rows.map((row) => `Orskel Ledge,${row}`)),
+  });
+
+const coveredBeyond = (ends: string, interval: string) =>
+  problemsOf(
+    studyFrom({
+      "sections.csv": lines("section,axis,unit,bottom,top", `Orskel Ledge,height,m,${ends}`),
+      "occurrences.csv": finds("Orskel Ledge,Velor a,1", "Orskel Ledge,Velor a,9"),
+      "intervals.csv": lines("section,kind,base,top", `Orskel Ledge,covered,${interval}`),
+    }),
+    "outside-section",
+  );
+
+describe("a find that a sample's list names twice, or with two meanings", () => {
+  it("is told where only the number differs", () => {
+    const study = inSamples("count", "S1,Velor a,2", "S2,Velor a,2", "S1,Velor a,5");
+    expect(problemsOf(study, "find-twice")).toMatchObject([
+      { severity: "caution", file: "occurrences.csv", row: 4, column: "taxon", found: "Velor a in S1" },
+    ]);
+    expect(study.sections[0].occurrences).toHaveLength(3);
+  });
+
+  it("is as it should be where one is qualified, reworked or doubtful and the other is not", () => {
+    const rows = ["S1,Velor a,,,", "S1,Velor a,cf.,,", "S2,Velor a,,yes,", "S2,Velor a,,,"];
+    expect(problemsOf(inSamples("qualifier,reworked,doubtful", ...rows), "find-twice")).toEqual([]);
+  });
+
+  it.each([
+    ["0", "R", 1],
+    ["3", "absent", 1],
+    ["3", "-", 1],
+    ["3", "R", 0],
+    ["0", "0", 0],
+    ["", "R", 0],
+  ])("with count %j and abundance %j", (count, abundance, told) => {
+    const study = inSamples("count,abundance", `S1,Velor a,${count},${abundance}`, "S2,Velor a,,R");
+    expect(problemsOf(study, "count-against-abundance")).toHaveLength(told);
+  });
+});
+
+describe("a covered interval outside the section", () => {
+  it("is told where the section's ends are declared; one that goes on beyond them is not", () => {
+    expect(coveredBeyond("0,10", "11,12")).toMatchObject([{ file: "intervals.csv", row: 2, column: "base" }]);
+    expect(coveredBeyond("0,10", "-3,-1")).toMatchObject([{ file: "intervals.csv", row: 2, column: "top" }]);
+    expect(coveredBeyond("0,10", "9,12")).toEqual([]);
+    expect(coveredBeyond(",", "11,12")).toEqual([]);
+  });
+});
+
 describe("settings that no analysis can use", () => {
   it.each([
     [{ ranges: { methods: [] } }, "ranges.methods"],
