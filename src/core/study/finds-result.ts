@@ -13,6 +13,7 @@ export type FindReason =
   | "reworking-suspected"
   | "doubtful"
   | "fault-repeat"
+  | "fault-repeat-mapped"
   | "no-recovery"
   | "below-reworking-ceiling";
 
@@ -21,6 +22,7 @@ export interface Find {
   readonly section: string;
   readonly verbatim: string;
   readonly accepted: string;
+  /** Where it counts: for one mapped out of a repeated passage, the height of its rock in the first. */
   readonly heightM: number;
   readonly sample?: string;
   readonly used: "yes" | "no" | "merged";

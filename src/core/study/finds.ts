@@ -1,3 +1,4 @@
+import { firstPassage } from "./fault-repeat.ts";
 import type { Find, FindReason, LocalTaxon } from "./finds-result.ts";
 import { groupBy } from "./grouping.ts";
 import { type Identification, treatmentOf } from "./identification.ts";
@@ -48,23 +49,39 @@ interface JudgedFind extends Find {
 
 function judge(occurrence: Occurrence, section: Section, study: Study): JudgedFind {
   const { identification } = study.settings.taxa;
-  const asRead = reasonAgainst(occurrence, section, study.settings, identification);
+  const { heightM, isMapped } = placeInRock(occurrence.heightM, section, study.settings);
+  const reasonUnder = (names: Identification) =>
+    reasonAgainst({ ...occurrence, heightM }, section, study.settings, names);
+  const asRead = reasonUnder(identification);
   return {
     origin: occurrence.origin,
     section: section.name,
     named: occurrence.taxon,
     verbatim: occurrence.verbatim,
     accepted: acceptedName(operationalName(occurrence), study.taxa),
-    heightM: occurrence.heightM,
+    heightM,
     ...(occurrence.sample === undefined ? {} : { sample: occurrence.sample }),
     used: asRead === undefined ? "yes" : "no",
-    reason: asRead ?? "used",
-    strict:
-      occurrence.reworked === "no" &&
-      reasonAgainst(occurrence, section, study.settings, "strict") === undefined,
-    inclusive: reasonAgainst(occurrence, section, study.settings, "inclusive") === undefined,
+    reason: asRead ?? (isMapped ? "fault-repeat-mapped" : "used"),
+    strict: occurrence.reworked === "no" && reasonUnder("strict") === undefined,
+    inclusive: reasonUnder("inclusive") === undefined,
   };
 }
+
+/** Where a find counts: where it lies, or where its rock is passed first (`taxa.faultRepeat` is `map`). */
+function placeInRock(heightM: number, { intervals }: Section, { taxa }: Settings) {
+  if (taxa.faultRepeat !== "map") return { heightM, isMapped: false };
+  let placed = heightM;
+  for (let repeat = repeatAt(placed, intervals); repeat; repeat = repeatAt(placed, intervals)) {
+    const below = firstPassage(placed, repeat);
+    if (below === undefined) return { heightM, isMapped: false };
+    placed = below;
+  }
+  return { heightM: placed, isMapped: placed !== heightM };
+}
+
+const repeatAt = (heightM: number, intervals: readonly RockInterval[]): RockInterval | undefined =>
+  intervals.find((interval) => interval.kind === "fault-repeat" && isWithin(heightM, interval));
 
 function reasonAgainst(
   occurrence: Occurrence,
@@ -125,7 +142,10 @@ function mergeHorizons(finds: readonly JudgedFind[]): JudgedFind[] {
     const isKnown =
       (find.sample !== undefined && samples.has(find.sample)) ||
       levels.some((level) => Math.abs(level - find.heightM) <= LEVEL_TOLERANCE_M);
-    if (isKnown) return { ...find, used: "merged", reason: "same-horizon" };
+    if (isKnown) {
+      const reason = find.reason === "fault-repeat-mapped" ? find.reason : "same-horizon";
+      return { ...find, used: "merged", reason };
+    }
     if (find.sample !== undefined) samples.add(find.sample);
     levels.push(find.heightM);
     return find;
@@ -150,8 +170,11 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
     taxon,
     group,
     heightsM: upward.map((find) => find.heightM),
-    samples: upward.map(({ sample }) =>
-      sample !== undefined && searched.has(searchKey(sample, group)) ? sample : undefined,
+    // A mapped find lies in no sample of the first passage.
+    samples: upward.map(({ sample, reason }) =>
+      reason !== "fault-repeat-mapped" && sample !== undefined && searched.has(searchKey(sample, group))
+        ? sample
+        : undefined,
     ),
     ...(lastStrictM === undefined ? {} : { lastStrictM }),
     lastInclusiveM: inclusive.at(-1) ?? upward[upward.length - 1].heightM,

@@ -88,8 +88,8 @@ export const settingsSchema = v.strictObject({
         "treatment of doubtful finds",
       ),
       faultRepeat: says(
-        v.optional(v.picklist(["set-aside"]), "set-aside"),
-        "finds in a fault-repeated interval are set aside",
+        v.optional(v.picklist(["set-aside", "map"]), "set-aside"),
+        "finds in a fault-repeated interval: set aside, or mapped to where their rock is passed first",
       ),
       scales: says(
         v.optional(v.record(v.string(), v.record(v.string(), v.number())), {}),

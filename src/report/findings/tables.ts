@@ -11,6 +11,7 @@ export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
   const errors = study.problems.filter((problem) => problem.severity === "error").length;
   const cautions = study.problems.length - errors;
   const setAside = finds.filter((find) => find.used === "no").length;
+  const mapped = finds.filter((find) => find.reason === "fault-repeat-mapped").length;
   const state =
     errors > 0
       ? say` ${strong(plural(errors, "error"))} must be mended; what is unusable is left out.`
@@ -26,6 +27,9 @@ export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
       { label: "Errors", value: String(errors) },
       { label: "Cautions", value: String(cautions) },
       { label: "Finds set aside by the rules", value: String(setAside), note: list(reasons(finds), 4) },
+      ...(mapped > 0
+        ? [{ label: "Finds mapped from a repeated passage to the first", value: String(mapped) }]
+        : []),
     ],
     weaknesses: [],
     methods: [],
@@ -53,6 +57,7 @@ const reasonWords: Readonly<Record<FindReason, string>> = {
   "reworking-suspected": "suspected of reworking",
   doubtful: "doubtful",
   "fault-repeat": "in a repeated passage",
+  "fault-repeat-mapped": "mapped from a repeated passage to the first",
   "no-recovery": "in rock that could not be searched",
   "below-reworking-ceiling": "within reach of mixing",
 };

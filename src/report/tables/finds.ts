@@ -12,7 +12,7 @@ export const findsTable = declare({
     text("section", "section", (r) => r.find.section),
     text("taxon", "the name as written", (r) => r.find.verbatim),
     text("accepted", "the name it counts for", (r) => r.find.accepted),
-    number("position_m", "stratigraphic height, m", (r) => r.find.heightM),
+    number("position_m", "stratigraphic height where it counts, m", (r) => r.find.heightM),
     number("position_given", "the same in the section's own axis and unit", (r) =>
       given(r.section, r.find.heightM),
     ),

@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { acceptedName, settleFinds } from "../../../../src/core/study/finds.ts";
+import type { RockInterval } from "../../../../src/core/study/model.ts";
 import { find, sampleAt, searchOf, sectionWith, studyOf, taxonOf, withTaxa } from "./sections.ts";
 
 const reasonsOf = (study: ReturnType<typeof studyOf>) =>
@@ -95,6 +96,73 @@ describe("which finds count", () => {
       [1.5, "no", "no-recovery"],
       [3.5, "no", "fault-repeat"],
     ]);
+  });
+
+  describe("maps finds in a repeated passage where the settings say so", () => {
+    const at = { notes: "", origin: { file: "intervals.csv", row: 2 } };
+    const repeat = (more: Partial<RockInterval> = {}): RockInterval => ({
+      kind: "fault-repeat",
+      baseM: 3,
+      topM: 5,
+      ...at,
+      ...more,
+    });
+    const mapped = (intervals: readonly RockInterval[], ...heights: readonly number[]) =>
+      studyOf(
+        sectionWith({ intervals, occurrences: heights.map((height) => find("Orvella tenuis", height)) }),
+        {
+          settings: withTaxa({ faultRepeat: "map" }),
+        },
+      );
+
+    it("to the stretch of equal length directly below", () => {
+      const study = mapped([repeat()], 1.5, 3, 3.5, 4.5, 6);
+      expect(reasonsOf(study)).toEqual([
+        [1.5, "yes", "used"],
+        [3, "yes", "used"],
+        [1.5, "merged", "fault-repeat-mapped"],
+        [2.5, "yes", "fault-repeat-mapped"],
+        [6, "yes", "used"],
+      ]);
+      expect(settleFinds(study).taxa[0]).toMatchObject({ heightsM: [1.5, 2.5, 3, 6], lastStrictM: 6 });
+    });
+
+    it("as far down as the thicknesses say, where they agree", () => {
+      expect(reasonsOf(mapped([repeat({ thicknessLowM: 3, thicknessHighM: 3 })], 3.5))).toEqual([
+        [0.5, "yes", "fault-repeat-mapped"],
+      ]);
+    });
+
+    it.each([
+      [{ thicknessLowM: 2, thicknessHighM: 4 }],
+      [{ thicknessLowM: 2 }],
+      [{ thicknessHighM: 2 }],
+      [{ thicknessLowM: 0, thicknessHighM: 0 }],
+    ])("but sets them aside where nobody can say how far: %j", (thickness) => {
+      expect(reasonsOf(mapped([repeat(thickness)], 3.5))).toEqual([[3.5, "no", "fault-repeat"]]);
+    });
+
+    it("through a passage that is itself a repeat, and never into rock that nobody could search", () => {
+      const first = repeat({ baseM: 1, topM: 3 });
+      expect(reasonsOf(mapped([repeat(), first], 3.5))).toEqual([[-0.5, "yes", "fault-repeat-mapped"]]);
+      const covered = { ...repeat({ baseM: 1, topM: 3 }), kind: "covered" } as const;
+      expect(reasonsOf(mapped([repeat(), covered], 3.5))).toEqual([[1.5, "no", "no-recovery"]]);
+    });
+
+    it("and leaves them in no sample, for theirs lies higher", () => {
+      const [low, high] = [sampleAt("S1", 1), sampleAt("S2", 3.5)];
+      const section = sectionWith({
+        intervals: [repeat()],
+        samples: [low, high],
+        searches: [searchOf(low, "ungrouped"), searchOf(high, "ungrouped")],
+        occurrences: [
+          find("Orvella tenuis", 1, { sample: "S1" }),
+          find("Orvella tenuis", 3.5, { sample: "S2" }),
+        ],
+      });
+      const study = studyOf(section, { settings: withTaxa({ faultRepeat: "map" }) });
+      expect(settleFinds(study).taxa[0]).toMatchObject({ heightsM: [1, 1.5], samples: ["S1", undefined] });
+    });
   });
 
   it("follows synonyms and stops at a circle", () => {
