@@ -21,6 +21,8 @@ export type Limit = "upper" | "lower";
 /** The recovery-weighted coordinate u = U(h), in effective metres, and its inverse. */
 export interface Coordinate {
   readonly gaps: readonly Gap[];
+  /** Heights at which r(h) begins another straight line, from below upward; the ends of gaps where absent. */
+  readonly knotsM?: readonly number[];
   readonly toEffective: (heightM: number) => number;
   /** Undefined where u lies beyond the declared recovery and nothing continues it. */
   readonly toHeight: (effective: number, limit: Limit) => number | undefined;
@@ -81,7 +83,8 @@ export function pieceCoordinate(
     const index = lastIndexAtOrBelow(pieces.length, (i) => bases[i], effective);
     return pieces[index].baseM + inverseArea(pieces[index], effective - bases[index]);
   };
-  return { gaps, toEffective, toHeight, gapAt };
+  const knotsM = pieces.length === 0 ? [] : [bottomM, ...pieces.map((piece) => piece.topM)];
+  return { gaps, knotsM, toEffective, toHeight, gapAt };
 }
 
 /** r = 1 everywhere: u = h. */
