@@ -13,6 +13,12 @@ const marshall1997: Source = {
   title: "Confidence intervals on stratigraphic ranges with nonrandom distributions of fossil horizons",
   place: "Paleobiology 23:165-173",
 };
+const holland2003: Source = {
+  authors: "Holland, S. M.",
+  year: 2003,
+  title: "Confidence limits on fossil ranges that account for facies changes",
+  place: "Paleobiology 29:468-479",
+};
 const solow1993: Source = {
   authors: "Solow, A. R.",
   year: 1993,
@@ -36,8 +42,8 @@ const weissMarshall: Source = {
 export const coordinateBasis: Basis = {
   method: "recovery-coordinate",
   statement:
-    "Levels are compared in a coordinate that grows with recovery: 0 in covered rock, lost core and rock not searched, constant elsewhere and beyond the section's ends. Limits are mapped back to height; a limit that falls into rock without recovery is the top of that rock.",
-  assumptions: ["Recovery is constant wherever rock was searched."],
+    "Levels are compared in a coordinate that grows with recovery: 0 in covered rock, lost core and rock not searched, elsewhere as the settings say, constant by default, and beyond the section's ends as at its edges. Limits are mapped back to height; a limit that falls into rock without recovery is the top of that rock.",
+  assumptions: ["Recovery has the shape stated, the same for all taxa of a group."],
   sources: [marshall1997],
   after: true,
 };
@@ -53,6 +59,19 @@ export const uniformBasis: Basis = {
   ],
   sources: [straussSadler],
   after: false,
+};
+
+export const recoveryBasis: Basis = {
+  method: "recovery",
+  statement:
+    "The interval of uniform finds in a coordinate that grows with recovery: of recovery.csv, of search effort per metre, of facies (finds between first and last ones per metre of each facies, pooled over the group's taxa, one find's worth drawn towards the mean) or of an exponential trend fitted to such finds; beyond its ends recovery stays as at its edges.",
+  assumptions: [
+    "Finds are independent and their density at each level of the true range is in proportion to the recovery stated there.",
+    "Recovery is taken as known: the error of an estimated facies factor or trend is not in the interval.",
+    "Confidence is constant through missing rock: an interval that passes a hiatus holds all of it.",
+  ],
+  sources: [marshall1997, holland2003],
+  after: true,
 };
 
 export const windowBasis: Basis = {

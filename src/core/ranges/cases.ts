@@ -2,10 +2,15 @@ import type { MarkerHorizon, Markers } from "../markers/result.ts";
 import type { Candidate, LocalTaxon } from "../study/finds-result.ts";
 import { groupBy } from "../study/grouping.ts";
 import type { Section, Study } from "../study/model.ts";
-import { type Base, sectionBase, workingRange } from "./base.ts";
+import type { Settings } from "../study/settings.ts";
+import { type Base, sectionBase } from "./base.ts";
 import { type Coordinate, recoveryCoordinate } from "./coordinate.ts";
+import { inCoordinate } from "./in-coordinate.ts";
 import { mirroredCoordinate, mirroredHeight, mirroredHorizons, mirroredTaxon } from "./mirrored.ts";
 import type { HorizonAsked, RangeCase } from "./range-case.ts";
+import { type RecoveryPlace, type RecoverySource, weighingRecovery } from "./recovery.ts";
+import { coordinateOf, squaredPieces } from "./recovery-pieces.ts";
+import { rockBreaks } from "./rock-breaks.ts";
 import { type SampledHorizon, sampledHorizons, sampledRange } from "./sampled-horizons.ts";
 
 export interface RangesInput {
@@ -21,14 +26,32 @@ export interface TaxonCases {
 }
 
 /** A range the way up that it is looked at. */
-interface Upright extends Pick<RangeCase, "section" | "end" | "bottomM" | "topM"> {
+interface Upright extends GroupFrame, Pick<RangeCase, "section" | "end" | "bottomM" | "topM" | "breaks"> {
   readonly taxon: LocalTaxon;
-  readonly coordinate: Coordinate;
   readonly base: Base;
-  /** Levels searched for its group, from below upward. */
-  readonly searched: readonly SampledHorizon[];
   readonly horizon?: HorizonAsked;
-  readonly settings: Study["settings"];
+  readonly settings: Settings;
+}
+
+/** The shapes of recovery of one group that its ranges are looked at under. */
+interface Shapes {
+  readonly given: Coordinate;
+  readonly constant: Coordinate;
+  readonly weighing:
+    | {
+        readonly kind: "known";
+        readonly source: RecoverySource;
+        readonly weighed: Coordinate;
+        readonly squared: Coordinate;
+      }
+    | { readonly kind: "unavailable"; readonly reason: string };
+}
+
+/** What the taxa of one group in one section share. */
+interface GroupFrame {
+  readonly shapes: Shapes;
+  /** Levels at which the group was looked for, from below upward. */
+  readonly searched: readonly SampledHorizon[];
 }
 
 /** The cases of every taxon found in a section, in the order of the taxa. */
@@ -37,34 +60,53 @@ export function sectionCases(
   study: Study,
   { taxa, candidates, markers }: RangesInput,
 ): TaxonCases[] {
-  const coordinate = recoveryCoordinate(section);
-  const { base } = sectionBase(section, study.settings, markers);
+  const { settings } = study;
+  const { base } = sectionBase(section, settings, markers);
   const horizon = markers.main.bySection.get(section.name);
   const ofSection = taxa.filter((t) => t.section === section.name && t.heightsM.length > 0);
-  const marked = new Map(candidates.filter((c) => c.section === section.name).map((c) => [c.taxon, c]));
-  const searched = new Map(
-    [...groupBy(ofSection, (t) => t.group).keys()].map((group) => [
+  const reaching = new Set(
+    candidates.filter((c) => c.section === section.name && c.reachesTop).map((c) => c.taxon),
+  );
+  const frames = new Map(
+    [...groupBy(ofSection, (t) => t.group)].map(([group, ofGroup]) => [
       group,
-      sampledHorizons(section, group, coordinate),
+      groupFrame({ section, group, taxa: ofGroup }, settings),
     ]),
   );
-  return ofSection.map((taxon) =>
-    taxonCases(
-      {
-        section: section.name,
-        end: "top",
-        taxon,
-        coordinate,
-        base,
-        searched: searched.get(taxon.group) ?? [],
-        bottomM: section.bottomM,
-        topM: section.topM,
-        settings: study.settings,
-      },
-      horizon,
-      marked.get(taxon.taxon)?.reachesTop ?? false,
-    ),
-  );
+  const breaks = rockBreaks(section);
+  const { bottomM, topM } = section;
+  return ofSection.flatMap((taxon) => {
+    const frame = frames.get(taxon.group);
+    if (frame === undefined) return [];
+    const shared = { section: section.name, end: "top", bottomM, topM, breaks, base, settings } as const;
+    return [taxonCases({ ...shared, ...frame, taxon }, horizon, reaching.has(taxon.taxon))];
+  });
+}
+
+function groupFrame(place: RecoveryPlace, settings: Settings): GroupFrame {
+  const constant = recoveryCoordinate(place.section);
+  const source = settings.ranges.recovery;
+  const isWeighed = source !== "uniform" || settings.ranges.methods.includes("recovery");
+  const weighing = isWeighed
+    ? weighingRecovery(place, source)
+    : ({ kind: "unavailable", reason: "not asked for" } as const);
+  return {
+    searched: sampledHorizons(place.section, place.group, constant),
+    shapes: {
+      constant,
+      given:
+        source === "uniform" || weighing.kind === "unavailable" ? constant : weighing.recovery.coordinate,
+      weighing:
+        weighing.kind === "unavailable"
+          ? weighing
+          : {
+              kind: "known",
+              source: weighing.recovery.source,
+              weighed: weighing.recovery.coordinate,
+              squared: coordinateOf(squaredPieces(weighing.recovery.pieces)),
+            },
+    },
+  };
 }
 
 function taxonCases(upright: Upright, horizon: MarkerHorizon | undefined, reachesTop: boolean): TaxonCases {
@@ -93,29 +135,55 @@ function mirrored(upright: Upright): Upright {
     ...upright,
     end: "base",
     taxon: mirroredTaxon(upright.taxon),
-    coordinate: mirroredCoordinate(upright.coordinate),
+    shapes: mirroredShapes(upright.shapes),
     searched: mirroredHorizons(upright.searched),
+    breaks: upright.breaks
+      .map((rockBreak) => ({ ...rockBreak, heightM: mirroredHeight(rockBreak.heightM) }))
+      .toReversed(),
     base: { kind: "first" },
     bottomM: mirroredHeight(upright.topM),
     topM: mirroredHeight(upright.bottomM),
   };
 }
 
+function mirroredShapes({ given, constant, weighing }: Shapes): Shapes {
+  const mirroredConstant = mirroredCoordinate(constant);
+  return {
+    given: given === constant ? mirroredConstant : mirroredCoordinate(given),
+    constant: mirroredConstant,
+    weighing:
+      weighing.kind === "unavailable"
+        ? weighing
+        : {
+            ...weighing,
+            weighed: mirroredCoordinate(weighing.weighed),
+            squared: mirroredCoordinate(weighing.squared),
+          },
+  };
+}
+
 function caseOf(upright: Upright): Omit<RangeCase, "reachesTop" | "reachesBottom"> {
-  const { taxon, coordinate, searched, settings, base: known, ...given } = upright;
-  const range = workingRange(taxon, known, coordinate);
-  const sampled = sampledRange(taxon, range, searched);
-  const hasFinds = taxon.publishedHorizons === undefined;
+  const { taxon, shapes, searched, settings, base, ...given } = upright;
+  const under = (coordinate: Coordinate) => inCoordinate(taxon, base, coordinate);
+  const constant = under(shapes.constant);
+  const asGiven = shapes.given === shapes.constant ? constant : under(shapes.given);
+  const sampled = sampledRange(taxon, constant.range, searched);
+  const { weighing } = shapes;
   return {
     ...given,
+    ...asGiven,
     taxon,
-    coordinate,
-    range,
-    levels: hasFinds ? taxon.heightsM.map(coordinate.toEffective) : [],
+    constant,
+    weighing:
+      weighing.kind === "unavailable"
+        ? weighing
+        : { ...weighing, weighed: under(weighing.weighed), squared: under(weighing.squared) },
     ...(sampled === undefined ? {} : { sampled }),
     searchedTopM: searched.length === 0 ? given.topM : searched[searched.length - 1].heightM,
     confidence: settings.confidence,
     identification: settings.taxa.identification,
+    tail: settings.ranges.tail,
+    topFinds: settings.ranges.topFinds,
   };
 }
 

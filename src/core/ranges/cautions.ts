@@ -3,6 +3,7 @@ import type { Markers } from "../markers/result.ts";
 import type { Section, Study } from "../study/model.ts";
 import { sectionBase } from "./base.ts";
 import type { RangeCase } from "./range-case.ts";
+import { recoveryCautions } from "./recovery-cautions.ts";
 import type { RangeEnd } from "./result.ts";
 import { hasUnequalEffort } from "./sampled-horizons.ts";
 
@@ -22,6 +23,7 @@ export function rangeCautions(input: SectionRanges): Caution[] {
   return [
     ...baseCautions(input),
     ...samplingCautions(input),
+    ...recoveryCautions(input.section.name, input.cases, input.study.settings),
     ...counted(input, "range-few-horizons", ({ range }) => range.horizons <= FEW_HORIZONS),
     ...counted(input, "range-reaches-top", ({ reachesTop }) => reachesTop),
     ...counted(input, "range-published-only", ({ taxon }) => taxon.publishedHorizons !== undefined),

@@ -30,8 +30,9 @@ export interface Coordinate {
 }
 
 export interface CoordinateOptions {
-  /** Recovery below the lowest and above the highest piece. 0: nothing is known there. */
+  /** Recovery above the highest piece and, without `below`, below the lowest. 0: nothing is known there. */
   readonly beyond: number;
+  readonly below?: number;
   /** U at the base of the lowest piece. */
   readonly origin: number;
 }
@@ -52,7 +53,7 @@ const GAP_TOLERANCE = 1e-12;
  */
 export function pieceCoordinate(
   pieces: readonly RecoveryPiece[],
-  { beyond, origin }: CoordinateOptions,
+  { beyond, below = beyond, origin }: CoordinateOptions,
 ): Coordinate {
   pieces.forEach(requirePiece);
   const bases = [origin];
@@ -63,7 +64,7 @@ export function pieceCoordinate(
   const total = bases[bases.length - 1];
 
   const toEffective = (heightM: number) => {
-    if (heightM <= bottomM) return origin + beyond * (heightM - bottomM);
+    if (heightM <= bottomM) return origin + below * (heightM - bottomM);
     if (heightM >= topM) return total + beyond * (heightM - topM);
     const index = lastIndexAtOrBelow(pieces.length, (i) => pieces[i].baseM, heightM);
     return bases[index] + area(pieces[index], heightM - pieces[index].baseM);
@@ -77,7 +78,10 @@ export function pieceCoordinate(
     const gap = gapAt(effective);
     if (gap !== undefined) return limit === "upper" ? gap.topM : gap.baseM;
     if (effective < origin)
-      return continued(bottomM, effective - origin, { beyond, isEdge: isSameLevel(effective, origin) });
+      return continued(bottomM, effective - origin, {
+        beyond: below,
+        isEdge: isSameLevel(effective, origin),
+      });
     if (effective >= total)
       return continued(topM, effective - total, { beyond, isEdge: isSameLevel(effective, total) });
     const index = lastIndexAtOrBelow(pieces.length, (i) => bases[i], effective);
@@ -100,7 +104,7 @@ export const uniformCoordinate: Coordinate = {
  * continued beyond the section's ends. Below the lowest gap U(h) = h.
  */
 export function recoveryCoordinate(section: Pick<Section, "intervals">): Coordinate {
-  const gaps = mergeGaps(section.intervals.filter((i) => hasNoRecovery(i) && i.topM > i.baseM));
+  const gaps = rockWithoutRecovery(section);
   if (gaps.length === 0) return uniformCoordinate;
   const pieces: RecoveryPiece[] = [];
   gaps.forEach((gap, index) => {
@@ -109,6 +113,11 @@ export function recoveryCoordinate(section: Pick<Section, "intervals">): Coordin
     pieces.push({ ...gap, atBase: 0, atTop: 0 });
   });
   return pieceCoordinate(pieces, { beyond: 1, origin: gaps[0].baseM });
+}
+
+/** Covered rock, lost core and rock not searched, from below upward, touching stretches in one. */
+export function rockWithoutRecovery(section: Pick<Section, "intervals">): readonly Gap[] {
+  return mergeGaps(section.intervals.filter((i) => hasNoRecovery(i) && i.topM > i.baseM));
 }
 
 function requirePiece(piece: RecoveryPiece, index: number, pieces: readonly RecoveryPiece[]): void {

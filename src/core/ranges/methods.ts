@@ -1,6 +1,7 @@
 import type { Basis } from "../basis.ts";
-import { sampledBasis, uniformBasis, windowBasis } from "./basis.ts";
+import { recoveryBasis, sampledBasis, uniformBasis, windowBasis } from "./basis.ts";
 import type { RangeCase } from "./range-case.ts";
+import { recoveryEnd } from "./recovery-end.ts";
 import type { RangeEnd, RangeMethod } from "./result.ts";
 import { sampledEnd } from "./sampled-end.ts";
 import { uniformBoth } from "./uniform-both.ts";
@@ -18,6 +19,7 @@ export interface RangeEstimator {
 /** Every method that `ranges.methods` may name. */
 export const rangeMethods: Readonly<Record<RangeMethod, RangeEstimator>> = {
   uniform: { end: uniformEnd, both: uniformBoth, basis: uniformBasis },
+  recovery: { end: recoveryEnd, basis: recoveryBasis },
   window: { end: windowEnd, basis: windowBasis },
   sampled: { end: sampledEnd, basis: sampledBasis },
 };

@@ -1,22 +1,24 @@
 import type { LocalTaxon } from "../study/finds-result.ts";
-import type { WorkingRange } from "./base.ts";
-import type { Coordinate } from "./coordinate.ts";
 import { type EndWords, endWords } from "./end-words.ts";
+import type { InCoordinate } from "./in-coordinate.ts";
+import type { RecoverySource } from "./recovery.ts";
 import type { RangeEnd } from "./result.ts";
+import type { RockBreak } from "./rock-breaks.ts";
 import type { SampledRange } from "./sampled-horizons.ts";
 
 /**
  * One end of one taxon's range in one section, with all that it is estimated from. Every estimator looks for an upper
  * end: the case of a base is the range upside down, all heights negated, and its row is turned back afterwards.
  */
-export interface RangeCase {
+export interface RangeCase extends InCoordinate {
   readonly section: string;
   readonly end: "top" | "base";
-  readonly coordinate: Coordinate;
   readonly taxon: LocalTaxon;
-  /** Finds in effective metres, from below upward; empty where a range was published without its finds. */
-  readonly levels: readonly number[];
-  readonly range: WorkingRange;
+  /** The same range with recovery constant outside rock that could not be searched. */
+  readonly constant: InCoordinate;
+  readonly weighing: Weighing;
+  /** Levels of missing rock, from below upward. */
+  readonly breaks: readonly RockBreak[];
   /** The section's ends. */
   readonly bottomM: number;
   readonly topM: number;
@@ -30,7 +32,21 @@ export interface RangeCase {
   readonly horizon?: HorizonAsked;
   readonly confidence: number;
   readonly identification: "strict" | "inclusive";
+  /** beta of `two-highest` and `top-k`: near the end the density of finds falls as the distance to it to beta - 1. */
+  readonly tail: number;
+  /** k of `top-k`. */
+  readonly topFinds: number;
 }
+
+/** The same range under the recovery that method `recovery` weighs by, and under its square. */
+export type Weighing =
+  | {
+      readonly kind: "known";
+      readonly source: RecoverySource;
+      readonly weighed: InCoordinate;
+      readonly squared: InCoordinate;
+    }
+  | { readonly kind: "unavailable"; readonly reason: string };
 
 /** The main horizon where the end can be compared with it: for a base only where it lies below the first find. */
 export interface HorizonAsked {
@@ -57,10 +73,18 @@ export function commonFields(rangeCase: RangeCase) {
 }
 
 /** Where the range gives no bound, the reason; undefined where it does. */
-export function reasonWithoutBound({ range, end }: RangeCase): string | undefined {
+export function reasonWithoutBound({ range, end, contradicted }: RangeCase): string | undefined {
+  if (contradicted > 0) return `${contradicted} finds lie in rock of recovery 0: no bound`;
   if (range.exponent < 1) return `one find with unknown ${end === "top" ? "base" : "top"}: no bound`;
   if (!(range.last > range.base)) return "the range has no length: no bound";
   return undefined;
+}
+
+/** The reason where a method needs every find and the range was published without them. */
+export function reasonWithoutFinds(rangeCase: RangeCase): string | undefined {
+  return rangeCase.levels.length === 0
+    ? "published without its finds, which this method needs"
+    : reasonWithoutBound(rangeCase);
 }
 
 /** Joins the parts of a note that are there. */

@@ -48,22 +48,17 @@ function baseEnds({ top, base }: TaxonCases, methods: readonly RangeMethod[]): R
 
 /** The last find under inclusive names counts as one more horizon: the least number that it can be. */
 function inclusiveEnds(rangeCase: RangeCase): RangeEnd[] {
-  const { taxon, range, levels, coordinate, identification } = rangeCase;
+  const { taxon, constant, identification } = rangeCase;
+  const { range, levels, coordinate } = constant;
   const lastM = taxon.lastInclusiveM;
   if (identification === "inclusive" || !(lastM > range.lastM)) return [];
+  const last = coordinate.toEffective(lastM);
   const inclusive = {
-    ...range,
-    lastM,
-    last: coordinate.toEffective(lastM),
-    horizons: range.horizons + 1,
-    exponent: range.exponent + 1,
+    ...constant,
+    range: { ...range, lastM, last, horizons: range.horizons + 1, exponent: range.exponent + 1 },
+    levels: levels.length === 0 ? [] : [...levels, last],
   };
-  const row = uniformEnd({
-    ...rangeCase,
-    range: inclusive,
-    levels: levels.length === 0 ? [] : [...levels, inclusive.last],
-    identification: "inclusive",
-  });
+  const row = uniformEnd({ ...rangeCase, constant: inclusive, identification: "inclusive" });
   return [{ ...row, note: note("strict horizons and the inclusive last find", row.note) }];
 }
 

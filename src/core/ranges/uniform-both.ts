@@ -8,8 +8,8 @@ import { cutOffNote, fewNote } from "./uniform-end.ts";
  * inside with the level together. Neither end is taken as known.
  */
 export function uniformBoth(rangeCase: RangeCase): RangeEnd {
-  const { confidence, range } = rangeCase;
-  return bothEnds(rangeCase, "uniform", {
+  const { confidence, range, constant } = rangeCase;
+  return bothEnds({ ...rangeCase, ...constant }, "uniform", {
     factor: range.horizons < 2 ? undefined : twoEndedFactor(confidence, range.horizons),
     exponent: range.horizons - 1,
   });

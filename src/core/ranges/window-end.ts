@@ -29,13 +29,14 @@ export function windowEnd(rangeCase: RangeCase): RangeEnd {
   return { ...fields, ...boundFields(rangeCase, uniformBound(range, confidence), [asked.words]) };
 }
 
-interface LevelAsked {
+export interface LevelAsked {
   readonly levelM: number;
   readonly isHorizon: boolean;
   readonly words: string;
 }
 
-function levelAsked(rangeCase: RangeCase): LevelAsked {
+/** Where persistence is asked about: H where it lies above the last find and was searched, else the highest level searched. */
+export function levelAsked(rangeCase: RangeCase): LevelAsked {
   const { range, horizon, searchedTopM } = rangeCase;
   const { highest, above } = wordsOf(rangeCase);
   const isAbove = horizon !== undefined && horizon.positionM > range.lastM;

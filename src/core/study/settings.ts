@@ -126,7 +126,7 @@ export const settingsSchema = v.strictObject({
       methods: says(
         v.optional(
           v.pipe(
-            v.array(v.picklist(["uniform", "window", "sampled"])),
+            v.array(v.picklist(["uniform", "recovery", "window", "sampled"])),
             v.nonEmpty(),
             v.check((methods) => new Set(methods).size === methods.length, "each method once"),
           ),
@@ -135,8 +135,8 @@ export const settingsSchema = v.strictObject({
         "range-end methods, the leading one first",
       ),
       recovery: says(
-        v.optional(v.picklist(["uniform"]), "uniform"),
-        "shape of recovery where rock was searched",
+        v.optional(v.picklist(["uniform", "effort", "facies", "table", "trend"]), "uniform"),
+        "where the shape of recovery comes from: constant, search effort, facies, recovery.csv, or a fitted trend",
       ),
       tail: says(
         v.optional(v.pipe(v.number(), v.gtValue(0)), 1),

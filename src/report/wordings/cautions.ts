@@ -16,6 +16,10 @@ interface Told {
 
 const taxa = ({ n }: Told) => strong(plural(n("taxa"), "taxon", "taxa"));
 
+const recoverySource = (source: string) =>
+  ({ table: "recovery.csv", effort: "search effort", facies: "facies", trend: "a fitted trend" })[source] ??
+  source;
+
 /** The one table of wordings for everything that weakens a result. */
 const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "zero-set-aside": ({ subject, n }) =>
@@ -68,6 +72,12 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`The interval of ${taxa(told)} ends inside rock that could not be searched; it is drawn to the top of it.`,
   "range-bound-open": (told) =>
     say`The interval of ${taxa(told)} is open by the method of sampled horizons: no barren horizon above closes it.`,
+  "range-recovery-unavailable": ({ subject, text }) =>
+    say`Recovery of ${subject} cannot be had from ${recoverySource(text("source"))} (${text("reason")}): it is taken as constant.`,
+  "range-recovery-contradicted": (told) =>
+    say`${plural(told.n("finds"), "find")} of ${taxa(told)} (${told.subject}) lie where ${recoverySource(told.text("source"))} says that nothing could be found.`,
+  "range-recovery-misfit": ({ subject, text, n }) =>
+    say`Finds of ${subject} do not fit the recovery taken from ${recoverySource(text("source"))} (${pValue(n("p"))}, ${n("finds")} finds): intervals rest on a shape that the finds contradict.`,
   "timing-uninformative-taxa": (told) =>
     say`${taxa(told)} with a single informative find left out of the tests; their finds still bound the common level from below.`,
   "timing-ties": (told) =>

@@ -1,0 +1,53 @@
+import type { Caution } from "../basis.ts";
+import { groupBy } from "../study/grouping.ts";
+import type { Settings } from "../study/settings.ts";
+import type { RangeCase } from "./range-case.ts";
+import { recoveryFit } from "./recovery-fit.ts";
+
+/** A pooled fit of finds to recovery below this is told. */
+const MISFIT = 0.05;
+
+/** Where recovery is not to be had from its source, contradicted by finds inside rock of recovery 0, or fits them badly. */
+export function recoveryCautions(
+  section: string,
+  cases: readonly RangeCase[],
+  { ranges }: Pick<Settings, "ranges">,
+): Caution[] {
+  return [...groupBy(cases, ({ taxon }) => taxon.group)].flatMap(([group, ofGroup]): Caution[] => {
+    const [{ weighing }] = ofGroup;
+    if (weighing.kind === "unavailable") {
+      if (ranges.recovery === "uniform") return [];
+      const numbers = { source: ranges.recovery, reason: weighing.reason };
+      return [{ code: "range-recovery-unavailable", section, subject: group, numbers }];
+    }
+    const { source } = weighing;
+    const weighed = ofGroup.flatMap((c) => (c.weighing.kind === "known" ? [c.weighing.weighed] : []));
+    return [
+      ...contradicted(weighed, { section, group, source }),
+      ...(ranges.recovery === "uniform" ? [] : misfit(weighed, { section, group, source })),
+    ];
+  });
+}
+
+interface Where {
+  readonly section: string;
+  readonly group: string;
+  readonly source: string;
+}
+
+type Weighed = readonly Pick<RangeCase, "levels" | "contradicted">[];
+
+function contradicted(weighed: Weighed, { section, group, source }: Where): Caution[] {
+  const taxa = weighed.filter((c) => c.contradicted > 0);
+  if (taxa.length === 0) return [];
+  const finds = taxa.reduce((sum, c) => sum + c.contradicted, 0);
+  const numbers = { source, finds, taxa: taxa.length };
+  return [{ code: "range-recovery-contradicted", section, subject: group, numbers }];
+}
+
+function misfit(weighed: Weighed, { section, group, source }: Where): Caution[] {
+  const fit = recoveryFit(weighed.filter((c) => c.contradicted === 0).map(({ levels }) => levels));
+  if (fit === undefined || fit.p >= MISFIT) return [];
+  const numbers = { source, finds: fit.finds, p: fit.p };
+  return [{ code: "range-recovery-misfit", section, subject: group, numbers }];
+}
