@@ -1,6 +1,8 @@
 #!/usr/bin/env node
 import { Command, CommanderError } from "commander";
 import { VERSION } from "../core/version.ts";
+import { failedCall, wantsDocument } from "./call-document.ts";
+import { failureOf } from "./failure.ts";
 import { openScreen, surviveClosedOutput, tellFailure } from "./screen.ts";
 import { verbs } from "./verbs/index.ts";
 import type { Verb, VerbOptions } from "./verbs/verb.ts";
@@ -44,6 +46,12 @@ surviveClosedOutput();
 try {
   await program.parseAsync();
 } catch (error) {
-  if (error instanceof CommanderError) process.exitCode = error.exitCode === 0 ? 0 : 2;
+  const isCommander = error instanceof CommanderError;
+  if (isCommander) process.exitCode = error.exitCode === 0 ? 0 : 2;
   else tellFailure(error);
+  const words = process.argv.slice(2);
+  if (process.exitCode !== 0 && wantsDocument(words)) {
+    const failure = isCommander ? { message: error.message, exitCode: 2 as const } : failureOf(error);
+    process.stdout.write(failedCall(words, failure));
+  }
 }

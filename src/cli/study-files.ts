@@ -1,8 +1,8 @@
 import { readdir, readFile, stat } from "node:fs/promises";
 import { basename, join, posix, resolve } from "node:path";
-import { tables } from "../core/study/tables/index.ts";
 import { readDataPackage } from "../core/tables/data-package.ts";
 import { CallError } from "./call-error.ts";
+import { isStudyTable, withoutEnding } from "./file-kinds.ts";
 
 export interface StudyOnDisk {
   readonly name: string;
@@ -51,7 +51,7 @@ async function readSingleFile(path: string, name: string): Promise<StudyOnDisk> 
     throw new CallError(
       `lastbed: expected a folder of tables, or one .csv, .tsv, .txt, .xlsx or .zip file, got ${path}`,
     );
-  return { name: name.replace(/\.[a-z]+$/i, ""), files: new Map([[name, await readWhole(path)]]) };
+  return { name: withoutEnding(name), files: new Map([[name, await readWhole(path)]]) };
 }
 
 async function readWhole(path: string): Promise<Uint8Array> {
@@ -83,10 +83,7 @@ function studyNames(present: readonly string[]): readonly string[] {
 }
 
 /** A table kept in another form, which reading must name rather than pass over. */
-function isTableElsewise(file: string): boolean {
-  const [, stem] = /^(.+)\.(?:txt|xlsx?|ods)$/i.exec(file) ?? [];
-  return stem !== undefined && tables.some(({ name }) => name === stem.toLowerCase().replace(/[\s_]+/g, "-"));
-}
+const isTableElsewise = (file: string): boolean => /\.(?:txt|xlsx?|ods)$/i.test(file) && isStudyTable(file);
 
 /** Files that a data package names and that were not read: those inside the folder. */
 function describedElsewhere(files: ReadonlyMap<string, Uint8Array>): readonly string[] {

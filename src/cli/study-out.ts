@@ -1,24 +1,28 @@
 import { mkdir, readdir, readFile, rm, stat, writeFile } from "node:fs/promises";
 import { dirname, join, relative, resolve, sep } from "node:path";
 import type { Analysis } from "../core/analysis-result.ts";
-import { tables } from "../core/study/tables/index.ts";
 import { writeCsv } from "../core/tables/write-csv.ts";
 import { CRATE_FILE, filesOfCrate } from "../report/ro-crate.ts";
 import { CallError } from "./call-error.ts";
+import { isStudyTable, withoutEnding } from "./file-kinds.ts";
 
-/** Refuses what is no folder, and one whose top level holds study tables: a run never writes among what it reads. */
-export async function refuseOut(folder: string): Promise<void> {
+/** Refuses what is no folder, and one whose top level holds study tables or one of `studies`: a run never writes among what it reads. */
+export async function refuseOut(folder: string, studies: readonly string[]): Promise<void> {
   if (folder.trim() === "") throw new CallError("lastbed: expected a folder after --out, got a blank");
   const found = await stat(folder).catch(() => undefined);
   if (found !== undefined && !found.isDirectory())
     throw new CallError(`lastbed: expected --out to be a folder, got ${folder}, which is a file`);
   const entries: readonly string[] = found === undefined ? [] : await readdir(folder);
-  const table = entries.find((entry) => tables.some(({ name }) => entry.toLowerCase() === `${name}.csv`));
+  const table = entries.find(isStudyTable) ?? studyIn(folder, studies);
   if (table !== undefined)
     throw new CallError(
       `lastbed: expected an --out folder without study tables, got ${folder}, which holds ${table}; name another folder`,
     );
 }
+
+/** The study that lies in the folder itself: a workbook or archive may have any name. */
+const studyIn = (folder: string, studies: readonly string[]): string | undefined =>
+  studies.find((study) => resolve(dirname(study)) === resolve(folder) && withoutEnding(study) !== study);
 
 /** Writes a run's files in place of those of an earlier run; anything else in the folder is left alone, never written over. */
 export async function writeRun(

@@ -7,6 +7,7 @@ import { nodeRunner } from "../../run/node.ts";
 import type { Runner } from "../../run/runner.ts";
 import { CallError } from "../call-error.ts";
 import { digest } from "../digest.ts";
+import { withoutEnding } from "../file-kinds.ts";
 import { countOption, jobOf } from "../job.ts";
 import { plateFaces } from "../plate-faces.ts";
 import { hasErrors, problemCount, problemLines } from "../problem-lines.ts";
@@ -24,8 +25,8 @@ export async function run(paths: readonly string[], options: VerbOptions, screen
     throw new CallError(
       `lastbed: expected --figures svg, got ${options.figures}; other formats are not made yet`,
     );
-  await refuseOut(out);
   const folders = outFolders(paths, out);
+  for (const folder of new Set([out, ...folders])) await refuseOut(folder, paths);
   const runner = nodeRunner(countOption(options.threads, "threads"));
   try {
     const runs: StudyRun[] = [];
@@ -80,7 +81,7 @@ async function runOne({ path, out, options, runner, screen }: OneRun): Promise<S
 /** One study goes to the folder itself; several get a folder each, named after them. */
 function outFolders(paths: readonly string[], out: string): readonly string[] {
   if (paths.length === 1) return [out];
-  const folders = paths.map((path) => join(out, basename(resolve(path)).replace(/\.csv$/i, "")));
+  const folders = paths.map((path) => join(out, withoutEnding(basename(resolve(path)))));
   const twice = folders.find((folder, i) => folders.indexOf(folder) !== i);
   if (twice !== undefined)
     throw new CallError(`lastbed: expected studies of different names, got two for ${twice}; run them apart`);

@@ -47,6 +47,11 @@ const wordings = {
     ),
   "unlisted-section": (p) =>
     error("a section of sections.csv", `Add the section to sections.csv or correct the name.${nearest(p)}`),
+  "claim-elsewhere": (p) =>
+    caution(
+      "a section of the study, joint for all of them, or a blank",
+      `The claim is kept and compared with nothing: correct the section's name.${nearest(p)}`,
+    ),
   "reserved-section": () =>
     error(
       "a section of another name",
@@ -199,6 +204,11 @@ const wordings = {
     error(
       `one impact horizon, or the main one named in boundary.horizon`,
       `Set boundary.horizon to one of ${p.detail}; if two names mean one horizon, declare it in boundary.same. No main horizon is used until then.`,
+    ),
+  "main-horizon-unknown": (p) =>
+    error(
+      p.detail ?? "a horizon of horizons.csv or boundary.same, or a found one such as iridium-1",
+      `Correct the name or add the horizon: no section has a main horizon until then.${nearest(p)}`,
     ),
   "set-taxon-unknown": (p) =>
     caution(

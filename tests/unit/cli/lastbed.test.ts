@@ -54,14 +54,77 @@ describe("a call that is wrong", () => {
     expect(stderr).not.toMatch(/\n\s+at /);
   });
 
+  it.each([
+    [["check", "no/such/folder", "--json"], "check", "expected a study folder or table", "does not exist"],
+    [["run", example, "--json"], "run", "", "--out"],
+    [["--json", "dance"], "", "", "unknown"],
+    [["check", example, "--set", "confidenc=0.9", "--json"], "check", "known setting", "confidenc"],
+  ])("with --json tells the same in its one document: %j", (words, command, expected, found) => {
+    const { status, stdout } = lastbed(...words);
+    expect(status).toBe(2);
+    const { problems, ...document } = JSON.parse(stdout);
+    expect(document).toEqual({ command, version: expect.any(String), summary: null, files: [] });
+    expect(problems).toHaveLength(1);
+    expect(problems[0]).toMatchObject({ severity: "error", code: "call", file: "command line" });
+    expect(`expected ${problems[0].expected}`).toContain(expected);
+    expect(problems[0].found).toContain(found);
+    expect(problems[0].mend).not.toBe("");
+  });
+
+  it("names a main horizon that the study does not hold, and does all it can", () => {
+    const { status, stdout } = lastbed(
+      "check",
+      smallStudy(),
+      "--set",
+      "boundary.horizon=impact-layr",
+      "--json",
+    );
+    expect(status).toBe(1);
+    expect(JSON.parse(stdout).problems).toContainEqual(
+      expect.objectContaining({
+        severity: "error",
+        code: "main-horizon-unknown",
+        column: "boundary.horizon",
+        found: "impact-layr",
+        mend: expect.stringContaining("Did you mean impact-layer?"),
+      }),
+    );
+  });
+
   it("help is not an error", () => {
     expect(lastbed("--help").status).toBe(0);
     expect(lastbed("run", "--help").stdout).toContain("--threads");
   });
 });
 
+describe("an --out folder that holds what a study is read from", () => {
+  const table = "section,taxon,height (m)\nOrskel Ledge,Orvella tenuis,1\n";
+  it.each(["occurrences.csv", "Occurrences.TSV", "published ranges.xlsx", "taxa.zip"])(
+    "%s is refused",
+    (name) => {
+      const folder = freshFolder();
+      writeFileSync(join(folder, name), "x");
+      const { status, stderr } = lastbed("run", smallStudy(), "--out", folder);
+      expect(status).toBe(2);
+      expect(stderr).toContain(`which holds ${name}`);
+      expect(readdirSync(folder)).toEqual([name]);
+    },
+  );
+
+  it("is refused where the study itself lies there under any name, or is one of several", () => {
+    const folder = freshFolder();
+    writeFileSync(join(folder, "my finds.tsv"), table.replaceAll(",", "\t"));
+    expect(lastbed("run", join(folder, "my finds.tsv"), "--out", folder).status).toBe(2);
+    const parent = freshFolder();
+    for (const name of ["a", "b"]) cpSync(smallStudy(), join(parent, name), { recursive: true });
+    const { status, stderr } = lastbed("run", join(parent, "a"), join(parent, "b"), "--out", parent);
+    expect([status, stderr]).toEqual([2, expect.stringContaining("which holds")]);
+    expect(readdirSync(join(parent, "a")).toSorted()).toEqual(["horizons.csv", "occurrences.csv"]);
+  });
+});
+
 describe("new and check", () => {
-  it("a new study holds every table with a worked row, and checks without errors", () => {
+  it("a new study holds every table with a worked row, and checks without a remark", () => {
     const folder = join(freshFolder(), "mine");
     expect(lastbed("new", folder).status).toBe(0);
     expect(readdirSync(folder)).toContain("searches.csv");
@@ -70,7 +133,7 @@ describe("new and check", () => {
     const { command, version, problems, files } = JSON.parse(stdout);
     expect({ command, files }).toEqual({ command: "check", files: [] });
     expect(version).toMatch(/^\d+\.\d+\.\d+$/);
-    expect(problems.filter((p: { severity: string }) => p.severity === "error")).toEqual([]);
+    expect(problems).toEqual([]);
     expect(lastbed("new", folder).status).toBe(2);
   });
 

@@ -54,7 +54,7 @@ export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "tax
     return section;
   });
   checkStudy({ sections, taxa }, assembly);
-  return { sections, taxa, choices: readChoices(assembly), claims: readClaims(assembly) };
+  return { sections, taxa, choices: readChoices(assembly), claims: readClaims(frames, assembly) };
 }
 
 type Contents = Pick<

@@ -11,6 +11,9 @@ import { checkRock } from "./check-rock.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
 
+/** Names listed in a sentence. */
+const mostListed = 12;
+
 type DeclaredEnds = SectionFrame["declared"];
 
 /** Cautions on what is read well but gives little, or lies where it should not. */
@@ -24,6 +27,7 @@ export function checkSection(section: Section, declared: DeclaredEnds, assembly:
 /** Cautions and errors that need every section. */
 export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: Assembly): void {
   checkImpacts(study.sections, assembly);
+  checkMainHorizon(study.sections, assembly);
   checkSets(study, assembly);
   checkSynonyms(study.taxa, assembly);
   checkNames(study, assembly);
@@ -82,6 +86,24 @@ function checkImpacts(sections: readonly Section[], { settings, problems }: Asse
   if (second === undefined) return;
   const detail = names.map((name) => excerpt(name)).join(", ");
   problems.add("impact-ambiguous", { ...second.origin, column: "horizon", found: names.join(", "), detail });
+}
+
+/** A main horizon that is neither placed nor declared, nor could be found in what was measured (`<analyte>-<number>`). */
+function checkMainHorizon(sections: readonly Section[], { settings, problems }: Assembly): void {
+  const { horizon, same } = settings.boundary;
+  if (horizon === undefined) return;
+  const known = new Set([...sections.flatMap(({ horizons }) => horizons), ...same].map(({ name }) => name));
+  const analyte = /^(.+)-[1-9]\d*$/.exec(horizon)?.[1];
+  const isMeasured = sections.some(({ measurements }) => measurements.some((m) => m.analyte === analyte));
+  if (known.has(horizon) || isMeasured) return;
+  const listed = [...known].slice(0, mostListed).map((name) => excerpt(name));
+  problems.add("main-horizon-unknown", {
+    file: "settings.json",
+    column: "boundary.horizon",
+    found: horizon,
+    detail: known.size === 0 ? undefined : `one of the horizons of the study (${listed.join(", ")})`,
+    nearest: suggestName(horizon, known),
+  });
 }
 
 /** Declared sets that name a taxon which no table holds. */

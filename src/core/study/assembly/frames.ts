@@ -8,7 +8,8 @@ import { meantNames } from "./meant-name.ts";
 import { readLegs } from "./read-legs.ts";
 import { rowsOf } from "./rows.ts";
 
-const reservedSection = "joint";
+/** The name that the results give to all sections together. */
+export const reservedSection = "joint";
 
 interface Scale {
   readonly axis: Axis;

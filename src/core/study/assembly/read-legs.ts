@@ -40,7 +40,8 @@ function tellLostRows(
       .flatMap(({ severity, file, row }) => (severity === "error" && file === sheet.file ? (row ?? []) : [])),
   );
   for (const row of lost) {
-    const cells = sheet.rows[sheet.rowNumbers.indexOf(row)] ?? [];
+    const index = sheet.rowNumbers.indexOf(row);
+    const cells = index < 0 ? [] : (sheet.rows.at(index) ?? []);
     const at = (column: string) => (cells[sheet.columns.indexOf(column)] ?? "").trim().normalize("NFC");
     for (const [section, ofSection] of bySection)
       for (const [leg, rows] of ofSection) {

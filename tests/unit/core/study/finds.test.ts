@@ -6,6 +6,19 @@ import { find, sampleAt, searchOf, sectionWith, studyOf, taxonOf, withTaxa } fro
 const reasonsOf = (study: ReturnType<typeof studyOf>) =>
   settleFinds(study).finds.map((f) => [f.heightM, f.used, f.reason]);
 
+const intervalAt = { notes: "", origin: { file: "intervals.csv", row: 2 } };
+const repeat = (more: Partial<RockInterval> = {}): RockInterval => ({
+  kind: "fault-repeat",
+  baseM: 3,
+  topM: 5,
+  ...intervalAt,
+  ...more,
+});
+const mapped = (intervals: readonly RockInterval[], ...heights: readonly number[]) =>
+  studyOf(sectionWith({ intervals, occurrences: heights.map((height) => find("Orvella tenuis", height)) }), {
+    settings: withTaxa({ faultRepeat: "map" }),
+  });
+
 describe("which finds count", () => {
   it("counts horizons, not specimens: finds of one sample are one horizon", () => {
     const s1 = sampleAt("S1", 1);
@@ -99,22 +112,6 @@ describe("which finds count", () => {
   });
 
   describe("maps finds in a repeated passage where the settings say so", () => {
-    const at = { notes: "", origin: { file: "intervals.csv", row: 2 } };
-    const repeat = (more: Partial<RockInterval> = {}): RockInterval => ({
-      kind: "fault-repeat",
-      baseM: 3,
-      topM: 5,
-      ...at,
-      ...more,
-    });
-    const mapped = (intervals: readonly RockInterval[], ...heights: readonly number[]) =>
-      studyOf(
-        sectionWith({ intervals, occurrences: heights.map((height) => find("Orvella tenuis", height)) }),
-        {
-          settings: withTaxa({ faultRepeat: "map" }),
-        },
-      );
-
     it("to the stretch of equal length directly below", () => {
       const study = mapped([repeat()], 1.5, 3, 3.5, 4.5, 6);
       expect(reasonsOf(study)).toEqual([

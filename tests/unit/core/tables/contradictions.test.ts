@@ -198,6 +198,69 @@ describe("a covered interval outside the section", () => {
   });
 });
 
+describe("a main horizon that nobody placed", () => {
+  const named = (horizon: string, more: Record<string, string> = {}, same: readonly unknown[] = []) =>
+    problemsOf(
+      studyFrom(
+        {
+          "sections.csv": sections,
+          "horizons.csv": horizonsOf("Orskel Ledge,Veyra layer,impact,9"),
+          ...more,
+        },
+        { boundary: { horizon, same } },
+      ),
+      "main-horizon-unknown",
+    );
+  const iridium = {
+    "measurements.csv": lines("section,analyte,value,unit,position", "Orskel Ledge,Ir,1,ng/g,2"),
+  };
+
+  it("is an error that names the nearest", () => {
+    expect(named("Veyra leyer")).toMatchObject([
+      {
+        severity: "error",
+        file: "settings.json",
+        column: "boundary.horizon",
+        found: "Veyra leyer",
+        mend: expect.stringContaining("Did you mean Veyra layer?"),
+      },
+    ]);
+    expect(named("nickel-1", iridium)).toHaveLength(1);
+  });
+
+  it("is none where it is placed, declared, or may be found in what was measured", () => {
+    expect(named("Veyra layer")).toEqual([]);
+    expect(named("iridium-2", iridium)).toEqual([]);
+    expect(named("one", iridium, [{ name: "one", horizons: [["Orskel Ledge", "iridium-1"]] }])).toEqual([]);
+  });
+});
+
+describe("a claim on a section that the study does not hold", () => {
+  it("is told and kept; one on all sections or on none in particular is not told", () => {
+    const study = studyFrom({
+      "sections.csv": sections,
+      "occurrences.csv": finds("Orskel Ledge,Velor a,1"),
+      "claims.csv": lines(
+        "question,value,section",
+        "one-level,0.2,Orskel ledge",
+        "one-level,0.2,joint",
+        "one-level,0.2,",
+        "one-level,0.2,Orskel Ledge",
+      ),
+    });
+    expect(problemsOf(study, "claim-elsewhere")).toMatchObject([
+      {
+        severity: "caution",
+        row: 2,
+        column: "section",
+        found: "Orskel ledge",
+        fix: { file: "claims.csv", row: 2, column: "section", now: "Orskel Ledge" },
+      },
+    ]);
+    expect(study.claims).toHaveLength(4);
+  });
+});
+
 describe("settings that no analysis can use", () => {
   it.each([
     [{ ranges: { methods: [] } }, "ranges.methods"],
