@@ -1,43 +1,5 @@
-import type { Basis, Source } from "../basis.ts";
-
-const straussSadler: Source = {
-  authors: "Strauss, D. & Sadler, P. M.",
-  year: 1989,
-  title: "Classical confidence intervals and Bayesian probability estimates for ends of local taxon ranges",
-  place: "Mathematical Geology 21:411-427",
-  doi: "10.1007/BF00897326",
-};
-const marshall1997: Source = {
-  authors: "Marshall, C. R.",
-  year: 1997,
-  title: "Confidence intervals on stratigraphic ranges with nonrandom distributions of fossil horizons",
-  place: "Paleobiology 23:165-173",
-};
-const holland2003: Source = {
-  authors: "Holland, S. M.",
-  year: 2003,
-  title: "Confidence limits on fossil ranges that account for facies changes",
-  place: "Paleobiology 29:468-479",
-};
-const solow1993: Source = {
-  authors: "Solow, A. R.",
-  year: 1993,
-  title: "Inferring extinction from sighting data",
-  place: "Ecology 74:962-964",
-};
-const solow2005: Source = {
-  authors: "Solow, A. R.",
-  year: 2005,
-  title: "Inferring extinction from a sighting record",
-  place: "Mathematical Biosciences 195:47-55",
-};
-const weissMarshall: Source = {
-  authors: "Weiss, R. E. & Marshall, C. R.",
-  year: 1999,
-  title:
-    "The uncertainty in the true end point of a fossil's stratigraphic range when stratigraphic sections are sampled discretely",
-  place: "Mathematical Geology 31:435-453",
-};
+import type { Basis } from "../basis.ts";
+import { holland2003, marshall1997, solow1993, solow2005, straussSadler, weissMarshall } from "./sources.ts";
 
 export const coordinateBasis: Basis = {
   method: "recovery-coordinate",

@@ -126,7 +126,23 @@ export const settingsSchema = v.strictObject({
       methods: says(
         v.optional(
           v.pipe(
-            v.array(v.picklist(["uniform", "recovery", "window", "sampled"])),
+            v.array(
+              v.picklist([
+                "uniform",
+                "recovery",
+                "window",
+                "sampled",
+                "uniform-bayes",
+                "window-trend",
+                "gap-rank",
+                "gap-quantile",
+                "weibull-tail",
+                "declining",
+                "sighting-rate",
+                "two-highest",
+                "top-k",
+              ]),
+            ),
             v.nonEmpty(),
             v.check((methods) => new Set(methods).size === methods.length, "each method once"),
           ),
