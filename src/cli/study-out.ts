@@ -1,5 +1,5 @@
 import { mkdir, readdir, readFile, rm, stat, writeFile } from "node:fs/promises";
-import { dirname, join, relative, resolve, sep } from "node:path";
+import { basename, dirname, join, relative, resolve, sep } from "node:path";
 import type { Analysis } from "../core/analysis-result.ts";
 import { writeCsv } from "../core/tables/write-csv.ts";
 import { CRATE_FILE, filesOfCrate } from "../report/ro-crate.ts";
@@ -22,7 +22,9 @@ export async function refuseOut(folder: string, studies: readonly string[]): Pro
 
 /** The study that lies in the folder itself: a workbook or archive may have any name. */
 const studyIn = (folder: string, studies: readonly string[]): string | undefined =>
-  studies.find((study) => resolve(dirname(study)) === resolve(folder) && withoutEnding(study) !== study);
+  studies
+    .filter((study) => resolve(dirname(study)) === resolve(folder) && withoutEnding(study) !== study)
+    .map((study) => basename(study))[0];
 
 /** Writes a run's files in place of those of an earlier run; anything else in the folder is left alone, never written over. */
 export async function writeRun(
