@@ -1,0 +1,172 @@
+import { exp, log, log1p } from "../../numeric/elementary.ts";
+import { gaussLegendre } from "../../numeric/gauss-legendre.ts";
+import { type EndGrid, endGrid, floorOf, logsAt } from "./end-grid.ts";
+import type { EndLikelihood } from "./end-likelihood.ts";
+import { belowTop, type EndWindow } from "./end-window.ts";
+import { type LevelPosterior, posteriorBuilder } from "./level-posterior.ts";
+import type { EvidenceByTop } from "./single-level.ts";
+import { type TwoShares, twoShares } from "./two-shares.ts";
+import type { Weighted } from "./weighted.ts";
+
+export interface TwoPulses {
+  /** Exactly two pulses, memberships by flat Dirichlet shares. */
+  readonly logEvidence: EvidenceByTop;
+  /** Exactly two pulses, every allocation of the taxa equally likely. */
+  readonly logEvidenceEqual: EvidenceByTop;
+  /** Under the window's own top and Dirichlet shares; absent where nothing inside it fits. */
+  readonly posterior?: PulsesPosterior;
+}
+
+export interface PulsesPosterior {
+  /** Heights of the pulses, from the lowest. */
+  readonly levels: readonly LevelPosterior[];
+  /** Highest minus lowest pulse: values and their masses. */
+  readonly separation: Weighted;
+  /** Chance that each taxon ended in each pulse: `membership[pulse][taxon]`. */
+  readonly membership: readonly Float64Array[];
+}
+
+/** Pairs whose bound is under this share of the sum so far are left out. */
+const NEGLIGIBLE = 1e-14;
+/** Membership is not refined by pairs with less than this share of the mass so far. */
+const LITTLE = 1e-10;
+
+/**
+ * Exactly two pulses, every one holding a taxon, at heights independent and flat over the window. Memberships have
+ * shares (omega, 1 - omega), omega flat on (0, 1), and only allocations that leave no pulse empty count:
+ * Z = (k + 1) / (k - 1) x integral of pi pi E_omega [sum over such allocations]. The expectation is a polynomial of
+ * degree k in omega, integrated exactly; pairs in one panel run over the triangle below the upper pulse.
+ *
+ * `equal`: the mean over the 2^k - 2 allocations that leave no pulse empty.
+ * Undefined (evidence 0) with fewer than two taxa.
+ */
+export function twoPulses(taxa: readonly EndLikelihood[], window: EndWindow): TwoPulses {
+  const none = window.topsM.map(() => Number.NEGATIVE_INFINITY);
+  const floorM = Math.max(window.lowM, floorOf(taxa));
+  const highM = Math.max(...window.topsM);
+  const lowM = Math.max(window.lowM, Math.min(...taxa.map((taxon) => taxon.fromM)));
+  if (taxa.length < 2 || !(floorM < highM)) return { logEvidence: none, logEvidenceEqual: none };
+  const grid = endGrid(taxa, { lowM, highM, breaksM: window.topsM });
+  return sumOfPairs(taxa, window, pairsOf(taxa, grid, floorM));
+}
+
+/** Two levels, the lower one in or below the panel of the upper one. */
+interface Pair {
+  readonly upper: number;
+  readonly lowerPanel: number;
+  readonly lowerM: number;
+  readonly logWeight: number;
+  readonly lowerLogs: Float64Array;
+}
+
+interface Pairs {
+  readonly grid: EndGrid;
+  /** Calls back for every pair, the lower level below the upper one. */
+  readonly forEach: (use: (pair: Pair) => void) => void;
+}
+
+function pairsOf(taxa: readonly EndLikelihood[], grid: EndGrid, floorM: number): Pairs {
+  const k = taxa.length;
+  const { heights, weights, panels, panelOf, logs } = grid;
+  const rowOf = (node: number) => logs.subarray(node * k, node * k + k);
+  const forEach = (use: (pair: Pair) => void) => {
+    for (let upper = 0; upper < heights.length; upper++) {
+      const panel = panels[panelOf[upper]];
+      if (panel.lowM < floorM) continue;
+      for (let lower = 0; lower < panel.first; lower++)
+        use({
+          upper,
+          lowerPanel: panelOf[lower],
+          lowerM: heights[lower],
+          logWeight: log(weights[lower] * weights[upper]),
+          lowerLogs: rowOf(lower),
+        });
+      for (const inner of innerNodes(panel.lowM, heights[upper], panel.count))
+        use({
+          upper,
+          lowerPanel: panelOf[upper],
+          lowerM: inner.heightM,
+          logWeight: log(inner.weight * weights[upper]),
+          lowerLogs: logsAt(taxa, inner.heightM),
+        });
+    }
+  };
+  return { grid, forEach };
+}
+
+function innerNodes(lowM: number, highM: number, count: number) {
+  const { nodes, weights } = gaussLegendre(count);
+  const half = 0.5 * (highM - lowM);
+  return Array.from(nodes, (z, i) => ({ heightM: lowM + half * (1 + z), weight: half * weights[i] }));
+}
+
+function sumOfPairs(taxa: readonly EndLikelihood[], window: EndWindow, pairs: Pairs): TwoPulses {
+  const k = taxa.length;
+  const { grid } = pairs;
+  const shares = twoShares(k);
+  const upperLogs = (upper: number) => grid.logs.subarray(upper * k, upper * k + k);
+  let largest = Number.NEGATIVE_INFINITY;
+  pairs.forEach(({ upper, lowerLogs }) => {
+    largest = Math.max(largest, boundOf(lowerLogs, upperLogs(upper)));
+  });
+  const sums = window.topsM.map(() => ({ dirichlet: 0, equal: 0 }));
+  const summary = summaryOf(grid, k);
+  pairs.forEach((pair) => {
+    const bound = boundOf(pair.lowerLogs, upperLogs(pair.upper));
+    const scale = exp(bound - largest + pair.logWeight);
+    if (scale < NEGLIGIBLE * Math.min(sums[0].dirichlet, sums[0].equal)) return;
+    const { dirichlet, equal } = shares.weigh(pair.lowerLogs, upperLogs(pair.upper));
+    window.topsM.forEach((topM, t) => {
+      if (!belowTop(grid, pair.upper, topM)) return;
+      sums[t].dirichlet += scale * dirichlet;
+      sums[t].equal += scale * equal;
+    });
+    if (belowTop(grid, pair.upper, window.topsM[0])) summary.add(pair, scale, shares);
+  });
+  const width = window.topsM.map((topM) => 2 * log(topM - window.lowM));
+  return {
+    logEvidence: sums.map(
+      ({ dirichlet }, t) => largest + log((2 * (k + 1) * dirichlet) / (k - 1)) - width[t],
+    ),
+    logEvidenceEqual: sums.map(
+      ({ equal }, t) => largest + log(2 * equal) - log1p(-(2 ** (1 - k))) - width[t],
+    ),
+    ...(sums[0].dirichlet > 0 ? { posterior: summary.build() } : {}),
+  };
+}
+
+/** ln of an upper bound of what a pair can add: the better of the two levels for every taxon. */
+function boundOf(lower: Float64Array, upper: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < lower.length; i++) sum += Math.max(lower[i], upper[i]);
+  return sum;
+}
+
+function summaryOf(grid: EndGrid, k: number) {
+  const lowerLevel = posteriorBuilder(grid);
+  const upperLevel = posteriorBuilder(grid);
+  const inLower = new Float64Array(k);
+  const values: number[] = [];
+  const masses: number[] = [];
+  let total = 0;
+  let refined = 0;
+  const add = ({ upper, lowerPanel, lowerM }: Pair, scale: number, shares: TwoShares) => {
+    const mass = scale * shares.last();
+    if (!(mass > 0)) return;
+    const upperM = grid.heights[upper];
+    lowerLevel.add(lowerPanel, lowerM, mass);
+    upperLevel.add(grid.panelOf[upper], upperM, mass);
+    values.push(upperM - lowerM);
+    masses.push(mass);
+    total += mass;
+    if (mass < LITTLE * total) return;
+    refined += mass;
+    shares.addMembership(inLower, scale);
+  };
+  const build = (): PulsesPosterior => ({
+    levels: [lowerLevel.build(), upperLevel.build()],
+    separation: { values: Float64Array.from(values), masses: Float64Array.from(masses) },
+    membership: [inLower.map((x) => x / refined), inLower.map((x) => 1 - x / refined)],
+  });
+  return { add, build };
+}
