@@ -85,7 +85,7 @@ describe.skipIf(findBrowser() === undefined)("edited tables", () => {
     ]);
     const bytes = new Uint8Array(await readFile(await packed.path()));
     const study = await readSources(new Map([["study.zip", bytes]]));
-    expect(study.sheets.find(({ file }) => file === "samples.csv")?.rows[0]?.[1]).toBe("LB-first");
+    expect(study.sheets.find(({ file }) => file === "samples.csv")?.rows.at(0)?.[1]).toBe("LB-first");
     expect(study.sheets.map(({ file }) => file).toSorted()).toEqual(Object.keys(smallStudy).toSorted());
   });
 

@@ -1,5 +1,6 @@
 import type { Problem } from "./problem.ts";
 import type { Settings } from "./settings.ts";
+import type { SheetRows } from "./sheet-rows.ts";
 import type { TableName } from "./tables/index.ts";
 
 /** Where a value came from: the file's name and its row as a spreadsheet counts it (the header is row 1). */
@@ -66,7 +67,7 @@ export interface Sheet {
   readonly wide?: WideReading;
   /** The section that a file without a column for it was taken to be about. */
   readonly section?: { readonly name: string; readonly by: "chosen" | "sections" | "name" };
-  readonly rows: readonly (readonly string[])[];
+  readonly rows: SheetRows;
   readonly rowNumbers: readonly number[];
 }
 
@@ -77,8 +78,6 @@ export interface WideReading {
   readonly taxa: number;
   /** What it says of a group that all its cells in a sample are blank. */
   readonly blank: { readonly means: "not-found" | "not-searched"; readonly by: "default" | "chosen" };
-  /** Samples and groups of which all cells are blank. */
-  readonly allBlank: number;
   /** Cells that are neither numbers nor the usual signs. */
   readonly codes: readonly {
     readonly code: string;

@@ -1,19 +1,19 @@
 import type { HeaderHint, ReadSheet } from "../study/assembly/context.ts";
+import { mapValues, takeRows } from "../study/coded.ts";
 import { type RecognisedColumn, recogniseColumns } from "../study/columns.ts";
 import type { Dialect } from "../study/model.ts";
 import type { ProblemList } from "../study/problem-list.ts";
+import { columnRows } from "../study/sheet-rows.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 import type { TableName } from "../study/tables/index.ts";
 import { takeOffApostrophe } from "./apostrophes.ts";
 import { areColumnsSound } from "./check-columns.ts";
-import { type CsvRecord, type CsvRecords, parseRecords, unguardedHeaders } from "./csv.ts";
+import { unguardedHeaders } from "./csv.ts";
 import { decimalSign } from "./dialect/decimal.ts";
-import { type DeclaredDialect, settingName } from "./dialect/declared.ts";
-import { bestParting, type Preview, previews, widest } from "./dialect/delimiter.ts";
-import { type DecodedText, decodeBytes } from "./dialect/encoding.ts";
-import { type FoundHeader, findHeader } from "./dialect/header.ts";
+import { type DeclaredDialect, tablePath } from "./dialect/declared.ts";
 import { tellDialect } from "./dialect/tell-dialect.ts";
 import { MOST_BYTES, MOST_COLUMNS, mebibytes } from "./limits.ts";
+import { type OddRow, type PartedTable, type PartFault, partTable } from "./part-table.ts";
 import { recognitions } from "./recognition.ts";
 
 export interface SheetSource {
@@ -29,28 +29,17 @@ export interface SheetSource {
 
 /** Reads one table's bytes; undefined where the whole file cannot be used, with the reason told. */
 export function readSheet(source: SheetSource): ReadSheet | undefined {
-  const { file, table, declared, problems } = source;
-  const decoded = decodedSheet(source);
-  if (decoded === undefined) return undefined;
-  const ways = previews(decoded.text, declared);
-  if (!isOfBreadth(widest(ways), source)) return undefined;
-  const records = wholeRecords(decoded.text, ways, source);
-  if (records === undefined) return undefined;
-  const header = headerOf(records.records, source);
-  if (!isOfBreadth(header.headers.length, source)) return undefined;
-  const below = records.records.slice(header.below);
-  if (below.length === 0) {
-    problems.add("header-only", { file, found: "a header row alone" });
-    return undefined;
-  }
-  const headers = withoutEmptyEnd(unguardedHeaders(header.headers, source.guarded), below);
+  const { file, table, problems } = source;
+  const parted = partedSheet(source);
+  if (parted === undefined) return undefined;
+  const { header, head } = parted;
+  const headers = withoutEmptyEnd(unguardedHeaders(header.headers, source.guarded), parted);
   const columns = recogniseColumns(headers, table);
-  const row = records.records[header.from].row;
+  const row = head[header.from].row;
   if (!areColumnsSound(columns, { file, row, table, problems })) return undefined;
-  const parts = { header, below, columns, delimiter: records.delimiter };
-  const dialect = dialectOf(decoded, records.records, parts, source);
+  const dialect = dialectOf(parted, columns, source);
   if (dialect === undefined) return undefined;
-  const { rows, rowNumbers } = cellsOf(below, columns, records, source);
+  const { rows, rowNumbers } = cellsOf(parted, columns, source);
   const declaredColumns = columns.map(({ column }) => column);
   const recognised = recognitions(columns, rows, table);
   const sheet = {
@@ -66,78 +55,66 @@ export function readSheet(source: SheetSource): ReadSheet | undefined {
   return { sheet, hints: hintsOf(columns) };
 }
 
-/** Text of bytes that are text and not too many; the reason is told where they are not. */
-function decodedSheet({ file, bytes, declared, problems }: SheetSource): DecodedText | undefined {
+/** The bytes of a table parted into cells; undefined, told, where they cannot be. */
+function partedSheet(source: SheetSource): PartedTable | undefined {
+  const { file, bytes, problems } = source;
   if (bytes.byteLength > MOST_BYTES) {
     const found = mebibytes(bytes.byteLength);
     problems.add("file-too-large", { file, found, detail: mebibytes(MOST_BYTES) });
     return undefined;
   }
-  const decoded = decodeBytes(bytes, declared.encoding);
-  if (decoded === undefined) problems.add("undecodable-bytes", { file, found: "bytes that are not text" });
-  return decoded;
-}
-
-function isOfBreadth(columns: number, { file, problems }: SheetSource): boolean {
-  if (columns <= MOST_COLUMNS) return true;
-  problems.add("too-many-columns", { file, found: `${columns} columns`, detail: String(MOST_COLUMNS) });
-  return false;
-}
-
-interface WholeRecords extends CsvRecords {
-  readonly delimiter: Dialect["delimiter"];
-}
-
-/** Every record of the file; undefined where there is none, or a quote never closes. */
-function wholeRecords(
-  text: string,
-  ways: readonly Preview[],
-  { file, table, declared, problems }: SheetSource,
-): WholeRecords | undefined {
-  const delimiter = bestParting(ways, table)?.delimiter ?? ",";
-  const read = parseRecords(text, { delimiter, quote: declared.quote });
-  const unclosed = read.faults.find(({ code }) => code === "unclosed-quote");
-  if (read.records.length === 0) problems.add("empty-file", { file, found: "an empty file" });
-  else if (unclosed) problems.add("unclosed-quote", { file, row: unclosed.row, found: '"' });
-  else return { ...read, delimiter };
+  const parted = partTable(source, MOST_COLUMNS);
+  if (parted.kind === "parted" && parted.rows.length > 0) return parted;
+  tellUnparted(parted, source);
   return undefined;
 }
 
-const headerOf = (records: readonly CsvRecord[], { declared, table }: SheetSource): FoundHeader =>
-  declared.headers === undefined
-    ? findHeader(records, table)
-    : { headers: declared.headers, from: 0, below: 0, recognised: 0, isComplete: false };
-
-/** Headers without the blank ones at the end under which nothing stands. */
-function withoutEmptyEnd(headers: readonly string[], below: readonly CsvRecord[]): readonly string[] {
-  let width = headers.length;
-  while (width > 0 && headers[width - 1].trim() === "") width -= 1;
-  const isEmpty = below.every(({ cells }) => cells.slice(width).every((cell) => cell.trim() === ""));
-  return isEmpty ? headers.slice(0, width) : headers;
+function tellUnparted(fault: PartedTable | PartFault, { file, problems }: SheetSource): void {
+  switch (fault.kind) {
+    case "not-text":
+      return problems.add("undecodable-bytes", { file, found: "bytes that are not text" });
+    case "empty":
+      return problems.add("empty-file", { file, found: "an empty file" });
+    case "too-wide":
+      return problems.add("too-many-columns", {
+        file,
+        found: `${fault.columns} columns`,
+        detail: String(MOST_COLUMNS),
+      });
+    case "unclosed-quote":
+      return problems.add("unclosed-quote", { file, row: fault.row, found: '"' });
+    case "parted":
+      return problems.add("header-only", { file, found: "a header row alone" });
+    default:
+      return fault satisfies never;
+  }
 }
 
-interface Parts {
-  readonly header: FoundHeader;
-  readonly below: readonly CsvRecord[];
-  readonly columns: readonly RecognisedColumn[];
-  readonly delimiter: Dialect["delimiter"];
+const isBlank = (cell: string): boolean => cell.trim() === "";
+
+/** Headers without the blank ones at the end under which nothing stands. */
+function withoutEmptyEnd(headers: readonly string[], { columns, odd }: PartedTable): readonly string[] {
+  let width = headers.length;
+  while (width > 0 && isBlank(headers[width - 1])) width -= 1;
+  const isEmpty =
+    columns.slice(width).every(({ values }) => values.every(isBlank)) &&
+    odd.every(({ written }) => written.slice(width).every(isBlank));
+  return isEmpty ? headers.slice(0, width) : headers;
 }
 
 /** The file's dialect, told where it is not the plain one; undefined where its decimal sign must be asked for. */
 function dialectOf(
-  { encoding, isTaken }: DecodedText,
-  records: readonly CsvRecord[],
-  { header, below, columns, delimiter }: Parts,
+  { encoding, isTaken, head, header, delimiter, columns: cells, rows }: PartedTable,
+  columns: readonly RecognisedColumn[],
   source: SheetSource,
 ): Dialect | undefined {
   const { file, declared, table, problems } = source;
-  const rows = below.map(({ cells }) => cells);
   const sign =
     declared.decimal === undefined
-      ? decimalSign(rows, columns, { table, delimiter })
+      ? decimalSign(columnRows(cells, rows.length), columns, { table, delimiter })
       : { kind: "decided" as const, decimal: declared.decimal };
   if (sign.kind === "ambiguous") {
-    problems.add("decimal-ambiguous", { file, found: sign.found, detail: settingName(file) });
+    problems.add("decimal-ambiguous", { file, found: sign.found, detail: tablePath(file) });
     return undefined;
   }
   const dialect = {
@@ -145,8 +122,8 @@ function dialectOf(
     delimiter,
     decimal: sign.decimal,
     missing: declared.missing ?? [],
-    headerRows: records.slice(header.from, header.below).map(({ row }) => row),
-    notes: records.slice(0, header.from),
+    headerRows: head.slice(header.from, header.below).map(({ row }) => row),
+    notes: head.slice(0, header.from),
   };
   tellDialect(dialect, { file, declared, isEncodingTaken: isTaken, problems });
   return dialect;
@@ -162,41 +139,32 @@ function hintsOf(columns: readonly RecognisedColumn[]): ReadonlyMap<string, Head
 
 /** The cells below the header; rows that cannot be parted rightly are told and left out. */
 function cellsOf(
-  below: readonly CsvRecord[],
+  { columns: cells, rows, odd }: PartedTable,
   columns: readonly RecognisedColumn[],
-  { faults }: CsvRecords,
   source: SheetSource,
 ) {
-  const malformed = new Set(faults.map(({ row }) => row));
-  const rows: string[][] = [];
-  const rowNumbers: number[] = [];
-  for (const { cells, row } of below) {
-    if (malformed.has(row)) {
-      source.problems.add("malformed-quote", { file: source.file, row, found: cells.join(",") });
-    } else if (isOfWidth(cells, row, { width: columns.length, source })) {
-      rows.push(columns.map(({ header }, at) => takeOff(cells[at] ?? "", header, source)));
-      rowNumbers.push(row);
-    }
-  }
-  return { rows, rowNumbers };
+  const { guarded } = source;
+  const read = columns.map(({ header }, column) =>
+    guarded.has(header) ? mapValues(cells[column], takeOffApostrophe) : cells[column],
+  );
+  const leftOut = odd.filter((one) => isLeftOut(one, rows[one.index], { width: columns.length, source }));
+  if (leftOut.length === 0) return { rows: columnRows(read, rows.length), rowNumbers: [...rows] };
+  const without = new Set(leftOut.map(({ index }) => index));
+  const kept = Int32Array.from(rows.keys()).filter((index) => !without.has(index));
+  const keptColumns = read.map((column) => takeRows(column, kept));
+  return { rows: columnRows(keptColumns, kept.length), rowNumbers: Array.from(kept, (index) => rows[index]) };
 }
 
-const takeOff = (cell: string, header: string, { guarded }: SheetSource): string =>
-  guarded.has(header) ? takeOffApostrophe(cell) : cell;
-
-/** Blank cells beyond the header are nothing; filled ones leave the row out; short rows are told. */
-function isOfWidth(
-  cells: readonly string[],
+/** Tells a row that has not as many cells as the header; true where it cannot be used. */
+function isLeftOut(
+  { kind, cells, written }: OddRow,
   row: number,
-  { width, source }: { readonly width: number; readonly source: SheetSource },
+  { width, source: { file, problems } }: { readonly width: number; readonly source: SheetSource },
 ): boolean {
-  const { file, problems } = source;
   const detail = String(width);
-  if (cells.slice(width).some((cell) => cell.trim() !== "")) {
-    problems.add("too-many-cells", { file, row, found: `${cells.length} cells: ${cells.join(",")}`, detail });
-    return false;
-  }
-  if (cells.length < width)
-    problems.add("too-few-cells", { file, row, found: `${cells.length} cells`, detail });
-  return true;
+  if (kind === "malformed") problems.add("malformed-quote", { file, row, found: written.join(",") });
+  else if (kind === "overfull")
+    problems.add("too-many-cells", { file, row, found: `${cells} cells: ${written.join(",")}`, detail });
+  else if (cells < width) problems.add("too-few-cells", { file, row, found: `${cells} cells`, detail });
+  return kind !== "short";
 }

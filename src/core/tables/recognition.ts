@@ -1,24 +1,29 @@
 import type { RecognisedColumn } from "../study/columns.ts";
 import type { Recognition, Section, Sheet } from "../study/model.ts";
+import type { SheetRows } from "../study/sheet-rows.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 
 const MOST_VALUES = 5;
 
 /** Up to five values of a column that differ, as written. */
-export function sampleValues(rows: readonly (readonly string[])[], column: number): readonly string[] {
+export function sampleValues(rows: SheetRows, column: number): readonly string[] {
   const values = new Set<string>();
-  for (const cells of rows) {
-    const value = (cells[column] ?? "").trim();
+  for (const cell of rows.columns?.[column]?.values ?? cellsIn(rows, column)) {
+    const value = cell.trim();
     if (value !== "") values.add(value);
     if (values.size === MOST_VALUES) break;
   }
   return [...values];
 }
 
+function* cellsIn(rows: SheetRows, column: number): Generator<string> {
+  for (const cells of rows) yield cells[column] ?? "";
+}
+
 /** What the columns of a table were taken to be, with some of their values. */
 export const recognitions = (
   columns: readonly RecognisedColumn[],
-  rows: readonly (readonly string[])[],
+  rows: SheetRows,
   table: TableDeclaration,
 ): readonly Recognition[] =>
   columns.map((column, at) => ({ ...recognition(column, table), values: sampleValues(rows, at) }));
@@ -86,7 +91,6 @@ function sectionsOf({ columns, rows, section }: Sheet): readonly string[] {
   if (section !== undefined) return [section.name];
   const at = columns.indexOf("section");
   if (at === -1) return [];
-  return [...new Set(rows.map((cells) => (cells[at] ?? "").trim().normalize("NFC")))].filter(
-    (name) => name !== "",
-  );
+  const names = rows.columns?.[at]?.values ?? [...cellsIn(rows, at)];
+  return [...new Set(names.map((name) => name.trim().normalize("NFC")))].filter((name) => name !== "");
 }

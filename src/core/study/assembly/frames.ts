@@ -1,6 +1,7 @@
 import { givenToHeight } from "../heights.ts";
 import { levelRegister } from "../legs.ts";
 import type { Axis, LengthUnit, Origin } from "../model.ts";
+import { columnsOf } from "../sheet-rows.ts";
 import { sections } from "../tables/sections.ts";
 import { type Assembly, present, type ReadSheet, type Row, type SectionFrame } from "./context.ts";
 import type { Frames } from "./frame-for.ts";
@@ -134,8 +135,12 @@ function namesIn({ sheet }: ReadSheet): ReadonlyMap<string, Origin> {
   const isAboutSections = sheet.table !== "claims" && sheet.table !== "choices" && sheet.table !== "taxa";
   const column = isAboutSections ? sheet.columns.indexOf("section") : -1;
   if (column === -1) return names;
-  for (const [index, cells] of sheet.rows.entries()) {
-    const name = (cells[column] ?? "").trim().normalize("NFC");
+  const { values, codes } = columnsOf(sheet.rows, sheet.columns.length)[column];
+  const seen = new Uint8Array(values.length);
+  for (let index = 0; index < codes.length; index++) {
+    if (seen[codes[index]] === 1) continue;
+    seen[codes[index]] = 1;
+    const name = values[codes[index]].trim().normalize("NFC");
     if (name !== "" && !names.has(name)) names.set(name, { file: sheet.file, row: sheet.rowNumbers[index] });
   }
   return names;

@@ -87,7 +87,7 @@ function deriveSamples(bySection: Derived, frames: Frames, assembly: Assembly): 
       top: at("top"),
       leg: at("leg"),
     };
-    for (const [index, cells] of read.sheet.rows.entries()) {
+    for (const [index, cells] of [...read.sheet.rows].entries()) {
       const text = (column: keyof typeof columns) => (cells[columns[column]] ?? "").trim().normalize("NFC");
       const frame = frames.usable.get(text("section"));
       const name = text("sample");

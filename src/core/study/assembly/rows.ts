@@ -21,7 +21,7 @@ export function rowsOf<T extends TableDeclaration & { readonly name: TableName }
     index: read.sheet.columns.indexOf(name),
   }));
   const seen = new Map<string, number>();
-  for (const [index, cells] of read.sheet.rows.entries()) {
+  for (const [index, cells] of [...read.sheet.rows].entries()) {
     const row = read.sheet.rowNumbers[index];
     if (isRepeated(cells, row, { seen, read, assembly })) continue;
     const values = readRow(cells, row, { table, columns, read, assembly });

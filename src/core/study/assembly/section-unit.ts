@@ -16,7 +16,7 @@ export function sectionUnit({ cells, name, read, assembly }: UnitSearch): Length
   if (own !== undefined) return own;
   const section = cellOf(cells, "section", read);
   const listed = assembly.sheets.get("sections");
-  const row = listed?.sheet.rows.find((row) => cellOf(row, "section", listed) === section);
+  const row = listed && [...listed.sheet.rows].find((row) => cellOf(row, "section", listed) === section);
   const stated = listed && row ? lengthUnit(cellOf(row, "unit", listed)) : undefined;
   if (stated !== undefined) return stated;
   const hints = [...assembly.sheets.values()].flatMap((sheet) => [...sheet.hints.values()]);

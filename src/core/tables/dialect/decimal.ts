@@ -1,5 +1,7 @@
+import { type Coded, countValues } from "../../study/coded.ts";
 import type { RecognisedColumn } from "../../study/columns.ts";
 import type { Decimal, Delimiter } from "../../study/model.ts";
+import { columnsOf, type SheetRows } from "../../study/sheet-rows.ts";
 import type { TableDeclaration } from "../../study/tables/declare.ts";
 
 export type DecimalSign =
@@ -18,17 +20,17 @@ const grouped = /^[+-]?[1-9]\d{0,2}[.,]\d{3}$/;
  * number that can be nothing else; where only numbers like 1,234 stand (or 1.234 between semicolons), both are possible.
  */
 export function decimalSign(
-  rows: Iterable<readonly string[]>,
+  rows: SheetRows,
   columns: readonly RecognisedColumn[],
   { table, delimiter }: { readonly table: TableDeclaration; readonly delimiter: Delimiter },
 ): DecimalSign {
   const sure = { comma: 0, point: 0 };
   const unsure = { comma: "", point: "" };
-  for (const cell of numberTexts(rows, columns, table)) {
-    const sign = comma.test(cell) ? "comma" : point.test(cell) ? "point" : undefined;
+  for (const { text, times } of numberTexts(columnsOf(rows, columns.length), columns, table)) {
+    const sign = comma.test(text) ? "comma" : point.test(text) ? "point" : undefined;
     if (sign === undefined) continue;
-    if (grouped.test(cell)) unsure[sign] ||= cell;
-    else sure[sign] += 1;
+    if (grouped.test(text)) unsure[sign] ||= text;
+    else sure[sign] += times;
   }
   if (sure.comma > sure.point) return { kind: "decided", decimal: "comma" };
   if (sure.point > 0) return { kind: "decided", decimal: "point" };
@@ -36,27 +38,29 @@ export function decimalSign(
   return found === "" ? { kind: "decided", decimal: "point" } : { kind: "ambiguous", found };
 }
 
+interface NumberText {
+  readonly text: string;
+  /** How often it stands in its column. */
+  readonly times: number;
+}
+
 /** The numbers that stand in number columns; `<0,05` holds one, `0,02..0,05` two. */
 function* numberTexts(
-  rows: Iterable<readonly string[]>,
+  cells: readonly Coded<string>[],
   columns: readonly RecognisedColumn[],
   table: TableDeclaration,
-): Generator<string> {
-  const indices = columns.flatMap(({ column }, index) => {
+): Generator<NumberText> {
+  for (const [index, { column }] of columns.entries()) {
     const type = column === undefined ? undefined : table.columns[column].type;
-    return type === "number" || type === "integer" || column === "value" ? [index] : [];
-  });
-  for (const cells of rows) {
-    for (const index of indices) {
-      const cell = cells[index] ?? "";
-      if (!cell.includes(".") && !cell.includes(",")) continue;
-      if (plain.test(cell)) {
-        yield cell;
-        continue;
-      }
-      for (const part of cell.replaceAll("\u2212", "-").split("..")) {
-        yield part.trim().replace(/^(?:[<>]=?|≤|≥)\s*/, "");
-      }
+    if (type !== "number" && type !== "integer" && column !== "value") continue;
+    const counts = countValues(cells[index]);
+    for (const [code, cell] of cells[index].values.entries()) {
+      const times = counts[code];
+      if (times === 0 || (!cell.includes(".") && !cell.includes(","))) continue;
+      if (plain.test(cell)) yield { text: cell, times };
+      else
+        for (const part of cell.replaceAll("\u2212", "-").split(".."))
+          yield { text: part.trim().replace(/^(?:[<>]=?|≤|≥)\s*/, ""), times };
     }
   }
 }

@@ -6,7 +6,7 @@ import { type FoundHeader, findHeader } from "./header.ts";
 const delimiters: readonly Delimiter[] = [",", ";", "\t", "|"];
 
 /** Characters looked at before the whole file is read. */
-const PREVIEW = 65536;
+export const PREVIEW = 65536;
 
 /** The beginning of a text, parted by each sign that can part cells. */
 export interface Preview {
@@ -32,9 +32,6 @@ function wholeLines(text: string): string {
   const end = Math.max(text.lastIndexOf("\n"), text.lastIndexOf("\r"));
   return end === -1 ? text : text.slice(0, end);
 }
-
-export const widest = (ways: readonly Preview[]): number =>
-  ways.reduce((most, { records }) => records.reduce((m, { cells }) => Math.max(m, cells.length), most), 0);
 
 export interface Parting {
   readonly delimiter: Delimiter;

@@ -1,10 +1,7 @@
 import type { Encoding } from "../../study/model.ts";
 
-export interface DecodedText {
+export interface DecodedText extends EncodingChoice {
   readonly text: string;
-  readonly encoding: Encoding;
-  /** True where the bytes did not say so themselves and nobody declared it. */
-  readonly isTaken: boolean;
 }
 
 /** Bytes 0x80 to 0x9F of Windows-1252 (WHATWG Encoding Standard, index windows-1252); blanks are unassigned. */
@@ -22,15 +19,34 @@ const declaredNames = new Map<string, Encoding>([
 export const namedEncoding = (name: string): Encoding | undefined =>
   declaredNames.get(name.toLowerCase().replace(/[^a-z0-9]/g, ""));
 
+/** An encoding that bytes may be read in. */
+export interface EncodingChoice {
+  readonly encoding: Encoding;
+  /** True where the bytes did not say so themselves and nobody declared it. */
+  readonly isTaken: boolean;
+}
+
+/** The encodings to try, one after the other: by byte-order mark, else as declared, else UTF-8, then Windows-1252. */
+export function encodingsOf(bytes: Uint8Array, declared?: Encoding): readonly EncodingChoice[] {
+  const marked = byMark(bytes);
+  if (marked !== undefined) return [{ encoding: marked, isTaken: false }];
+  if (declared !== undefined && declared !== "UTF-8") return [{ encoding: declared, isTaken: false }];
+  return [
+    { encoding: "UTF-8", isTaken: false },
+    { encoding: "Windows-1252", isTaken: true },
+  ];
+}
+
 /**
  * Text of bytes: by byte-order mark, else as declared, else UTF-8, else Windows-1252 where every byte is a letter of it.
  * Undefined where the bytes are no text.
  */
 export function decodeBytes(bytes: Uint8Array, declared?: Encoding): DecodedText | undefined {
-  const marked = byMark(bytes);
-  if (marked !== undefined) return decoded(bytes, marked, false);
-  if (declared !== undefined && declared !== "UTF-8") return decoded(bytes, declared, false);
-  return decoded(bytes, "UTF-8", false) ?? decoded(bytes, "Windows-1252", true);
+  for (const choice of encodingsOf(bytes, declared)) {
+    const text = textIn(choice.encoding, bytes);
+    if (text !== undefined) return { text, ...choice };
+  }
+  return undefined;
 }
 
 function byMark([first, second]: Uint8Array): Encoding | undefined {
@@ -38,13 +54,14 @@ function byMark([first, second]: Uint8Array): Encoding | undefined {
   return first === 0xfe && second === 0xff ? "UTF-16BE" : undefined;
 }
 
-function decoded(bytes: Uint8Array, encoding: Encoding, isTaken: boolean): DecodedText | undefined {
+/** Text of bytes in an encoding; undefined where they are none. A byte-order mark at their beginning is no part of it. */
+export function textIn(encoding: Encoding, bytes: Uint8Array): string | undefined {
   try {
     const text =
       encoding === "Windows-1252"
         ? windows1252(bytes)
         : new TextDecoder(encoding, { fatal: true }).decode(bytes);
-    return text === undefined || text.includes("\0") ? undefined : { text, encoding, isTaken };
+    return text === undefined || text.includes("\0") ? undefined : text;
   } catch {
     return undefined;
   }

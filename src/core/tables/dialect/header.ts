@@ -6,6 +6,9 @@ import type { CsvRecord } from "../csv.ts";
 /** Rows looked at for a header. */
 const DEPTH = 50;
 
+/** Rows that the search can read: a header of two rows and its units begin in the last one looked at. */
+export const HEADER_REACH = DEPTH + 2;
+
 /** The header of a table and where it was found. */
 export interface FoundHeader {
   readonly headers: readonly string[];

@@ -73,7 +73,7 @@ describe("dialects", () => {
           decimal: how.decimal === "," ? "comma" : "point",
           encoding: how.encoding === "UTF-8 with mark" ? "UTF-8" : how.encoding,
         });
-        expect(sheet.rows.map(([, taxon]) => taxon)).toEqual(rows.map(({ name }) => name));
+        expect(Array.from(sheet.rows, ([, taxon]) => taxon)).toEqual(rows.map(({ name }) => name));
         const distinct = new Set(rows.map(({ name, position }) => `${name.trim()}\u0000${position}`));
         const heights = study.sections.flatMap(({ occurrences }) =>
           occurrences.map(({ heightM }) => heightM),

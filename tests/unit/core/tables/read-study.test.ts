@@ -74,7 +74,7 @@ describe("columns", () => {
     });
     expect(onlySection(study).occurrences[0].taxon).toBe("Orvella tenuis");
     expect(problemsOf(study, "unknown-column").map(({ found }) => found)).toEqual(["species", "colour"]);
-    expect(study.sheets[0].rows).toEqual([
+    expect([...study.sheets[0].rows]).toEqual([
       ["Orskel Ledge", "Orvella tenuis", "Orvella robusta", "1", "grey"],
     ]);
     expect(study.sheets[0].columns).toEqual(["section", "taxon", undefined, "position", undefined]);

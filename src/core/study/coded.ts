@@ -1,0 +1,52 @@
+/** Places in a list of distinct values, in as few bytes as they need. */
+export type Codes = Uint8Array | Uint16Array | Int32Array;
+
+/**
+ * A column of many rows in little memory: each distinct value once, and for each row its place among them. Plain data:
+ * it goes from thread to thread as it is.
+ */
+export interface Coded<T> {
+  readonly values: readonly T[];
+  readonly codes: Codes;
+}
+
+/** Room for codes of so many distinct values, all 0. */
+export function codesFor(values: number, rows: number): Codes {
+  if (values <= 0x100) return new Uint8Array(rows);
+  return values <= 0x10000 ? new Uint16Array(rows) : new Int32Array(rows);
+}
+
+export const valueAt = <T>({ values, codes }: Coded<T>, row: number): T => values[codes[row]];
+
+/** The same rows with every distinct value turned into another, once. */
+export const mapValues = <T, U>({ values, codes }: Coded<T>, turn: (value: T) => U): Coded<U> => ({
+  values: values.map(turn),
+  codes,
+});
+
+/** Some of the rows, in the order given. */
+export function takeRows<T>({ values, codes }: Coded<T>, rows: Int32Array): Coded<T> {
+  const taken = codesFor(values.length, rows.length);
+  for (let at = 0; at < rows.length; at++) taken[at] = codes[rows[at]];
+  return { values, codes: taken };
+}
+
+/** How often each distinct value stands in the column. */
+export function countValues({ values, codes }: Coded<unknown>): Int32Array {
+  const counts = new Int32Array(values.length);
+  for (let row = 0; row < codes.length; row++) counts[codes[row]] += 1;
+  return counts;
+}
+
+/** A column of values that a `Map` tells apart. */
+export function encode<T>(items: readonly T[]): Coded<T> {
+  const known = new Map<T, number>();
+  const codes = Int32Array.from(items, (item) => {
+    const code = known.get(item) ?? known.size;
+    known.set(item, code);
+    return code;
+  });
+  const narrow = codesFor(known.size, codes.length);
+  narrow.set(codes);
+  return { values: [...known.keys()], codes: narrow };
+}

@@ -1,0 +1,142 @@
+import { type Coded, encode } from "../study/coded.ts";
+import type { Delimiter } from "../study/model.ts";
+import { type CsvRecord, parseRecords } from "./csv.ts";
+import { bestParting, type Preview, previews } from "./dialect/delimiter.ts";
+import { type EncodingChoice, encodingsOf } from "./dialect/encoding.ts";
+import { type FoundHeader, findHeader, HEADER_REACH } from "./dialect/header.ts";
+import { headText, NotText, type PlainBytes, plainBytes } from "./plain-bytes.ts";
+import type { SheetSource } from "./read-sheet.ts";
+import { scanCells } from "./scan-cells.ts";
+
+/** A row that has not as many cells as the header, or a quote where none belongs. */
+export interface OddRow {
+  readonly index: number;
+  readonly kind: "short" | "overfull" | "malformed";
+  readonly cells: number;
+  /** What stands there; of a short row nothing. */
+  readonly written: readonly string[];
+}
+
+/** A file's bytes parted into the cells below its header. */
+export interface PartedTable extends EncodingChoice {
+  readonly kind: "parted";
+  readonly delimiter: Delimiter;
+  /** The records down to the header's end. */
+  readonly head: readonly CsvRecord[];
+  readonly header: FoundHeader;
+  readonly columns: readonly Coded<string>[];
+  readonly rows: Int32Array;
+  readonly odd: readonly OddRow[];
+}
+
+/** Why bytes are not parted. */
+export type PartFault =
+  | { readonly kind: "not-text" }
+  | { readonly kind: "empty" }
+  | { readonly kind: "too-wide"; readonly columns: number }
+  | { readonly kind: "unclosed-quote"; readonly row: number };
+
+interface Parting {
+  readonly plain: PlainBytes;
+  readonly choice: EncodingChoice;
+  readonly source: SheetSource;
+  readonly mostColumns: number;
+}
+
+/** Parts the bytes of a table in the first encoding that they are text of. */
+export function partTable(source: SheetSource, mostColumns: number): PartedTable | PartFault {
+  const { bytes, declared } = source;
+  for (const choice of encodingsOf(bytes, declared.encoding)) {
+    try {
+      return partPlain({ plain: plainBytes(bytes, choice.encoding), choice, source, mostColumns });
+    } catch (fault) {
+      if (!(fault instanceof NotText)) throw fault;
+    }
+  }
+  return { kind: "not-text" };
+}
+
+function partPlain(parting: Parting): PartedTable | PartFault {
+  const { plain, source, mostColumns } = parting;
+  const { text, isWhole } = headText(plain);
+  const ways = previews(text, source.declared);
+  const columns = widest(ways);
+  if (columns > mostColumns) return { kind: "too-wide", columns };
+  const delimiter = bestParting(ways, source.table)?.delimiter ?? ",";
+  const head = ways.find((way) => way.delimiter === delimiter)?.records ?? [];
+  if (!isWhole && head.length < HEADER_REACH) return partWhole(delimiter, parting);
+  if (head.length === 0) return partWhole(delimiter, parting);
+  const header = headerOf(head, source);
+  if (header.headers.length > mostColumns) return { kind: "too-wide", columns: header.headers.length };
+  const { quote = '"' } = source.declared;
+  const scanned = scanCells(plain.bytes, {
+    delimiter,
+    quote,
+    width: header.headers.length,
+    skip: header.below,
+    decode: plain.decode,
+  });
+  if (scanned === undefined) return partWhole(delimiter, parting);
+  const writtenAt = (from: number, to: number) =>
+    parseRecords(plain.decode(plain.bytes.subarray(from, to)), { delimiter, quote }).records[0]?.cells ?? [];
+  const odd = scanned.uneven.map(
+    ({ index, cells, isOverfull, from, to }): OddRow =>
+      isOverfull
+        ? { index, kind: "overfull", cells, written: writtenAt(from, to) }
+        : { index, kind: "short", cells, written: [] },
+  );
+  const { columns: cells, rows } = scanned;
+  return { kind: "parted", ...parting.choice, delimiter, head, header, columns: cells, rows, odd };
+}
+
+/** Reads the whole text at once, record by record: for what `scanCells` cannot read, and to tell what is wrong with it. */
+function partWhole(
+  delimiter: Delimiter,
+  { plain, choice, source, mostColumns }: Parting,
+): PartedTable | PartFault {
+  const read = parseRecords(plain.decode(plain.bytes), { delimiter, quote: source.declared.quote });
+  const { records, faults } = read;
+  if (records.length === 0) return { kind: "empty" };
+  const unclosed = faults.find(({ code }) => code === "unclosed-quote");
+  if (unclosed !== undefined) return { kind: "unclosed-quote", row: unclosed.row };
+  const header = headerOf(records, source);
+  const width = header.headers.length;
+  if (width > mostColumns) return { kind: "too-wide", columns: width };
+  const below = records.slice(header.below);
+  const malformed = new Set(faults.map(({ row }) => row));
+  return {
+    kind: "parted",
+    ...choice,
+    delimiter,
+    head: records,
+    header,
+    columns: header.headers.map((_, column) => encode(below.map(({ cells }) => cells[column] ?? ""))),
+    rows: Int32Array.from(below, ({ row }) => row),
+    odd: below.flatMap(({ cells, row }, index) =>
+      oddRow(cells, { index, width, isMalformed: malformed.has(row) }),
+    ),
+  };
+}
+
+function oddRow(
+  written: readonly string[],
+  {
+    index,
+    width,
+    isMalformed,
+  }: { readonly index: number; readonly width: number; readonly isMalformed: boolean },
+): readonly OddRow[] {
+  const cells = written.length;
+  if (isMalformed) return [{ index, kind: "malformed", cells, written }];
+  if (written.slice(width).some((cell) => cell.trim() !== ""))
+    return [{ index, kind: "overfull", cells, written }];
+  return cells < width ? [{ index, kind: "short", cells, written: [] }] : [];
+}
+
+const widest = (ways: readonly Preview[]): number =>
+  ways.reduce((most, { records }) => records.reduce((m, { cells }) => Math.max(m, cells.length), most), 0);
+
+const headerOf = (records: readonly CsvRecord[], { declared, table }: SheetSource): FoundHeader =>
+  declared.headers === undefined
+    ? findHeader(records, table)
+    : { headers: declared.headers, from: 0, below: 0, recognised: 0, isComplete: false };

@@ -1,0 +1,105 @@
+import fc from "fast-check";
+import { describe, expect, it } from "vitest";
+import { parseRecords } from "../../../../src/core/tables/csv.ts";
+import { type ScannedCells, scanCells } from "../../../../src/core/tables/scan-cells.ts";
+
+const WIDTH = 3;
+
+const scan = (text: string, skip: number) =>
+  scanCells(new TextEncoder().encode(text), {
+    delimiter: ",",
+    quote: '"',
+    width: WIDTH,
+    skip,
+    decode: (bytes) => new TextDecoder("utf-8", { fatal: true, ignoreBOM: true }).decode(bytes),
+  });
+
+const rowsIn = ({ columns, rows }: ScannedCells) =>
+  Array.from(rows, (row, at) => ({ row, cells: columns.map(({ values, codes }) => values[codes[at]]) }));
+
+/** What the record-by-record reader makes of the same text, in as many columns. */
+const expected = (text: string, skip: number) =>
+  parseRecords(text)
+    .records.slice(skip)
+    .map(({ row, cells }) => ({ row, cells: Array.from({ length: WIDTH }, (_, at) => cells[at] ?? "") }));
+
+const text = fc
+  .array(
+    fc.constantFrom(
+      "a",
+      "b",
+      " ",
+      ",",
+      ",",
+      "\n",
+      "\n",
+      "\r",
+      "\r\n",
+      '"',
+      '""',
+      '","',
+      '\n"',
+      "é",
+      "€",
+      "\u00a0",
+      "𝄞",
+    ),
+    {
+      maxLength: 24,
+    },
+  )
+  .map((signs) => signs.join(""));
+
+describe("cells scanned from bytes", () => {
+  it("are those that a reader of records finds, wherever quotes stand well", () => {
+    let scanned = 0;
+    fc.assert(
+      fc.property(text, fc.nat({ max: 2 }), (text, skip) => {
+        const read = scan(text, skip);
+        if (read === undefined) return;
+        scanned += 1;
+        expect(parseRecords(text).faults).toEqual([]);
+        expect(rowsIn(read)).toEqual(expected(text, skip));
+      }),
+      { seed: 3, numRuns: 20_000 },
+    );
+    expect(scanned).toBeGreaterThan(5000);
+  });
+
+  it("keep the rows of another width apart", () => {
+    fc.assert(
+      fc.property(text, (text) => {
+        const read = scan(text, 0);
+        if (read === undefined) return;
+        const uneven = parseRecords(text).records.flatMap(({ cells }, index) => {
+          const isOverfull = cells.slice(WIDTH).some((cell) => cell.trim() !== "");
+          return cells.length < WIDTH || isOverfull ? [{ index, cells: cells.length, isOverfull }] : [];
+        });
+        expect(read.uneven.map(({ index, cells, isOverfull }) => ({ index, cells, isOverfull }))).toEqual(
+          uneven,
+        );
+      }),
+      { seed: 4, numRuns: 10_000 },
+    );
+  });
+
+  it("hold each distinct content once, however many there are", () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 70_000 }), fc.integer({ min: 0, max: 400 }), (names, again) => {
+        const cells = Array.from({ length: names + again }, (_, at) => `n${at % names}`);
+        const read = scan(cells.map((cell) => `${cell},"${cell}",x\n`).join(""), 0);
+        expect(read?.columns.map(({ values }) => values.length)).toEqual([names, names, 1]);
+        expect(read && rowsIn(read).map(({ cells: [first] }) => first)).toEqual(cells);
+      }),
+      {
+        seed: 5,
+        numRuns: 12,
+        examples: [
+          [256, 9],
+          [257, 0],
+          [65_537, 3],
+        ],
+      },
+    );
+  });
+});
