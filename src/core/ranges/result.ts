@@ -41,9 +41,38 @@ export interface Taper {
   readonly endM?: number;
 }
 
+/** The bound of one end under one shape of recovery. */
+export interface LeaningBound {
+  readonly method: RangeMethod;
+  /** beta and k of `top-k`: how finds thin out towards the end, and how many of the outermost ones are used. */
+  readonly tail?: number;
+  readonly finds?: number;
+  /** A height: the upper end of the interval at a top, the lower one at a base. Absent where nothing bounds the end. */
+  readonly boundM?: number;
+  /** What the bound covers by its own assumption. */
+  readonly level: number;
+  readonly outcome: Outcome;
+}
+
+/** How much the bound of one taxon's end leans on what is assumed of recovery: the same end under each shape. */
+export interface Leaning {
+  readonly section: string;
+  readonly taxon: string;
+  readonly end: "top" | "base";
+  /** The outermost find. */
+  readonly lastM: number;
+  /** The leading method first, then `uniform`, `declining`, and `top-k` from few finds to all. */
+  readonly bounds: readonly LeaningBound[];
+  /** The bounds nearest to the outermost find and furthest from it; absent where no method gives one. */
+  readonly nearestM?: number;
+  readonly furthestM?: number;
+}
+
 export interface Ranges {
   readonly ends: readonly RangeEnd[];
   readonly tapers: readonly Taper[];
+  /** How much each end leans on the shape of recovery, by taxon: top, then base. */
+  readonly leanings: readonly Leaning[];
   readonly cautions: readonly Caution[];
   readonly basis: readonly Basis[];
 }

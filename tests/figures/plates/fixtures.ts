@@ -80,7 +80,7 @@ export function analysisOf(sections: readonly Section[], parts: Partial<Analysis
     finds: [],
     taxa: [],
     candidates: [],
-    ranges: { ends: [], tapers: [], cautions: [], basis: [] },
+    ranges: { ends: [], tapers: [], leanings: [], cautions: [], basis: [] },
     timing: noTiming,
     ...parts,
   };
