@@ -1,7 +1,6 @@
 import { exp, log, log1p } from "../numeric/elementary.ts";
-import { gaussLegendre } from "../numeric/gauss-legendre.ts";
+import { integralAbove, panelNodes } from "./panels.ts";
 
-const NODES = 16;
 /** Slopes are integrated up to this many standard deviations of their prior. */
 const LARGEST_SLOPE = 6;
 const SLOPE_PANELS = 6;
@@ -59,16 +58,6 @@ function overSlopes({ steepness, logWeights }: Slopes, logProduct: number) {
   return { logSum: largest + log(sum), slope: slopeSum / sum };
 }
 
-/** Log posterior density in v for falling recovery, and the mean |lambda| there. */
-export type FallingDensity = (v: number) => { readonly logDensity: number; readonly slope: number };
-
-export function fallingDensity(shares: readonly number[], slopes: Slopes): FallingDensity {
-  return (v) => {
-    const { logSum, slope } = overSlopes(slopes, logProductBelow(shares, v * v));
-    return { logDensity: log(2 * v) + (shares.length - 1) * log1p(-v * v) + logSum, slope };
-  };
-}
-
 /** ln prod(1 - y z) with 1 - z given, so that nothing cancels near z = 1; logs of products of eight factors. */
 function logProductBelow(shares: readonly number[], complement: number): number {
   let sum = 0;
@@ -84,7 +73,7 @@ function logProductBelow(shares: readonly number[], complement: number): number 
 }
 
 /** Panel edges in v from 0 to `top`, halving towards 0. */
-export function levelEdges(top: number, finds: number): number[] {
+function levelEdges(top: number, finds: number): number[] {
   const halves = [0, ...Array.from({ length: HALVINGS }, (_, i) => top * 2 ** (i + 1 - HALVINGS))];
   const parts = divisions(finds);
   return halves.flatMap((edge, i) =>
@@ -97,59 +86,31 @@ export function levelEdges(top: number, finds: number): number[] {
   );
 }
 
-export function panelNodes(edges: readonly number[]) {
-  const rule = gaussLegendre(NODES);
-  const at = new Float64Array((edges.length - 1) * NODES);
-  const weights = new Float64Array(at.length);
-  for (let panel = 0; panel + 1 < edges.length; panel++) {
-    const half = (edges[panel + 1] - edges[panel]) / 2;
-    for (let i = 0; i < NODES; i++) {
-      at[panel * NODES + i] = edges[panel] + half * (1 + rule.nodes[i]);
-      weights[panel * NODES + i] = half * rule.weights[i];
-    }
-  }
-  return { at, weights };
-}
-
-/** Mass of falling recovery, its densities divided by exp(logScale). */
-export function fallingMass(density: FallingDensity, edges: readonly number[]) {
+/** Mass of falling recovery: 2 v z^(n-1) times the integral over slopes, whose log is smooth in v. */
+export function fallingMass(shares: readonly number[], slopes: Slopes, top: number) {
+  const edges = levelEdges(top, shares.length);
   const { at, weights } = panelNodes(edges);
-  const values = Array.from(at, density);
-  const logScale = values.reduce(
-    (most, { logDensity }) => Math.max(most, logDensity),
+  const integrals = Array.from(at, (v) => overSlopes(slopes, logProductBelow(shares, v * v)));
+  const logDensity = (v: number, logSum: number) => log(2 * v) + (shares.length - 1) * log1p(-v * v) + logSum;
+  const logScale = integrals.reduce(
+    (most, { logSum }, i) => Math.max(most, logDensity(at[i], logSum)),
     Number.NEGATIVE_INFINITY,
   );
   return {
     logScale,
     scaledTo: (scale: number): SlopeMass => {
-      const masses = values.map(({ logDensity }, i) => weights[i] * exp(logDensity - scale));
-      const sums = panelSums(masses);
-      const partial = (from: number, to: number) => {
-        const inside = panelNodes([from, to]);
-        return inside.at.reduce(
-          (sum, v, i) => sum + inside.weights[i] * exp(density(v).logDensity - scale),
-          0,
-        );
-      };
-      return {
-        total: sums[0],
-        slopeSum: masses.reduce((sum, mass, i) => sum + mass * values[i].slope, 0),
-        above: (v) => {
-          const panel = edges.findIndex((edge) => edge >= v);
-          if (panel < 0) return 0;
-          return sums[panel] + (edges[panel] > v ? partial(v, edges[panel]) : 0);
-        },
-      };
+      const density = (v: number, logSum: number) => exp(logDensity(v, logSum) - scale);
+      const above = integralAbove(edges, {
+        smooth: integrals.map(({ logSum }) => logSum),
+        integrand: density,
+      });
+      const slopeSum = integrals.reduce(
+        (sum, { logSum, slope }, i) => sum + weights[i] * slope * density(at[i], logSum),
+        0,
+      );
+      return { total: above(0), slopeSum, above };
     },
   };
-}
-
-/** Sum of masses from each panel upward; 0 above the last. */
-function panelSums(masses: readonly number[]): number[] {
-  const sums = [0];
-  for (let end = masses.length; end > 0; end -= NODES)
-    sums.unshift(masses.slice(end - NODES, end).reduce((sum, mass) => sum + mass, sums[0]));
-  return sums;
 }
 
 /** Mass of rising recovery, closed in z: (prod y)^lambda z^(n (1 + lambda)) / (n (1 + lambda)). */
@@ -165,15 +126,15 @@ export function risingMass(shares: readonly number[], slopes: Slopes, top: numbe
     logScale: logMasses.reduce((most, mass) => Math.max(most, mass), Number.NEGATIVE_INFINITY),
     scaledTo: (scale: number): SlopeMass => {
       const masses = logMasses.map((mass) => exp(mass - scale));
+      const least = powers.map((power) => exp(power * logLeast));
       const above = (v: number) => {
         const logZ = log1p(-v * v);
         return masses.reduce(
-          (sum, mass, i) =>
-            sum + (mass === 0 ? 0 : mass * (exp(powers[i] * logZ) - exp(powers[i] * logLeast))),
+          (sum, mass, i) => sum + (mass === 0 ? 0 : mass * (exp(powers[i] * logZ) - least[i])),
           0,
         );
       };
-      const shareOf = (i: number) => masses[i] * (1 - exp(powers[i] * logLeast));
+      const shareOf = (i: number) => masses[i] * (1 - least[i]);
       return {
         total: masses.reduce((sum, _, i) => sum + shareOf(i), 0),
         slopeSum: masses.reduce((sum, _, i) => sum + slopes.steepness[i] * shareOf(i), 0),

@@ -1,5 +1,5 @@
 import { findRoot } from "../numeric/roots.ts";
-import { fallingDensity, fallingMass, levelEdges, risingMass, slopeNodes } from "./declining-mass.ts";
+import { fallingMass, risingMass, slopeNodes } from "./declining-mass.ts";
 
 export interface DecliningRecord {
   /** y_i = (x_i - b) / (M - b) of every find that counts, in effective metres: 0 to 1, the last one 1. */
@@ -46,7 +46,7 @@ export function decliningPosterior(record: DecliningRecord): DecliningPosterior 
   const { shares, spread, limit } = record;
   const top = limit === undefined ? 1 : levelOf(limit);
   const slopes = slopeNodes(shares.length, spread);
-  const falling = fallingMass(fallingDensity(shares, slopes), levelEdges(top, shares.length));
+  const falling = fallingMass(shares, slopes, top);
   const rising = risingMass(shares, slopes, top);
   const scale = Math.max(falling.logScale, rising.logScale);
   const [down, up] = [falling.scaledTo(scale), rising.scaledTo(scale)];
