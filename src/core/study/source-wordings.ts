@@ -65,6 +65,13 @@ export const sourceWordings = {
     ),
   "terms-unused": () =>
     caution("terms that the table knows", "These terms are kept in the archive and not used."),
+  "status-contradicted": () =>
+    caution(
+      "an individualCount of 0 or a blank beside occurrenceStatus absent",
+      "Correct one of them; the count decides whether it is a find.",
+    ),
+  "status-unknown": () =>
+    caution("present or absent", "Write one of the two words; it is read as present until then."),
   "table-setting-unused": (p) =>
     caution("a file of the study under tables", `No file is named so; correct the name.${nearest(p)}`),
   "unclosed-quote": () =>
