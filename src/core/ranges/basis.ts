@@ -1,5 +1,13 @@
 import type { Basis } from "../basis.ts";
-import { holland2003, marshall1997, solow1993, solow2005, straussSadler, weissMarshall } from "./sources.ts";
+import {
+  chenLiu,
+  holland2003,
+  marshall1997,
+  solow1993,
+  solow2005,
+  straussSadler,
+  weissMarshall,
+} from "./sources.ts";
 
 export const coordinateBasis: Basis = {
   method: "recovery-coordinate",
@@ -51,11 +59,11 @@ export const windowBasis: Basis = {
 export const sampledBasis: Basis = {
   method: "sampled",
   statement:
-    "Counts sampled horizons, barren ones included: the bound is the first sampled horizon above the largest number of barren ones that may still lie inside the true range.",
+    "Counts sampled horizons, barren ones included: the bound is the first sampled horizon above the largest number of barren ones that may still lie inside the true range. The point is the median of the posterior of the end, prior flat in height up to the section's end, detection p (effort e: 1 - exp(-lambda e), lambda exponential) uniform on (0, 1).",
   assumptions: [
-    "The chance of a find is the same in every sample of the range that was searched for the group (equal effort).",
+    "The odds of a find in a sample of the range that was searched for the group are in proportion to its effort, where efforts differ and are given in one unit; else they are the same in every sample.",
     "The bound is exact and never covers less than its level.",
   ],
-  sources: [weissMarshall],
+  sources: [weissMarshall, chenLiu],
   after: true,
 };

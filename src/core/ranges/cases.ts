@@ -12,6 +12,7 @@ import { type RecoveryPlace, type RecoverySource, weighingRecovery } from "./rec
 import { coordinateOf, squaredPieces } from "./recovery-pieces.ts";
 import { rockBreaks } from "./rock-breaks.ts";
 import { type SampledHorizon, sampledHorizons, sampledRange } from "./sampled-horizons.ts";
+import { isUnequal, searchEffort } from "./search-effort.ts";
 
 export interface RangesInput {
   readonly taxa: readonly LocalTaxon[];
@@ -91,7 +92,7 @@ function groupFrame(place: RecoveryPlace, settings: Settings): GroupFrame {
     ? weighingRecovery(place, source)
     : ({ kind: "unavailable", reason: "not asked for" } as const);
   return {
-    searched: sampledHorizons(place.section, place.group, constant),
+    searched: withEffort(place, sampledHorizons(place.section, place.group, constant)),
     shapes: {
       constant,
       given:
@@ -107,6 +108,16 @@ function groupFrame(place: RecoveryPlace, settings: Settings): GroupFrame {
             },
     },
   };
+}
+
+/** Efforts where they are known and differ; else every horizon counts alike. */
+function withEffort(
+  { section, group }: RecoveryPlace,
+  horizons: readonly SampledHorizon[],
+): readonly SampledHorizon[] {
+  const effort = searchEffort(section, group, horizons);
+  if (!isUnequal(effort)) return horizons;
+  return horizons.map((horizon, i) => ({ ...horizon, effort: effort.efforts[i] }));
 }
 
 function taxonCases(upright: Upright, horizon: MarkerHorizon | undefined, reachesTop: boolean): TaxonCases {

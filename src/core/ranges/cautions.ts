@@ -5,7 +5,7 @@ import { sectionBase } from "./base.ts";
 import type { RangeCase } from "./range-case.ts";
 import { recoveryCautions } from "./recovery-cautions.ts";
 import type { RangeEnd } from "./result.ts";
-import { hasUnequalEffort } from "./sampled-horizons.ts";
+import { effortsNotComparable } from "./search-effort.ts";
 
 interface SectionRanges {
   readonly section: Section;
@@ -56,14 +56,15 @@ function samplingCautions({ section, study, cases }: SectionRanges): Caution[] {
       numbers: { finds, taxa: unsampled.length },
     });
   }
-  const unequal = [...new Set(cases.map(({ taxon }) => taxon.group))].filter((group) =>
-    hasUnequalEffort(section, group),
-  );
+  const unequal = [...new Set(cases.map(({ taxon }) => taxon.group))].flatMap((group) => {
+    const reason = effortsNotComparable(section, group);
+    return reason === undefined ? [] : [`${group}: ${reason}`];
+  });
   if (unequal.length > 0)
     cautions.push({
       code: "range-unequal-effort",
       section: section.name,
-      numbers: { groups: unequal.join(", ") },
+      numbers: { groups: unequal.join("; ") },
     });
   return cautions;
 }

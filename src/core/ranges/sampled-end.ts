@@ -1,65 +1,86 @@
-import { commonFields, note, type RangeCase, wordsOf } from "./range-case.ts";
+import { commonFields, levelWords, note, type RangeCase, wordsOf } from "./range-case.ts";
 import type { RangeEnd } from "./result.ts";
-import { barrenChances, furthestBarren } from "./sampled.ts";
 import type { SampledRange } from "./sampled-horizons.ts";
+import { type EndPosterior, endQuantile } from "./sampled-posterior.ts";
+import { chancesOf, furthestOf, posteriorsOf } from "./sampled-range.ts";
 import { cutOffNote } from "./uniform-end.ts";
 
-/** The row of method `sampled`: the bound is a sampled horizon, or open where the end may lie above all of them. */
+/**
+ * The row of method `sampled`: the bound is a sampled horizon, or open where the end may lie above all of them; the point
+ * is the median of the posterior with a prior flat in height up to the section's end.
+ */
 export function sampledEnd(rangeCase: RangeCase): RangeEnd {
-  const { taxon, sampled, range, confidence } = rangeCase;
-  const { above, highest } = wordsOf(rangeCase);
+  const { taxon, sampled, range } = rangeCase;
   const common = { ...commonFields(rangeCase), method: "sampled" as const };
   if (sampled === undefined)
     return { ...common, outcome: "undefined", note: "no find in a sample searched for the group" };
-  const { count, barrenM, unsampledFinds } = sampled;
+  const { count, unsampledFinds } = sampled;
   const counted = {
     ...common,
     horizons: taxon.heightsM.length - unsampledFinds,
     exponent: count.finds,
     lowM: range.lastM,
   };
-  const notes = [unsampledFinds > 0 && `${unsampledFinds} finds outside searched samples do not count here`];
+  const outside = unsampledFinds > 0 && `${unsampledFinds} finds outside searched samples do not count here`;
   if (count.finds === 0)
     return {
       ...counted,
       outcome: "undefined",
-      note: note(`one sampled find, ${rangeCase.end === "top" ? "base" : "top"} unknown: no bound`, ...notes),
+      note: note(`one sampled find, ${rangeCase.end === "top" ? "base" : "top"} unknown: no bound`, outside),
     };
   if (rangeCase.reachesTop || count.barrenAbove === 0)
-    return { ...counted, outcome: "leaves-section", note: note(cutOffNote(rangeCase), ...notes) };
-  const fields = { ...counted, ...atHorizon(rangeCase, sampled) };
-  const furthest = furthestBarren(count, confidence);
-  if (furthest === count.barrenAbove)
+    return { ...counted, outcome: "leaves-section", note: note(cutOffNote(rangeCase), outside) };
+  const { words, ...posterior } = posteriorFields(rangeCase, sampled);
+  const odds = sampled.effort !== undefined && "odds of a find in proportion to effort";
+  const bound = boundOf(rangeCase, sampled);
+  return {
+    ...counted,
+    ...atHorizon(rangeCase, sampled),
+    ...posterior,
+    ...bound,
+    note: note(bound.note, odds, outside, words),
+  };
+}
+
+function boundOf(rangeCase: RangeCase, sampled: SampledRange): Pick<RangeEnd, "highM" | "outcome" | "note"> {
+  const { above, highest } = wordsOf(rangeCase);
+  const { barrenAbove } = sampled.count;
+  const furthest = furthestOf(sampled, rangeCase.confidence);
+  if (furthest === barrenAbove)
+    return { outcome: "open", note: `all ${barrenAbove} barren horizons ${above} may lie inside the range` };
+  const highM = sampled.barrenM[furthest];
+  if (highM < rangeCase.range.lastM)
     return {
-      ...fields,
-      outcome: "open",
-      note: note(`all ${count.barrenAbove} barren horizons ${above} may lie inside the range`, ...notes),
-    };
-  const highM = barrenM[furthest];
-  if (highM < range.lastM)
-    return {
-      ...fields,
       outcome: "empty",
-      note: note(`the ${highest} find, outside searched samples, lies ${above} the bound`, ...notes),
+      note: `the ${highest} find, outside searched samples, lies ${above} the bound`,
     };
   return {
-    ...fields,
     highM,
     outcome: "closed",
-    note: note(
-      `${furthest} of ${count.barrenAbove} barren horizons ${above} may lie inside the range`,
-      ...notes,
-    ),
+    note: `${furthest} of ${barrenAbove} barren horizons ${above} may lie inside the range`,
+  };
+}
+
+/** Median of the end, and its posterior bound under both priors, which the chance of detection is averaged over. */
+function posteriorFields(
+  rangeCase: RangeCase,
+  sampled: SampledRange,
+): Pick<RangeEnd, "pointM"> & { readonly words?: string } {
+  const posteriors = posteriorsOf(rangeCase, sampled);
+  if (posteriors === undefined) return {};
+  const { sectionEnd } = wordsOf(rangeCase);
+  const bound = (posterior: EndPosterior) =>
+    levelWords(rangeCase, endQuantile(posterior, rangeCase.confidence));
+  return {
+    pointM: endQuantile(posteriors.height, 0.5),
+    words: `posterior bound ${bound(posteriors.height)} with a prior flat in height up to the ${sectionEnd}, ${bound(posteriors.count)} flat in horizons`,
   };
 }
 
 /** Chance of so many barren horizons up to H, and the level at which the interval reaches H. */
-function atHorizon(
-  { range, horizon }: RangeCase,
-  { count, barrenM }: SampledRange,
-): Pick<RangeEnd, "p" | "reachLevel"> {
+function atHorizon({ range, horizon }: RangeCase, sampled: SampledRange): Pick<RangeEnd, "p" | "reachLevel"> {
   if (horizon === undefined || horizon.positionM < range.lastM) return {};
-  const below = barrenM.filter((heightM) => heightM <= horizon.positionM).length;
-  const p = barrenChances(count)[below];
+  const below = sampled.barrenM.filter((heightM) => heightM <= horizon.positionM).length;
+  const p = chancesOf(sampled)[below];
   return { p, reachLevel: 1 - p };
 }

@@ -8,6 +8,8 @@ import { countSampled, type SampledCount } from "./sampled.ts";
 export interface SampledHorizon {
   readonly heightM: number;
   readonly samples: readonly string[];
+  /** Only where efforts differ between the horizons of the group, all in one unit. */
+  readonly effort?: number;
 }
 
 /** A taxon's finds among the horizons that were sampled for its group. */
@@ -15,8 +17,16 @@ export interface SampledRange {
   readonly count: SampledCount;
   /** Heights of the barren sampled horizons above the highest sampled find, from below upward. */
   readonly barrenM: readonly number[];
+  /** Efforts of the horizons that count, from below upward; absent where they do not differ or are not known. */
+  readonly effort?: SampledEffort;
   /** Finds that are in no sample searched for the group: they do not count here. */
   readonly unsampledFinds: number;
+}
+
+export interface SampledEffort {
+  /** The N' horizons of the range that carry information. */
+  readonly inRange: readonly { readonly effort: number; readonly isFound: boolean }[];
+  readonly above: readonly number[];
 }
 
 /** Samples nearer than this are one horizon. */
@@ -54,17 +64,29 @@ export function sampledRange(
   const presence = counted.map((h) => h.samples.some((sample) => found.has(sample)));
   const count = countSampled(presence, range.mode);
   if (count === undefined) return undefined;
+  const effort = effortOf(counted, presence, count);
   return {
     count,
+    ...(effort === undefined ? {} : { effort }),
     barrenM: counted.slice(counted.length - count.barrenAbove).map((h) => h.heightM),
     unsampledFinds: taxon.heightsM.length - presence.filter((isFound) => isFound).length,
   };
 }
 
-/** True where the searches of a group tell of different efforts: equal detection is then in doubt. */
-export function hasUnequalEffort(section: Section, group: string): boolean {
-  const efforts = section.searches
-    .filter((s) => s.group === group && s.effort !== undefined)
-    .map((s) => `${s.effort} ${s.effortUnit ?? ""}`);
-  return new Set(efforts).size > 1;
+function effortOf(
+  counted: readonly SampledHorizon[],
+  presence: readonly boolean[],
+  { inRange, barrenAbove }: SampledCount,
+): SampledEffort | undefined {
+  const efforts = counted.flatMap(({ effort }) => (effort === undefined ? [] : [effort]));
+  if (efforts.length < counted.length) return undefined;
+  const end = counted.length - barrenAbove;
+  const used = efforts.slice(end - inRange);
+  if (used.every((effort) => effort === used[0])) return undefined;
+  return {
+    inRange: efforts
+      .slice(end - inRange, end)
+      .map((effort, i) => ({ effort, isFound: presence[end - inRange + i] })),
+    above: efforts.slice(end),
+  };
 }

@@ -37,3 +37,11 @@ export function searchEffort(
 export function isUnequal(effort: SearchEffort): effort is SearchEffort & { readonly kind: "known" } {
   return effort.kind === "known" && effort.efforts.some((e) => e !== effort.efforts[0]);
 }
+
+/** Where efforts are told for some searches but cannot be compared, the reason. */
+export function effortsNotComparable(section: Section, group: string): EffortReason | undefined {
+  const searches = section.searches.filter((search) => search.group === group);
+  const horizons = searches.map(({ sample, heightM }) => ({ heightM, samples: [sample] }));
+  const effort = searchEffort(section, group, horizons);
+  return effort.kind === "known" || effort.reason === "no effort given" ? undefined : effort.reason;
+}

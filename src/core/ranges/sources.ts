@@ -97,3 +97,9 @@ export const solow2003: Source = {
   title: "Estimation of stratigraphic ranges when fossil finds are not randomly distributed",
   place: "Paleobiology 29:181-185",
 };
+export const chenLiu: Source = {
+  authors: "Chen, S. X. & Liu, J. S.",
+  year: 1997,
+  title: "Statistical applications of the Poisson-binomial and conditional Bernoulli distributions",
+  place: "Statistica Sinica 7:875-892",
+};

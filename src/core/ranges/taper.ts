@@ -2,7 +2,7 @@ import { pivot } from "./pivot.ts";
 import type { RangeCase } from "./range-case.ts";
 import { reasonWithoutBound } from "./range-case.ts";
 import type { RangeMethod, Taper } from "./result.ts";
-import { barrenChances } from "./sampled.ts";
+import { chancesOf } from "./sampled-range.ts";
 import { uniformBound } from "./uniform.ts";
 
 /** A taper is drawn down to this chance, or to the section's top. */
@@ -67,7 +67,7 @@ function sampledOutline({ range, topM, sampled }: RangeCase): Outline {
   const heightsM = [range.lastM];
   const chances = [1];
   const barrenM = sampled?.barrenM ?? [];
-  const steps = sampled === undefined ? [1] : barrenChances(sampled.count);
+  const steps = sampled === undefined ? [1] : chancesOf(sampled);
   barrenM.forEach((heightM, index) => {
     if (heightM <= range.lastM || steps[index] < LEAST_CHANCE) return;
     heightsM.push(heightM, heightM);

@@ -35,6 +35,8 @@ def key_of(row, name):
 def relevant(row, name):
     if name == "anomalies":
         return row["analyte"] == "iridium"
+    if name == "range-ends":
+        return row["end"] == "top" and row["method"] in ("uniform", "window", "sampled")
     return row["horizon"] == "iridium-1" if name == "markers" else True
 
 

@@ -2,7 +2,9 @@
 
 from bisect import bisect_right
 from fractions import Fraction
-from math import comb, exp, expm1, log, log1p
+from math import exp, expm1, log, log1p
+
+import numpy as np
 
 C = 0.95
 
@@ -49,17 +51,46 @@ def role_of(heights, strict_in_place, horizon, ceiling):
 
 
 def sampled(levels, found):
-    """(N', n', barren levels above the highest find), mode first."""
-    hits = [i for i, (_, names) in enumerate(levels) if names & found]
-    return hits[-1] - hits[0], len(hits) - 1, [h for h, _ in levels[hits[-1] + 1:]]
+    """Efforts and finds of the levels of the range, mode first, and the barren levels above the highest find."""
+    hits = [i for i, (_, names, _) in enumerate(levels) if names & found]
+    inside = [(e, bool(names & found)) for _, names, e in levels[hits[0] + 1:hits[-1] + 1]]
+    return inside, [(h, e) for h, _, e in levels[hits[-1] + 1:]]
 
 
-def barren_chance(n_range, n_finds, j):
-    return Fraction(comb(n_range, n_finds), comb(n_range + j, n_finds))
+def symmetric(odds, k):
+    """Elementary symmetric polynomial of degree k, exact."""
+    e = [Fraction(1)] + [Fraction(0)] * k
+    for w in odds:
+        for i in range(k, 0, -1):
+            e[i] += e[i - 1] * w
+    return e
 
 
-def furthest_barren(n_range, n_finds, count):
-    return max(j for j in range(count + 1) if j == 0 or barren_chance(n_range, n_finds, j) > Fraction(5, 100))
+def barren_chances(inside, barren):
+    """p(j), exact: odds of a find in proportion to effort."""
+    finds = sum(found for _, found in inside)
+    e = symmetric([effort for effort, _ in inside], finds)
+    top, chances = e[finds], [Fraction(1)]
+    for _, w in barren:
+        for i in range(finds, 0, -1):
+            e[i] += e[i - 1] * w
+        chances.append(top / e[finds])
+    return chances
+
+
+def median_end(inside, barren, last, top):
+    """Posterior median of the end, prior flat in height up to the top, detection 1 - exp(-lambda e), lambda ~ Exp(1)."""
+    efforts = np.array([float(e) for e, _ in inside] + [float(e) for _, e in barren])
+    efforts = efforts / efforts.mean()
+    found = np.array([f for _, f in inside])
+    finds, absent, above = efforts[:len(inside)][found], efforts[:len(inside)][~found].sum(), efforts[len(inside):]
+    x = np.linspace(-18, 5, 40001)
+    lam = np.exp(x)
+    shared = np.log(-np.expm1(-np.outer(finds, lam))).sum(axis=0) - lam * (absent + 1) + x
+    integrals = np.array([np.exp(shared - shared.max() - lam * a).sum() for a in np.r_[0, np.cumsum(above)]])
+    edges = np.array([last] + [h for h, _ in barren] + [top])
+    mass = np.r_[0, np.cumsum(integrals * np.diff(edges))]
+    return float(np.interp(mass[-1] / 2, mass, edges))
 
 
 def ends(taxon, coordinate, case):
@@ -94,17 +125,18 @@ def ends(taxon, coordinate, case):
 
 
 def sampled_end(taxon, case):
-    n_range, n_finds, barren = sampled(case["levels"], taxon["samples"])
+    inside, barren = sampled(case["levels"], taxon["samples"])
     low = taxon["heights"][-1]
-    if n_finds == 0:
+    if not any(found for _, found in inside):
         return {"outcome": "undefined", "low": low}
     if taxon["reaches_top"] or not barren:
         return {"outcome": "leaves-section", "low": low}
-    row = {"low": low}
+    row = {"low": low, "point": median_end(inside, barren, low, case["top"])}
+    chances, heights = barren_chances(inside, barren), [h for h, _ in barren]
     if case["H"] >= low:
-        p = barren_chance(n_range, n_finds, bisect_right(barren, case["H"]))
+        p = chances[bisect_right(heights, case["H"])]
         row.update(p=float(p), reach=float(1 - p))
-    j = furthest_barren(n_range, n_finds, len(barren))
+    j = max(j for j, p in enumerate(chances) if p > Fraction(5, 100))
     if j == len(barren):
         return {**row, "outcome": "open"}
-    return {**row, "outcome": "closed", "high": barren[j]}
+    return {**row, "outcome": "closed", "high": heights[j]}

@@ -2,7 +2,8 @@
 
     python3 recompute.py [run folder]     writes example.json; with a run folder also prints every disagreement
 
-Formulas: Strauss & Sadler 1989 (uniform), Solow 1993 (window), Weiss & Marshall 1999 (sampled; exact rationals here),
+Formulas: Strauss & Sadler 1989 (uniform), Solow 1993 (window), Weiss & Marshall 1999 (sampled, the odds of a find in
+proportion to effort; exact rationals here),
 Solow 1996 (common end), exact Kolmogorov-Smirnov (SciPy kstwo), Berger & Heath 1968 (box mixing, SciPy optimisers).
 """
 
@@ -64,7 +65,7 @@ def taxa_of(study, section, mixing, horizon):
         role = role_of(heights, heights, (horizon[0], horizon[2], mixing["hb"]), ceiling)
         kept = [f for f in local["finds"] if role != "candidate" or ceiling is None or f["height"] <= horizon[0]]
         searched = sorted(study.searches[section, study.group(name)])
-        names_searched = {s for _, s in searched}
+        names_searched = {s for _, s, _ in searched}
         out.append({"taxon": name, "group": study.group(name), "role": role, "ceiling": ceiling,
                     "heights": [f["height"] for f in kept], "aside": [f["row"] for f in local["finds"] if f not in kept],
                     "samples": {f["sample"] for f in kept} & names_searched,
@@ -74,13 +75,14 @@ def taxa_of(study, section, mixing, horizon):
 
 def levels_searched(study, section, group):
     levels = []
-    for height, sample in sorted(study.searches[section, group]):
+    for height, sample, effort in sorted(study.searches[section, group]):
         if any(low < height < high for low, high in study.gaps[section]):
             continue
         if levels and height - levels[-1][0] <= 1e-9:
             levels[-1][1].add(sample)
+            levels[-1][2] += effort
         else:
-            levels.append((height, {sample}))
+            levels.append([height, {sample}, effort])
     return levels
 
 

@@ -4,6 +4,7 @@ import csv
 import json
 import re
 from collections import defaultdict
+from fractions import Fraction
 from pathlib import Path
 
 METRES = {"m": 1.0, "cm": 0.01, "mm": 0.001, "ft": 0.3048}
@@ -75,7 +76,7 @@ class Study:
         self.searches = defaultdict(list)
         for r in rows(folder, "searches"):
             height = self.samples[r["section"], r["sample"]]["height"]
-            self.searches[r["section"], r["group"]].append((height, r["sample"]))
+            self.searches[r["section"], r["group"]].append((height, r["sample"], Fraction(r["effort"])))
         self.horizons = rows(folder, "horizons")
         self.measurements = rows(folder, "measurements")
         self.finds = [self._find(r) for r in rows(folder, "occurrences")]

@@ -157,13 +157,39 @@ describe("sampled", () => {
     expect(row.highM).toBeUndefined();
   });
 
-  it("warns of unequal effort", () => {
-    expect(rangesOf(fiveFinds, { place: section({ efforts: [1, 2] }) }).codes).toContain(
-      "range-unequal-effort",
-    );
-    expect(rangesOf(fiveFinds, { place: section({ efforts: [1] }) }).codes).not.toContain(
-      "range-unequal-effort",
-    );
+  it("takes the odds of a find in proportion to effort where efforts differ, in one unit", () => {
+    const dense = taxon("Orbula densa", [4, 5, 6, 7, 8, 9, 10]);
+    const { row, codes } = rangesOf(dense, { place: section({ efforts: [1, 4] }) });
+    // Samples at odd levels have four times the odds; all of 5 to 10 have the taxon, 11 not: e6(w) / e6(w, 4).
+    const w = [4, 1, 4, 1, 4, 1];
+    const e6 = w.reduce((a, b) => a * b, 1);
+    const p1 = e6 / (e6 + 4 * e6 * w.reduce((sum, odds) => sum + 1 / odds, 0));
+    expect(p1).toBeLessThan(0.07);
+    const at11 = rangesOf(dense, { place: section({ efforts: [1, 4] }), main: horizon(11.5) });
+    expect(at11.row("sampled").p).toBeCloseTo(p1, 12);
+    expect(row("sampled").note).toContain("odds of a find in proportion to effort");
+    expect(codes).not.toContain("range-unequal-effort");
+    expect(rangesOf(dense, { place: section({ efforts: [3] }) }).row("sampled").note).not.toContain("odds");
+  });
+
+  it("says that efforts cannot be compared", () => {
+    const place = section({ efforts: [1, 2] });
+    const searches = place.searches.map((s, i) => (i % 2 === 0 ? { ...s, effortUnit: "slide" } : s));
+    const { row, codes } = rangesOf(fiveFinds, { place: { ...place, searches } });
+    expect(codes).toContain("range-unequal-effort");
+    expect(row("sampled").note).not.toContain("odds");
+  });
+
+  it("gives the posterior median, prior flat in height up to the section's end", () => {
+    const row = rangesOf(taxon("Orbula densa", [4, 5, 6, 7, 8, 9, 10])).row("sampled");
+    // Likelihood B(7, 1 + j) over 30 stretches of 1 m: 1/7, 1/56, 1/252 ... of which the first holds more than half.
+    let likelihood = 1;
+    let total = 0;
+    for (let j = 0; j < 30; j++) {
+      total += likelihood;
+      likelihood *= (1 + j) / (8 + j);
+    }
+    expect(row.pointM).toBeCloseTo(10 + 0.5 * total, 9);
   });
 });
 
