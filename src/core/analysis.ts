@@ -46,6 +46,7 @@ export function analyseFrom(markers: Markers, study: Study, progress: Progress =
   const taxa = assigned.flatMap((a) => a.taxa);
   const finds = markBelowCeiling(settled.finds, candidates, boundaries);
   const ranges = estimateRanges(study, { taxa, candidates, markers }, progress);
-  const timing = answerTiming(study, { taxa, candidates, markers, ranges }, progress);
+  const untrimmed = settled.taxa;
+  const timing = answerTiming(study, { taxa, candidates, markers, ranges, untrimmed }, progress);
   return { study, markers, alignment, finds, taxa, candidates, ranges, timing };
 }

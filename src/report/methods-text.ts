@@ -1,12 +1,14 @@
 import type { Analysis } from "../core/analysis-result.ts";
 import type { Basis, Source } from "../core/basis.ts";
 
-/** Everything a run rests on, once each, in the order of the flow. */
+/** Everything a run rests on, once each, in the order of the flow; one name may stand for a taxon and for an assemblage. */
 export function basesOf({ markers, alignment, ranges, timing }: Analysis): readonly Basis[] {
   const all = [...markers.basis, ...alignment.basis, ...ranges.basis, ...timing.basis];
   const seen = new Set<string>();
-  return all.filter((basis) => !seen.has(basis.method) && seen.add(basis.method));
+  return all.filter((basis) => !seen.has(keyOf(basis)) && seen.add(keyOf(basis)));
 }
+
+const keyOf = ({ method, statement }: Basis) => `${method}\n${statement}`;
 
 /** A source as it stands in a list of references. */
 export function reference({ authors, year, title, place, doi }: Source): string {

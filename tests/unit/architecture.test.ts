@@ -114,7 +114,7 @@ describe("what is declared once", () => {
       .filter(({ path }) => /^core\/(?:markers|alignment|ranges|timing)\//.test(path))
       .flatMap(({ text }) => [
         ...text.matchAll(/code: "([a-z-]+)"/g),
-        ...text.matchAll(/(?:of|counted)\(\s*(?:input,\s*)?"((?:range|timing)-[a-z-]+)"/g),
+        ...text.matchAll(/(?:of|counted|told|compare)\(\s*(?:input,\s*)?"((?:range|timing)-[a-z-]+)"/g),
         ...text.matchAll(/"(main-horizon-[a-z-]+)"/g),
       ])
       .map(([, code]) => code);

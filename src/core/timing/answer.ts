@@ -6,16 +6,16 @@ import type { Ranges } from "../ranges/result.ts";
 import type { Candidate, LocalTaxon } from "../study/finds-result.ts";
 import type { Section, Study } from "../study/model.ts";
 import { timingBasis } from "./basis.ts";
-import { besideCautions, setCaseCautions, topCautions } from "./cautions.ts";
-import { oneLevelAnswer, whereAnswers } from "./common-end-answers.ts";
-import { durationAnswers } from "./duration-answers.ts";
-import { horizonAnswers } from "./horizon-answers.ts";
+import { besideCautions, comparedCautions, setCaseCautions, topCautions } from "./cautions.ts";
+import { comparedSets } from "./compared-sets.ts";
 import { levelCurve } from "./level-curve.ts";
 import { candidateRanges } from "./range-data.ts";
-import { DECLINE_GATE, pooledCentroid, recoveryAnswers } from "./recovery-answers.ts";
+import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
 import type { LevelCurve, Timing, TimingAnswer } from "./result.ts";
+import { answerSet } from "./set-answers.ts";
 import type { PlacedHorizon, SetCase } from "./set-case.ts";
 import { allCandidates, setCautions, setsOf } from "./sets.ts";
+import { stepCautions, stepSets } from "./steps.ts";
 import { type TimingWindow, timingWindow } from "./window.ts";
 
 export interface TimingInput {
@@ -23,6 +23,8 @@ export interface TimingInput {
   readonly candidates: readonly Candidate[];
   readonly markers: Markers;
   readonly ranges?: Ranges;
+  /** The taxa before finds below a reworking ceiling were taken out; without them nothing is compared. */
+  readonly untrimmed?: readonly LocalTaxon[];
 }
 
 /**
@@ -66,8 +68,10 @@ function answerSection(section: Section, study: Study, input: TimingInput): Answ
   const cautions = [
     ...cases.flatMap(setCaseCautions),
     ...topCautions(cases),
+    ...comparedCautions(cases),
     ...windowCautions(section, window),
     ...setCautions(section.name, ranges, declared),
+    ...stepCautions(section.name, ranges, study.settings),
     ...beside,
   ];
   return {
@@ -87,36 +91,42 @@ function declines(ranges: Parameters<typeof pooledCentroid>[0]): boolean {
   return pooled !== undefined && pooled.p < DECLINE_GATE;
 }
 
-function answerSet(setCase: SetCase): TimingAnswer[] {
-  return [
-    oneLevelAnswer(setCase),
-    ...whereAnswers(setCase),
-    ...horizonAnswers(setCase),
-    ...durationAnswers(setCase),
-    ...recoveryAnswers(setCase),
-  ];
-}
-
 function sectionCases(
   section: Section,
   { settings }: Study,
-  { taxa, candidates, markers }: TimingInput,
+  { taxa, candidates, markers, untrimmed = taxa }: TimingInput,
 ): { cases: readonly SetCase[]; window: TimingWindow | undefined } {
   const coordinate = recoveryCoordinate(section);
   const { base } = sectionBase(section, settings, markers);
-  const ofSection = taxa.filter((taxon) => taxon.section === section.name);
-  const ranges = candidateRanges(candidates, ofSection, { base, coordinate });
+  const isHere = (taxon: LocalTaxon) => taxon.section === section.name;
+  const ofSection = taxa.filter(isHere);
+  const rangesOf = (some: readonly LocalTaxon[]) => candidateRanges(candidates, some, { base, coordinate });
+  const ranges = rangesOf(ofSection);
   const horizons = placedHorizons(section.name, markers);
+  const horizon = markers.main.bySection.get(section.name);
   const { durationHorizons, sets, window } = settings.timing;
-  const cases = setsOf(section.name, ranges, sets).map((set) => ({
+  const compared = {
+    section: section.name,
+    ranges,
+    taxa: ofSection,
+    untrimmed: untrimmed.filter(isHere),
+    confidence: settings.confidence,
+    rangesOf,
+  };
+  const cases = [
+    ...setsOf(section.name, ranges, sets),
+    ...stepSets(section.name, ranges, settings),
+    ...comparedSets(compared),
+  ].map((set) => ({
     section,
     coordinate,
     set,
     horizons,
     confidence: settings.confidence,
     durationHorizons,
+    settings,
+    originM: horizon?.positionM ?? 0,
   }));
-  const horizon = markers.main.bySection.get(section.name);
   return {
     cases,
     window: ranges.length === 0 ? undefined : timingWindow(window, ranges, { section, horizon }),

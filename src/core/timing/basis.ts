@@ -1,4 +1,6 @@
 import type { Basis, Source } from "../basis.ts";
+import { assemblageBasis } from "./basis-assemblage.ts";
+import { checkBasis } from "./basis-checks.ts";
 
 const solow1996: Source = {
   authors: "Solow, A. R.",
@@ -30,13 +32,6 @@ const solowSmith2000: Source = {
   title: "Testing for a mass extinction without selecting taxa",
   place: "Paleobiology 26:647-650",
 };
-const coxLewis1966: Source = {
-  authors: "Cox, D. R. & Lewis, P. A. W.",
-  year: 1966,
-  title: "The Statistical Analysis of Series of Events",
-  place: "Methuen, London",
-};
-
 const uniformFinds =
   "Finds are independent and uniform, in the recovery-weighted coordinate, over each true range.";
 const declaredTaxa =
@@ -95,15 +90,6 @@ export const timingBasis: readonly Basis[] = [
     sources: [wang2012],
     after: true,
   },
-  {
-    method: "centroid",
-    statement:
-      "Mean place of the finds between each taxon's first and last, pooled over taxa; exact one-sided p for finds concentrated low, that is recovery declining upward.",
-    assumptions: [
-      "Given its first and last find, a taxon's other finds are independent and uniform between them.",
-      "Low power with few finds: a large p is no evidence of constant recovery.",
-    ],
-    sources: [coxLewis1966],
-    after: true,
-  },
+  ...assemblageBasis,
+  ...checkBasis,
 ];

@@ -11,7 +11,8 @@ import { boxTaxa, widestTaxon } from "./duration-answers.ts";
 import { effortCautions } from "./effort-caution.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
 import type { SetCase } from "./set-case.ts";
-import { allCandidates, closedCandidates } from "./sets.ts";
+import { allCandidates, closedCandidates, untrimmedCandidates, withoutIsolated } from "./sets.ts";
+import { surfaceCautions } from "./surface-answers.ts";
 
 /** What weakens the answers about one set of one section. */
 export function setCaseCautions(setCase: SetCase): Caution[] {
@@ -20,6 +21,7 @@ export function setCaseCautions(setCase: SetCase): Caution[] {
     ...effortCautions(setCase),
     ...oneLevelCautions(setCase),
     ...boxCautions(setCase),
+    ...surfaceCautions(setCase),
   ];
 }
 
@@ -75,14 +77,44 @@ export function topCautions(cases: readonly SetCase[]): Caution[] {
       numbers: { taxa: reaching.length, names: reaching.join(", ") },
     },
   ];
-  const closed = cases.find(({ set }) => set.set === closedCandidates);
+  return [...cautions, ...turns(cases, closedCandidates, "timing-turns-on-top")];
+}
+
+/** Where finds were judged: whose, and whether the answer turns on the judgement. */
+export function comparedCautions(cases: readonly SetCase[]): Caution[] {
+  const all = cases.find(({ set }) => set.set === allCandidates);
+  if (all === undefined) return [];
+  const compare = (code: string, set: string, turnsCode: string): Caution[] => {
+    const other = cases.find((one) => one.set.set === set);
+    const names = other === undefined ? [] : changedTaxa(all, other);
+    if (names.length === 0) return [];
+    return [
+      { code, section: all.section.name, numbers: { taxa: names.length, names: names.join(", ") } },
+      ...turns(cases, set, turnsCode),
+    ];
+  };
+  return [
+    ...compare("timing-isolated-finds", withoutIsolated, "timing-turns-on-isolated"),
+    ...compare("timing-trimmed-finds", untrimmedCandidates, "timing-turns-on-trimming"),
+  ];
+}
+
+function changedTaxa(all: SetCase, other: SetCase): readonly string[] {
+  const lastOf = new Map(other.set.ranges.map((range) => [range.taxon, range.lastM]));
+  return all.set.ranges.flatMap(({ taxon, lastM }) =>
+    (lastOf.get(taxon) ?? lastM) === lastM ? [] : [taxon],
+  );
+}
+
+/** Whether one level is rejected with the candidates as they stand but not with the other set, or the reverse. */
+function turns(cases: readonly SetCase[], otherSet: string, code: string): Caution[] {
+  const [all, other] = [allCandidates, otherSet].map((name) => cases.find(({ set }) => set.set === name));
+  if (all === undefined || other === undefined) return [];
   const pAll = commonEndTest(all.set.ranges)?.p;
-  const pClosed = closed === undefined ? undefined : commonEndTest(closed.set.ranges)?.p;
-  if (pAll === undefined || pClosed === undefined) return cautions;
-  const alpha = 1 - all.confidence;
-  if (pAll <= alpha !== pClosed <= alpha)
-    cautions.push({ code: "timing-turns-on-top", section, numbers: { all: pAll, closed: pClosed } });
-  return cautions;
+  const pOther = commonEndTest(other.set.ranges)?.p;
+  if (pAll === undefined || pOther === undefined) return [];
+  if (rejectsOneLevel(pAll, all.confidence) === rejectsOneLevel(pOther, all.confidence)) return [];
+  return [{ code, section: all.section.name, numbers: { all: pAll, other: pOther } }];
 }
 
 /** Taxa beside the answer: those that live on above the horizon, and those that no set contains. */

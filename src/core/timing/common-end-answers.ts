@@ -57,19 +57,35 @@ export function whereAnswers(setCase: SetCase): TimingAnswer[] {
 }
 
 function endAnswer(setCase: SetCase, end: EndSet, extra?: string | false): Omit<TimingAnswer, "method"> {
+  const kept = informative(setCase.set.ranges).length;
+  return endRow(setCase, end, { taxa: kept, words: extra });
+}
+
+interface EndWords {
+  readonly taxa: number;
+  /** Where not the study's confidence. */
+  readonly level?: number;
+  readonly words?: string | false;
+}
+
+/** A set of levels in effective metres as a row of `where`, in heights. */
+export function endRow(
+  setCase: SetCase,
+  end: EndSet,
+  { taxa, level, words }: EndWords,
+): Omit<TimingAnswer, "method"> {
   const { section, set, coordinate, confidence } = setCase;
-  const kept = informative(set.ranges).length;
   const fields = {
-    ...commonFields(setCase, kept),
+    ...commonFields(setCase, taxa),
     question: "where",
-    level: confidence,
+    level: level ?? confidence,
     unit: "m",
   } as const;
-  const dropped = droppedNote(set.ranges.length - kept);
+  const dropped = droppedNote(set.ranges.length - taxa);
   if (end.kind === "undefined")
     return { ...fields, outcome: "undefined", note: "no taxon with an informative range" };
   if (end.kind === "empty")
-    return { ...fields, outcome: "empty", note: note("no common end fits", dropped, extra) };
+    return { ...fields, outcome: "empty", note: note("no common end fits", dropped, words) };
   const isAtHighest = end.low === highestLast(set.ranges);
   const low = isAtHighest
     ? Math.max(...set.ranges.map((range) => range.lastM))
@@ -86,7 +102,7 @@ function endAnswer(setCase: SetCase, end: EndSet, extra?: string | false): Omit<
       isBeyond && `upper end lies ${metres(high - section.topM)} above the section's top`,
       gap && `upper end falls in a gap from ${metres(gap.baseM)} to ${metres(gap.topM)}`,
       dropped,
-      extra,
+      words,
     ),
   };
 }

@@ -27,11 +27,16 @@ interface Check {
   readonly words: string;
 }
 
+interface CheckedTaxon {
+  readonly levels: readonly number[];
+  readonly test: Check;
+}
+
 /** One pre-check of constant recovery: of one taxon, and of several together. */
 interface Precheck {
   readonly method: TimingMethod;
   readonly ofTaxon: (levels: readonly number[]) => Check | undefined;
-  readonly pooled: (levelsOfTaxa: readonly (readonly number[])[]) => Check | undefined;
+  readonly pooled: (taxa: readonly CheckedTaxon[]) => Check | undefined;
   readonly reason: string;
 }
 
@@ -41,31 +46,31 @@ const checks: readonly Precheck[] = [
   {
     method: "centroid",
     ofTaxon: (levels) => centroidCheck(rescaledInterior(levels)),
-    pooled: (taxa) => withDetectable(centroidCheck(taxa.flatMap(rescaledInterior)), taxa),
+    pooled: (taxa) => withDetectable(centroidCheck(interiorOf(taxa)), taxa),
     reason: withoutInterior,
   },
   {
     method: "distance",
     ofTaxon: (levels) => distanceCheck(rescaledInterior(levels)),
-    pooled: (taxa) => distanceCheck(taxa.flatMap(rescaledInterior)),
+    pooled: (taxa) => distanceCheck(interiorOf(taxa)),
     reason: withoutInterior,
   },
   {
     method: "gap-trend",
     ofTaxon: gapTrendCheck,
-    pooled: (taxa) => fisherCheck(taxa.map(gapTrendCheck), "gaps that lengthen upward"),
+    pooled: (taxa) => fisherCheck(taxa, "gaps that lengthen upward"),
     reason: "fewer than two unequal gaps",
   },
   {
     method: "runs",
     ofTaxon: runsCheck,
-    pooled: (taxa) => fisherCheck(taxa.map(runsCheck), "few runs"),
+    pooled: (taxa) => fisherCheck(taxa, "few runs"),
     reason: "no gaps on both sides of their median",
   },
   {
     method: "largest-gap",
     ofTaxon: largestGapCheck,
-    pooled: (taxa) => fisherCheck(taxa.map(largestGapCheck), "a gap as long as this"),
+    pooled: (taxa) => fisherCheck(taxa, "a gap as long as this"),
     reason: "fewer than two gaps",
   },
 ];
@@ -74,16 +79,14 @@ const checks: readonly Precheck[] = [
 export function recoveryAnswers(setCase: SetCase): TimingAnswer[] {
   const { ranges, set } = setCase.set;
   return checks.flatMap((check) => {
-    const entered = ranges.filter(({ levels }) => check.ofTaxon(levels) !== undefined);
-    const pooled = answer(setCase, check, {
-      taxa: entered.length,
-      test: check.pooled(entered.map(({ levels }) => levels)),
-    });
+    const tests = ranges.map(({ levels }) => ({ levels, test: check.ofTaxon(levels) }));
+    const entered = tests.flatMap(({ levels, test }) => (test === undefined ? [] : [{ levels, test }]));
+    const pooled = answer(setCase, check, { taxa: entered.length, test: check.pooled(entered) });
     if (set !== allCandidates) return [pooled];
-    const single = ranges.map((range) => ({
-      ...answer(setCase, check, { taxa: 1, test: check.ofTaxon(range.levels) }),
-      group: range.group,
-      taxon: range.taxon,
+    const single = ranges.map(({ group, taxon }, i) => ({
+      ...answer(setCase, check, { taxa: 1, test: tests[i].test }),
+      group,
+      taxon,
     }));
     return [pooled, ...single];
   });
@@ -113,9 +116,9 @@ function centroidCheck(interior: readonly number[]): Check | undefined {
 }
 
 /** A large p says little where only a steep decline would have been seen: how steep is told. */
-function withDetectable(check: Check | undefined, taxa: readonly (readonly number[])[]): Check | undefined {
+function withDetectable(check: Check | undefined, taxa: readonly CheckedTaxon[]): Check | undefined {
   if (check === undefined) return undefined;
-  const mu = detectableDecline(taxa.map((levels) => levels.length));
+  const mu = detectableDecline(taxa.map(({ levels }) => levels.length));
   const words =
     mu === undefined
       ? "no decline would be seen with 80% power"
@@ -159,8 +162,9 @@ function largestGapCheck(levels: readonly number[]): Check | undefined {
   );
 }
 
-function fisherCheck(tests: readonly (Check | undefined)[], what: string): Check | undefined {
-  const values = tests.flatMap((test) => test?.p ?? []);
-  const pooled = fisherPooled(values);
-  return pooled && { ...pooled, words: `Fisher's combination of ${values.length} taxa; p is for ${what}` };
+function fisherCheck(taxa: readonly CheckedTaxon[], what: string): Check | undefined {
+  const pooled = fisherPooled(taxa.map(({ test }) => test.p));
+  return pooled && { ...pooled, words: `Fisher's combination of ${taxa.length} taxa; p is for ${what}` };
 }
+
+const interiorOf = (taxa: readonly CheckedTaxon[]) => taxa.flatMap(({ levels }) => rescaledInterior(levels));

@@ -1,6 +1,8 @@
 import type { MarkerHorizon } from "../markers/result.ts";
 import type { Coordinate } from "../ranges/coordinate.ts";
 import type { Section } from "../study/model.ts";
+import type { Settings } from "../study/settings.ts";
+import type { Simulation } from "./pulses-bootstrap.ts";
 import type { TimingAnswer } from "./result.ts";
 import type { SetOfRanges } from "./sets.ts";
 
@@ -13,6 +15,16 @@ export interface SetCase {
   readonly horizons: readonly PlacedHorizon[];
   readonly confidence: number;
   readonly durationHorizons: number;
+  readonly settings: Settings;
+  /** Height that metres in the settings are counted from: the main horizon's, else 0. */
+  readonly originM: number;
+}
+
+/** Share of `replicates` that each of the many simulations of an analysis draws: their p comes with its own error. */
+const SHARE_OF_REPLICATES = 0.2;
+
+export function simulationOf({ seed, replicates }: Settings): Simulation {
+  return { seed, replicates: Math.ceil(SHARE_OF_REPLICATES * replicates) };
 }
 
 export interface PlacedHorizon {

@@ -9,7 +9,11 @@ export interface SetOfRanges extends TaxonSet {
 
 export const allCandidates = "candidates";
 export const closedCandidates = "candidates-closed";
-const groupPrefix = "group:";
+export const withoutIsolated = "candidates-without-isolated";
+export const untrimmedCandidates = "candidates-untrimmed";
+export const earlyStep = "step:early";
+export const lateStep = "step:late";
+export const groupPrefix = "group:";
 
 /**
  * The sets that the assemblage questions run on in one section, of candidates alone: all of them; without those that
@@ -49,10 +53,19 @@ export function setCautions(
   });
 }
 
-function setOf(section: string, set: string, ranges: readonly TaxonRange[]): SetOfRanges {
+export function setOf(section: string, set: string, ranges: readonly TaxonRange[]): SetOfRanges {
   return { section, set, taxa: ranges.map((range) => range.taxon), ranges };
 }
 
+const reserved: ReadonlySet<string> = new Set([
+  allCandidates,
+  closedCandidates,
+  withoutIsolated,
+  untrimmedCandidates,
+  earlyStep,
+  lateStep,
+]);
+
 function isReserved(name: string): boolean {
-  return name === allCandidates || name === closedCandidates || name.startsWith(groupPrefix);
+  return reserved.has(name) || name.startsWith(groupPrefix);
 }

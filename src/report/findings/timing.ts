@@ -1,12 +1,12 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import type { Outcome } from "../../core/basis.ts";
 import type { Section } from "../../core/study/model.ts";
 import { isAlignedTooWell, rejectsOneLevel } from "../../core/timing/common-end.ts";
 import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
 import { weaknessOf } from "../wordings/cautions.ts";
 import { inMetres, offsetInterval, percent, positionInterval, pValue } from "../wordings/numbers.ts";
 import { plural, say, strong, type Words } from "../wordings/words.ts";
-import type { Finding, NumberLine } from "./finding.ts";
+import type { Finding } from "./finding.ts";
+import { isBeyond, timingLine } from "./timing-lines.ts";
 
 /** The sentence that a set of taxa in one section earns: one level or not, where, and how gradual it could still be. */
 export function timingFinding(analysis: Analysis, section: Section, set: string): Finding {
@@ -24,13 +24,16 @@ export function timingFinding(analysis: Analysis, section: Section, set: string)
     section: section.name,
     set,
     sentence: sentence({ analysis, section, set, answers }),
-    numbers: mainFirst(answers, analysis, section).flatMap((answer) => line(answer, section)),
+    numbers: mainFirst(answers, analysis, section).map((answer) => timingLine(answer, section)),
     weaknesses: cautions.map((c) => weaknessOf(c, study)),
     methods: timing.basis,
   };
 }
 
-/** The answers in their order, but of the horizons the main one first. */
+/**
+ * The answers in their order, but of the horizons the main one first and by one method for the others; and where recovery
+ * declines the bound that a decline does not harm before all.
+ */
 function mainFirst(
   answers: readonly TimingAnswer[],
   analysis: Analysis,
@@ -38,16 +41,35 @@ function mainFirst(
 ): readonly TimingAnswer[] {
   const main = analysis.markers.main.bySection.get(section.name);
   const isMain = ({ horizon }: TimingAnswer) => horizon !== undefined && horizon === main?.horizon;
-  const first = answers.findIndex((answer) => answer.method === "confidence-levels");
-  if (first < 0) return answers;
-  const rest = answers.slice(first);
-  return [...answers.slice(0, first), ...rest.filter(isMain), ...rest.filter((answer) => !isMain(answer))];
+  const atHorizons = answers.filter(({ question }) => question === "at-horizon");
+  const first = answers.findIndex(({ question }) => question === "at-horizon");
+  const others = answers.filter(({ question }) => question !== "at-horizon");
+  const shown = [
+    ...atHorizons.filter(isMain),
+    ...atHorizons.filter((answer) => !isMain(answer) && answer.method === "confidence-levels"),
+  ];
+  const ordered = first < 0 ? answers : others.toSpliced(first, 0, ...shown);
+  const isDistrusted = analysis.timing.distrusted.some(
+    (one) => one.section === section.name && one.set === answers[0]?.set,
+  );
+  return isDistrusted
+    ? [...ordered.filter(isProof), ...ordered.filter((answer) => !isProof(answer))]
+    : ordered;
 }
+
+/** Whether a decline of recovery lower down does a method no harm. */
+const isProof = ({ method }: TimingAnswer) => method === "two-highest";
 
 /** The set in words: `39 candidates`, `8 taxa of ammonoids`, `27 taxa of open-shelf`. */
 function taxaOf(set: string, count: number): string {
   if (set === "candidates") return plural(count, "candidate");
   if (set === "candidates-closed") return `${plural(count, "candidate")} that end below the top`;
+  if (set === "candidates-without-isolated")
+    return `${plural(count, "candidate")} without isolated highest finds`;
+  if (set === "candidates-untrimmed")
+    return `${plural(count, "candidate")} with finds below the reworking ceiling`;
+  if (set === "step:early") return `${plural(count, "taxon", "taxa")} of the declared earlier step`;
+  if (set === "step:late") return `${plural(count, "taxon", "taxa")} of the declared later step`;
   return `${plural(count, "taxon", "taxa")} of ${set.replace(/^group:/, "")}`;
 }
 
@@ -136,94 +158,5 @@ function longestWords(longest: TimingAnswer | undefined, section: Section): Word
     : say` A local disappearance of ${longestOf(longest)} spread over up to ${strong(inMetres(longest.high))} cannot be excluded.`;
 }
 
-const isBeyond = ({ high }: TimingAnswer, { bottomM, topM }: Section) =>
-  high !== undefined && high > topM - bottomM;
-
 const longestOf = (longest: TimingAnswer) =>
   longest.taxa === longest.taxaOfSet ? "these taxa" : `the ${longest.taxa} best sampled of them`;
-
-function line(answer: TimingAnswer, section: Section): NumberLine[] {
-  const interval =
-    answer.low === undefined || answer.high === undefined
-      ? undefined
-      : positionInterval(section, answer.low, answer.high);
-  const level = answer.level === undefined ? "" : `${percent(answer.level)}, `;
-  switch (answer.method) {
-    case "common-end":
-      return answer.p === undefined
-        ? [{ label: "All at one level?", value: outcomeWords(answer.outcome) }]
-        : [
-            {
-              label: "All at one level?",
-              value: pValue(answer.p),
-              note: `${answer.taxa} taxa, exact chi\u2011square`,
-            },
-          ];
-    case "common-end-given":
-      return [
-        {
-          label: "The common level, if there is one",
-          value: interval ?? outcomeWords(answer.outcome),
-          note: `${level}all taxa pooled`,
-        },
-      ];
-    case "common-end-joint":
-      return [
-        {
-          label: "Levels at which all could have ended",
-          value: answer.outcome === "empty" ? "none" : (interval ?? outcomeWords(answer.outcome)),
-          note: `${level}none where one level is refuted`,
-        },
-      ];
-    case "confidence-levels":
-      return [
-        {
-          label: `All at ${answer.horizon ?? "the horizon"}?`,
-          value: answer.p === undefined ? outcomeWords(answer.outcome) : pValue(answer.p),
-          note: `${answer.taxa} taxa, exact Kolmogorov\u2011Smirnov`,
-        },
-      ];
-    case "duration-lower":
-      return [
-        {
-          label: "It took at least",
-          value: answer.low === undefined ? outcomeWords(answer.outcome) : inMetres(answer.low),
-          note: `${level}all taxa`,
-        },
-      ];
-    case "duration-box":
-      return [
-        {
-          label:
-            answer.taxa === answer.taxaOfSet ? "It took at most" : "It took at most, of the best sampled",
-          value:
-            answer.high === undefined
-              ? `not bounded (${outcomeWords(answer.outcome)})`
-              : inMetres(answer.high),
-          note: `${level}${answer.taxa} of ${answer.taxaOfSet} taxa${isBeyond(answer, section) ? ", longer than the section" : ""}`,
-        },
-      ];
-    case "centroid":
-      return [
-        {
-          label: "Recovery falls upward?",
-          value: answer.p === undefined ? outcomeWords(answer.outcome) : pValue(answer.p),
-          note: "pooled centroid of finds, one-sided",
-        },
-      ];
-    default:
-      return [];
-  }
-}
-
-function outcomeWords(outcome: Outcome): string {
-  return {
-    closed: "closed",
-    open: "open",
-    "leaves-section": "beyond the section",
-    "in-hiatus": "inside a gap",
-    empty: "none",
-    undefined: "cannot be asked of so few finds",
-    "not-applicable": "does not apply here",
-  }[outcome];
-}

@@ -60,7 +60,7 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "range-finds-outside-searches": (told) =>
     say`${plural(told.n("finds"), "find")} of ${taxa(told)} lie outside samples searched for their group and do not count in the method of sampled horizons.`,
   "range-unequal-effort": ({ text }) =>
-    say`Effort differs between the samples searched for ${text("groups")}; the method of sampled horizons takes it as equal.`,
+    say`Efforts of searches cannot be compared (${text("groups")}); the method of sampled horizons takes detection as equal.`,
   "range-few-horizons": (told) =>
     say`${taxa(told)} with four horizons or fewer: such intervals mostly reflect the assumption.`,
   "range-reaches-top": (told) =>
@@ -100,7 +100,23 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "timing-reaches-top": ({ text, n }) =>
     say`${plural(n("taxa"), "candidate")} found up to the highest sample (${name(text("names"))}); the answer stands with and without.`,
   "timing-turns-on-top": ({ n }) =>
-    say`The answer turns on taxa that reach the top: ${pValue(n("all"))} with them, ${pValue(n("closed"))} without.`,
+    say`The answer turns on taxa that reach the top: ${pValue(n("all"))} with them, ${pValue(n("other"))} without.`,
+  "timing-isolated-finds": ({ text, n }) =>
+    say`${plural(n("taxa"), "highest find")} out of keeping with those below (${name(text("names"))}), as reworked or leaked ones would be; the answer stands with and without.`,
+  "timing-turns-on-isolated": ({ n }) =>
+    say`The answer turns on isolated highest finds: ${pValue(n("all"))} with them, ${pValue(n("other"))} without.`,
+  "timing-trimmed-finds": ({ text, n }) =>
+    say`Finds of ${plural(n("taxa"), "candidate")} above the main horizon, up to the reworking ceiling, left out (${name(text("names"))}); the answer stands with and without.`,
+  "timing-turns-on-trimming": ({ n }) =>
+    say`The answer turns on finds below the reworking ceiling: ${pValue(n("all"))} without them, ${pValue(n("other"))} with them.`,
+  "timing-clustered-at-surfaces": ({ n }) =>
+    say`${n("count")} of ${plural(n("taxa"), "last find")} cluster just below surfaces (${pValue(n("p"))}): a pulse there may be the record breaking off.`,
+  "timing-surface-not-placed": ({ text }) =>
+    say`${text("name")}, named in timing.surfaces.horizons, is not placed here.`,
+  "timing-steps-overlap": ({ text, n }) =>
+    say`${plural(n("taxa"), "taxon", "taxa")} declared in both steps, ${name(text("names"))}, enter neither.`,
+  "timing-steps-incomplete": ({ text, n }) =>
+    say`${plural(n("taxa"), "name")} in timing.steps match no candidate or group here: ${name(text("names"))}.`,
   "timing-survivors": ({ text, n }) =>
     say`${plural(n("taxa"), "survivor")} never ${n("taxa") === 1 ? "enters" : "enter"} a test: ${name(text("names"))}.`,
   "timing-late-starts": ({ text, n }) =>
@@ -135,9 +151,11 @@ const notes: ReadonlySet<string> = new Set([
   "timing-box-rarest",
   "timing-late-starts",
   "timing-set-incomplete",
+  "timing-steps-incomplete",
   "timing-survivors",
   "timing-ties",
   "timing-too-few-horizons",
+  "timing-trimmed-finds",
   "timing-uninformative-taxa",
   "timing-window-widened",
   "zero-set-aside",

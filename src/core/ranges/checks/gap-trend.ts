@@ -1,5 +1,5 @@
 import { normalCdf } from "../../numeric/normal.ts";
-import { midranks, rankCorrelation } from "./gaps.ts";
+import { midranks, rankCorrelation } from "../../numeric/ranks.ts";
 
 export interface GapTrend {
   /** Kendall's tau-b of gap length against order; above 0: gaps lengthen upward, recovery declines. */
@@ -52,12 +52,24 @@ function exactLowerTail(groups: readonly number[], observed: number): number {
   let placed = 0;
   let chances = Float64Array.of(1);
   for (const size of groups.toSorted((a, b) => b - a)) {
-    if (placed > 0) chances = convolve(chances, mannWhitney(size, placed));
+    if (placed > 0)
+      chances = size === 1 ? oneMore(chances, placed) : convolve(chances, mannWhitney(size, placed));
     placed += size;
   }
   let sum = 0;
   for (let i = 0; i <= Math.min(observed, chances.length - 1); i++) sum += chances[i];
   return Math.min(1, sum);
+}
+
+/** One more value among those placed is out of order with 0 to all of them, each as likely. */
+function oneMore(chances: Float64Array, placed: number): Float64Array<ArrayBuffer> {
+  const next = new Float64Array(chances.length + placed);
+  for (let i = 0, sum = 0; i < next.length; i++) {
+    if (i < chances.length) sum += chances[i];
+    if (i > placed) sum -= chances[i - placed - 1];
+    next[i] = sum / (placed + 1);
+  }
+  return next;
 }
 
 function convolve(a: Float64Array, b: Float64Array): Float64Array<ArrayBuffer> {
