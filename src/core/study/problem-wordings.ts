@@ -123,6 +123,16 @@ const wordings = {
       "a value above 0 in a trace element",
       "Does 0 mean not detected? Then write bdl and the detection_limit, or <limit. It is used as 0 until then.",
     ),
+  "isotope-scale-mixed": (p) =>
+    error(
+      `one scale for an isotope ratio in a section (${p.detail})`,
+      "Convert the values to one scale; these are left out until then. Scales are never mixed.",
+    ),
+  "isotope-scale-unsaid": (p) =>
+    caution(
+      `the scale of the other rows (${p.detail})`,
+      "Write the scale beside per mil, such as \u2030 VPDB. It is taken as the same until then.",
+    ),
   "below-detection-limit": (p) =>
     caution(
       `a value of at least its detection_limit (${p.detail})`,

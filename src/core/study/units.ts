@@ -69,27 +69,55 @@ export interface MeasurementUnit {
   readonly quantity: Quantity;
   readonly unit: string;
   readonly factor: number;
+  /** The scale that a per mil unit names. */
+  readonly scale?: string;
 }
 
-/** Mass fractions and their factors to ng/g; `ppt` is 1e-12, never parts per thousand. */
+/** Mass fractions by their own names, in powers of ten of 1 ng/g; `ppt` is 1e-12, never parts per thousand. */
 const massFractions = new Map<string, number>([
-  ["ppt", 1e-3],
-  ["pg/g", 1e-3],
-  ["ng/kg", 1e-3],
-  ["ppb", 1],
-  ["ng/g", 1],
-  ["ug/kg", 1],
-  ["ppm", 1e3],
-  ["ug/g", 1e3],
-  ["mg/kg", 1e3],
-  ["wt%", 1e7],
-  ["wt.%", 1e7],
-  ["%", 1e7],
-  ["weight%", 1e7],
-  ["mass%", 1e7],
+  ["ppt", -3],
+  ["ppb", 0],
+  ["ppm", 3],
+  ["wt%", 7],
+  ["wt.%", 7],
+  ["%", 7],
+  ["weight%", 7],
+  ["mass%", 7],
 ]);
 
-const perMil = new Set(["per mil", "permil", "per mill", "permille", "per mille", "‰", "o/oo", "0/00"]);
+/** Powers of ten of a gram (SI prefixes). */
+const grams = new Map<string, number>([
+  ["fg", -15],
+  ["pg", -12],
+  ["ng", -9],
+  ["ug", -6],
+  ["mg", -3],
+  ["g", 0],
+  ["kg", 3],
+]);
+
+/** Power of ten of 1 ng/g of a mass fraction: by name, or a mass by a mass. A mass by a volume is none. */
+function massFractionPower(unit: string): number | undefined {
+  const named = massFractions.get(unit);
+  if (named !== undefined) return named;
+  const [above, below, ...more] = unit.split("/").map((mass) => grams.get(mass));
+  return above === undefined || below === undefined || more.length > 0 ? undefined : above - below + 9;
+}
+
+const perMil = new Set(["per mil", "permil", "per mill", "permille", "per mille", "\u2030", "o/oo", "0/00"]);
+
+/** International scales of isotope ratios, by their names without hyphens. */
+const isotopeScales = new Set(["VPDB", "PDB", "VSMOW", "SMOW", "VCDT", "CDT", "AIR"]);
+
+/** A per mil unit parted from the scale that it names: `\u2030 VPDB`, `per mil (V-SMOW)`, `permil vs PDB`. */
+function partScale(unit: string): { readonly name: string; readonly scale?: string } {
+  const [, name, written] = /^(.*?)[\s,(]+(?:vs\.?\s+)?([a-z-]+)\)?$/.exec(unit) ?? [];
+  const scale = written?.toUpperCase().replaceAll("-", "");
+  return name !== undefined && scale !== undefined && isotopeScales.has(scale)
+    ? { name, scale }
+    : { name: unit };
+}
+
 const percents = new Set(["percent", "per cent", "vol%", "% grains", "% of grains"]);
 const counts = new Set(["count", "counts", "grains", "specimens", "spherules", "number", "n"]);
 const polarities = new Set(["polarity", "n/r", "sign"]);
@@ -115,7 +143,7 @@ const perGram =
 
 /** Every unit accepted for a measurement, in words. */
 export const measurementUnitsInWords =
-  "ppt (1e-12), pg/g, ng/kg, ppb, ng/g, ug/kg, ppm, ug/g, mg/kg, wt%, per mil, percent, grains/g, grains/kg, count, polarity, ratio, SI, m3/kg or degrees";
+  "ppt (1e-12), pg/g, ng/kg, ppb, ng/g, ug/kg, ppm, ug/g, mg/kg, wt%, per mil (with its scale: \u2030 VPDB), percent, grains/g, grains/kg, count, polarity, ratio, SI, m3/kg or degrees";
 
 /** Both micro signs, minus signs and negative powers as one plain spelling. */
 function plainUnit(written: string): string {
@@ -137,9 +165,12 @@ const perMilPossible = /^(?:δ|d|delta)[\s_-]*\d+|salinity|isotop/i;
 export function measurementUnit(written: string, analyte: string): MeasurementUnit | "refused" | undefined {
   const unit = plainUnit(written);
   const given = written.trim();
-  const factor = massFractions.get(unit);
+  const power = massFractionPower(unit);
   if (unit === "ppt" && perMilPossible.test(analyte)) return "refused";
-  if (factor !== undefined) return { quantity: "mass-fraction", unit: "ng/g", factor };
+  if (power !== undefined) return { quantity: "mass-fraction", unit: "ng/g", factor: Number(`1e${power}`) };
+  const { name, scale } = partScale(unit);
+  if (scale !== undefined && perMil.has(name))
+    return { quantity: "per-mil", unit: `\u2030 ${scale}`, factor: 1, scale };
   if (perMil.has(unit)) return { quantity: "per-mil", unit: "‰", factor: 1 };
   if (percents.has(unit)) return { quantity: "percent", unit: given, factor: 1 };
   if (counts.has(unit)) return { quantity: "count", unit: given, factor: 1 };

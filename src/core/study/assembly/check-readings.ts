@@ -1,9 +1,36 @@
 import type { Reading } from "../model.ts";
 import type { measurements } from "../tables/measurements.ts";
 import { plainAnalyte } from "./analyte-names.ts";
-import type { Assembly, Row } from "./context.ts";
+import { type Assembly, gather, type Row } from "./context.ts";
 
 type MeasurementRow = Row<typeof measurements>;
+
+/** Tells, for the rows of one table in turn, whether the scale of an isotope ratio is that of the rows before. */
+export function scaleRegister({
+  problems,
+}: Assembly): (row: MeasurementRow, scale: string | undefined) => boolean {
+  const known = new Map<string, { readonly scale: string; readonly row: number }>();
+  const unsaid = new Map<string, MeasurementRow[]>();
+  return (row, scale) => {
+    const key = JSON.stringify([row.cells.section, plainAnalyte(row.cells.analyte)]);
+    if (scale === undefined) gather(unsaid, key, row);
+    const first = known.get(key) ?? (scale === undefined ? undefined : { scale, row: row.origin.row });
+    if (first === undefined) return true;
+    known.set(key, first);
+    const detail = `${first.scale}, as in row ${first.row}`;
+    const placeOf = ({ cells, origin }: MeasurementRow) => ({
+      ...origin,
+      column: "unit",
+      found: cells.unit,
+      detail,
+    });
+    for (const bare of unsaid.get(key) ?? []) problems.addOnce(key, "isotope-scale-unsaid", placeOf(bare));
+    unsaid.delete(key);
+    if (scale === undefined || scale === first.scale) return true;
+    problems.addOnce(JSON.stringify([key, scale]), "isotope-scale-mixed", placeOf(row));
+    return false;
+  };
+}
 
 /** Trials bound the successes; an error must say what it is. */
 export function isSound({ cells, origin }: MeasurementRow, reading: Reading, assembly: Assembly): boolean {

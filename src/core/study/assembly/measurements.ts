@@ -5,7 +5,7 @@ import type { RowOf } from "../tables/declare.ts";
 import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
 import { plainAnalyte } from "./analyte-names.ts";
-import { isSound, tellBelowLimit } from "./check-readings.ts";
+import { isSound, scaleRegister, tellBelowLimit } from "./check-readings.ts";
 import { type Assembly, type BySection, gather, present, type ReadSheet, type Row } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
 import { onlyNumber } from "./one-mend.ts";
@@ -24,13 +24,14 @@ export function readMeasurements(
   const read = assembly.sheets.get("measurements");
   const lists = new Map<string, Measurement[]>();
   if (!read) return lists;
+  const isOnScale = scaleRegister(assembly);
   for (const row of rowsOf(measurements, assembly)) {
     const { cells, origin } = row;
     const frame = frameFor(cells.section, origin, { frames, read, assembly });
     const place = frame && placeOf(cells, frame, { origin, samples, assembly });
     if (!frame || !place) continue;
     const value = valueOf(row, read, assembly);
-    if (value)
+    if (value && isOnScale(row, value.unit.scale))
       gather(lists, frame.name, measurementOf(row, place, { ...value, density: frame.declared.densityGCm3 }));
   }
   return lists;

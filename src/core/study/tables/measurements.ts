@@ -36,7 +36,7 @@ export const measurements = table({
     unit: {
       type: "text",
       required: true,
-      help: "ppt (1e-12), pg/g, ppb, ng/g, ppm, ug/g, mg/kg, wt%, per mil, grains/g, count, ratio, polarity ...",
+      help: "ppt (1e-12), pg/g, ppb, ng/g, ppm, ug/g, mg/kg, wt%, per mil (its scale beside it: ‰ VPDB), grains/g, count, ratio, polarity ...",
       dwc: "measurementUnit",
       synonyms: ["units"],
       example: "ng/g",

@@ -32,6 +32,54 @@ const canonical = (value: number, unit: string): number => {
   return value * meant.factor;
 };
 
+// units-by-definition.csv: made by units_by_definition.py beside it, which names the definitions.
+const definitions = readWrittenCsv(
+  readFileSync(new URL("units-by-definition.csv", import.meta.url), "utf8"),
+).rows.map(([kind, unit, factor]) => ({ kind, unit, factor: Number(factor) }));
+
+describe("units against their definitions", () => {
+  it.each(definitions)("1 $unit", ({ kind, unit, factor }) => {
+    if (kind === "length") expect(toMetres(1, unit)).toBe(factor);
+    else expect(measurementUnit(unit, "iridium")).toMatchObject({ quantity: kind, factor });
+  });
+
+  it("a mass or an amount by a volume, an amount by a mass, and a part by volume are no mass fractions", () => {
+    for (const unit of [
+      "mg/L",
+      "ug/l",
+      "µg L⁻¹",
+      "ng/mL",
+      "g/m3",
+      "kg/m³",
+      "mol/kg",
+      "µmol/g",
+      "ppmv",
+      "g",
+      "g/g/g",
+    ])
+      expect([unit, measurementUnit(unit, "iridium")]).toEqual([unit, undefined]);
+  });
+
+  it.each([
+    ["‰ VPDB", "VPDB"],
+    ["per mil (V-PDB)", "VPDB"],
+    ["permil vs. PDB", "PDB"],
+    ["‰, VSMOW", "VSMOW"],
+    ["per mil V-CDT", "VCDT"],
+    ["‰ AIR", "AIR"],
+    ["‰ VSMOW", "VSMOW"],
+    ["‰", undefined],
+  ])("%s keeps its scale, and its number", (written, scale) => {
+    const unit = measurementUnit(written, "d18o");
+    expect(unit).toMatchObject({ quantity: "per-mil", factor: 1 });
+    expect(typeof unit === "object" ? unit.scale : unit).toBe(scale);
+  });
+
+  it("per mil of an unknown scale is not read", () => {
+    expect(measurementUnit("‰ XYZ", "d18o")).toBeUndefined();
+  });
+});
+
 describe("conversion factors", () => {
   it.each(cases.filter(({ name }) => name.startsWith("conc")))("$name", ({ inputs, expected, tolerance }) => {
     near(canonical(Number(inputs.value), String(inputs.unit)), expected, tolerance);

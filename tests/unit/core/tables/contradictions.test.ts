@@ -131,6 +131,63 @@ describe("contents that rock cannot have", () => {
   });
 });
 
+const ratios = (...rows: readonly string[]) =>
+  studyFrom({
+    "sections.csv": lines("section,axis,unit", "Orskel Ledge,height,m", "Tamber Quarry,height,m"),
+    "measurements.csv": lines("section,analyte,value,unit,position", ...rows),
+  });
+
+const mainNamed = (horizon: string, more: Record<string, string> = {}, same: readonly unknown[] = []) =>
+  problemsOf(
+    studyFrom(
+      {
+        "sections.csv": sections,
+        "horizons.csv": horizonsOf("Orskel Ledge,Veyra layer,impact,9"),
+        ...more,
+      },
+      { boundary: { horizon, same } },
+    ),
+    "main-horizon-unknown",
+  );
+
+describe("isotope ratios on two scales", () => {
+  it("are never mixed in a section: the second is told and left out, apart it stays", () => {
+    const study = ratios(
+      "Orskel Ledge,d18o,-2,‰ VPDB,1",
+      "Orskel Ledge,δ18O,28,‰ VSMOW,2",
+      "Orskel Ledge,d13c,1,‰ VPDB,2",
+      "Tamber Quarry,d18o,28,‰ VSMOW,1",
+    );
+    expect(problemsOf(study, "isotope-scale-mixed")).toMatchObject([
+      {
+        severity: "error",
+        row: 3,
+        column: "unit",
+        found: "‰ VSMOW",
+        expected: expect.stringContaining("VPDB, as in row 2"),
+      },
+    ]);
+    expect(
+      study.sections.map(({ measurements }) => measurements.map(({ unit, givenUnit }) => [unit, givenUnit])),
+    ).toEqual([
+      [
+        ["‰ VPDB", "‰ VPDB"],
+        ["‰ VPDB", "‰ VPDB"],
+      ],
+      [["‰ VSMOW", "‰ VSMOW"]],
+    ]);
+  });
+
+  it("are told where one row leaves its scale unsaid", () => {
+    const study = ratios("Orskel Ledge,d18o,-2,‰ VPDB,1", "Orskel Ledge,d18o,-1,‰,2");
+    expect(problemsOf(study, "isotope-scale-unsaid")).toMatchObject([{ severity: "caution", row: 3 }]);
+    expect(study.sections[0].measurements).toHaveLength(2);
+    const before = ratios("Orskel Ledge,d18o,-2,‰,1", "Orskel Ledge,d18o,-1,‰ VPDB,2");
+    expect(problemsOf(before, "isotope-scale-unsaid")).toMatchObject([{ row: 2, found: "‰" }]);
+    expect(ratios("Orskel Ledge,d18o,-2,‰,1", "Orskel Ledge,d18o,-1,‰,2").problems).toEqual([]);
+  });
+});
+
 describe("a value below its detection limit", () => {
   it.each([
     ["0.04", "0.05", 1],
@@ -199,24 +256,12 @@ describe("a covered interval outside the section", () => {
 });
 
 describe("a main horizon that nobody placed", () => {
-  const named = (horizon: string, more: Record<string, string> = {}, same: readonly unknown[] = []) =>
-    problemsOf(
-      studyFrom(
-        {
-          "sections.csv": sections,
-          "horizons.csv": horizonsOf("Orskel Ledge,Veyra layer,impact,9"),
-          ...more,
-        },
-        { boundary: { horizon, same } },
-      ),
-      "main-horizon-unknown",
-    );
   const iridium = {
     "measurements.csv": lines("section,analyte,value,unit,position", "Orskel Ledge,Ir,1,ng/g,2"),
   };
 
   it("is an error that names the nearest", () => {
-    expect(named("Veyra leyer")).toMatchObject([
+    expect(mainNamed("Veyra leyer")).toMatchObject([
       {
         severity: "error",
         file: "settings.json",
@@ -225,13 +270,15 @@ describe("a main horizon that nobody placed", () => {
         mend: expect.stringContaining("Did you mean Veyra layer?"),
       },
     ]);
-    expect(named("nickel-1", iridium)).toHaveLength(1);
+    expect(mainNamed("nickel-1", iridium)).toHaveLength(1);
   });
 
   it("is none where it is placed, declared, or may be found in what was measured", () => {
-    expect(named("Veyra layer")).toEqual([]);
-    expect(named("iridium-2", iridium)).toEqual([]);
-    expect(named("one", iridium, [{ name: "one", horizons: [["Orskel Ledge", "iridium-1"]] }])).toEqual([]);
+    expect(mainNamed("Veyra layer")).toEqual([]);
+    expect(mainNamed("iridium-2", iridium)).toEqual([]);
+    expect(mainNamed("one", iridium, [{ name: "one", horizons: [["Orskel Ledge", "iridium-1"]] }])).toEqual(
+      [],
+    );
   });
 });
 
