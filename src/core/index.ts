@@ -2,7 +2,13 @@ export { formatGiven, givenToHeight, heightToGiven, type OwnScale } from "./stud
 export type * from "./study/model.ts";
 export { suggestName } from "./study/nearest.ts";
 export type { Fix, Problem } from "./study/problem.ts";
-export { knownSettingPaths, mergeSettings, type SetSetting, setSetting, settingPath } from "./study/setting-path.ts";
+export {
+  knownSettingPaths,
+  mergeSettings,
+  type SetSetting,
+  setSetting,
+  settingPath,
+} from "./study/setting-path.ts";
 export { defaultSettings, type Settings, settingsSchema } from "./study/settings.ts";
 export { tablesGuide } from "./study/table-guide.ts";
 export { tableSchema } from "./study/table-schema.ts";
@@ -17,5 +23,6 @@ export { type PackageResource, tableResource, writeDataPackage } from "./tables/
 export { readSources } from "./tables/read-sources.ts";
 export { type ReadStudyOptions, readStudy } from "./tables/read-study.ts";
 export { packStudy } from "./tables/sources/pack-study.ts";
+export { packWorkbook, type WorkbookTable } from "./tables/sources/pack-workbook.ts";
 export { studyTemplate } from "./tables/templates.ts";
 export { type CsvCell, type WrittenCsv, writeCsv } from "./tables/write-csv.ts";

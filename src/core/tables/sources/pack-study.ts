@@ -10,6 +10,10 @@ export const packStudy = (files: ReadonlyMap<string, Uint8Array>): Uint8Array =>
     level: 6,
   });
 
+/** The parts of a workbook as one file, in the order given. */
+export const packParts = (parts: ReadonlyMap<string, Uint8Array>): Uint8Array =>
+  zipSync(Object.fromEntries(parts), { ...withoutDate, level: 6 });
+
 /** Files as a zip archive without compression. */
 export const storeFiles = (files: ReadonlyMap<string, Uint8Array>) =>
   zipSync(Object.fromEntries(files), { ...withoutDate, level: 0 });

@@ -1,3 +1,4 @@
+import { decimalStyles } from "./workbook-decimals.ts";
 import { xmlTags } from "./xml-tags.ts";
 
 /** A cell of a workbook whose value is not there, in the spreadsheet's own coordinates. */
@@ -14,9 +15,15 @@ export interface WorkbookScan {
   readonly rows: number;
   readonly columns: number;
   readonly faulty: readonly FaultyCell[];
+  /** Decimals that number cells are shown with, by sheet and by cell ("B7"); absent where no format fixes them. */
+  readonly decimals: ReadonlyMap<string, ReadonlyMap<string, number>>;
 }
 
 const decoder = (bytes: Uint8Array): string => new TextDecoder("utf-8").decode(bytes);
+
+/** The letters of a column, counted from 0. */
+export const columnLetters = (column: number): string =>
+  (column >= 26 ? columnLetters(Math.floor(column / 26) - 1) : "") + String.fromCharCode(65 + (column % 26));
 
 const columnNumber = (letters: string): number =>
   Array.from(letters).reduce((number, letter) => number * 26 + letter.charCodeAt(0) - 64, 0);
@@ -27,9 +34,13 @@ export function scanWorkbook(files: ReadonlyMap<string, Uint8Array>): WorkbookSc
   let rows = 0;
   let columns = 0;
   const faulty: FaultyCell[] = [];
+  const styles = decimalStyles(decoder(files.get("xl/styles.xml") ?? new Uint8Array()));
+  const decimals = new Map<string, Map<string, number>>();
   for (const [path, bytes] of files) {
     const sheet = names.get(path);
     if (sheet === undefined) continue;
+    const own = new Map<string, number>();
+    decimals.set(sheet, own);
     let cell = { isError: false, hasFormula: false, at: "", found: "" };
     for (const { name, kind, attributes, text } of xmlTags(decoder(bytes))) {
       const at = attributes.get("r") ?? "";
@@ -37,6 +48,8 @@ export function scanWorkbook(files: ReadonlyMap<string, Uint8Array>): WorkbookSc
       else if (name === "c" && kind !== "close") {
         cell = { isError: attributes.get("t") === "e", hasFormula: false, at, found: "" };
         const [, letters = "", digits = "0"] = /^([A-Z]{1,7})(\d{1,15})$/.exec(at) ?? [];
+        const shown = styles.get(Number(attributes.get("s") ?? 0));
+        if (shown !== undefined) own.set(at, shown);
         columns = Math.max(columns, columnNumber(letters));
         rows = Math.max(rows, Number(digits));
       } else if (name === "f" && kind !== "close") cell = { ...cell, hasFormula: true, found: `=${text}` };
@@ -49,7 +62,7 @@ export function scanWorkbook(files: ReadonlyMap<string, Uint8Array>): WorkbookSc
       }
     }
   }
-  return { rows, columns, faulty };
+  return { rows, columns, faulty, decimals };
 }
 
 /** Names of the sheets by the path of their part. */

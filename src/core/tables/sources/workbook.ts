@@ -2,7 +2,8 @@ import type { ProblemList } from "../../study/problem-list.ts";
 import { MOST_COLUMNS } from "../limits.ts";
 import { storeFiles } from "./pack-study.ts";
 import { csvOf } from "./quoted-csv.ts";
-import { scanWorkbook } from "./workbook-scan.ts";
+import { shownNumber } from "./workbook-decimals.ts";
+import { columnLetters, scanWorkbook } from "./workbook-scan.ts";
 
 /** Most rows of a sheet (the format's own limit). */
 const MOST_ROWS = 1_048_576;
@@ -22,12 +23,12 @@ const sheetFile = (workbook: string, sheet: string): string =>
   `${workbook} [${sheet.replace(/[[\]/\\]/g, " ")}]`;
 
 /**
- * Every sheet of a workbook that holds something, as comma-separated text by file name: numbers in the shortest text of
- * their double, dates as 2024-05-31, formulas by the value last worked out; a cell without a value is told.
+ * Every sheet of a workbook that holds something, as comma-separated text by file name: numbers with the decimals that
+ * their format shows, else in the shortest text of their double, dates as 2024-05-31, formulas by the value last worked out; a cell without a value is told.
  */
 export async function readWorkbook(source: WorkbookSource): Promise<ReadonlyMap<string, Uint8Array>> {
   const { path, parts, problems } = source;
-  const { rows, columns, faulty } = scanWorkbook(parts);
+  const { rows, columns, faulty, decimals } = scanWorkbook(parts);
   const tables = new Map<string, Uint8Array>();
   if (columns > MOST_COLUMNS) {
     problems.add("too-many-columns", {
@@ -50,7 +51,12 @@ export async function readWorkbook(source: WorkbookSource): Promise<ReadonlyMap<
     });
   for (const { sheet, data } of await sheetsOf(source)) {
     const width = data.reduce((most, cells) => Math.max(most, cells.length), 0);
-    if (width > 0) tables.set(sheetFile(path, sheet), csvOf(data.map((cells) => texts(cells, width))));
+    const shown = decimals.get(sheet) ?? new Map<string, number>();
+    if (width > 0)
+      tables.set(
+        sheetFile(path, sheet),
+        csvOf(data.map((cells, row) => texts(cells, { width, row, shown }))),
+      );
   }
   return tables;
 }
@@ -68,8 +74,21 @@ async function sheetsOf({ path, parts, problems }: WorkbookSource) {
   }
 }
 
-const texts = (cells: readonly unknown[], width: number): readonly string[] =>
-  Array.from({ length: width }, (_, at) => cellText(cells[at]));
+interface RowOfSheet {
+  readonly width: number;
+  /** Counted from 0. */
+  readonly row: number;
+  /** Decimals that cells are shown with. */
+  readonly shown: ReadonlyMap<string, number>;
+}
+
+function texts(cells: readonly unknown[], { width, row, shown }: RowOfSheet): readonly string[] {
+  return Array.from({ length: width }, (_, at) => {
+    const cell = cells[at];
+    if (shown.size === 0 || typeof cell !== "number") return cellText(cell);
+    return shownNumber(cell, shown.get(`${columnLetters(at)}${row + 1}`));
+  });
+}
 
 function cellText(cell: unknown): string {
   if (cell === null || cell === undefined) return "";
