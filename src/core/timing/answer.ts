@@ -8,6 +8,7 @@ import type { Section, Study } from "../study/model.ts";
 import { timingBasis } from "./basis.ts";
 import { besideCautions, comparedCautions, setCaseCautions, topCautions } from "./cautions.ts";
 import { comparedSets } from "./compared-sets.ts";
+import { lastFindsCurve } from "./last-finds-curve.ts";
 import { levelCurve } from "./level-curve.ts";
 import { candidateRanges } from "./range-data.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
@@ -44,7 +45,7 @@ export function answerTiming(study: Study, input: TimingInput, progress?: Progre
     offsets: [],
     membership: [],
     densities: [],
-    lastFinds: [],
+    lastFinds: answered.flatMap((a) => a.lastFinds),
     distrusted: answered.flatMap((a) => a.distrusted),
     cautions: answered.flatMap((a) => a.cautions),
     basis: timingBasis,
@@ -55,6 +56,7 @@ interface AnsweredSection {
   readonly cases: readonly SetCase[];
   readonly answers: readonly TimingAnswer[];
   readonly curves: readonly LevelCurve[];
+  readonly lastFinds: Timing["lastFinds"];
   readonly distrusted: Timing["distrusted"];
   readonly cautions: readonly Caution[];
 }
@@ -78,6 +80,7 @@ function answerSection(section: Section, study: Study, input: TimingInput): Answ
     cases,
     answers: cases.flatMap(answerSet),
     curves: cases.flatMap((setCase) => (window === undefined ? [] : (levelCurve(setCase, window) ?? []))),
+    lastFinds: cases.flatMap(lastFindsCurve),
     distrusted: cases
       .filter(({ set }) => declines(set.ranges))
       .map(({ set }) => ({ section: section.name, set: set.set })),

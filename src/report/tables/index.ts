@@ -1,6 +1,7 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import { alignmentTable, tiesTable } from "./alignment.ts";
 import { candidatesTable, findsTable } from "./finds.ts";
+import { lastFindsTable } from "./last-finds.ts";
 import { anomaliesTable, flagsTable, markersTable } from "./markers.ts";
 import { rangeEndsTable } from "./ranges.ts";
 import type { ResultDeclaration, ResultTable } from "./result-table.ts";
@@ -17,6 +18,7 @@ export const resultDeclarations: readonly ResultDeclaration[] = [
   candidatesTable,
   rangeEndsTable,
   timingTable,
+  lastFindsTable,
 ];
 
 /** The result tables of an analysis, as they are written to CSV. */
