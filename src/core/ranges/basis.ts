@@ -3,6 +3,7 @@ import {
   chenLiu,
   holland2003,
   marshall1997,
+  mosimann1962,
   solow1993,
   solow2005,
   straussSadler,
@@ -65,5 +66,17 @@ export const sampledBasis: Basis = {
     "The bound is exact and never covers less than its level.",
   ],
   sources: [weissMarshall, chenLiu],
+  after: true,
+};
+
+export const countsBasis: Basis = {
+  method: "counts",
+  statement:
+    "Counts per sample: given the total, specimens fall on samples as a Dirichlet-multinomial of weights kappa times effort, and p(j) is the chance that j further samples inside the true range hold none; the bound is the first barren sample above the largest j with p(j) above 1 - C. The point is the median of the posterior of the end over kappa from 1/16 to 16.",
+  assumptions: [
+    "Counts are negative binomial with the same mean and clumping per unit of effort throughout the true range; specimens are never taken as independent finds.",
+    "Kappa is taken as known at its largest likelihood: with few samples the bound is somewhat too low, and the posterior bound in the note is wider.",
+  ],
+  sources: [mosimann1962],
   after: true,
 };

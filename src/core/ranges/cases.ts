@@ -184,6 +184,7 @@ function caseOf(upright: Upright): Omit<RangeCase, "reachesTop" | "reachesBottom
     ...given,
     ...asGiven,
     taxon,
+    searched,
     constant,
     weighing:
       weighing.kind === "unavailable"

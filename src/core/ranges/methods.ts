@@ -1,5 +1,6 @@
 import type { Basis } from "../basis.ts";
-import { recoveryBasis, sampledBasis, uniformBasis, windowBasis } from "./basis.ts";
+import { countsBasis, recoveryBasis, sampledBasis, uniformBasis, windowBasis } from "./basis.ts";
+import { countsEnd } from "./counts-end.ts";
 import { decliningEnd } from "./declining-end.ts";
 import { gapQuantileEnd } from "./gap-quantile-end.ts";
 import { gapRankEnd } from "./gap-rank-end.ts";
@@ -40,6 +41,7 @@ export interface RangeEstimator {
 export const rangeMethods: Readonly<Record<RangeMethod, RangeEstimator>> = {
   uniform: { end: uniformEnd, both: uniformBoth, basis: uniformBasis },
   recovery: { end: recoveryEnd, basis: recoveryBasis },
+  counts: { end: countsEnd, basis: countsBasis },
   window: { end: windowEnd, basis: windowBasis },
   sampled: { end: sampledEnd, basis: sampledBasis },
   "uniform-bayes": { end: uniformBayesEnd, both: uniformBayesBoth, basis: uniformBayesBasis },

@@ -18,6 +18,7 @@ export function mirroredTaxon(taxon: LocalTaxon): LocalTaxon {
     ...taxon,
     heightsM,
     samples: taxon.samples.toReversed(),
+    ...(taxon.counts === undefined ? {} : { counts: taxon.counts.toReversed() }),
     lastInclusiveM: heightsM[heightsM.length - 1],
   };
 }

@@ -4,7 +4,7 @@ import type { InCoordinate } from "./in-coordinate.ts";
 import type { RecoverySource } from "./recovery.ts";
 import type { RangeEnd } from "./result.ts";
 import type { RockBreak } from "./rock-breaks.ts";
-import type { SampledRange } from "./sampled-horizons.ts";
+import type { SampledHorizon, SampledRange } from "./sampled-horizons.ts";
 
 /**
  * One end of one taxon's range in one section, with all that it is estimated from. Every estimator looks for an upper
@@ -27,6 +27,8 @@ export interface RangeCase extends InCoordinate {
   /** Found in the highest (lowest) sample searched for its group: that end is cut off by the section. */
   readonly reachesTop: boolean;
   readonly reachesBottom: boolean;
+  /** Levels at which the group was looked for, from below upward. */
+  readonly searched: readonly SampledHorizon[];
   /** Undefined where no find lies in a sample searched for the group. */
   readonly sampled?: SampledRange;
   readonly horizon?: HorizonAsked;

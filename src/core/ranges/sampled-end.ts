@@ -32,7 +32,8 @@ export function sampledEnd(rangeCase: RangeCase): RangeEnd {
     return { ...counted, outcome: "leaves-section", note: note(cutOffNote(rangeCase), outside) };
   const { words, ...posterior } = posteriorFields(rangeCase, sampled);
   const odds = sampled.effort !== undefined && "odds of a find in proportion to effort";
-  const bound = boundOf(rangeCase, sampled);
+  const furthest = furthestOf(sampled, rangeCase.confidence);
+  const bound = horizonBound(rangeCase, furthest, sampled.barrenM);
   return {
     ...counted,
     ...atHorizon(rangeCase, sampled),
@@ -42,13 +43,20 @@ export function sampledEnd(rangeCase: RangeCase): RangeEnd {
   };
 }
 
-function boundOf(rangeCase: RangeCase, sampled: SampledRange): Pick<RangeEnd, "highM" | "outcome" | "note"> {
+/**
+ * The bound where the first `furthest` barren horizons above the last find may lie inside the range: the next one, below
+ * which the end lies then.
+ */
+export function horizonBound(
+  rangeCase: RangeCase,
+  furthest: number,
+  barrenM: readonly number[],
+): Pick<RangeEnd, "highM" | "outcome" | "note"> {
   const { above, highest } = wordsOf(rangeCase);
-  const { barrenAbove } = sampled.count;
-  const furthest = furthestOf(sampled, rangeCase.confidence);
+  const barrenAbove = barrenM.length;
   if (furthest === barrenAbove)
     return { outcome: "open", note: `all ${barrenAbove} barren horizons ${above} may lie inside the range` };
-  const highM = sampled.barrenM[furthest];
+  const highM = barrenM[furthest];
   if (highM < rangeCase.range.lastM)
     return {
       outcome: "empty",

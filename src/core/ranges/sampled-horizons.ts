@@ -10,6 +10,10 @@ export interface SampledHorizon {
   readonly samples: readonly string[];
   /** Only where efforts differ between the horizons of the group, all in one unit. */
   readonly effort?: number;
+  /** False where a search there was for presence or on a scale: a count is not to be had. */
+  readonly isCounted: boolean;
+  /** Specimens of the group that counting stopped at, where it is told. */
+  readonly countedTo?: number | undefined;
 }
 
 /** A taxon's finds among the horizons that were sampled for its group. */
@@ -38,12 +42,28 @@ export function sampledHorizons(
   group: string,
   coordinate: Coordinate,
 ): readonly SampledHorizon[] {
-  const horizons: { heightM: number; samples: string[] }[] = [];
+  const horizons: {
+    heightM: number;
+    samples: string[];
+    isCounted: boolean;
+    countedTo?: number | undefined;
+  }[] = [];
   const searches = section.searches.filter((s) => s.group === group && !isInGap(s.heightM, coordinate));
-  for (const { heightM, sample } of searches.toSorted((a, b) => a.heightM - b.heightM)) {
+  for (const { heightM, sample, counting, countedTo } of searches.toSorted((a, b) => a.heightM - b.heightM)) {
     const last = horizons[horizons.length - 1];
-    if (last !== undefined && heightM - last.heightM <= SAME_LEVEL_M) last.samples.push(sample);
-    else horizons.push({ heightM, samples: [sample] });
+    const isCounted = counting === "count";
+    if (last !== undefined && heightM - last.heightM <= SAME_LEVEL_M) {
+      last.samples.push(sample);
+      last.isCounted &&= isCounted;
+      last.countedTo =
+        last.countedTo === undefined || countedTo === undefined ? undefined : last.countedTo + countedTo;
+    } else
+      horizons.push({
+        heightM,
+        samples: [sample],
+        isCounted,
+        ...(countedTo === undefined ? {} : { countedTo }),
+      });
   }
   return horizons;
 }

@@ -15,7 +15,7 @@ export type EffortReason =
 export function searchEffort(
   section: Section,
   group: string,
-  horizons: readonly SampledHorizon[],
+  horizons: readonly Pick<SampledHorizon, "samples">[],
 ): SearchEffort {
   const searches = section.searches.filter((search) => search.group === group);
   const bySample = new Map(searches.map((search) => [search.sample, search.effort]));
@@ -41,7 +41,7 @@ export function isUnequal(effort: SearchEffort): effort is SearchEffort & { read
 /** Where efforts are told for some searches but cannot be compared, the reason. */
 export function effortsNotComparable(section: Section, group: string): EffortReason | undefined {
   const searches = section.searches.filter((search) => search.group === group);
-  const horizons = searches.map(({ sample, heightM }) => ({ heightM, samples: [sample] }));
+  const horizons = searches.map(({ sample }) => ({ samples: [sample] }));
   const effort = searchEffort(section, group, horizons);
   return effort.kind === "known" || effort.reason === "no effort given" ? undefined : effort.reason;
 }

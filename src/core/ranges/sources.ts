@@ -103,3 +103,10 @@ export const chenLiu: Source = {
   title: "Statistical applications of the Poisson-binomial and conditional Bernoulli distributions",
   place: "Statistica Sinica 7:875-892",
 };
+export const mosimann1962: Source = {
+  authors: "Mosimann, J. E.",
+  year: 1962,
+  title:
+    "On the compound multinomial distribution, the multivariate beta-distribution, and correlations among proportions",
+  place: "Biometrika 49:65-82",
+};

@@ -38,6 +38,8 @@ export interface LocalTaxon {
   readonly heightsM: readonly number[];
   /** The samples behind them; undefined where a find was given by position alone or its sample was not searched. */
   readonly samples: readonly (string | undefined)[];
+  /** Specimens at each level, all finds that count there added; undefined where one came without a count. Absent without any. */
+  readonly counts?: readonly (number | undefined)[];
   /** Highest in-place level under the strict reading of names (reworked finds never count), whatever the settings. */
   readonly lastStrictM?: number;
   /** Highest level under the inclusive reading. */

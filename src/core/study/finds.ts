@@ -20,16 +20,16 @@ export function settleFinds(study: Study): SettledFinds {
 }
 
 function settleSection(section: Section, study: Study): SettledFinds {
-  const judged = section.occurrences.map((occurrence) => judge(occurrence, section, study));
+  const judged = Array.from(section.occurrences, (occurrence) => judge(occurrence, section, study));
   const byTaxon = groupBy(judged, (find) => find.accepted);
   const searched = new Set(section.searches.map((s) => searchKey(s.sample, s.group)));
   const finds: Find[] = [];
   const taxa: LocalTaxon[] = [];
   for (const [name, ofTaxon] of byTaxon) {
     const merged = mergeHorizons(ofTaxon);
-    finds.push(...merged.map(({ named: _named, strict: _strict, inclusive: _inclusive, ...find }) => find));
+    finds.push(...merged.map(settledFind));
     const used = merged.filter((find) => find.used === "yes");
-    if (used.length > 0) taxa.push(localTaxon(name, { section, study, used, judged: ofTaxon, searched }));
+    if (used.length > 0) taxa.push(localTaxon(name, { section, study, used, judged: merged, searched }));
   }
   const found = new Set(taxa.map((t) => t.taxon));
   for (const range of section.publishedRanges) {
@@ -45,6 +45,17 @@ interface JudgedFind extends Find {
   readonly named: string;
   readonly strict: boolean;
   readonly inclusive: boolean;
+  readonly count?: number;
+}
+
+function settledFind({
+  named: _named,
+  strict: _strict,
+  inclusive: _inclusive,
+  count: _count,
+  ...find
+}: JudgedFind): Find {
+  return find;
 }
 
 function judge(occurrence: Occurrence, section: Section, study: Study): JudgedFind {
@@ -61,6 +72,7 @@ function judge(occurrence: Occurrence, section: Section, study: Study): JudgedFi
     accepted: acceptedName(operationalName(occurrence), study.taxa),
     heightM,
     ...(occurrence.sample === undefined ? {} : { sample: occurrence.sample }),
+    ...(occurrence.count === undefined ? {} : { count: occurrence.count }),
     used: asRead === undefined ? "yes" : "no",
     reason: asRead ?? (isMapped ? "fault-repeat-mapped" : "used"),
     strict: occurrence.reworked === "no" && reasonUnder("strict") === undefined,
@@ -165,6 +177,7 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
   const upward = used.toSorted((a, b) => a.heightM - b.heightM);
   const lastStrictM = highest(judged.filter((find) => find.strict));
   const inclusive = levelsOf(judged.filter((find) => find.inclusive));
+  const counts = upward.map((find) => countAt(find, judged));
   return {
     section: section.name,
     taxon,
@@ -176,10 +189,25 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
         ? sample
         : undefined,
     ),
+    ...(counts.every((count) => count === undefined) ? {} : { counts }),
     ...(lastStrictM === undefined ? {} : { lastStrictM }),
     lastInclusiveM: inclusive.at(-1) ?? upward[upward.length - 1].heightM,
     ...(inclusive.length > upward.length ? { inclusiveHeightsM: inclusive } : {}),
   };
+}
+
+/** Specimens of all finds that make one horizon; undefined where one of them was not counted. */
+function countAt({ sample, heightM }: JudgedFind, judged: readonly JudgedFind[]): number | undefined {
+  const here = judged.filter(
+    (find) =>
+      find.used !== "no" &&
+      ((sample !== undefined && find.sample === sample) ||
+        Math.abs(find.heightM - heightM) <= LEVEL_TOLERANCE_M),
+  );
+  return here.reduce<number | undefined>(
+    (sum, { count }) => (sum === undefined || count === undefined ? undefined : sum + count),
+    0,
+  );
 }
 
 function publishedTaxon(taxon: string, range: PublishedRange, section: Section, study: Study): LocalTaxon {

@@ -121,6 +121,7 @@ function withoutSmeared(taxon: LocalTaxon, boundary: Boundary, ceilingM: number 
     ...taxon,
     heightsM,
     samples: places.map((i) => taxon.samples[i]),
+    ...(taxon.counts === undefined ? {} : { counts: places.map((i) => taxon.counts?.[i]) }),
     lastInclusiveM: Math.max(heightsM[heightsM.length - 1], ...inclusive),
   };
 }

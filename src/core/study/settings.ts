@@ -132,6 +132,7 @@ export const settingsSchema = v.strictObject({
                 "recovery",
                 "window",
                 "sampled",
+                "counts",
                 "uniform-bayes",
                 "window-trend",
                 "gap-rank",
