@@ -1,5 +1,6 @@
 import { proxy, releaseProxy, wrap } from "comlink";
 import type { PageWork } from "./page-worker.ts";
+import { receivedStudy } from "./received-study.ts";
 import type { AnalysisJob, Runner, Watch } from "./runner.ts";
 
 /**
@@ -29,7 +30,8 @@ export function pageRunner(startWorker: () => Worker): Runner {
         });
       });
       try {
-        return await Promise.race([work.analyse(job, proxy(onProgress)), failed]);
+        const analysis = await Promise.race([work.analyse(job, proxy(onProgress)), failed]);
+        return { ...analysis, study: receivedStudy(analysis.study) };
       } finally {
         work[releaseProxy]();
         if (worker === own) end();

@@ -18,17 +18,26 @@ export function codesFor(values: number, rows: number): Codes {
 
 export const valueAt = <T>({ values, codes }: Coded<T>, row: number): T => values[codes[row]];
 
-/** The same rows with every distinct value turned into another, once. */
-export const mapValues = <T, U>({ values, codes }: Coded<T>, turn: (value: T) => U): Coded<U> => ({
-  values: values.map(turn),
-  codes,
-});
+/** The same rows with every distinct value turned into another, once; those that become one are one. */
+export function mapValues<T, U>({ values, codes }: Coded<T>, turn: (value: T) => U): Coded<U> {
+  const turned = encode(values.map(turn));
+  if (turned.values.length === values.length) return { values: turned.values, codes };
+  const merged = codesFor(turned.values.length, codes.length);
+  for (let row = 0; row < codes.length; row++) merged[row] = turned.codes[codes[row]];
+  return { values: turned.values, codes: merged };
+}
 
-/** Some of the rows, in the order given. */
+/** Some of the rows, in the order given, with the values that stand in them, in the order met. */
 export function takeRows<T>({ values, codes }: Coded<T>, rows: Int32Array): Coded<T> {
-  const taken = codesFor(values.length, rows.length);
-  for (let at = 0; at < rows.length; at++) taken[at] = codes[rows[at]];
-  return { values, codes: taken };
+  const placeOf = new Int32Array(values.length);
+  const met: T[] = [];
+  for (let at = 0; at < rows.length; at++) {
+    const code = codes[rows[at]];
+    if (placeOf[code] === 0) placeOf[code] = met.push(values[code]);
+  }
+  const taken = codesFor(met.length, rows.length);
+  for (let at = 0; at < rows.length; at++) taken[at] = placeOf[codes[rows[at]]] - 1;
+  return { values: met, codes: taken };
 }
 
 /** How often each distinct value stands in the column. */

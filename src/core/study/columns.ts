@@ -33,14 +33,25 @@ interface KnownName {
   readonly language?: string;
 }
 
+type KnownNames = ReadonlyMap<string, KnownName>;
+
+/** Names worked out once for a declaration, which never changes: a header is sought in many rows. */
+const workedOut = new WeakMap<TableDeclaration["columns"], KnownNames>();
+
+function knownNames({ columns }: TableDeclaration): KnownNames {
+  const names = workedOut.get(columns) ?? namesOf(columns);
+  workedOut.set(columns, names);
+  return names;
+}
+
 /** Every name a column is known by, plain, to what it is; the declared names come before those in other languages. */
-function knownNames(table: TableDeclaration): ReadonlyMap<string, KnownName> {
+function namesOf(declared: TableDeclaration["columns"]): KnownNames {
   const names = new Map<string, KnownName>();
   const add = (written: string, known: KnownName) => {
     const name = plainName(written);
     if (!names.has(name)) names.set(name, known);
   };
-  const columns = Object.entries(table.columns);
+  const columns = Object.entries(declared);
   for (const [column] of columns) add(column, { column, by: "name" });
   for (const [column, { dwc, synonyms = [] }] of columns) {
     if (dwc !== undefined) add(dwc, { column, by: "darwin-core" });
@@ -94,15 +105,16 @@ export function recogniseColumns(
   headers: readonly string[],
   table: TableDeclaration,
 ): readonly RecognisedColumn[] {
-  const names = knownNames(table);
-  return withoutRivals(headers.map((header) => recognise(header, names, table)));
+  return withoutRivals(headers.map(columnReader(table)));
 }
 
-function recognise(
-  header: string,
-  names: ReadonlyMap<string, KnownName>,
-  table: TableDeclaration,
-): RecognisedColumn {
+/** What each header by itself means in a table, whatever stands beside it. */
+export function columnReader(table: TableDeclaration): (header: string) => RecognisedColumn {
+  const names = knownNames(table);
+  return (header) => recognise(header, names, table);
+}
+
+function recognise(header: string, names: KnownNames, table: TableDeclaration): RecognisedColumn {
   const trimmed = header.trim();
   const choice = table.chosen?.get(trimmed);
   if (choice?.is === "unused") return { header, by: "chosen" };

@@ -1,13 +1,12 @@
+import type { Occurrences } from "./occurrence.ts";
+import type { Origin } from "./origin.ts";
 import type { Problem } from "./problem.ts";
 import type { Settings } from "./settings.ts";
 import type { SheetRows } from "./sheet-rows.ts";
 import type { TableName } from "./tables/index.ts";
 
-/** Where a value came from: the file's name and its row as a spreadsheet counts it (the header is row 1). */
-export interface Origin {
-  readonly file: string;
-  readonly row: number;
-}
+export type { Occurrence, Occurrences, Qualifier } from "./occurrence.ts";
+export type { Origin } from "./origin.ts";
 
 export type LengthUnit = "m" | "cm" | "mm" | "ft";
 export type Axis = "height" | "depth";
@@ -127,7 +126,7 @@ export interface Section {
   /** From below upward. */
   readonly samples: readonly Sample[];
   readonly searches: readonly Search[];
-  readonly occurrences: readonly Occurrence[];
+  readonly occurrences: Occurrences;
   readonly publishedRanges: readonly PublishedRange[];
   readonly measurements: readonly Measurement[];
   readonly horizons: readonly GivenHorizon[];
@@ -199,37 +198,6 @@ export interface Search {
   readonly countedTo?: number;
   readonly derived: boolean;
   readonly origin?: Origin;
-}
-
-export type Qualifier =
-  | "cf."
-  | "aff."
-  | "?"
-  | "? genus"
-  | "ex gr."
-  | "sp."
-  | "spp."
-  | "indet."
-  | "sp. nov."
-  | "s.l."
-  | "s.s.";
-
-export interface Occurrence {
-  /** The name as written. */
-  readonly verbatim: string;
-  /** The clean name without qualifier; the taxon this find belongs to before synonymy. */
-  readonly taxon: string;
-  readonly qualifier?: Qualifier;
-  /** Absent where the find was given by position alone. */
-  readonly sample?: string;
-  readonly heightM: number;
-  readonly positionErrorM?: number;
-  readonly leg?: string;
-  readonly count?: number;
-  readonly abundance?: string;
-  readonly reworked: "no" | "suspected" | "yes";
-  readonly doubtful: boolean;
-  readonly origin: Origin;
 }
 
 export interface PublishedRange {

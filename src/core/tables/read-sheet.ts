@@ -148,7 +148,7 @@ function cellsOf(
     guarded.has(header) ? mapValues(cells[column], takeOffApostrophe) : cells[column],
   );
   const leftOut = odd.filter((one) => isLeftOut(one, rows[one.index], { width: columns.length, source }));
-  if (leftOut.length === 0) return { rows: columnRows(read, rows.length), rowNumbers: [...rows] };
+  if (leftOut.length === 0) return { rows: columnRows(read, rows.length), rowNumbers: Array.from(rows) };
   const without = new Set(leftOut.map(({ index }) => index));
   const kept = Int32Array.from(rows.keys()).filter((index) => !without.has(index));
   const keptColumns = read.map((column) => takeRows(column, kept));

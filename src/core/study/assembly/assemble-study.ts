@@ -1,4 +1,5 @@
 import type { Section, Study } from "../model.ts";
+import { occurrenceColumns } from "../occurrence-list.ts";
 import { planes } from "../tables/planes.ts";
 import { checkSection, checkStudy } from "./checks.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
@@ -94,7 +95,8 @@ function extremes(own: Contents): { readonly bottomM: number; readonly topM: num
     topM = Math.max(topM, top);
   };
   for (const { baseM, topM } of [...own.samples, ...own.beds, ...own.measurements]) widen(baseM, topM);
-  for (const { heightM } of [...own.horizons, ...own.occurrences]) widen(heightM, heightM);
+  for (const { heightM } of own.horizons) widen(heightM, heightM);
+  for (const heightM of occurrenceColumns(own.occurrences).heightM.values) widen(heightM, heightM);
   for (const { firstM, lastM } of own.publishedRanges) widen(firstM, lastM);
   return bottomM === Infinity ? { bottomM: 0, topM: 0 } : { bottomM, topM };
 }

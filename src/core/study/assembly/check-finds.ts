@@ -1,9 +1,12 @@
+import { valueAt } from "../coded.ts";
 import { hasNoRecovery, isWithin } from "../finds.ts";
 import { formatGiven } from "../heights.ts";
 import { sameLevelM } from "../legs.ts";
-import type { Occurrence, Section } from "../model.ts";
-import { type Assembly, gather } from "./context.ts";
+import type { Section } from "../model.ts";
+import { occurrenceColumns } from "../occurrence-list.ts";
+import type { Assembly } from "./context.ts";
 import { isToGenus } from "./occurrences.ts";
+import { firstAlike } from "./repeated-rows.ts";
 
 /** Cautions on finds that give no range, contradict each other, or lie where nobody could look. */
 export function checkFinds(section: Section, assembly: Assembly): void {
@@ -13,64 +16,75 @@ export function checkFinds(section: Section, assembly: Assembly): void {
   checkHidden(section, assembly);
 }
 
-function checkLevels({ name, occurrences }: Section, assembly: Assembly): void {
-  const byTaxon = new Map<string, Occurrence[]>();
-  for (const find of occurrences) if (find.count !== 0 && !isToGenus(find)) gather(byTaxon, find.taxon, find);
-  for (const [taxon, finds] of byTaxon) {
-    if (finds.some(({ heightM }) => Math.abs(heightM - finds[0].heightM) > sameLevelM)) continue;
-    const code = finds.length === 1 ? "one-occurrence" : "one-level";
-    const found = `${taxon} in ${name}`;
-    assembly.problems.addOnce(name, code, { ...finds[0].origin, column: "taxon", found });
+function checkLevels({ name, occurrences }: Section, { problems }: Assembly): void {
+  const { taxon, qualifier, count, heightM, file, rows } = occurrenceColumns(occurrences);
+  const isNoSpecies = qualifier.values.map((sign) => isToGenus({ qualifier: sign }));
+  const seen = taxon.values.map(() => ({ first: -1, finds: 0, levels: 1 }));
+  for (let find = 0; find < rows.length; find++) {
+    if (valueAt(count, find) === 0 || isNoSpecies[qualifier.codes[find]]) continue;
+    const of = seen[taxon.codes[find]];
+    if (of.finds === 0) of.first = find;
+    of.finds += 1;
+    if (Math.abs(valueAt(heightM, find) - valueAt(heightM, of.first)) > sameLevelM) of.levels = 2;
+  }
+  for (const { first, finds, levels } of seen.filter(({ finds }) => finds > 0).toSorted(inOrder)) {
+    if (levels > 1) continue;
+    const code = finds === 1 ? "one-occurrence" : "one-level";
+    const found = `${valueAt(taxon, first)} in ${name}`;
+    problems.addOnce(name, code, { file, row: rows[first], column: "taxon", found });
   }
 }
+
+const inOrder = (a: { readonly first: number }, b: { readonly first: number }) => a.first - b.first;
 
 /** One taxon named twice for a sample, alike in all but its number: a slip, or two parts of one count. */
 function checkTwice({ name, occurrences }: Section, { problems }: Assembly): void {
-  const seen = new Map<string, Map<string, Occurrence>>();
-  for (const find of occurrences) {
-    if (find.sample === undefined) continue;
-    const ofTaxon = seen.get(find.taxon) ?? new Map<string, Occurrence>();
-    seen.set(find.taxon, ofTaxon);
-    const first = ofTaxon.get(find.sample);
-    if (first === undefined) ofTaxon.set(find.sample, find);
-    else if (isAlike(first, find)) {
-      problems.addOnce(name, "find-twice", {
-        ...find.origin,
-        column: "taxon",
-        found: `${find.taxon} in ${find.sample}`,
-        detail: String(first.origin.row),
-      });
+  const { taxon, sample, qualifier, reworked, doubtful, file, rows } = occurrenceColumns(occurrences);
+  const isAlike = (a: number, b: number) =>
+    [qualifier, reworked, doubtful].every(
+      (column) => valueAt<unknown>(column, a) === valueAt<unknown>(column, b),
+    );
+  const firstLike = firstAlike([taxon.codes, sample.codes], rows.length);
+  for (let find = 0; find < rows.length; find++) {
+    const first = valueAt(sample, find) === undefined ? undefined : firstLike(find);
+    if (first !== undefined && isAlike(first, find)) {
+      const found = `${valueAt(taxon, find)} in ${valueAt(sample, find)}`;
+      const detail = String(rows[first]);
+      problems.addOnce(name, "find-twice", { file, row: rows[find], column: "taxon", found, detail });
     }
   }
 }
-
-const isAlike = (a: Occurrence, b: Occurrence): boolean =>
-  a.qualifier === b.qualifier && a.reworked === b.reworked && a.doubtful === b.doubtful;
 
 const absent = /^(?:0|-|\u2013|absent|none|barren)$/i;
 
 /** A count and an abundance in one row of which one says found and the other not found. */
 function checkAbundance({ name, occurrences }: Section, { problems }: Assembly): void {
-  for (const { count, abundance, origin } of occurrences) {
-    if (count === undefined || abundance === undefined) continue;
-    if ((count === 0) === absent.test(abundance)) continue;
-    const found = `count ${count}, abundance ${abundance}`;
-    problems.addOnce(name, "count-against-abundance", { ...origin, column: "count", found });
+  const { count, abundance, file, rows } = occurrenceColumns(occurrences);
+  const isAbsent = abundance.values.map((text) => text !== undefined && absent.test(text));
+  for (let find = 0; find < rows.length; find++) {
+    const [number, text] = [valueAt(count, find), valueAt(abundance, find)];
+    if (number === undefined || text === undefined) continue;
+    if ((number === 0) === isAbsent[abundance.codes[find]]) continue;
+    const found = `count ${number}, abundance ${text}`;
+    problems.addOnce(name, "count-against-abundance", { file, row: rows[find], column: "count", found });
   }
 }
 
 /** Finds inside rock that nobody could search. */
 function checkHidden(section: Section, assembly: Assembly): void {
+  const { taxon, sample, count, heightM, file, rows } = occurrenceColumns(section.occurrences);
   const hidden = section.intervals.filter(hasNoRecovery);
-  for (const find of section.occurrences) {
-    if (find.count === 0) continue;
-    const interval = hidden.find((each) => isWithin(find.heightM, each));
-    if (interval === undefined) continue;
-    const ends = [interval.baseM, interval.topM].map((heightM) => formatGiven(heightM, section));
+  const hiding = heightM.values.map((height) => hidden.find((each) => isWithin(height, each)));
+  if (hiding.every((interval) => interval === undefined)) return;
+  for (let find = 0; find < rows.length; find++) {
+    const interval = hiding[heightM.codes[find]];
+    if (interval === undefined || valueAt(count, find) === 0) continue;
+    const ends = [interval.baseM, interval.topM].map((height) => formatGiven(height, section));
     assembly.problems.addOnce(`${section.name} ${interval.origin.row}`, "find-in-hidden-rock", {
-      ...find.origin,
-      column: find.sample === undefined ? "position" : "sample",
-      found: `${find.taxon} at ${formatGiven(find.heightM, section)}`,
+      file,
+      row: rows[find],
+      column: valueAt(sample, find) === undefined ? "position" : "sample",
+      found: `${valueAt(taxon, find)} at ${formatGiven(valueAt(heightM, find), section)}`,
       detail: `the ${interval.kind} interval (${ends.join(" to ")})`,
     });
   }

@@ -1,5 +1,8 @@
+import { countValues } from "../coded.ts";
 import { acceptedName } from "../finds.ts";
 import type { Origin, Section, Study, Taxon } from "../model.ts";
+import type { OccurrenceColumns } from "../occurrence.ts";
+import { occurrenceColumns } from "../occurrence-list.ts";
 import type { Assembly } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
 import { similarNames } from "./similar-names.ts";
@@ -79,10 +82,20 @@ function taxonUses(
     if (origin.file === listed) use(uses, name, origin, true);
   }
   for (const { occurrences, publishedRanges } of sections) {
-    for (const { taxon, origin } of occurrences) use(uses, taxon, origin);
+    useFinds(uses, occurrenceColumns(occurrences));
     for (const { taxon, origin } of publishedRanges) use(uses, taxon, origin);
   }
   return uses;
+}
+
+function useFinds(uses: Map<string, Use>, { taxon, file, rows }: OccurrenceColumns): void {
+  const counts = countValues(taxon);
+  for (const [code, name] of taxon.values.entries()) {
+    const row = rows[taxon.codes.indexOf(code)];
+    use(uses, name, { file, row });
+    const known = uses.get(name);
+    if (known) known.uses += counts[code] - 1;
+  }
 }
 
 function sectionUses(sections: readonly Section[]): ReadonlyMap<string, Use> {
@@ -90,7 +103,7 @@ function sectionUses(sections: readonly Section[]): ReadonlyMap<string, Use> {
   for (const section of sections) {
     const { occurrences, measurements, publishedRanges, samples, horizons, beds } = section;
     const lists = [occurrences, measurements, publishedRanges, samples, horizons, beds];
-    const origin = section.origin ?? lists.find((list) => list.length > 0)?.[0].origin;
+    const origin = section.origin ?? lists.find((list) => list.length > 0)?.at(0)?.origin;
     if (origin === undefined) continue;
     const count = lists.reduce((sum, { length }) => sum + length, 0);
     uses.set(section.name, { origin, uses: count, isListed: false });

@@ -1,8 +1,10 @@
+import { valueAt } from "../coded.ts";
 import { acceptedName } from "../finds.ts";
 import { formatGiven } from "../heights.ts";
 import { sameLevelM } from "../legs.ts";
-import type { Origin, Section, Study, Taxon } from "../model.ts";
+import type { Occurrence, Origin, Section, Study, Taxon } from "../model.ts";
 import { suggestName } from "../nearest.ts";
+import { occurrenceColumns } from "../occurrence-list.ts";
 import { excerpt } from "../problem-wordings.ts";
 import { checkFinds } from "./check-finds.ts";
 import { checkNames } from "./check-names.ts";
@@ -36,12 +38,22 @@ export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: As
 
 function checkEnds(section: Section, { bottomM, topM }: DeclaredEnds, assembly: Assembly): void {
   const detail = `${formatGiven(section.bottomM, section)} to ${formatGiven(section.topM, section)}`;
+  const isInside = isInsideOf(section);
   for (const { heightM, origin, column } of placesOf(section, bottomM !== undefined && topM !== undefined)) {
-    if (heightM >= section.bottomM - sameLevelM && heightM <= section.topM + sameLevelM) continue;
+    if (isInside(heightM)) continue;
     const found = formatGiven(heightM, section);
     assembly.problems.addOnce(section.name, "outside-section", { ...origin, column, found, detail });
   }
 }
+
+const isInsideOf =
+  ({ bottomM, topM }: Section) =>
+  (heightM: number): boolean =>
+    heightM >= bottomM - sameLevelM && heightM <= topM + sameLevelM;
+
+/** Finds, where any of them lies outside: most studies have none. */
+const findsOutside = (section: Section): Iterable<Occurrence> =>
+  occurrenceColumns(section.occurrences).heightM.values.every(isInsideOf(section)) ? [] : section.occurrences;
 
 /** Every level that a section's rows place, with the column that places it. */
 function* placesOf(
@@ -52,8 +64,8 @@ function* placesOf(
   readonly origin: Origin;
   readonly column: string;
 }> {
-  const { samples, occurrences, measurements, horizons, beds, publishedRanges } = section;
-  for (const list of [samples, occurrences, measurements, horizons])
+  const { samples, measurements, horizons, beds, publishedRanges } = section;
+  for (const list of [samples, findsOutside(section), measurements, horizons])
     for (const { heightM, origin } of list) yield { heightM, origin, column: "position" };
   // Where no ends are declared, the section is what was searched and logged, and rock beyond it may be covered.
   const intervals = isDeclared ? section.intervals : [];
@@ -113,7 +125,9 @@ function checkSets(
 ): void {
   const known = new Set(taxa.keys());
   for (const { occurrences, publishedRanges } of sections) {
-    for (const { taxon, qualifier } of occurrences) if (qualifier) known.add(`${taxon} ${qualifier}`);
+    const { taxon, qualifier } = occurrenceColumns(occurrences);
+    for (let find = 0; find < occurrences.length; find++)
+      if (valueAt(qualifier, find)) known.add(`${valueAt(taxon, find)} ${valueAt(qualifier, find)}`);
     for (const { taxon } of publishedRanges) known.add(taxon);
   }
   for (const [set, members] of Object.entries(settings.timing.sets))

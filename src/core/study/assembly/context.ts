@@ -1,4 +1,4 @@
-import type { Axis, Leg, LengthUnit, Origin, Section, Sheet } from "../model.ts";
+import type { Axis, Counting, Leg, LengthUnit, Origin, Section, Sheet } from "../model.ts";
 import type { ProblemList } from "../problem-list.ts";
 import type { Settings } from "../settings.ts";
 import type { RowOf, TableDeclaration } from "../tables/declare.ts";
@@ -12,10 +12,32 @@ export interface HeaderHint {
   readonly bracket?: string;
 }
 
+/** What a wide sheet says of who looked for what: a row a sample, a mark a taxon. */
+export interface Looked {
+  /** The taxa by the order of their marks, as written. */
+  readonly taxa: readonly string[];
+  readonly rows: readonly {
+    readonly section: string;
+    readonly sample: string;
+    readonly row: number;
+    readonly effort?: number;
+    /** Found or looked for in vain, blank, or said not to be looked for. */
+    readonly marks: readonly ("searched" | "blank" | "not-searched")[];
+  }[];
+  readonly counting: Counting;
+  readonly effortUnit?: string;
+  /** What a blank says where all cells of a group are blank in a sample; told and asked where nobody has said. */
+  readonly blank: "not-found" | "not-searched";
+  readonly isBlankChosen: boolean;
+}
+
 /** A usable table: its cells and what its headers say. */
 export interface ReadSheet {
   readonly sheet: Sheet;
   readonly hints: ReadonlyMap<string, HeaderHint>;
+  /** The sheet as it stands in its file, where `sheet` was made from it. */
+  readonly shown?: Sheet;
+  readonly looked?: Looked;
 }
 
 /** A validated row and where it stands. */

@@ -5,7 +5,7 @@ import { type Assembly, present, type SectionFrame } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
 import { type MeantName, meantNames } from "./meant-name.ts";
 import { lengthOf, type SlabCells, slabOf } from "./position.ts";
-import { rowsOf } from "./rows.ts";
+import { eachRow } from "./rows.ts";
 
 /** The samples of each section by name, and whether a table lists them. */
 export interface SampleLists {
@@ -24,7 +24,7 @@ export function readSamples(frames: Frames, assembly: Assembly): SampleLists {
     deriveSamples(bySection, frames, assembly);
     return { bySection, areListed: false, meant: meantIn(bySection) };
   }
-  for (const { cells, origin } of rowsOf(samples, assembly)) {
+  for (const { cells, origin } of eachRow(samples, assembly)) {
     const frame = frameFor(cells.section, origin, { frames, read, assembly });
     const slab = frame && slabOf(cells, frame, { origin, assembly });
     const known = frame && bySection.get(frame.name);
@@ -87,7 +87,9 @@ function deriveSamples(bySection: Derived, frames: Frames, assembly: Assembly): 
       top: at("top"),
       leg: at("leg"),
     };
-    for (const [index, cells] of [...read.sheet.rows].entries()) {
+    let index = -1;
+    for (const cells of read.sheet.rows) {
+      index += 1;
       const text = (column: keyof typeof columns) => (cells[columns[column]] ?? "").trim().normalize("NFC");
       const frame = frames.usable.get(text("section"));
       const name = text("sample");

@@ -1,48 +1,70 @@
-import type { Occurrence, Sample, Search, Taxon } from "../model.ts";
+import { valueAt } from "../coded.ts";
+import type { Occurrences, Origin, Sample, Search, Taxon } from "../model.ts";
+import { occurrenceColumns } from "../occurrence-list.ts";
+import { settingPath } from "../setting-path.ts";
+import type { RowOf } from "../tables/declare.ts";
 import { searches } from "../tables/searches.ts";
-import { type Assembly, type BySection, gather, present } from "./context.ts";
+import { type Assembly, type BySection, gather, type ReadSheet } from "./context.ts";
 import { type Frames, frameFor } from "./frame-for.ts";
 import type { SampleLists } from "./read-samples.ts";
-import { rowsOf } from "./rows.ts";
+import { firstAlike } from "./repeated-rows.ts";
+import { readCells } from "./rows.ts";
+import { searchesOfWide } from "./searches-of-wide.ts";
 import { ungrouped } from "./taxa.ts";
 
 export interface SearchContext {
   readonly samples: SampleLists;
   readonly taxa: ReadonlyMap<string, Taxon>;
-  readonly occurrences: BySection<Occurrence>;
+  readonly occurrences: ReadonlyMap<string, Occurrences>;
 }
 
 /** Who looked for what where: the rows of searches.csv, or every sample for every group found in its section. */
 export function readSearches(frames: Frames, context: SearchContext, assembly: Assembly): BySection<Search> {
   const read = assembly.sheets.get("searches");
+  const looked = assembly.sheets.get("occurrences");
+  if (!read && looked?.looked)
+    return searchesOfWide(looked.looked, { ...context, file: looked.sheet.file }, assembly);
   if (!read) return deriveSearches(context, assembly);
   const lists = new Map<string, Search[]>();
-  const first = new Map<string, number>();
-  for (const { cells, origin } of rowsOf(searches, assembly)) {
-    const frame = frameFor(cells.section, origin, { frames, read, assembly });
+  const cells = readCells(searches, assembly);
+  if (!cells) return lists;
+  const { columns, usable, rowNumbers, file } = cells;
+  const firstLike = firstAlike(
+    [columns.section.codes, columns.sample.codes, columns.group.codes],
+    rowNumbers.length,
+  );
+  const unit = read.hints.get("effort")?.bracket;
+  for (const index of usable) {
+    const origin = { file, row: rowNumbers[index] };
+    const frame = frameFor(valueAt(columns.section, index), origin, { frames, read, assembly });
     const known = frame && context.samples.bySection.get(frame.name);
     if (!frame || !known) continue;
-    const sample = known.get(cells.sample);
+    const group = valueAt(columns.group, index);
+    const written = valueAt(columns.sample, index);
+    const sample = known.get(written);
     if (!sample) {
-      const meant = context.samples.meant(frame.name, cells.sample);
-      assembly.problems.add("unknown-sample", { ...origin, column: "sample", found: cells.sample, ...meant });
+      const meant = context.samples.meant(frame.name, written);
+      assembly.problems.add("unknown-sample", { ...origin, column: "sample", found: written, ...meant });
       continue;
     }
-    const key = JSON.stringify([frame.name, sample.name, cells.group]);
-    const earlier = first.get(key);
-    if (earlier !== undefined) {
-      const detail = `the search of sample ${sample.name} for ${cells.group} (first in row ${earlier})`;
-      assembly.problems.add("redefined", { ...origin, column: "group", found: cells.group, detail });
+    const first = firstLike(index);
+    if (first !== undefined) {
+      const detail = `the search of sample ${sample.name} for ${group} (first in row ${rowNumbers[first]})`;
+      assembly.problems.add("redefined", { ...origin, column: "group", found: group, detail });
       continue;
     }
-    first.set(key, origin.row);
-    const { effort, effort_unit: effortUnit, counted_to: countedTo } = cells;
+    const effort = valueAt(columns.effort, index);
+    const effortUnit = valueAt(columns.effort_unit, index) ?? unit;
+    const countedTo = valueAt(columns.counted_to, index);
+    tellUnitless({ effort, effort_unit: effortUnit }, origin, { read, assembly });
     gather(lists, frame.name, {
       sample: sample.name,
-      group: cells.group,
+      group,
       heightM: sample.heightM,
-      ...present({ effort, effortUnit, countedTo }),
-      counting: cells.counting ?? "presence",
+      ...(effort === undefined ? {} : { effort }),
+      ...(effortUnit === undefined ? {} : { effortUnit }),
+      ...(countedTo === undefined ? {} : { countedTo }),
+      counting: valueAt(columns.counting, index) ?? "presence",
       derived: false,
       origin,
     });
@@ -51,7 +73,23 @@ export function readSearches(frames: Frames, context: SearchContext, assembly: A
   return lists;
 }
 
-const isFind = ({ count }: Occurrence): boolean => count !== 0;
+/** An effort of no unit cannot be set beside another. */
+function tellUnitless(
+  { effort, effort_unit: unit }: Pick<RowOf<typeof searches>, "effort" | "effort_unit">,
+  origin: Origin,
+  { read, assembly }: { readonly read: ReadSheet; readonly assembly: Assembly },
+): void {
+  const header = read.hints.get("effort");
+  if (effort === undefined || (unit ?? header?.bracket) !== undefined) return;
+  const detail = settingPath(["tables", read.sheet.file, "columns", header?.header ?? "effort", "unit"]);
+  assembly.problems.addOnce("effort", "effort-without-unit", {
+    ...origin,
+    column: "effort",
+    found: String(effort),
+    detail,
+  });
+}
+
 const groupOf = (taxa: ReadonlyMap<string, Taxon>, taxon: string): string =>
   taxa.get(taxon)?.group ?? ungrouped;
 
@@ -61,8 +99,7 @@ function deriveSearches(
 ): BySection<Search> {
   const lists = new Map<string, Search[]>();
   for (const [section, finds] of occurrences) {
-    const used = finds.filter(isFind);
-    const groups = [...new Set(used.map(({ taxon }) => groupOf(taxa, taxon)))].toSorted();
+    const groups = [...new Set(Array.from(foundTaxa(finds), (taxon) => groupOf(taxa, taxon)))].toSorted();
     const list = [...(samples.bySection.get(section)?.values() ?? [])].toSorted(upward);
     lists.set(
       section,
@@ -85,24 +122,37 @@ function deriveSearches(
 
 const upward = (a: Sample, b: Sample): number => a.heightM - b.heightM;
 
+/** The taxa of which something was found. */
+function foundTaxa(finds: Occurrences): ReadonlySet<string> {
+  const { taxon, count } = occurrenceColumns(finds);
+  const found = new Set<number>();
+  for (let find = 0; find < finds.length; find++)
+    if (valueAt(count, find) !== 0) found.add(taxon.codes[find]);
+  return new Set(Array.from(found, (code) => taxon.values[code]));
+}
+
 /** A find in a sample that nobody searched for its group. */
 function tellUnsearched(
   lists: BySection<Search>,
   { taxa, occurrences }: SearchContext,
-  assembly: Assembly,
+  { problems }: Assembly,
 ): void {
   for (const [section, finds] of occurrences) {
-    const searched = new Set(
-      (lists.get(section) ?? []).map(({ sample, group }) => JSON.stringify([sample, group])),
-    );
-    for (const { sample, taxon, count, origin } of finds) {
-      const group = groupOf(taxa, taxon);
-      if (sample === undefined || count === 0 || searched.has(JSON.stringify([sample, group]))) continue;
-      const subject = JSON.stringify([section, group]);
-      assembly.problems.addOnce(subject, "not-searched", {
-        ...origin,
+    const searched = new Map<string, Set<string>>();
+    for (const { sample, group } of lists.get(section) ?? [])
+      searched.set(sample, (searched.get(sample) ?? new Set()).add(group));
+    const { taxon, sample, count, file, rows } = occurrenceColumns(finds);
+    const groups = taxon.values.map((name) => groupOf(taxa, name));
+    const searchedIn = sample.values.map((name) => (name === undefined ? undefined : searched.get(name)));
+    for (let find = 0; find < finds.length; find++) {
+      const [name, group] = [valueAt(sample, find), groups[taxon.codes[find]]];
+      if (name === undefined || valueAt(count, find) === 0) continue;
+      if (searchedIn[sample.codes[find]]?.has(group)) continue;
+      problems.addOnce(JSON.stringify([section, group]), "not-searched", {
+        file,
+        row: rows[find],
         column: "sample",
-        found: `${taxon} in ${sample}`,
+        found: `${valueAt(taxon, find)} in ${name}`,
         detail: group,
       });
     }

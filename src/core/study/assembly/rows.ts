@@ -1,155 +1,148 @@
-import { type ParsedCell, parseCell, withDecimalPoint } from "../cells.ts";
-import { suggestName } from "../nearest.ts";
+import type { Coded } from "../coded.ts";
+import { columnsOf } from "../sheet-rows.ts";
 import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";
-import { isFixedUnit, lengthUnit } from "../units.ts";
 import type { Assembly, ReadSheet, Row } from "./context.ts";
-import { onlyNumber, onlyWord } from "./one-mend.ts";
-import { sectionUnit } from "./section-unit.ts";
+import { type CellPlace, readCell, tellCell } from "./read-cell.ts";
+import { repeatedRows } from "./repeated-rows.ts";
+
+/** The values of a declared table's cells by column, and the rows that can be used. */
+export interface ReadCells<T extends TableDeclaration> {
+  readonly file: string;
+  readonly columns: ColumnsOf<T>;
+  readonly rowNumbers: readonly number[];
+  /** Places of the rows without an error, from above downward. */
+  readonly usable: Int32Array;
+}
+
+type ColumnsOf<T extends TableDeclaration> = { readonly [K in keyof RowOf<T>]: Coded<RowOf<T>[K]> };
 
 /** The validated rows of a declared table; rows with an error are left out, and every error is told. */
-export function rowsOf<T extends TableDeclaration & { readonly name: TableName }>(
+export const rowsOf = <T extends TableDeclaration & { readonly name: TableName }>(
   table: T,
   assembly: Assembly,
-): readonly Row<T>[] {
-  const read = assembly.sheets.get(table.name);
-  if (!read) return [];
-  const rows: Row<T>[] = [];
-  const columns = Object.entries(table.columns).map(([name, column]) => ({
-    name,
-    column,
-    index: read.sheet.columns.indexOf(name),
-  }));
-  const seen = new Map<string, number>();
-  for (const [index, cells] of [...read.sheet.rows].entries()) {
-    const row = read.sheet.rowNumbers[index];
-    if (isRepeated(cells, row, { seen, read, assembly })) continue;
-    const values = readRow(cells, row, { table, columns, read, assembly });
-    if (values && isRowOf(values, table))
-      rows.push({ cells: values, origin: { file: read.sheet.file, row } });
-  }
-  return rows;
+): readonly Row<T>[] => [...eachRow(table, assembly)];
+
+/** The same rows one after the other, for tables too large to hold them all; every error is told at once. */
+export function eachRow<T extends TableDeclaration & { readonly name: TableName }>(
+  table: T,
+  assembly: Assembly,
+): Iterable<Row<T>> {
+  const read = readCells(table, assembly);
+  return read === undefined ? [] : rowsFrom(read, table);
 }
 
-/** True where every declared column has its parsed value; `readRow` has checked each one's type. */
-const isRowOf = <T extends TableDeclaration>(values: object, table: T): values is RowOf<T> =>
-  Object.keys(table.columns).every((name) => Object.hasOwn(values, name));
-
-interface Repeats {
-  readonly seen: Map<string, number>;
-  readonly read: ReadSheet;
-  readonly assembly: Assembly;
+function* rowsFrom<T extends TableDeclaration>(read: ReadCells<T>, table: T): Generator<Row<T>> {
+  const { file, rowNumbers, usable } = read;
+  const columns = Object.entries<Coded<unknown>>(read.columns);
+  for (const index of usable) {
+    const cells: Record<string, unknown> = {};
+    for (const [name, { values, codes }] of columns) cells[name] = values[codes[index]];
+    if (isRowOf(cells, table)) yield { cells, origin: { file, row: rowNumbers[index] } };
+  }
 }
 
-function isRepeated(cells: readonly string[], row: number, { seen, read, assembly }: Repeats): boolean {
-  const content = cells.map((cell) => cell.trim()).join("\u0000");
-  const first = seen.get(content);
-  if (first === undefined) {
-    seen.set(content, row);
-    return false;
-  }
-  assembly.problems.add("duplicate-row", {
-    file: read.sheet.file,
-    row,
-    found: cells.join(","),
-    detail: String(first),
-  });
+/** True where every declared column has its value; `readCells` has checked each one's type. */
+function isRowOf<T extends TableDeclaration>(cells: object, table: T): cells is RowOf<T> {
+  for (const name in table.columns) if (!(name in cells)) return false;
   return true;
+}
+
+const isColumnsOf = <T extends TableDeclaration>(columns: object, table: T): columns is ColumnsOf<T> =>
+  Object.keys(table.columns).every((name) => Object.hasOwn(columns, name));
+
+/** Reads every cell of a declared table, each distinct one once, and tells every error; undefined where there is no table. */
+export function readCells<T extends TableDeclaration & { readonly name: TableName }>(
+  table: T,
+  assembly: Assembly,
+): ReadCells<T> | undefined {
+  const read = assembly.sheets.get(table.name);
+  if (!read) return undefined;
+  const { sheet } = read;
+  const cells = columnsOf(sheet.rows, sheet.columns.length);
+  const declared = Object.entries(table.columns).map(([name, column]) =>
+    readColumn(cells[sheet.columns.indexOf(name)], column, { name, read }),
+  );
+  const columns = Object.fromEntries(declared.map(({ name, coded }) => [name, coded]));
+  const usable = usableRows({ table, read, assembly, cells, declared });
+  if (!isColumnsOf(columns, table)) return undefined;
+  return { file: sheet.file, columns, rowNumbers: sheet.rowNumbers, usable };
+}
+
+interface ReadColumn {
+  readonly name: string;
+  readonly column: ColumnDeclaration;
+  readonly coded: Coded<unknown>;
+  /** By code: 1 for what can be used, and for what is there. */
+  readonly isGood: Uint8Array;
+  readonly isThere: Uint8Array;
+}
+
+const NO_CELL: Coded<string> = { values: [""], codes: new Uint8Array(0) };
+
+function readColumn(
+  cells: Coded<string> | undefined,
+  column: ColumnDeclaration,
+  place: Pick<CellPlace, "name" | "read">,
+): ReadColumn {
+  const { values, codes } = cells ?? { ...NO_CELL, codes: new Uint8Array(place.read.sheet.rows.length) };
+  const read = values.map((text) => readCell(text, column, place));
+  return {
+    name: place.name,
+    column,
+    coded: { values: read.map(({ value }) => value), codes },
+    isGood: Uint8Array.from(read, ({ fault }) => (fault === undefined ? 1 : 0)),
+    isThere: Uint8Array.from(read, ({ value }) => (value === undefined ? 0 : 1)),
+  };
 }
 
 interface Reading {
   readonly table: TableDeclaration;
-  /** The declared columns and where they stand in the sheet (-1: absent). */
-  readonly columns: readonly {
-    readonly name: string;
-    readonly column: ColumnDeclaration;
-    readonly index: number;
-  }[];
   readonly read: ReadSheet;
   readonly assembly: Assembly;
+  readonly cells: readonly Coded<string>[];
+  readonly declared: readonly ReadColumn[];
 }
 
-function readRow(cells: readonly string[], row: number, reading: Reading): object | undefined {
-  const { table, columns, read, assembly } = reading;
-  const { file } = read.sheet;
-  const values = new Map<string, unknown>();
-  let isUsable = true;
-  for (const { name, column, index } of columns) {
-    const text = index === -1 ? "" : (cells[index] ?? "");
-    const { value, isGood } = readCell(text, column, { name, row, file, assembly, read, cells });
-    values.set(name, value);
-    isUsable &&= isGood;
+/** The rows that can be used; what is wrong with the others is told, from above downward. */
+function usableRows(reading: Reading): Int32Array {
+  const { table, read, assembly, cells, declared } = reading;
+  const { rows, rowNumbers, file } = read.sheet;
+  const firstLike = repeatedRows(cells, rows.length);
+  const faulty = declared.filter(({ isGood }) => isGood.includes(0));
+  const ways = (table.oneOf ?? []).map((set) => declared.filter(({ name }) => set.includes(name)));
+  const usable = new Int32Array(rows.length);
+  let count = 0;
+  for (let index = 0; index < rows.length; index++) {
+    const first = firstLike(index);
+    if (first !== undefined) {
+      const found = (rows.at(index) ?? []).join(",");
+      const detail = String(rowNumbers[first]);
+      assembly.problems.add("duplicate-row", { file, row: rowNumbers[index], found, detail });
+    } else if (faulty.some(({ isGood, coded: { codes } }) => isGood[codes[index]] === 0)) {
+      tellRow(index, reading);
+    } else if (ways.length > 0 && !ways.some((set) => isFilled(set, index))) {
+      const detail = (table.oneOf ?? []).map((set) => set.join(" and ")).join(", or ");
+      assembly.problems.add("one-of", { file, row: rowNumbers[index], found: "", detail });
+    } else {
+      usable[count] = index;
+      count += 1;
+    }
   }
-  if (isUsable && !hasOneOf(table, values)) {
-    const detail = (table.oneOf ?? []).map((set) => set.join(" and ")).join(", or ");
-    assembly.problems.add("one-of", { file, row, found: "", detail });
-    return undefined;
+  return usable.slice(0, count);
+}
+
+const isFilled = (columns: readonly ReadColumn[], index: number): boolean =>
+  columns.every(({ isThere, coded: { codes } }) => isThere[codes[index]] === 1);
+
+/** Tells what is wrong with the cells of a row. */
+function tellRow(index: number, { read, assembly, declared }: Reading): void {
+  const { sheet } = read;
+  const row = sheet.rowNumbers[index];
+  const cells = sheet.rows.at(index) ?? [];
+  for (const { name, column } of declared) {
+    const text = cells[sheet.columns.indexOf(name)] ?? "";
+    const { fault } = readCell(text, column, { name, read });
+    if (fault !== undefined) tellCell(text, column, { fault, name, row, cells, read, assembly });
   }
-  return isUsable ? Object.fromEntries(values) : undefined;
 }
-
-interface CellPlace {
-  readonly name: string;
-  readonly row: number;
-  readonly file: string;
-  readonly assembly: Assembly;
-  readonly read: ReadSheet;
-  /** The whole row. */
-  readonly cells: readonly string[];
-}
-
-/** A blank that another rule speaks of: a missing value is told by the reading, a unit can stand in the header. */
-const isToldElsewhere = (place: CellPlace): boolean =>
-  place.name === "value" || (place.name === "unit" && place.read.hints.get("value")?.bracket !== undefined);
-
-function readCell(text: string, column: ColumnDeclaration, place: CellPlace) {
-  const { name, row, file, assembly } = place;
-  const parsed = parseWritten(text, column, place);
-  if ("code" in parsed) {
-    const nearest = parsed.code === "not-in-list" ? suggestName(text.trim(), column.values ?? []) : undefined;
-    assembly.problems.add(parsed.code, {
-      file,
-      row,
-      column: name,
-      found: text,
-      detail: parsed.detail,
-      nearest,
-      now: onlyMend(text, column, place),
-    });
-    return { value: undefined, isGood: false };
-  }
-  if (parsed.value === undefined && column.required && !isToldElsewhere(place)) {
-    assembly.problems.add("blank-cell", { file, row, column: name, found: text });
-    return { value: undefined, isGood: false };
-  }
-  return {
-    value: parsed.value ?? (isToldElsewhere(place) && column.required ? "" : undefined),
-    isGood: true,
-  };
-}
-
-/** The one content that a cell must have been meant to hold, if it is one alone and good. */
-function onlyMend(text: string, column: ColumnDeclaration, place: CellPlace): string | undefined {
-  const { unit, type } = column;
-  const isOwnUnit = (written: string) =>
-    unit === "section"
-      ? lengthUnit(written) !== undefined && lengthUnit(written) === sectionUnit(place)
-      : unit !== undefined && isFixedUnit(written, unit);
-  const { decimal } = place.read.sheet.dialect;
-  const now =
-    type === "enum" ? onlyWord(text, column.values ?? []) : onlyNumber(text, { decimal, isOwnUnit });
-  return now === undefined || "code" in parseWritten(now, column, place) ? undefined : now;
-}
-
-/** The cell as its column and the file's dialect say. */
-function parseWritten(text: string, column: ColumnDeclaration, { name, read }: CellPlace): ParsedCell {
-  const { decimal, missing } = read.sheet.dialect;
-  if (missing.includes(text)) return { value: undefined };
-  const isNumber = column.type === "number" || column.type === "integer" || name === "value";
-  if (decimal === "point" || !isNumber) return parseCell(text, column);
-  const pointed = withDecimalPoint(text);
-  return pointed === undefined ? { code: "not-a-number", detail: "comma" } : parseCell(pointed, column);
-}
-
-const hasOneOf = (table: TableDeclaration, values: ReadonlyMap<string, unknown>): boolean =>
-  table.oneOf === undefined || table.oneOf.some((set) => set.every((name) => values.get(name) !== undefined));

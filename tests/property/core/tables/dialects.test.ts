@@ -76,7 +76,7 @@ describe("dialects", () => {
         expect(Array.from(sheet.rows, ([, taxon]) => taxon)).toEqual(rows.map(({ name }) => name));
         const distinct = new Set(rows.map(({ name, position }) => `${name.trim()}\u0000${position}`));
         const heights = study.sections.flatMap(({ occurrences }) =>
-          occurrences.map(({ heightM }) => heightM),
+          Array.from(occurrences, ({ heightM }) => heightM),
         );
         expect(heights).toHaveLength(distinct.size);
         for (const height of heights) expect(rows.some(({ position }) => position + 0 === height)).toBe(true);

@@ -37,7 +37,7 @@ it("a study with cautions alone keeps every row as it stands", () => {
   const kept = study.sections.map((section) => [
     section.name,
     section.samples.map(({ name, baseM, topM }) => [name, baseM, topM]),
-    section.occurrences.map(({ taxon, heightM }) => [taxon, heightM]),
+    Array.from(section.occurrences, ({ taxon, heightM }) => [taxon, heightM]),
     section.beds.map(({ baseM, topM }) => [baseM, topM]),
     section.horizons.map(({ name, ageMa }) => [name, ageMa]),
   ]);

@@ -10,7 +10,7 @@ import { writeCsv } from "../../../../src/core/tables/write-csv.ts";
 import { errorsOf, lines, onlySection, sections, studyFrom } from "./study-files.ts";
 
 const verbatim = (files: Record<string, string>) =>
-  onlySection(studyFrom({ "sections.csv": sections, ...files })).occurrences[0].verbatim;
+  onlySection(studyFrom({ "sections.csv": sections, ...files })).occurrences.at(0)?.verbatim;
 
 describe("writing CSV", () => {
   it("quotes what needs it, ends lines with a line feed, and writes numbers in their shortest form", () => {

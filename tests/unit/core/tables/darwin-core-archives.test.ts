@@ -149,7 +149,7 @@ describe("the finds of a Darwin Core archive", () => {
       ["TC-2", "Orvella alta", "3", "", "", "absent"],
       ["TC-2", "Orvella lata", "", "", "", "probable"],
     );
-    const finds = onlySection(study).occurrences.map(({ taxon, count, abundance }) => [
+    const finds = Array.from(onlySection(study).occurrences, ({ taxon, count, abundance }) => [
       taxon,
       count,
       abundance,
@@ -181,7 +181,7 @@ describe("the finds of a Darwin Core archive", () => {
       ["TC-1", "", "", "Palla nova?", ""],
       ["TC-2", "Palla nova", "", "smooth clam", ""],
     );
-    const finds = onlySection(study).occurrences.map(({ verbatim, taxon, qualifier }) => [
+    const finds = Array.from(onlySection(study).occurrences, ({ verbatim, taxon, qualifier }) => [
       verbatim,
       taxon,
       qualifier,

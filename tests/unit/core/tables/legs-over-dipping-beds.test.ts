@@ -22,7 +22,7 @@ const legOf = (read: Study) =>
     heightsM: heightsM.map((height) => Number(height.toFixed(9))),
   }));
 const heightsOf = (read: Study) =>
-  read.sections[0].occurrences.map(({ heightM }) => Number(heightM.toFixed(9)));
+  Array.from(read.sections[0].occurrences, ({ heightM }) => Number(heightM.toFixed(9)));
 const codes = (read: Study) => read.problems.map(({ code }) => code).filter((code) => code !== "ungrouped");
 
 describe("a leg over dipping beds", () => {
@@ -200,7 +200,7 @@ describe("two legs that overlap", () => {
       ),
     });
     expect(read.sections[0].legs[1].heightsM[1]).toBeCloseTo(15 + gainB, 9);
-    const heights = read.sections[0].occurrences.map(({ heightM }) => heightM);
+    const heights = Array.from(read.sections[0].occurrences, ({ heightM }) => heightM);
     expect(heights[1]).toBe(heights[0]);
     expect(codes(read)).toEqual([]);
   });

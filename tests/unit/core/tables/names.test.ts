@@ -29,7 +29,7 @@ describe("taxa that are almost alike", () => {
         mend: expect.stringContaining("Velorites orskelensis is written almost the same"),
       },
     ]);
-    expect(new Set(study.sections[0].occurrences.map(({ taxon }) => taxon)).size).toBe(2);
+    expect(new Set(Array.from(study.sections[0].occurrences, ({ taxon }) => taxon)).size).toBe(2);
   });
 
   it("are told of the one that taxa.csv does not list", () => {

@@ -14,7 +14,7 @@ describe("axis and unit", () => {
   ])("are read from the header %s", (header, axis, unit, heightM) => {
     const section = onlySection(one(header));
     expect([section.axis, section.unit]).toEqual([axis, unit]);
-    expect(section.occurrences[0].heightM).toBeCloseTo(heightM, 10);
+    expect(section.occurrences.at(0)?.heightM).toBeCloseTo(heightM, 10);
   });
 
   it("are never assumed: a header without them is an error, until the settings say", () => {
@@ -44,7 +44,7 @@ describe("axis and unit", () => {
     expect(problemsOf(study, "axis-contradicted")).toMatchObject([
       { severity: "error", column: "depth (m)", found: "depth (m) (and 1 more row)" },
     ]);
-    expect(onlySection(study).occurrences).toEqual([]);
+    expect([...onlySection(study).occurrences]).toEqual([]);
   });
 
   it("a section whose own row is wrong says so at the rows that need it", () => {
@@ -72,7 +72,7 @@ describe("columns", () => {
         "Orskel Ledge,Orvella tenuis,Orvella robusta,1,grey",
       ),
     });
-    expect(onlySection(study).occurrences[0].taxon).toBe("Orvella tenuis");
+    expect(onlySection(study).occurrences.at(0)?.taxon).toBe("Orvella tenuis");
     expect(problemsOf(study, "unknown-column").map(({ found }) => found)).toEqual(["species", "colour"]);
     expect([...study.sheets[0].rows]).toEqual([
       ["Orskel Ledge", "Orvella tenuis", "Orvella robusta", "1", "grey"],
@@ -157,8 +157,8 @@ describe("legs and depth", () => {
     expect(errorsOf(study)).toEqual([]);
     const { samples, occurrences } = onlySection(study);
     expect(samples.map(({ name }) => name)).toEqual(["S1", "S2"]);
-    expect(occurrences[0].heightM).toBe(occurrences[1].heightM);
-    expect(occurrences[0].heightM).toBeCloseTo(6.37, 9);
+    expect(occurrences.at(0)?.heightM).toBe(occurrences.at(1)?.heightM);
+    expect(occurrences.at(0)?.heightM).toBeCloseTo(6.37, 9);
   });
 
   it("reads a core in feet of depth: slabs, lengths, ends and horizons", () => {

@@ -21,5 +21,6 @@ export const errorsOf = (study: Study): readonly Problem[] =>
 
 export const onlySection = (study: Study) => {
   if (study.sections.length !== 1) throw new Error(`expected one section, got ${study.sections.length}`);
-  return study.sections[0];
+  const [section] = study.sections;
+  return { ...section, occurrences: [...section.occurrences] };
 };

@@ -12,7 +12,7 @@ describe("awkward files", () => {
     const given = new Map(Object.entries(files).map(([name, content]) => [name, bytesOf(content)]));
     const study = await readSources(given, { settings });
     const found = study.sections.flatMap((section) =>
-      section.occurrences.map(({ verbatim, heightM }) => [
+      Array.from(section.occurrences, ({ verbatim, heightM }) => [
         section.name,
         verbatim,
         Number(heightM.toFixed(9)),

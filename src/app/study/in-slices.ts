@@ -1,0 +1,25 @@
+/** Longer than this the hand is held up. */
+const SLICE_MS = 8;
+
+/** The items as an array, with pauses in which the page goes on. */
+export async function inSlices<T>(items: Iterable<T>): Promise<readonly T[]> {
+  const taken: T[] = [];
+  let until = performance.now() + SLICE_MS;
+  for (const item of items) {
+    taken.push(item);
+    if (taken.length % 256 !== 0 || performance.now() < until) continue;
+    await pause();
+    until = performance.now() + SLICE_MS;
+  }
+  return taken;
+}
+
+const pause = () =>
+  new Promise<void>((resolve) => {
+    const { port1, port2 } = new MessageChannel();
+    port1.onmessage = () => {
+      port1.close();
+      resolve();
+    };
+    port2.postMessage(undefined);
+  });
