@@ -1,5 +1,6 @@
 import { axisWords, headerLanguages } from "./header-languages.ts";
-import type { Axis, LengthUnit, ToldBy } from "./model.ts";
+import type { Axis, LengthUnit } from "./model.ts";
+import type { ToldBy } from "./recognised.ts";
 import type { ColumnChoice, ColumnDeclaration, TableDeclaration } from "./tables/declare.ts";
 import { lengthUnit } from "./units.ts";
 
@@ -16,6 +17,8 @@ export interface RecognisedColumn {
   readonly unit?: LengthUnit;
   /** Text in brackets that is not a length unit. */
   readonly bracket?: string;
+  /** True where the unit is not the header's but chosen. */
+  readonly isUnitChosen?: boolean;
 }
 
 /** A name without case, accents, spaces, points, hyphens and underscores. */
@@ -86,10 +89,29 @@ export function axisOf(header: string): Axis | undefined {
   return says("height") ? "height" : undefined;
 }
 
+/** The unit in brackets, alone or beside the axis: `ft`, `depth, ft`, `m height`. */
+function unitIn(bracket: string): LengthUnit | undefined {
+  const words = bracket
+    .split(/[\s,;]+/)
+    .filter((word) => word !== "" && word !== "in" && axisOf(word) === undefined);
+  return words.length === 1 ? lengthUnit(words[0]) : lengthUnit(bracket);
+}
+
+const links = /^(?:of|at|in|der|des|du|de|di|del|della|do|da)$/i;
+
+/** A header without the words that say its axis: `first depth` as `first`, `depth of last occurrence` as `last occurrence`. */
+const withoutAxis = (name: string): string => {
+  const words = name.split(/[\s_]+/);
+  const own = words.filter((word) => axisOf(word) === undefined);
+  return own.length === words.length || own.length === 0
+    ? ""
+    : own.slice(links.test(own[0]) ? 1 : 0).join(" ");
+};
+
 const hints = (header: string, column: ColumnDeclaration, unit: string | undefined) => {
   if (column.unit !== "section") return unit === undefined ? {} : { bracket: unit };
-  const axis = column.measures === "position" ? axisOf(header) : undefined;
-  const meant = /inmet(?:re|er)s$/i.test(header) ? "m" : unit === undefined ? undefined : lengthUnit(unit);
+  const axis = column.measures === "position" ? (axisOf(header) ?? axisOf(unit ?? "")) : undefined;
+  const meant = /inmet(?:re|er)s$/i.test(header) ? "m" : unit === undefined ? undefined : unitIn(unit);
   return {
     ...(axis === undefined ? {} : { axis }),
     ...(meant === undefined ? {} : { unit: meant }),
@@ -120,12 +142,25 @@ function recognise(header: string, names: KnownNames, table: TableDeclaration): 
   if (choice?.is === "unused") return { header, by: "chosen" };
   const whole = choice?.is === undefined ? names.get(plainName(trimmed)) : undefined;
   const { name, unit } = whole === undefined ? partUnit(trimmed) : { name: trimmed };
-  const byName =
-    whole ?? (unit === undefined || choice?.is !== undefined ? undefined : names.get(plainName(name)));
+  const byName = whole ?? (choice?.is === undefined ? nameIn(name, unit, { names, table }) : undefined);
   const known = choice?.is === undefined ? byName : { column: choice.is, by: choice.by };
   const column = known && table.columns[known.column];
   if (known === undefined || column === undefined) return { header };
   return { header, ...known, ...hints(name, column, unit), ...chosenHints(column, choice) };
+}
+
+interface Names {
+  readonly names: ReadonlyMap<string, KnownName>;
+  readonly table: TableDeclaration;
+}
+
+/** What a name beside its unit means; that of a position may say its axis too. */
+function nameIn(name: string, unit: string | undefined, { names, table }: Names): KnownName | undefined {
+  const known = unit === undefined ? undefined : names.get(plainName(name));
+  if (known !== undefined) return known;
+  const rest = withoutAxis(name);
+  const position = rest === "" ? undefined : names.get(plainName(rest));
+  return position && table.columns[position.column].measures === "position" ? position : undefined;
 }
 
 /** The unit and axis that a person chose stand over those of the header. */
@@ -136,6 +171,7 @@ function chosenHints(column: ColumnDeclaration, choice: ColumnChoice | undefined
     ...(axis === undefined || column.measures !== "position" ? {} : { axis }),
     ...(meant === undefined ? {} : { unit: meant, bracket: undefined }),
     ...(unit === undefined || meant !== undefined ? {} : { bracket: unit }),
+    ...(unit === undefined ? {} : { isUnitChosen: true }),
   };
 }
 

@@ -1,56 +1,30 @@
+<<<<<<< n/src/core/study/model.ts
 import type { Occurrences } from "./occurrence.ts";
 import type { Origin } from "./origin.ts";
+=======
+import type { Dialect } from "./dialect.ts";
+>>>>>>> wt/src/core/study/model.ts
 import type { Problem } from "./problem.ts";
+import type { Recognition, WideReading } from "./recognised.ts";
 import type { Settings } from "./settings.ts";
 import type { SheetRows } from "./sheet-rows.ts";
 import type { TableName } from "./tables/index.ts";
 
+<<<<<<< n/src/core/study/model.ts
 export type { Occurrence, Occurrences, Qualifier } from "./occurrence.ts";
 export type { Origin } from "./origin.ts";
+=======
+export type { Decimal, Delimiter, Dialect, Encoding } from "./dialect.ts";
+
+/** Where a value came from: the file's name and its row as a spreadsheet counts it (the header is row 1). */
+export interface Origin {
+  readonly file: string;
+  readonly row: number;
+}
+>>>>>>> wt/src/core/study/model.ts
 
 export type LengthUnit = "m" | "cm" | "mm" | "ft";
 export type Axis = "height" | "depth";
-
-export type Encoding = "UTF-8" | "UTF-16LE" | "UTF-16BE" | "Windows-1252";
-export type Delimiter = "," | ";" | "\t" | "|";
-export type Decimal = "point" | "comma";
-
-/** How a file writes its table, decided once for the whole file. */
-export interface Dialect {
-  readonly encoding: Encoding;
-  readonly delimiter: Delimiter;
-  readonly decimal: Decimal;
-  /** Cells that its data package declares to mean "no value". */
-  readonly missing: readonly string[];
-  /** Rows that the header takes, as a spreadsheet counts; none where a data package names the columns. */
-  readonly headerRows: readonly number[];
-  /** Rows above the header: kept, not used. */
-  readonly notes: readonly { readonly row: number; readonly cells: readonly string[] }[];
-}
-
-/** How it was told what a column is. */
-export type ToldBy = "name" | "synonym" | "darwin-core" | "other-language" | "content" | "chosen";
-
-/** Where the unit of a column was told. */
-export type UnitToldBy = "header" | "chosen" | "section";
-
-/** What one column of a file was taken to be, with some of its values to look at. */
-export interface Recognition {
-  readonly header: string;
-  /** The declared column; `taxon` for a column of a wide sheet that is one taxon. */
-  readonly is: string;
-  /** Absent where it is not used or further columns are traits. */
-  readonly by?: ToldBy;
-  readonly language?: string;
-  /** The unit of its numbers, as far as it was told. */
-  readonly unit?: string;
-  readonly axis?: Axis;
-  readonly unitBy?: UnitToldBy;
-  /** What has to be answered before its numbers can be used. */
-  readonly asks?: "unit" | "axis-and-unit";
-  /** Up to five values that differ. */
-  readonly values: readonly string[];
-}
 
 /** A table as it was read: every cell as text, nothing dropped. */
 export interface Sheet {
@@ -69,25 +43,6 @@ export interface Sheet {
   readonly rows: SheetRows;
   readonly rowNumbers: readonly number[];
 }
-
-/** How a sheet with a row or column for each taxon was read. */
-export interface WideReading {
-  readonly shape: "samples-down" | "taxa-down";
-  readonly samples: number;
-  readonly taxa: number;
-  /** What it says of a group that all its cells in a sample are blank. */
-  readonly blank: { readonly means: "not-found" | "not-searched"; readonly by: "default" | "chosen" };
-  /** Cells that are neither numbers nor the usual signs. */
-  readonly codes: readonly {
-    readonly code: string;
-    readonly cells: number;
-    /** Absent: it has to be asked. */
-    readonly means?: CodeMeaning;
-    readonly by?: "notes" | "scale" | "chosen";
-  }[];
-}
-
-export type CodeMeaning = "found" | "not-found" | "not-searched" | "doubtful" | "reworked";
 
 /** A file of the study as bytes were given: what the repeat sheet records. */
 export interface StudyFile {

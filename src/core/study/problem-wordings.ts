@@ -1,5 +1,6 @@
 import { legWordings } from "./leg-wordings.ts";
 import type { Problem } from "./problem.ts";
+import { settingPath } from "./setting-path.ts";
 import { sourceWordings } from "./source-wordings.ts";
 import { caution, error, nearest, type ProblemPlace, type Wording } from "./wording.ts";
 
@@ -38,7 +39,7 @@ const wordings = {
   "axis-unknown": (p) =>
     error(
       `the axis (height or depth) and unit (m, cm, mm, ft) of section ${p.found}`,
-      `State them in sections.csv, in a column header such as "height (m)" or "depth_ft", or in the settings sections.axis and sections.unit.${p.detail ? ` ${p.detail}` : ""}`,
+      `State them in sections.csv, in a column header such as "height (m)" or "depth_ft", in the settings sections.axis and sections.unit, or for one file under ${settingPath(["tables", p.file, "columns"])} (axis, unit).${p.detail ? ` ${p.detail}` : ""}`,
     ),
   "axis-contradicted": (p) =>
     error(

@@ -13,7 +13,7 @@ const columnName = v.pipe(
   v.check(
     (name) => columnNames.includes(name),
     ({ input }) => {
-      const nearest = suggestName(String(input), columnNames);
+      const nearest = suggestName(input, columnNames);
       return `a declared column, taxon or unused${nearest === undefined ? "" : ` (did you mean ${nearest}?)`}`;
     },
   ),

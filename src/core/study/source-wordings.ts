@@ -18,12 +18,12 @@ export const sourceWordings = {
   "read-as": (p) =>
     caution(
       "comma-separated UTF-8 with a decimal point and the header in row 1",
-      `It was read as found; where that is wrong, say what is right under tables.${p.detail} in the settings (decimal, delimiter, encoding).`,
+      `It was read as found; where that is wrong, say what is right under ${p.detail} in the settings (decimal, delimiter, encoding).`,
     ),
   "read-as-windows-1252": (p) =>
     caution(
       "text in UTF-8",
-      `It was read as Windows-1252: look at its accented letters, or save it as CSV UTF-8. Settle it with tables.${p.detail}.encoding.`,
+      `It was read as Windows-1252: look at its accented letters, or save it as CSV UTF-8. Settle it with ${p.detail}.encoding.`,
     ),
   "notes-above": (p) =>
     caution(
@@ -33,13 +33,57 @@ export const sourceWordings = {
   "decimal-ambiguous": (p) =>
     error(
       "a number that can be read in one way",
-      `The sign in ${p.found} can part decimals or thousands. Set tables.${p.detail}.decimal to point or comma (and take signs between thousands out).`,
+      `The sign in ${p.found} can part decimals or thousands. Set ${p.detail}.decimal to point or comma (and take signs between thousands out).`,
     ),
   "taken-as": (p) =>
     caution(
       "a file named as its table",
-      `By its columns it was taken to be ${p.detail}; name it ${p.detail}.csv, or set tables.${p.nearest}.table, if it is another.`,
+      `By its columns it was taken to be ${p.detail}; name it ${p.detail}.csv, or set ${p.nearest}.table, if it is another.`,
     ),
+  "read-wide": (p) =>
+    caution(
+      "a row for each find, or a wide sheet",
+      `It was read as a wide sheet, cells as ${p.detail}: a number, x or + is a find, 0 or - looked for and not found. Say what is right under ${p.nearest} (shape, columns, codes, blank).`,
+    ),
+  "taken-by-content": (p) =>
+    caution(
+      "a header that is known",
+      `By its content it was taken to be ${p.detail}: look. Settle it with ${p.nearest}.`,
+    ),
+  "section-by-name": (p) =>
+    caution(
+      "a column section",
+      `The table names no section: all of it was taken to be of section ${p.found}. Settle it with ${p.detail}.`,
+    ),
+  "code-unknown": (p) =>
+    error(
+      "a number, x, +, 0, - or a code that a legend explains",
+      `Say what ${p.found} means: found, not-found, not-searched, doubtful or reworked, with ${p.nearest}, in a note above the table (R = rare), or in taxa.scales. These cells are left out until then.`,
+    ),
+  "not-a-wide-cell": () =>
+    error(
+      "a number, x, +, 0, - or a code of up to four letters",
+      "Correct the cell, or say that its column is unused. It is left out until then.",
+    ),
+  "blank-samples": (p) =>
+    caution(
+      "0 or - where a group was looked for and not found",
+      `Where all cells of a group are blank in a sample, it counts as not looked for there. If it was looked for, set ${p.detail} to not-found.`,
+    ),
+  "values-without-unit": (p) =>
+    error(
+      "a unit for the values",
+      `Add a column unit, write it in the header, as value (ppb), or set ${p.detail}. Nothing is assumed: the values are left out until then.`,
+    ),
+  "effort-without-unit": (p) =>
+    caution(
+      "an effort_unit beside the effort",
+      `Write the unit in effort_unit or in the header, as effort (h), or set ${p.detail}. The effort is kept without a unit.`,
+    ),
+  "column-setting-unused": (p) =>
+    caution(`a header of the file under ${p.detail}`, `No column has this header; correct it.${nearest(p)}`),
+  "column-setting-foreign": (p) =>
+    error(`a column of ${p.detail}, or unused`, `The table has no such column; it is not used.${nearest(p)}`),
   "resource-unread": (p) =>
     caution("a resource that can be read", `It is not used as the data package says: ${p.detail}.`),
   "archive-broken": () => error("a whole zip archive", "Pack or save the file again; nothing of it is used."),

@@ -1,16 +1,18 @@
 import { assembleStudy } from "../study/assembly/assemble-study.ts";
 import type { ReadSheet } from "../study/assembly/context.ts";
-import type { Study } from "../study/model.ts";
+import type { Section, Sheet, Study } from "../study/model.ts";
 import type { Problem } from "../study/problem.ts";
 import { type ProblemList, problemList } from "../study/problem-list.ts";
 import { readSettings } from "../study/read-settings.ts";
 import { mergeSettings } from "../study/setting-path.ts";
 import type { Settings } from "../study/settings.ts";
-import type { TableName } from "../study/tables/index.ts";
+import { type TableName, tables } from "../study/tables/index.ts";
+import { samples } from "../study/tables/samples.ts";
 import { baseName } from "./base-name.ts";
 import { decodeText } from "./csv.ts";
 import { type DescribedPackage, readDataPackage } from "./data-package.ts";
 import { readSheets } from "./read-sheets.ts";
+import { withSectionUnits } from "./recognition.ts";
 
 export interface ReadStudyOptions {
   /** The study's name where datapackage.json gives no title; absent: the folder of the files, else "study". */
@@ -34,30 +36,52 @@ export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadS
   const problems = problemList();
   const settings = settingsOf(files, options.settings, problems);
   const described = packageOf(files, problems);
-  const sheets = readSheets(files, { settings, described, problems });
+  const name = described.title ?? options.name ?? folderOf(files);
+  const sheets = readSheets(files, {
+    settings,
+    described,
+    problems,
+    ...(name === undefined ? {} : { name }),
+  });
   const assembly = { settings, problems, sheets };
   const assembled = assembleStudy(assembly);
   if (!hasData(sheets)) problems.add("no-data", { file: "study", found: "none of them can be used" });
   return {
-    name: described.title ?? options.name ?? folderOf(files) ?? "study",
+    name: name ?? "study",
     settings,
     ...assembled,
     problems: [
       ...(options.problems ?? []),
       ...problems.problems().map((problem) => asWritten(problem, sheets)),
     ],
-    sheets: [...sheets.values()].map(({ sheet }) => sheet),
+    sheets: shownSheets(sheets, assembled.sections),
     files: [...(options.originals ?? files)].map(([name, bytes]) => ({ name, bytes })),
   };
 }
 
 /** The problem with its column called as the file's own header calls it. */
 function asWritten(problem: Problem, sheets: ReadonlyMap<TableName, ReadSheet>): Problem {
-  const sheet = [...sheets.values()].find((read) => read.sheet.file === problem.file)?.sheet;
+  const read = [...sheets.values()].find((read) => read.sheet.file === problem.file);
+  const sheet = read?.shown ?? read?.sheet;
   const place = problem.column === undefined ? -1 : (sheet?.columns.indexOf(problem.column) ?? -1);
   const column = place < 0 ? undefined : sheet?.headers[place];
   if (column === undefined) return problem;
   return { ...problem, column, ...(problem.fix && { fix: { ...problem.fix, column } }) };
+}
+
+/** The sheets as they stand in their files, each once, with what has to be asked of their columns. */
+function shownSheets(
+  sheets: ReadonlyMap<TableName, ReadSheet>,
+  sections: readonly Section[],
+): readonly Sheet[] {
+  const byName = new Map(sections.map((section) => [section.name, section]));
+  const byFile = new Map<string, Sheet>();
+  for (const { sheet, shown = sheet } of sheets.values()) {
+    const table = shown.wide === undefined ? tables.find(({ name }) => name === shown.table) : samples;
+    if (table !== undefined && !byFile.has(shown.file))
+      byFile.set(shown.file, withSectionUnits(shown, table, byName));
+  }
+  return [...byFile.values()];
 }
 
 function folderOf(files: ReadonlyMap<string, Uint8Array>): string | undefined {

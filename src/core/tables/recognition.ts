@@ -1,5 +1,6 @@
 import type { RecognisedColumn } from "../study/columns.ts";
-import type { Recognition, Section, Sheet } from "../study/model.ts";
+import type { Section, Sheet } from "../study/model.ts";
+import type { Recognition } from "../study/recognised.ts";
 import type { SheetRows } from "../study/sheet-rows.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 
@@ -30,7 +31,7 @@ export const recognitions = (
 
 /** What one column was taken to be; whether it asks is known once the sections are. */
 export function recognition(
-  { header, column, by, language, unit, axis, bracket }: RecognisedColumn,
+  { header, column, by, language, unit, axis, bracket, isUnitChosen = false }: RecognisedColumn,
   table: TableDeclaration,
 ): Omit<Recognition, "values"> {
   const given = unit ?? bracket ?? fixedUnit(column, table);
@@ -42,7 +43,7 @@ export function recognition(
     ...(by === undefined ? {} : { by }),
     ...(language === undefined ? {} : { language }),
     ...(axis === undefined ? {} : { axis }),
-    ...(given === undefined ? {} : { unit: given, unitBy: unitBy(header, column, table) }),
+    ...(given === undefined ? {} : { unit: given, unitBy: isUnitChosen ? "chosen" : "header" }),
   };
 }
 
@@ -50,11 +51,6 @@ function fixedUnit(column: string | undefined, table: TableDeclaration): string 
   const unit = column === undefined ? undefined : table.columns[column].unit;
   return unit === "section" ? undefined : unit;
 }
-
-const unitBy = (header: string, column: string | undefined, table: TableDeclaration) =>
-  column !== undefined && table.chosen?.get(header.trim())?.unit !== undefined
-    ? ("chosen" as const)
-    : ("header" as const);
 
 /** The sheet with the unit of each position and length as its sections have it, or the question for it. */
 export function withSectionUnits(
@@ -75,8 +71,9 @@ export function withSectionUnits(
         ? { ...one, unit: units.join(", "), unitBy: "section" }
         : one;
     const lacksAxis = measures === "position" && one.axis === undefined;
-    if (lacksAxis) return { ...one, asks: "axis-and-unit" };
-    return one.unit === undefined ? { ...one, asks: "unit" } : one;
+    const lacksUnit = one.unit === undefined;
+    if (lacksAxis) return { ...one, asks: lacksUnit ? "axis-and-unit" : "axis" };
+    return lacksUnit ? { ...one, asks: "unit" } : one;
   });
   return { ...sheet, recognised };
 }

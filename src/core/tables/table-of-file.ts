@@ -1,25 +1,25 @@
 import { suggestName } from "../study/nearest.ts";
 import type { ProblemList } from "../study/problem-list.ts";
 import { type TableName, tables } from "../study/tables/index.ts";
-import { type DeclaredDialect, settingName } from "./dialect/declared.ts";
-import { bestParting, previews } from "./dialect/delimiter.ts";
-import { decodeBytes } from "./dialect/encoding.ts";
-import { MOST_BYTES, MOST_COLUMNS } from "./limits.ts";
+import { tablePath } from "./dialect/declared.ts";
+import { type FilePlan, type PlannedFile, plansByColumns } from "./file-plan.ts";
+import { MOST_BYTES } from "./limits.ts";
 
 export type StudyTable = (typeof tables)[number];
 
 /** A file that may be a table. */
-export interface CandidateFile {
+export interface CandidateFile extends PlannedFile {
   readonly file: string;
   readonly path: string;
-  readonly bytes: Uint8Array;
-  readonly declared: DeclaredDialect;
 }
+
+/** The name of the sheet in a workbook, where the file is one. */
+export const sheetName = (file: string): string | undefined =>
+  /\[(.*)\]$/.exec(file)?.[1].trim() || undefined;
 
 /** The table's own name in a file's name; a sheet of a workbook stands in brackets behind the workbook's name. */
 export function tableNamed(file: string): StudyTable | undefined {
-  const sheet = /\[(.*)\]$/.exec(file)?.[1];
-  const name = sheet ?? (/^(.*)\.(?:csv|tsv|tab|txt)$/i.exec(file)?.[1] || undefined);
+  const name = sheetName(file) ?? (/^(.*)\.(?:csv|tsv|tab|txt)$/i.exec(file)?.[1] || undefined);
   const plain = name
     ?.trim()
     .toLowerCase()
@@ -29,40 +29,27 @@ export function tableNamed(file: string): StudyTable | undefined {
 
 const isTableFile = (file: string): boolean => /(?:\.(?:csv|tsv|tab|txt)|\])$/i.test(file);
 
-/** The table that an oddly named file holds by its columns, told; undefined, told, where it is none or could be several. */
-export function tableByColumns(
+/** How an oddly named file is to be read by its columns, told; undefined, told, where it is no table or could be several. */
+export function planByColumns(
   candidate: CandidateFile,
   taken: ReadonlySet<TableName>,
   problems: ProblemList,
-): StudyTable | undefined {
-  const { file, path } = candidate;
-  const best = isTableFile(file) ? likeliest(candidate, taken) : [];
-  if (best.length === 1) {
-    const [table] = best;
-    problems.add("taken-as", { file, found: file, detail: table.name, nearest: settingName(file) });
-    return table;
+): FilePlan | undefined {
+  const { file, path, bytes } = candidate;
+  const plans = isTableFile(file) && bytes.byteLength <= MOST_BYTES ? plansByColumns(candidate, taken) : [];
+  const names = plans.map((plan) => (plan.kind === "wide" ? "occurrences" : plan.table.name));
+  if (plans.length === 1) {
+    const [plan] = plans;
+    // A wide sheet is told as such when it is read.
+    if (plan.kind === "long")
+      problems.add("taken-as", { file, found: file, detail: plan.table.name, nearest: tablePath(file) });
+    return plan;
   }
   const nearest = suggestName(
     file,
     tables.map(({ name }) => `${name}.csv`),
   );
-  const detail = best.length > 1 ? best.map(({ name }) => `${name}.csv`).join(" or ") : undefined;
+  const detail = plans.length > 1 ? names.map((name) => `${name}.csv`).join(" or ") : undefined;
   problems.add("unknown-file", { file: path, found: file, detail, nearest });
   return undefined;
-}
-
-/** The tables all of whose necessary columns stand in the file, those with most columns recognised. */
-function likeliest({ bytes, declared }: CandidateFile, taken: ReadonlySet<TableName>): readonly StudyTable[] {
-  const decoded = bytes.byteLength > MOST_BYTES ? undefined : decodeBytes(bytes, declared.encoding);
-  if (decoded === undefined) return [];
-  const ways = previews(decoded.text, declared).map((way) => ({
-    ...way,
-    records: way.records.filter(({ cells }) => cells.length <= MOST_COLUMNS).slice(0, 60),
-  }));
-  const fitting = tables.flatMap((table) => {
-    const header = taken.has(table.name) ? undefined : bestParting(ways, table)?.header;
-    return header?.isComplete === true ? [{ table, recognised: header.recognised }] : [];
-  });
-  const most = fitting.reduce((most, { recognised }) => Math.max(most, recognised), 0);
-  return fitting.filter(({ recognised }) => recognised === most).map(({ table }) => table);
 }

@@ -1,6 +1,7 @@
 import { oneSigma } from "../errors.ts";
 import type { Measurement, Reading } from "../model.ts";
 import { readingNumbers, readingSize, readPolarityCell, readValueCell, scaleReading } from "../readings.ts";
+import { settingPath } from "../setting-path.ts";
 import type { RowOf } from "../tables/declare.ts";
 import { measurements } from "../tables/measurements.ts";
 import { isTrace, type MeasurementUnit, measurementUnit, measurementUnitsInWords } from "../units.ts";
@@ -47,6 +48,10 @@ interface Value {
 function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: Assembly): Value | undefined {
   const analyte = plainAnalyte(cells.analyte);
   const givenUnit = cells.unit || (read.hints.get("value")?.bracket ?? "");
+  if (givenUnit === "") {
+    tellUnitless({ cells, origin }, read, assembly);
+    return undefined;
+  }
   const unit = measurementUnit(givenUnit, analyte);
   if (unit === undefined || unit === "refused") {
     const code = unit === undefined ? "unknown-unit" : "ambiguous-ppt";
@@ -99,6 +104,13 @@ function valueOf({ cells, origin }: MeasurementRow, read: ReadSheet, assembly: A
     : `within ${largest / unit.factor} of zero and no smaller than ${smallestReading / unit.factor}, its error and detection limit too,`;
   assembly.problems.add("out-of-limits", { ...origin, column: "value", found: cells.value, detail });
   return undefined;
+}
+
+/** No unit is assumed of values in a table without a column for it. */
+function tellUnitless({ cells, origin }: MeasurementRow, read: ReadSheet, { problems }: Assembly): void {
+  const header = read.hints.get("value")?.header ?? "value";
+  const detail = settingPath(["tables", read.sheet.file, "columns", header, "unit"]);
+  problems.addOnce("unit", "values-without-unit", { ...origin, column: "value", found: cells.value, detail });
 }
 
 /** A value that carries its unit, or the other decimal sign. */

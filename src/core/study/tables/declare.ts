@@ -1,4 +1,5 @@
-import type { Axis, ToldBy } from "../model.ts";
+import type { Axis } from "../model.ts";
+import type { ToldBy } from "../recognised.ts";
 
 /** What a person (or a look at the content) says a column of a file is. */
 export interface ColumnChoice {

@@ -1,4 +1,5 @@
 import type { Decimal, Delimiter, Encoding } from "../../study/model.ts";
+import { settingPath } from "../../study/setting-path.ts";
 import type { Settings } from "../../study/settings.ts";
 
 /** What settings or a data package say about a file; what is said is not looked for. */
@@ -21,6 +22,10 @@ const withoutEnding = (file: string): string => file.replace(/\.[^.\s]*$/, "");
 
 /** The name under which settings speak of a file: with or without its ending. */
 export const settingName = (file: string): string => withoutEnding(file);
+
+/** The path under which settings speak of a file, or of one thing in it. */
+export const tablePath = (file: string, ...names: readonly string[]): string =>
+  settingPath(["tables", settingName(file), ...names]);
 
 /** What the settings say about a file. */
 export const tableSetting = (file: string, settings: Settings): TableSetting | undefined =>

@@ -21,12 +21,13 @@ export interface FoundHeader {
   readonly isComplete: boolean;
 }
 
-/** Columns of a table that a header lacks: names, or the alternatives in words. */
+/** Columns of a table that a header lacks: names, or the alternatives in words. A unit of values can be asked for. */
 export function missingColumns(columns: readonly RecognisedColumn[], table: TableDeclaration): string[] {
   const found = new Set(columns.flatMap(({ column }) => column ?? []));
-  const hasUnitInHeader = columns.some(({ column, bracket }) => column === "value" && bracket !== undefined);
   const missing = Object.entries(table.columns)
-    .filter(([name, { required }]) => required && !found.has(name) && !(name === "unit" && hasUnitInHeader))
+    .filter(
+      ([name, { required }]) => required && !found.has(name) && !(name === "unit" && found.has("value")),
+    )
     .map(([name]) => name);
   const isOneOfMet =
     table.oneOf === undefined || table.oneOf.some((set) => set.every((name) => found.has(name)));

@@ -1,6 +1,6 @@
 import type { Dialect } from "../../study/model.ts";
 import type { ProblemList } from "../../study/problem-list.ts";
-import { type DeclaredDialect, settingName } from "./declared.ts";
+import { type DeclaredDialect, tablePath } from "./declared.ts";
 
 interface Telling {
   readonly file: string;
@@ -14,7 +14,7 @@ const delimiterWords = { ",": "commas", ";": "semicolons", "\t": "tabs", "|": "b
 /** Tells everything that was found in a file and not stated, where it differs from the plain way. */
 export function tellDialect(dialect: Dialect, { file, declared, isEncodingTaken, problems }: Telling): void {
   const { encoding, delimiter, decimal, headerRows, notes } = dialect;
-  const detail = settingName(file);
+  const detail = tablePath(file);
   const found = [
     ...(encoding.startsWith("UTF-16") && declared.encoding === undefined ? [encoding] : []),
     ...(isOwnDelimiter(file, delimiter) || declared.delimiter !== undefined
