@@ -21,8 +21,8 @@ export interface Simulation {
   readonly replicates: number;
 }
 
-/** As soon as so many simulated gains reach the observed one, p is known to 5% of itself. */
-const ENOUGH = 400;
+/** As soon as so many simulated gains reach the observed one, p is known to 7% of itself. */
+const ENOUGH = 200;
 
 /**
  * Are K pulses enough, against one more? Parametric bootstrap of 2 (ll_(K + 1) - ll_K): assemblages with the user's own

@@ -21,7 +21,7 @@ export interface SetCase {
 }
 
 /** Share of `replicates` that each of the many simulations of an analysis draws: their p comes with its own error. */
-const SHARE_OF_REPLICATES = 0.2;
+const SHARE_OF_REPLICATES = 0.1;
 
 export function simulationOf({ seed, replicates }: Settings): Simulation {
   return { seed, replicates: Math.ceil(SHARE_OF_REPLICATES * replicates) };

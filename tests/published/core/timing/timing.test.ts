@@ -1,4 +1,3 @@
-import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { centroid, rescaledInterior } from "../../../../src/core/ranges/checks/centroid.ts";
 import { pieceCoordinate, uniformCoordinate } from "../../../../src/core/ranges/coordinate.ts";
@@ -12,6 +11,7 @@ import {
 } from "../../../../src/core/timing/common-end.ts";
 import { levelTest } from "../../../../src/core/timing/confidence-levels.ts";
 import { durationBox, durationLowerBound } from "../../../../src/core/timing/duration.ts";
+import { expectClose, readCases, readSections } from "../../outside-values.ts";
 
 interface Inputs {
   readonly set: string;
@@ -23,7 +23,7 @@ interface Inputs {
   readonly taxa: readonly (readonly [number, number, number])[];
 }
 
-const findsOf = readSections();
+const findsOf = readSections(new URL("./synthetic-sections.csv", import.meta.url));
 const taxaOf = (set: string) => [...(findsOf.get(set)?.values() ?? [])];
 const fromFirst = (set: string): EffectiveRange[] =>
   taxaOf(set).map((h) => ({ base: h[0], last: h[h.length - 1], exponent: h.length - 1 }));
@@ -31,17 +31,6 @@ const fromZero = (set: string): EffectiveRange[] =>
   taxaOf(set).map((h) => ({ base: 0, last: h[h.length - 1], exponent: h.length }));
 const listed = (taxa: Inputs["taxa"]): EffectiveRange[] =>
   taxa.map(([base, last, exponent]) => ({ base, last, exponent }));
-
-function readSections(): Map<string, Map<string, number[]>> {
-  const text = readFileSync(new URL("./synthetic-sections.csv", import.meta.url), "utf8");
-  const sections = new Map<string, Map<string, number[]>>();
-  for (const line of text.trim().split(/\r?\n/).slice(1)) {
-    const [set, taxon, , height] = line.split(",");
-    const taxa = sections.get(set) ?? new Map<string, number[]>();
-    sections.set(set, taxa.set(taxon, [...(taxa.get(taxon) ?? []), Number(height)]));
-  }
-  return sections;
-}
 
 function commonEnd(ranges: readonly EffectiveRange[]) {
   const test = commonEndTest(ranges);
@@ -113,26 +102,7 @@ const quantities: Record<string, (inputs: Inputs) => unknown> = {
   pooled: ({ set }) => centroid(taxaOf(set).flatMap(rescaledInterior))?.z,
 };
 
-interface Case {
-  readonly case: string;
-  readonly quantity: string;
-  readonly inputs: Inputs;
-  readonly expected: unknown;
-  readonly tolerance: number;
-}
-
-const cases: readonly Case[] = JSON.parse(readFileSync(new URL("./timing.json", import.meta.url), "utf8"));
-
-/** Every number asked for is met within tolerance x max(1, |expected|); null is met by null or undefined alone. */
-function expectClose(got: unknown, expected: unknown, tolerance: number): void {
-  if (expected === null) expect(got ?? null).toBeNull();
-  else if (typeof expected === "number") {
-    expect(got).toBeTypeOf("number");
-    expect(Math.abs(Number(got) - expected)).toBeLessThanOrEqual(tolerance * Math.max(1, Math.abs(expected)));
-  } else
-    for (const [key, value] of Object.entries(Object(expected)))
-      expectClose(new Map(Object.entries(Object(got))).get(key), value, tolerance);
-}
+const cases = readCases<Inputs>(new URL("./timing.json", import.meta.url));
 
 describe("timing against outside values (sources in timing.json)", () => {
   it.each(cases)("$quantity: $case", ({ quantity, inputs, expected, tolerance }) => {
