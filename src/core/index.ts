@@ -2,10 +2,7 @@ export { formatGiven, givenToHeight, heightToGiven, type OwnScale } from "./stud
 export type * from "./study/model.ts";
 export { suggestName } from "./study/nearest.ts";
 export type { Fix, Problem } from "./study/problem.ts";
-<<<<<<< n/src/core/index.ts
-=======
 export type * from "./study/recognised.ts";
->>>>>>> wt/src/core/index.ts
 export {
   knownSettingPaths,
   mergeSettings,

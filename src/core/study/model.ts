@@ -1,27 +1,15 @@
-<<<<<<< n/src/core/study/model.ts
+import type { Dialect } from "./dialect.ts";
 import type { Occurrences } from "./occurrence.ts";
 import type { Origin } from "./origin.ts";
-=======
-import type { Dialect } from "./dialect.ts";
->>>>>>> wt/src/core/study/model.ts
 import type { Problem } from "./problem.ts";
 import type { Recognition, WideReading } from "./recognised.ts";
 import type { Settings } from "./settings.ts";
 import type { SheetRows } from "./sheet-rows.ts";
 import type { TableName } from "./tables/index.ts";
 
-<<<<<<< n/src/core/study/model.ts
+export type { Decimal, Delimiter, Dialect, Encoding } from "./dialect.ts";
 export type { Occurrence, Occurrences, Qualifier } from "./occurrence.ts";
 export type { Origin } from "./origin.ts";
-=======
-export type { Decimal, Delimiter, Dialect, Encoding } from "./dialect.ts";
-
-/** Where a value came from: the file's name and its row as a spreadsheet counts it (the header is row 1). */
-export interface Origin {
-  readonly file: string;
-  readonly row: number;
-}
->>>>>>> wt/src/core/study/model.ts
 
 export type LengthUnit = "m" | "cm" | "mm" | "ft";
 export type Axis = "height" | "depth";

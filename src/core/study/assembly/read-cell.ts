@@ -18,7 +18,8 @@ export interface CellPlace {
 
 /** A blank that another rule speaks of: a missing value is told by the reading, a unit can stand in the header. */
 const isToldElsewhere = ({ name, read }: Pick<CellPlace, "name" | "read">): boolean =>
-  name === "value" || (name === "unit" && read.hints.get("value")?.bracket !== undefined);
+  name === "value" ||
+  (name === "unit" && (read.hints.get("value")?.bracket !== undefined || !read.hints.has("unit")));
 
 interface CellFault {
   readonly code: ProblemCode;

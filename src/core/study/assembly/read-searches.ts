@@ -1,4 +1,3 @@
-<<<<<<< n/src/core/study/assembly/read-searches.ts
 import { valueAt } from "../coded.ts";
 import type { Occurrences, Origin, Sample, Search, Taxon } from "../model.ts";
 import { occurrenceColumns } from "../occurrence-list.ts";
@@ -10,16 +9,6 @@ import { type Frames, frameFor } from "./frame-for.ts";
 import type { SampleLists } from "./read-samples.ts";
 import { firstAlike } from "./repeated-rows.ts";
 import { readCells } from "./rows.ts";
-=======
-import type { Occurrence, Origin, Sample, Search, Taxon } from "../model.ts";
-import { settingPath } from "../setting-path.ts";
-import type { RowOf } from "../tables/declare.ts";
-import { searches } from "../tables/searches.ts";
-import { type Assembly, type BySection, gather, present, type ReadSheet } from "./context.ts";
-import { type Frames, frameFor } from "./frame-for.ts";
-import type { SampleLists } from "./read-samples.ts";
-import { rowsOf } from "./rows.ts";
->>>>>>> wt/src/core/study/assembly/read-searches.ts
 import { searchesOfWide } from "./searches-of-wide.ts";
 import { ungrouped } from "./taxa.ts";
 
@@ -64,29 +53,18 @@ export function readSearches(frames: Frames, context: SearchContext, assembly: A
       assembly.problems.add("redefined", { ...origin, column: "group", found: group, detail });
       continue;
     }
-<<<<<<< n/src/core/study/assembly/read-searches.ts
     const effort = valueAt(columns.effort, index);
     const effortUnit = valueAt(columns.effort_unit, index) ?? unit;
     const countedTo = valueAt(columns.counted_to, index);
     tellUnitless({ effort, effort_unit: effortUnit }, origin, { read, assembly });
-=======
-    first.set(key, origin.row);
-    tellUnitless(cells, origin, { read, assembly });
-    const { effort, effort_unit: effortUnit, counted_to: countedTo } = cells;
->>>>>>> wt/src/core/study/assembly/read-searches.ts
     gather(lists, frame.name, {
       sample: sample.name,
       group,
       heightM: sample.heightM,
-<<<<<<< n/src/core/study/assembly/read-searches.ts
       ...(effort === undefined ? {} : { effort }),
       ...(effortUnit === undefined ? {} : { effortUnit }),
       ...(countedTo === undefined ? {} : { countedTo }),
       counting: valueAt(columns.counting, index) ?? "presence",
-=======
-      ...present({ effort, effortUnit: effortUnit ?? read.hints.get("effort")?.bracket, countedTo }),
-      counting: cells.counting ?? "presence",
->>>>>>> wt/src/core/study/assembly/read-searches.ts
       derived: false,
       origin,
     });
@@ -97,11 +75,7 @@ export function readSearches(frames: Frames, context: SearchContext, assembly: A
 
 /** An effort of no unit cannot be set beside another. */
 function tellUnitless(
-<<<<<<< n/src/core/study/assembly/read-searches.ts
   { effort, effort_unit: unit }: Pick<RowOf<typeof searches>, "effort" | "effort_unit">,
-=======
-  { effort, effort_unit: unit }: RowOf<typeof searches>,
->>>>>>> wt/src/core/study/assembly/read-searches.ts
   origin: Origin,
   { read, assembly }: { readonly read: ReadSheet; readonly assembly: Assembly },
 ): void {
@@ -116,10 +90,6 @@ function tellUnitless(
   });
 }
 
-<<<<<<< n/src/core/study/assembly/read-searches.ts
-=======
-const isFind = ({ count }: Occurrence): boolean => count !== 0;
->>>>>>> wt/src/core/study/assembly/read-searches.ts
 const groupOf = (taxa: ReadonlyMap<string, Taxon>, taxon: string): string =>
   taxa.get(taxon)?.group ?? ungrouped;
 

@@ -78,15 +78,7 @@ interface ReadColumn {
   readonly isThere: Uint8Array;
 }
 
-<<<<<<< n/src/core/study/assembly/rows.ts
 const NO_CELL: Coded<string> = { values: [""], codes: new Uint8Array(0) };
-=======
-/** A blank that another rule speaks of: a missing value is told by the reading, a unit can stand in the header. */
-const isToldElsewhere = (place: CellPlace): boolean =>
-  place.name === "value" ||
-  (place.name === "unit" &&
-    (place.read.hints.get("value")?.bracket !== undefined || !place.read.hints.has("unit")));
->>>>>>> wt/src/core/study/assembly/rows.ts
 
 function readColumn(
   cells: Coded<string> | undefined,

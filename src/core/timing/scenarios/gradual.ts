@@ -104,7 +104,8 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
     within.forEach((sum, d) => add(sums[d], sum.log() + log(grid.weights[node] / longestM[d])));
     add(confined, inWindow.log() + log(grid.weights[node] / Math.min(longestM[0], topM - window.lowM)));
   }
-  const evidence = (sum: readonly LogSum[]) => sum.map((s, t) => s.log() - log(window.topsM[t] - window.lowM));
+  const evidence = (sum: readonly LogSum[]) =>
+    sum.map((s, t) => s.log() - log(window.topsM[t] - window.lowM));
   return {
     logEvidence: sums.map(evidence),
     logEvidenceConfined: evidence(confined),
@@ -158,7 +159,9 @@ function useParts(
   use: UseStart,
 ): void {
   const lowM = Math.max(panel.lowM, lowestM);
-  const inside = [topM, panel.highM, lowM, ...cutsM].filter((x) => x >= lowM && x <= Math.min(panel.highM, topM));
+  const inside = [topM, panel.highM, lowM, ...cutsM].filter(
+    (x) => x >= lowM && x <= Math.min(panel.highM, topM),
+  );
   const edges = [...new Set(inside)].toSorted((a, b) => b - a);
   const rule = gaussLegendre(panel.heights.length);
   for (let e = 1; e < edges.length; e++) {

@@ -1,6 +1,6 @@
-import { normalCdf } from "../../numeric/normal.ts";
-import { log } from "../../numeric/elementary.ts";
 import type { MarkerHorizon } from "../../markers/result.ts";
+import { log } from "../../numeric/elementary.ts";
+import { normalCdf } from "../../numeric/normal.ts";
 
 /** Where a marker horizon lies: normal about its position, flat over its interval, or at one height. */
 export type HorizonLaw =

@@ -52,7 +52,12 @@ export function pulsesByPartitions(
 /** ln I(B) for every set of taxa (bit mask), for each top of the window. */
 function blockIntegrals(taxa: readonly EndLikelihood[], window: EndWindow): Float64Array[] {
   const lowM = Math.max(window.lowM, Math.min(...taxa.map((taxon) => taxon.fromM)));
-  const grid = endGrid(taxa, { lowM, highM: Math.max(...window.topsM), breaksM: window.topsM, nodesFor: () => NODES });
+  const grid = endGrid(taxa, {
+    lowM,
+    highM: Math.max(...window.topsM),
+    breaksM: window.topsM,
+    nodesFor: () => NODES,
+  });
   const largest = new Float64Array(1 << taxa.length).fill(Number.NEGATIVE_INFINITY);
   forEachProduct(grid, (_, set, logProduct) => {
     if (logProduct > largest[set]) largest[set] = logProduct;
@@ -62,14 +67,13 @@ function blockIntegrals(taxa: readonly EndLikelihood[], window: EndWindow): Floa
     const term = exp(logProduct - largest[set]);
     for (let t = 0; t < sums.length; t++) if (belowTop(grid, node, window.topsM[t])) sums[t][set] += term;
   });
-  return sums.map((sum, t) => sum.map((x, set) => largest[set] + log(x) - log(window.topsM[t] - window.lowM)));
+  return sums.map((sum, t) =>
+    sum.map((x, set) => largest[set] + log(x) - log(window.topsM[t] - window.lowM)),
+  );
 }
 
 /** ln of weight times the product of L over every set of taxa, at every node where it is not 0. */
-function forEachProduct(
-  grid: EndGrid,
-  use: (node: number, set: number, logProduct: number) => void,
-): void {
+function forEachProduct(grid: EndGrid, use: (node: number, set: number, logProduct: number) => void): void {
   const sums = new Float64Array(1 << grid.taxa);
   for (let node = 0; node < grid.heights.length; node++) {
     sums[0] = log(grid.weights[node]);
