@@ -42,7 +42,13 @@ const SMALLEST_SHARE = 1e-12;
 /** Limits from inside a panel are taken this share of its width from its ends. */
 const INSIDE = 1e-9;
 
-const fineNodes = (fall: number) => (fall < 0.05 ? 3 : fall < 0.4 ? 4 : fall < 2 ? 5 : 8);
+/** Nodes that integrate exp(-fall x) over (0, 1) to a relative 1e-8 or so. */
+const fineNodes = (fall: number) =>
+  fall < 0.05 ? 2 : fall < 0.3 ? 3 : fall < 1 ? 4 : fall < 2.5 ? 5 : fall < 4.5 ? 6 : 8;
+
+/** Nodes where five digits do. */
+export const coarseNodes = (fall: number) =>
+  fall < 0.02 ? 1 : fall < 0.3 ? 2 : fall < 1.2 ? 3 : fall < 4 ? 4 : 6;
 
 /**
  * Composite Gauss-Legendre nodes for integrals over the height at which taxa end: panels end where a likelihood begins
@@ -66,6 +72,11 @@ export function endGrid(taxa: readonly EndLikelihood[], options: GridOptions): E
 /** ln L of every taxon at one height. */
 export function logsAt(taxa: readonly EndLikelihood[], heightM: number): Float64Array {
   return Float64Array.from(taxa, (taxon) => taxon.log(heightM));
+}
+
+/** The rows of `logs`, one a node. */
+export function logRows({ heights, taxa, logs }: EndGrid): readonly Float64Array[] {
+  return Array.from(heights, (_, node) => logs.subarray(node * taxa, node * taxa + taxa));
 }
 
 /** Lowest height at which all of them may have ended: the highest of the lowest heights. */

@@ -17,7 +17,7 @@ export interface Gradual {
   readonly durations?: Weighted;
 }
 
-const topNodes = (fall: number) => (fall < 0.05 ? 3 : fall < 0.4 ? 4 : fall < 1.5 ? 6 : 8);
+const topNodes = (fall: number) => (fall < 0.05 ? 2 : fall < 0.4 ? 4 : fall < 1.5 ? 6 : 8);
 /** Panels of the top narrow by 1/4 towards the lowest possible top this often. */
 const STEEP_STEPS = 9;
 
@@ -83,9 +83,11 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
   const { grid, window, longestM } = spread;
   const sums = longestM.map(() => window.topsM.map(() => logSum()));
   const confined = window.topsM.map(() => logSum());
-  const durations: { value: number; log: number }[] = [];
+  const values: number[] = [];
+  const logs: number[] = [];
   for (let node = 0; node < grid.heights.length; node++) {
     const topM = grid.heights[node];
+    const logWeight = log(grid.weights[node]);
     const isOwn = belowTop(grid, node, window.topsM[0]);
     const within = longestM.map(() => logSum());
     const inWindow = logSum();
@@ -94,22 +96,24 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
       for (let d = 0; d < longestM.length; d++) if (durationM < longestM[d]) within[d].add(logMass);
       if (!(durationM < longestM[0])) return;
       if (startM > window.lowM) inWindow.add(logMass);
-      if (isOwn) durations.push({ value: durationM, log: logMass + log(grid.weights[node]) });
+      if (!isOwn) return;
+      values.push(durationM);
+      logs.push(logMass + logWeight);
     });
     const add = (sum: LogSum[], log1: number) => {
       window.topsM.forEach((edgeM, t) => {
         if (belowTop(grid, node, edgeM)) sum[t].add(log1);
       });
     };
-    within.forEach((sum, d) => add(sums[d], sum.log() + log(grid.weights[node] / longestM[d])));
-    add(confined, inWindow.log() + log(grid.weights[node] / Math.min(longestM[0], topM - window.lowM)));
+    within.forEach((sum, d) => add(sums[d], sum.log() + logWeight - log(longestM[d])));
+    add(confined, inWindow.log() + logWeight - log(Math.min(longestM[0], topM - window.lowM)));
   }
   const evidence = (sum: readonly LogSum[]) =>
     sum.map((s, t) => s.log() - log(window.topsM[t] - window.lowM));
   return {
     logEvidence: sums.map(evidence),
     logEvidenceConfined: evidence(confined),
-    ...(durations.length === 0 ? {} : { durations: weightedOf(durations) }),
+    ...(values.length === 0 ? {} : { durations: weightedOf(values, logs) }),
   };
 }
 
@@ -164,17 +168,18 @@ function useParts(
   );
   const edges = [...new Set(inside)].toSorted((a, b) => b - a);
   const rule = gaussLegendre(panel.heights.length);
+  const toTop = new Float64Array(taxa.length);
   for (let e = 1; e < edges.length; e++) {
     const [highM, baseM] = [edges[e - 1], edges[e]];
     const half = 0.5 * (highM - baseM);
     for (let n = 0; n < rule.nodes.length; n++) {
       const startM = baseM + half * (1 + rule.nodes[n]);
-      const toTop = Float64Array.from(taxa, (taxon) => taxon.area(startM, highM));
+      for (let i = 0; i < toTop.length; i++)
+        toTop[i] = taxa[i].fromM < highM ? taxa[i].area(startM, highM) : 0;
       use(startM, logProduct(toTop, 0, { above, length: topM - startM }) + log(half * rule.weights[n]));
     }
-    taxa.forEach((taxon, i) => {
-      above[i] += taxon.area(baseM, highM);
-    });
+    for (let i = 0; i < toTop.length; i++)
+      if (taxa[i].fromM < highM) above[i] += taxa[i].area(baseM, highM);
   }
 }
 
@@ -199,14 +204,15 @@ function logProduct(
 }
 
 /** Masses this far below the largest in ln are left out. */
-const NEGLIGIBLE = 40;
+const NEGLIGIBLE = 30;
 
-function weightedOf(points: readonly { readonly value: number; readonly log: number }[]): Weighted {
+function weightedOf(values: readonly number[], logs: readonly number[]): Weighted {
   let largest = Number.NEGATIVE_INFINITY;
-  for (const point of points) largest = Math.max(largest, point.log);
-  const kept = points.filter((point) => point.log > largest - NEGLIGIBLE);
+  for (const logMass of logs) largest = Math.max(largest, logMass);
+  const isKept = (_: number, i: number) => logs[i] > largest - NEGLIGIBLE;
+  const kept = logs.filter(isKept);
   return {
-    values: Float64Array.from(kept, (point) => point.value),
-    masses: Float64Array.from(kept, (point) => exp(point.log - largest)),
+    values: Float64Array.from(values.filter(isKept)),
+    masses: Float64Array.from(kept, (logMass) => exp(logMass - largest)),
   };
 }

@@ -8,18 +8,18 @@ export interface SimplexRule {
 }
 
 /** Nodes along one direction are at most this many times the root of the number of taxa. */
-const NODES_PER_ROOT = 2.6;
+const NODES_PER_ROOT = 2.8;
 
 /**
  * Quadrature over shares with a flat Dirichlet law: E of a polynomial in the shares of a degree equal to the number of
  * taxa. Gauss-Legendre in sticks broken from the whole, share g a part x_g of what is left; exact up to about 25 taxa,
  * beyond within 1e-6 of a peak as wide as binomial shares are.
  */
-export function simplexRule(pulses: number, taxa: number): SimplexRule {
+export function simplexRule(pulses: number, taxa: number, perRoot = NODES_PER_ROOT): SimplexRule {
   const exact = Math.ceil((taxa + pulses - 1) / 2);
   const count = Math.max(
     2,
-    Math.min(exact, pulses === 2 ? exact : Math.ceil(NODES_PER_ROOT * Math.sqrt(taxa))),
+    Math.min(exact, pulses === 2 ? exact : Math.ceil(perRoot * Math.sqrt(taxa))),
   );
   const { nodes, weights } = gaussLegendre(count);
   const size = count ** (pulses - 1);
@@ -49,7 +49,7 @@ function power(x: number, n: number): number {
   return product;
 }
 
-/** Shares all equal: the variant in which every pulse takes each taxon with the same chance. */
+/** Equal shares: the variant in which every pulse takes each taxon with the same chance. */
 export function equalShares(pulses: number): SimplexRule {
   return { pulses, shares: new Float64Array(pulses).fill(1 / pulses), weights: new Float64Array([1]) };
 }

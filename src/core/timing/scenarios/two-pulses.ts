@@ -27,7 +27,7 @@ export interface PulsesPosterior {
 }
 
 /** Pairs whose bound is under this share of the sum so far are left out. */
-const NEGLIGIBLE = 1e-14;
+const NEGLIGIBLE = 1e-13;
 /** Membership is not refined by pairs with less than this share of the mass so far. */
 const LITTLE = 1e-10;
 
@@ -47,7 +47,7 @@ export function twoPulses(taxa: readonly EndLikelihood[], window: EndWindow): Tw
   const lowM = Math.max(window.lowM, Math.min(...taxa.map((taxon) => taxon.fromM)));
   if (taxa.length < 2 || !(floorM < highM)) return { logEvidence: none, logEvidenceEqual: none };
   const grid = endGrid(taxa, { lowM, highM, breaksM: window.topsM });
-  return sumOfPairs(taxa, window, pairsOf(taxa, grid, floorM));
+  return sumOfPairs(grid, window, pairsOf(taxa, grid, floorM));
 }
 
 /** Two levels, the lower one in or below the panel of the upper one. */
@@ -55,43 +55,39 @@ interface Pair {
   readonly upper: number;
   readonly lowerPanel: number;
   readonly lowerM: number;
-  readonly logWeight: number;
+  readonly weight: number;
+  /** ln L of every taxon at the lower level, and at the upper one. */
   readonly lowerLogs: Float64Array;
+  readonly upperLogs: Float64Array;
+  /** ln of an upper bound of what the pair can add: the better of the two levels for every taxon. */
+  readonly bound: number;
 }
 
-interface Pairs {
-  readonly grid: EndGrid;
-  /** Calls back for every pair, the lower level below the upper one. */
-  readonly forEach: (use: (pair: Pair) => void) => void;
-}
-
-function pairsOf(taxa: readonly EndLikelihood[], grid: EndGrid, floorM: number): Pairs {
+/** Every pair whose upper level lies above the floor, the lower level below the upper one. */
+function pairsOf(taxa: readonly EndLikelihood[], grid: EndGrid, floorM: number): readonly Pair[] {
   const k = taxa.length;
   const { heights, weights, panels, panelOf, logs } = grid;
-  const rowOf = (node: number) => logs.subarray(node * k, node * k + k);
-  const forEach = (use: (pair: Pair) => void) => {
-    for (let upper = 0; upper < heights.length; upper++) {
-      const panel = panels[panelOf[upper]];
-      if (panel.lowM < floorM) continue;
-      for (let lower = 0; lower < panel.first; lower++)
-        use({
-          upper,
-          lowerPanel: panelOf[lower],
-          lowerM: heights[lower],
-          logWeight: log(weights[lower] * weights[upper]),
-          lowerLogs: rowOf(lower),
-        });
-      for (const inner of innerNodes(panel.lowM, heights[upper], panel.count))
-        use({
-          upper,
-          lowerPanel: panelOf[upper],
-          lowerM: inner.heightM,
-          logWeight: log(inner.weight * weights[upper]),
-          lowerLogs: logsAt(taxa, inner.heightM),
-        });
-    }
-  };
-  return { grid, forEach };
+  const rows = Array.from(heights, (_, node) => logs.subarray(node * k, node * k + k));
+  const pairs: Pair[] = [];
+  for (let upper = 0; upper < heights.length; upper++) {
+    const panel = panels[panelOf[upper]];
+    if (panel.lowM < floorM) continue;
+    const add = (lowerPanel: number, lowerM: number, at: { weight: number; lowerLogs: Float64Array }) =>
+      pairs.push({
+        upper,
+        lowerPanel,
+        lowerM,
+        weight: at.weight * weights[upper],
+        lowerLogs: at.lowerLogs,
+        upperLogs: rows[upper],
+        bound: boundOf(at.lowerLogs, rows[upper]),
+      });
+    for (let lower = 0; lower < panel.first; lower++)
+      add(panelOf[lower], heights[lower], { weight: weights[lower], lowerLogs: rows[lower] });
+    for (const { heightM, weight } of innerNodes(panel.lowM, heights[upper], panel.count))
+      add(panelOf[upper], heightM, { weight, lowerLogs: logsAt(taxa, heightM) });
+  }
+  return pairs;
 }
 
 function innerNodes(lowM: number, highM: number, count: number) {
@@ -100,29 +96,24 @@ function innerNodes(lowM: number, highM: number, count: number) {
   return Array.from(nodes, (z, i) => ({ heightM: lowM + half * (1 + z), weight: half * weights[i] }));
 }
 
-function sumOfPairs(taxa: readonly EndLikelihood[], window: EndWindow, pairs: Pairs): TwoPulses {
-  const k = taxa.length;
-  const { grid } = pairs;
+function sumOfPairs(grid: EndGrid, window: EndWindow, pairs: readonly Pair[]): TwoPulses {
+  const k = grid.taxa;
   const shares = twoShares(k);
-  const upperLogs = (upper: number) => grid.logs.subarray(upper * k, upper * k + k);
   let largest = Number.NEGATIVE_INFINITY;
-  pairs.forEach(({ upper, lowerLogs }) => {
-    largest = Math.max(largest, boundOf(lowerLogs, upperLogs(upper)));
-  });
+  for (const { bound } of pairs) largest = Math.max(largest, bound);
   const sums = window.topsM.map(() => ({ dirichlet: 0, equal: 0 }));
-  const summary = summaryOf(grid, k);
-  pairs.forEach((pair) => {
-    const bound = boundOf(pair.lowerLogs, upperLogs(pair.upper));
-    const scale = exp(bound - largest + pair.logWeight);
-    if (scale < NEGLIGIBLE * Math.min(sums[0].dirichlet, sums[0].equal)) return;
-    const { dirichlet, equal } = shares.weigh(pair.lowerLogs, upperLogs(pair.upper));
-    window.topsM.forEach((topM, t) => {
-      if (!belowTop(grid, pair.upper, topM)) return;
+  const summary = summaryOf(grid);
+  for (const pair of pairs) {
+    const scale = exp(pair.bound - largest) * pair.weight;
+    if (scale < NEGLIGIBLE * Math.min(sums[0].dirichlet, sums[0].equal)) continue;
+    const { dirichlet, equal } = shares.weigh(pair.lowerLogs, pair.upperLogs);
+    for (let t = 0; t < sums.length; t++) {
+      if (!belowTop(grid, pair.upper, window.topsM[t])) continue;
       sums[t].dirichlet += scale * dirichlet;
       sums[t].equal += scale * equal;
-    });
+    }
     if (belowTop(grid, pair.upper, window.topsM[0])) summary.add(pair, scale, shares);
-  });
+  }
   const width = window.topsM.map((topM) => 2 * log(topM - window.lowM));
   return {
     logEvidence: sums.map(
@@ -135,14 +126,14 @@ function sumOfPairs(taxa: readonly EndLikelihood[], window: EndWindow, pairs: Pa
   };
 }
 
-/** ln of an upper bound of what a pair can add: the better of the two levels for every taxon. */
 function boundOf(lower: Float64Array, upper: Float64Array): number {
   let sum = 0;
   for (let i = 0; i < lower.length; i++) sum += Math.max(lower[i], upper[i]);
   return sum;
 }
 
-function summaryOf(grid: EndGrid, k: number) {
+function summaryOf(grid: EndGrid) {
+  const k = grid.taxa;
   const lowerLevel = posteriorBuilder(grid);
   const upperLevel = posteriorBuilder(grid);
   const inLower = new Float64Array(k);

@@ -22,6 +22,8 @@ export function twoShares(k: number): TwoShares {
   const a = new Float64Array(k);
   const c = new Float64Array(k);
   const both = new Int32Array(k);
+  const upperOf = new Float64Array(k);
+  const difference = new Float64Array(k);
   const products = new Float64Array(size);
   let shared = 0;
   let allLower = 0;
@@ -38,16 +40,16 @@ export function twoShares(k: number): TwoShares {
       allLower *= a[i];
       allUpper *= c[i];
       mixed *= 0.5 * (a[i] + c[i]);
-      if (a[i] > 0) both[shared++] = i;
+      if (a[i] === 0) continue;
+      difference[shared] = a[i] - c[i];
+      upperOf[shared] = c[i];
+      both[shared++] = i;
     }
     let sum = 0;
     for (let q = 0; q < size; q++) {
       const share = shares[2 * q];
       let product = alone[q * (k + 1) + k - shared];
-      for (let j = 0; j < shared; j++) {
-        const i = both[j];
-        product *= c[i] + share * (a[i] - c[i]);
-      }
+      for (let j = 0; j < shared; j++) product *= upperOf[j] + share * difference[j];
       products[q] = weights[q] * product;
       sum += products[q];
     }
