@@ -27,6 +27,7 @@ const opening = (): PageState => ({
   place: placeOf(location.hash),
   isMarginOpen: true,
   isGoToOpen: false,
+  isLogOpen: matchMedia("(min-width: 901px)").matches,
   theme: keptTheme(),
   work: { kind: "idle" },
   history: NO_HISTORY,

@@ -18,6 +18,11 @@ async function rename(page: Page, text: string): Promise<void> {
   await cell(page, text).waitFor();
 }
 
+async function save(page: Page, what: string): Promise<void> {
+  await page.getByRole("button", { name: "Save…" }).click();
+  await page.getByRole("menuitem", { name: what }).click();
+}
+
 const isKept = (page: Page) => page.getByText(/^Edits up to .* are kept in this browser only/).waitFor();
 
 describe.skipIf(findBrowser() === undefined)("edited tables", () => {
@@ -71,18 +76,12 @@ describe.skipIf(findBrowser() === undefined)("edited tables", () => {
 
   it("are given out as a table and as a zip that opens again", async () => {
     const { page } = opened;
-    const [table] = await Promise.all([
-      page.waitForEvent("download"),
-      page.getByRole("button", { name: "Save CSV" }).click(),
-    ]);
+    const [table] = await Promise.all([page.waitForEvent("download"), save(page, "This table as CSV")]);
     expect(table.suggestedFilename()).toBe("samples.csv");
     expect(await readFile(await table.path(), "utf8")).toBe(
       (smallStudy["samples.csv"] ?? "").replace("LB-1,", "LB-first,"),
     );
-    const [packed] = await Promise.all([
-      page.waitForEvent("download"),
-      page.getByRole("button", { name: "Save zip" }).click(),
-    ]);
+    const [packed] = await Promise.all([page.waitForEvent("download"), save(page, "Study as a zip")]);
     const bytes = new Uint8Array(await readFile(await packed.path()));
     const study = await readSources(new Map([["study.zip", bytes]]));
     expect(study.sheets.find(({ file }) => file === "samples.csv")?.rows.at(0)?.[1]).toBe("LB-first");

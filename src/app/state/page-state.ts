@@ -24,6 +24,8 @@ export interface PageState {
   readonly frame?: Frame;
   readonly isMarginOpen: boolean;
   readonly isGoToOpen: boolean;
+  /** Whether the section log stands beside the tables. */
+  readonly isLogOpen: boolean;
   readonly theme: Theme;
   readonly work: Work;
   /** Every edit of the study's tables. */
@@ -35,6 +37,7 @@ export type PageEvent =
   | { readonly kind: "read"; readonly level: Level }
   | { readonly kind: "framed"; readonly frame: Frame | undefined }
   | { readonly kind: "margin-turned" }
+  | { readonly kind: "log-turned" }
   | { readonly kind: "go-to-turned"; readonly isOpen: boolean }
   | { readonly kind: "theme-set"; readonly theme: Theme }
   | { readonly kind: "work-began"; readonly name: string }
@@ -60,6 +63,8 @@ export function step(state: PageState, event: PageEvent): PageState {
       return { ...state, frame: event.frame };
     case "margin-turned":
       return { ...state, isMarginOpen: !state.isMarginOpen };
+    case "log-turned":
+      return { ...state, isLogOpen: !state.isLogOpen };
     case "go-to-turned":
       return { ...state, isGoToOpen: event.isOpen };
     case "theme-set":

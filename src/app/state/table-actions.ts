@@ -1,4 +1,4 @@
-import { giveOutStudy } from "../study/give-out.ts";
+import { giveOutStudy, giveOutWorkbook } from "../study/give-out.ts";
 import type { Action } from "./actions.ts";
 import type { PageContents } from "./page-context.ts";
 
@@ -45,6 +45,21 @@ export function tableActions({ state, dispatch, go, study }: PageContents): Acti
       label: "Save the study as a zip",
       isAvailable: study.workedOut !== undefined,
       act: () => study.workedOut && void giveOutStudy(study.workedOut, state.history),
+    },
+    {
+      ...tables,
+      id: "give-out-workbook",
+      label: "Save the tables as a workbook",
+      isAvailable: study.workedOut !== undefined,
+      act: () => study.workedOut && void giveOutWorkbook(study.workedOut, state.history),
+    },
+    {
+      ...tables,
+      id: "log",
+      label: state.isLogOpen ? "Close the section log" : "Open the section log",
+      shortcut: "l",
+      isAvailable: state.place.station === "tables",
+      act: () => dispatch({ kind: "log-turned" }),
     },
   ];
 }

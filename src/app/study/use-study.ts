@@ -1,13 +1,16 @@
 import { type Dispatch, useEffect, useMemo, useRef, useState } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
-import type { Sheet } from "../../core/study/model.ts";
+import type { Sheet, Study } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
 import { pageRunner } from "../../run/page.ts";
+import { receivedSheets } from "../../run/received-study.ts";
 import { keptHistory, studyKey } from "../keeping/kept-studies.ts";
 import type { PageEvent } from "../state/page-state.ts";
+import { type GivenTable, givenTable, leavingSheets, unreadFiles } from "../tables/given-table.ts";
 import { type History, heldEdits, NO_HISTORY } from "../tables/history.ts";
 import { desk } from "./desk.ts";
 import { type GivenStudy, NotAStudy } from "./given-study.ts";
+import { inSlices } from "./in-slices.ts";
 
 const startWorker = () =>
   new Worker(new URL("../../run/page-worker.ts", import.meta.url), { type: "module" });
@@ -20,6 +23,8 @@ export interface WorkedOut {
   /** The edits that were kept when it was opened. */
   readonly opened: History;
   readonly sheets: readonly Sheet[];
+  /** The same with what their reading left out. */
+  readonly tables: readonly GivenTable[];
   readonly history: History;
   readonly analysis: Analysis;
 }
@@ -87,19 +92,23 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
         const { key, history } = await keptWork(given);
         if (heldEdits(history).length === 0) {
           const analysis = await analyse(given, signal);
-          return { given, key, sheets: analysis.study.sheets, opened: history, history, analysis };
+          const { sheets } = analysis.study;
+          const tables = await givenTables(given, analysis.study);
+          return { given, key, sheets, tables, opened: history, history, analysis };
         }
-        const sheets = await desk().sheets(given.files);
-        const files = await editedFiles(given, sheets, history);
+        const { problems, ...read } = await desk().read(given.files);
+        const sheets = receivedSheets(read.sheets);
+        const tables = await givenTables(given, { sheets, problems });
+        const files = await editedFiles(given, tables, history);
         const analysis = await analyse({ name: given.name, files }, signal);
-        return { given, key, sheets, opened: history, history, analysis };
+        return { given, key, sheets, tables, opened: history, history, analysis };
       });
     };
     const rework: OpenStudy["rework"] = (history) => {
       const now = latest.current;
       if (now === undefined || isOpening.current) return;
       void begin(now.analysis.study.name, async (signal) => {
-        const files = await editedFiles(now.given, now.sheets, history);
+        const files = await editedFiles(now.given, now.tables, history);
         const analysis = await analyse({ name: now.given.name, files }, signal);
         return { ...now, history, analysis };
       });
@@ -124,11 +133,26 @@ async function keptWork(given: GivenStudy): Promise<Pick<WorkedOut, "key" | "his
   }
 }
 
-/** The files to work out: the edits made, each row with the number that it has on the page. */
-function editedFiles({ files }: GivenStudy, sheets: readonly Sheet[], history: History) {
+/** The tables with what their reading left out: rows that could not be parted, and whole tables. */
+async function givenTables(
+  { files }: GivenStudy,
+  { sheets, problems }: Pick<Study, "sheets" | "problems">,
+): Promise<readonly GivenTable[]> {
+  const leaving = leavingSheets(sheets, problems);
+  const unread = unreadFiles(sheets, problems);
+  const isWhole = leaving.length === 0 && unread.length === 0;
+  const left = isWhole ? undefined : await desk().leftOut(files, leaving, unread);
+  const tables: GivenTable[] = [];
+  for (const sheet of sheets)
+    tables.push(givenTable(sheet, await inSlices(sheet.rows), left?.rows.get(sheet.file)));
+  return [...tables, ...(left?.tables ?? [])];
+}
+
+/** The files to work out: the edits made, each row counted as the page counts it. */
+function editedFiles({ files }: GivenStudy, tables: readonly GivenTable[], history: History) {
   const edits = heldEdits(history);
   if (edits.length === 0) return files;
-  const forms = sheets.map(({ file, headers, dialect }) => ({ file, headers, dialect }));
+  const forms = tables.map(({ file, headers, dialect }) => ({ file, headers, dialect }));
   return desk().edited(files, edits, { forms, keepsRowNumbers: true });
 }
 

@@ -1,112 +1,174 @@
 import type { Sheet } from "../../core/study/model.ts";
 import { tables } from "../../core/study/tables/index.ts";
-import { needsApostrophe, putApostrophe } from "../../core/tables/apostrophes.ts";
+import { needsApostrophe, putApostrophe, takeOffApostrophe } from "../../core/tables/apostrophes.ts";
 import { baseName } from "../../core/tables/base-name.ts";
 import { decodeText, readWrittenCsv } from "../../core/tables/csv.ts";
-import {
-  apostrophesProperty,
-  type PackageResource,
-  readDataPackage,
-  tableResource,
-  writeDataPackage,
-} from "../../core/tables/data-package.ts";
+import { type PackageResource, tableResource } from "../../core/tables/data-package.ts";
 import { decodeBytes } from "../../core/tables/dialect/encoding.ts";
+import { packWorkbook } from "../../core/tables/sources/pack-workbook.ts";
 import { writeCsv } from "../../core/tables/write-csv.ts";
 import { blockText } from "./clipboard.ts";
-import { applyEdits, type Edit, editsByFile, type TableForm } from "./edits.ts";
+import { applyEdits, type Edit, editedHeaders, editsByFile, NO_EDITS, type TableForm } from "./edits.ts";
 import { encodeText } from "./encode-text.ts";
-import { patchCsv, type RowPatch, rowAt, unquoted } from "./patch-csv.ts";
+import { guardedColumns, PACKAGE_FILE, packageIn, packageText } from "./package-file.ts";
+import { patchCsv, type RowPatch, rowsOf } from "./patch-csv.ts";
+import { rowNumbering } from "./row-order.ts";
 
-const PACKAGE = "datapackage.json";
 /** Goes along for people to read; as every README it is no table of the study. */
 const SET_ASIDE = "README.set-aside.csv";
 
+export type GivenForm = TableForm & Pick<Sheet, "columns"> & Partial<Pick<Sheet, "table">>;
+
 export interface GivingOut {
   readonly name: string;
-  readonly forms: readonly (TableForm & Pick<Sheet, "table" | "rows" | "rowNumbers">)[];
+  readonly forms: readonly GivenForm[];
 }
+
+type Files = ReadonlyMap<string, Uint8Array>;
 
 /**
  * The study's files with the edits made and the rows set aside left out, as a data package. Texts that a spreadsheet
  * would run as a formula get an apostrophe, which the package records, so that reading takes it off again.
  */
-export function filesGivenOut(
-  files: ReadonlyMap<string, Uint8Array>,
-  edits: readonly Edit[],
-  { name, forms }: GivingOut,
-): ReadonlyMap<string, Uint8Array> {
-  const edited = applyEdits(files, edits, { forms, keepsRowNumbers: false });
-  const described = decodeText(
-    [...files].find(([path]) => baseName(path) === PACKAGE)?.[1] ?? new Uint8Array(),
-  );
-  const before = readDataPackage(described ?? "")?.apostrophes ?? new Map();
+export function filesGivenOut(files: Files, edits: readonly Edit[], { name, forms }: GivingOut): Files {
+  const { edited, formOf } = editedFiles(files, edits, forms);
+  const before = guardedColumns(edited);
   const written = new Map<string, Uint8Array>();
   const resources: PackageResource[] = [];
   for (const [path, bytes] of edited) {
     const file = baseName(path);
-    const form = forms.find((form) => form.file === file);
+    const form = formOf(file);
     if (form === undefined) {
       written.set(file, bytes);
       continue;
     }
     const own = guardedTable(bytes, form, before.get(file) ?? new Set());
-    const to = /\.(?:csv|tsv|tab|txt)$/i.test(file) ? file : `${form.table}.csv`;
+    const to = nameGivenOut(form);
     written.set(to, own.bytes);
     resources.push(
       ...tables.filter(({ name }) => name === form.table).map((t) => tableResource(t, own.guarded, to)),
     );
   }
-  const aside = setAsideText(edited, edits, forms);
+  const aside = setAsideText(files, edits, forms);
   if (aside !== undefined) written.set(SET_ASIDE, new TextEncoder().encode(aside));
-  written.set(PACKAGE, new TextEncoder().encode(packageText(name, resources, described)));
+  written.set(PACKAGE_FILE, new TextEncoder().encode(packageText(name, resources, packageIn(edited))));
   return written;
 }
 
-/** The rows that were set aside, now and before, with their reasons and what stood in them; undefined where there are none. */
-function setAsideText(
-  files: ReadonlyMap<string, Uint8Array>,
+function editedFiles(files: Files, edits: readonly Edit[], forms: readonly GivenForm[]) {
+  const byFile = editsByFile(edits);
+  const now = forms.map((form) => ({
+    ...form,
+    headers: editedHeaders(form, byFile.get(form.file) ?? NO_EDITS),
+  }));
+  const edited = applyEdits(files, edits, { forms, keepsRowNumbers: false });
+  return { edited, formOf: (file: string) => now.find((form) => form.file === file) };
+}
+
+/** A table's own file name; a sheet of a workbook goes by the table that it holds. */
+const nameGivenOut = ({ file, table }: GivenForm): string =>
+  /\.(?:csv|tsv|tab|txt)$/i.test(file) ? file : `${table ?? file.replace(/^.*\[|\]$/g, "")}.csv`;
+
+export interface TableGivenOut {
+  readonly name: string;
+  readonly bytes: Uint8Array;
+  /** Cells that a spreadsheet would run as a formula. */
+  readonly formulas: number;
+}
+
+/**
+ * One table alone, with the edits made. No package goes with it that could record apostrophes, so it has none: it reads
+ * back to the same cells.
+ */
+export function tableGivenOut(
+  files: Files,
   edits: readonly Edit[],
-  forms: GivingOut["forms"],
-): string | undefined {
+  { file, forms }: Pick<GivingOut, "forms"> & { readonly file: string },
+): TableGivenOut | undefined {
+  const { edited, formOf } = editedFiles(files, edits, forms);
+  const form = formOf(file);
+  const given = [...edited].find(([path]) => baseName(path) === file)?.[1];
+  if (form === undefined || given === undefined) return undefined;
+  const guarded = guardedColumns(edited).get(file) ?? new Set();
+  let formulas = 0;
+  const bytes = withCells(given, form, (cell, header) => {
+    const plain = guarded.has(header) ? takeOffApostrophe(cell) : cell;
+    if (isFormula(plain, form.dialect.decimal)) formulas += 1;
+    return plain;
+  });
+  return { name: nameGivenOut(form), bytes, formulas };
+}
+
+/** Every table with the edits made, as a workbook of a sheet each. */
+export function workbookGivenOut(files: Files, edits: readonly Edit[], { forms }: GivingOut): Uint8Array {
+  const { edited, formOf } = editedFiles(files, edits, forms);
+  return packWorkbook(
+    edited,
+    forms.flatMap(({ file }) => formOf(file) ?? []),
+  );
+}
+
+const isFormula = (cell: string, decimal: "point" | "comma"): boolean =>
+  !cell.startsWith("'") && needsGuard(cell, decimal, false);
+
+/** The rows that were set aside, now and before, with their reasons and what stood in them; undefined where there are none. */
+function setAsideText(files: Files, edits: readonly Edit[], forms: GivingOut["forms"]): string | undefined {
   const earlier = [...files].find(([path]) => baseName(path) === SET_ASIDE)?.[1];
   const before = earlier === undefined ? [] : readWrittenCsv(decodeText(earlier) ?? "").rows;
-  const now = [...editsByFile(edits)].flatMap(([file, { setAside, cells }]) => {
+  const now = [...editsByFile(edits)].flatMap(([file, { setAside, cells, added }]) => {
     const form = forms.find((form) => form.file === file);
+    const bytes = [...files].find(([path]) => baseName(path) === file)?.[1];
+    if (form === undefined || bytes === undefined || setAside.size === 0) return [];
+    const { shown } = rowNumbering(added);
+    const given = cellsOfRows(bytes, form, setAside);
     return [...setAside].map(([row, reason]) => {
-      const read = form?.rows[form.rowNumbers.indexOf(row)] ?? [];
-      const own = form?.headers.map((_, column) => cells.get(row)?.get(column) ?? read[column] ?? "") ?? [];
-      return [file, String(row), reason, blockText([own])];
+      const own = form.headers.map((_, at) => cells.get(row)?.get(at) ?? given.get(row)?.[at] ?? "");
+      return [file, String(shown(row)), reason, blockText([own])];
     });
   });
   if (now.length === 0) return undefined;
   return writeCsv(["file", "row", "reason", "cells"], [...before, ...now]).text;
 }
 
+function cellsOfRows(bytes: Uint8Array, { dialect }: TableForm, wanted: ReadonlyMap<number, unknown>) {
+  const text = decodeBytes(bytes, dialect.encoding)?.text ?? "";
+  const found = new Map<number, readonly string[]>();
+  for (const { row, cells } of rowsOf(text, dialect.delimiter)) if (wanted.has(row)) found.set(row, cells);
+  return found;
+}
+
 /** A table's bytes with apostrophes where they are needed, and the headers of the columns that have some. */
-function guardedTable(bytes: Uint8Array, { headers, dialect }: TableForm, before: ReadonlySet<string>) {
-  const text = decodeBytes(bytes, dialect.encoding)?.text;
-  if (text === undefined) return { bytes, guarded: [] };
-  const patches = new Map<number, RowPatch>();
+function guardedTable(bytes: Uint8Array, form: TableForm, before: ReadonlySet<string>) {
   const guarded = new Set(before);
-  let from = 0;
-  for (let row = 1; from < text.length; row++) {
-    const { spans, next } = rowAt(text, from, dialect.delimiter);
-    from = next;
-    if (row < (dialect.headerRows[0] ?? 1)) continue;
-    const cells = new Map<number, string>();
+  const patched = withCells(bytes, form, (cell, header) => {
+    if (!needsGuard(cell, form.dialect.decimal, before.has(header))) return cell;
+    guarded.add(header);
+    return putApostrophe(cell);
+  });
+  return { bytes: patched, guarded: form.headers.filter((header) => guarded.has(header)) };
+}
+
+/** A table's bytes with each cell from the header on written as it is told; the very same where none changes. */
+function withCells(
+  bytes: Uint8Array,
+  { headers, dialect }: TableForm,
+  write: (cell: string, header: string) => string,
+): Uint8Array {
+  const { encoding, delimiter, headerRows } = dialect;
+  const text = decodeBytes(bytes, encoding)?.text;
+  if (text === undefined) return bytes;
+  const rows = new Map<number, RowPatch>();
+  for (const { row, cells, malformed } of rowsOf(text, delimiter)) {
+    if (row < (headerRows[0] ?? 1)) continue;
+    const changed = new Map<number, string>();
     for (const [column, header] of headers.entries()) {
-      const cell = unquoted(text.slice(spans[2 * column] ?? 0, spans[2 * column + 1] ?? 0));
-      if (!needsGuard(cell, dialect.decimal, before.has(header))) continue;
-      cells.set(column, putApostrophe(cell));
-      guarded.add(header);
+      const cell = cells[column] ?? "";
+      const now = malformed.includes(column) ? cell : write(cell, header);
+      if (now !== cell) changed.set(column, now);
     }
-    if (cells.size > 0) patches.set(row, { kind: "cells", cells });
+    if (changed.size > 0) rows.set(row, { kind: "cells", cells: changed });
   }
-  const patched =
-    patches.size === 0
-      ? bytes
-      : encodeText(patchCsv(text, patches, dialect.delimiter), dialect.encoding, bytes);
-  return { bytes: patched, guarded: headers.filter((header) => guarded.has(header)) };
+  return rows.size === 0 ? bytes : encodeText(patchCsv(text, { rows, delimiter }), encoding, bytes);
 }
 
 const isCommaNumber = /^[+-]?(?:\d+,?\d*|,\d+)(?:[eE][+-]?\d+)?$/;
@@ -115,37 +177,4 @@ const isCommaNumber = /^[+-]?(?:\d+,?\d*|,\d+)(?:[eE][+-]?\d+)?$/;
 function needsGuard(cell: string, decimal: "point" | "comma", isGuarded: boolean): boolean {
   if (!needsApostrophe(cell) || (isGuarded && cell.startsWith("'"))) return false;
   return decimal === "point" || !isCommaNumber.test(cell);
-}
-
-/** The data package as it was described, with the apostrophes of now; a new one where there was none. */
-function packageText(
-  name: string,
-  resources: readonly PackageResource[],
-  described: string | undefined,
-): string {
-  const fresh = writeDataPackage(name, resources);
-  const before = parsed(described ?? "");
-  const own = parsed(fresh);
-  if (before === undefined || own === undefined) return fresh;
-  const now = new Map(own.resources.map((resource) => [fileOf(resource), resource]));
-  const known = before.resources.map((resource) => {
-    const guarded = now.get(fileOf(resource))?.[apostrophesProperty];
-    return guarded === undefined ? resource : { ...resource, [apostrophesProperty]: guarded };
-  });
-  const knownFiles = new Set(known.map(fileOf));
-  const added = own.resources.filter((resource) => !knownFiles.has(fileOf(resource)));
-  return `${JSON.stringify({ ...before, resources: [...known, ...added] }, null, 2)}\n`;
-}
-
-const fileOf = ({ path }: PackageJson["resources"][number]): string =>
-  typeof path === "string" ? baseName(path) : "";
-
-interface PackageJson {
-  readonly resources: readonly Readonly<Record<string, unknown>>[];
-}
-
-function parsed(text: string): PackageJson | undefined {
-  if (readDataPackage(text) === undefined) return undefined;
-  const value: PackageJson = JSON.parse(text);
-  return Array.isArray(value.resources) ? value : undefined;
 }

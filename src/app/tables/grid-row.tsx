@@ -1,6 +1,7 @@
 import type { PointerEvent, ReactElement } from "react";
 import type { Problem } from "../../core/study/problem.ts";
 import { CellEditor, type CellEditorProps } from "./cell-editor.tsx";
+import { rowId } from "./grid-steps.ts";
 import { ProblemSign, worst } from "./problem-sign.tsx";
 import { cellKey, type ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
@@ -18,6 +19,8 @@ export interface GridRowProps {
   readonly place: number;
   readonly problems: ReadonlyMap<string, readonly Problem[]>;
   readonly isSought: boolean;
+  /** Whether a cell's text holds the words that are looked for. */
+  readonly isFound: (text: string) => boolean;
   readonly rowIndex: number;
   /** Columns of the row that are selected, first and last. */
   readonly selected?: readonly [first: number, last: number];
@@ -29,8 +32,13 @@ export interface GridRowProps {
 export function GridRow(props: GridRowProps): ReactElement {
   const { table, place, problems, isSought, rowIndex } = props;
   const row = table.rowNumbers[place] ?? 0;
-  const reason = table.setAside.get(row);
-  const names = [isSought && styles.sought, reason !== undefined && styles.setAside].filter(Boolean);
+  const reason = table.setAside.get(rowId(table, place));
+  const isUnread = table.unread.has(rowId(table, place)) && problems.has(cellKey(row, -1));
+  const names = [
+    isSought && styles.sought,
+    reason !== undefined && styles.setAside,
+    isUnread && styles.unread,
+  ].filter(Boolean);
   return (
     <tr
       aria-rowindex={rowIndex}
@@ -54,14 +62,17 @@ interface GridCellProps extends GridRowProps {
   readonly column: number;
 }
 
-function GridCell({ table, place, row, column, problems, selected, activeColumn, editor }: GridCellProps) {
-  const { isNumber, meaning, header } = table.columns[column];
+function GridCell(props: GridCellProps) {
+  const { table, place, row, column, problems, selected, activeColumn, editor, isFound } = props;
+  const { isNumber, meaning, header, isBeyond } = table.columns[column];
   const text = table.rows[place]?.[column] ?? "";
   const own = problems.get(cellKey(row, column));
   const isActive = activeColumn === column;
   const isSelected = selected !== undefined && column >= selected[0] && column <= selected[1];
   const names = [
     isNumber && styles.number,
+    isBeyond && styles.beyond,
+    isFound(text) && styles.found,
     own && styles[worst(own)],
     isSelected && styles.selected,
     isActive && styles.active,
@@ -72,11 +83,11 @@ function GridCell({ table, place, row, column, problems, selected, activeColumn,
       id={cellId(place, column)}
       aria-colindex={column + 2}
       aria-selected={isSelected}
-      aria-readonly={!table.isEditable || table.setAside.has(row) || undefined}
+      aria-readonly={!table.isEditable || table.setAside.has(rowId(table, place)) || undefined}
       className={names.filter(Boolean).join(" ") || undefined}
     >
       {isActive && editor ? (
-        <CellEditor {...editor} label={`Row ${row}, ${header}`} />
+        <CellEditor {...editor} label={`Row ${row}, ${isBeyond ? "beyond the header" : header}`} />
       ) : (
         <>
           <ProblemSign problems={own} />

@@ -1,11 +1,13 @@
-import { type ReactElement, useEffect, useMemo, useRef } from "react";
+import { type ReactElement, useCallback, useEffect, useMemo, useRef } from "react";
 import { GridHead } from "./grid-head.tsx";
 import { cellId, GridRow } from "./grid-row.tsx";
 import type { EditStep } from "./history.ts";
-import { blockOf, type Selection } from "./selection.ts";
-import { problemsByCell, type ShownTable, type Sorting } from "./shown-table.ts";
+import type { Sorting } from "./row-choice.ts";
+import { blockOf, type Cell, isHeader, type Selection } from "./selection.ts";
+import { problemsByCell, type ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
-import { useGrid } from "./use-grid.ts";
+import type { Finding } from "./use-find.ts";
+import { type Draft, useGrid } from "./use-grid.ts";
 import { useWindow } from "./use-window.ts";
 
 const ROW_HEIGHT = 26;
@@ -21,6 +23,12 @@ interface GridProps {
   readonly selection: Selection;
   readonly select: (selection: Selection) => void;
   readonly edit: (step: EditStep) => void;
+  readonly insert: (place: number) => void;
+  readonly draft: Draft;
+  readonly setDraft: (draft: Draft) => void;
+  readonly find: Finding;
+  /** The words that are looked for. */
+  readonly words: string;
   readonly tell: (words: string) => void;
   readonly sort?: Sorting;
   readonly sortBy: (column: number) => void;
@@ -39,15 +47,21 @@ export function Grid(props: GridProps): ReactElement {
   const activeIndex = places.indexOf(active.place);
   const pageRows = () =>
     Math.max(1, Math.floor(((frame.current?.clientHeight ?? 0) - HEAD_HEIGHT) / ROW_HEIGHT) - 1);
-  const view = { places, columns: table.columns.length };
+  const isFilled = ({ place, column }: Cell) => (table.rows[place]?.[column] ?? "").trim() !== "";
+  const view = { places, columns: table.columns.length, hasHeader: table.isEditable, isFilled };
   const { editor, handlers } = useGrid(grid, { ...props, view, pageRows });
   const block = blockOf(selection, places);
+  const isInHeader = isHeader(selection);
+  const isFound = useFound(props.words);
 
   useSoughtRow({ row, table, places, frame, select });
+  const shown = useRef(active);
   useEffect(() => {
-    if (activeIndex >= 0 && grid.current?.contains(document.activeElement))
+    // Only a cell that was gone to, never one that an edit elsewhere moved.
+    if (activeIndex >= 0 && shown.current !== active)
       bringIntoView(frame.current, { index: activeIndex, column: active.column, widths });
-  }, [activeIndex, active.column, widths]);
+    shown.current = active;
+  }, [activeIndex, active, widths]);
 
   return (
     <section ref={frame} className={styles.frame} aria-label={`Table ${table.title}`}>
@@ -62,7 +76,9 @@ export function Grid(props: GridProps): ReactElement {
         aria-colcount={table.columns.length + 1}
         aria-multiselectable="true"
         aria-activedescendant={
-          activeIndex >= first && activeIndex < last ? cellId(active.place, active.column) : undefined
+          isInHeader || (activeIndex >= first && activeIndex < last)
+            ? cellId(active.place, active.column)
+            : undefined
         }
         {...handlers}
       >
@@ -72,7 +88,11 @@ export function Grid(props: GridProps): ReactElement {
             <col key={`${column}`} style={{ width: `calc(${width}ch + 18px)` }} />
           ))}
         </colgroup>
-        <GridHead table={table} problems={problems} sort={sort} sortBy={sortBy} />
+        <GridHead
+          {...{ table, problems, sort, sortBy }}
+          activeColumn={isInHeader ? active.column : undefined}
+          editor={isInHeader ? editor : undefined}
+        />
         <tbody>
           <Gap rows={first} />
           {places.slice(first, last).map((place, at) => {
@@ -83,6 +103,7 @@ export function Grid(props: GridProps): ReactElement {
                 table={table}
                 place={place}
                 problems={problems}
+                isFound={isFound}
                 isSought={table.rowNumbers[place] === row}
                 rowIndex={index + 2}
                 selected={index >= block.rows[0] && index <= block.rows[1] ? block.columns : undefined}
@@ -96,6 +117,11 @@ export function Grid(props: GridProps): ReactElement {
       </table>
     </section>
   );
+}
+
+function useFound(words: string): (text: string) => boolean {
+  const sought = words.trim().toLowerCase();
+  return useCallback((text: string) => sought !== "" && text.toLowerCase().includes(sought), [sought]);
 }
 
 interface Sought extends Pick<GridProps, "row" | "table" | "places" | "select"> {

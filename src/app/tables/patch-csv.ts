@@ -13,20 +13,30 @@ export interface CsvRow {
   readonly next: number;
 }
 
+export interface CsvPatch {
+  /** What becomes of rows, by their number in the text. */
+  readonly rows: ReadonlyMap<number, RowPatch>;
+  /** Rows to put directly above a row of the text, from above downward. */
+  readonly above?: ReadonlyMap<number, readonly (readonly string[])[]>;
+  /** The sign between cells; a comma where absent. */
+  readonly delimiter?: string;
+}
+
 /** Changes rows of a delimited text, counted as a spreadsheet does; every other sign of it stays as it is. */
-export function patchCsv(
-  text: string,
-  patches: ReadonlyMap<number, RowPatch>,
-  delimiter: string = ",",
-): string {
-  const last = Math.max(0, ...patches.keys());
+export function patchCsv(text: string, { rows, above = new Map(), delimiter = "," }: CsvPatch): string {
+  const last = Math.max(0, ...rows.keys(), ...above.keys());
   const lineEnd = /\r\n|\r|\n/.exec(text)?.[0] ?? "\n";
   const parts: string[] = [];
   let from = 0;
   let copied = 0;
   for (let row = 1; row <= last; row++) {
     const record = rowAt(text, from, delimiter);
-    const patch = patches.get(row);
+    const put = above.get(row);
+    if (put !== undefined) {
+      parts.push(text.slice(copied, from), ...put.map((cells) => writtenRow(cells, delimiter) + lineEnd));
+      copied = from;
+    }
+    const patch = rows.get(row);
     if (patch !== undefined) {
       parts.push(text.slice(copied, from), patchedRow(text, record, { patch, delimiter }));
       const isRemoved = patch.kind === "removed";
@@ -42,6 +52,9 @@ export function patchCsv(
   const patched = parts.join("") + text.slice(copied);
   return /[\r\n]$/.test(text) && !/(?:^|[\r\n])$/.test(patched) ? patched + lineEnd : patched;
 }
+
+const writtenRow = (cells: readonly string[], delimiter: string): string =>
+  cells.map((cell) => written(cell, delimiter)).join(delimiter);
 
 function patchedRow(
   text: string,
@@ -64,7 +77,36 @@ const written = (cell: string, delimiter: string): string =>
 
 /** A cell without the quotes of its writing. */
 export const unquoted = (cell: string): string =>
-  /^"(?:[^"]|"")*"$/.test(cell) ? cell.slice(1, -1).replaceAll('""', '"') : cell;
+  isQuoted.test(cell) ? cell.trimEnd().slice(1, -1).replaceAll('""', '"') : cell;
+
+const isQuoted = /^"(?:[^"]|"")*" *$/;
+
+/** A cell that begins with a quote and is not closed as it should be. */
+export const isMalformed = (cell: string): boolean => cell.startsWith('"') && !isQuoted.test(cell);
+
+/** Every row of a delimited text: cells without quotes, and which of them are quoted wrongly. */
+export function* rowsOf(text: string, delimiter: string): Generator<WrittenRow> {
+  let from = 0;
+  for (let row = 1; from < text.length; row++) {
+    const { spans, next } = rowAt(text, from, delimiter);
+    const raw = Array.from({ length: spans.length / 2 }, (_, at) =>
+      text.slice(spans[2 * at], spans[2 * at + 1]),
+    );
+    yield {
+      row,
+      cells: raw.map(unquoted),
+      malformed: raw.flatMap((cell, column) => (isMalformed(cell) ? [column] : [])),
+    };
+    from = next;
+  }
+}
+
+export interface WrittenRow {
+  readonly row: number;
+  readonly cells: readonly string[];
+  /** Columns whose quotes are not as they should be: these cells stand with them. */
+  readonly malformed: readonly number[];
+}
 
 /** One row of a delimited text, from a place in it. */
 export function rowAt(text: string, from: number, delimiter: string): CsvRow {
@@ -83,20 +125,18 @@ export function rowAt(text: string, from: number, delimiter: string): CsvRow {
 }
 
 function cellEnd(text: string, start: number, delimiter: string): number {
-  let at = start;
-  if (text[at] === '"') {
-    at = closingQuote(text, at + 1, delimiter);
-  }
+  // A quote that nothing closes is a sign like any other.
+  let at = text[start] === '"' ? (closingQuote(text, start + 1, delimiter) ?? start) : start;
   while (at < text.length && text[at] !== delimiter && text[at] !== "\n" && text[at] !== "\r") at += 1;
   return at;
 }
 
 /** The quote that ends a cell stands, spaces aside, before what parts cells or rows. */
-function closingQuote(text: string, from: number, delimiter: string): number {
+function closingQuote(text: string, from: number, delimiter: string): number | undefined {
   let at = from;
   for (;;) {
     at = text.indexOf('"', at);
-    if (at < 0) return text.length;
+    if (at < 0) return undefined;
     if (text[at + 1] === '"') {
       at += 2;
       continue;

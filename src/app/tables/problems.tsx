@@ -5,6 +5,7 @@ import marginStyles from "../margin/margin.module.css";
 import { usePage } from "../state/page-context.ts";
 import { editsByFile } from "./edits.ts";
 import { heldEdits } from "./history.ts";
+import { rowNumbering } from "./row-order.ts";
 import styles from "./tables.module.css";
 
 const SHOWN_AT_ONCE = 40;
@@ -38,19 +39,23 @@ export function Problems({ analysis }: { readonly analysis: Analysis }): ReactEl
 /** Writes what is safe to write where a problem has one mend alone. */
 function Mend({ fix }: { readonly fix: Fix }): ReactElement | null {
   const { state, dispatch, study } = usePage();
-  const sheet = study.workedOut?.sheets.find(({ file }) => file === fix.file);
+  const { workedOut } = study;
+  const sheet = workedOut?.analysis.study.sheets.find(({ file }) => file === fix.file);
   const column = sheet?.headers.indexOf(fix.column) ?? -1;
-  if (sheet === undefined || column < 0) return null;
+  if (workedOut === undefined || sheet === undefined || column < 0) return null;
+  const { file, now } = fix;
   const mend = () => {
-    const edited = editsByFile(heldEdits(state.history)).get(fix.file)?.cells.get(fix.row)?.get(column);
-    const was = edited ?? sheet.rows[sheet.rowNumbers.indexOf(fix.row)]?.[column] ?? "";
-    const { file, row, now } = fix;
-    const label = `mending ${file}, row ${row}`;
+    // The row as the last analysis counts it, by the number by which edits know it.
+    const foundAt = editsByFile(heldEdits(workedOut.history)).get(file);
+    const row = rowNumbering(foundAt?.added ?? []).known(fix.row);
+    const edited = editsByFile(heldEdits(state.history)).get(file)?.cells.get(row)?.get(column);
+    const was = edited ?? sheet.rows.at(sheet.rowNumbers.indexOf(fix.row))?.[column] ?? "";
+    const label = `mending ${file}, row ${fix.row}`;
     dispatch({ kind: "edited", step: { label, edits: [{ kind: "cell", file, row, column, was, now }] } });
   };
   return (
     <button type="button" className={styles.more} onClick={mend}>
-      {fix.now === "" ? "Empty the cell" : `Write “${fix.now}”`}
+      {now === "" ? "Empty the cell" : `Write “${now}”`}
     </button>
   );
 }

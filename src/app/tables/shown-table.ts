@@ -1,10 +1,13 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { Sheet } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
+import { baseName } from "../../core/tables/base-name.ts";
 import { resultTables } from "../../report/tables/index.ts";
-import { NO_EDITS, type TableEdits } from "./edits.ts";
+import { editedHeaders, NO_EDITS, type TableEdits } from "./edits.ts";
+import type { GivenTable } from "./given-table.ts";
+import { rowNumbering, rowsInOrder } from "./row-order.ts";
 
-/** A table as the grid shows it: a sheet that was read, or a table of results. */
+/** A table as the grid shows it: a table of the study, or one of results. */
 export interface ShownTable {
   /** The sheet's file, or the result table's name: its `table` in the address. */
   readonly id: string;
@@ -13,12 +16,18 @@ export interface ShownTable {
   readonly rows: readonly (readonly string[])[];
   /** As a spreadsheet counts them, the header being row 1. */
   readonly rowNumbers: readonly number[];
+  /** The numbers by which edits know the rows. */
+  readonly rowIds: readonly number[];
+  /** The rows of the file that the header takes; none where the names of the columns cannot be written in. */
+  readonly headerRows: readonly number[];
   readonly problems: readonly Problem[];
   readonly isEditable: boolean;
-  /** Why each row that is set aside is. */
+  /** Why each row that is set aside is, by the number by which edits know it. */
   readonly setAside: ReadonlyMap<number, string>;
-  /** The number that the next added row gets. */
-  readonly nextRow: number;
+  /** Rows that could not be read as given, with their columns that are quoted wrongly, likewise. */
+  readonly unread: ReadonlyMap<number, readonly number[]>;
+  /** By which edits will know the next added row, and the number that it is shown under behind all rows. */
+  readonly nextRow: { readonly id: number; readonly shown: number };
 }
 
 export interface ShownColumn {
@@ -26,67 +35,123 @@ export interface ShownColumn {
   /** What the column was taken to be, or what it holds. */
   readonly meaning: string;
   readonly isNumber: boolean;
+  /** Whether it lies beyond the header: only rows that could not be read have cells there. */
+  readonly isBeyond?: boolean;
 }
 
-/** A table as it was read, with what the last analysis says of it: all that no edit changes. */
-export type ReadTable = Pick<ShownTable, "columns" | "problems"> & {
-  readonly sheet: Sheet;
-  /** The last row that was read or told of. */
+/** A table as it was given, with what the last analysis says of it: all that no edit changes. */
+export interface ReadTable {
+  readonly given: GivenTable;
+  readonly meanings: readonly string[];
+  readonly isNumber: readonly boolean[];
+  /** Problems with the rows' numbers by which edits know them. */
+  readonly problems: readonly Problem[];
+  /** The last row that the file has. */
   readonly lastRow: number;
-};
+}
 
-export function readTables(sheets: readonly Sheet[], problems: readonly Problem[]): readonly ReadTable[] {
-  return sheets.map((sheet) => {
-    const { file, headers, columns, rows, rowNumbers } = sheet;
-    const own = problems.filter((problem) => problem.file === file);
+/** What an analysis found, and the edits that it rests on. */
+export interface Found {
+  readonly sheets: readonly Sheet[];
+  readonly problems: readonly Problem[];
+  readonly edits: ReadonlyMap<string, TableEdits>;
+}
+
+/** More columns than this beyond the header are not shown. */
+const MOST_BEYOND = 64;
+
+export function readTables(tables: readonly GivenTable[], found: Found): readonly ReadTable[] {
+  return tables.map((given) => {
+    const { file, headers, rows, rowNumbers, unread } = given;
+    const now = found.sheets.find((sheet) => sheet.file === file);
+    const columns = now?.columns.length === headers.length ? now.columns : given.columns;
+    const numbering = rowNumbering(found.edits.get(file)?.added ?? []);
+    const beyond = [...unread.keys()].reduce(
+      (most, row) => Math.max(most, (rows[rowNumbers.indexOf(row)]?.length ?? 0) - headers.length),
+      0,
+    );
+    const few = rows.slice(0, 200);
     return {
-      sheet,
-      columns: headers.map((header, index) => ({
-        header,
-        meaning: columns[index] ?? "kept, not used",
-        isNumber: holdsNumbers(rows.slice(0, 200).map((row) => row[index] ?? "")),
-      })),
-      problems: own,
-      lastRow: own.reduce((most, { row = 0 }) => Math.max(most, row), rowNumbers.at(-1) ?? 1),
+      given,
+      meanings: [
+        ...headers.map((_, index) => columns[index] ?? (now === undefined ? "not read" : "kept, not used")),
+        ...Array.from({ length: Math.min(beyond, MOST_BEYOND) }, () => BEYOND),
+      ],
+      isNumber: headers.map((_, index) => holdsNumbers(few.map((row) => row[index] ?? ""))),
+      problems: found.problems
+        .filter((problem) => baseName(problem.file) === file)
+        .map((problem) =>
+          problem.row === undefined ? problem : { ...problem, row: numbering.known(problem.row) },
+        ),
+      lastRow: Math.max(rowNumbers.at(-1) ?? 1, ...given.dialect.headerRows),
     };
   });
 }
+
+const BEYOND = "no column is named here";
 
 /** The study's tables with the edits made, marked with the problems of the last analysis. */
 export const studyTables = (
   tables: readonly ReadTable[],
   edits: ReadonlyMap<string, TableEdits>,
-): readonly ShownTable[] => tables.map((table) => studyTable(table, edits.get(table.sheet.file) ?? NO_EDITS));
+): readonly ShownTable[] => tables.map((table) => studyTable(table, edits.get(table.given.file) ?? NO_EDITS));
 
 function studyTable(
-  { sheet, columns, problems, lastRow }: ReadTable,
-  { cells, added, setAside }: TableEdits,
+  { given, meanings, isNumber, problems, lastRow }: ReadTable,
+  edits: TableEdits,
 ): ShownTable {
-  const { file, headers, rows: read, rowNumbers: readNumbers } = sheet;
-  const rowNumbers = added.length === 0 ? readNumbers : [...readNumbers, ...added];
+  const { cells, added, setAside } = edits;
+  const { file, dialect, rows: read, rowNumbers: readNumbers, unread } = given;
+  const headers = editedHeaders(given, edits);
+  const rowIds = rowsInOrder(readNumbers, added);
+  const numbering = rowNumbering(added);
+  const isMoved = added.some(({ above }) => above !== undefined);
+  const nextId = added.reduce((most, { row }) => Math.max(most, row), lastRow) + 1;
   return {
     id: file,
     title: file,
-    columns,
-    rows: cells.size === 0 && added.length === 0 ? read : editedRows(read, rowNumbers, { cells, headers }),
-    rowNumbers,
-    problems,
+    columns: meanings.map((meaning, index) => ({
+      header: headers[index] ?? "",
+      meaning,
+      isNumber: isNumber[index] === true,
+      ...(index >= headers.length && { isBeyond: true }),
+    })),
+    rows:
+      cells.size === 0 && added.length === 0
+        ? read
+        : editedRows(given, rowIds, { cells, width: headers.length }),
+    rowIds,
+    rowNumbers: isMoved ? rowIds.map(numbering.shown) : rowIds,
+    headerRows: dialect.headerRows,
+    problems: isMoved
+      ? problems.map((problem) =>
+          problem.row === undefined ? problem : { ...problem, row: numbering.shown(problem.row) },
+        )
+      : problems,
     isEditable: true,
     setAside,
-    nextRow: Math.max(lastRow, added.at(-1) ?? 0) + 1,
+    unread,
+    nextRow: { id: nextId, shown: lastRow + added.length + 1 },
   };
 }
 
 function editedRows(
-  read: readonly (readonly string[])[],
-  rowNumbers: readonly number[],
-  { cells, headers }: Pick<TableEdits, "cells"> & Pick<Sheet, "headers">,
+  { rows: read, rowNumbers: readNumbers }: GivenTable,
+  rowIds: readonly number[],
+  { cells, width }: Pick<TableEdits, "cells"> & { readonly width: number },
 ): readonly (readonly string[])[] {
-  return rowNumbers.map((number, place) => {
-    const changed = cells.get(number);
-    const row = read[place];
+  let place = 0;
+  return rowIds.map((id) => {
+    const isRead = readNumbers[place] === id;
+    const row = isRead ? read[place++] : undefined;
+    const changed = cells.get(id);
     if (changed === undefined && row !== undefined) return row;
-    return headers.map((_, column) => changed?.get(column) ?? row?.[column] ?? "");
+    const length = Math.max(
+      width,
+      row?.length ?? 0,
+      ...[...(changed?.keys() ?? [])].map((column) => column + 1),
+    );
+    return Array.from({ length }, (_, column) => changed?.get(column) ?? row?.[column] ?? "");
   });
 }
 
@@ -106,10 +171,13 @@ export function shownResults(analysis: Analysis): readonly ShownTable[] {
     })),
     rows: rows.map((row) => row.map((cell) => (cell === undefined ? "" : String(cell)))),
     rowNumbers: rows.map((_, index) => index + 2),
+    rowIds: rows.map((_, index) => index + 2),
+    headerRows: [],
     problems: [],
     isEditable: false,
     setAside: new Map(),
-    nextRow: rows.length + 2,
+    unread: new Map(),
+    nextRow: { id: rows.length + 2, shown: rows.length + 2 },
   }));
 }
 
@@ -130,50 +198,3 @@ export function problemsByCell(
 }
 
 export const cellKey = (row: number, column: number): string => `${row}:${column}`;
-
-export interface RowChoice {
-  readonly words: string;
-  readonly onlyProblems: boolean;
-  readonly sort?: Sorting;
-}
-
-/** An order of rows by a column, as they stood when it was asked for: rows do not jump while a person types. */
-export interface Sorting {
-  readonly column: number;
-  readonly isDown: boolean;
-  readonly places: readonly number[];
-}
-
-/** Places of the rows to show: those that hold the words in some cell, those with a problem, in the order asked for. */
-export function chosenRows(table: ShownTable, { words, onlyProblems, sort }: RowChoice): readonly number[] {
-  const sought = words.trim().toLowerCase();
-  const places = ordered(table, sort);
-  if (sought === "" && !onlyProblems) return places;
-  const troubled = new Set(table.problems.map(({ row }) => row));
-  return places.filter(
-    (place) =>
-      (!onlyProblems || troubled.has(table.rowNumbers[place])) &&
-      (sought === "" || table.rows[place]?.some((cell) => cell.toLowerCase().includes(sought))),
-  );
-}
-
-function ordered({ rows }: ShownTable, sort: Sorting | undefined): readonly number[] {
-  if (sort === undefined) return [...rows.keys()];
-  const kept = sort.places.filter((place) => place < rows.length);
-  return [...kept, ...Array.from({ length: rows.length - kept.length }, (_, at) => kept.length + at)];
-}
-
-/** Numbers by size before texts by letter, blanks last in either direction. */
-export function sortedBy({ rows }: ShownTable, column: number, isDown: boolean): Sorting {
-  const sign = isDown ? -1 : 1;
-  const keys = rows.map((row) => (row[column] ?? "").trim());
-  const numbers = keys.map((key) => (key === "" ? Number.NaN : Number(key.replace(",", "."))));
-  const compare = (a: number, b: number): number => {
-    const [one, other] = [keys[a] ?? "", keys[b] ?? ""];
-    if (one === "" || other === "") return Number(one === "") - Number(other === "");
-    const [x, y] = [numbers[a] ?? Number.NaN, numbers[b] ?? Number.NaN];
-    if (Number.isNaN(x) !== Number.isNaN(y)) return sign * (Number.isNaN(x) ? 1 : -1);
-    return sign * (Number.isNaN(x) ? one.localeCompare(other) : x - y);
-  };
-  return { column, isDown, places: [...rows.keys()].toSorted(compare) };
-}

@@ -1,9 +1,12 @@
 import { type ReactElement, useState } from "react";
 import { usePage } from "../state/page-context.ts";
-import { giveOutStudy, giveOutTable } from "../study/give-out.ts";
-import { addedRowStep, setAsideStep, takenBackStep } from "./grid-steps.ts";
+import { GridKeys } from "./grid-keys.tsx";
+import { rowId, setAsideStep, takenBackStep } from "./grid-steps.ts";
+import type { Sorting } from "./row-choice.ts";
+import { RowsMenu } from "./rows-menu.tsx";
+import { SaveMenu } from "./save-menu.tsx";
 import { blockOf, blockPlaces, type Selection } from "./selection.ts";
-import type { ShownTable, Sorting } from "./shown-table.ts";
+import type { ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
 
 interface TableToolsProps {
@@ -15,14 +18,16 @@ interface TableToolsProps {
   readonly sort?: Sorting;
   readonly sortBy: (column: number | undefined) => void;
   readonly tell: (words: string) => void;
+  readonly insert: (place: number) => void;
   /** Goes to the row that was just added. */
   readonly goToNew: () => void;
+  readonly rename: () => void;
 }
 
 /** What can be done with a table beside writing in it. */
 export function TableTools(props: TableToolsProps): ReactElement {
-  const { table, onlyProblems, choose, sort, sortBy, goToNew } = props;
-  const { state, dispatch, study } = usePage();
+  const { table, onlyProblems, choose, sort, sortBy, tell } = props;
+  const { state, dispatch } = usePage();
   const { steps, held } = state.history;
   return (
     <div className={styles.tools}>
@@ -52,15 +57,7 @@ export function TableTools(props: TableToolsProps): ReactElement {
       </label>
       {table.isEditable && (
         <>
-          <button
-            type="button"
-            onClick={() => {
-              dispatch({ kind: "edited", step: addedRowStep(table) });
-              goToNew();
-            }}
-          >
-            Add row
-          </button>
+          <RowsMenu {...props} />
           <SetAside {...props} />
           <button type="button" disabled={held === 0} onClick={() => dispatch({ kind: "undone" })}>
             Undo
@@ -68,20 +65,13 @@ export function TableTools(props: TableToolsProps): ReactElement {
           <button type="button" disabled={held === steps.length} onClick={() => dispatch({ kind: "redone" })}>
             Redo
           </button>
-          <button
-            type="button"
-            onClick={() => study.workedOut && void giveOutTable(study.workedOut, state.history, table.id)}
-          >
-            Save CSV
-          </button>
-          <button
-            type="button"
-            onClick={() => study.workedOut && void giveOutStudy(study.workedOut, state.history)}
-          >
-            Save zip
-          </button>
+          <SaveMenu file={table.id} tell={tell} />
         </>
       )}
+      <button type="button" aria-pressed={state.isLogOpen} onClick={() => dispatch({ kind: "log-turned" })}>
+        Section log
+      </button>
+      <GridKeys />
     </div>
   );
 }
@@ -95,9 +85,9 @@ function SetAside({ table, places, selection, tell }: TableToolsProps): ReactEle
     setIsAsking(false);
     setReason("");
   };
-  const rows = blockPlaces(blockOf(selection, places), places).map((place) => table.rowNumbers[place] ?? 0);
-  const aside = rows.filter((row) => table.setAside.has(row));
-  const name = rows.length === 1 ? `row ${rows[0]}` : `${rows.length} rows`;
+  const own = blockPlaces(blockOf(selection, places), places);
+  const aside = own.map((place) => rowId(table, place)).filter((row) => table.setAside.has(row));
+  const name = own.length === 1 ? `row ${table.rowNumbers[own[0] ?? 0]}` : `${own.length} rows`;
   if (aside.length > 0)
     return (
       <button
@@ -109,7 +99,7 @@ function SetAside({ table, places, selection, tell }: TableToolsProps): ReactEle
     );
   if (!isAsking)
     return (
-      <button type="button" disabled={rows.length === 0} onClick={() => setIsAsking(true)}>
+      <button type="button" disabled={own.length === 0} onClick={() => setIsAsking(true)}>
         Set aside…
       </button>
     );
@@ -118,7 +108,7 @@ function SetAside({ table, places, selection, tell }: TableToolsProps): ReactEle
       className={styles.asking}
       onSubmit={(event) => {
         event.preventDefault();
-        dispatch({ kind: "edited", step: setAsideStep(table, rows, reason.trim()) });
+        dispatch({ kind: "edited", step: setAsideStep(table, own, reason.trim()) });
         tell(`${name} set aside.`);
         end();
       }}

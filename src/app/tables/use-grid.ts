@@ -5,15 +5,24 @@ import {
   type MouseEvent,
   type RefObject,
   useRef,
-  useState,
 } from "react";
 import type { Leaving } from "./cell-editor.tsx";
 import { blockCells, blockText } from "./clipboard.ts";
 import { cellUnder } from "./grid-row.tsx";
-import { clearedStep, pastedStep, typedStep } from "./grid-steps.ts";
+import { clearedStep, filledDownStep, pastedStep, renamedStep, rowId, typedStep } from "./grid-steps.ts";
 import type { EditStep } from "./history.ts";
-import { blockOf, blockPlaces, movedBy, type Selection, type View } from "./selection.ts";
+import {
+  blockOf,
+  blockPlaces,
+  type Cell,
+  HEADER,
+  isHeader,
+  movedBy,
+  type Selection,
+  type View,
+} from "./selection.ts";
 import type { ShownTable } from "./shown-table.ts";
+import type { Finding } from "./use-find.ts";
 
 interface GridUse {
   readonly table: ShownTable;
@@ -23,11 +32,16 @@ interface GridUse {
   readonly selection: Selection;
   readonly select: (selection: Selection) => void;
   readonly edit: (step: EditStep) => void;
+  /** Puts a blank row above the row of a place, and goes to it. */
+  readonly insert: (place: number) => void;
+  readonly find: Finding;
+  readonly draft: Draft;
+  readonly setDraft: (draft: Draft) => void;
   readonly tell: (words: string) => void;
 }
 
 /** The text with which the active cell is being written in; undefined while none is. */
-type Draft = string | undefined;
+export type Draft = string | undefined;
 
 const LEAVING_KEYS: Readonly<Record<Exclude<Leaving, "stay">, string>> = {
   down: "ArrowDown",
@@ -38,15 +52,13 @@ const LEAVING_KEYS: Readonly<Record<Exclude<Leaving, "stay">, string>> = {
 
 /** Keys, pointer and clipboard of a grid, as spreadsheets have them. */
 export function useGrid(grid: RefObject<HTMLTableElement | null>, use: GridUse) {
-  const { table, view, pageRows, selection, select, edit, tell } = use;
-  const [draft, setDraft] = useState<Draft>();
+  const { table, view, pageRows, selection, select, edit, tell, draft, setDraft } = use;
   // A person who came by Tab leaves by Tab, until another key says that they work here.
   const isPassing = useRef(true);
   const isPressed = useRef(false);
   const { active } = selection;
   const block = blockOf(selection, view.places);
-  const canWrite =
-    table.isEditable && view.places.length > 0 && !table.setAside.has(table.rowNumbers[active.place] ?? 0);
+  const isInHeader = isHeader(selection);
 
   const move = (key: string, isControl = false, isShift = false) => {
     const next = movedBy({ key, isControl, isShift }, selection, { ...view, pageRows: pageRows() });
@@ -57,30 +69,51 @@ export function useGrid(grid: RefObject<HTMLTableElement | null>, use: GridUse) 
   const onKeyDown = (event: KeyboardEvent) => {
     const { key, shiftKey, altKey } = event;
     const isControl = event.ctrlKey || event.metaKey;
-    if (altKey) return;
     if (key === "Escape") isPassing.current = true;
     else if (key === "Tab" && isPassing.current) return;
     else if (key !== "Tab" && key !== "Shift") isPassing.current = false;
-    if (!(move(key, isControl, shiftKey) || act(key, isControl))) return;
-    event.preventDefault();
+    const isDone = altKey
+      ? insertBy(key)
+      : key === "Enter" && shiftKey
+        ? move("ArrowUp")
+        : move(key, isControl, shiftKey) || command(key, isControl, shiftKey) || write(key, isControl);
+    if (isDone) event.preventDefault();
   };
 
-  const act = (key: string, isControl: boolean): boolean => {
-    if (isControl && key.toLowerCase() === "a") {
-      selectAll();
-      return true;
-    }
-    if (!table.isEditable || isControl) return false;
-    if (key === "Delete" || key === "Backspace") edit(clearedStep(table, block, view.places));
-    else if (key === "Enter" || key === "F2") write(table.rows[active.place]?.[active.column] ?? "");
-    else if (/^.$/u.test(key)) write(key);
+  const insertBy = (key: string): boolean => {
+    if (!table.isEditable || isInHeader || !(key === "ArrowUp" || key === "ArrowDown")) return false;
+    use.insert(active.place + (key === "ArrowDown" ? 1 : 0));
+    return true;
+  };
+
+  const command = (key: string, isControl: boolean, isShift: boolean): boolean => {
+    const name = key.toLowerCase();
+    if (isControl && name === "a") selectAll();
+    else if (isControl && name === "f") use.find.open();
+    else if (key === "F3") use.find.next(isShift);
+    else if (isControl && name === "d" && table.isEditable) edit(filledDownStep(table, block, view.places));
     else return false;
     return true;
   };
 
-  const write = (start: string) => {
-    if (canWrite) setDraft(start);
-    else tell("This row is set aside: take it back before writing in it.");
+  const write = (key: string, isControl: boolean): boolean => {
+    if (!table.isEditable || isControl) return false;
+    if (key === "Delete" || key === "Backspace") clear();
+    else if (key === "Enter" || key === "F2") start(textOf(table, active));
+    else if (/^.$/u.test(key)) start(key);
+    else return false;
+    return true;
+  };
+
+  const clear = () => {
+    if (isInHeader) tell("A column keeps its name: F2 writes another.");
+    else edit(clearedStep(table, block, view.places));
+  };
+
+  const start = (text: string) => {
+    const hindrance = hindranceOf(table, active, view.places);
+    if (hindrance === undefined) setDraft(text);
+    else tell(hindrance);
   };
 
   const selectAll = () => {
@@ -96,7 +129,7 @@ export function useGrid(grid: RefObject<HTMLTableElement | null>, use: GridUse) 
           start: draft,
           take: (text: string, leaving: Leaving) => {
             setDraft(undefined);
-            edit(typedStep(table, active, text));
+            edit(isInHeader ? renamedStep(table, active.column, text) : typedStep(table, active, text));
             if (leaving === "stay") return;
             grid.current?.focus({ preventScroll: true });
             move(LEAVING_KEYS[leaving], false, leaving === "left");
@@ -126,25 +159,31 @@ export function useGrid(grid: RefObject<HTMLTableElement | null>, use: GridUse) 
   };
   const onDoubleClick = (event: MouseEvent) => {
     if (table.isEditable && cellUnder(event) !== undefined && draft === undefined)
-      write(table.rows[active.place]?.[active.column] ?? "");
+      start(textOf(table, active));
   };
 
   const onCopy = (event: ClipboardEvent) => {
     const [first, last] = block.columns;
-    const rows = blockPlaces(block, view.places).map((place) =>
-      table.columns.slice(first, last + 1).map((_, at) => table.rows[place]?.[first + at] ?? ""),
-    );
+    const rows = isInHeader
+      ? [[textOf(table, active)]]
+      : blockPlaces(block, view.places).map((place) =>
+          table.columns.slice(first, last + 1).map((_, at) => table.rows[place]?.[first + at] ?? ""),
+        );
     event.clipboardData.setData("text/plain", blockText(rows));
     event.preventDefault();
   };
   const onCut = (event: ClipboardEvent) => {
     onCopy(event);
-    if (table.isEditable) edit(clearedStep(table, block, view.places));
+    if (table.isEditable) clear();
   };
   const onPaste = (event: ClipboardEvent) => {
     if (!table.isEditable) return;
     event.preventDefault();
     const cells = blockCells(event.clipboardData.getData("text/plain"));
+    if (isInHeader) {
+      start(cells[0]?.[0] ?? "");
+      return;
+    }
     edit(pastedStep(table, { cells, block, places: view.places }));
     const beyond = (cells[0]?.length ?? 0) - (view.columns - block.columns[0]);
     tell(
@@ -158,4 +197,23 @@ export function useGrid(grid: RefObject<HTMLTableElement | null>, use: GridUse) 
     editor,
     handlers: { onKeyDown, onFocus, onMouseDown, onMouseMove, onDoubleClick, onCopy, onCut, onPaste },
   };
+}
+
+const textOf = (table: ShownTable, { place, column }: Cell): string =>
+  (place === HEADER ? table.columns[column]?.header : table.rows[place]?.[column]) ?? "";
+
+/** Why a cell cannot be written in; undefined where it can. */
+function hindranceOf(
+  table: ShownTable,
+  { place, column }: Cell,
+  places: readonly number[],
+): string | undefined {
+  if (place === HEADER) {
+    if (table.columns[column]?.isBeyond === true) return "No column of the file has its name here.";
+    return table.headerRows.length === 0 ? "The data package names these columns, not the file." : undefined;
+  }
+  if (places.length === 0) return "No row is shown here to write in.";
+  return table.setAside.has(rowId(table, place))
+    ? "This row is set aside: take it back before writing in it."
+    : undefined;
 }

@@ -24,6 +24,8 @@ export interface SheetParts {
   /** Right edge of what is drawn in the body, and its lower edge with names and tick labels. */
   readonly right: number;
   readonly bottom: number;
+  /** Least width of the sheet; default that of a plate on a page of its own. */
+  readonly narrowest?: number;
   readonly body: ReactNode;
   readonly columns?: readonly PlacedColumn[];
   readonly legend?: readonly LegendEntry[];
@@ -39,9 +41,12 @@ const WIDEST_SUBTITLE = 420;
 
 /** Title above, legend, notes and credits beneath: a drawing that can be published as it stands. */
 export function setSheet(parts: SheetParts): Drawing {
-  const { id, title, description, columns = [], panels, view } = parts;
-  const subtitleWidth = Math.min(textWidth(parts.subtitle, TEXT.unit) + 1, WIDEST_SUBTITLE);
-  const width = Math.max(parts.right + MARGIN, NARROWEST, subtitleWidth + 2 * MARGIN);
+  const { id, title, description, columns = [], panels, view, narrowest = NARROWEST } = parts;
+  const subtitleWidth = Math.min(
+    textWidth(parts.subtitle, TEXT.unit) + 1,
+    narrowest < NARROWEST ? narrowest - 2 * MARGIN : WIDEST_SUBTITLE,
+  );
+  const width = Math.max(parts.right + MARGIN, narrowest, subtitleWidth + 2 * MARGIN);
   const room = width - 2 * MARGIN;
   const patterns = [
     ...new Set([...columns.flatMap((column) => column.patterns ?? []), ...(parts.patterns ?? [])]),

@@ -98,7 +98,9 @@ describe("any table", () => {
       fc.property(table, ends, plain, fc.tuple(fc.nat(), fc.nat()), (rows, end, now, [r, c]) => {
         const text = rows.map((row) => row.map(quoted).join(",") + end).join("");
         const [row, column] = [(r % rows.length) + 1, c % 3];
-        const patched = patchCsv(text, new Map([[row, { kind: "cells", cells: new Map([[column, now]]) }]]));
+        const patched = patchCsv(text, {
+          rows: new Map([[row, { kind: "cells", cells: new Map([[column, now]]) }]]),
+        });
         const expected = rows.map((cells, at) =>
           at === row - 1 ? cells.map((cell, place) => (place === column ? now : cell)) : cells,
         );
@@ -120,7 +122,7 @@ describe("any table", () => {
         const text = rows.map((row) => row.join(",")).join(end) + (isEnded ? end : "");
         const row = r % rows.length;
         const cells = new Map([[0, rows[row]?.[0] ?? ""]]);
-        expect(patchCsv(text, new Map([[row + 1, { kind: "cells", cells }]]))).toBe(text);
+        expect(patchCsv(text, { rows: new Map([[row + 1, { kind: "cells", cells }]]) })).toBe(text);
       }),
     );
   });

@@ -49,9 +49,9 @@ describe("a study that is given out", () => {
     const once = giveOut(files, [noted("=1+1")]);
     expect(text(once.get("occurrences.csv"))).toContain("Orsk,Velorites b,-2,'=1+1\n");
     const read = readStudy(once);
-    expect(read.sheets[0]?.rows[1]).toEqual(["Orsk", "Velorites b", "-2", "=1+1"]);
+    expect(read.sheets[0]?.rows.at(1)).toEqual(["Orsk", "Velorites b", "-2", "=1+1"]);
     const twice = giveOut(once, [noted("@home")]);
-    expect(readStudy(twice).sheets[0]?.rows[1]?.[3]).toBe("@home");
+    expect(readStudy(twice).sheets[0]?.rows.at(1)?.[3]).toBe("@home");
     expect(readStudy(giveOut(once, [])).sheets[0]?.rows).toEqual(read.sheets[0]?.rows);
     expect(text(giveOut(once, []).get("occurrences.csv"))).toBe(text(once.get("occurrences.csv")));
   });

@@ -1,0 +1,62 @@
+import { ChevronDown, ChevronUp } from "lucide-react";
+import type { ReactElement } from "react";
+import { usePage } from "../state/page-context.ts";
+import type { ShownTable } from "./shown-table.ts";
+import styles from "./tables.module.css";
+import type { Finding } from "./use-find.ts";
+
+interface FindToolsProps {
+  readonly table: ShownTable;
+  readonly find: Finding;
+  /** Whether rows without the words are shown too. */
+  readonly wantsAll: boolean;
+  readonly setAll: (wantsAll: boolean) => void;
+}
+
+/** Words to look for: rows that hold them, and one cell after another. */
+export function FindTools({ table, find, wantsAll, setAll }: FindToolsProps): ReactElement {
+  const { state, go } = usePage();
+  const words = state.place.find ?? "";
+  return (
+    <div className={styles.find}>
+      <label>
+        Find{" "}
+        <input
+          ref={find.field}
+          type="search"
+          value={words}
+          placeholder={`in ${table.title}`}
+          onChange={(event) => go({ find: event.currentTarget.value, table: table.id, row: undefined })}
+          onKeyDown={(event) => {
+            if (event.key === "Enter" || event.key === "F3") find.next(event.shiftKey);
+            else return;
+            event.preventDefault();
+          }}
+        />
+      </label>
+      {words !== "" && (
+        <>
+          <button
+            type="button"
+            aria-label="Find the one before"
+            title="Shift + F3"
+            onClick={() => find.next(true)}
+          >
+            <ChevronUp aria-hidden size={15} />
+          </button>
+          <button type="button" aria-label="Find the next" title="F3" onClick={() => find.next(false)}>
+            <ChevronDown aria-hidden size={15} />
+          </button>
+          <label className={styles.check}>
+            <input
+              type="checkbox"
+              checked={wantsAll}
+              onChange={(event) => setAll(event.currentTarget.checked)}
+            />
+            all rows
+          </label>
+        </>
+      )}
+    </div>
+  );
+}
