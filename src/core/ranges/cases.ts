@@ -22,6 +22,7 @@ export interface RangesInput {
 
 /** Both ends of one taxon's range in one section; the base upside down. */
 export interface TaxonCases {
+  readonly isCandidate: boolean;
   readonly top: RangeCase;
   readonly base: RangeCase;
 }
@@ -65,9 +66,7 @@ export function sectionCases(
   const { base } = sectionBase(section, settings, markers);
   const horizon = markers.main.bySection.get(section.name);
   const ofSection = taxa.filter((t) => t.section === section.name && t.heightsM.length > 0);
-  const reaching = new Set(
-    candidates.filter((c) => c.section === section.name && c.reachesTop).map((c) => c.taxon),
-  );
+  const marks = new Map(candidates.filter((c) => c.section === section.name).map((c) => [c.taxon, c]));
   const frames = new Map(
     [...groupBy(ofSection, (t) => t.group)].map(([group, ofGroup]) => [
       group,
@@ -80,7 +79,7 @@ export function sectionCases(
     const frame = frames.get(taxon.group);
     if (frame === undefined) return [];
     const shared = { section: section.name, end: "top", bottomM, topM, breaks, base, settings } as const;
-    return [taxonCases({ ...shared, ...frame, taxon }, horizon, reaching.has(taxon.taxon))];
+    return [taxonCases({ ...shared, ...frame, taxon }, horizon, marks.get(taxon.taxon))];
   });
 }
 
@@ -120,7 +119,12 @@ function withEffort(
   return horizons.map((horizon, i) => ({ ...horizon, effort: effort.efforts[i] }));
 }
 
-function taxonCases(upright: Upright, horizon: MarkerHorizon | undefined, reachesTop: boolean): TaxonCases {
+function taxonCases(
+  upright: Upright,
+  horizon: MarkerHorizon | undefined,
+  candidate: Candidate | undefined,
+): TaxonCases {
+  const reachesTop = candidate?.reachesTop ?? false;
   const { taxon, searched } = upright;
   const reachesBottom = isInFirst(taxon, searched);
   const asked =
@@ -131,6 +135,7 @@ function taxonCases(upright: Upright, horizon: MarkerHorizon | undefined, reache
     ...(isBelow ? { horizon: { ...asked, positionM: mirroredHeight(asked.positionM) } } : {}),
   };
   return {
+    isCandidate: candidate?.role === "candidate",
     top: {
       ...caseOf({ ...upright, ...(asked === undefined ? {} : { horizon: asked }) }),
       reachesTop,

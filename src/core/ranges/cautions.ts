@@ -2,6 +2,7 @@ import type { Caution } from "../basis.ts";
 import type { Markers } from "../markers/result.ts";
 import type { Section, Study } from "../study/model.ts";
 import { sectionBase } from "./base.ts";
+import type { Leading } from "./leading.ts";
 import type { RangeCase } from "./range-case.ts";
 import { recoveryCautions } from "./recovery-cautions.ts";
 import type { RangeEnd } from "./result.ts";
@@ -13,6 +14,7 @@ interface SectionRanges {
   readonly markers: Markers;
   readonly cases: readonly RangeCase[];
   readonly rows: readonly RangeEnd[];
+  readonly leading: Leading;
 }
 
 /** With so few horizons an interval mostly reflects its assumption. */
@@ -21,6 +23,7 @@ const FEW_HORIZONS = 4;
 /** What weakens the range ends of one section. */
 export function rangeCautions(input: SectionRanges): Caution[] {
   return [
+    ...declineCautions(input),
     ...baseCautions(input),
     ...samplingCautions(input),
     ...recoveryCautions(input.section.name, input.cases, input.study.settings),
@@ -29,6 +32,13 @@ export function rangeCautions(input: SectionRanges): Caution[] {
     ...counted(input, "range-published-only", ({ taxon }) => taxon.publishedHorizons !== undefined),
     ...outcomeCautions(input),
   ];
+}
+
+function declineCautions({ section, leading }: SectionRanges): Caution[] {
+  const { decline, methods } = leading;
+  if (decline === undefined) return [];
+  const numbers = { p: decline.p, finds: decline.finds, method: methods[0] };
+  return [{ code: "range-recovery-declines", section: section.name, numbers }];
 }
 
 function baseCautions({ section, study, markers, cases }: SectionRanges): Caution[] {

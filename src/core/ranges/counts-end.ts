@@ -5,6 +5,7 @@ import type { RangeEnd } from "./result.ts";
 import { horizonBound } from "./sampled-end.ts";
 import { furthestOfChances } from "./sampled-odds.ts";
 import { endPosterior, endQuantile } from "./sampled-posterior.ts";
+import type { Survival } from "./survival.ts";
 import { cutOffNote } from "./uniform-end.ts";
 
 /**
@@ -35,6 +36,14 @@ export function countsEnd(rangeCase: RangeCase): RangeEnd {
     ...bound,
     note: note(bound.note, shapeWords(total, shape), effortWords[counted.effort], words),
   };
+}
+
+/** Steps down at each barren sample, kappa at its largest likelihood. */
+export function countsSurvival(rangeCase: RangeCase): Survival | undefined {
+  const counted = countedRange(rangeCase);
+  const shape = typeof counted === "string" ? undefined : countsShape(counted);
+  if (typeof counted === "string" || shape === undefined) return undefined;
+  return { kind: "steps", barrenM: counted.barrenM, chances: countsChances(counted, shape) };
 }
 
 /** p(j) for j = 0..M_b at one kappa. */

@@ -1,5 +1,6 @@
 import { commonFields, type RangeCase } from "./range-case.ts";
 import type { RangeEnd, RangeMethod } from "./result.ts";
+import type { Survival } from "./survival.ts";
 import { boundOutcome, cutOffNote } from "./uniform-end.ts";
 import type { LevelAsked } from "./window-end.ts";
 
@@ -26,8 +27,24 @@ export interface Estimator {
   readonly estimate: (rangeCase: RangeCase) => Estimate;
 }
 
+/** The row of each case, and the chance of survival that its bound is a level of. */
+export interface EstimatedEnd {
+  (rangeCase: RangeCase): RangeEnd;
+  readonly survival: (rangeCase: RangeCase) => Survival | undefined;
+}
+
 /** The row that an estimator gives for each case: named outcomes first, then its bound, point, p and reach of H. */
-export function estimatedEnd({ method, reason, estimate }: Estimator): (rangeCase: RangeCase) => RangeEnd {
+export function estimatedEnd(estimator: Estimator): EstimatedEnd {
+  return Object.assign(rowBy(estimator), {
+    survival: (rangeCase: RangeCase): Survival | undefined => {
+      if (estimator.reason(rangeCase) !== undefined) return undefined;
+      const { chanceAt } = estimator.estimate(rangeCase);
+      return { kind: "curve", coordinate: rangeCase.coordinate, chanceAt };
+    },
+  });
+}
+
+function rowBy({ method, reason, estimate }: Estimator): (rangeCase: RangeCase) => RangeEnd {
   return (rangeCase) => {
     const common = { ...commonFields(rangeCase), method };
     const undefinedBecause = reason(rangeCase);

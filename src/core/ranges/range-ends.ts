@@ -1,13 +1,14 @@
-import type { Caution, Progress } from "../basis.ts";
-import type { Study } from "../study/model.ts";
+import type { Progress } from "../basis.ts";
+import type { Section, Study } from "../study/model.ts";
 import { coordinateBasis } from "./basis.ts";
 import { type RangesInput, sectionCases } from "./cases.ts";
 import { rangeCautions } from "./cautions.ts";
+import { caseUnder, type Leading, leadingMethods, marked } from "./leading.ts";
 import { leaningOf } from "./leaning.ts";
 import { rangeMethods } from "./methods.ts";
 import { turnedBack } from "./mirrored.ts";
 import { note, type RangeCase } from "./range-case.ts";
-import type { Leaning, RangeEnd, RangeMethod, Ranges, Taper } from "./result.ts";
+import type { RangeEnd, RangeMethod, Ranges } from "./result.ts";
 import { taper } from "./taper.ts";
 import { uniformEnd } from "./uniform-end.ts";
 
@@ -18,41 +19,58 @@ import { uniformEnd } from "./uniform-end.ts";
  */
 export function estimateRanges(study: Study, input: RangesInput, progress?: Progress): Ranges {
   const { methods } = study.settings.ranges;
-  const ends: RangeEnd[] = [];
-  const tapers: Taper[] = [];
-  const leanings: Leaning[] = [];
-  const cautions: Caution[] = [];
-  study.sections.forEach((section, index) => {
+  const bySection = study.sections.map((section, index) => {
     progress?.(`ranges: ${section.name}`, index, study.sections.length);
-    const both = sectionCases(section, study, input);
-    const cases = both.map(({ top }) => top);
-    const rows = cases.map((rangeCase) => rowsOf(rangeCase, methods));
-    const baseRows = both.map(({ base }) => rowsOf(base, methods));
-    ends.push(
-      ...both.flatMap((ofTaxon, i) => [
-        ...rows[i],
-        ...inclusiveEnds(ofTaxon.top),
-        ...baseRows[i].map(turnedBack),
-        ...jointEnds(ofTaxon.top, methods),
-      ]),
-    );
-    leanings.push(
-      ...both.flatMap(({ top, base }, i) => [leaningOf(top, rows[i]), leaningOf(base, baseRows[i])]),
-    );
-    tapers.push(...cases.flatMap((rangeCase) => taperOf(rangeCase, methods[0])));
-    cautions.push(...rangeCautions({ section, study, markers: input.markers, cases, rows: rows.flat() }));
+    return estimateSection(section, study, input);
   });
   return {
-    ends,
-    tapers,
-    leanings,
-    cautions,
+    ends: bySection.flatMap(({ ends }) => ends),
+    tapers: bySection.flatMap(({ tapers }) => tapers),
+    leanings: bySection.flatMap(({ leanings }) => leanings),
+    cautions: bySection.flatMap(({ cautions }) => cautions),
     basis: [coordinateBasis, ...methods.map((m) => rangeMethods[m].basis)],
   };
 }
 
-function rowsOf(rangeCase: RangeCase, methods: readonly RangeMethod[]): RangeEnd[] {
-  return methods.map((method) => rangeMethods[method].end(rangeCase));
+function estimateSection(section: Section, study: Study, input: RangesInput): Omit<Ranges, "basis"> {
+  const { methods } = study.settings.ranges;
+  const taxa = sectionCases(section, study, input);
+  const candidates = taxa.filter(({ isCandidate }) => isCandidate);
+  const atTop = leadingMethods(
+    candidates.map(({ top }) => top),
+    methods,
+  );
+  const atBase = leadingMethods(
+    candidates.map(({ base }) => base),
+    methods,
+  );
+  const cases = taxa.map(({ top, base }) => ({ top: caseUnder(atTop, top), base: caseUnder(atBase, base) }));
+  const rows = cases.map(({ top, base }) => ({ top: rowsOf(top, atTop), base: rowsOf(base, atBase) }));
+  return {
+    ends: cases.flatMap(({ top }, i) => [
+      ...rows[i].top,
+      ...inclusiveEnds(top),
+      ...rows[i].base.map(turnedBack),
+      ...jointEnds(top, methods),
+    ]),
+    leanings: cases.flatMap(({ top, base }, i) => [
+      leaningOf(top, rows[i].top),
+      leaningOf(base, rows[i].base),
+    ]),
+    tapers: cases.flatMap(({ top }) => taper(top, atTop.methods[0]) ?? []),
+    cautions: rangeCautions({
+      section,
+      study,
+      markers: input.markers,
+      cases: cases.map(({ top }) => top),
+      rows: rows.flatMap(({ top }) => top),
+      leading: atTop,
+    }),
+  };
+}
+
+function rowsOf(rangeCase: RangeCase, leading: Leading): RangeEnd[] {
+  return leading.methods.map((method) => marked(leading, rangeCase, rangeMethods[method].end(rangeCase)));
 }
 
 /** The joint intervals of base and top, of the methods that have one. */
@@ -74,14 +92,4 @@ function inclusiveEnds(rangeCase: RangeCase): RangeEnd[] {
   };
   const row = uniformEnd({ ...rangeCase, constant: inclusive, identification: "inclusive" });
   return [{ ...row, note: note("strict horizons and the inclusive last find", row.note) }];
-}
-
-/** The taper ends where the interval closes inside the section. */
-function taperOf(rangeCase: RangeCase, leading: RangeMethod): Taper[] {
-  const endM = (method: RangeMethod) => {
-    const row = rangeMethods[method].end(rangeCase);
-    return row.outcome === "closed" || row.outcome === "in-hiatus" ? row.highM : undefined;
-  };
-  const drawn = taper(rangeCase, leading, endM);
-  return drawn === undefined ? [] : [drawn];
 }

@@ -3,6 +3,7 @@ import { commonFields, levelWords, note, type RangeCase, reasonWithoutBound } fr
 import { recoveryFit } from "./recovery-fit.ts";
 import type { RangeEnd } from "./result.ts";
 import { missingRockNotes } from "./rock-breaks.ts";
+import { pivotSurvival, type Survival } from "./survival.ts";
 import { uniformBound, uniformPoint } from "./uniform.ts";
 import { boundFields, cutOffNote, fewNote, reachFields } from "./uniform-end.ts";
 
@@ -42,6 +43,11 @@ export function recoveryEnd(given: RangeCase): RangeEnd {
       fewNote(range.horizons),
     ]),
   };
+}
+
+export function recoverySurvival(rangeCase: RangeCase): Survival | undefined {
+  const { weighing } = rangeCase;
+  return weighing.kind === "known" ? pivotSurvival(rangeCase, weighing.weighed) : undefined;
 }
 
 function fitWords(levels: readonly number[]): string | undefined {

@@ -3,6 +3,7 @@ import type { RangeEnd } from "./result.ts";
 import type { SampledRange } from "./sampled-horizons.ts";
 import { type EndPosterior, endQuantile } from "./sampled-posterior.ts";
 import { chancesOf, furthestOf, posteriorsOf } from "./sampled-range.ts";
+import type { Survival } from "./survival.ts";
 import { cutOffNote } from "./uniform-end.ts";
 
 /**
@@ -41,6 +42,12 @@ export function sampledEnd(rangeCase: RangeCase): RangeEnd {
     ...bound,
     note: note(bound.note, odds, outside, words),
   };
+}
+
+/** Steps down at each barren horizon; undefined without an informative find. */
+export function sampledSurvival({ sampled }: RangeCase): Survival | undefined {
+  if (sampled === undefined || sampled.count.finds === 0) return undefined;
+  return { kind: "steps", barrenM: sampled.barrenM, chances: chancesOf(sampled) };
 }
 
 /**

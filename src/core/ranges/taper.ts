@@ -1,13 +1,14 @@
-import { pivot } from "./pivot.ts";
+import type { Study } from "../study/model.ts";
+import { type RangesInput, sectionCases } from "./cases.ts";
+import { rangeMethods } from "./methods.ts";
 import type { RangeCase } from "./range-case.ts";
-import { reasonWithoutBound } from "./range-case.ts";
 import type { RangeMethod, Taper } from "./result.ts";
-import { chancesOf } from "./sampled-range.ts";
-import { uniformBound } from "./uniform.ts";
+import type { Survival } from "./survival.ts";
 
 /** A taper is drawn down to this chance, or to the section's top. */
 const LEAST_CHANCE = 0.005;
 const STEPS = 48;
+const HALVINGS = 50;
 
 interface Outline {
   readonly heightsM: readonly number[];
@@ -15,59 +16,89 @@ interface Outline {
 }
 
 /**
- * The taper of a range above its last find: at each height the chance, 1 minus the confidence of the leading method,
- * that the taxon was still there. Falls from 1 at the last find; where the leading method is undefined, `uniform`
- * stands in; undefined where neither says anything.
- *
- * @param endM upper end of the interval at the study's confidence, where it closes inside the section.
+ * The taper of a range above its last find by one method: at each height the chance, 1 minus the confidence of the method,
+ * that the taxon was still there. Falls from 1 at the last find. Undefined where the method says nothing.
  */
-export function taper(
-  rangeCase: RangeCase,
-  leading: RangeMethod,
-  endM: (method: RangeMethod) => number | undefined,
-): Taper | undefined {
-  const canBeSampled = (rangeCase.sampled?.count.finds ?? 0) > 0;
-  const method = leading === "sampled" && !canBeSampled ? "uniform" : leading;
-  if (method !== "sampled" && reasonWithoutBound(rangeCase) !== undefined) return undefined;
-  const outline = method === "sampled" ? sampledOutline(rangeCase) : uniformOutline(rangeCase);
-  const end = endM(method);
+export function taperBy(rangeCase: RangeCase, method: RangeMethod): Taper | undefined {
+  const survival = rangeMethods[method].survival(rangeCase);
+  if (survival === undefined) return undefined;
+  const outline = survival.kind === "steps" ? stepOutline(rangeCase, survival) : curve(rangeCase, survival);
+  if (outline === undefined) return undefined;
+  const { outcome, highM } = rangeMethods[method].end(rangeCase);
+  const isInside = outcome === "closed" || outcome === "in-hiatus";
   return {
     section: rangeCase.section,
     taxon: rangeCase.taxon.taxon,
     method,
     ...outline,
-    ...(end === undefined ? {} : { endM: end }),
+    ...(isInside && highM !== undefined ? { endM: highM } : {}),
   };
 }
 
-/** Evenly spaced levels, mapped to height: dense where the chance falls fast; flat across rock without recovery. */
-function uniformOutline({ range, coordinate, topM: sectionTopM }: RangeCase): Outline {
-  const lowest = coordinate.toEffective(range.lastM);
-  const topM = Math.max(sectionTopM, range.lastM);
-  const highest = Math.min(
-    coordinate.toEffective(topM),
-    uniformBound(range, 1 - LEAST_CHANCE) ?? Number.POSITIVE_INFINITY,
+/** The taper by the leading method; where that says nothing, `uniform` stands in; undefined where neither does. */
+export function taper(rangeCase: RangeCase, leading: RangeMethod): Taper | undefined {
+  return taperBy(rangeCase, leading) ?? taperBy(rangeCase, "uniform");
+}
+
+/** The tapers of every taxon in every section by one method, of those that it says something about. */
+export function tapersBy(study: Study, input: RangesInput, method: RangeMethod): Taper[] {
+  const { ranges } = study.settings;
+  const methods = ranges.methods.includes(method) ? ranges.methods : [...ranges.methods, method];
+  const asked = { ...study, settings: { ...study.settings, ranges: { ...ranges, methods } } };
+  return study.sections.flatMap((section) =>
+    sectionCases(section, asked, input).flatMap(({ top }) => taperBy(top, method) ?? []),
   );
+}
+
+/**
+ * Evenly spaced levels, mapped to height: dense where the chance falls fast; flat across rock without recovery. Undefined
+ * for a method that bounds an end at some levels without a chance for each.
+ */
+function curve(
+  { range, topM }: RangeCase,
+  { coordinate, chanceAt }: Survival & { readonly kind: "curve" },
+): Outline | undefined {
+  const upToM = Math.max(topM, range.lastM);
+  const lowest = coordinate.toEffective(range.lastM);
+  if (chanceAt(coordinate.toEffective(upToM)) === undefined) return undefined;
+  const chance = (level: number) => Math.min(1, Math.max(0, chanceAt(level) ?? 0));
+  const highest = lastWith(chance, lowest, coordinate.toEffective(upToM));
   const heights = new Set([range.lastM]);
   for (let step = 1; step <= STEPS; step++) {
     const share = step / STEPS;
     const heightM = coordinate.toHeight(lowest + (highest - lowest) * share * share, "upper");
-    if (heightM !== undefined) heights.add(Math.min(heightM, topM));
+    if (heightM !== undefined) heights.add(Math.min(heightM, upToM));
   }
   for (const gap of coordinate.gaps)
     for (const edgeM of [gap.baseM, gap.topM])
-      if (edgeM > range.lastM && edgeM <= topM && coordinate.toEffective(edgeM) <= highest)
+      if (edgeM > range.lastM && edgeM <= upToM && coordinate.toEffective(edgeM) <= highest)
         heights.add(edgeM);
   const heightsM = [...heights].toSorted((a, b) => a - b);
-  return { heightsM, chances: heightsM.map((heightM) => pivot(range, coordinate.toEffective(heightM))) };
+  const chances = heightsM.map((heightM) =>
+    heightM === range.lastM ? 1 : chance(coordinate.toEffective(heightM)),
+  );
+  return { heightsM, chances };
+}
+
+/** The level where the chance has fallen to the least that is drawn, or the top of what is drawn. */
+function lastWith(chance: (level: number) => number, lowest: number, top: number): number {
+  if (chance(top) >= LEAST_CHANCE) return top;
+  let [low, high] = [lowest, top];
+  for (let halving = 0; halving < HALVINGS; halving++) {
+    const middle = 0.5 * (low + high);
+    if (chance(middle) >= LEAST_CHANCE) low = middle;
+    else high = middle;
+  }
+  return high;
 }
 
 /** Steps: the chance falls at each barren horizon sampled, and between them nobody looked. */
-function sampledOutline({ range, topM, sampled }: RangeCase): Outline {
+function stepOutline(
+  { range, topM }: RangeCase,
+  { barrenM, chances: steps }: Survival & { readonly kind: "steps" },
+): Outline {
   const heightsM = [range.lastM];
   const chances = [1];
-  const barrenM = sampled?.barrenM ?? [];
-  const steps = sampled === undefined ? [1] : chancesOf(sampled);
   barrenM.forEach((heightM, index) => {
     if (heightM <= range.lastM || steps[index] < LEAST_CHANCE) return;
     heightsM.push(heightM, heightM);

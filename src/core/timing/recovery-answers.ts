@@ -12,8 +12,7 @@ import type { TimingAnswer, TimingMethod } from "./result.ts";
 import { commonFields, type SetCase } from "./set-case.ts";
 import { allCandidates } from "./sets.ts";
 
-/** A pooled p for decline below this demotes the methods that assume constant recovery. */
-export const DECLINE_GATE = 0.1;
+export { DECLINE_GATE } from "../ranges/checks/decline.ts";
 
 /** Centroid of all interior finds of a set. */
 export function pooledCentroid(ranges: readonly TaxonRange[]): Centroid | undefined {

@@ -41,23 +41,20 @@ interface Reach {
   readonly short: readonly string[];
 }
 
-/** Which candidates' intervals by the leading method reach the main horizon at the study's confidence. */
+/** Which candidates' intervals by the leading method that tells reach the main horizon at the study's confidence. */
 function reachOf({ candidates, markers, ranges, study }: Analysis, section: Section): Reach {
   const main = markers.main.bySection.get(section.name);
   const reaching: string[] = [];
   const short: string[] = [];
   for (const candidate of candidates) {
     if (candidate.section !== section.name || candidate.role !== "candidate") continue;
-    const ends = ranges.ends.filter(
+    const leading = ranges.ends.find(
       (end) =>
         end.end === "top" &&
         end.section === section.name &&
         end.taxon === candidate.taxon &&
         end.reachLevel !== undefined,
     );
-    const leading = study.settings.ranges.methods
-      .map((method) => ends.find((end) => end.method === method))
-      .find((end) => end !== undefined);
     if (main !== undefined && candidate.lastM >= main.positionM) reaching.push(candidate.taxon);
     if (leading?.reachLevel === undefined) continue;
     (leading.reachLevel <= study.settings.confidence ? reaching : short).push(candidate.taxon);

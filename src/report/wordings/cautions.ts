@@ -72,6 +72,8 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`The interval of ${taxa(told)} ends inside rock that could not be searched; it is drawn to the top of it.`,
   "range-bound-open": (told) =>
     say`The interval of ${taxa(told)} is open by the method of sampled horizons: no barren horizon above closes it.`,
+  "range-recovery-declines": ({ text, n }) =>
+    say`${strong("Finds thin out upward")} (${pValue(n("p"))}): intervals by methods of constant recovery are too short, and ${text("method")} leads.`,
   "range-recovery-unavailable": ({ subject, text }) =>
     say`Recovery of ${subject} cannot be had from ${recoverySource(text("source"))} (${text("reason")}): it is taken as constant.`,
   "range-recovery-contradicted": (told) =>
