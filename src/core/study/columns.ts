@@ -81,10 +81,12 @@ export function partUnit(header: string): {
   return { name: header, isBracketed: false };
 }
 
+const plainAxisWords = { depth: axisWords.depth.map(plainName), height: axisWords.height.map(plainName) };
+
 /** The axis a header of a position says by itself. */
 export function axisOf(header: string): Axis | undefined {
   const name = plainName(header);
-  const says = (axis: Axis) => axisWords[axis].some((word) => name.includes(plainName(word)));
+  const says = (axis: Axis) => plainAxisWords[axis].some((word) => name.includes(word));
   if (says("depth")) return "depth";
   return says("height") ? "height" : undefined;
 }
@@ -101,6 +103,7 @@ const links = /^(?:of|at|in|der|des|du|de|di|del|della|do|da)$/i;
 
 /** A header without the words that say its axis: `first depth` as `first`, `depth of last occurrence` as `last occurrence`. */
 const withoutAxis = (name: string): string => {
+  if (axisOf(name) === undefined) return "";
   const words = name.split(/[\s_]+/);
   const own = words.filter((word) => axisOf(word) === undefined);
   return own.length === words.length || own.length === 0
