@@ -1,5 +1,7 @@
 import { proxy, releaseProxy, wrap } from "comlink";
+import type { Analysis } from "../core/analysis-result.ts";
 import type { PageWork } from "./page-worker.ts";
+import { putTogether } from "./parts.ts";
 import { receivedStudy } from "./received-study.ts";
 import type { AnalysisJob, Runner, Watch } from "./runner.ts";
 
@@ -30,7 +32,10 @@ export function pageRunner(startWorker: () => Worker): Runner {
         });
       });
       try {
-        const analysis = await Promise.race([work.analyse(job, proxy(onProgress)), failed]);
+        const { take, whole } = putTogether();
+        const ears = proxy({ onProgress, onPart: take });
+        const analysis = whole(await Promise.race([work.analyse(job, ears), failed]));
+        if (!isAnalysis(analysis)) throw new Error("pageRunner: expected an analysis from the worker");
         return { ...analysis, study: receivedStudy(analysis.study) };
       } finally {
         work[releaseProxy]();
@@ -42,3 +47,6 @@ export function pageRunner(startWorker: () => Worker): Runner {
     },
   };
 }
+
+const isAnalysis = (value: unknown): value is Analysis =>
+  typeof value === "object" && value !== null && "study" in value && "timing" in value;
