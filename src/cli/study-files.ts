@@ -1,6 +1,7 @@
 import { readdir, readFile, stat } from "node:fs/promises";
 import { basename, join, posix, resolve } from "node:path";
 import { readDataPackage } from "../core/tables/data-package.ts";
+import { MOST_BYTES, mebibytes } from "../core/tables/limits.ts";
 import { CallError } from "./call-error.ts";
 import { isStudyTable, withoutEnding } from "./file-kinds.ts";
 
@@ -9,19 +10,19 @@ export interface StudyOnDisk {
   readonly files: ReadonlyMap<string, Uint8Array>;
 }
 
-/** No file larger than this is taken into memory. */
-const MOST_BYTES = 2 ** 30;
-
-/** Reads a study as it lies on disk: a folder of tables, or one table, workbook or archive. Nothing is interpreted here. */
-export async function readStudyFiles(path: string): Promise<StudyOnDisk> {
+/**
+ * Reads a study as it lies on disk: a folder of tables, or one table, workbook or archive. Nothing is interpreted here; a
+ * file of more bytes than are read as a table is refused before it is taken into memory.
+ */
+export async function readStudyFiles(path: string, mostBytes = MOST_BYTES): Promise<StudyOnDisk> {
   const found = await stat(path).catch(() => undefined);
   if (found === undefined)
     throw new CallError(`lastbed: expected a study folder or table, got ${path}, which does not exist`);
   const name = basename(resolve(path));
-  return found.isDirectory() ? readFolder(path, name) : readSingleFile(path, name);
+  return found.isDirectory() ? readFolder(path, name, mostBytes) : readSingleFile(path, name, mostBytes);
 }
 
-async function readFolder(path: string, name: string): Promise<StudyOnDisk> {
+async function readFolder(path: string, name: string, mostBytes: number): Promise<StudyOnDisk> {
   const entries = await readdir(path, { withFileTypes: true });
   const present = entries
     .filter((entry) => (entry.isFile() || entry.isSymbolicLink()) && !entry.name.startsWith("."))
@@ -29,9 +30,9 @@ async function readFolder(path: string, name: string): Promise<StudyOnDisk> {
     .toSorted();
   const names = studyNames(present);
   const files = new Map<string, Uint8Array>();
-  for (const file of names) files.set(file, await readWhole(join(path, file)));
+  for (const file of names) files.set(file, await readWhole(join(path, file), mostBytes));
   for (const file of describedElsewhere(files)) {
-    const bytes = await readWhole(join(path, file)).catch(absent);
+    const bytes = await readWhole(join(path, file), mostBytes).catch(absent);
     if (bytes !== undefined) files.set(file, bytes);
   }
   if ([...files.keys()].every((file) => /\.json$/i.test(file)))
@@ -46,19 +47,19 @@ function absent(error: unknown): undefined {
   if (error instanceof CallError) throw error;
 }
 
-async function readSingleFile(path: string, name: string): Promise<StudyOnDisk> {
+async function readSingleFile(path: string, name: string, mostBytes: number): Promise<StudyOnDisk> {
   if (!isStudyFile(name) && !isPacked(name))
     throw new CallError(
       `lastbed: expected a folder of tables, or one .csv, .tsv, .txt, .xlsx or .zip file, got ${path}`,
     );
-  return { name: withoutEnding(name), files: new Map([[name, await readWhole(path)]]) };
+  return { name: withoutEnding(name), files: new Map([[name, await readWhole(path, mostBytes)]]) };
 }
 
-async function readWhole(path: string): Promise<Uint8Array> {
+async function readWhole(path: string, mostBytes: number): Promise<Uint8Array> {
   const { size } = await stat(path);
-  if (size > MOST_BYTES)
+  if (size > mostBytes)
     throw new CallError(
-      `lastbed: expected files of at most 1 GiB, got ${path} of ${(size / 2 ** 30).toFixed(1)} GiB`,
+      `lastbed: expected files of at most ${mebibytes(mostBytes)}, got ${path} of ${mebibytes(size)}; part the table into several studies, or thin it out`,
     );
   return readFile(path);
 }

@@ -1,3 +1,4 @@
+import { MOST_BYTES, mebibytes } from "../../core/tables/limits.ts";
 import { type GivenStudy, NotAStudy, studyOf } from "./given-study.ts";
 
 /**
@@ -48,7 +49,13 @@ async function filesIn(folder: FileSystemDirectoryEntry): Promise<ReadonlyMap<st
   return bytesByName(files);
 }
 
+/** The bytes of files; one that is too large for a table is refused before it is read. */
 async function bytesByName(files: readonly File[]): Promise<ReadonlyMap<string, Uint8Array>> {
+  const tooLarge = files.find(({ size }) => size > MOST_BYTES);
+  if (tooLarge !== undefined)
+    throw new NotAStudy(
+      `${tooLarge.name} is too large to read here: it has ${mebibytes(tooLarge.size)}, and a file may have at most ${mebibytes(MOST_BYTES)}. Part the table into several studies, or thin it out.`,
+    );
   const entries = await Promise.all(
     files.map(async (file) => [file.name, new Uint8Array(await file.arrayBuffer())] as const),
   );
