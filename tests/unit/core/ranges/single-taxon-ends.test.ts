@@ -39,14 +39,15 @@ const at =
   (s: Settings): Settings => ({ ...s, confidence, ranges: { ...s.ranges, ...ranges } });
 const fiveFinds = taxon("Orbula vesta", [2, 5, 9, 13, 18]);
 
-describe("what cannot be estimated is a named outcome", () => {
-  const outcomes = (of: LocalTaxon, setup?: Setup) => {
-    const { row } = rangesOf(of, setup);
-    return new Map(methods.map((method) => [method, row(method).outcome]));
-  };
-  const undefinedOf = (found: ReadonlyMap<string, string>) =>
-    methods.filter((method) => found.get(method) === "undefined");
+function outcomes(of: LocalTaxon, setup?: Setup): ReadonlyMap<RangeMethod, string> {
+  const { row } = rangesOf(of, setup);
+  return new Map(methods.map((method) => [method, row(method).outcome]));
+}
 
+const undefinedOf = (found: ReadonlyMap<RangeMethod, string>) =>
+  methods.filter((method) => found.get(method) === "undefined");
+
+describe("what cannot be estimated is a named outcome", () => {
   it("one find: nothing is defined", () => {
     expect(undefinedOf(outcomes(taxon("Orbula una", [10])))).toEqual(methods);
   });
