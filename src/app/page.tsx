@@ -19,6 +19,7 @@ import { useShortcuts } from "./state/use-shortcuts.ts";
 import { Station } from "./station.tsx";
 import { bundledStudy } from "./study/bundled-study.ts";
 import { DropTarget } from "./study/drop-target.tsx";
+import { PasteTable } from "./study/paste-table.tsx";
 import { useReworking } from "./study/use-reworking.ts";
 import { useStudy } from "./study/use-study.ts";
 import { NO_HISTORY } from "./tables/history.ts";
@@ -80,6 +81,7 @@ export function Page(): ReactElement {
           <Status />
         </div>
         <GoTo actions={actions} />
+        <PasteTable />
       </DropTarget>
     </PageProvider>
   );

@@ -25,5 +25,6 @@ export { readSources } from "./tables/read-sources.ts";
 export { type ReadStudyOptions, readStudy } from "./tables/read-study.ts";
 export { packStudy } from "./tables/sources/pack-study.ts";
 export { packWorkbook, type WorkbookTable } from "./tables/sources/pack-workbook.ts";
+export { pastedFile } from "./tables/sources/pasted.ts";
 export { studyTemplate } from "./tables/templates.ts";
 export { type CsvCell, type WrittenCsv, writeCsv } from "./tables/write-csv.ts";

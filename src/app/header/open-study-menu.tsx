@@ -7,7 +7,7 @@ import styles from "./header.module.css";
 
 /** The ways to open a study other than dropping it. */
 export function OpenStudyMenu(): ReactElement {
-  const { study } = usePage();
+  const { study, dispatch } = usePage();
   const folder = useRef<HTMLInputElement>(null);
   const files = useRef<HTMLInputElement>(null);
   const take = (input: HTMLInputElement) => {
@@ -23,6 +23,11 @@ export function OpenStudyMenu(): ReactElement {
           <Menu className={styles.menu}>
             <Way title="A study folder" help="all its tables at once" act={() => folder.current?.click()} />
             <Way title="Tables" help="CSV files, a workbook or a zip" act={() => files.current?.click()} />
+            <Way
+              title="Paste a table…"
+              help="from a spreadsheet, or Ctrl+V anywhere"
+              act={() => dispatch({ kind: "pasted", text: "" })}
+            />
             <Way
               title="The study beside this page"
               help="the one it opened with"

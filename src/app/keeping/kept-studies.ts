@@ -71,10 +71,14 @@ export async function keptHistory(key: string): Promise<History | undefined> {
 }
 
 /** Writes files and edits in one go: whatever breaks off, what was kept before stays whole. */
-export async function keep(key: string, { name, files }: GivenStudy, history: History): Promise<number> {
+export async function keep(
+  key: string,
+  { name, files, isSettled = false }: GivenStudy,
+  history: History,
+): Promise<number> {
   const at = Date.now();
   const writing = (await database()).transaction(["files", "histories"], "readwrite");
-  const hasFiles = (await writing.objectStore("files").getKey(key)) !== undefined;
+  const hasFiles = !isSettled && (await writing.objectStore("files").getKey(key)) !== undefined;
   await Promise.all([
     hasFiles ? undefined : writing.objectStore("files").put({ key, name, files }),
     writing.objectStore("histories").put({ key, name, history, at }),
@@ -92,7 +96,12 @@ export async function keptNames(): Promise<readonly KeptName[]> {
 export async function keptStudy(key: string): Promise<GivenStudy> {
   const kept = await (await database()).get("files", key);
   if (kept === undefined) throw new Error("keptStudy: expected a study that is kept in this browser");
-  return { name: kept.name, files: kept.files };
+  return { name: kept.name, files: kept.files, key };
+}
+
+/** The files of a study as they are kept, with the settings chosen here. */
+export async function keptFiles(key: string): Promise<GivenStudy["files"] | undefined> {
+  return (await (await database()).get("files", key))?.files;
 }
 
 /** Takes a study, its edits and its snapshots out of the database. */

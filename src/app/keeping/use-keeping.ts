@@ -56,7 +56,7 @@ export function useKeeping(history: History, study: OpenStudy, dispatch: Dispatc
   useEffect(() => void look(), [look]);
 
   useEffect(() => {
-    const hasNews = history !== opened && history.steps.length > 0;
+    const hasNews = given?.isSettled === true || (history !== opened && history.steps.length > 0);
     if (key === undefined || given === undefined || hold !== "held" || !hasNews) return;
     keep(key, given, history)
       .then((at) => {

@@ -28,6 +28,8 @@ export interface PageState {
   readonly isLogOpen: boolean;
   readonly theme: Theme;
   readonly work: Work;
+  /** The text in the field for pasted tables; undefined where the field is closed. */
+  readonly pasted?: string;
   /** Every edit of the study's tables. */
   readonly history: History;
 }
@@ -39,6 +41,7 @@ export type PageEvent =
   | { readonly kind: "margin-turned" }
   | { readonly kind: "log-turned" }
   | { readonly kind: "go-to-turned"; readonly isOpen: boolean }
+  | { readonly kind: "pasted"; readonly text: string | undefined }
   | { readonly kind: "theme-set"; readonly theme: Theme }
   | { readonly kind: "work-began"; readonly name: string }
   | { readonly kind: "work-went-on"; readonly step: string; readonly share: number }
@@ -67,6 +70,8 @@ export function step(state: PageState, event: PageEvent): PageState {
       return { ...state, isLogOpen: !state.isLogOpen };
     case "go-to-turned":
       return { ...state, isGoToOpen: event.isOpen };
+    case "pasted":
+      return { ...state, pasted: event.text };
     case "theme-set":
       return { ...state, theme: event.theme };
     case "work-began":

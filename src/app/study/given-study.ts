@@ -2,6 +2,10 @@
 export interface GivenStudy {
   readonly name: string;
   readonly files: ReadonlyMap<string, Uint8Array>;
+  /** Under which it is kept already; absent: told by its files. */
+  readonly key?: string;
+  /** True where its settings were changed here, so that the files as they are now have to be kept. */
+  readonly isSettled?: boolean;
 }
 
 /** Said to the person who gave something that is no study. */

@@ -4,10 +4,11 @@ import type { Sheet, Study } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
 import { pageRunner } from "../../run/page.ts";
 import { receivedSheets } from "../../run/received-study.ts";
-import { keptHistory, studyKey } from "../keeping/kept-studies.ts";
+import { keptFiles, keptHistory, studyKey } from "../keeping/kept-studies.ts";
 import type { PageEvent } from "../state/page-state.ts";
 import { type GivenTable, givenTable, leavingSheets, unreadFiles } from "../tables/given-table.ts";
 import { type History, heldEdits, NO_HISTORY } from "../tables/history.ts";
+import { type SettingChange, withSetting } from "./chosen-settings.ts";
 import { desk } from "./desk.ts";
 import { type GivenStudy, NotAStudy } from "./given-study.ts";
 import { inSlices } from "./in-slices.ts";
@@ -36,6 +37,8 @@ export interface OpenStudy {
   readonly open: (name: string, load: (signal: AbortSignal) => Promise<GivenStudy>) => void;
   /** Works the open study out again with the edits that its history holds; never stands before a study being opened. */
   readonly rework: (history: History) => void;
+  /** Changes the study's settings, keeps them with it and reads it again at once; edits stay. */
+  readonly settle: (change: SettingChange) => void;
   readonly cancel: () => void;
 }
 
@@ -45,6 +48,8 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
   const runner = useMemo(() => pageRunner(startWorker), []);
   const current = useRef<AbortController>(undefined);
   const isOpening = useRef(false);
+  /** The study with settings that are not worked out yet. */
+  const settled = useRef<GivenStudy>(undefined);
 
   useEffect(
     () => () => {
@@ -64,6 +69,7 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
         (result) => {
           if (controller.signal.aborted) return;
           latest.current = result;
+          settled.current = undefined;
           setWorkedOut(result);
           if (isOpening.current) dispatch({ kind: "study-opened", history: result.history });
           isOpening.current = false;
@@ -72,6 +78,7 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
         (error: unknown) => {
           if (controller.signal.aborted) return;
           isOpening.current = false;
+          settled.current = undefined;
           dispatch({ kind: "work-failed", message: error instanceof Error ? error.message : String(error) });
         },
       );
@@ -85,51 +92,63 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
         throw new NotAStudy(nothingRead(given.name, result.study.problems));
       return result;
     };
+    const workOut = async (given: GivenStudy, history: History, signal: AbortSignal) => {
+      if (heldEdits(history).length === 0) {
+        const analysis = await analyse(given, signal);
+        const { sheets } = analysis.study;
+        return { given, sheets, tables: await givenTables(given, analysis.study), history, analysis };
+      }
+      const { problems, ...read } = await desk().read(given.files);
+      const sheets = receivedSheets(read.sheets);
+      const tables = await givenTables(given, { sheets, problems });
+      const files = await editedFiles(given, tables, history);
+      const analysis = await analyse({ name: given.name, files }, signal);
+      return { given, sheets, tables, history, analysis };
+    };
     const open: OpenStudy["open"] = (name, load) => {
       isOpening.current = true;
+      settled.current = undefined;
       void begin(name, async (signal) => {
-        const given = await load(signal);
-        const { key, history } = await keptWork(given);
-        if (heldEdits(history).length === 0) {
-          const analysis = await analyse(given, signal);
-          const { sheets } = analysis.study;
-          const tables = await givenTables(given, analysis.study);
-          return { given, key, sheets, tables, opened: history, history, analysis };
-        }
-        const { problems, ...read } = await desk().read(given.files);
-        const sheets = receivedSheets(read.sheets);
-        const tables = await givenTables(given, { sheets, problems });
-        const files = await editedFiles(given, tables, history);
-        const analysis = await analyse({ name: given.name, files }, signal);
-        return { given, key, sheets, tables, opened: history, history, analysis };
+        const { given, key, history } = await keptWork(await load(signal));
+        return { key, opened: history, ...(await workOut(given, history, signal)) };
       });
     };
     const rework: OpenStudy["rework"] = (history) => {
       const now = latest.current;
       if (now === undefined || isOpening.current) return;
+      const given = settled.current;
       void begin(now.analysis.study.name, async (signal) => {
+        if (given !== undefined) return { ...now, ...(await workOut(given, history, signal)) };
         const files = await editedFiles(now.given, now.tables, history);
         const analysis = await analyse({ name: now.given.name, files }, signal);
         return { ...now, history, analysis };
       });
+    };
+    const settle: OpenStudy["settle"] = (change) => {
+      const now = latest.current;
+      if (now === undefined || isOpening.current) return;
+      settled.current = withSetting(settled.current ?? now.given, change);
+      rework(now.history);
     };
     const cancel = () => {
       current.current?.abort();
       isOpening.current = false;
       dispatch({ kind: "work-cancelled" });
     };
-    return { open, rework, cancel };
+    return { open, rework, settle, cancel };
   }, [dispatch, runner]);
   return useMemo(() => ({ workedOut, ...actions }), [workedOut, actions]);
 }
 
-/** What this browser kept of a study; a browser that keeps nothing is no hindrance. */
-async function keptWork(given: GivenStudy): Promise<Pick<WorkedOut, "key" | "history">> {
+/** A study with what this browser kept of it; a browser that keeps nothing is no hindrance. */
+async function keptWork(given: GivenStudy): Promise<Pick<WorkedOut, "given" | "key" | "history">> {
   try {
-    const key = await studyKey(given);
-    return { key, history: (key && (await keptHistory(key))) || NO_HISTORY };
+    const key = given.key ?? (await studyKey(given));
+    const history = (key && (await keptHistory(key))) || NO_HISTORY;
+    const kept = key === undefined ? undefined : await keptFiles(key);
+    return { given: kept === undefined ? given : { ...given, files: kept }, key, history };
   } catch {
-    return { key: undefined, history: NO_HISTORY };
+    return { given, key: undefined, history: NO_HISTORY };
   }
 }
 

@@ -1,5 +1,6 @@
 import { type ReactElement, useMemo } from "react";
 import { usePage } from "../state/page-context.ts";
+import { Confirm } from "./confirm/confirm.tsx";
 import { editsByFile } from "./edits.ts";
 import { heldEdits } from "./history.ts";
 import { type Found, readTables, shownResults, studyTables } from "./shown-table.ts";
@@ -28,6 +29,7 @@ export function TablesStation(): ReactElement | null {
   if (table === undefined || open === undefined || found === undefined) return null;
   return (
     <div className={styles.station}>
+      <Confirm />
       <TableTabs
         groups={[
           ["Study", tables],
