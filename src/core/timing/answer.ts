@@ -13,6 +13,7 @@ import { levelCurve } from "./level-curve.ts";
 import { candidateRanges } from "./range-data.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
 import type { LevelCurve, Timing, TimingAnswer } from "./result.ts";
+import { type ScenarioAnswers, scenarioAnswers } from "./scenarios/answers.ts";
 import { answerSet } from "./set-answers.ts";
 import type { PlacedHorizon, SetCase } from "./set-case.ts";
 import { allCandidates, setCautions, setsOf } from "./sets.ts";
@@ -35,19 +36,19 @@ export interface TimingInput {
 export function answerTiming(study: Study, input: TimingInput, progress?: Progress): Timing {
   const answered = study.sections.map((section, index) => {
     progress?.(`timing: ${section.name}`, index, study.sections.length);
-    return answerSection(section, study, input);
+    return answerSection(section, study, { ...input, progress });
   });
   return {
     sets: answered.flatMap((a) => a.cases.map(({ set: { ranges: _ranges, ...set } }) => set)),
-    answers: answered.flatMap((a) => a.answers),
+    answers: answered.flatMap((a) => [...a.answers, ...a.compared.answers]),
     curves: answered.flatMap((a) => a.curves),
-    scenarios: [],
-    offsets: [],
-    membership: [],
-    densities: [],
+    scenarios: answered.flatMap((a) => a.compared.scenarios),
+    offsets: answered.flatMap((a) => a.compared.offsets),
+    membership: answered.flatMap((a) => a.compared.membership),
+    densities: answered.flatMap((a) => a.compared.densities),
     lastFinds: answered.flatMap((a) => a.lastFinds),
     distrusted: answered.flatMap((a) => a.distrusted),
-    cautions: answered.flatMap((a) => a.cautions),
+    cautions: answered.flatMap((a) => [...a.cautions, ...a.compared.cautions]),
     basis: timingBasis,
   };
 }
@@ -55,13 +56,18 @@ export function answerTiming(study: Study, input: TimingInput, progress?: Progre
 interface AnsweredSection {
   readonly cases: readonly SetCase[];
   readonly answers: readonly TimingAnswer[];
+  readonly compared: ScenarioAnswers;
   readonly curves: readonly LevelCurve[];
   readonly lastFinds: Timing["lastFinds"];
   readonly distrusted: Timing["distrusted"];
   readonly cautions: readonly Caution[];
 }
 
-function answerSection(section: Section, study: Study, input: TimingInput): AnsweredSection {
+interface SectionInput extends TimingInput {
+  readonly progress: Progress | undefined;
+}
+
+function answerSection(section: Section, study: Study, input: SectionInput): AnsweredSection {
   const candidates = input.candidates.filter((c) => c.section === section.name);
   const beside = besideCautions(section.name, candidates);
   const { cases, window } = sectionCases(section, study, { ...input, candidates });
@@ -79,6 +85,7 @@ function answerSection(section: Section, study: Study, input: TimingInput): Answ
   return {
     cases,
     answers: cases.flatMap(answerSet),
+    compared: scenarioAnswers(cases, { window, taxa: input.taxa, progress: input.progress }),
     curves: cases.flatMap((setCase) => (window === undefined ? [] : (levelCurve(setCase, window) ?? []))),
     lastFinds: cases.flatMap(lastFindsCurve),
     distrusted: cases

@@ -1,6 +1,7 @@
 import type { Basis, Source } from "../basis.ts";
 import { assemblageBasis } from "./basis-assemblage.ts";
 import { checkBasis } from "./basis-checks.ts";
+import { scenarioBasis } from "./scenarios/basis.ts";
 
 const solow1996: Source = {
   authors: "Solow, A. R.",
@@ -92,4 +93,5 @@ export const timingBasis: readonly Basis[] = [
   },
   ...assemblageBasis,
   ...checkBasis,
+  ...scenarioBasis,
 ];

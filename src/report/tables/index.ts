@@ -3,8 +3,11 @@ import { alignmentTable, tiesTable } from "./alignment.ts";
 import { candidatesTable, findsTable } from "./finds.ts";
 import { lastFindsTable } from "./last-finds.ts";
 import { anomaliesTable, flagsTable, markersTable } from "./markers.ts";
+import { membershipTable } from "./membership.ts";
+import { offsetsTable } from "./offsets.ts";
 import { rangeEndsTable } from "./ranges.ts";
 import type { ResultDeclaration, ResultTable } from "./result-table.ts";
+import { scenariosTable } from "./scenarios.ts";
 import { timingTable } from "./timing.ts";
 
 /** Every result table, in the order of the flow. */
@@ -18,6 +21,9 @@ export const resultDeclarations: readonly ResultDeclaration[] = [
   candidatesTable,
   rangeEndsTable,
   timingTable,
+  scenariosTable,
+  offsetsTable,
+  membershipTable,
   lastFindsTable,
 ];
 

@@ -2,7 +2,7 @@ import type { Caution } from "../../core/basis.ts";
 import type { Flag, RefersTo } from "../../core/markers/result.ts";
 import type { Study } from "../../core/study/model.ts";
 import type { Weakness } from "../findings/finding.ts";
-import { metres, offset, pValue, significant } from "./numbers.ts";
+import { inMetres, metres, offset, percent, pValue, significant } from "./numbers.ts";
 import { name, plural, say, strong, type Words } from "./words.ts";
 
 /** What a caution's sentence may draw on. */
@@ -127,6 +127,14 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${plural(n("taxa"), "taxon", "taxa")} with too few horizons left out: ${name(text("names"))}.`,
   "timing-window-widened": ({ n }) =>
     say`timing.window does not span the last finds and was widened to ${metres(n("lowM"))} to ${metres(n("highM"))} m of height.`,
+  "scenario-order-changes": ({ text }) =>
+    say`Which scenario comes first turns on what is taken for granted: ${text("best")} as declared, another under ${text("changes")}.`,
+  "scenario-pulses-too-near": ({ n }) =>
+    say`Pulses nearer than about ${inMetres(n("limitM"))} cannot be told apart by such data; two would lie ${inMetres(n("medianM"))} apart.`,
+  "scenario-mass-at-edge": ({ n }) =>
+    say`${percent(n("mass"))} of the probability of the one level lies at the top of timing.window: the window decides the answer.`,
+  "scenario-leans-on-recovery": ({ text, n }) =>
+    say`Finds thin out upward (${pValue(n("p"))}): the comparison of scenarios, with ${text("best")} first, leans on constant recovery.`,
   "timing-set-name-taken": ({ subject }) =>
     say`The declared set ${subject} has a reserved name and was not used.`,
   "timing-set-incomplete": ({ subject, n }) =>

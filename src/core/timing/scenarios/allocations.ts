@@ -52,7 +52,8 @@ function scaleRows(rows: readonly Float64Array[], factors: Float64Array): number
   for (let i = 0; i < rows[0].length; i++) {
     let better = rows[0][i];
     for (let g = 1; g < pulses; g++) better = Math.max(better, rows[g][i]);
-    for (let g = 0; g < pulses; g++) factors[i * pulses + g] = rows[g][i] === better ? 1 : exp(rows[g][i] - better);
+    for (let g = 0; g < pulses; g++)
+      factors[i * pulses + g] = rows[g][i] === better ? 1 : exp(rows[g][i] - better);
     bound += better;
   }
   if (bound === Number.NEGATIVE_INFINITY) factors.fill(0);

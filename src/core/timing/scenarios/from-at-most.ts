@@ -1,5 +1,5 @@
-import { exp, log } from "../../numeric/elementary.ts";
 import { logChoose } from "../../numeric/binomial.ts";
+import { exp, log } from "../../numeric/elementary.ts";
 
 /**
  * ln of the evidence of exactly K pulses, from that of at most K and of exactly 1, 2, .. K - 1. The numbers of taxa in

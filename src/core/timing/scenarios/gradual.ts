@@ -96,7 +96,7 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
       for (let d = 0; d < longestM.length; d++) if (durationM < longestM[d]) within[d].add(logMass);
       if (!(durationM < longestM[0])) return;
       if (startM > window.lowM) inWindow.add(logMass);
-      if (!isOwn) return;
+      if (!isOwn || logMass === Number.NEGATIVE_INFINITY) return;
       values.push(durationM);
       logs.push(logMass + logWeight);
     });
@@ -143,7 +143,8 @@ function useWhole(panel: StartPanel, above: Float64Array, topM: number, use: Use
   const k = above.length;
   for (let n = 0; n < panel.heights.length; n++) {
     const startM = panel.heights[n];
-    use(startM, logProduct(panel.toTop, n * k, { above, length: topM - startM }) + panel.logWeights[n]);
+    if (startM < topM)
+      use(startM, logProduct(panel.toTop, n * k, { above, length: topM - startM }) + panel.logWeights[n]);
   }
   for (let i = 0; i < k; i++) above[i] += panel.whole[i];
 }
@@ -176,10 +177,10 @@ function useParts(
       const startM = baseM + half * (1 + rule.nodes[n]);
       for (let i = 0; i < toTop.length; i++)
         toTop[i] = taxa[i].fromM < highM ? taxa[i].area(startM, highM) : 0;
-      use(startM, logProduct(toTop, 0, { above, length: topM - startM }) + log(half * rule.weights[n]));
+      if (startM < topM)
+        use(startM, logProduct(toTop, 0, { above, length: topM - startM }) + log(half * rule.weights[n]));
     }
-    for (let i = 0; i < toTop.length; i++)
-      if (taxa[i].fromM < highM) above[i] += taxa[i].area(baseM, highM);
+    for (let i = 0; i < toTop.length; i++) if (taxa[i].fromM < highM) above[i] += taxa[i].area(baseM, highM);
   }
 }
 

@@ -5,8 +5,8 @@ import { allocationBound, allocationSum, occupiedSum } from "./allocations.ts";
 import { coarseNodes, type EndGrid, endGrid, floorOf, logRows } from "./end-grid.ts";
 import type { EndLikelihood } from "./end-likelihood.ts";
 import { belowTop, type EndWindow } from "./end-window.ts";
-import type { WeightedLevels } from "./pulses-summary.ts";
 import { ontoShare } from "./from-at-most.ts";
+import type { WeightedLevels } from "./pulses-summary.ts";
 import type { EvidenceByTop } from "./single-level.ts";
 
 /** Called between steps of long work; throws when the caller wants it to stop. */
@@ -143,7 +143,10 @@ function weigher(grid: EndGrid, core: Float64Array, pulses: number) {
     for (let b = 1; b < pulses; b++)
       for (let a = 0; a < b; a++) {
         const part = two([levels[a], levels[b]]);
-        const others = nodes.reduce((product, node, g) => (g === a || g === b ? product : product * core[node]), 1);
+        const others = nodes.reduce(
+          (product, node, g) => (g === a || g === b ? product : product * core[node]),
+          1,
+        );
         mean += (part.dirichlet * exp(part.bound - top.bound) * others) / pairs;
       }
     return { dirichlet: top.dirichlet / mean, equal: top.equal / mean };

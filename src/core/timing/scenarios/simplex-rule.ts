@@ -17,10 +17,7 @@ const NODES_PER_ROOT = 2.8;
  */
 export function simplexRule(pulses: number, taxa: number, perRoot = NODES_PER_ROOT): SimplexRule {
   const exact = Math.ceil((taxa + pulses - 1) / 2);
-  const count = Math.max(
-    2,
-    Math.min(exact, pulses === 2 ? exact : Math.ceil(perRoot * Math.sqrt(taxa))),
-  );
+  const count = Math.max(2, Math.min(exact, pulses === 2 ? exact : Math.ceil(perRoot * Math.sqrt(taxa))));
   const { nodes, weights } = gaussLegendre(count);
   const size = count ** (pulses - 1);
   const rule = { pulses, shares: new Float64Array(size * pulses), weights: new Float64Array(size) };

@@ -1,0 +1,107 @@
+import type { Caution, Progress } from "../../basis.ts";
+import type { LocalTaxon } from "../../study/finds-result.ts";
+import type { Membership, Offset, ScenarioDensity, ScenarioWeight, TimingAnswer } from "../result.ts";
+import type { SetCase } from "../set-case.ts";
+import { allCandidates, closedCandidates, untrimmedCandidates, withoutIsolated } from "../sets.ts";
+import type { TimingWindow } from "../window.ts";
+import { scenarioCautions } from "./cautions.ts";
+import { OWN, type ScenarioProblem, scenarioEvidence } from "./evidence.ts";
+import { densitiesOf, levelsOf, membershipOf, offsetsOf } from "./level-rows.ts";
+import { problemOf, withConstantRecovery, withSampledHorizons } from "./problem.ts";
+import { durationAnswer, pulsesAnswers } from "./timing-rows.ts";
+import { ownVariant, type Variant, variantsOf } from "./variants.ts";
+import { atMostRows, weigh, weightRows } from "./weights.ts";
+
+export interface ScenarioAnswers {
+  readonly answers: readonly TimingAnswer[];
+  readonly scenarios: readonly ScenarioWeight[];
+  readonly offsets: readonly Offset[];
+  readonly membership: readonly Membership[];
+  readonly densities: readonly ScenarioDensity[];
+  readonly cautions: readonly Caution[];
+}
+
+interface Inputs {
+  readonly window: TimingWindow | undefined;
+  /** The taxa of the section, for the horizons searched. */
+  readonly taxa: readonly LocalTaxon[];
+  readonly progress?: Progress | undefined;
+}
+
+/** Sets that repeat the candidates with another judgement about single finds: the other answers tell whether it matters. */
+const judged: ReadonlySet<string> = new Set([withoutIsolated, untrimmedCandidates]);
+
+const nothing: ScenarioAnswers = {
+  answers: [],
+  scenarios: [],
+  offsets: [],
+  membership: [],
+  densities: [],
+  cautions: [],
+};
+
+/**
+ * The scenarios of every set of at least two taxa compared: their evidence under declared priors and under each change of
+ * them, the levels, offsets, memberships and duration that they imply, and what weakens the comparison. `progress` is
+ * called between steps of long work.
+ */
+export function scenarioAnswers(cases: readonly SetCase[], inputs: Inputs): ScenarioAnswers {
+  const { window } = inputs;
+  if (window === undefined) return nothing;
+  const each = cases
+    .filter(({ set }) => set.ranges.length >= 2 && !judged.has(set.set))
+    .map((setCase) => answersOf(setCase, { ...inputs, window }));
+  return {
+    answers: each.flatMap((a) => a.answers),
+    scenarios: each.flatMap((a) => a.scenarios),
+    offsets: each.flatMap((a) => a.offsets),
+    membership: each.flatMap((a) => a.membership),
+    densities: each.flatMap((a) => a.densities),
+    cautions: each.flatMap((a) => a.cautions),
+  };
+}
+
+function answersOf(
+  setCase: SetCase,
+  { window, taxa, progress }: Inputs & { readonly window: TimingWindow },
+): ScenarioAnswers {
+  const { section, set, settings, confidence } = setCase;
+  const name = `scenarios: ${section.name}, ${set.set}`;
+  const step = progress && ((done: number, total: number) => progress(name, done, total));
+  const problem = problemOf(setCase, window, step);
+  const evidence = scenarioEvidence(problem);
+  const variants = [...variantsOf(evidence), ...otherForms(setCase, problem, taxa)];
+  const place = { section: section.name, set: set.set };
+  const weighed = variants.map((variant) => weigh(variant, problem.horizons, settings.timing));
+  const levels = levelsOf(evidence);
+  return {
+    answers: [...durationAnswer(setCase, evidence), ...pulsesAnswers(setCase, weighed[OWN])],
+    scenarios: [
+      ...variants.flatMap((variant, v) =>
+        weightRows(place, variant, { weighed: weighed[v], horizons: problem.horizons }),
+      ),
+      ...atMostRows(place, evidence, set.ranges.length),
+    ],
+    offsets: offsetsOf(place, levels, { horizons: setCase.horizons, confidence }),
+    membership: membershipOf(place, evidence, set.taxa),
+    densities: densitiesOf(place, levels),
+    cautions: scenarioCautions(setCase, { problem, evidence, variants, weighed }),
+  };
+}
+
+/**
+ * The comparison with constant recovery, where it is not, and from the sampled horizons, where searches are listed: for
+ * all candidates alone.
+ */
+function otherForms(
+  setCase: SetCase,
+  problem: ScenarioProblem,
+  taxa: readonly LocalTaxon[],
+): readonly Variant[] {
+  if (setCase.set.set !== allCandidates && setCase.set.set !== closedCandidates) return [];
+  const constant = withConstantRecovery(problem, setCase);
+  const sampled = withSampledHorizons(problem, setCase, taxa);
+  const of = (name: string, other: ScenarioProblem | undefined) =>
+    other === undefined ? [] : [ownVariant(name, scenarioEvidence(other, "none"))];
+  return [...of("constant-recovery", constant), ...of("sampled", sampled)];
+}

@@ -1,0 +1,84 @@
+import type { Caution } from "../../basis.ts";
+import { DECLINE_GATE, pooledCentroid } from "../recovery-answers.ts";
+import type { SetCase } from "../set-case.ts";
+import type { ScenarioEvidence, ScenarioProblem } from "./evidence.ts";
+import type { Variant } from "./variants.ts";
+import { weightedQuantiles } from "./weighted.ts";
+import type { Weighed } from "./weights.ts";
+
+export interface Compared {
+  readonly problem: ScenarioProblem;
+  readonly evidence: ScenarioEvidence;
+  readonly variants: readonly Variant[];
+  readonly weighed: readonly (readonly Weighed[])[];
+}
+
+/** What weakens the comparison of scenarios in one set. */
+export function scenarioCautions(setCase: SetCase, compared: Compared): Caution[] {
+  const place = { section: setCase.section.name, subject: setCase.set.set };
+  return [
+    ...sensitivityCautions(compared),
+    ...separationCautions(setCase, compared),
+    ...edgeCautions(compared),
+    ...declineCautions(setCase, compared),
+  ].map((caution) => ({ ...caution, ...place }));
+}
+
+/** How a scenario is called in a caution. */
+export function scenarioName({ scenario, horizon }: Pick<Weighed, "scenario" | "horizon">): string {
+  return horizon === undefined ? scenario : `${scenario} ${horizon}`;
+}
+
+export function bestOf(weighed: readonly Weighed[]): Weighed | undefined {
+  let best: Weighed | undefined;
+  for (const one of weighed) if ((one.probability ?? 0) > (best?.probability ?? 0)) best = one;
+  return best;
+}
+
+/** Changes of priors or forms under which another scenario comes first. */
+function sensitivityCautions({ variants, weighed }: Compared): Caution[] {
+  const best = bestOf(weighed[0]);
+  if (best === undefined) return [];
+  const changed = variants.flatMap(({ name }, v) => {
+    const other = bestOf(weighed[v]);
+    if (name === undefined || other === undefined || scenarioName(other) === scenarioName(best)) return [];
+    return [`${name} (${scenarioName(other)})`];
+  });
+  if (changed.length === 0) return [];
+  const numbers = { best: scenarioName(best), changes: changed.join(", ") };
+  return [{ code: "scenario-order-changes", numbers }];
+}
+
+/** Pulses nearer to each other than this share of the mean range are not told apart by such data. */
+const RESOLVED_SHARE = 0.15;
+/** Told where two pulses have at least this probability. */
+const WORTH_TELLING = 0.1;
+
+function separationCautions({ set }: SetCase, { evidence, weighed }: Compared): Caution[] {
+  const two = weighed[0].find((one) => one.scenario === "pulses-2");
+  const separation = evidence.pulses[0]?.posterior?.separation;
+  if (separation === undefined || (two?.probability ?? 0) < WORTH_TELLING) return [];
+  const [median] = weightedQuantiles(separation, [0.5]);
+  const ranges = set.ranges.map((range) => range.lastM - range.baseM).filter((lengthM) => lengthM > 0);
+  const limitM = (RESOLVED_SHARE * ranges.reduce((sum, x) => sum + x, 0)) / ranges.length;
+  return median < limitM ? [{ code: "scenario-pulses-too-near", numbers: { medianM: median, limitM } }] : [];
+}
+
+/** Share of the window at its top, and the posterior mass there that shows it to be cut off. */
+const EDGE_SHARE = 0.05;
+const EDGE_MASS = 0.05;
+
+function edgeCautions({ problem, evidence }: Compared): Caution[] {
+  const posterior = evidence.single.posterior;
+  if (posterior === undefined) return [];
+  const highestM = Math.max(...problem.taxa.map((taxon) => taxon.lastM));
+  const mass = 1 - posterior.cdf(problem.highM - EDGE_SHARE * (problem.highM - highestM));
+  return mass > EDGE_MASS ? [{ code: "scenario-mass-at-edge", numbers: { mass } }] : [];
+}
+
+function declineCautions({ set }: SetCase, { weighed }: Compared): Caution[] {
+  const pooled = pooledCentroid(set.ranges);
+  const best = bestOf(weighed[0]);
+  if (pooled === undefined || pooled.p >= DECLINE_GATE || best === undefined) return [];
+  return [{ code: "scenario-leans-on-recovery", numbers: { p: pooled.p, best: scenarioName(best) } }];
+}
