@@ -39,6 +39,8 @@ function tellLostRows(
       .problems()
       .flatMap(({ severity, file, row }) => (severity === "error" && file === sheet.file ? (row ?? []) : [])),
   );
+  for (const ofSection of bySection.values())
+    for (const rows of ofSection.values()) if (rows.length === 1) lost.add(rows[0].origin.row);
   for (const row of lost) {
     const index = sheet.rowNumbers.indexOf(row);
     const cells = index < 0 ? [] : (sheet.rows.at(index) ?? []);
@@ -46,10 +48,17 @@ function tellLostRows(
     for (const [section, ofSection] of bySection)
       for (const [leg, rows] of ofSection) {
         const isOwn = ["", section].includes(at("section")) && ["", leg].includes(at("leg"));
-        if (!isOwn || !isComputed(rows)) continue;
+        // A row of another name among the leg's own is likely to be one of them.
+        const isAmong = rows[0]?.origin.row < row && row < (rows.at(-1)?.origin.row ?? 0);
+        if (!(isOwn || isAmong) || rows.length < 2 || !isComputed(rows)) continue;
         const found = at("reading");
-        const place = { file: sheet.file, row, column: "reading", found, detail: leg };
-        assembly.problems.add("leg-row-lost", place);
+        assembly.problems.add("leg-row-lost", {
+          file: sheet.file,
+          row,
+          column: "reading",
+          found,
+          detail: leg,
+        });
         const end = parseNumber(sheet.dialect.decimal === "comma" ? (withDecimalPoint(found) ?? "") : found);
         ofSection.set(leg, typeof end === "string" ? [] : rows.filter(({ cells }) => cells.reading < end));
       }

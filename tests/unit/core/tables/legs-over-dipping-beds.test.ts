@@ -120,6 +120,13 @@ describe("a leg that cannot be computed", () => {
     expect(problemsOf(read, "leg-row-lost")).toMatchObject([{ row: 3, found: "1O" }]);
   });
 
+  it("because one of its rows goes by another name ends before that row", () => {
+    const read = study(["A,0,100,,,,,", "A,10,,90,0,30,90,", "Aa,12,,90,0,40,90,", "A,20,,90,0,30,90,"]);
+    expect(problemsOf(read, "short-leg")).toMatchObject([{ row: 4, found: "Aa" }]);
+    expect(problemsOf(read, "leg-row-lost")).toMatchObject([{ row: 4 }]);
+    expect(legOf(read)).toEqual([{ readings: [0, 10], heightsM: [100, 105] }]);
+  });
+
   it("takes no other leg with it", () => {
     const legB = ["B,0,0,,,,,", "B,5,,90,0,30,90,", "B,10,,90,0,x,90,"];
     const read = study([...legB, "A,0,100,,,,,", "A,20,,90,0,30,90,"]);
