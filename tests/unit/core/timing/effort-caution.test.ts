@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import { uniformCoordinate } from "../../../../src/core/ranges/coordinate.ts";
+import { defaultSettings } from "../../../../src/core/study/settings.ts";
 import { effortCautions } from "../../../../src/core/timing/effort-caution.ts";
 import type { SetCase } from "../../../../src/core/timing/set-case.ts";
 import { sampleAt, searchOf, sectionWith } from "../study/sections.ts";
@@ -32,6 +33,8 @@ const caseWith = (effortAbove: number, unitAbove = "g"): SetCase => {
     horizons: [],
     confidence: 0.95,
     durationHorizons: 10,
+    settings: defaultSettings,
+    originM: 0,
   };
 };
 
