@@ -16,6 +16,7 @@ import type { LevelCurve, Timing, TimingAnswer } from "./result.ts";
 import { type ScenarioAnswers, scenarioAnswers } from "./scenarios/answers.ts";
 import { answerSet } from "./set-answers.ts";
 import type { PlacedHorizon, SetCase } from "./set-case.ts";
+import { recoveryOfSets, sharedRecoveryCautions } from "./set-coordinate.ts";
 import { allCandidates, setCautions, setsOf } from "./sets.ts";
 import { stepCautions, stepSets } from "./steps.ts";
 import { type TimingWindow, timingWindow } from "./window.ts";
@@ -79,6 +80,11 @@ function answerSection(section: Section, study: Study, input: SectionInput): Ans
     ...comparedCautions(cases),
     ...windowCautions(section, window),
     ...setCautions(section.name, ranges, declared),
+    ...sharedRecoveryCautions(
+      section.name,
+      cases.map(({ set }) => set),
+      study.settings,
+    ),
     ...stepCautions(section.name, ranges, study.settings),
     ...beside,
   ];
@@ -123,14 +129,14 @@ function sectionCases(
     confidence: settings.confidence,
     rangesOf,
   };
+  const { inRecovery } = recoveryOfSets(section, ofSection, settings);
   const cases = [
     ...setsOf(section.name, ranges, sets),
     ...stepSets(section.name, ranges, settings),
     ...comparedSets(compared),
   ].map((set) => ({
     section,
-    coordinate,
-    set,
+    ...inRecovery(set),
     horizons,
     confidence: settings.confidence,
     durationHorizons,

@@ -80,6 +80,8 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${plural(told.n("finds"), "find")} of ${taxa(told)} (${told.subject}) lie where ${recoverySource(told.text("source"))} says that nothing could be found.`,
   "range-recovery-misfit": ({ subject, text, n }) =>
     say`Finds of ${subject} do not fit the recovery taken from ${recoverySource(text("source"))} (${pValue(n("p"))}, ${n("finds")} finds): intervals rest on a shape that the finds contradict.`,
+  "timing-recovery-not-shared": ({ text }) =>
+    say`Recovery from ${recoverySource(text("source"))} differs between groups: sets of several groups (${text("names")}) are judged with constant recovery, those of one group with its own.`,
   "timing-uninformative-taxa": (told) =>
     say`${taxa(told)} with a single informative find left out of the tests; their finds still bound the common level from below.`,
   "timing-ties": (told) =>
