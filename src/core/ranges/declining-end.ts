@@ -1,5 +1,5 @@
 import { type DecliningPosterior, decliningPosterior } from "./declining.ts";
-import { estimatedEnd } from "./estimate-row.ts";
+import { type Estimate, estimatedEnd } from "./estimate-row.ts";
 import { note, type RangeCase, reasonWithoutFinds, wordsOf } from "./range-case.ts";
 import { fewNote, heightWords, round } from "./uniform-end.ts";
 
@@ -11,21 +11,30 @@ const OTHER_SPREADS = [1, 3];
 export const decliningEnd = estimatedEnd({
   method: "declining",
   reason: reasonWithoutFinds,
-  estimate: (rangeCase) => {
-    const { range, confidence } = rangeCase;
-    const length = range.last - range.base;
-    const posterior = posteriorOf(rangeCase, SPREAD);
-    return {
-      bound: range.last + length * posterior.extension(confidence),
-      point: range.last + length * posterior.extension(0.5),
-      chanceAt: (level) => posterior.chanceBeyond((level - range.last) / length),
-      notes: [slopeWords(rangeCase, posterior), spreadWords(rangeCase), fewNote(range.horizons)],
-    };
-  },
+  estimate: (rangeCase) => estimateBy(rangeCase, spreadWords(rangeCase)),
 });
 
-/** The bound of the row alone, in effective metres. */
-export function decliningBound(rangeCase: RangeCase, spread = SPREAD): number {
+/** The same row at a third of the cost: its note does not tell what s changes. */
+export const decliningPlainEnd = estimatedEnd({
+  method: "declining",
+  reason: reasonWithoutFinds,
+  estimate: (rangeCase) => estimateBy(rangeCase),
+});
+
+function estimateBy(rangeCase: RangeCase, sensitivity?: string): Estimate {
+  const { range, confidence } = rangeCase;
+  const length = range.last - range.base;
+  const posterior = posteriorOf(rangeCase, SPREAD);
+  return {
+    bound: range.last + length * posterior.extension(confidence),
+    point: range.last + length * posterior.extension(0.5),
+    chanceAt: (level) => posterior.chanceBeyond((level - range.last) / length),
+    notes: [slopeWords(rangeCase, posterior), sensitivity, fewNote(range.horizons)],
+  };
+}
+
+/** The bound with another width of the prior of the slope, in effective metres. */
+function boundWith(rangeCase: RangeCase, spread: number): number {
   const { range, confidence } = rangeCase;
   const extension = posteriorOf(rangeCase, spread).extension(confidence);
   return range.last + (range.last - range.base) * extension;
@@ -50,7 +59,7 @@ function slopeWords(rangeCase: RangeCase, { falling, evidenceRatio, slope }: Dec
 /** The bounds with other widths of the prior of the slope. */
 function spreadWords(rangeCase: RangeCase): string {
   const bounds = OTHER_SPREADS.map(
-    (spread) => `${heightWords(rangeCase, decliningBound(rangeCase, spread))} for ${spread}`,
+    (spread) => `${heightWords(rangeCase, boundWith(rangeCase, spread))} for ${spread}`,
   );
   return `prior width of the slope ${SPREAD}; bound ${bounds.join(", ")}`;
 }

@@ -1,4 +1,4 @@
-import { decliningEnd } from "./declining-end.ts";
+import { decliningPlainEnd } from "./declining-end.ts";
 import type { RangeCase } from "./range-case.ts";
 import type { Leaning, LeaningBound, RangeEnd, RangeMethod } from "./result.ts";
 import { topKEnd } from "./top-k-end.ts";
@@ -9,7 +9,7 @@ const FEW_FINDS = [2, 5];
 
 /**
  * The end of a case under each shape of recovery: by the leading method, `uniform`, `declining`, and `top-k` with beta
- * 1 and 2 from the 2, 5 and all outermost finds. Few finds lean least on the shape and reach furthest; where the bounds
+ * 1 and 2 from the 2, 5 and all outermost finds. Few finds lean least on the shape; where the bounds
  * lie close together the answer hardly depends on it.
  *
  * @param rows the rows that were made of this case, the leading method's first; a method not among them is computed.
@@ -19,7 +19,7 @@ export function leaningOf(rangeCase: RangeCase, rows: readonly RangeEnd[]): Lean
   const plain = [
     rows[0],
     found("uniform") ?? uniformEnd(rangeCase),
-    found("declining") ?? decliningEnd(rangeCase),
+    found("declining") ?? decliningPlainEnd(rangeCase),
   ];
   const distinct = plain.filter((row, i) => plain.findIndex((other) => other.method === row.method) === i);
   const bounds = [...distinct.map((row) => boundOf(rangeCase, row)), ...topKBounds(rangeCase)];

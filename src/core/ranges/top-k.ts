@@ -27,7 +27,7 @@ export function topKOmega(confidence: number, { finds, tail }: TopFinds): number
  *
  * Assumes that near the end the density of finds falls as (theta - x)^(beta - 1). (theta - x)^beta of the highest
  * finds are then ordered arrivals of a homogeneous process, and P(W > w) = (1 - w)^(k-1) for the ratio W of the first
- * to the k-th. beta = 1 with all finds is `uniform` from the first find; k = 2 is `two-highest`. Fewer finds: wider,
+ * to the k-th. beta = 1 with all finds is `uniform` from the first find; k = 2 is `two-highest`. Fewer finds: mostly wider,
  * and leaning less on the shape of recovery.
  *
  * @param levels finds in effective metres, from below upward, at least k of them; throws otherwise.
