@@ -1,5 +1,5 @@
 import { ChevronDown, ChevronUp } from "lucide-react";
-import type { ReactElement } from "react";
+import type { ReactElement, RefObject } from "react";
 import { usePage } from "../state/page-context.ts";
 import type { ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
@@ -7,6 +7,7 @@ import type { Finding } from "./use-find.ts";
 
 interface FindToolsProps {
   readonly table: ShownTable;
+  readonly field: RefObject<HTMLInputElement | null>;
   readonly find: Finding;
   /** Whether rows without the words are shown too. */
   readonly wantsAll: boolean;
@@ -14,7 +15,7 @@ interface FindToolsProps {
 }
 
 /** Words to look for: rows that hold them, and one cell after another. */
-export function FindTools({ table, find, wantsAll, setAll }: FindToolsProps): ReactElement {
+export function FindTools({ table, field, find, wantsAll, setAll }: FindToolsProps): ReactElement {
   const { state, go } = usePage();
   const words = state.place.find ?? "";
   return (
@@ -22,7 +23,7 @@ export function FindTools({ table, find, wantsAll, setAll }: FindToolsProps): Re
       <label>
         Find{" "}
         <input
-          ref={find.field}
+          ref={field}
           type="search"
           value={words}
           placeholder={`in ${table.title}`}

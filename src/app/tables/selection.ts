@@ -98,11 +98,13 @@ function edgeOfFilled(from: ShownCell, by: ShownCell, view: View): ShownCell {
   };
   let at = from;
   let next = step(at);
-  const isWithin = isInside(next) && holds(from) && holds(next);
-  while (isInside(next) && (!isWithin || holds(next))) {
+  if (isInside(next) && holds(from) && holds(next)) {
+    for (; isInside(next) && holds(next); next = step(at)) at = next;
+    return at;
+  }
+  for (; isInside(next); next = step(at)) {
     at = next;
-    next = step(at);
-    if (!isWithin && holds(at)) break;
+    if (holds(at)) break;
   }
   return at;
 }

@@ -113,7 +113,7 @@ function studyTable(
     columns: meanings.map((meaning, index) => ({
       header: headers[index] ?? "",
       meaning,
-      isNumber: isNumber[index] === true,
+      isNumber: index < isNumber.length && isNumber[index],
       ...(index >= headers.length && { isBeyond: true }),
     })),
     rows:

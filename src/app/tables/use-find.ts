@@ -1,10 +1,9 @@
-import { type RefObject, useRef } from "react";
+import type { RefObject } from "react";
 import type { Cell, Selection } from "./selection.ts";
 import type { ShownTable } from "./shown-table.ts";
 
 /** Looking for words in a table. */
 export interface Finding {
-  readonly field: RefObject<HTMLInputElement | null>;
   /** Goes to the field of the words. */
   readonly open: () => void;
   /** Goes to the next cell that holds them, or the one before. */
@@ -12,6 +11,7 @@ export interface Finding {
 }
 
 interface FindUse {
+  readonly field: RefObject<HTMLInputElement | null>;
   readonly table: ShownTable;
   readonly places: readonly number[];
   readonly words: string;
@@ -20,8 +20,7 @@ interface FindUse {
   readonly tell: (words: string) => void;
 }
 
-export function useFind({ table, places, words, selection, select, tell }: FindUse): Finding {
-  const field = useRef<HTMLInputElement>(null);
+export function useFind({ field, table, places, words, selection, select, tell }: FindUse): Finding {
   const open = () => {
     field.current?.focus();
     field.current?.select();
@@ -35,7 +34,7 @@ export function useFind({ table, places, words, selection, select, tell }: FindU
     if (found === undefined) tell(`No cell here holds “${words.trim()}”.`);
     else select({ anchor: found, active: found });
   };
-  return { field, open, next };
+  return { open, next };
 }
 
 interface Search {
@@ -55,7 +54,8 @@ export function nextFound(table: ShownTable, { places, words, from, isBackward }
   for (let step = 1; step <= size; step++) {
     const at = (((start + by * step) % size) + size) % size;
     const cell = { place: places[Math.floor(at / width)] ?? 0, column: at % width };
-    if (table.rows[cell.place]?.[cell.column]?.toLowerCase().includes(sought) === true) return cell;
+    const text = table.rows[cell.place]?.[cell.column] ?? "";
+    if (text.toLowerCase().includes(sought)) return cell;
   }
   return undefined;
 }

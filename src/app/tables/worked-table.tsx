@@ -1,4 +1,4 @@
-import { type ReactElement, useDeferredValue, useMemo, useState } from "react";
+import { type ReactElement, useDeferredValue, useMemo, useRef, useState } from "react";
 import { plural } from "../../report/wordings/words.ts";
 import { type Opened, usePage } from "../state/page-context.ts";
 import { FindTools } from "./find-tools.tsx";
@@ -38,7 +38,8 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
     () => chosenRows(table, { words: wantsAll ? "" : words, onlyProblems, sort }),
     [table, words, wantsAll, onlyProblems, sort],
   );
-  const find = useFind({ table, places, words, selection, select, tell });
+  const field = useRef<HTMLInputElement>(null);
+  const find = useFind({ field, table, places, words, selection, select, tell });
   const sortBy = (column: number | undefined) =>
     setSort(
       column === undefined ? undefined : sortedBy(table, column, column === sort?.column && !sort.isDown),
@@ -71,7 +72,7 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
   return (
     <>
       <div className={styles.finder}>
-        <FindTools {...{ table, find, wantsAll, setAll }} />
+        <FindTools {...{ table, field, find, wantsAll, setAll }} />
         <TableTools
           {...{ table, places, selection, onlyProblems, sort, sortBy, tell, insert, goToNew, rename }}
           choose={setOnlyProblems}

@@ -3,7 +3,7 @@ import type { Sheet } from "../../study/model.ts";
 import { type TableDeclaration, tables } from "../../study/tables/index.ts";
 import { takeOffApostrophe } from "../apostrophes.ts";
 import { baseName } from "../base-name.ts";
-import { decodeText, parseRecords } from "../csv.ts";
+import { decodeText, parseRecords, unguardedHeaders } from "../csv.ts";
 import { readDataPackage } from "../data-package.ts";
 import { decodeBytes } from "../dialect/encoding.ts";
 import { packParts } from "./pack-study.ts";
@@ -75,7 +75,13 @@ function rowsOf(text: string, sheet: WorkbookTable, guarded: ReadonlySet<string>
       throw new RangeError(
         `packWorkbook: expected cells of at most ${LONGEST_CELL} signs in ${file}, got ${long.length} in row ${row}; save it as CSV`,
       );
-    return { row, cells: row <= below ? cells : cells.map((cell, column) => write[column]?.(cell) ?? cell) };
+    return {
+      row,
+      cells:
+        row <= below
+          ? unguardedHeaders(cells, guarded)
+          : cells.map((cell, column) => write[column]?.(cell) ?? cell),
+    };
   });
 }
 
