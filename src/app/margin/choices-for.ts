@@ -67,7 +67,14 @@ const wordings: Readonly<Record<string, Wording>> = {
   },
   "ranges.recovery": {
     stations: ["ranges", "timing"],
-    words: ({ ranges }) => ({ uniform: "Recovery even where searched" })[ranges.recovery],
+    words: ({ ranges }) =>
+      ({
+        uniform: "Recovery even where searched",
+        effort: "Recovery from search effort",
+        facies: "Recovery from facies",
+        table: "Recovery from recovery.csv",
+        trend: "Recovery from a fitted trend",
+      })[ranges.recovery],
   },
   "timing.window": {
     stations: ["timing"],
