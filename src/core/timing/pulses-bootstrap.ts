@@ -55,7 +55,13 @@ export function pulsesBootstrap(
     if (reaches(generator)) reached++;
   });
   const p = reached >= ENOUGH ? reached / drawn : (1 + reached) / (1 + drawn);
-  return { statistic, p, mcError: Math.sqrt((p * (1 - p)) / drawn), replicates: drawn, levels };
+  return { statistic, p, mcError: shareError(reached, drawn), replicates: drawn, levels };
+}
+
+/** Standard error of a simulated share; with one hit and one miss added it is never 0. */
+export function shareError(hits: number, drawn: number): number {
+  const share = (hits + 1) / (drawn + 2);
+  return Math.sqrt((share * (1 - share)) / drawn);
 }
 
 /** For each range, the median-unbiased level of its pulse. */

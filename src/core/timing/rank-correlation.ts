@@ -1,6 +1,6 @@
 import { midranks, rankCorrelation } from "../numeric/ranks.ts";
 import { forEachReplicate } from "../numeric/streams.ts";
-import type { Simulation } from "./pulses-bootstrap.ts";
+import { type Simulation, shareError } from "./pulses-bootstrap.ts";
 
 export interface RarityTest {
   readonly rho: number;
@@ -49,7 +49,7 @@ export function rarityTest(
     },
   );
   const p = (1 + reached) / (1 + simulation.replicates);
-  return { rho, p, mcError: Math.sqrt((p * (1 - p)) / simulation.replicates) };
+  return { rho, p, mcError: shareError(reached, simulation.replicates) };
 }
 
 function productSum(a: Float64Array, b: Float64Array): number {
