@@ -54,13 +54,13 @@ export function SectionLog({ open, hand, goTo, close }: SectionLogProps): ReactE
           <X aria-hidden size={15} />
         </button>
       </div>
+      {/* oxlint-disable-next-line jsx-a11y/no-noninteractive-element-interactions -- its keys choose a level */}
       <section
         ref={frame}
         className={styles.frame}
         aria-label={`Log of ${drawing.title}: arrow keys move the reading line, Enter goes to the nearest row`}
         // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- it scrolls, and its keys choose a level
         tabIndex={0}
-        // oxlint-disable-next-line jsx-a11y/no-noninteractive-element-interactions -- likewise
         onKeyDown={onKeyDown}
       >
         {/* oxlint-disable-next-line jsx-a11y/click-events-have-key-events, jsx-a11y/no-static-element-interactions -- the frame has the keys */}

@@ -45,7 +45,8 @@ function written(edits: readonly Edit[], keepsRowNumbers = true): string {
 }
 
 type Step =
-  | { readonly kind: "insert" | "aside"; readonly place: number }
+  | { readonly kind: "insert"; readonly place: number }
+  | { readonly kind: "aside"; readonly place: number }
   | { readonly kind: "type"; readonly place: number; readonly column: number; readonly now: string };
 
 const step: fc.Arbitrary<Step> = fc.oneof(
