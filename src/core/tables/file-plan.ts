@@ -21,6 +21,8 @@ interface LongPlan {
   /** Columns taken by their content, by header. */
   readonly byContent: ReadonlyMap<string, ColumnChoice>;
   readonly recognised: number;
+  /** The columns of its header. */
+  readonly width: number;
 }
 
 export interface PlannedFile {
@@ -80,6 +82,7 @@ export function planFor(table: PlannedTable, file: PlannedFile): FilePlan {
     lacksSection: false,
     byContent: noChoices,
     recognised: 0,
+    width: 0,
   };
   const ways = headOf(file);
   if (ways === undefined) return asIs;
@@ -109,8 +112,10 @@ export function plansByColumns(file: PlannedFile, taken: ReadonlySet<TableName>)
   const plans = open.flatMap(
     (table) => longPlan(table, ways, { listed: file.listed, maySeekContent: false }) ?? [],
   );
-  // A table of taxa with traits and a wide sheet with taxa down look alike; cells of finds decide.
-  const isWide = wide !== undefined && plans.every(({ table }) => table.name === "taxa");
+  // A wide sheet with taxa down has names in a column as any table; one of which most columns are known is that table.
+  const isOther = ({ table, recognised, width }: LongPlan) =>
+    table.name !== "taxa" && 2 * recognised >= width;
+  const isWide = wide !== undefined && !plans.some(isOther);
   if (isWide) return [wide];
   const best = mostRecognised(plans.filter(({ lacksSection }) => !lacksSection));
   const withoutSection = mostRecognised(plans.filter(({ lacksSection }) => lacksSection));
@@ -162,11 +167,23 @@ function longPlan(
   const strict = bestParting(ways, table);
   const plan = { kind: "long" as const, byContent: noChoices };
   if (strict?.header.isComplete)
-    return { ...plan, table, lacksSection: false, recognised: strict.header.recognised };
+    return {
+      ...plan,
+      table,
+      lacksSection: false,
+      recognised: strict.header.recognised,
+      width: strict.header.headers.length,
+    };
   const open = withoutSection(table);
   const loose = bestParting(ways, open) ?? strict;
   if (open !== table && loose?.header.isComplete)
-    return { ...plan, table: open, lacksSection: true, recognised: loose.header.recognised };
+    return {
+      ...plan,
+      table: open,
+      lacksSection: true,
+      recognised: loose.header.recognised,
+      width: loose.header.headers.length,
+    };
   if (!maySeekContent || loose === undefined) return undefined;
   const records = ways.find(({ delimiter }) => delimiter === loose.delimiter)?.records ?? [];
   const byContent = choicesByContent(loose.header, records, { table, listed });

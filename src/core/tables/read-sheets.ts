@@ -84,6 +84,7 @@ const asItIs = (table: StudyTable): FilePlan => ({
   lacksSection: false,
   byContent: new Map(),
   recognised: 0,
+  width: 0,
 });
 
 interface Candidate extends CandidateFile {

@@ -48,7 +48,8 @@ export function recognition(
 }
 
 function fixedUnit(column: string | undefined, table: TableDeclaration): string | undefined {
-  const unit = column === undefined ? undefined : table.columns[column].unit;
+  const isDeclared = column !== undefined && Object.hasOwn(table.columns, column);
+  const unit = isDeclared ? table.columns[column].unit : undefined;
   return unit === "section" ? undefined : unit;
 }
 

@@ -2,7 +2,13 @@ import { describe, expect, it } from "vitest";
 import { editDistance, suggestName } from "../../../../src/core/study/nearest.ts";
 import { problemList } from "../../../../src/core/study/problem-list.ts";
 import { readSettings } from "../../../../src/core/study/read-settings.ts";
-import { knownSettingPaths, mergeSettings, setSetting } from "../../../../src/core/study/setting-path.ts";
+import {
+  knownSettingPaths,
+  mergeSettings,
+  partedAssignment,
+  setSetting,
+  settingPath,
+} from "../../../../src/core/study/setting-path.ts";
 import { defaultSettings } from "../../../../src/core/study/settings.ts";
 
 const read = (raw: unknown) => {
@@ -100,5 +106,35 @@ describe("one setting by its path", () => {
       seed: 1,
       taxa: { a: 1, b: [3] },
     });
+  });
+});
+
+describe("a path with names of more than letters", () => {
+  it("reaches a file whose name holds dots, and a header with brackets", () => {
+    expect(setSetting({}, 'tables["my.file.csv"].decimal', "comma")).toEqual({
+      kind: "set",
+      settings: { tables: { "my.file.csv": { decimal: "comma" } } },
+    });
+    const path = settingPath(["tables", "my.file.csv", "columns", 'Depth "old" (ft)', "unit"]);
+    expect(path).toBe('tables["my.file.csv"].columns["Depth \\"old\\" (ft)"].unit');
+    expect(setSetting({}, path, "ft")).toMatchObject({
+      settings: { tables: { "my.file.csv": { columns: { 'Depth "old" (ft)': { unit: "ft" } } } } },
+    });
+  });
+
+  it("parts at the first equals sign outside of quotes, and refuses what is not closed", () => {
+    expect(partedAssignment('tables["a=b.csv"].section=Tarn=Cut')).toEqual([
+      'tables["a=b.csv"].section',
+      "Tarn=Cut",
+    ]);
+    expect(partedAssignment("=5")).toBeUndefined();
+    for (const path of ['tables["a', "tables..x", "tables[a].decimal"])
+      expect(setSetting({}, path, "comma")).toMatchObject({ kind: "unknown" });
+  });
+
+  it("names the nearest column for a choice that is none", () => {
+    const { problems } = read({ tables: { finds: { columns: { Level: { is: "positon" } } } } });
+    expect(problems).toMatchObject([{ code: "bad-setting", column: "tables.finds.columns.Level.is" }]);
+    expect(problems[0]?.expected).toContain("did you mean position?");
   });
 });
