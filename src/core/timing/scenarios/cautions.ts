@@ -51,13 +51,15 @@ function sensitivityCautions({ variants, weighed }: Compared): Caution[] {
 
 /** Pulses nearer to each other than this share of the mean range are not told apart by such data. */
 const RESOLVED_SHARE = 0.15;
-/** Told where two pulses have at least this probability. */
-const WORTH_TELLING = 0.1;
+/** Told where two pulses are neither out of the question nor settled. */
+const LEAST = 0.1;
+const SETTLED = 0.9;
 
 function separationCautions({ set }: SetCase, { evidence, weighed }: Compared): Caution[] {
   const two = weighed[0].find((one) => one.scenario === "pulses-2");
   const separation = evidence.pulses[0]?.posterior?.separation;
-  if (separation === undefined || (two?.probability ?? 0) < WORTH_TELLING) return [];
+  const probability = two?.probability ?? 0;
+  if (separation === undefined || probability < LEAST || probability > SETTLED) return [];
   const [median] = weightedQuantiles(separation, [0.5]);
   const ranges = set.ranges.map((range) => range.lastM - range.baseM).filter((lengthM) => lengthM > 0);
   const limitM = (RESOLVED_SHARE * ranges.reduce((sum, x) => sum + x, 0)) / ranges.length;

@@ -1,4 +1,4 @@
-import { exp, log } from "../../numeric/elementary.ts";
+import { log } from "../../numeric/elementary.ts";
 import { gaussLegendre } from "../../numeric/gauss-legendre.ts";
 import { type EndGrid, endGrid, floorOf } from "./end-grid.ts";
 import type { EndLikelihood } from "./end-likelihood.ts";
@@ -6,7 +6,7 @@ import { belowTop, type EndWindow } from "./end-window.ts";
 import { type LogSum, logSum } from "./log-sum.ts";
 import type { EvidenceByTop } from "./single-level.ts";
 import { type StartPanel, startPanels } from "./start-panels.ts";
-import type { Weighted } from "./weighted.ts";
+import { massBins, type Weighted } from "./weighted.ts";
 
 export interface Gradual {
   /** For the longest duration, and for each other one asked for: ln of the evidence at each top of the window. */
@@ -83,8 +83,7 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
   const { grid, window, longestM } = spread;
   const sums = longestM.map(() => window.topsM.map(() => logSum()));
   const confined = window.topsM.map(() => logSum());
-  const values: number[] = [];
-  const logs: number[] = [];
+  const bins = massBins(longestM[0]);
   for (let node = 0; node < grid.heights.length; node++) {
     const topM = grid.heights[node];
     const logWeight = log(grid.weights[node]);
@@ -96,9 +95,7 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
       for (let d = 0; d < longestM.length; d++) if (durationM < longestM[d]) within[d].add(logMass);
       if (!(durationM < longestM[0])) return;
       if (startM > window.lowM) inWindow.add(logMass);
-      if (!isOwn || logMass === Number.NEGATIVE_INFINITY) return;
-      values.push(durationM);
-      logs.push(logMass + logWeight);
+      if (isOwn) bins.add(durationM, logMass + logWeight);
     });
     const add = (sum: LogSum[], log1: number) => {
       window.topsM.forEach((edgeM, t) => {
@@ -110,10 +107,11 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
   }
   const evidence = (sum: readonly LogSum[]) =>
     sum.map((s, t) => s.log() - log(window.topsM[t] - window.lowM));
+  const durations = bins.build();
   return {
     logEvidence: sums.map(evidence),
     logEvidenceConfined: evidence(confined),
-    ...(values.length === 0 ? {} : { durations: weightedOf(values, logs) }),
+    ...(durations === undefined ? {} : { durations }),
   };
 }
 
@@ -202,18 +200,4 @@ function logProduct(
     }
   }
   return sum + log(product);
-}
-
-/** Masses this far below the largest in ln are left out. */
-const NEGLIGIBLE = 30;
-
-function weightedOf(values: readonly number[], logs: readonly number[]): Weighted {
-  let largest = Number.NEGATIVE_INFINITY;
-  for (const logMass of logs) largest = Math.max(largest, logMass);
-  const isKept = (_: number, i: number) => logs[i] > largest - NEGLIGIBLE;
-  const kept = logs.filter(isKept);
-  return {
-    values: Float64Array.from(values.filter(isKept)),
-    masses: Float64Array.from(kept, (logMass) => exp(logMass - largest)),
-  };
 }

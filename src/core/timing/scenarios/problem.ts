@@ -1,6 +1,8 @@
 import { type Coordinate, uniformCoordinate } from "../../ranges/coordinate.ts";
-import { sampledHorizons, sampledRange } from "../../ranges/sampled-horizons.ts";
+import { type SampledHorizon, sampledHorizons, sampledRange } from "../../ranges/sampled-horizons.ts";
+import { isUnequal, searchEffort } from "../../ranges/search-effort.ts";
 import type { LocalTaxon } from "../../study/finds-result.ts";
+import type { Section } from "../../study/model.ts";
 import type { TaxonRange } from "../range-data.ts";
 import type { SetCase } from "../set-case.ts";
 import type { TimingWindow } from "../window.ts";
@@ -92,7 +94,7 @@ export function withSampledHorizons(
   const groups = new Map(
     [...new Set(set.ranges.map((range) => range.group))].map((group) => [
       group,
-      sampledHorizons(section, group, coordinate),
+      withEffort(section, group, sampledHorizons(section, group, coordinate)),
     ]),
   );
   const sampled: EndLikelihood[] = [];
@@ -103,4 +105,14 @@ export function withSampledHorizons(
     sampled.push(sampledLikelihood(range, found));
   }
   return { ...problem, taxa: sampled };
+}
+
+/** Efforts where they are known and differ; else every horizon counts alike. */
+function withEffort(
+  section: Section,
+  group: string,
+  horizons: readonly SampledHorizon[],
+): readonly SampledHorizon[] {
+  const effort = searchEffort(section, group, horizons);
+  return isUnequal(effort) ? horizons.map((h, i) => ({ ...h, effort: effort.efforts[i] })) : horizons;
 }

@@ -6,7 +6,7 @@ import { belowTop, type EndWindow } from "./end-window.ts";
 import { type LevelPosterior, posteriorBuilder } from "./level-posterior.ts";
 import type { EvidenceByTop } from "./single-level.ts";
 import { type TwoShares, twoShares } from "./two-shares.ts";
-import type { Weighted } from "./weighted.ts";
+import { massBins, type Weighted } from "./weighted.ts";
 
 export interface TwoPulses {
   /** Exactly two pulses, memberships by flat Dirichlet shares. */
@@ -137,8 +137,7 @@ function summaryOf(grid: EndGrid) {
   const lowerLevel = posteriorBuilder(grid);
   const upperLevel = posteriorBuilder(grid);
   const inLower = new Float64Array(k);
-  const values: number[] = [];
-  const masses: number[] = [];
+  const bins = massBins(panelsTop(grid) - grid.panels[0].lowM);
   let total = 0;
   let refined = 0;
   const add = ({ upper, lowerPanel, lowerM }: Pair, scale: number, shares: TwoShares) => {
@@ -147,8 +146,7 @@ function summaryOf(grid: EndGrid) {
     const upperM = grid.heights[upper];
     lowerLevel.add(lowerPanel, lowerM, mass);
     upperLevel.add(grid.panelOf[upper], upperM, mass);
-    values.push(upperM - lowerM);
-    masses.push(mass);
+    bins.add(upperM - lowerM, log(mass));
     total += mass;
     if (mass < LITTLE * total) return;
     refined += mass;
@@ -156,8 +154,10 @@ function summaryOf(grid: EndGrid) {
   };
   const build = (): PulsesPosterior => ({
     levels: [lowerLevel.build(), upperLevel.build()],
-    separation: { values: Float64Array.from(values), masses: Float64Array.from(masses) },
+    separation: bins.build() ?? { values: new Float64Array(0), masses: new Float64Array(0) },
     membership: [inLower.map((x) => x / refined), inLower.map((x) => 1 - x / refined)],
   });
   return { add, build };
 }
+
+const panelsTop = ({ panels }: EndGrid) => panels[panels.length - 1].highM;

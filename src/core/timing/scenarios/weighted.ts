@@ -1,3 +1,5 @@
+import { exp } from "../../numeric/elementary.ts";
+
 /** Values with masses. */
 export interface Weighted {
   readonly values: Float64Array;
@@ -31,3 +33,48 @@ export function weightedQuantiles(
     return values[a] + share * (values[c] - values[a]);
   });
 }
+
+/** Gathers values in (0, longest) with masses given by their logarithms. */
+export interface MassBins {
+  readonly add: (value: number, logMass: number) => void;
+  /** Undefined without mass. */
+  readonly build: () => Weighted | undefined;
+}
+
+/** Bins are narrow near 0: their edges are longest (i / BINS)^2. */
+const BINS = 1000;
+
+/** Each bin keeps its mass and its mean value; masses are relative to the largest. */
+export function massBins(longest: number): MassBins {
+  const masses = new Float64Array(BINS);
+  const moments = new Float64Array(BINS);
+  let scale = Number.NEGATIVE_INFINITY;
+  const add = (value: number, logMass: number) => {
+    if (!(logMass > scale - NEGLIGIBLE)) return;
+    if (logMass > scale + RESCALE) {
+      const factor = exp(scale - logMass);
+      for (let i = 0; i < BINS; i++) {
+        masses[i] *= factor;
+        moments[i] *= factor;
+      }
+      scale = logMass;
+    }
+    const bin = Math.min(BINS - 1, Math.floor(BINS * Math.sqrt(Math.max(0, value) / longest)));
+    const mass = exp(logMass - scale);
+    masses[bin] += mass;
+    moments[bin] += mass * value;
+  };
+  const build = () => {
+    const filled = Array.from(masses, (_, i) => i).filter((i) => masses[i] > 0);
+    if (filled.length === 0) return undefined;
+    return {
+      values: Float64Array.from(filled, (i) => moments[i] / masses[i]),
+      masses: Float64Array.from(filled, (i) => masses[i]),
+    };
+  };
+  return { add, build };
+}
+
+/** Masses this far below the largest in ln are left out; a larger one by this much resets the scale. */
+const NEGLIGIBLE = 40;
+const RESCALE = 10;
