@@ -49,9 +49,9 @@ async function freeName(folder: FileSystemDirectoryHandle, name: string): Promis
 }
 
 async function holds(folder: FileSystemDirectoryHandle, name: string): Promise<boolean> {
-  for (const find of [folder.getDirectoryHandle(name), folder.getFileHandle(name)]) {
+  for (const find of [() => folder.getDirectoryHandle(name), () => folder.getFileHandle(name)]) {
     if (
-      await find.then(
+      await find().then(
         () => true,
         () => false,
       )

@@ -39,7 +39,7 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
     [table, words, wantsAll, onlyProblems, sort],
   );
   const field = useRef<HTMLInputElement>(null);
-  const find = useFind({ field, table, places, words, selection, select, tell });
+  const find = useFind({ field, table, places, words: place.find ?? "", selection, select, tell });
   const sortBy = (column: number | undefined) =>
     setSort(
       column === undefined ? undefined : sortedBy(table, column, column === sort?.column && !sort.isDown),
