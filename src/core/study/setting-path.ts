@@ -107,7 +107,7 @@ function partedPath(path: string): readonly string[] | undefined {
       /^\[("(?:[^"\\]|\\.)*")\](?:\.(?=[^.[]))?|^([^.[]*)(?:\.|(?=\[)|$)/.exec(rest) ?? [];
     if (step === undefined || step === "") return undefined;
     const name = quoted === undefined ? plain : jsonOrText(quoted);
-    if (typeof name !== "string") return undefined;
+    if (typeof name !== "string" || name === "" || (step === rest && step.endsWith("."))) return undefined;
     names.push(name);
     rest = rest.slice(step.length);
   }
