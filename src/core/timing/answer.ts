@@ -17,7 +17,7 @@ import { type ScenarioAnswers, scenarioAnswers } from "./scenarios/answers.ts";
 import { answerSet } from "./set-answers.ts";
 import type { PlacedHorizon, SetCase } from "./set-case.ts";
 import { recoveryOfSets, sharedRecoveryCautions } from "./set-coordinate.ts";
-import { allCandidates, setCautions, setsOf } from "./sets.ts";
+import { allCandidates, setCautions, setOf, setsOf } from "./sets.ts";
 import { stepCautions, stepSets } from "./steps.ts";
 import { type TimingWindow, timingWindow } from "./window.ts";
 
@@ -121,15 +121,15 @@ function sectionCases(
   const horizons = placedHorizons(section.name, markers);
   const horizon = markers.main.bySection.get(section.name);
   const { durationHorizons, sets, window } = settings.timing;
+  const { inRecovery } = recoveryOfSets(section, ofSection, settings);
   const compared = {
     section: section.name,
-    ranges,
+    ranges: inRecovery(setOf(section.name, allCandidates, ranges)).set.ranges,
     taxa: ofSection,
     untrimmed: untrimmed.filter(isHere),
     confidence: settings.confidence,
     rangesOf,
   };
-  const { inRecovery } = recoveryOfSets(section, ofSection, settings);
   const cases = [
     ...setsOf(section.name, ranges, sets),
     ...stepSets(section.name, ranges, settings),

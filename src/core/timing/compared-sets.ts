@@ -5,6 +5,7 @@ import { type SetOfRanges, setOf, untrimmedCandidates, withoutIsolated } from ".
 
 export interface Compared {
   readonly section: string;
+  /** The candidates in the coordinate that they are judged in. */
   readonly ranges: readonly TaxonRange[];
   /** The taxa as they were settled, and as they were before finds below a reworking ceiling were taken out. */
   readonly taxa: readonly LocalTaxon[];
