@@ -6,6 +6,8 @@ import { type PageServer, servePage } from "./page-server.ts";
 
 const at = (path: string) => fileURLToPath(new URL(`../../${path}`, import.meta.url));
 
+export const BUILT = at("dist/page");
+
 export const EXAMPLE = { name: "Veyra Shelf", folder: at("datasets/veyra-shelf") };
 
 /** The built page in a real browser, with the example beside it. */
@@ -27,12 +29,11 @@ export async function openPage({
   hash = "",
   viewport = { width: 1440, height: 900 },
 }: OpenOptions = {}): Promise<OpenedPage> {
-  const built = at("dist/page");
-  if (!existsSync(`${built}/index.html`))
+  if (!existsSync(`${BUILT}/index.html`))
     throw new Error(
-      `openPage: expected the built page in ${built}, got none; build it first (npm run build)`,
+      `openPage: expected the built page in ${BUILT}, got none; build it first (npm run build)`,
     );
-  const server: PageServer = await servePage(built, EXAMPLE);
+  const server: PageServer = await servePage(BUILT, EXAMPLE);
   const browser: Browser = await startBrowser();
   const context = await browser.newContext({ viewport, reducedMotion: "reduce", acceptDownloads: true });
   const page = await context.newPage();
