@@ -2,7 +2,7 @@ import { countsChance, countsLikelihood, countsShape, POISSON_SHAPE } from "./co
 import { type CountedRange, countedRange } from "./counts-range.ts";
 import { commonFields, levelWords, note, type RangeCase, wordsOf } from "./range-case.ts";
 import type { RangeEnd } from "./result.ts";
-import { horizonBound } from "./sampled-end.ts";
+import { atHorizon, horizonBound } from "./sampled-end.ts";
 import { furthestOfChances } from "./sampled-odds.ts";
 import { endPosterior, endQuantile } from "./sampled-posterior.ts";
 import type { Survival } from "./survival.ts";
@@ -31,7 +31,7 @@ export function countsEnd(rangeCase: RangeCase): RangeEnd {
   const { words, ...posterior } = posteriorFields(rangeCase, counted);
   return {
     ...fields,
-    ...atHorizon(rangeCase, counted, chances),
+    ...atHorizon(rangeCase, counted.barrenM, chances),
     ...posterior,
     ...bound,
     note: note(bound.note, shapeWords(total, shape), effortWords[counted.effort], words),
@@ -84,14 +84,4 @@ function posteriorFields(
     pointM: endQuantile(posterior, 0.5),
     words: `posterior bound ${levelWords(rangeCase, endQuantile(posterior, confidence))} with kappa from 1/16 to 16 and a prior flat in height up to the ${sectionEnd}`,
   };
-}
-
-function atHorizon(
-  { range, horizon }: RangeCase,
-  { barrenM }: CountedRange,
-  chances: Float64Array,
-): Pick<RangeEnd, "p" | "reachLevel"> {
-  if (horizon === undefined || horizon.positionM < range.lastM) return {};
-  const p = chances[barrenM.filter((heightM) => heightM <= horizon.positionM).length];
-  return { p, reachLevel: 1 - p };
 }

@@ -27,12 +27,12 @@ export function mirroredHorizons(horizons: readonly SampledHorizon[]): readonly 
   return horizons.map((horizon) => ({ ...horizon, heightM: mirroredHeight(horizon.heightM) })).toReversed();
 }
 
+function mirroredGap({ baseM, topM }: Gap): Gap {
+  return { baseM: mirroredHeight(topM), topM: mirroredHeight(baseM) };
+}
+
 /** U of the section upside down: -U(-h). */
 export function mirroredCoordinate(coordinate: Coordinate): Coordinate {
-  const mirroredGap = (gap: Gap): Gap => ({
-    baseM: mirroredHeight(gap.topM),
-    topM: mirroredHeight(gap.baseM),
-  });
   return {
     gaps: coordinate.gaps.map(mirroredGap).toReversed(),
     toEffective: (heightM) => mirroredHeight(coordinate.toEffective(mirroredHeight(heightM))),

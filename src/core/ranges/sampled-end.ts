@@ -33,11 +33,12 @@ export function sampledEnd(rangeCase: RangeCase): RangeEnd {
     return { ...counted, outcome: "leaves-section", note: note(cutOffNote(rangeCase), outside) };
   const { words, ...posterior } = posteriorFields(rangeCase, sampled);
   const odds = sampled.effort !== undefined && "odds of a find in proportion to effort";
-  const furthest = furthestOf(sampled, rangeCase.confidence);
+  const chances = chancesOf(sampled);
+  const furthest = furthestOf(sampled, chances, rangeCase.confidence);
   const bound = horizonBound(rangeCase, furthest, sampled.barrenM);
   return {
     ...counted,
-    ...atHorizon(rangeCase, sampled),
+    ...atHorizon(rangeCase, sampled.barrenM, chances),
     ...posterior,
     ...bound,
     note: note(bound.note, odds, outside, words),
@@ -93,9 +94,12 @@ function posteriorFields(
 }
 
 /** Chance of so many barren horizons up to H, and the level at which the interval reaches H. */
-function atHorizon({ range, horizon }: RangeCase, sampled: SampledRange): Pick<RangeEnd, "p" | "reachLevel"> {
+export function atHorizon(
+  { range, horizon }: RangeCase,
+  barrenM: readonly number[],
+  chances: Float64Array,
+): Pick<RangeEnd, "p" | "reachLevel"> {
   if (horizon === undefined || horizon.positionM < range.lastM) return {};
-  const below = sampled.barrenM.filter((heightM) => heightM <= horizon.positionM).length;
-  const p = chancesOf(sampled)[below];
+  const p = chances[barrenM.filter((heightM) => heightM <= horizon.positionM).length];
   return { p, reachLevel: 1 - p };
 }

@@ -20,11 +20,11 @@ export function chancesOf({ count, effort }: SampledRange): Float64Array {
   });
 }
 
-/** J_C of a taxon's sampled horizons. */
-export function furthestOf(sampled: SampledRange, confidence: number): number {
+/** J_C of a taxon's sampled horizons, given their `chancesOf`. */
+export function furthestOf(sampled: SampledRange, chances: Float64Array, confidence: number): number {
   return sampled.effort === undefined
     ? furthestBarren(sampled.count, confidence)
-    : furthestOfChances(chancesOf(sampled), confidence);
+    : furthestOfChances(chances, confidence);
 }
 
 /** Posterior of the end under each prior, up to the section's end; undefined where no rock lies above the last find. */

@@ -81,32 +81,32 @@ describe("recovery taken as constant", () => {
   });
 });
 
+const levelsOf = (seenIn: Coordinate, g: Generator) =>
+  [8, 12, 20].map((horizons) =>
+    drawFinds({ baseM: BASE_M, endM: END_M, horizons }, shapes[1].coordinate, g).map(seenIn.toEffective),
+  );
+
+it("rejects the right shape in 5%", () => {
+  const rate = rateOf((g) => (recoveryFit(levelsOf(shapes[1].coordinate, g))?.p ?? 1) <= 0.05);
+  expectRate(rate, 0.05);
+});
+
 describe("the fit of finds to recovery", () => {
-  const levelsOf = (seenIn: Coordinate, g: Generator) =>
-    [8, 12, 20].map((horizons) =>
-      drawFinds({ baseM: BASE_M, endM: END_M, horizons }, shapes[1].coordinate, g).map(seenIn.toEffective),
-    );
-
-  it("rejects the right shape in 5%", () => {
-    const rate = rateOf((g) => (recoveryFit(levelsOf(shapes[1].coordinate, g))?.p ?? 1) <= 0.05);
-    expectRate(rate, 0.05);
-  });
-
   it("rejects a constant shape far more often where recovery falls", () => {
     const rate = rateOf((g) => (recoveryFit(levelsOf(uniformCoordinate, g))?.p ?? 1) <= 0.05);
     expect(rate.hits / rate.trials).toBeGreaterThan(0.3);
   });
 });
 
+/** A find of density exp(beta h) between two levels. */
+const drawTrend = (beta: number, [low, high]: readonly [number, number], g: Generator) => {
+  const rise = exp(beta * (high - low)) - 1;
+  return low + (beta === 0 ? g.uniform() * (high - low) : log1p(rise * g.uniform()) / beta);
+};
+
 describe("a trend fitted to the finds of a group", () => {
   const LENGTH_M = 40;
   const TAXA = 12;
-  /** A find of density exp(beta h) between two levels. */
-  const drawTrend = (beta: number, [low, high]: readonly [number, number], g: Generator) => {
-    const rise = exp(beta * (high - low)) - 1;
-    return low + (beta === 0 ? g.uniform() * (high - low) : log1p(rise * g.uniform()) / beta);
-  };
-
   it.each([5, 10, 20])(
     "%i horizons a taxon: covers near its level where constant recovery fails",
     (horizons) => {

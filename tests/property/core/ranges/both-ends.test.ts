@@ -65,6 +65,8 @@ const world = fc
     };
   });
 
+const turned = <T>(list: readonly T[], isTurned: boolean) => (isTurned ? list.toReversed() : [...list]);
+
 /** The world moved, stretched or turned: every height through one map, samples keeping their names. */
 function moved({ place, taxa }: World, to: (heightM: number) => number): World {
   const isTurned = to(1) < to(0);
@@ -82,13 +84,12 @@ function moved({ place, taxa }: World, to: (heightM: number) => number): World {
       searches: place.searches.map((search) => ({ ...search, heightM: to(search.heightM) })),
     },
     taxa: taxa.map((of) => {
-      const turn = <T>(list: readonly T[]) => (isTurned ? list.toReversed() : [...list]);
-      const heightsM = turn(of.heightsM.map(to));
+      const heightsM = turned(of.heightsM.map(to), isTurned);
       return {
         ...of,
         heightsM,
-        samples: turn(of.samples),
-        counts: turn(of.counts ?? []),
+        samples: turned(of.samples, isTurned),
+        counts: turned(of.counts ?? [], isTurned),
         lastInclusiveM: heightsM[heightsM.length - 1],
       };
     }),
@@ -120,19 +121,20 @@ function expectSame(got: readonly RangeEnd[], expected: readonly RangeEnd[], to:
   }
 }
 
+const upsideDown = (heightM: number) => TOP_M - heightM;
+const stretched = (heightM: number) => 3 * heightM + 117;
+
 describe("ends of ranges", () => {
   it("turn with the section: its bases are the tops of the section upside down, by every method", () => {
-    const to = (heightM: number) => TOP_M - heightM;
     fc.assert(
-      fc.property(world, (w) => expectSame(rowsOf(moved(w, to)), rowsOf(w), to)),
+      fc.property(world, (w) => expectSame(rowsOf(moved(w, upsideDown)), rowsOf(w), upsideDown)),
       { numRuns: 12, seed: 7 },
     );
   });
 
   it("move and stretch with the section", () => {
-    const to = (heightM: number) => 3 * heightM + 117;
     fc.assert(
-      fc.property(world, (w) => expectSame(rowsOf(moved(w, to)), rowsOf(w), to)),
+      fc.property(world, (w) => expectSame(rowsOf(moved(w, stretched)), rowsOf(w), stretched)),
       { numRuns: 12, seed: 8 },
     );
   });
@@ -152,21 +154,21 @@ describe("ends of ranges", () => {
   });
 });
 
+const coordinateOf = (shapes: readonly (readonly [number, number, number])[]): Coordinate => {
+  let baseM = 0;
+  const made = shapes.map(([thickness, atBase, atTop]) => {
+    const piece = { baseM, topM: baseM + thickness, atBase, atTop };
+    baseM = piece.topM;
+    return piece;
+  });
+  return pieceCoordinate(made, { beyond: 1, below: 0.5, origin: 0 });
+};
+
 describe("upside down", () => {
   const pieces = fc.array(
     fc.tuple(fc.integer({ min: 1, max: 9 }), fc.constantFrom(0, 0.5, 2), fc.constantFrom(0, 0.5, 2)),
     { minLength: 1, maxLength: 6 },
   );
-  const coordinateOf = (shapes: readonly (readonly [number, number, number])[]): Coordinate => {
-    let baseM = 0;
-    const made = shapes.map(([thickness, atBase, atTop]) => {
-      const piece = { baseM, topM: baseM + thickness, atBase, atTop };
-      baseM = piece.topM;
-      return piece;
-    });
-    return pieceCoordinate(made, { beyond: 1, below: 0.5, origin: 0 });
-  };
-
   it("twice is as before", () => {
     fc.assert(
       fc.property(pieces, fc.double({ min: -10, max: 70, noNaN: true }), (shapes, heightM) => {

@@ -57,23 +57,19 @@ describe("counts", () => {
   });
 });
 
+const find = (name: string, height: number, count?: number, extra: Partial<Occurrence> = {}): Occurrence => ({
+  verbatim: name,
+  taxon: name,
+  sample: `s${height}`,
+  heightM: height,
+  ...(count === undefined ? {} : { count }),
+  reworked: "no",
+  doubtful: false,
+  origin,
+  ...extra,
+});
+
 it("adds the specimens of all finds of one horizon that count", () => {
-  const find = (
-    name: string,
-    height: number,
-    count?: number,
-    extra: Partial<Occurrence> = {},
-  ): Occurrence => ({
-    verbatim: name,
-    taxon: name,
-    sample: `s${height}`,
-    heightM: height,
-    ...(count === undefined ? {} : { count }),
-    reworked: "no",
-    doubtful: false,
-    origin,
-    ...extra,
-  });
   const occurrences = [
     find("Orbula alba", 2, 3),
     find("Orbula alba", 2, 4),

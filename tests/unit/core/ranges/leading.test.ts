@@ -38,6 +38,8 @@ describe("where finds thin out upward", () => {
   const { ranges } = of(thinning);
   const tops = ranges.ends.filter((end) => end.end === "top" && end.taxon === "Orbula alba");
 
+  const noteOf = (method: RangeMethod) => tops.find((end) => end.method === method)?.note;
+
   it("methods that hold under a decline lead, and the tapers are theirs", () => {
     expect(tops.slice(0, 3).map((end) => end.method)).toEqual(["declining", "two-highest", "top-k"]);
     expect(tops).toHaveLength(methods.length);
@@ -45,7 +47,6 @@ describe("where finds thin out upward", () => {
   });
 
   it("the others are marked, and a caution says so", () => {
-    const noteOf = (method: RangeMethod) => tops.find((end) => end.method === method)?.note;
     expect(noteOf("uniform")).toMatch(/^recovery declines upward \(p = 0.0\d+\): the interval is too short/);
     expect(noteOf("sampled")).toMatch(/^recovery declines upward/);
     expect(noteOf("declining")).not.toMatch(/declines upward/);
@@ -58,14 +59,12 @@ describe("where finds thin out upward", () => {
       study([section()], (s) => ({ ...s, ranges: { ...s.ranges, methods: [...methods], tail: 2 } })),
       { taxa: even, candidates: even.map((t) => candidate(t)), markers: markers() },
     );
-    const factor = (rows: typeof ranges.ends) => {
-      const row = rows.find((end) => end.end === "top" && end.method === "two-highest");
-      return row;
-    };
+    const twoHighest = (rows: typeof ranges.ends) =>
+      rows.find((end) => end.end === "top" && end.method === "two-highest")?.highM;
     // x_n + c (x_n - x_(n-1)) with c = 1 / (0.95^(-1/2) - 1).
     const c = 1 / (0.95 ** -0.5 - 1);
-    expect(factor(ranges.ends)?.highM).toBeCloseTo(22 + 12 * c, 8);
-    expect(factor(plain.ends)?.highM).toBeCloseTo(22 + 4 * c, 8);
+    expect(twoHighest(ranges.ends)).toBeCloseTo(22 + 12 * c, 8);
+    expect(twoHighest(plain.ends)).toBeCloseTo(22 + 4 * c, 8);
   });
 
   it("the bases are left in their order: there finds crowd", () => {
