@@ -137,12 +137,3 @@ export function endQuantile({ edgesM, chances }: EndPosterior, chance: number): 
   }
   return edgesM[edgesM.length - 1];
 }
-
-/** The chance that the end lies above a height. */
-export function chanceAbove({ edgesM, chances }: EndPosterior, heightM: number): number {
-  return chances.reduce((sum, chance, j) => {
-    const thicknessM = edgesM[j + 1] - edgesM[j];
-    const share = thicknessM > 0 ? (edgesM[j + 1] - heightM) / thicknessM : 0;
-    return sum + chance * Math.min(1, Math.max(0, share));
-  }, 0);
-}
