@@ -1,5 +1,5 @@
 import { ChevronDown, ChevronUp } from "lucide-react";
-import type { ReactElement, RefObject } from "react";
+import { type ReactElement, type RefObject, useEffect } from "react";
 import { usePage } from "../state/page-context.ts";
 import type { ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
@@ -18,6 +18,10 @@ interface FindToolsProps {
 export function FindTools({ table, field, find, wantsAll, setAll }: FindToolsProps): ReactElement {
   const { state, go } = usePage();
   const words = state.place.find ?? "";
+  // The address follows the field, not the field the address: a quick hand would lose letters.
+  useEffect(() => {
+    if (field.current !== null && field.current !== document.activeElement) field.current.value = words;
+  }, [field, words]);
   return (
     <div className={styles.find}>
       <label>
@@ -25,7 +29,7 @@ export function FindTools({ table, field, find, wantsAll, setAll }: FindToolsPro
         <input
           ref={field}
           type="search"
-          value={words}
+          defaultValue={words}
           placeholder={`in ${table.title}`}
           onChange={(event) => go({ find: event.currentTarget.value, table: table.id, row: undefined })}
           onKeyDown={(event) => {

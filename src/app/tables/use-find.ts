@@ -26,12 +26,13 @@ export function useFind({ field, table, places, words, selection, select, tell }
     field.current?.select();
   };
   const next = (isBackward: boolean) => {
-    if (words.trim() === "") {
+    const sought = field.current?.value ?? words;
+    if (sought.trim() === "") {
       open();
       return;
     }
-    const found = nextFound(table, { places, words, from: selection.active, isBackward });
-    if (found === undefined) tell(`No cell here holds “${words.trim()}”.`);
+    const found = nextFound(table, { places, words: sought, from: selection.active, isBackward });
+    if (found === undefined) tell(`No cell here holds “${sought.trim()}”.`);
     else select({ anchor: found, active: found });
   };
   return { open, next };
