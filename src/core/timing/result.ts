@@ -114,6 +114,21 @@ export interface Membership {
   readonly probability: number;
 }
 
+/** How far the answer about a set moves without one taxon, or without its highest find. Changes are after minus before. */
+export interface Influence {
+  readonly section: string;
+  readonly set: string;
+  readonly taxon: string;
+  readonly removed: "taxon" | "highest-find";
+  /** Of the posterior median of one common level, m. */
+  readonly levelM?: number;
+  /** The best scenario of the whole set, and the change of its probability. */
+  readonly scenario?: Scenario;
+  readonly probability?: number;
+  /** Of the p of one common end. */
+  readonly p?: number;
+}
+
 /** Posterior density of a level of one scenario along the height of a section, per metre. */
 export interface ScenarioDensity {
   readonly section: string;
