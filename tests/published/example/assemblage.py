@@ -72,6 +72,13 @@ class Set:
             best, where = min(fd), fine[int(np.argmin(fd))]
         return stats.kstwo.sf(best, len(self.m)), where
 
+    def combined(self, low, high):
+        """Largest p of Fisher's combination over the horizon's interval: at its lowest level with every last find below."""
+        if self.top_m > high:
+            return 0.0, None
+        low = max(low, self.top_m)
+        return stats.chi2.sf(-2 * np.log(self.levels(low)).sum(), 2 * len(self.m)), low
+
     def shortest(self):
         limit = stats.chi2.ppf(C, 2 * (len(self.m) - 1))
 

@@ -4,7 +4,7 @@
 
 Formulas: Strauss & Sadler 1989 (uniform), Solow 1993 (window), Weiss & Marshall 1999 (sampled, the odds of a find in
 proportion to effort; exact rationals here),
-Solow 1996 (common end), exact Kolmogorov-Smirnov (SciPy kstwo), Berger & Heath 1968 (box mixing, SciPy optimisers).
+Solow 1996 (common end), exact Kolmogorov-Smirnov (SciPy kstwo), Fisher (combined), Berger & Heath 1968 (box mixing, SciPy optimisers).
 """
 
 import json
@@ -113,6 +113,8 @@ def timing_of(taxa, coordinate, horizons, top):
     for name, (_, low, up, _) in horizons.items():
         p, at = s.at_horizon(low, up)
         row("confidence-levels", {"p": p, "estimate": at, "outcome": "closed"}, horizon=name)
+        p, at = s.combined(low, up)
+        row("combined", {"p": p, "estimate": at, "outcome": "closed"}, horizon=name)
     row("duration-lower", {"low": s.shortest(), "outcome": "closed"})
     rich = [t for t in taxa if len(t["heights"]) >= 10]
     for part in ([rich] if len(rich) >= 2 else []) + ([taxa] if len(rich) < len(taxa) else []):
