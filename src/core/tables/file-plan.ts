@@ -113,8 +113,6 @@ export function plansByColumns(file: PlannedFile, taken: ReadonlySet<TableName>)
     (table) => longPlan(table, ways, { listed: file.listed, maySeekContent: false }) ?? [],
   );
   // A wide sheet with taxa down has names in a column as any table; one of which most columns are known is that table.
-  const isOther = ({ table, recognised, width }: LongPlan) =>
-    table.name !== "taxa" && 2 * recognised >= width;
   const isWide = wide !== undefined && !plans.some(isOther);
   if (isWide) return [wide];
   const best = mostRecognised(plans.filter(({ lacksSection }) => !lacksSection));
@@ -127,6 +125,9 @@ export function plansByColumns(file: PlannedFile, taken: ReadonlySet<TableName>)
   const byContent = finds && longPlan(finds, ways, { listed: file.listed, maySeekContent: true });
   return byContent === undefined ? [] : [byContent];
 }
+
+const isOther = ({ table, recognised, width }: LongPlan): boolean =>
+  table.name !== "taxa" && 2 * recognised >= width;
 
 /** Headers that are names of taxa tell a wide sheet, whatever else stands there; names in a column are those of any table. */
 const standsFirst = (

@@ -95,6 +95,10 @@ export function readWide(source: WideSource): ReadonlyMap<TableName, ReadSheet> 
     section: section?.name,
     numberOf: (text) => numberOf(text, decimal),
   });
+  if (rows.samples.length === 0) {
+    problems.add("header-only", { file, found: "headers without a sample" });
+    return undefined;
+  }
   const wide: WideReading = {
     shape: shaped.shape,
     samples: rows.samples.length,
