@@ -38,10 +38,11 @@ export function effortLikelihood(given: SampledEfforts): Float64Array {
   const finds = withTaxon.length;
   const upTo = [0];
   for (const effort of above) upTo.push(upTo[upTo.length - 1] + effort);
+  const distinct = [...countsOf(withTaxon)];
   const shared = (x: number) => {
     const lambda = exp(x);
     return (
-      withTaxon.reduce((sum, effort) => sum + log(-expm1(-lambda * effort)), 0) -
+      distinct.reduce((sum, [effort, count]) => sum + count * log(-expm1(-lambda * effort)), 0) -
       lambda * (1 + barrenInRange) +
       x
     );
@@ -57,6 +58,13 @@ export function effortLikelihood(given: SampledEfforts): Float64Array {
     });
   }
   return likelihood.map((value) => value / likelihood[0]);
+}
+
+/** How often each effort occurs: many samples are of one size. */
+function countsOf(efforts: readonly number[]): ReadonlyMap<number, number> {
+  const counts = new Map<number, number>();
+  for (const effort of efforts) counts.set(effort, (counts.get(effort) ?? 0) + 1);
+  return counts;
 }
 
 /** From where the integrand of j = M_b rises to where that of j = 0 has died away, in ln lambda. */
