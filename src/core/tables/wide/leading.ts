@@ -10,10 +10,7 @@ import { taxa } from "../../study/tables/taxa.ts";
 /** Tables whose columns can stand beside the taxa of a wide sheet; the first that knows a header has it. */
 const beside: readonly TableDeclaration[] = [samples, searches, taxa, occurrences, beds, sections];
 
-/** Every column that can stand beside the taxa, and those of them that are used. */
-export const besideColumns: ReadonlySet<string> = new Set(
-  beside.flatMap(({ columns }) => Object.keys(columns)),
-);
+/** Columns that say something of a sample. */
 export const sampleColumns: ReadonlySet<string> = new Set(Object.keys(samples.columns));
 const used: ReadonlySet<string> = new Set([...sampleColumns, "effort", "effort_unit", "group", "taxon"]);
 
