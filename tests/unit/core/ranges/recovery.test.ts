@@ -89,6 +89,16 @@ describe("recovery from a table", () => {
     expect(codes).toContain("range-recovery-contradicted");
   });
 
+  it("is told to misfit where finds crowd where it says that there are few", () => {
+    const crowd = taxon("Orbula densa", [2, 20, 21, 22, 23, 24, 25, 26, 27, 30]);
+    const codes = (rows: readonly RecoveryPoint[]) =>
+      rangesOf(crowd, section({ recovery: rows }), "table").codes;
+    expect(codes([point(0, 5), point(19, 5), point(19, 1), point(40, 1)])).toContain("range-recovery-misfit");
+    expect(codes([point(0, 0.1), point(19, 0.1), point(19, 5), point(40, 5)])).not.toContain(
+      "range-recovery-misfit",
+    );
+  });
+
   it("is open where recovery ends at 0, with the level reached at the section's top", () => {
     const place = section({ recovery: [point(0, 1), point(30, 1), point(40, 0)] });
     const { row } = rangesOf(taxon("Orbula rara", [10, 28]), place, "table");
