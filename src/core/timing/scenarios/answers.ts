@@ -2,7 +2,7 @@ import type { Caution, Progress } from "../../basis.ts";
 import type { LocalTaxon } from "../../study/finds-result.ts";
 import type { Membership, Offset, ScenarioDensity, ScenarioWeight, TimingAnswer } from "../result.ts";
 import type { SetCase } from "../set-case.ts";
-import { allCandidates, closedCandidates, untrimmedCandidates, withoutIsolated } from "../sets.ts";
+import { allCandidates, untrimmedCandidates, withoutIsolated } from "../sets.ts";
 import type { TimingWindow } from "../window.ts";
 import { scenarioCautions } from "./cautions.ts";
 import { OWN, type ScenarioProblem, scenarioEvidence } from "./evidence.ts";
@@ -98,7 +98,7 @@ function otherForms(
   problem: ScenarioProblem,
   taxa: readonly LocalTaxon[],
 ): readonly Variant[] {
-  if (setCase.set.set !== allCandidates && setCase.set.set !== closedCandidates) return [];
+  if (setCase.set.set !== allCandidates) return [];
   const constant = withConstantRecovery(problem, setCase);
   const sampled = withSampledHorizons(problem, setCase, taxa);
   const of = (name: string, other: ScenarioProblem | undefined) =>

@@ -54,6 +54,11 @@ function nothingFits(window: EndWindow, longestM: readonly number[]): Gradual {
   return { logEvidence: longestM.map(() => none), logEvidenceConfined: none };
 }
 
+/** With more taxa the kinks in t are weak beside the product of the others. */
+const MOST_WITH_KINKS = 12;
+/** Higher tops are left out once a top adds less than this share, in ln, of the largest. */
+const NEGLIGIBLE = 45;
+
 interface TopRange {
   readonly longestM: number;
   readonly floorM: number;
@@ -66,7 +71,8 @@ function topBreaks(
   window: EndWindow,
   { longestM, floorM, highM }: TopRange,
 ): readonly number[] {
-  const kinks = taxa.flatMap((taxon) => [taxon.fromM, ...taxon.kinksM].map((x) => x + longestM));
+  const few = taxa.length <= MOST_WITH_KINKS ? taxa : [];
+  const kinks = few.flatMap((taxon) => [taxon.fromM, ...taxon.kinksM].map((x) => x + longestM));
   const steep = Array.from({ length: STEEP_STEPS }, (_, q) => floorM + (highM - floorM) / 4 ** (q + 1));
   return [...kinks, ...steep, window.lowM + longestM];
 }
@@ -84,6 +90,8 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
   const sums = longestM.map(() => window.topsM.map(() => logSum()));
   const confined = window.topsM.map(() => logSum());
   const bins = massBins(longestM[0]);
+  const highestM = Math.max(...taxa.map((taxon) => taxon.lastM));
+  let largest = Number.NEGATIVE_INFINITY;
   for (let node = 0; node < grid.heights.length; node++) {
     const topM = grid.heights[node];
     const logWeight = log(grid.weights[node]);
@@ -102,6 +110,9 @@ function sumOverTops(taxa: readonly EndLikelihood[], spread: Spread): Gradual {
         if (belowTop(grid, node, edgeM)) sum[t].add(log1);
       });
     };
+    const logOwn = Math.max(...within.map((sum) => sum.log()));
+    largest = Math.max(largest, logOwn);
+    if (logOwn < largest - NEGLIGIBLE && topM > highestM) break;
     within.forEach((sum, d) => add(sums[d], sum.log() + logWeight - log(longestM[d])));
     add(confined, inWindow.log() + logWeight - log(Math.min(longestM[0], topM - window.lowM)));
   }

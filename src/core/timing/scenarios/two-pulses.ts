@@ -27,9 +27,9 @@ export interface PulsesPosterior {
 }
 
 /** Pairs whose bound is under this share of the sum so far are left out. */
-const NEGLIGIBLE = 1e-13;
+const NEGLIGIBLE = 1e-11;
 /** Membership is not refined by pairs with less than this share of the mass so far. */
-const LITTLE = 1e-10;
+const LITTLE = 1e-9;
 
 /**
  * Exactly two pulses, every one holding a taxon, at heights independent and flat over the window. Memberships have
