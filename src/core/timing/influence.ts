@@ -108,11 +108,13 @@ function bestIndex(probabilities: readonly number[] | undefined): number | undef
   return probabilities?.indexOf(Math.max(...probabilities));
 }
 
+function moved(after: number | undefined, before: number | undefined): number | undefined {
+  return after === undefined || before === undefined ? undefined : after - before;
+}
+
 type Changes = Pick<Influence, "levelM" | "scenario" | "probability" | "p">;
 
 function changes(whole: Judged, left: Judged, best: number | undefined): Changes {
-  const moved = (after: number | undefined, before: number | undefined) =>
-    after === undefined || before === undefined ? undefined : after - before;
   const levelM = moved(left.medianM, whole.medianM);
   const chance = ({ probabilities }: Judged) => (best === undefined ? undefined : probabilities?.[best]);
   const probability = moved(chance(left), chance(whole));

@@ -101,7 +101,9 @@ function otherForms(
   if (setCase.set.set !== allCandidates) return [];
   const constant = withConstantRecovery(problem, setCase);
   const sampled = withSampledHorizons(problem, setCase, taxa);
-  const of = (name: string, other: ScenarioProblem | undefined) =>
-    other === undefined ? [] : [ownVariant(name, scenarioEvidence(other, "none"))];
-  return [...of("constant-recovery", constant), ...of("sampled", sampled)];
+  return [...otherForm("constant-recovery", constant), ...otherForm("sampled", sampled)];
+}
+
+function otherForm(name: string, problem: ScenarioProblem | undefined): readonly Variant[] {
+  return problem === undefined ? [] : [ownVariant(name, scenarioEvidence(problem, "none"))];
 }

@@ -67,7 +67,7 @@ function separationCautions({ set }: SetCase, { evidence, weighed }: Compared): 
 }
 
 /** Share of the window at its top, and the posterior mass there that shows it to be cut off. */
-const EDGE_SHARE = 0.05;
+const EDGE_SHARE = 0.1;
 const EDGE_MASS = 0.05;
 
 function edgeCautions({ problem, evidence }: Compared): Caution[] {

@@ -15,7 +15,7 @@ export function weightedQuantiles(
   { values, masses }: Weighted,
   probabilities: readonly number[],
 ): readonly number[] {
-  const order = Uint32Array.from(values, (_, i) => i).sort((a, b) => values[a] - values[b] || a - b);
+  const order = Uint32Array.from(values, (_, i) => i).toSorted((a, b) => values[a] - values[b] || a - b);
   const below = new Float64Array(order.length);
   let total = 0;
   order.forEach((index, rank) => {

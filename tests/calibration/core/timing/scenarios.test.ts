@@ -62,13 +62,13 @@ describe("the scenario that comes first", () => {
   });
 });
 
-describe("the central 95 % interval of one level", () => {
-  /**
-   * With one known base and a far window the posterior falls as the power s - 1 of the level, s the number of finds, while
-   * (M / end)^s is uniform: it covers 0.975^(s / (s - 1)) - 0.025^(s / (s - 1)).
-   */
-  const covered = (finds: number) => 0.975 ** (finds / (finds - 1)) - 0.025 ** (finds / (finds - 1));
+/**
+ * With one known base and a far window the posterior falls as the power s - 1 of the level, s the number of finds, while
+ * (M / end)^s is uniform: it covers 0.975^(s / (s - 1)) - 0.025^(s / (s - 1)).
+ */
+const covered = (finds: number) => 0.975 ** (finds / (finds - 1)) - 0.025 ** (finds / (finds - 1));
 
+describe("the central 95 % interval of one level", () => {
   it.each([
     { name: "3 each", horizons: [3, 3, 3] },
     { name: "5 each", horizons: [5, 5, 5, 5] },

@@ -56,6 +56,17 @@ const near = (a: readonly number[], b: readonly number[]) =>
     expect(Math.abs(x - b[i])).toBeLessThan(1e-5 * Math.max(1, Math.abs(x)));
   });
 
+/** Recovery that falls upward, in another unit. */
+const recovery = (factor: number) =>
+  pieceCoordinate(
+    [
+      { baseM: 0, topM: 18, atBase: factor, atTop: factor },
+      { baseM: 18, topM: 26, atBase: factor, atTop: 0.4 * factor },
+      { baseM: 26, topM: 45, atBase: 0.4 * factor, atTop: 0.4 * factor },
+    ],
+    { beyond: 0.4 * factor, origin: 0 },
+  );
+
 describe("evidence of scenarios", () => {
   it("does not depend on shift, stretch or the order of taxa", () => {
     fc.assert(
@@ -71,15 +82,6 @@ describe("evidence of scenarios", () => {
   });
 
   it("does not depend on the unit of recovery", () => {
-    const recovery = (factor: number) =>
-      pieceCoordinate(
-        [
-          { baseM: 0, topM: 18, atBase: factor, atTop: factor },
-          { baseM: 18, topM: 26, atBase: factor, atTop: 0.4 * factor },
-          { baseM: 26, topM: 45, atBase: 0.4 * factor, atTop: 0.4 * factor },
-        ],
-        { beyond: 0.4 * factor, origin: 0 },
-      );
     fc.assert(
       fc.property(assemblage, (ranges) => {
         near(evidences(ranges, 1, 0, recovery(6)), evidences(ranges, 1, 0, recovery(1)));

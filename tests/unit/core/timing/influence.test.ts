@@ -25,6 +25,10 @@ const inputs = {
   longestM: 20,
 };
 
+const step = () => {
+  throw new Error("stopped");
+};
+
 describe("influence", () => {
   it("tells what the answer would be without a taxon, or without its highest find", () => {
     const found = influence(ranges, inputs);
@@ -48,9 +52,6 @@ describe("influence", () => {
   it("leaves scenarios out where no longest duration is given, and stops when told to", () => {
     const { longestM: _longestM, ...without } = inputs;
     expect(influence(ranges, without).every((row) => row.probability === undefined)).toBe(true);
-    const step = () => {
-      throw new Error("stopped");
-    };
     expect(() => influence(ranges, { ...without, step })).toThrow("stopped");
   });
 });
