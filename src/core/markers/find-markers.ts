@@ -13,6 +13,7 @@ import { givenHorizons } from "./given-horizons.ts";
 import { type JudgedProfile, judgeProfiles, reportedBackground, testProfile } from "./judged-profile.ts";
 import { settleMainHorizon } from "./main-horizon.ts";
 import { mixingBasis } from "./mixing-fit.ts";
+import { pickedHorizons } from "./picked-horizons.ts";
 import type { Flag, MarkerHorizon, Markers, Profile } from "./result.ts";
 import { reworkingBasis } from "./reworking.ts";
 import { sigmaBasis } from "./sigmas.ts";
@@ -79,7 +80,8 @@ export function settleMarkers(surveys: readonly SectionSurvey[], { boundary }: S
 }
 
 /** Horizons, profiles and flags of one section: it needs no other section, so sections can be surveyed apart. */
-export function surveySection(section: Section, { confidence, replicates, seed }: Settings): SectionSurvey {
+export function surveySection(section: Section, settings: Settings): SectionSurvey {
+  const { confidence, replicates, seed, boundary } = settings;
   const options = { level: confidence, replicates, seed };
   const read = elementsOf(section.measurements).map((analyte) => elementProfile(section, analyte));
   const tested = read
@@ -89,9 +91,10 @@ export function surveySection(section: Section, { confidence, replicates, seed }
   const others = judgeProfiles(tested.filter(({ profile }) => profile.analyte !== horizonElement));
   const examined = [...first, ...others].map((judged) => examine(judged, options));
   const found = examined.flatMap((one) => foundIn(one, confidence));
+  const automatic = [...givenHorizons(section, confidence), ...found.map(({ horizon }) => horizon)];
   return {
     section: section.name,
-    horizons: [...givenHorizons(section, confidence), ...found.map(({ horizon }) => horizon)],
+    horizons: [...automatic, ...pickedHorizons(section, boundary.picks, { automatic, level: confidence })],
     profiles: examined.map(reportedProfile),
     flags: [
       ...examined.flatMap(({ judged }) => profileFlags(judged)),

@@ -17,12 +17,32 @@ const differenceSigmas = 2;
  * Gives horizons the names they answer to (`boundary.same`) and settles the main horizon H: the declared name, else
  * the one given `impact` horizon name; two or more of those are `ambiguous`; with none, section by section the found
  * iridium horizon of largest fluence, shared only where all of them were declared one horizon. Where a section has a
- * given (or manual) and a found horizon of the name, the given one is H.
+ * given and a found horizon of the name, the given one is H; one placed by hand comes before both.
  */
 export function settleMainHorizon(found: readonly MarkerHorizon[], boundary: Boundary): SettledHorizons {
   const renamed = renameDeclared(found, boundary);
   const { main, cautions } = chooseMain(renamed.horizons, boundary.horizon);
-  return { horizons: renamed.horizons, main, cautions: [...renamed.cautions, ...cautions] };
+  const byHand = pickCautions(renamed.horizons, boundary);
+  return { horizons: renamed.horizons, main, cautions: [...renamed.cautions, ...cautions, ...byHand] };
+}
+
+/** How far each pick by hand lies from the automatic horizon beside it, and picks in sections that are not there. */
+function pickCautions(horizons: readonly MarkerHorizon[], { picks }: Boundary): readonly Caution[] {
+  const sections = new Set(horizons.map((h) => h.section));
+  const lost = picks
+    .filter(({ section }) => !sections.has(section))
+    .map(({ section, horizon }) => ({ code: "pick-not-placed", section, subject: horizon }));
+  const moved = horizons
+    .filter((h) => h.source === "manual")
+    .flatMap((pick): Caution[] => {
+      const beside = horizons.find(
+        (h) => h.section === pick.section && h.horizon === pick.horizon && h.source !== "manual",
+      );
+      if (beside === undefined) return [];
+      const numbers = { source: beside.source, differenceM: pick.positionM - beside.positionM };
+      return [{ code: "horizon-placed-by-hand", section: pick.section, subject: pick.horizon, numbers }];
+    });
+  return [...lost, ...moved];
 }
 
 function renameDeclared(horizons: readonly MarkerHorizon[], { same }: Boundary) {
@@ -44,7 +64,7 @@ function key(section: string, name: string): string {
 
 function chooseMain(horizons: readonly MarkerHorizon[], declared: string | undefined) {
   if (declared !== undefined) return byName(horizons, declared, "setting");
-  const given = horizons.filter((h) => h.source !== "found" && h.kind === "impact");
+  const given = horizons.filter((h) => h.source === "given" && h.kind === "impact");
   const names = [...new Set(given.map((h) => h.horizon))];
   if (names.length === 1) return byName(horizons, names[0], "given-impact");
   if (names.length > 1) {
@@ -64,9 +84,10 @@ function byName(horizons: readonly MarkerHorizon[], name: string, settledBy: "se
   for (const section of sectionsOf(horizons)) {
     const here = horizons.filter((h) => h.section === section && h.horizon === name);
     if (here.length === 0) continue;
-    const given = here.filter((h) => h.source !== "found");
+    const byHand = here.find((h) => h.source === "manual");
+    const given = here.filter((h) => h.source === "given");
     const found = here.filter((h) => h.source === "found").toSorted(byFluence);
-    bySection.set(section, given[0] ?? found[0]);
+    bySection.set(section, byHand ?? given[0] ?? found[0]);
     for (const kind of [given, found])
       if (kind.length > 1)
         cautions.push({ code: "horizon-twice", section, subject: name, numbers: { count: kind.length } });
@@ -100,12 +121,18 @@ function bySectionFluence(horizons: readonly MarkerHorizon[]) {
     const main: MainHorizon = { settledBy: "none", isShared: false, bySection: new Map() };
     return { main, cautions: [{ code: "no-main-horizon" }] };
   }
+  const placed = chosen.map(
+    (h) =>
+      horizons.find(
+        (other) => other.section === h.section && other.horizon === h.horizon && other.source === "manual",
+      ) ?? h,
+  );
   const isDeclared = chosen.every((h) => h.horizon === chosen[0].horizon && h.horizon !== h.name);
   const main: MainHorizon = {
     ...(isDeclared || chosen.length === 1 ? { name: chosen[0].horizon } : {}),
     settledBy: "found-iridium",
     isShared: isDeclared || chosen.length === 1,
-    bySection: new Map(chosen.map((h) => [h.section, h])),
+    bySection: new Map(placed.map((h) => [h.section, h])),
   };
   const code = main.isShared ? "main-horizon-found" : "main-horizon-by-section";
   const cautions: readonly Caution[] = [{ code, numbers: { sections: chosen.length } }];

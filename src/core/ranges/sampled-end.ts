@@ -45,6 +45,13 @@ export function sampledEnd(rangeCase: RangeCase): RangeEnd {
   };
 }
 
+/** The bound of the row alone, without the posterior beside it; undefined where the interval is not closed. */
+export function sampledBound({ sampled, reachesTop, confidence, range }: RangeCase): number | undefined {
+  if (sampled === undefined || sampled.count.finds === 0 || reachesTop) return undefined;
+  const boundM = sampled.barrenM[furthestOf(sampled, chancesOf(sampled), confidence)];
+  return boundM !== undefined && boundM >= range.lastM ? boundM : undefined;
+}
+
 /** Steps down at each barren horizon; undefined without an informative find. */
 export function sampledSurvival({ sampled }: RangeCase): Survival | undefined {
   if (sampled === undefined || sampled.count.finds === 0) return undefined;

@@ -3,6 +3,7 @@ import { type RangesInput, sectionCases } from "./cases.ts";
 import { rangeMethods } from "./methods.ts";
 import type { RangeCase } from "./range-case.ts";
 import type { RangeMethod, Taper } from "./result.ts";
+import { sampledBound } from "./sampled-end.ts";
 import type { Survival } from "./survival.ts";
 
 /** A taper is drawn down to this chance, or to the section's top. */
@@ -24,15 +25,21 @@ export function taperBy(rangeCase: RangeCase, method: RangeMethod): Taper | unde
   if (survival === undefined) return undefined;
   const outline = survival.kind === "steps" ? stepOutline(rangeCase, survival) : curve(rangeCase, survival);
   if (outline === undefined) return undefined;
-  const { outcome, highM } = rangeMethods[method].end(rangeCase);
-  const isInside = outcome === "closed" || outcome === "in-hiatus";
+  const endM = boundBy(rangeCase, method);
   return {
     section: rangeCase.section,
     taxon: rangeCase.taxon.taxon,
     method,
     ...outline,
-    ...(isInside && highM !== undefined ? { endM: highM } : {}),
+    ...(endM === undefined ? {} : { endM }),
   };
+}
+
+/** Where the interval at the study's confidence ends; undefined where it leaves the section. */
+function boundBy(rangeCase: RangeCase, method: RangeMethod): number | undefined {
+  if (method === "sampled") return sampledBound(rangeCase);
+  const { outcome, highM } = rangeMethods[method].end(rangeCase);
+  return outcome === "closed" || outcome === "in-hiatus" ? highM : undefined;
 }
 
 /** The taper by the leading method; where that says nothing, `uniform` stands in; undefined where neither does. */

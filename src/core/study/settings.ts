@@ -114,6 +114,21 @@ export const settingsSchema = v.strictObject({
         "found horizons declared one horizon, as [section, horizon] pairs",
       ),
       weights: says(v.optional(v.record(v.string(), v.number()), {}), "weight of each proxy in the pick"),
+      picks: says(
+        v.optional(
+          v.array(
+            v.strictObject({
+              section: v.pipe(v.string(), v.nonEmpty()),
+              horizon: v.pipe(v.string(), v.nonEmpty()),
+              position: v.pipe(v.number(), v.finite()),
+              below: v.optional(v.pipe(v.number(), v.finite(), v.minValue(0)), 0),
+              above: v.optional(v.pipe(v.number(), v.finite(), v.minValue(0)), 0),
+            }),
+          ),
+          [],
+        ),
+        "horizons placed by hand, in the section's own axis and unit; below and above: one standard deviation each way",
+      ),
     }),
     {},
   ),

@@ -1,34 +1,19 @@
 import type { Caution, Progress } from "../basis.ts";
-import type { MarkerHorizon, Markers } from "../markers/result.ts";
-import { sectionBase } from "../ranges/base.ts";
-import { recoveryCoordinate } from "../ranges/coordinate.ts";
-import type { Ranges } from "../ranges/result.ts";
-import type { Candidate, LocalTaxon } from "../study/finds-result.ts";
 import type { Section, Study } from "../study/model.ts";
 import { timingBasis } from "./basis.ts";
 import { besideCautions, comparedCautions, setCaseCautions, topCautions } from "./cautions.ts";
-import { comparedSets } from "./compared-sets.ts";
 import { lastFindsCurve } from "./last-finds-curve.ts";
 import { levelCurve } from "./level-curve.ts";
-import { candidateRanges } from "./range-data.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
 import type { LevelCurve, Timing, TimingAnswer } from "./result.ts";
 import { type ScenarioAnswers, scenarioAnswers } from "./scenarios/answers.ts";
+import { sectionCases, type TimingInput } from "./section-cases.ts";
 import { answerSet } from "./set-answers.ts";
-import type { PlacedHorizon, SetCase } from "./set-case.ts";
-import { recoveryOfSets, sharedRecoveryCautions } from "./set-coordinate.ts";
-import { allCandidates, setCautions, setOf, setsOf } from "./sets.ts";
-import { stepCautions, stepSets } from "./steps.ts";
-import { type TimingWindow, timingWindow } from "./window.ts";
-
-export interface TimingInput {
-  readonly taxa: readonly LocalTaxon[];
-  readonly candidates: readonly Candidate[];
-  readonly markers: Markers;
-  readonly ranges?: Ranges;
-  /** The taxa before finds below a reworking ceiling were taken out; without them nothing is compared. */
-  readonly untrimmed?: readonly LocalTaxon[];
-}
+import type { SetCase } from "./set-case.ts";
+import { sharedRecoveryCautions } from "./set-coordinate.ts";
+import { allCandidates, setCautions } from "./sets.ts";
+import { stepCautions } from "./steps.ts";
+import type { TimingWindow } from "./window.ts";
 
 /**
  * The questions about assemblages, section by section and set by set: could the taxa have ended together, where, at
@@ -105,70 +90,6 @@ function answerSection(section: Section, study: Study, input: SectionInput): Ans
 function declines(ranges: Parameters<typeof pooledCentroid>[0]): boolean {
   const pooled = pooledCentroid(ranges);
   return pooled !== undefined && pooled.p < DECLINE_GATE;
-}
-
-function sectionCases(
-  section: Section,
-  { settings }: Study,
-  { taxa, candidates, markers, untrimmed = taxa }: TimingInput,
-): { cases: readonly SetCase[]; window: TimingWindow | undefined } {
-  const coordinate = recoveryCoordinate(section);
-  const { base } = sectionBase(section, settings, markers);
-  const isHere = (taxon: LocalTaxon) => taxon.section === section.name;
-  const ofSection = taxa.filter(isHere);
-  const rangesOf = (some: readonly LocalTaxon[]) => candidateRanges(candidates, some, { base, coordinate });
-  const ranges = rangesOf(ofSection);
-  const horizons = placedHorizons(section.name, markers);
-  const horizon = markers.main.bySection.get(section.name);
-  const { durationHorizons, sets, window } = settings.timing;
-  const { inRecovery } = recoveryOfSets(section, ofSection, settings);
-  const compared = {
-    section: section.name,
-    ranges: inRecovery(setOf(section.name, allCandidates, ranges)).set.ranges,
-    taxa: ofSection,
-    untrimmed: untrimmed.filter(isHere),
-    confidence: settings.confidence,
-    rangesOf,
-  };
-  const cases = [
-    ...setsOf(section.name, ranges, sets),
-    ...stepSets(section.name, ranges, settings),
-    ...comparedSets(compared),
-  ].map((set) => ({
-    section,
-    ...inRecovery(set),
-    horizons,
-    confidence: settings.confidence,
-    durationHorizons,
-    settings,
-    originM: horizon?.positionM ?? 0,
-  }));
-  return {
-    cases,
-    window: ranges.length === 0 ? undefined : timingWindow(window, ranges, { section, horizon }),
-  };
-}
-
-/**
- * Every horizon placed in the section. It goes by the name it answers to; where two answer to one name, the main
- * horizon keeps it and the other goes by its own.
- */
-function placedHorizons(section: string, markers: Markers): readonly PlacedHorizon[] {
-  const here = markers.horizons.filter(
-    (h) => h.section === section && Number.isFinite(h.lowM) && Number.isFinite(h.highM),
-  );
-  const main = markers.main.bySection.get(section);
-  return here.map((marker) => ({ name: nameAmong(marker, here, main), marker }));
-}
-
-function nameAmong(
-  marker: MarkerHorizon,
-  here: readonly MarkerHorizon[],
-  main: MarkerHorizon | undefined,
-): string {
-  const isMain = main?.name === marker.name && main.source === marker.source;
-  const isShared = here.some((other) => other !== marker && other.horizon === marker.horizon);
-  return isShared && !isMain ? marker.name : marker.horizon;
 }
 
 function windowCautions(section: Section, window: TimingWindow | undefined): Caution[] {

@@ -14,7 +14,11 @@ const STEPS = 64;
  * levels ends; with the peak, the edges of rock without recovery and the horizons among them. Below it p is 0.
  * Undefined where no taxon is informative or the window ends below the highest last find.
  */
-export function levelCurve(setCase: SetCase, window: TimingWindow): LevelCurve | undefined {
+export function levelCurve(
+  setCase: SetCase,
+  window: TimingWindow,
+  steps: number = STEPS,
+): LevelCurve | undefined {
   const { section, set, coordinate, horizons } = setCase;
   if (informative(set.ranges).length === 0) return undefined;
   const lowestM = Math.max(...set.ranges.map((range) => range.lastM));
@@ -26,7 +30,7 @@ export function levelCurve(setCase: SetCase, window: TimingWindow): LevelCurve |
       ? window.highM
       : findRoot((heightM) => pAt(heightM) - LEAST_P, peakM, window.highM, { tolerance: 1e-6 });
   const spanM = topM - lowestM;
-  const even = Array.from({ length: STEPS + 1 }, (_, i) => lowestM + (spanM * i * i) / (STEPS * STEPS));
+  const even = Array.from({ length: steps + 1 }, (_, i) => lowestM + (spanM * i * i) / (steps * steps));
   const edges = coordinate.gaps.flatMap((gap) => [gap.baseM, gap.topM]);
   const marked = [peakM, ...edges, ...horizons.map(({ marker }) => marker.positionM)];
   const heights = [...even, ...marked].filter((heightM) => heightM >= lowestM && heightM <= topM);

@@ -42,6 +42,10 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${subject}, named in boundary.horizon, is placed in no section.`,
   "given-found-differ": ({ subject, text, n }) =>
     say`The found ${text("found")} lies ${offset(n("differenceM"))}\u00a0m from the given ${subject}, more than two standard deviations.`,
+  "horizon-placed-by-hand": ({ subject, text, n }) =>
+    say`${subject} was placed by hand, ${offset(n("differenceM"))}\u00a0m from the ${text("source")} one; what follows stands on the pick.`,
+  "pick-not-placed": ({ section, subject }) =>
+    say`${subject} was placed by hand in ${section}, a section that is not there.`,
   "main-horizon-found": () =>
     say`No impact horizon is given: the found iridium horizon of largest fluence is taken for the main one.`,
   "main-horizon-by-section": ({ n }) =>

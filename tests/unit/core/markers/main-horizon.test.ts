@@ -26,7 +26,7 @@ const found = (section: string, name: string, fluence: number, positionM = 10) =
     positionM,
     fluence: { value: fluence, low: fluence - 1, high: fluence + 1 },
   });
-const plain = { same: [], weights: {} };
+const plain = { same: [], weights: {}, picks: [] };
 const same = [
   {
     name: "veyra-impact",

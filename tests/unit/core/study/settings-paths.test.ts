@@ -63,7 +63,7 @@ describe("settings", () => {
     const { settings, problems } = read({
       boundary: { horizon: "H", same: [{ name: "H", horizons: [["a"]] }] },
     });
-    expect(settings.boundary).toEqual({ horizon: "H", same: [], weights: {} });
+    expect(settings.boundary).toEqual({ horizon: "H", same: [], weights: {}, picks: [] });
     expect(problems[0].column).toBe("boundary.same.0.horizons.0.1");
   });
 });
