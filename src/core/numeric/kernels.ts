@@ -1,6 +1,13 @@
 import { kernels as bytes } from "virtual:kernels";
 import type { Word64 } from "./sfc64.ts";
-import { DROPPED_OUTPUTS, type StreamName, seededSfc64, seededState } from "./streams.ts";
+import {
+  BLOCK_SIZE,
+  blockCount,
+  DROPPED_OUTPUTS,
+  type StreamName,
+  seededSfc64,
+  seededState,
+} from "./streams.ts";
 import { drawExponential, LAYERS, ziggurat } from "./ziggurat.ts";
 
 /** One block of replicates of one purpose. */
@@ -45,6 +52,27 @@ export const twins: Kernels = {
     });
   },
 };
+
+/** Simulations of one purpose, each of the same number of exponentials. */
+export interface SimulationPlan {
+  readonly seed: number;
+  readonly stream: StreamName;
+  readonly replicates: number;
+  readonly draws: number;
+}
+
+/** Runs replicates 0 ... replicates - 1 in order with the exponentials of its block each; `true` stops. */
+export function forEachSimulation(
+  { seed, stream, replicates, draws }: SimulationPlan,
+  run: (exponentials: Float64Array, replicate: number) => boolean | void,
+): void {
+  for (let block = 0; block < blockCount(replicates); block++) {
+    const drawn = kernels.exponentials({ seed, stream, block }, draws * BLOCK_SIZE);
+    const first = block * BLOCK_SIZE;
+    for (let at = 0; at < BLOCK_SIZE && first + at < replicates; at++)
+      if (run(drawn.subarray(at * draws, (at + 1) * draws), first + at) === true) return;
+  }
+}
 
 /** What src/kernels exports. */
 interface Exports {

@@ -1,6 +1,6 @@
 import { exp } from "../numeric/elementary.ts";
+import { forEachSimulation } from "../numeric/kernels.ts";
 import { poissonBinomial } from "../numeric/poisson-binomial.ts";
-import { forEachReplicate } from "../numeric/streams.ts";
 import { quantile } from "../numeric/sums.ts";
 import type { EffectiveRange } from "../ranges/pivot.ts";
 import { chancesAbove } from "./last-finds.ts";
@@ -24,9 +24,10 @@ export function localLevel(
   const { seed, replicates } = simulation;
   const smallest = new Float64Array(replicates);
   const lasts = new Float64Array(ranges.length);
-  forEachReplicate(replicates, { seed, stream: "extinctionTiming" }, (replicate, generator) => {
+  const plan = { seed, stream: "extinctionTiming", replicates, draws: ranges.length } as const;
+  forEachSimulation(plan, (exponentials, replicate) => {
     ranges.forEach(({ base, exponent }, i) => {
-      lasts[i] = base + (end - base) * exp(-generator.exponential() / exponent);
+      lasts[i] = base + (end - base) * exp(-exponentials[i] / exponent);
     });
     smallest[replicate] = smallestP(lasts.toSorted(), tails);
   });

@@ -1,5 +1,5 @@
 import { exp } from "../numeric/elementary.ts";
-import { forEachReplicate, type Generator } from "../numeric/streams.ts";
+import { forEachSimulation } from "../numeric/kernels.ts";
 import type { EffectiveRange } from "../ranges/pivot.ts";
 import { commonEndGiven } from "./common-end.ts";
 import { type SortedRanges, secondPulseReaches } from "./pulse-gain.ts";
@@ -49,10 +49,11 @@ export function pulsesBootstrap(
   const reaches = simulatedReach(ranges, ends, { pulses, gain: statistic * (1 - 1e-12) });
   let reached = 0;
   let drawn = 0;
-  forEachReplicate(replicates, { seed, stream: "parametricBootstrap" }, (_, generator) => {
-    if (reached >= ENOUGH) return;
+  const plan = { seed, stream: "parametricBootstrap", replicates, draws: ranges.length } as const;
+  forEachSimulation(plan, (exponentials) => {
     drawn++;
-    if (reaches(generator)) reached++;
+    if (reaches(exponentials)) reached++;
+    return reached >= ENOUGH;
   });
   const p = reached >= ENOUGH ? reached / drawn : (1 + reached) / (1 + drawn);
   return { statistic, p, mcError: shareError(reached, drawn), replicates: drawn, levels };
@@ -93,10 +94,10 @@ function simulatedReach(ranges: readonly EffectiveRange[], ends: Float64Array, {
     bases: new Float64Array(k),
     exponents: new Float64Array(k),
   } satisfies SortedRanges;
-  return (generator: Generator): boolean => {
+  return (exponentials: Float64Array): boolean => {
     for (let i = 0; i < k; i++) {
       const { base, exponent } = ranges[i];
-      const last = base + (ends[i] - base) * exp(-generator.exponential() / exponent);
+      const last = base + (ends[i] - base) * exp(-exponentials[i] / exponent);
       let place = i;
       for (; place > 0 && sorted.lasts[place - 1] > last; place--) copyUp(sorted, place);
       sorted.lasts[place] = last;
