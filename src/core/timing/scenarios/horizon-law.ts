@@ -1,6 +1,5 @@
 import type { MarkerHorizon } from "../../markers/result.ts";
 import { log } from "../../numeric/elementary.ts";
-import { normalCdf } from "../../numeric/normal.ts";
 
 /** Where a marker horizon lies: normal about its position, flat over its interval, or at one height. */
 export type HorizonLaw =
@@ -41,11 +40,4 @@ export function logLaw(law: Exclude<HorizonLaw, { kind: "point" }>, heightM: num
   }
   const z = (heightM - law.meanM) / law.sdM;
   return -0.5 * z * z - LOG_ROOT_TWO_PI - log(law.sdM);
-}
-
-/** P(horizon < h). */
-export function lawBelow(law: HorizonLaw, heightM: number): number {
-  if (law.kind === "normal") return normalCdf((heightM - law.meanM) / law.sdM);
-  if (law.kind === "point") return heightM > law.atM ? 1 : 0;
-  return Math.min(1, Math.max(0, (heightM - law.lowM) / (law.highM - law.lowM)));
 }
