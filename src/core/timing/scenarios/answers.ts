@@ -68,6 +68,7 @@ function answersOf(
   const { section, set, settings, confidence } = setCase;
   const name = `scenarios: ${section.name}, ${set.set}`;
   const step = progress && ((done: number, total: number) => progress(name, done, total));
+  step?.(0, 1);
   const problem = problemOf(setCase, window, step);
   const evidence = scenarioEvidence(problem);
   const variants = [...variantsOf(evidence), ...otherForms(setCase, problem, taxa)];
