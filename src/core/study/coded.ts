@@ -29,15 +29,30 @@ export function mapValues<T, U>({ values, codes }: Coded<T>, turn: (value: T) =>
 
 /** Some of the rows, in the order given, with the values that stand in them, in the order met. */
 export function takeRows<T>({ values, codes }: Coded<T>, rows: Int32Array): Coded<T> {
-  const placeOf = new Int32Array(values.length);
+  if (values.length === 1)
+    return { values: rows.length === 0 ? [] : values, codes: new Uint8Array(rows.length) };
+  const { least, most } = reach(codes, rows);
+  const placeOf = new Int32Array(Math.max(0, most - least + 1));
   const met: T[] = [];
   for (let at = 0; at < rows.length; at++) {
     const code = codes[rows[at]];
-    if (placeOf[code] === 0) placeOf[code] = met.push(values[code]);
+    if (placeOf[code - least] === 0) placeOf[code - least] = met.push(values[code]);
   }
   const taken = codesFor(met.length, rows.length);
-  for (let at = 0; at < rows.length; at++) taken[at] = placeOf[codes[rows[at]]] - 1;
+  for (let at = 0; at < rows.length; at++) taken[at] = placeOf[codes[rows[at]] - least] - 1;
   return { values: met, codes: taken };
+}
+
+/** The least and the greatest code of some rows: those of one section are often near each other. */
+function reach(codes: Codes, rows: Int32Array): { readonly least: number; readonly most: number } {
+  let least = Infinity;
+  let most = -1;
+  for (let at = 0; at < rows.length; at++) {
+    const code = codes[rows[at]];
+    if (code < least) least = code;
+    if (code > most) most = code;
+  }
+  return { least, most };
 }
 
 /** How often each distinct value stands in the column. */
@@ -59,3 +74,11 @@ export function encode<T>(items: readonly T[]): Coded<T> {
   narrow.set(codes);
   return { values: [...known.keys()], codes: narrow };
 }
+
+/** Things given to rows as they are met. */
+export interface Numbered<T> extends Coded<T> {
+  readonly values: T[];
+  readonly codes: Int32Array;
+}
+
+export const numbered = <T>(rows: number): Numbered<T> => ({ values: [], codes: new Int32Array(rows) });

@@ -4,12 +4,14 @@ import {
   type ColumnScan,
   columnScan,
   contentOf,
+  endIfRepeated,
   finished,
   hashStep,
   NO_SIGN,
   type Piece,
   roomFor,
 } from "./column-scan.ts";
+import { textsOf } from "./piece-texts.ts";
 
 export interface Scanning {
   /** A sign of one byte. */
@@ -78,8 +80,8 @@ export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells |
     if (count === rows.length) rows = widened(rows, columns, bytes.length / to);
   }
   return {
-    columns: columns.map((column) => finished(column, count, (piece) => decode(contentOf(bytes, piece)))),
-    rows: rows.slice(0, count),
+    columns: columns.map((column) => finished(column, count, (pieces) => textsOf(pieces, { bytes, decode }))),
+    rows: rows.subarray(0, count),
     uneven,
   };
 }
@@ -88,6 +90,9 @@ const NOTHING: Piece = { from: 0, to: 0, hash: 0, doubled: NO_SIGN };
 
 const recordScan = (bytes: Uint8Array, { delimiter, quote, decode }: Scanning): RecordScan => ({
   bytes,
+  ends: Uint8Array.from({ length: 0x100 }, (_, byte) =>
+    byte === delimiter.charCodeAt(0) || byte === LINE_FEED || byte === RETURN ? 1 : 0,
+  ),
   delimiter: delimiter.charCodeAt(0),
   quote: quote.charCodeAt(0),
   decode,
@@ -112,6 +117,8 @@ interface RecordScan {
   readonly delimiter: number;
   readonly quote: number;
   readonly decode: Scanning["decode"];
+  /** By byte: 1 where it ends a cell without quotes. */
+  readonly ends: Uint8Array;
   /** The content of the cell being read. */
   readonly piece: { -readonly [K in keyof Piece]: Piece[K] };
   /** Where the next record begins. */
@@ -123,42 +130,67 @@ interface RecordScan {
 
 /** Reads one record into a row of the columns; false where a quote stands where none belongs. */
 function scanRecord(record: RecordScan, columns: readonly ColumnScan[], row: number): boolean {
-  const { bytes, delimiter, quote, piece } = record;
+  const { bytes, delimiter, quote, piece, ends } = record;
   const end = bytes.length;
   record.isFilled = false;
   record.isOverfull = false;
   let { at } = record;
   for (let column = 0; ; column++) {
-    let byte = at < end ? bytes[at] : LINE_FEED;
-    if (byte === quote) {
+    const scan = column < columns.length ? columns[column] : undefined;
+    const isQuoted = at < end && bytes[at] === quote;
+    const repeated = scan?.isSteady === true && !isQuoted ? endIfRepeated(scan, bytes, at) : -1;
+    if (isQuoted) {
       if (!takeQuoted(record, at)) return false;
       at = piece.to + 1;
-      byte = at < end ? bytes[at] : LINE_FEED;
-      if (byte !== delimiter && byte !== LINE_FEED && byte !== RETURN) return false;
-    } else {
-      let hash = 0;
+      if (at < end && ends[bytes[at]] === 0) return false;
+    } else if (scan !== undefined && repeated !== -1 && (repeated >= end || ends[bytes[repeated]] === 1)) {
+      scan.codes[row] = scan.last;
       piece.from = at;
-      while (byte !== delimiter && byte !== LINE_FEED && byte !== RETURN) {
-        hash = hashStep(hash, byte);
+      piece.to = repeated;
+      at = repeated;
+      if (!record.isFilled) noteVisible(record, scan);
+      if (at < end && bytes[at] === delimiter) {
         at += 1;
-        byte = at < end ? bytes[at] : LINE_FEED;
+        continue;
       }
-      piece.to = at;
-      piece.hash = hash;
-      piece.doubled = NO_SIGN;
+      return endRecord(record, column, at);
+    } else {
+      at = takePlain(record, at);
     }
-    takePiece(record, columns[column], row);
-    at += 1;
-    if (byte === delimiter) continue;
-    record.cells = column + 1;
-    record.at = byte === RETURN && bytes[at] === LINE_FEED ? at + 1 : at;
-    return true;
+    if (scan !== undefined) addCode(scan, row, record);
+    if (scan !== undefined && isQuoted) scan.isSteady = false;
+    if (!record.isFilled || scan === undefined) noteVisible(record, scan);
+    if (at < end && bytes[at] === delimiter) at += 1;
+    else return endRecord(record, column, at);
   }
 }
 
-function takePiece(record: RecordScan, column: ColumnScan | undefined, row: number): void {
-  if (column !== undefined) addCode(column, row, record);
-  if (record.isFilled && column !== undefined) return;
+function endRecord(record: RecordScan, column: number, at: number): true {
+  const { bytes } = record;
+  record.cells = column + 1;
+  record.at = bytes[at] === RETURN && bytes[at + 1] === LINE_FEED ? at + 2 : at + 1;
+  return true;
+}
+
+/** Finds the content of a cell without quotes, and where it ends. */
+function takePlain({ bytes, piece, ends }: RecordScan, start: number): number {
+  const end = bytes.length;
+  let hash = 0;
+  let at = start;
+  while (at < end) {
+    const byte = bytes[at];
+    if (ends[byte] === 1) break;
+    hash = hashStep(hash, byte);
+    at += 1;
+  }
+  piece.from = start;
+  piece.to = at;
+  piece.hash = hash;
+  piece.doubled = NO_SIGN;
+  return at;
+}
+
+function noteVisible(record: RecordScan, column: ColumnScan | undefined): void {
   if (!isVisible(record)) return;
   record.isFilled = true;
   record.isOverfull ||= column === undefined;

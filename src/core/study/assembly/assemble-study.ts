@@ -1,4 +1,4 @@
-import type { Section, Study } from "../model.ts";
+import type { Search, Section, Study } from "../model.ts";
 import { occurrenceColumns } from "../occurrence-list.ts";
 import { planes } from "../tables/planes.ts";
 import { checkSection, checkStudy } from "./checks.ts";
@@ -13,6 +13,7 @@ import { readSearches } from "./read-searches.ts";
 import { readChoices, readClaims } from "./records.ts";
 import { readBeds, readIntervals } from "./rock.ts";
 import { rowsOf } from "./rows.ts";
+import { type SearchList, searchItems } from "./search-list.ts";
 import { readTaxa } from "./taxa.ts";
 
 /** Turns the read tables into sections in metres of height; what cannot be used is left out and told in `assembly.problems`. */
@@ -43,7 +44,7 @@ export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "tax
       samples: [...(samples.bySection.get(frame.name)?.values() ?? [])].toSorted(
         (a, b) => a.heightM - b.heightM,
       ),
-      searches: lists.searches.get(frame.name) ?? [],
+      searches: lists.searches.get(frame.name),
       occurrences: lists.occurrences.get(frame.name) ?? [],
       publishedRanges: lists.publishedRanges.get(frame.name) ?? [],
       measurements: lists.measurements.get(frame.name) ?? [],
@@ -54,7 +55,7 @@ export function assembleStudy(assembly: Assembly): Pick<Study, "sections" | "tax
     checkSection(section, frame.declared, assembly);
     return section;
   });
-  checkStudy({ sections, taxa }, assembly);
+  checkStudy({ sections, taxa }, lists.searches, assembly);
   return { sections, taxa, choices: readChoices(assembly), claims: readClaims(frames, assembly) };
 }
 
@@ -63,17 +64,17 @@ type Contents = Pick<
   | "intervals"
   | "beds"
   | "samples"
-  | "searches"
   | "occurrences"
   | "publishedRanges"
   | "measurements"
   | "horizons"
   | "recovery"
->;
+> & { readonly searches: SearchList | undefined };
 
 function sectionOf(frame: SectionFrame, own: Contents): Section {
   const { bottomM, topM, ...declared } = frame.declared;
   const ends = extremes(own);
+  let searches: readonly Search[] | undefined;
   return {
     name: frame.name,
     axis: frame.axis,
@@ -83,6 +84,11 @@ function sectionOf(frame: SectionFrame, own: Contents): Section {
     topM: topM ?? Math.max(ends.topM, bottomM ?? ends.topM),
     legs: [...frame.legs.values()],
     ...own,
+    // Very many, and checking does not need them one by one.
+    get searches() {
+      searches ??= searchItems(own.searches);
+      return searches;
+    },
   };
 }
 

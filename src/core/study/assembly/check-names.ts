@@ -1,10 +1,10 @@
-import { countValues } from "../coded.ts";
+import { type Coded, countValues } from "../coded.ts";
 import { acceptedName } from "../finds.ts";
 import type { Origin, Section, Study, Taxon } from "../model.ts";
-import type { OccurrenceColumns } from "../occurrence.ts";
 import { occurrenceColumns } from "../occurrence-list.ts";
 import type { Assembly } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
+import type { SearchList } from "./search-list.ts";
 import { similarNames } from "./similar-names.ts";
 import { ungrouped } from "./taxa.ts";
 
@@ -22,15 +22,19 @@ interface Naming {
   readonly areApart?: (first: string, second: string) => boolean;
 }
 
+interface Named extends Pick<Study, "sections" | "taxa"> {
+  readonly searches: ReadonlyMap<string, SearchList>;
+}
+
 /** Cautions on names that are almost alike. None is merged: only a person knows whether one thing is meant. */
-export function checkNames({ sections, taxa }: Pick<Study, "sections" | "taxa">, assembly: Assembly): void {
+export function checkNames({ sections, taxa, searches }: Named, assembly: Assembly): void {
   tellSimilar(taxonUses(sections, taxa, assembly), assembly, {
     kind: "taxon",
     byLetter: true,
     areApart: (first, second) => areSettled(first, second, taxa),
   });
   tellSimilar(sectionUses(sections), assembly, { kind: "section", byLetter: true });
-  tellSimilar(groupUses(sections, taxa, assembly), assembly, { kind: "group", byLetter: true });
+  tellSimilar(groupUses({ sections, taxa, searches }, assembly), assembly, { kind: "group", byLetter: true });
   tellSimilar(horizonUses(sections, assembly), assembly, { kind: "horizon", byLetter: true });
   for (const { samples } of sections) {
     const uses = new Map<string, Use>();
@@ -82,17 +86,22 @@ function taxonUses(
     if (origin.file === listed) use(uses, name, origin, true);
   }
   for (const { occurrences, publishedRanges } of sections) {
-    useFinds(uses, occurrenceColumns(occurrences));
+    const finds = occurrenceColumns(occurrences);
+    useColumn(uses, finds.taxon, finds);
     for (const { taxon, origin } of publishedRanges) use(uses, taxon, origin);
   }
   return uses;
 }
 
-function useFinds(uses: Map<string, Use>, { taxon, file, rows }: OccurrenceColumns): void {
-  const counts = countValues(taxon);
-  for (const [code, name] of taxon.values.entries()) {
-    const row = rows[taxon.codes.indexOf(code)];
-    use(uses, name, { file, row });
+/** Uses every name of a column as often as it stands there. */
+function useColumn(
+  uses: Map<string, Use>,
+  column: Coded<string>,
+  { file, rows }: { readonly file: string; readonly rows: Int32Array },
+): void {
+  const counts = countValues(column);
+  for (const [code, name] of column.values.entries()) {
+    use(uses, name, { file, row: rows[column.codes.indexOf(code)] });
     const known = uses.get(name);
     if (known) known.uses += counts[code] - 1;
   }
@@ -111,18 +120,17 @@ function sectionUses(sections: readonly Section[]): ReadonlyMap<string, Use> {
   return uses;
 }
 
-function groupUses(
-  sections: readonly Section[],
-  taxa: ReadonlyMap<string, Taxon>,
-  assembly: Assembly,
-): ReadonlyMap<string, Use> {
+function groupUses({ sections, taxa, searches }: Named, assembly: Assembly): ReadonlyMap<string, Use> {
   const uses = new Map<string, Use>();
   const listed = listingFile(assembly);
   for (const { group, origin } of taxa.values()) {
     if (group !== ungrouped && origin.file === listed) use(uses, group, origin, true);
   }
-  for (const { searches, recovery } of sections) {
-    for (const { group, origin } of searches) if (origin) use(uses, group, origin);
+  for (const list of searches.values()) {
+    if (list.kind === "columns") useColumn(uses, list.columns.group, list.columns);
+    else for (const { group, origin } of list.items) if (origin) use(uses, group, origin);
+  }
+  for (const { recovery } of sections) {
     for (const { group, origin } of recovery) use(uses, group, origin);
   }
   return uses;

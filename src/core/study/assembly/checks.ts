@@ -12,6 +12,7 @@ import { checkAges, checkHorizonOrder } from "./check-order.ts";
 import { checkRock } from "./check-rock.ts";
 import type { Assembly, SectionFrame } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
+import type { SearchList } from "./search-list.ts";
 
 /** Names listed in a sentence. */
 const mostListed = 12;
@@ -27,12 +28,16 @@ export function checkSection(section: Section, declared: DeclaredEnds, assembly:
 }
 
 /** Cautions and errors that need every section. */
-export function checkStudy(study: Pick<Study, "sections" | "taxa">, assembly: Assembly): void {
+export function checkStudy(
+  study: Pick<Study, "sections" | "taxa">,
+  searches: ReadonlyMap<string, SearchList>,
+  assembly: Assembly,
+): void {
   checkImpacts(study.sections, assembly);
   checkMainHorizon(study.sections, assembly);
   checkSets(study, assembly);
   checkSynonyms(study.taxa, assembly);
-  checkNames(study, assembly);
+  checkNames({ ...study, searches }, assembly);
   checkHorizonOrder(study.sections, assembly);
 }
 

@@ -30,6 +30,15 @@ export interface FrameSearch {
   readonly assembly: Assembly;
 }
 
+/** Looks the frame of each section that can be used up once, by its code; what is wrong with another is told row by row. */
+export function frameReader(sections: readonly string[], search: FrameSearch) {
+  const known: (SectionFrame | undefined)[] = sections.map(() => undefined);
+  return (code: number, origin: Origin): SectionFrame | undefined => {
+    known[code] ??= frameFor(sections[code], origin, search);
+    return known[code];
+  };
+}
+
 function tellMissing(section: string, origin: Origin, { frames, assembly }: FrameSearch): void {
   const reason = frames.leftOut.get(section);
   const place = { ...origin, column: "section", found: section };

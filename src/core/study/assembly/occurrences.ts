@@ -1,14 +1,15 @@
-import { type Coded, valueAt } from "../coded.ts";
+import { type Numbered, numbered, valueAt } from "../coded.ts";
 import type { Occurrence, Occurrences, Origin, Taxon } from "../model.ts";
 import { columnOccurrences } from "../occurrence-list.ts";
 import { type ParsedName, parseName } from "../open-nomenclature.ts";
 import { occurrences } from "../tables/occurrences.ts";
-import { type Assembly, gather, type SectionFrame } from "./context.ts";
+import type { Assembly, SectionFrame } from "./context.ts";
 import { columnsOfFinds } from "./find-list.ts";
-import { type FrameSearch, type Frames, frameFor } from "./frame-for.ts";
+import { type Frames, frameReader } from "./frame-for.ts";
 import { isQualifier, onlyQualifier } from "./one-mend.ts";
 import { type Place, type PlaceSearch, placeOf } from "./place.ts";
 import type { SampleLists } from "./read-samples.ts";
+import { areAlike } from "./repeated-rows.ts";
 import { type ReadCells, readCells } from "./rows.ts";
 import { genusGroup, tellUngrouped, ungrouped } from "./taxa.ts";
 
@@ -22,24 +23,25 @@ export function readOccurrences(
   const cells = readCells(occurrences, assembly);
   if (!read || !cells) return new Map();
   const { columns, file, rowNumbers, usable } = cells;
-  const frameOf = frameReader({ frames, read, assembly, cells });
+  const frameOf = frameReader(columns.section.values, { frames, read, assembly });
   const places = numbered<Place>(rowNumbers.length);
   const names = numbered<ParsedName>(rowNumbers.length);
   const placeAt = placeReader(cells, places, { samples, assembly });
-  const nameAt = nameReader(cells, names);
+  const nameAt = nameReader(cells, names, { taxa, assembly });
+  const hasOdd = columns.count.values.includes(0) || columns.qualifier.values.some(isOddQualifier);
   const bySection = new Map<SectionFrame, number[]>();
+  let rows: number[] = [];
+  let last: SectionFrame | undefined;
   for (const index of usable) {
-    const row = rowNumbers[index];
-    const frame = frameOf(columns.section.codes[index], { file, row });
-    if (!frame || !placeAt(index, frame, { file, row })) continue;
-    const name = nameAt(index);
-    if (valueAt(columns.count, index) === 0)
-      assembly.problems.addOnce("count", "count-zero", { file, row, column: "count", found: "0" });
-    const qualifier = valueAt(columns.qualifier, index);
-    if (qualifier !== undefined) tellQualifier(qualifier, { file, row }, assembly);
-    if (!taxa.has(name.name))
-      addTaxon(valueAt(columns.taxon, index), { name, origin: { file, row }, taxa, assembly });
-    gather(bySection, frame, index);
+    const origin = { file, row: rowNumbers[index] };
+    const frame = frameOf(columns.section.codes[index], origin);
+    if (!frame || !placeAt(index, frame, origin)) continue;
+    if (hasOdd) tellOdd(cells, index, assembly);
+    nameAt(index, origin);
+    if (frame !== last) rows = bySection.get(frame) ?? [];
+    if (frame !== last) bySection.set(frame, rows);
+    last = frame;
+    rows.push(index);
   }
   const placed = { cells, place: places, name: names };
   return new Map(
@@ -50,37 +52,33 @@ export function readOccurrences(
   );
 }
 
-/** Things given to rows as they are met. */
-interface Numbered<T> extends Coded<T> {
-  readonly values: T[];
-  readonly codes: Int32Array;
-}
-
-const numbered = <T>(rows: number): Numbered<T> => ({ values: [], codes: new Int32Array(rows) });
-
 type FindCells = ReadCells<typeof occurrences>;
 
-/** The frame of a section that can be used is looked up once; what is wrong with another is told row by row. */
-function frameReader(search: FrameSearch & { readonly cells: FindCells }) {
-  const { section } = search.cells.columns;
-  const known: (SectionFrame | undefined)[] = section.values.map(() => undefined);
-  return (code: number, origin: Origin): SectionFrame | undefined => {
-    known[code] ??= frameFor(section.values[code], origin, search);
-    return known[code];
+/** Gives each row its name, each distinct one parsed once, and its taxon a row where it has none. */
+function nameReader(
+  { columns: { taxon, qualifier } }: FindCells,
+  names: Numbered<ParsedName>,
+  { taxa, assembly }: Pick<Naming, "taxa" | "assembly">,
+) {
+  const parsed = (index: number, origin: Origin): number => {
+    const name = parseName(valueAt(taxon, index), valueAt(qualifier, index) ?? "");
+    if (!taxa.has(name.name)) addTaxon(valueAt(taxon, index), { name, origin, taxa, assembly });
+    return names.values.push(name);
   };
-}
-
-/** Gives each row its name, each distinct one parsed once. */
-function nameReader({ columns: { taxon, qualifier } }: FindCells, names: Numbered<ParsedName>) {
+  // Most finds have one qualifier, or none.
+  const usual = new Int32Array(taxon.values.length);
   const known = new Map<number, number>();
-  return (index: number): ParsedName => {
-    const key = taxon.codes[index] * qualifier.values.length + qualifier.codes[index];
-    const code =
-      known.get(key) ??
-      names.values.push(parseName(valueAt(taxon, index), valueAt(qualifier, index) ?? "")) - 1;
-    known.set(key, code);
-    names.codes[index] = code;
-    return names.values[code];
+  return (index: number, origin: Origin): void => {
+    const of = taxon.codes[index];
+    const sign = qualifier.codes[index];
+    const key = of * qualifier.values.length + sign;
+    let number = sign === 0 ? usual[of] : (known.get(key) ?? 0);
+    if (number === 0) {
+      number = parsed(index, origin);
+      if (sign === 0) usual[of] = number;
+      else known.set(key, number);
+    }
+    names.codes[index] = number - 1;
   };
 }
 
@@ -94,8 +92,7 @@ function placeReader(
   const placing = [section.codes, sample.codes, position.codes, leg.codes];
   let last: number | undefined;
   return (index, frame, origin) => {
-    const before = last;
-    if (before === undefined || placing.some((codes) => codes[index] !== codes[before])) {
+    if (last === undefined || !areAlike(placing, last, index)) {
       const own = {
         sample: valueAt(sample, index),
         position: valueAt(position, index),
@@ -110,9 +107,16 @@ function placeReader(
   };
 }
 
-/** A qualifier that is no sign of open nomenclature says nothing of the name. */
-function tellQualifier(written: string, origin: Origin, { problems }: Assembly): void {
-  if (isQualifier(written)) return;
+const isOddQualifier = (written: string | undefined): boolean =>
+  written !== undefined && !isQualifier(written);
+
+/** A count of nothing, and a qualifier that is no sign of open nomenclature and says nothing of the name. */
+function tellOdd({ columns, file, rowNumbers }: FindCells, index: number, { problems }: Assembly): void {
+  const origin = { file, row: rowNumbers[index] };
+  if (valueAt(columns.count, index) === 0)
+    problems.addOnce("count", "count-zero", { ...origin, column: "count", found: "0" });
+  const written = valueAt(columns.qualifier, index);
+  if (written === undefined || isQualifier(written)) return;
   const now = onlyQualifier(written);
   const subject = JSON.stringify([written, now && origin.row]);
   problems.addOnce(subject, "unknown-qualifier", { ...origin, column: "qualifier", found: written, now });

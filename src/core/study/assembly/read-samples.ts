@@ -1,11 +1,12 @@
+import { valueAt } from "../coded.ts";
 import { sameLevelM } from "../legs.ts";
 import type { Origin, Sample } from "../model.ts";
 import { samples } from "../tables/samples.ts";
-import { type Assembly, present, type SectionFrame } from "./context.ts";
-import { type Frames, frameFor } from "./frame-for.ts";
+import type { Assembly, SectionFrame } from "./context.ts";
+import { type FrameSearch, type Frames, frameReader } from "./frame-for.ts";
 import { type MeantName, meantNames } from "./meant-name.ts";
 import { lengthOf, type SlabCells, slabOf } from "./position.ts";
-import { eachRow } from "./rows.ts";
+import { type ReadCells, readCells } from "./rows.ts";
 
 /** The samples of each section by name, and whether a table lists them. */
 export interface SampleLists {
@@ -24,23 +25,55 @@ export function readSamples(frames: Frames, assembly: Assembly): SampleLists {
     deriveSamples(bySection, frames, assembly);
     return { bySection, areListed: false, meant: meantIn(bySection) };
   }
-  for (const { cells, origin } of eachRow(samples, assembly)) {
-    const frame = frameFor(cells.section, origin, { frames, read, assembly });
-    const slab = frame && slabOf(cells, frame, { origin, assembly });
-    const known = frame && bySection.get(frame.name);
-    if (!frame || !slab || !known) continue;
-    const sample = {
-      name: cells.sample,
-      ...slab,
-      ...present({ leg: cells.leg, densityGCm3: cells.density_g_cm3 }),
-      ...present({ positionErrorM: lengthOf(cells.position_error, frame) }),
-      notes: cells.notes ?? "",
-      origin,
-    };
-    addSample(sample, known, assembly);
-  }
+  const table = readCells(samples, assembly);
+  if (table) readListed(table, bySection, { frames, read, assembly });
   return { bySection, areListed: true, meant: meantIn(bySection) };
 }
+
+function readListed(
+  { columns, file, rowNumbers, usable }: ReadCells<typeof samples>,
+  bySection: Derived,
+  search: FrameSearch,
+): void {
+  const { assembly } = search;
+  const frameOf = frameReader(columns.section.values, search);
+  for (const index of usable) {
+    const origin = { file, row: rowNumbers[index] };
+    const frame = frameOf(columns.section.codes[index], origin);
+    const leg = valueAt(columns.leg, index);
+    const slab = frame && slabOf(slabAt(columns, index, leg), frame, { origin, assembly });
+    const known = frame && bySection.get(frame.name);
+    if (!frame || !slab || !known) continue;
+    const sample: Writable<Sample> = {
+      name: valueAt(columns.sample, index),
+      baseM: slab.baseM,
+      topM: slab.topM,
+      heightM: slab.heightM,
+      notes: valueAt(columns.notes, index) ?? "",
+      origin,
+    };
+    const densityGCm3 = valueAt(columns.density_g_cm3, index);
+    const positionErrorM = lengthOf(valueAt(columns.position_error, index), frame);
+    if (leg !== undefined) sample.leg = leg;
+    if (densityGCm3 !== undefined) sample.densityGCm3 = densityGCm3;
+    if (positionErrorM !== undefined) sample.positionErrorM = positionErrorM;
+    addSample(sample, known, assembly);
+  }
+}
+
+type Writable<T> = { -readonly [K in keyof T]: T[K] };
+
+const slabAt = (
+  { position, base, top, thickness }: ReadCells<typeof samples>["columns"],
+  index: number,
+  leg: string | undefined,
+): SlabCells => ({
+  position: valueAt(position, index),
+  base: valueAt(base, index),
+  top: valueAt(top, index),
+  thickness: valueAt(thickness, index),
+  ...(leg === undefined ? {} : { leg }),
+});
 
 function meantIn(bySection: SampleLists["bySection"]): SampleLists["meant"] {
   const finders = new Map<string, (sample: string) => MeantName>();

@@ -18,18 +18,12 @@ export interface ReadCells<T extends TableDeclaration> {
 type ColumnsOf<T extends TableDeclaration> = { readonly [K in keyof RowOf<T>]: Coded<RowOf<T>[K]> };
 
 /** The validated rows of a declared table; rows with an error are left out, and every error is told. */
-export const rowsOf = <T extends TableDeclaration & { readonly name: TableName }>(
+export function rowsOf<T extends TableDeclaration & { readonly name: TableName }>(
   table: T,
   assembly: Assembly,
-): readonly Row<T>[] => [...eachRow(table, assembly)];
-
-/** The same rows one after the other, for tables too large to hold them all; every error is told at once. */
-export function eachRow<T extends TableDeclaration & { readonly name: TableName }>(
-  table: T,
-  assembly: Assembly,
-): Iterable<Row<T>> {
+): readonly Row<T>[] {
   const read = readCells(table, assembly);
-  return read === undefined ? [] : rowsFrom(read, table);
+  return read === undefined ? [] : [...rowsFrom(read, table)];
 }
 
 function* rowsFrom<T extends TableDeclaration>(read: ReadCells<T>, table: T): Generator<Row<T>> {
@@ -110,7 +104,8 @@ function usableRows(reading: Reading): Int32Array {
   const { rows, rowNumbers, file } = read.sheet;
   const firstLike = repeatedRows(cells, rows.length);
   const faulty = declared.filter(({ isGood }) => isGood.includes(0));
-  const ways = (table.oneOf ?? []).map((set) => declared.filter(({ name }) => set.includes(name)));
+  const ways = openWays(table, declared);
+  const isOdd = faulty.length > 0 || ways.length > 0;
   const usable = new Int32Array(rows.length);
   let count = 0;
   for (let index = 0; index < rows.length; index++) {
@@ -119,6 +114,9 @@ function usableRows(reading: Reading): Int32Array {
       const found = (rows.at(index) ?? []).join(",");
       const detail = String(rowNumbers[first]);
       assembly.problems.add("duplicate-row", { file, row: rowNumbers[index], found, detail });
+    } else if (!isOdd) {
+      usable[count] = index;
+      count += 1;
     } else if (faulty.some(({ isGood, coded: { codes } }) => isGood[codes[index]] === 0)) {
       tellRow(index, reading);
     } else if (ways.length > 0 && !ways.some((set) => isFilled(set, index))) {
@@ -130,6 +128,15 @@ function usableRows(reading: Reading): Int32Array {
     }
   }
   return usable.slice(0, count);
+}
+
+/** The sets of columns of which a row must fill one; none where every row fills one of them. */
+function openWays(
+  table: TableDeclaration,
+  declared: readonly ReadColumn[],
+): readonly (readonly ReadColumn[])[] {
+  const ways = (table.oneOf ?? []).map((set) => declared.filter(({ name }) => set.includes(name)));
+  return ways.some((set) => set.every(({ isThere }) => !isThere.includes(0))) ? [] : ways;
 }
 
 const isFilled = (columns: readonly ReadColumn[], index: number): boolean =>

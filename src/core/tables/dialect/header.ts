@@ -42,9 +42,14 @@ export function missingColumns(columns: readonly RecognisedColumn[], table: Tabl
  */
 export function findHeader(records: readonly CsvRecord[], table: TableDeclaration): FoundHeader {
   const shown = records.slice(0, DEPTH);
-  const single = shown.map(({ cells }, from) => judge(cells, { from, below: from + 1, table }));
-  for (const [at, here] of single.entries()) {
-    const after = single.at(at + 1);
+  const judged: FoundHeader[] = [];
+  const singleAt = (from: number): FoundHeader => {
+    judged[from] ??= judge(shown[from].cells, { from, below: from + 1, table });
+    return judged[from];
+  };
+  for (let at = 0; at < shown.length; at++) {
+    const here = singleAt(at);
+    const after = at + 1 < shown.length ? singleAt(at + 1) : undefined;
     const isSplit = after !== undefined && !after.isComplete && (after.recognised > 0 || !here.isComplete);
     if (isSplit) {
       const headers = joined(shown[at].cells, after.headers, table);
@@ -54,8 +59,8 @@ export function findHeader(records: readonly CsvRecord[], table: TableDeclaratio
     }
     if (here.isComplete) return withUnits(here, records[at + 1], table);
   }
-  const most = single.reduce((best, one) => (one.recognised > best.recognised ? one : best), single[0]);
-  return most.recognised >= 2 ? most : single[0];
+  const most = judged.reduce((best, one) => (one.recognised > best.recognised ? one : best), singleAt(0));
+  return most.recognised >= 2 ? most : singleAt(0);
 }
 
 interface Placed {
