@@ -1,7 +1,7 @@
 import { exp, expm1 } from "../../../src/core/numeric/elementary.ts";
 import { between, type Draws } from "./draws.ts";
 import type { ExampleSample } from "./sampling.ts";
-import { heightAtKa } from "./scale.ts";
+import { heightAtKa, kaAtHeight } from "./scale.ts";
 import type { TrueGroup, TrueSection, TrueTaxon, Truth } from "./truth.ts";
 
 export interface ExampleSearch {
@@ -28,9 +28,10 @@ function endKa(taxon: TrueTaxon, truth: Truth): number | undefined {
     case "early":
       return truth.earlyStepKa;
     case "event":
-      return 0;
+      return truth.eventStepKa;
     case "survivor":
     case "aftermath":
+    case "alone":
       return taxon.lastKa;
     default:
       return taxon.end satisfies never;
@@ -95,12 +96,23 @@ export function exampleSearches(
   );
 }
 
+/** Recovery against its usual value at a moment. */
+function recoveryAt({ recoveryByKa: knots }: Truth, ka: number): number {
+  const after = knots.findIndex(([knotKa]) => knotKa >= ka);
+  const upper = knots[after] ?? knots.at(-1);
+  const lower = knots[after - 1] ?? upper;
+  if (upper === undefined || lower === undefined) return 1;
+  if (after <= 0 || upper[0] === lower[0]) return upper[1];
+  return lower[1] + ((ka - lower[0]) * (upper[1] - lower[1])) / (upper[0] - lower[0]);
+}
+
 function findsIn(search: ExampleSearch, context: FossilContext): ExampleFind[] {
   const { truth, section, draws } = context;
   const { sample, group } = search;
   const relativeEffort = search.effort / group.standardEffort;
   const isBarren = draws.uniform() < truth.barrenShare;
   const preservation = isBarren ? 0 : between(draws, 0.8, 1.2) / (1 - truth.barrenShare);
+  const trend = recoveryAt(truth, kaAtHeight(section, sample.heightM));
   return truth.taxa.flatMap((taxon): ExampleFind[] => {
     if (taxon.group !== group.group) return [];
     const [present, size] = [draws.uniform(), draws.exponential()];
@@ -109,7 +121,7 @@ function findsIn(search: ExampleSearch, context: FossilContext): ExampleFind[] {
       sample.heightM,
       mixingLengthM(group, section),
     );
-    const chances = taxon.rate * section.recovery * relativeEffort * preservation * share;
+    const chances = taxon.rate * section.recovery * trend * relativeEffort * preservation * share;
     if (present >= -expm1(-chances)) return [];
     const count = 1 + Math.floor(size * taxon.meanCount * Math.min(1, relativeEffort));
     return [{ sample, taxon, count, reworked: "" }];

@@ -25,8 +25,10 @@ export const trueLevels = (truth: Truth): TrueLevel[] =>
   );
 
 /** The whole study folder from the text of truth.json: file name to contents. */
-export function exampleStudy(truthText: string): Map<string, string> {
-  const truth = readTruth(truthText);
+export const exampleStudy = (truthText: string): Map<string, string> => studyFiles(readTruth(truthText));
+
+/** The study folder of any truth, the written one or a variant of it. */
+export function studyFiles(truth: Truth): Map<string, string> {
   const files = studyTables(truth)
     .set("choices.csv", choicesTable(truth))
     .set("settings.json", settingsJson(truth));

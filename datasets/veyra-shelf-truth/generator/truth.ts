@@ -6,7 +6,8 @@ const notes = v.optional(v.string(), "");
 const taxon = v.strictObject({
   name: v.string(),
   group: v.string(),
-  end: v.picklist(["early", "event", "survivor", "aftermath"]),
+  /** `alone`: at its own `lastKa`, with no other taxon. */
+  end: v.picklist(["early", "event", "survivor", "aftermath", "alone"]),
   firstKa: v.optional(v.number()),
   lastKa: v.optional(v.number()),
   /** Expected chances of presence in a sample of standard effort. */
@@ -90,6 +91,10 @@ const truth = v.strictObject({
   horizon: v.string(),
   eventAgeMa: v.number(),
   earlyStepKa: v.number(),
+  /** When the taxa of the event end: with it, unless a variant of the truth says otherwise. */
+  eventStepKa: v.optional(v.number(), 0),
+  /** Recovery against its usual value by moment, linear between the moments and constant beyond them; none: constant. */
+  recoveryByKa: v.optional(v.array(pair), []),
   reversalKa: v.number(),
   ashes: v.array(v.strictObject({ horizon: v.string(), bed: v.string(), ka: v.number() })),
   carbon: v.strictObject({ beforePerMil: v.number(), stepPerMil: v.number(), recoveryKa: v.number() }),
