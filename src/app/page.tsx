@@ -1,5 +1,4 @@
 import { type ReactElement, useEffect, useMemo, useReducer } from "react";
-import { findings } from "../report/findings/index.ts";
 import { FocusLine } from "./focus/focus-line.tsx";
 import { Status } from "./footer/status.tsx";
 import { GoTo } from "./go-to/go-to.tsx";
@@ -9,7 +8,6 @@ import { KeepingBar } from "./keeping/keeping-bar.tsx";
 import { useKeeping } from "./keeping/use-keeping.ts";
 import styles from "./page.module.css";
 import { actionsOf } from "./state/actions.ts";
-import { focusOf } from "./state/focus.ts";
 import { type PageContents, PageProvider } from "./state/page-context.ts";
 import { type PageState, step } from "./state/page-state.ts";
 import { placeOf } from "./state/place.ts";
@@ -23,6 +21,8 @@ import { PasteTable } from "./study/paste-table.tsx";
 import { useReworking } from "./study/use-reworking.ts";
 import { useStudy } from "./study/use-study.ts";
 import { NO_HISTORY } from "./tables/history.ts";
+import { NO_TRIAL } from "./trial/trial.ts";
+import { useOpened } from "./trial/use-opened.ts";
 
 const opening = (): PageState => ({
   place: placeOf(location.hash),
@@ -32,6 +32,7 @@ const opening = (): PageState => ({
   theme: keptTheme(),
   work: { kind: "idle" },
   history: NO_HISTORY,
+  trial: NO_TRIAL,
 });
 
 /** The whole page: one line of stations, one focus, a plate with its margin, and what lies under the reading line. */
@@ -40,22 +41,13 @@ export function Page(): ReactElement {
   const study = useStudy(dispatch);
   const go = usePlace(state.place, dispatch);
   const { workedOut, open: openStudy } = study;
-  const analysis = workedOut?.analysis;
 
   useEffect(() => openStudy("the example", bundledStudy), [openStudy]);
   useTheme(state.theme);
   useReworking(state.history, study);
   const keeping = useKeeping(state.history, study, dispatch);
 
-  const all = useMemo(() => (analysis === undefined ? [] : findings(analysis)), [analysis]);
-  const focus = useMemo(
-    () => (analysis === undefined ? undefined : focusOf(state.place, analysis)),
-    [analysis, state.place],
-  );
-  const open = useMemo(
-    () => (analysis === undefined || focus === undefined ? undefined : { analysis, focus, all }),
-    [analysis, focus, all],
-  );
+  const open = useOpened(state, study, dispatch);
   const page = useMemo<PageContents>(
     () => ({ state, dispatch, go, study, keeping, open }),
     [state, go, study, keeping, open],
@@ -64,8 +56,8 @@ export function Page(): ReactElement {
   useShortcuts(actions, () => dispatch({ kind: "go-to-turned", isOpen: true }));
 
   useEffect(() => {
-    document.title = analysis === undefined ? "Lastbed" : `${analysis.study.name} · Lastbed`;
-  }, [analysis]);
+    document.title = workedOut === undefined ? "Lastbed" : `${workedOut.analysis.study.name} · Lastbed`;
+  }, [workedOut]);
 
   return (
     <PageProvider value={page}>

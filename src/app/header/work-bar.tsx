@@ -10,7 +10,7 @@ export function WorkBar(): ReactElement {
   return (
     <div className={styles.place}>
       <output className={work.kind === "failed" ? styles.none : undefined}>
-        {work.kind === "busy" && (
+        {work.kind === "busy" && !work.isTrial && (
           <div className={styles.bar}>
             <span>
               Working out {work.name}: {work.step}

@@ -1,11 +1,14 @@
 import { PanelRightClose, PanelRightOpen } from "lucide-react";
 import { memo, type ReactElement } from "react";
 import type { Finding } from "../../report/findings/finding.ts";
+import { plain } from "../../report/wordings/words.ts";
 import { KeptPart } from "../keeping/kept-part.tsx";
 import { type Opened, usePage } from "../state/page-context.ts";
 import { findingOf } from "../state/station-state.ts";
 import { Problems } from "../tables/problems.tsx";
 import { SetAsideList } from "../tables/set-aside-list.tsx";
+import { TrialBar } from "../trial/trial-bar.tsx";
+import { TrialFields } from "../trial/trial-fields.tsx";
 import { Choices } from "./choices.tsx";
 import styles from "./margin.module.css";
 import { Methods } from "./methods.tsx";
@@ -41,7 +44,11 @@ const Notes = memo(function Notes({ open }: { readonly open: Opened }): ReactEle
     // oxlint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- the keyboard scrolls it
     <section className={styles.notes} tabIndex={0} aria-label="Notes on the plate">
       {finding === undefined ? (
-        <p className={styles.finding}>This station has nothing to say about what is in focus.</p>
+        <>
+          <p className={styles.finding}>This station has nothing to say about what is in focus.</p>
+          <TrialBar open={open} />
+          <Choices analysis={open.analysis} station={open.focus.station} />
+        </>
       ) : (
         <Argument finding={finding} open={open} />
       )}
@@ -50,17 +57,25 @@ const Notes = memo(function Notes({ open }: { readonly open: Opened }): ReactEle
 });
 
 function Argument({ finding, open }: { readonly finding: Finding; readonly open: Opened }): ReactElement {
+  const was = open.trying?.wasFinding;
   return (
     <>
       <p className={styles.finding} data-testid="finding">
         <WordsText words={finding.sentence} />
       </p>
-      <Numbers lines={finding.numbers} />
+      {was !== undefined && plain(was.sentence) !== plain(finding.sentence) && (
+        <p className={styles.was} data-testid="was">
+          Was: <WordsText words={was.sentence} />
+        </p>
+      )}
+      <TrialBar open={open} />
+      <Numbers lines={finding.numbers} before={was?.numbers} />
       {finding.station === "tables" && <Problems analysis={open.analysis} />}
       {finding.station === "tables" && <SetAsideList />}
       {finding.station === "tables" && <KeptPart />}
       <Weaknesses weaknesses={finding.weaknesses} />
       <Methods methods={finding.methods} />
+      <TrialFields open={open} />
       <Choices analysis={open.analysis} station={finding.station} />
     </>
   );

@@ -8,11 +8,14 @@ import { PlateView } from "./plate-view.tsx";
 export function PlateStation(): ReactElement | null {
   const { state, open } = usePage();
   const frame = useDeferredValue(state.frame);
-  const drawing = useMemo(() => open && draw(open, frame), [open, frame]);
+  const shown = useDeferredValue(open);
+  const drawing = useMemo(() => shown && draw(shown, frame), [shown, frame]);
   if (open === undefined || drawing === undefined) return null;
   return <PlateView drawing={drawing} open={open} />;
 }
 
-function draw({ analysis, focus }: Opened, frame: Parameters<typeof viewOf>[1]) {
-  return drawingOf(focus, analysis, viewOf(focus, frame, analysis));
+/** While something is tried the part shown stays where it is, whatever moves in it, and what was stands behind as a ghost. */
+function draw({ analysis, focus, trying }: Opened, frame: Parameters<typeof viewOf>[1]) {
+  const view = viewOf(focus, frame, analysis, trying?.was);
+  return drawingOf(focus, analysis, trying === undefined ? view : { ...view, was: trying.was });
 }

@@ -2,6 +2,7 @@ import { type CSSProperties, type ReactElement, useRef } from "react";
 import type { Drawing } from "../../figures/plates/drawing.ts";
 import type { Opened } from "../state/page-context.ts";
 import { usePage } from "../state/page-context.ts";
+import { Handles } from "../trial/handles.tsx";
 import { MarkLabel } from "./mark-label.tsx";
 import { MarksList } from "./marks-list.tsx";
 import styles from "./plate.module.css";
@@ -52,6 +53,7 @@ export function PlateView({ drawing, open }: PlateProps): ReactElement {
           {state.reading && (
             <ReadingLine drawing={drawing} reading={reading} pixelsPerPoint={pixelsPerPoint} />
           )}
+          <Handles open={open} panels={drawing.panels} pixelsPerPoint={pixelsPerPoint} />
           <MarkLabel pointed={marks.pointed} />
         </div>
       </section>

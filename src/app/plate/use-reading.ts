@@ -51,7 +51,11 @@ export function useReading({ panels }: Drawing, { analysis, focus }: Opened): Re
 }
 
 /** Where an arrow key takes the line: a four-hundredth of the frame in round numbers, ten times that with Shift. */
-function stepped(event: KeyboardEvent, panel: Panel, heightM: number | undefined): number | undefined {
+export function stepped(
+  event: Pick<KeyboardEvent, "key" | "altKey" | "ctrlKey" | "metaKey" | "shiftKey">,
+  panel: Panel,
+  heightM: number | undefined,
+): number | undefined {
   const up = event.key === "ArrowUp" ? 1 : event.key === "ArrowDown" ? -1 : 0;
   if (up === 0 || event.altKey || event.ctrlKey || event.metaKey) return undefined;
   const [lowest, highest] = extentOf(panel);

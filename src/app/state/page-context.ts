@@ -24,6 +24,19 @@ export interface Opened {
   readonly analysis: Analysis;
   readonly focus: Focus;
   readonly all: readonly Finding[];
+  /** Present while settings are tried that are not the study's. */
+  readonly trying?: Trying;
+}
+
+/** What the study is while something else is tried, and how far that has been worked out. */
+export interface Trying {
+  readonly was: Analysis;
+  /** Its finding for what is in focus. */
+  readonly wasFinding?: Finding;
+  /** False while only what has a closed form has followed. */
+  readonly isWhole: boolean;
+  /** Why the settings tried cannot be; then the study is shown as it is. */
+  readonly refused?: string;
 }
 
 const Context = createContext<PageContents | undefined>(undefined);

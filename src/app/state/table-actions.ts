@@ -1,23 +1,26 @@
 import { giveOutStudy, giveOutWorkbook } from "../study/give-out.ts";
 import type { Action } from "./actions.ts";
 import type { PageContents } from "./page-context.ts";
+import { isTrying } from "./page-state.ts";
 
 /** What can be done with the edits of the tables, from anywhere. */
 export function tableActions({ state, dispatch, go, study }: PageContents): Action[] {
   const { steps, held } = state.history;
   const [last, next] = [steps[held - 1], steps[held]];
+  const isTried = isTrying(state.trial);
   const tables = { group: "Tables" };
   const shown = (file: string | undefined) => go({ station: "tables", table: file, find: undefined });
   return [
     {
       ...tables,
       id: "undo",
-      label: last === undefined ? "Undo" : `Undo ${last.label}`,
+      label: isTried ? "Let go of what is tried" : last === undefined ? "Undo" : `Undo ${last.label}`,
       shortcut: "Control+z",
-      isAvailable: last !== undefined,
+      otherShortcut: isTried ? "Escape" : undefined,
+      isAvailable: isTried || last !== undefined,
       act: () => {
         dispatch({ kind: "undone" });
-        if (state.place.station === "tables") shown(last?.edits[0]?.file);
+        if (!isTried && state.place.station === "tables") shown(last?.edits[0]?.file);
       },
     },
     {

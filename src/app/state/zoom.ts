@@ -49,12 +49,20 @@ export function moveFrame(
   return { low: level(bottomM), high: level(bottomM + next) };
 }
 
-/** The frame as a plate takes it, in metres on the scale that is shown. */
-export function viewOf(focus: Focus, frame: Frame | undefined, analysis: Analysis): View {
+/**
+ * The frame as a plate takes it, in metres on the scale that is shown.
+ * @param was where the frame's ends are read, if the main horizon is being moved.
+ */
+export function viewOf(
+  focus: Focus,
+  frame: Frame | undefined,
+  analysis: Analysis,
+  was: Analysis = analysis,
+): View {
   const view: View = { vertical: focus.scale };
   const { section } = focus;
   if (frame === undefined || section === undefined) return view;
-  const { bottomM, topM } = shownExtent(focus, frame, analysis);
+  const { bottomM, topM } = shownExtent(focus, frame, was);
   const main = analysis.markers.main.bySection.get(section.name);
   const zero = focus.scale === "own" && focus.station !== "fence" ? 0 : (main?.positionM ?? 0);
   return { ...view, frame: [bottomM - zero, topM - zero] };

@@ -1,24 +1,26 @@
-import { mergeSettings, withoutPath } from "../../core/study/setting-path.ts";
+import { type SettingChange, withChanges } from "../../core/study/changed-settings.ts";
 import { baseName } from "../../core/tables/base-name.ts";
 import type { GivenStudy } from "./given-study.ts";
 
-/** One setting by the names of its path; without a value it is taken out. */
-export interface SettingChange {
-  readonly path: readonly string[];
-  readonly value?: string;
-}
-
-const FILE = "settings.json";
+export const SETTINGS_FILE = "settings.json";
 
 /** The study with one setting changed in its settings.json. */
-export function withSetting(given: GivenStudy, { path, value }: SettingChange): GivenStudy {
-  const [file, bytes] = [...given.files].find(([path]) => baseName(path).toLowerCase() === FILE) ?? [FILE];
-  const raw = bytes === undefined ? {} : parsed(bytes);
-  const nested = path.reduceRight<unknown>((inner, name) => ({ [name]: inner }), value);
-  const changed = value === undefined ? (withoutPath(raw, path) ?? {}) : mergeSettings(raw, nested);
+export function withSetting(given: GivenStudy, change: SettingChange): GivenStudy {
+  return { ...given, files: withSettings(given.files, [change]), isSettled: true };
+}
+
+/** The files with settings changed in settings.json, which is made where there is none. */
+export function withSettings(
+  files: ReadonlyMap<string, Uint8Array>,
+  changes: readonly SettingChange[],
+): ReadonlyMap<string, Uint8Array> {
+  if (changes.length === 0) return files;
+  const [file, bytes] = [...files].find(([path]) => baseName(path).toLowerCase() === SETTINGS_FILE) ?? [
+    SETTINGS_FILE,
+  ];
+  const changed = withChanges(bytes === undefined ? {} : parsed(bytes), changes);
   const text = `${JSON.stringify(changed, null, 2)}\n`;
-  const files = new Map([...given.files, [file, new TextEncoder().encode(text)]]);
-  return { ...given, files, isSettled: true };
+  return new Map([...files, [file, new TextEncoder().encode(text)]]);
 }
 
 /** Settings that cannot be read are told as a problem and begin anew. */

@@ -1,14 +1,16 @@
 import { type Dispatch, useEffect, useMemo, useRef, useState } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { SettingChange } from "../../core/study/changed-settings.ts";
 import type { Sheet, Study } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
 import { pageRunner } from "../../run/page.ts";
 import { receivedSheets } from "../../run/received-study.ts";
 import { keptFiles, keptHistory, studyKey } from "../keeping/kept-studies.ts";
 import type { PageEvent } from "../state/page-state.ts";
+import { settingEdit } from "../tables/edits.ts";
 import { type GivenTable, givenTable, leavingSheets, unreadFiles } from "../tables/given-table.ts";
-import { type History, heldEdits, NO_HISTORY } from "../tables/history.ts";
-import { type SettingChange, withSetting } from "./chosen-settings.ts";
+import { type History, heldEdits, NO_HISTORY, withStep } from "../tables/history.ts";
+import { withSetting } from "./chosen-settings.ts";
 import { desk } from "./desk.ts";
 import { type GivenStudy, NotAStudy } from "./given-study.ts";
 import { inSlices } from "./in-slices.ts";
@@ -30,6 +32,13 @@ export interface WorkedOut {
   readonly analysis: Analysis;
 }
 
+/** Settings tried on a study that is worked out, and what they come to. */
+export interface TriedOut {
+  readonly changes: readonly SettingChange[];
+  readonly base: WorkedOut;
+  readonly analysis: Analysis;
+}
+
 export interface OpenStudy {
   /** The last study that was worked out; it stays until the next one is. */
   readonly workedOut: WorkedOut | undefined;
@@ -37,6 +46,14 @@ export interface OpenStudy {
   readonly open: (name: string, load: (signal: AbortSignal) => Promise<GivenStudy>) => void;
   /** Works the open study out again with the edits that its history holds; never stands before a study being opened. */
   readonly rework: (history: History) => void;
+  /** What the last settings tried came to. */
+  readonly tried: TriedOut | undefined;
+  /** Works the study out with settings that are only tried; it stays as it is. */
+  readonly tryOut: (base: WorkedOut, changes: readonly SettingChange[]) => void;
+  /** Gives up working out what is tried. */
+  readonly stopTrying: () => void;
+  /** Puts a table that the study lacks among its files; the next working out reads it. */
+  readonly addFile: (name: string, text: string) => void;
   /** Changes the study's settings, keeps them with it and reads it again at once; edits stay. */
   readonly settle: (change: SettingChange) => void;
   readonly cancel: () => void;
@@ -48,6 +65,8 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
   const runner = useMemo(() => pageRunner(startWorker), []);
   const current = useRef<AbortController>(undefined);
   const isOpening = useRef(false);
+  const busyWith = useRef<"study" | "trial">(undefined);
+  const [tried, setTried] = useState<TriedOut>();
   /** The study with settings that are not worked out yet. */
   const settled = useRef<GivenStudy>(undefined);
 
@@ -60,29 +79,40 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
   );
 
   const actions = useMemo(() => {
-    const begin = (name: string, work: (signal: AbortSignal) => Promise<WorkedOut>) => {
+    const start = <T>(
+      { name, isTrial = false }: { readonly name: string; readonly isTrial?: boolean },
+      work: (signal: AbortSignal) => Promise<T>,
+      take: (result: T) => void,
+    ) => {
       current.current?.abort();
       const controller = new AbortController();
       current.current = controller;
-      dispatch({ kind: "work-began", name });
+      busyWith.current = isTrial ? "trial" : "study";
+      dispatch({ kind: "work-began", name, isTrial });
       return work(controller.signal).then(
         (result) => {
           if (controller.signal.aborted) return;
-          latest.current = result;
-          settled.current = undefined;
-          setWorkedOut(result);
-          if (isOpening.current) dispatch({ kind: "study-opened", history: result.history });
-          isOpening.current = false;
+          busyWith.current = undefined;
+          take(result);
           dispatch({ kind: "work-ended" });
         },
         (error: unknown) => {
           if (controller.signal.aborted) return;
           isOpening.current = false;
+          busyWith.current = undefined;
           settled.current = undefined;
           dispatch({ kind: "work-failed", message: error instanceof Error ? error.message : String(error) });
         },
       );
     };
+    const begin = (name: string, work: (signal: AbortSignal) => Promise<WorkedOut>) =>
+      start({ name }, work, (result) => {
+        latest.current = result;
+        settled.current = undefined;
+        setWorkedOut(result);
+        if (isOpening.current) dispatch({ kind: "study-opened", history: result.history });
+        isOpening.current = false;
+      });
     const analyse = async (given: GivenStudy, signal: AbortSignal) => {
       const onProgress = sparingly((step, share) => {
         if (!signal.aborted) dispatch({ kind: "work-went-on", step, share });
@@ -130,14 +160,38 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
       settled.current = withSetting(settled.current ?? now.given, change);
       rework(now.history);
     };
+    const tryOut: OpenStudy["tryOut"] = (base, changes) => {
+      if (busyWith.current === "study") return;
+      const step = { label: "trying", edits: changes.map(settingEdit) };
+      const { given, tables, history } = base;
+      const work = async (signal: AbortSignal) => {
+        const files = await editedFiles(given, tables, withStep(history, step));
+        return analyse({ name: given.name, files }, signal);
+      };
+      const { name } = base.analysis.study;
+      void start({ name, isTrial: true }, work, (analysis) => setTried({ changes, base, analysis }));
+    };
+    const stopTrying = () => {
+      if (busyWith.current !== "trial") return;
+      busyWith.current = undefined;
+      current.current?.abort();
+      dispatch({ kind: "work-ended" });
+    };
+    const addFile: OpenStudy["addFile"] = (name, text) => {
+      const now = settled.current ?? latest.current?.given;
+      if (now === undefined) return;
+      const files = new Map([...now.files, [name, new TextEncoder().encode(text)]]);
+      settled.current = { ...now, files, isSettled: true };
+    };
     const cancel = () => {
       current.current?.abort();
       isOpening.current = false;
+      busyWith.current = undefined;
       dispatch({ kind: "work-cancelled" });
     };
-    return { open, rework, settle, cancel };
+    return { open, rework, settle, cancel, tryOut, stopTrying, addFile };
   }, [dispatch, runner]);
-  return useMemo(() => ({ workedOut, ...actions }), [workedOut, actions]);
+  return useMemo(() => ({ workedOut, tried, ...actions }), [workedOut, tried, actions]);
 }
 
 /** A study with what this browser kept of it; a browser that keeps nothing is no hindrance. */

@@ -1,7 +1,9 @@
+import type { SettingChange } from "../../core/study/changed-settings.ts";
 import type { Sheet } from "../../core/study/model.ts";
 import { putApostrophe } from "../../core/tables/apostrophes.ts";
 import { baseName } from "../../core/tables/base-name.ts";
 import { decodeBytes } from "../../core/tables/dialect/encoding.ts";
+import { SETTINGS_FILE, withSettings } from "../study/chosen-settings.ts";
 import { encodeText } from "./encode-text.ts";
 import { guardedColumns, PACKAGE_FILE, packageWithNames } from "./package-file.ts";
 import { type CsvPatch, patchCsv, type RowPatch } from "./patch-csv.ts";
@@ -24,7 +26,14 @@ export type Edit =
     }
   | ({ readonly kind: "row-added"; readonly file: string } & AddedRow)
   | { readonly kind: "row-set-aside"; readonly file: string; readonly row: number; readonly reason: string }
-  | { readonly kind: "row-taken-back"; readonly file: string; readonly row: number };
+  | { readonly kind: "row-taken-back"; readonly file: string; readonly row: number }
+  | ({ readonly kind: "setting"; readonly file: typeof SETTINGS_FILE } & SettingChange);
+
+export const settingEdit = (change: SettingChange): Edit => ({
+  kind: "setting",
+  file: SETTINGS_FILE,
+  ...change,
+});
 
 /** What the edits of one file come to. */
 export interface TableEdits {
@@ -40,6 +49,7 @@ export const NO_EDITS: TableEdits = { cells: new Map(), added: [], setAside: new
 export function editsByFile(edits: readonly Edit[]): ReadonlyMap<string, TableEdits> {
   const files = new Map<string, ReturnType<typeof gathered>>();
   for (const edit of edits) {
+    if (edit.kind === "setting") continue;
     const own = files.get(edit.file) ?? gathered();
     files.set(edit.file, own);
     gather(own, edit);
@@ -53,7 +63,9 @@ const gathered = () => ({
   setAside: new Map<number, string>(),
 });
 
-function gather({ cells, added, setAside }: ReturnType<typeof gathered>, edit: Edit): void {
+type TableEdit = Exclude<Edit, { readonly kind: "setting" }>;
+
+function gather({ cells, added, setAside }: ReturnType<typeof gathered>, edit: TableEdit): void {
   switch (edit.kind) {
     case "cell": {
       const row = cells.get(edit.row) ?? new Map<number, string>();
@@ -96,8 +108,12 @@ export function applyEdits(
     file: form.file,
     names: renamedHeaders(form, byFile.get(form.file)),
   }));
+  const settled = withSettings(
+    files,
+    edits.filter((edit) => edit.kind === "setting"),
+  );
   return new Map(
-    [...files].map(([path, bytes]) => {
+    [...settled].map(([path, bytes]) => {
       const file = baseName(path);
       if (file === PACKAGE_FILE) return [path, packageWithNames(bytes, renamed)];
       const form = forms.find((form) => form.file === file);

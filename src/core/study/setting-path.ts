@@ -34,6 +34,16 @@ export function knownSettingPaths(schema: Node = settingsSchema, before = ""): r
   });
 }
 
+/** The schema of one setting, with its words, and the one beneath its default; undefined where there is none. */
+export function settingSchema(
+  path: string,
+): { readonly schema: v.GenericSchema; readonly inner: v.GenericSchema } | undefined {
+  let schema: Node = settingsSchema;
+  for (const name of path.split(".")) schema = asSchema(partsOf(unwrapped(schema)).get(name));
+  const inner = unwrapped(schema);
+  return schema === undefined || inner === undefined ? undefined : { schema, inner };
+}
+
 /** True where a path leads to a setting, to a part that holds settings, or to an entry of a named list. */
 function isKnown(path: readonly string[], schema: Node = settingsSchema): boolean {
   if (path.length === 0) return true;

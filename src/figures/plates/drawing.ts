@@ -1,4 +1,5 @@
 import type { ReactElement } from "react";
+import type { Analysis } from "../../core/analysis-result.ts";
 import type { HeightScale } from "../height-scale.ts";
 
 /** Which reading the shared vertical axis carries. */
@@ -12,6 +13,8 @@ export interface View {
   readonly frame?: readonly [number, number];
   /** Magnify a band about the main horizon: half-width in metres and how many times. */
   readonly lens?: { readonly halfWidthM: number; readonly times: number };
+  /** What was before a choice that is only tried: drawn behind as a thin ghost, and a lens stays about its horizon. */
+  readonly was?: Analysis;
   /** `@font-face` rules for a file that must carry its own faces. */
   readonly fontFaces?: string;
 }

@@ -65,7 +65,8 @@ export function sectionFrame(
     extentM(section),
     view.frame?.map((value) => value + zeroM),
   );
-  const lens = lensIn(extent, main?.positionM, view);
+  const centre = (view.was && mainHorizonOf(view.was, name)) ?? main;
+  const lens = lensIn(extent, centre?.positionM, view);
   const y = heightScale({ bottomM: extent[0], topM: extent[1], ...span }, lens);
   const own = { scale: y, reading: ownReading(section) };
   const relative = main && { scale: y, reading: horizonReading(main.positionM) };
