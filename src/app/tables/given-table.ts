@@ -147,7 +147,8 @@ export function givenTable(
   rows: GivenTable["rows"],
   unread: readonly WrittenRow[] = [],
 ): GivenTable {
-  const { file, table, headers, dialect, columns, rowNumbers } = sheet;
+  const { file, table, headers, dialect, columns } = sheet;
+  const rowNumbers = Array.from(sheet.rowNumbers);
   const own = { file, table, headers, dialect, columns };
   if (unread.length === 0) return { ...own, rows, rowNumbers, unread: new Map() };
   const merged: { readonly row: number; readonly cells: readonly string[] }[] = [];

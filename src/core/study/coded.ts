@@ -55,6 +55,25 @@ function reach(codes: Codes, rows: Int32Array): { readonly least: number; readon
   return { least, most };
 }
 
+/** Some of the rows parted by their values, which all differ; those of a value in the order given, values as met. */
+export function rowsByValue({ values, codes }: Coded<unknown>, rows: Int32Array): readonly Int32Array[] {
+  const counts = new Int32Array(values.length);
+  const order: number[] = [];
+  for (let at = 0; at < rows.length; at++) {
+    const code = codes[rows[at]];
+    if (counts[code] === 0) order.push(code);
+    counts[code] += 1;
+  }
+  const parts = Array.from(counts, (count) => new Int32Array(count));
+  counts.fill(0);
+  for (let at = 0; at < rows.length; at++) {
+    const code = codes[rows[at]];
+    parts[code][counts[code]] = rows[at];
+    counts[code] += 1;
+  }
+  return order.map((code) => parts[code]);
+}
+
 /** How often each distinct value stands in the column. */
 export function countValues({ values, codes }: Coded<unknown>): Int32Array {
   const counts = new Int32Array(values.length);

@@ -29,7 +29,7 @@ export interface Sheet {
   /** The section that a file without a column for it was taken to be about. */
   readonly section?: { readonly name: string; readonly by: "chosen" | "sections" | "name" };
   readonly rows: SheetRows;
-  readonly rowNumbers: readonly number[];
+  readonly rowNumbers: readonly number[] | Int32Array;
 }
 
 /** A file of the study as bytes were given: what the repeat sheet records. */

@@ -148,18 +148,11 @@ function cellsOf(
     guarded.has(header) ? mapValues(cells[column], takeOffApostrophe) : cells[column],
   );
   const leftOut = odd.filter((one) => isLeftOut(one, rows[one.index], { width: columns.length, source }));
-  if (leftOut.length === 0) return { rows: columnRows(read, rows.length), rowNumbers: plainNumbers(rows) };
+  if (leftOut.length === 0) return { rows: columnRows(read, rows.length), rowNumbers: rows };
   const without = new Set(leftOut.map(({ index }) => index));
-  const kept = Int32Array.from(rows.keys()).filter((index) => !without.has(index));
+  const kept = rows.map((_, index) => index).filter((index) => !without.has(index));
   const keptColumns = read.map((column) => takeRows(column, kept));
-  return { rows: columnRows(keptColumns, kept.length), rowNumbers: Array.from(kept, (index) => rows[index]) };
-}
-
-/** `Array.from` takes far longer for the same. */
-function plainNumbers(numbers: Int32Array): number[] {
-  const plain: number[] = [];
-  for (let at = 0; at < numbers.length; at++) plain.push(numbers[at]);
-  return plain;
+  return { rows: columnRows(keptColumns, kept.length), rowNumbers: kept.map((index) => rows[index]) };
 }
 
 /** Tells a row that has not as many cells as the header; true where it cannot be used. */

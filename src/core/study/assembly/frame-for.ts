@@ -1,3 +1,4 @@
+import type { Coded } from "../coded.ts";
 import type { Origin } from "../model.ts";
 import type { Assembly, ReadSheet, SectionFrame } from "./context.ts";
 import type { MeantName } from "./meant-name.ts";
@@ -30,11 +31,16 @@ export interface FrameSearch {
   readonly assembly: Assembly;
 }
 
-/** Looks the frame of each section that can be used up once, by its code; what is wrong with another is told row by row. */
-export function frameReader(sections: readonly string[], search: FrameSearch) {
-  const known: (SectionFrame | undefined)[] = sections.map(() => undefined);
-  return (code: number, origin: Origin): SectionFrame | undefined => {
-    known[code] ??= frameFor(sections[code], origin, search);
+/** Gives each row the frame of its section, looked up once where it can be used; what is wrong with another is told row by row. */
+export function frameReader(
+  { values, codes }: Coded<string>,
+  originAt: (index: number) => Origin,
+  search: FrameSearch,
+): (index: number) => SectionFrame | undefined {
+  const known: (SectionFrame | undefined)[] = values.map(() => undefined);
+  return (index) => {
+    const code = codes[index];
+    known[code] ??= frameFor(values[code], originAt(index), search);
     return known[code];
   };
 }

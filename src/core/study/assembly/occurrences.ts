@@ -1,4 +1,4 @@
-import { type Numbered, numbered, valueAt } from "../coded.ts";
+import { mapValues, type Numbered, numbered, rowsByValue, valueAt } from "../coded.ts";
 import type { Occurrence, Occurrences, Origin, Taxon } from "../model.ts";
 import { columnOccurrences } from "../occurrence-list.ts";
 import { type ParsedName, parseName } from "../open-nomenclature.ts";
@@ -23,33 +23,36 @@ export function readOccurrences(
   const cells = readCells(occurrences, assembly);
   if (!read || !cells) return new Map();
   const { columns, file, rowNumbers, usable } = cells;
-  const frameOf = frameReader(columns.section.values, { frames, read, assembly });
+  const originAt = (index: number): Origin => ({ file, row: rowNumbers[index] });
+  const frameOf = frameReader(columns.section, originAt, { frames, read, assembly });
   const places = numbered<Place>(rowNumbers.length);
   const names = numbered<ParsedName>(rowNumbers.length);
-  const placeAt = placeReader(cells, places, { samples, assembly });
-  const nameAt = nameReader(cells, names, { taxa, assembly });
+  const placeAt = placeReader(cells, places, { samples, assembly, originAt });
+  const nameAt = nameReader(cells, names, { taxa, assembly, originAt });
   const hasOdd = columns.count.values.includes(0) || columns.qualifier.values.some(isOddQualifier);
-  const bySection = new Map<SectionFrame, number[]>();
-  let rows: number[] = [];
-  let last: SectionFrame | undefined;
-  for (const index of usable) {
-    const origin = { file, row: rowNumbers[index] };
-    const frame = frameOf(columns.section.codes[index], origin);
-    if (!frame || !placeAt(index, frame, origin)) continue;
+  const kept = new Int32Array(usable.length);
+  let count = 0;
+  for (let at = 0; at < usable.length; at++) {
+    const index = usable[at];
+    const frame = frameOf(index);
+    if (!frame || !placeAt(index, frame)) continue;
     if (hasOdd) tellOdd(cells, index, assembly);
-    nameAt(index, origin);
-    if (frame !== last) rows = bySection.get(frame) ?? [];
-    if (frame !== last) bySection.set(frame, rows);
-    last = frame;
-    rows.push(index);
+    nameAt(index);
+    kept[count] = index;
+    count += 1;
   }
   const placed = { cells, place: places, name: names };
-  return new Map(
-    [...bySection].map(([frame, indices]) => [
-      frame.name,
-      columnOccurrences(columnsOfFinds(placed, frame, Int32Array.from(indices))),
-    ]),
-  );
+  const sections = mapValues(columns.section, (name) => name);
+  const bySection = new Map<string, Occurrences>();
+  for (const indices of rowsByValue(sections, kept.subarray(0, count))) {
+    const frame = frameOf(indices[0]);
+    if (frame) bySection.set(frame.name, columnOccurrences(columnsOfFinds(placed, frame, indices)));
+  }
+  return bySection;
+}
+
+interface RowOrigins {
+  readonly originAt: (index: number) => Origin;
 }
 
 type FindCells = ReadCells<typeof occurrences>;
@@ -58,23 +61,24 @@ type FindCells = ReadCells<typeof occurrences>;
 function nameReader(
   { columns: { taxon, qualifier } }: FindCells,
   names: Numbered<ParsedName>,
-  { taxa, assembly }: Pick<Naming, "taxa" | "assembly">,
+  { taxa, assembly, originAt }: Pick<Naming, "taxa" | "assembly"> & RowOrigins,
 ) {
-  const parsed = (index: number, origin: Origin): number => {
+  const parsed = (index: number): number => {
     const name = parseName(valueAt(taxon, index), valueAt(qualifier, index) ?? "");
-    if (!taxa.has(name.name)) addTaxon(valueAt(taxon, index), { name, origin, taxa, assembly });
+    if (!taxa.has(name.name))
+      addTaxon(valueAt(taxon, index), { name, origin: originAt(index), taxa, assembly });
     return names.values.push(name);
   };
   // Most finds have one qualifier, or none.
   const usual = new Int32Array(taxon.values.length);
   const known = new Map<number, number>();
-  return (index: number, origin: Origin): void => {
+  return (index: number): void => {
     const of = taxon.codes[index];
     const sign = qualifier.codes[index];
     const key = of * qualifier.values.length + sign;
     let number = sign === 0 ? usual[of] : (known.get(key) ?? 0);
     if (number === 0) {
-      number = parsed(index, origin);
+      number = parsed(index);
       if (sign === 0) usual[of] = number;
       else known.set(key, number);
     }
@@ -86,19 +90,19 @@ function nameReader(
 function placeReader(
   { columns }: FindCells,
   places: Numbered<Place>,
-  search: Omit<PlaceSearch, "origin">,
-): (index: number, frame: SectionFrame, origin: Origin) => boolean {
+  { samples, assembly, originAt }: Omit<PlaceSearch, "origin"> & RowOrigins,
+): (index: number, frame: SectionFrame) => boolean {
   const { section, sample, position, leg } = columns;
   const placing = [section.codes, sample.codes, position.codes, leg.codes];
   let last: number | undefined;
-  return (index, frame, origin) => {
+  return (index, frame) => {
     if (last === undefined || !areAlike(placing, last, index)) {
       const own = {
         sample: valueAt(sample, index),
         position: valueAt(position, index),
         leg: valueAt(leg, index),
       };
-      const place = placeOf(own, frame, { ...search, origin });
+      const place = placeOf(own, frame, { samples, assembly, origin: originAt(index) });
       last = place && index;
       if (place !== undefined) places.values.push(place);
     }

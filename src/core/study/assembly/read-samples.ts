@@ -36,10 +36,11 @@ function readListed(
   search: FrameSearch,
 ): void {
   const { assembly } = search;
-  const frameOf = frameReader(columns.section.values, search);
+  const originAt = (index: number): Origin => ({ file, row: rowNumbers[index] });
+  const frameOf = frameReader(columns.section, originAt, search);
   for (const index of usable) {
-    const origin = { file, row: rowNumbers[index] };
-    const frame = frameOf(columns.section.codes[index], origin);
+    const origin = originAt(index);
+    const frame = frameOf(index);
     const leg = valueAt(columns.leg, index);
     const slab = frame && slabOf(slabAt(columns, index, leg), frame, { origin, assembly });
     const known = frame && bySection.get(frame.name);

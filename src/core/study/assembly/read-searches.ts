@@ -63,24 +63,28 @@ function usableSearches(
   const { columns, usable, rowNumbers, file } = cells;
   const { section, sample, group, effort } = columns;
   const firstLike = firstAlike([section.codes, sample.codes, group.codes], rowNumbers.length);
-  const frameOf = frameReader(section.values, { frames, read, assembly });
+  const originAt = (index: number): Origin => ({ file, row: rowNumbers[index] });
+  const frameOf = frameReader(section, originAt, { frames, read, assembly });
   const hasEffort = effort.values.some((value) => value !== undefined);
   const bySection = new Map<SectionFrame, number[]>();
   let last: { readonly index: number; readonly rows: number[] } | undefined;
   for (const index of usable) {
-    const origin = { file, row: rowNumbers[index] };
     const isLike =
       last !== undefined &&
       section.codes[last.index] === section.codes[index] &&
       sample.codes[last.index] === sample.codes[index];
     if (last === undefined || !isLike) {
       last = undefined;
-      const frame = frameOf(section.codes[index], origin);
+      const frame = frameOf(index);
       const known = frame && context.samples.bySection.get(frame.name);
       if (!frame || !known) continue;
       const own = known.get(valueAt(sample, index));
       if (!own) {
-        tellUnknownSample(valueAt(sample, index), { ...origin, section: frame.name }, { context, assembly });
+        tellUnknownSample(
+          valueAt(sample, index),
+          { ...originAt(index), section: frame.name },
+          { context, assembly },
+        );
         continue;
       }
       samples.values.push(own);
@@ -94,7 +98,11 @@ function usableSearches(
       continue;
     }
     if (hasEffort)
-      tellUnitless(valueAt(effort, index), valueAt(columns.effort_unit, index), { origin, read, assembly });
+      tellUnitless(valueAt(effort, index), valueAt(columns.effort_unit, index), {
+        origin: originAt(index),
+        read,
+        assembly,
+      });
     samples.codes[index] = samples.values.length - 1;
     last.rows.push(index);
   }

@@ -1,4 +1,5 @@
 import type { Coded } from "../coded.ts";
+import type { Sheet } from "../model.ts";
 import { columnsOf } from "../sheet-rows.ts";
 import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";
@@ -10,7 +11,7 @@ import { repeatedRows } from "./repeated-rows.ts";
 export interface ReadCells<T extends TableDeclaration> {
   readonly file: string;
   readonly columns: ColumnsOf<T>;
-  readonly rowNumbers: readonly number[];
+  readonly rowNumbers: Sheet["rowNumbers"];
   /** Places of the rows without an error, from above downward. */
   readonly usable: Int32Array;
 }
@@ -127,7 +128,7 @@ function usableRows(reading: Reading): Int32Array {
       count += 1;
     }
   }
-  return usable.slice(0, count);
+  return usable.subarray(0, count);
 }
 
 /** The sets of columns of which a row must fill one; none where every row fills one of them. */

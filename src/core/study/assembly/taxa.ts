@@ -37,7 +37,7 @@ export function readTaxa(assembly: Assembly): Map<string, Taxon> {
 
 /** Every column of taxa.csv that is not declared is a trait. */
 function traitReader({ sheet }: ReadSheet): (row: number) => Readonly<Record<string, string>> {
-  const byRow = new Map(sheet.rowNumbers.map((row, index) => [row, sheet.rows.at(index)]));
+  const byRow = new Map(Array.from(sheet.rowNumbers, (row, index) => [row, sheet.rows.at(index)] as const));
   const columns = sheet.headers
     .map((header, index) => ({ trait: header.trim(), index }))
     .filter(({ trait, index }) => sheet.columns[index] === undefined && trait !== "");

@@ -108,7 +108,7 @@ describe("a column that is renamed", () => {
     expect(table.headerRows).toEqual([1, 2]);
     const { sheets } = afterEdits(given, renamedStep(table, 1, "species").edits);
     expect(sheets[0]?.headers).toEqual(["section", "species", "height (m)"]);
-    expect(sheets[0]?.rowNumbers).toEqual([3, 4]);
+    expect([...(sheets[0]?.rowNumbers ?? [])]).toEqual([3, 4]);
   });
 
   it("keeps the apostrophes that its package records", () => {
