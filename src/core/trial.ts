@@ -5,7 +5,7 @@ import { settleMainHorizon } from "./markers/main-horizon.ts";
 import { pickedHorizons } from "./markers/picked-horizons.ts";
 import type { MarkerHorizon, Markers } from "./markers/result.ts";
 import { followedEnds } from "./ranges/followed-ends.ts";
-import type { RangeEnd, RangeMethod, Ranges } from "./ranges/result.ts";
+import type { RangeEnd, RangeMethod, Ranges, Taper } from "./ranges/result.ts";
 import { type SettledFinds, settleFinds } from "./study/finds.ts";
 import type { LocalTaxon } from "./study/finds-result.ts";
 import { groupBy } from "./study/grouping.ts";
@@ -86,7 +86,8 @@ function followedRanges(section: Section, { analysis, tried, study, input, chang
   return {
     ...ranges,
     ends: now.ends.length === 0 ? ranges.ends : replaced(ranges.ends, now.ends, endKey),
-    tapers: replaced(ranges.tapers, now.tapers, ({ section, taxon }) => `${section}\n${taxon}`),
+    tapers: replaced(ranges.tapers, now.tapers, taperKey),
+    baseTapers: replaced(ranges.baseTapers, now.baseTapers, taperKey),
   };
 }
 
@@ -174,6 +175,8 @@ function replaced<T>(old: readonly T[], now: readonly T[], keyOf: (row: T) => st
 
 const endKey = ({ section, taxon, end, method, identification }: RangeEnd): string =>
   [section, taxon, end, method, identification].join("\n");
+
+const taperKey = ({ section, taxon }: Taper): string => `${section}\n${taxon}`;
 
 const answerKey = ({ section, set, question, method }: TimingAnswer): string =>
   [section, set, question, method].join("\n");

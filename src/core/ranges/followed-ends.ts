@@ -1,9 +1,10 @@
 import type { Section, Study } from "../study/model.ts";
 import { type RangesInput, sectionCases } from "./cases.ts";
-import { caseUnder, leadingMethods, marked } from "./leading.ts";
+import { caseUnder, type Leading, leadingMethods, marked } from "./leading.ts";
 import { rangeMethods } from "./methods.ts";
-import { turnedBack } from "./mirrored.ts";
-import type { RangeMethod, Ranges } from "./result.ts";
+import { turnedBack, turnedTaper } from "./mirrored.ts";
+import type { RangeCase } from "./range-case.ts";
+import type { RangeMethod, Ranges, Taper } from "./result.ts";
 import { taper } from "./taper.ts";
 
 interface Followed {
@@ -21,7 +22,7 @@ export function followedEnds(
   section: Section,
   study: Study,
   { input, tapersOf, methods }: Followed & { readonly input: RangesInput },
-): Pick<Ranges, "ends" | "tapers"> {
+): Pick<Ranges, "ends" | "tapers" | "baseTapers"> {
   const asked = withMethods(study, methods);
   const taxa = sectionCases(section, asked, input);
   const candidates = taxa.filter(({ isCandidate }) => isCandidate);
@@ -30,17 +31,20 @@ export function followedEnds(
     candidates.map(({ top }) => top),
     declared,
   );
-  const [leading = "uniform"] = atTop.methods;
-  const tapers = slow.has(leading)
-    ? []
-    : taxa
-        .filter(({ top }) => tapersOf.has(top.taxon.taxon))
-        .flatMap(({ top }) => taper(caseUnder(atTop, top), leading) ?? []);
-  if (methods === undefined) return { ends: [], tapers };
   const atBase = leadingMethods(
     candidates.map(({ base }) => base),
     declared,
   );
+  const drawn = taxa.filter(({ top }) => tapersOf.has(top.taxon.taxon));
+  const tapers = tapersUnder(
+    atTop,
+    drawn.map(({ top }) => top),
+  );
+  const baseTapers = tapersUnder(
+    atBase,
+    drawn.map(({ base }) => base),
+  ).map(turnedTaper);
+  if (methods === undefined) return { ends: [], tapers, baseTapers };
   const rows = (method: RangeMethod) =>
     taxa.flatMap((each) => {
       const [top, base] = [caseUnder(atTop, each.top), caseUnder(atBase, each.base)];
@@ -49,7 +53,12 @@ export function followedEnds(
         turnedBack(marked(atBase, base, rangeMethods[method].end(base))),
       ];
     });
-  return { ends: methods.flatMap(rows), tapers };
+  return { ends: methods.flatMap(rows), tapers, baseTapers };
+}
+
+function tapersUnder(leading: Leading, cases: readonly RangeCase[]): Taper[] {
+  const [method = "uniform"] = leading.methods;
+  return slow.has(method) ? [] : cases.flatMap((each) => taper(caseUnder(leading, each), method) ?? []);
 }
 
 /** Without the methods that cost and that are neither in view nor could lead: a fitted recovery is one. */

@@ -1,6 +1,6 @@
 import type { LocalTaxon } from "../study/finds-result.ts";
 import type { Coordinate, Gap, Limit } from "./coordinate.ts";
-import type { RangeEnd } from "./result.ts";
+import type { RangeEnd, Taper } from "./result.ts";
 import type { SampledHorizon } from "./sampled-horizons.ts";
 
 // Upside down: every height h becomes -h, so that a base is estimated as an upper end. Twice is as before.
@@ -56,5 +56,14 @@ export function turnedBack({ lowM, highM, pointM, ...row }: RangeEnd): RangeEnd 
     ...(pointM === undefined ? {} : { pointM: mirroredHeight(pointM) }),
     ...(highM === undefined ? {} : { lowM: mirroredHeight(highM) }),
     ...(lowM === undefined ? {} : { highM: mirroredHeight(lowM) }),
+  };
+}
+
+/** A taper drawn upside down, turned back: it goes down from the first find. */
+export function turnedTaper({ heightsM, endM, ...taper }: Taper): Taper {
+  return {
+    ...taper,
+    heightsM: heightsM.map(mirroredHeight),
+    ...(endM === undefined ? {} : { endM: mirroredHeight(endM) }),
   };
 }

@@ -6,7 +6,7 @@ import { rangeCautions } from "./cautions.ts";
 import { caseUnder, type Leading, leadingMethods, marked } from "./leading.ts";
 import { leaningOf } from "./leaning.ts";
 import { rangeMethods } from "./methods.ts";
-import { turnedBack } from "./mirrored.ts";
+import { turnedBack, turnedTaper } from "./mirrored.ts";
 import { note, type RangeCase } from "./range-case.ts";
 import type { RangeEnd, RangeMethod, Ranges } from "./result.ts";
 import { taper } from "./taper.ts";
@@ -14,7 +14,7 @@ import { uniformEnd } from "./uniform-end.ts";
 
 /**
  * The true ends of every taxon in every section, a row for each method of `ranges.methods` at the top, at the base and,
- * where the method has one, a joint interval of both; a taper each by the leading method; and how much each end leans on
+ * where the method has one, a joint interval of both; a taper beyond each end by the leading method; and how much each end leans on
  * the shape of recovery. Where the names read inclusively reach higher, `uniform` is given for them too.
  */
 export function estimateRanges(study: Study, input: RangesInput, progress?: Progress): Ranges {
@@ -26,6 +26,7 @@ export function estimateRanges(study: Study, input: RangesInput, progress?: Prog
   return {
     ends: bySection.flatMap(({ ends }) => ends),
     tapers: bySection.flatMap(({ tapers }) => tapers),
+    baseTapers: bySection.flatMap(({ baseTapers }) => baseTapers),
     leanings: bySection.flatMap(({ leanings }) => leanings),
     cautions: bySection.flatMap(({ cautions }) => cautions),
     basis: [coordinateBasis, ...methods.map((m) => rangeMethods[m].basis)],
@@ -58,6 +59,7 @@ function estimateSection(section: Section, study: Study, input: RangesInput): Om
       leaningOf(base, rows[i].base),
     ]),
     tapers: cases.flatMap(({ top }) => taper(top, atTop.methods[0]) ?? []),
+    baseTapers: cases.flatMap(({ base }) => taper(base, atBase.methods[0]) ?? []).map(turnedTaper),
     cautions: rangeCautions({
       section,
       study,

@@ -30,7 +30,10 @@ export interface RangeEnd {
   readonly note: string;
 }
 
-/** The taper: chance (1 - confidence of the leading method) that the taxon was still there at each height. */
+/**
+ * The taper beyond one end of a range: chance (1 - confidence of a method) that the taxon was still (already) there at each
+ * height, outward from the outermost find.
+ */
 export interface Taper {
   readonly section: string;
   readonly taxon: string;
@@ -70,7 +73,10 @@ export interface Leaning {
 
 export interface Ranges {
   readonly ends: readonly RangeEnd[];
+  /** Beyond the last finds, by the leading method. */
   readonly tapers: readonly Taper[];
+  /** Beneath the first finds, by the method that leads there. */
+  readonly baseTapers: readonly Taper[];
   /** How much each end leans on the shape of recovery, by taxon: top, then base. */
   readonly leanings: readonly Leaning[];
   readonly cautions: readonly Caution[];

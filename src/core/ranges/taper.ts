@@ -1,5 +1,3 @@
-import type { Study } from "../study/model.ts";
-import { type RangesInput, sectionCases } from "./cases.ts";
 import { rangeMethods } from "./methods.ts";
 import type { RangeCase } from "./range-case.ts";
 import type { RangeMethod, Taper } from "./result.ts";
@@ -45,16 +43,6 @@ function boundBy(rangeCase: RangeCase, method: RangeMethod): number | undefined 
 /** The taper by the leading method; where that says nothing, `uniform` stands in; undefined where neither does. */
 export function taper(rangeCase: RangeCase, leading: RangeMethod): Taper | undefined {
   return taperBy(rangeCase, leading) ?? taperBy(rangeCase, "uniform");
-}
-
-/** The tapers of every taxon in every section by one method, of those that it says something about. */
-export function tapersBy(study: Study, input: RangesInput, method: RangeMethod): Taper[] {
-  const { ranges } = study.settings;
-  const methods = ranges.methods.includes(method) ? ranges.methods : [...ranges.methods, method];
-  const asked = { ...study, settings: { ...study.settings, ranges: { ...ranges, methods } } };
-  return study.sections.flatMap((section) =>
-    sectionCases(section, asked, input).flatMap(({ top }) => taperBy(top, method) ?? []),
-  );
 }
 
 /**

@@ -153,7 +153,7 @@ export function markBelowCeiling(
 }
 
 /** True where the highest find lies in the highest sample searched for its group: the end is cut off by the section. */
-function reachesTop(taxon: LocalTaxon, section: Section): boolean {
+export function reachesTop(taxon: LocalTaxon, section: Section): boolean {
   const searches = section.searches.filter((search) => search.group === taxon.group);
   if (searches.length === 0) return false;
   const top = searches.reduce((a, b) => (b.heightM > a.heightM ? b : a));

@@ -48,6 +48,7 @@ const noTiming: Timing = {
   offsets: [],
   membership: [],
   densities: [],
+  leftOut: [],
   lastFinds: [],
   distrusted: [],
   cautions: [],
@@ -80,7 +81,7 @@ export function analysisOf(sections: readonly Section[], parts: Partial<Analysis
     finds: [],
     taxa: [],
     candidates: [],
-    ranges: { ends: [], tapers: [], leanings: [], cautions: [], basis: [] },
+    ranges: { ends: [], tapers: [], baseTapers: [], leanings: [], cautions: [], basis: [] },
     timing: noTiming,
     ...parts,
   };

@@ -58,6 +58,7 @@ describe.each(Object.entries(changes))("%s", (_, change) => {
 
   it("gives the tapers that the whole analysis gives", () => {
     expect(followed.ranges.tapers).toEqual(whole.ranges.tapers);
+    expect(followed.ranges.baseTapers).toEqual(whole.ranges.baseTapers);
   });
 });
 

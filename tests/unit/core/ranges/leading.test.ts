@@ -1,10 +1,10 @@
 import { describe, expect, it } from "vitest";
+import { endsWithFinds, tapersBy } from "../../../../src/core/ranges/asked-ends.ts";
 import { rangeMethods } from "../../../../src/core/ranges/methods.ts";
 import { estimateRanges } from "../../../../src/core/ranges/range-ends.ts";
 import type { RangeMethod } from "../../../../src/core/ranges/result.ts";
-import { tapersBy } from "../../../../src/core/ranges/taper.ts";
 import type { LocalTaxon } from "../../../../src/core/study/finds-result.ts";
-import { candidate, markers, section, study, taxon } from "./small-study.ts";
+import { candidate, markers, section, sectionName, study, taxon } from "./small-study.ts";
 
 const methods: readonly RangeMethod[] = [
   "sampled",
@@ -84,12 +84,15 @@ describe("tapers by any method", () => {
   const all = Object.keys(rangeMethods).filter((name): name is RangeMethod => name in rangeMethods);
   const { asked, input } = of(even, ["uniform"]);
 
+  const tapersOf = (method: RangeMethod) => [
+    ...tapersBy({ study: asked, ...input }, { section: sectionName, method }),
+  ];
   const silent: ReadonlySet<RangeMethod> = new Set(["counts", "recovery", "gap-quantile"] as const);
 
   it.each(all.filter((method) => !silent.has(method)))("%s: falls from 1 at the last find", (method) => {
-    const tapers = tapersBy(asked, input, method);
+    const tapers = tapersOf(method);
     expect(tapers).toHaveLength(3);
-    for (const { heightsM, chances, method: by } of tapers) {
+    for (const { heightsM, chances, method: by } of tapers.flatMap(({ top }) => top ?? [])) {
       expect(by).toBe(method);
       expect(chances[0]).toBe(1);
       expect(heightsM.length).toBeGreaterThan(5);
@@ -102,6 +105,52 @@ describe("tapers by any method", () => {
   });
 
   it("has none where a method says nothing", () => {
-    for (const method of silent) expect(tapersBy(asked, input, method)).toEqual([]);
+    for (const method of silent)
+      expect(tapersOf(method).flatMap(({ top, base }) => [top, base])).toEqual([
+        undefined,
+        undefined,
+        undefined,
+        undefined,
+        undefined,
+        undefined,
+      ]);
+  });
+
+  it("goes down from the first find as it goes up from the last where finds are mirrored", () => {
+    for (const method of ["uniform", "top-k", "sampled"] as const)
+      for (const { base } of tapersOf(method)) {
+        expect(base?.chances[0]).toBe(1);
+        expect(base?.heightsM).toEqual(base?.heightsM.toSorted((a, b) => b - a));
+      }
+  });
+
+  it("those of the leading method are those of the analysis", () => {
+    const { asked: own, input: given, ranges } = of(thinning);
+    const top = [...tapersBy({ study: own, ...given }, { section: sectionName, method: "declining" })];
+    expect(top.flatMap((each) => each.top ?? [])).toEqual(ranges.tapers);
+    const base = [...tapersBy({ study: own, ...given }, { section: sectionName, method: methods[0] })];
+    expect(base.flatMap((each) => each.base ?? [])).toEqual(ranges.baseTapers);
+  });
+});
+
+describe("the ends of a taxon with other finds", () => {
+  const { asked, input, ranges } = of(thinning);
+  const all = { study: asked, ...input };
+  const question = { section: sectionName, taxon: "Orbula alba", method: "uniform" } as const;
+  const [alba] = input.taxa;
+  const finds = alba.heightsM.map((heightM, i) => ({ heightM, sample: alba.samples[i] }));
+
+  it("are those of the analysis with the same finds", () => {
+    const same = endsWithFinds(all, { ...question, finds });
+    const rows = ranges.ends.filter((end) => end.taxon === "Orbula alba" && end.method === "uniform");
+    expect(same?.top).toEqual(rows.find((end) => end.end === "top"));
+    expect(same?.base).toEqual(rows.find((end) => end.end === "base"));
+  });
+
+  it("are lower without the last find, and none without any", () => {
+    const lower = endsWithFinds(all, { ...question, finds: finds.slice(0, -1) });
+    expect(lower?.top.lastM).toBe(10);
+    expect(lower?.top.horizons).toBe(6);
+    expect(endsWithFinds(all, { ...question, finds: [] })).toBeUndefined();
   });
 });
