@@ -2,11 +2,9 @@ import { firstPassage } from "./fault-repeat.ts";
 import type { Find, FindReason, LocalTaxon } from "./finds-result.ts";
 import { groupBy } from "./grouping.ts";
 import { type Identification, treatmentOf } from "./identification.ts";
+import { LEVEL_TOLERANCE_M, levelIndex } from "./level-index.ts";
 import type { Occurrence, PublishedRange, RockInterval, Section, Study, Taxon } from "./model.ts";
 import type { Settings } from "./settings.ts";
-
-/** Levels nearer than this are one level. */
-const LEVEL_TOLERANCE_M = 1e-9;
 
 export interface SettledFinds {
   readonly finds: readonly Find[];
@@ -148,18 +146,17 @@ function groupOf(taxon: string, study: Study): string {
 /** Finds in one sample, or at one level, are one horizon: the first is used, the rest merged into it. */
 function mergeHorizons(finds: readonly JudgedFind[]): JudgedFind[] {
   const samples = new Set<string>();
-  const levels: number[] = [];
+  const levels = levelIndex<true>();
   return finds.map((find) => {
     if (find.used !== "yes") return find;
     const isKnown =
-      (find.sample !== undefined && samples.has(find.sample)) ||
-      levels.some((level) => Math.abs(level - find.heightM) <= LEVEL_TOLERANCE_M);
+      (find.sample !== undefined && samples.has(find.sample)) || levels.at(find.heightM).length > 0;
     if (isKnown) {
       const reason = find.reason === "fault-repeat-mapped" ? find.reason : "same-horizon";
       return { ...find, used: "merged", reason };
     }
     if (find.sample !== undefined) samples.add(find.sample);
-    levels.push(find.heightM);
+    levels.add(find.heightM, true);
     return find;
   });
 }
@@ -177,7 +174,8 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
   const upward = used.toSorted((a, b) => a.heightM - b.heightM);
   const lastStrictM = highest(judged.filter((find) => find.strict));
   const inclusive = levelsOf(judged.filter((find) => find.inclusive));
-  const counts = upward.map((find) => countAt(find, judged));
+  const countOf = countReader(judged);
+  const counts = upward.map(countOf);
   return {
     section: section.name,
     taxon,
@@ -197,17 +195,22 @@ function localTaxon(taxon: string, { section, study, used, judged, searched }: G
 }
 
 /** Specimens of all finds that make one horizon; undefined where one of them was not counted. */
-function countAt({ sample, heightM }: JudgedFind, judged: readonly JudgedFind[]): number | undefined {
-  const here = judged.filter(
-    (find) =>
-      find.used !== "no" &&
-      ((sample !== undefined && find.sample === sample) ||
-        Math.abs(find.heightM - heightM) <= LEVEL_TOLERANCE_M),
-  );
-  return here.reduce<number | undefined>(
-    (sum, { count }) => (sum === undefined || count === undefined ? undefined : sum + count),
-    0,
-  );
+function countReader(judged: readonly JudgedFind[]): (find: JudgedFind) => number | undefined {
+  const counted = judged.filter(({ used }) => used !== "no");
+  const bySample = groupBy(counted.keys(), (at) => counted[at].sample);
+  const byLevel = levelIndex<number>();
+  for (const [at, { heightM }] of counted.entries()) byLevel.add(heightM, at);
+  return ({ sample, heightM }) => {
+    const inSample = sample === undefined ? [] : (bySample.get(sample) ?? []);
+    const here = new Set([...inSample, ...byLevel.at(heightM)].toSorted((a, b) => a - b));
+    let sum = 0;
+    for (const at of here) {
+      const { count } = counted[at];
+      if (count === undefined) return undefined;
+      sum += count;
+    }
+    return sum;
+  };
 }
 
 function publishedTaxon(taxon: string, range: PublishedRange, section: Section, study: Study): LocalTaxon {

@@ -1,4 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { RangeEnd } from "../../core/ranges/result.ts";
 import type { Candidate, Role } from "../../core/study/finds-result.ts";
 import type { Section } from "../../core/study/model.ts";
 import { weaknessOf } from "../wordings/cautions.ts";
@@ -46,15 +47,14 @@ function reachOf({ candidates, markers, ranges, study }: Analysis, section: Sect
   const main = markers.main.bySection.get(section.name);
   const reaching: string[] = [];
   const short: string[] = [];
+  const leadingTops = new Map<string, RangeEnd>();
+  for (const end of ranges.ends) {
+    if (end.end !== "top" || end.section !== section.name || end.reachLevel === undefined) continue;
+    if (!leadingTops.has(end.taxon)) leadingTops.set(end.taxon, end);
+  }
   for (const candidate of candidates) {
     if (candidate.section !== section.name || candidate.role !== "candidate") continue;
-    const leading = ranges.ends.find(
-      (end) =>
-        end.end === "top" &&
-        end.section === section.name &&
-        end.taxon === candidate.taxon &&
-        end.reachLevel !== undefined,
-    );
+    const leading = leadingTops.get(candidate.taxon);
     if (main !== undefined && candidate.lastM >= main.positionM) reaching.push(candidate.taxon);
     if (leading?.reachLevel === undefined) continue;
     (leading.reachLevel <= study.settings.confidence ? reaching : short).push(candidate.taxon);
