@@ -141,6 +141,10 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${percent(n("mass"))} of the probability of the one level lies at the top of timing.window: the window decides the answer.`,
   "scenario-leans-on-recovery": ({ text, n }) =>
     say`Finds thin out upward (${pValue(n("p"))}): the comparison of scenarios, with ${text("best")} first, leans on constant recovery.`,
+  "scenario-horizon-favoured": ({ n }) =>
+    say`One level at a horizon comes first also because its level is given: with levels free, two pulses against one stand at ${significant(n("ratio"), 2)} to 1, and an earlier pulse beside one at the horizon is ${strong("not excluded")}.`,
+  "scenario-level-mixed": ({ text, n }) =>
+    say`Sediment is mixed over about ${inMetres(n("lengthM"))} at ${text("horizon")}: elsewhere last finds, and a level or pulse that rests on them, may lie several times that above where taxa ended.`,
   "timing-set-name-taken": ({ subject }) =>
     say`The declared set ${subject} has a reserved name and was not used.`,
   "timing-set-incomplete": ({ subject, n }) =>

@@ -1,4 +1,5 @@
 import type { Caution } from "../../basis.ts";
+import { exp } from "../../numeric/elementary.ts";
 import { DECLINE_GATE, pooledCentroid } from "../recovery-answers.ts";
 import type { SetCase } from "../set-case.ts";
 import type { ScenarioEvidence, ScenarioProblem } from "./evidence.ts";
@@ -21,6 +22,8 @@ export function scenarioCautions(setCase: SetCase, compared: Compared): Caution[
     ...separationCautions(setCase, compared),
     ...edgeCautions(compared),
     ...declineCautions(setCase, compared),
+    ...horizonCautions(compared),
+    ...mixedLevelCautions(setCase, compared),
   ].map((caution) => ({ ...caution, ...place }));
 }
 
@@ -83,4 +86,38 @@ function declineCautions({ set }: SetCase, { weighed }: Compared): Caution[] {
   const best = bestOf(weighed[0]);
   if (pooled === undefined || pooled.p >= DECLINE_GATE || best === undefined) return [];
   return [{ code: "scenario-leans-on-recovery", numbers: { p: pooled.p, best: scenarioName(best) } }];
+}
+
+/** Two pulses this much less likely than one level, both free, are out of the question. */
+const REFUTED = 0.1;
+
+/**
+ * One level at a horizon is spared the price of an unknown level, two pulses pay it twice, and no scenario has one pulse
+ * at a horizon and one elsewhere. So where one level at a horizon comes first, two pulses are set against one level
+ * with all levels free: told unless that refutes them.
+ */
+function horizonCautions({ weighed }: Compared): Caution[] {
+  const one = weighed[0].find(({ scenario }) => scenario === "single");
+  const two = weighed[0].find(({ scenario }) => scenario === "pulses-2");
+  if (bestOf(weighed[0])?.scenario !== "at-horizon" || one === undefined || two === undefined) return [];
+  const ratio = exp(two.log - one.log);
+  return ratio < REFUTED ? [] : [{ code: "scenario-horizon-favoured", numbers: { ratio } }];
+}
+
+/** Mass of the one level below a smeared layer from which on it is said to lie there. */
+const AWAY = 0.975;
+const LIKELY = 0.5;
+
+/**
+ * Finds that mixing carried above a marker are taken out there, up to the reworking ceiling; at a level without a marker
+ * nobody can tell them, and they lift it.
+ */
+function mixedLevelCautions({ horizons }: SetCase, { evidence, weighed }: Compared): Caution[] {
+  const layer = horizons.find(({ marker }) => marker.mixing !== undefined);
+  const mixing = layer?.marker.mixing;
+  if (layer === undefined || mixing === undefined) return [];
+  const isBelow = (evidence.single.posterior?.cdf(mixing.baseM - mixing.lengthM) ?? 0) > AWAY;
+  const two = weighed[0].find(({ scenario }) => scenario === "pulses-2")?.probability ?? 0;
+  if (!isBelow && two < LIKELY) return [];
+  return [{ code: "scenario-level-mixed", numbers: { lengthM: mixing.lengthM, horizon: layer.name } }];
 }
