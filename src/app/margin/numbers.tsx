@@ -10,22 +10,58 @@ interface NumbersProps {
   readonly before?: readonly NumberLine[];
 }
 
+/** The numbers of a finding, kind by kind; those that a first look does not need are folded. */
 export function Numbers({ lines, before }: NumbersProps): ReactElement | null {
   if (lines.length === 0) return null;
+  const groups = [...new Set(lines.map(({ group }) => group ?? "Numbers"))];
+  return (
+    <>
+      {groups.map((group) => (
+        <Group
+          key={group}
+          title={group}
+          before={before}
+          lines={lines.filter((line) => (line.group ?? "Numbers") === group)}
+        />
+      ))}
+    </>
+  );
+}
+
+function Group({ title, lines, before }: NumbersProps & { readonly title: string }): ReactElement {
+  const shown = lines.filter(({ isMore }) => isMore !== true);
+  const more = lines.filter(({ isMore }) => isMore === true);
   return (
     <section className={styles.part}>
-      <h2>Numbers</h2>
-      <dl className={styles.numbers}>
-        {lines.map(({ label, value, note }, place) => (
-          <div key={`${place} ${label}`}>
-            <dt>{label}</dt>
-            <dd className={value.length <= LONGEST_ON_ONE_LINE ? styles.short : undefined}>{value}</dd>
-            {before && <Before line={lines[place]} before={before} />}
-            {note && <dd className={styles.note}>{note}</dd>}
-          </div>
-        ))}
-      </dl>
+      <h2>{title}</h2>
+      {shown.length > 0 && <Lines lines={shown} before={before} />}
+      {more.length > 0 && (
+        <details className={styles.method}>
+          <summary>{shown.length > 0 ? `${more.length} more` : `${more.length} answers`}</summary>
+          <Lines lines={more} before={before} />
+        </details>
+      )}
     </section>
+  );
+}
+
+function Lines({ lines, before }: NumbersProps): ReactElement {
+  return (
+    <dl className={styles.numbers}>
+      {lines.map((line, place) => (
+        <div key={`${place} ${line.label}`}>
+          <dt>{line.label}</dt>
+          <dd className={line.value.length <= LONGEST_ON_ONE_LINE ? styles.short : undefined}>
+            {line.share !== undefined && (
+              <meter className={styles.share} aria-hidden="true" min={0} max={1} value={line.share} />
+            )}
+            {line.value}
+          </dd>
+          {before && <Before line={line} before={before} />}
+          {line.note && <dd className={styles.note}>{line.note}</dd>}
+        </div>
+      ))}
+    </dl>
   );
 }
 
@@ -33,11 +69,11 @@ function Before({
   line,
   before,
 }: {
-  readonly line: NumberLine | undefined;
+  readonly line: NumberLine;
   readonly before: readonly NumberLine[];
 }): ReactElement | null {
-  const was = before.find((other) => other.label === line?.label && other.note === line.note);
-  const other = was ?? before.find(({ label }) => label === line?.label);
-  if (line === undefined || other?.value === line.value) return null;
+  const was = before.find((other) => other.label === line.label && other.note === line.note);
+  const other = was ?? before.find(({ label }) => label === line.label);
+  if (other?.value === line.value) return null;
   return <dd className={styles.before}>{other === undefined ? "was not told" : `was ${other.value}`}</dd>;
 }

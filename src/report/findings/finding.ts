@@ -8,6 +8,12 @@ export interface NumberLine {
   readonly label: string;
   readonly value: string;
   readonly note?: string;
+  /** The heading that lines of one kind stand under; default Numbers. */
+  readonly group?: string;
+  /** From 0 to 1, for a bar beside it. */
+  readonly share?: number;
+  /** Folded away until asked for. */
+  readonly isMore?: boolean;
 }
 
 export interface Weakness {

@@ -1,4 +1,4 @@
-import type { ReactElement } from "react";
+import { Fragment, type ReactElement } from "react";
 import type { Finding } from "../findings/finding.ts";
 import { Sentence } from "./words.tsx";
 
@@ -22,12 +22,21 @@ export function FindingNotes({ finding }: { readonly finding: Finding }): ReactE
       {numbers.length > 0 && (
         <table className="numbers">
           <tbody>
-            {numbers.map(({ label, value, note }, i) => (
-              <tr key={`${i}`}>
-                <th scope="row">{label}</th>
-                <td>{value}</td>
-                <td className="note">{note}</td>
-              </tr>
+            {numbers.map(({ group, label, value, note }, i) => (
+              <Fragment key={`${i}`}>
+                {group !== undefined && group !== numbers[i - 1]?.group && (
+                  <tr>
+                    <th colSpan={3} scope="colgroup" className="group-of-numbers">
+                      {group}
+                    </th>
+                  </tr>
+                )}
+                <tr>
+                  <th scope="row">{label}</th>
+                  <td>{value}</td>
+                  <td className="note">{note}</td>
+                </tr>
+              </Fragment>
             ))}
           </tbody>
         </table>

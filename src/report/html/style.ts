@@ -17,6 +17,7 @@ table{border-collapse:collapse;width:100%;max-width:1124px;font-size:13px;font-v
 th,td{text-align:left;vertical-align:top;padding:4px 12px 4px 0;border-bottom:1px solid var(--hair)}
 th{font-weight:600}
 .numbers th{font-weight:400}
+.numbers .group-of-numbers{padding-top:12px;font-weight:600;color:var(--soft)}
 .note,.assumes{color:var(--soft)}
 .cell{overflow-wrap:anywhere;max-width:18em}
 .weaknesses{list-style:none;margin:0;padding:0;max-width:62em}

@@ -3,6 +3,7 @@ import type { Flag, RefersTo } from "../../core/markers/result.ts";
 import type { Study } from "../../core/study/model.ts";
 import type { Weakness } from "../findings/finding.ts";
 import { inMetres, metres, offset, percent, pValue, significant } from "./numbers.ts";
+import { scenarioPhrase, variantWords } from "./scenarios.ts";
 import { name, plural, say, strong, type Words } from "./words.ts";
 
 /** What a caution's sentence may draw on. */
@@ -134,17 +135,41 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
   "timing-window-widened": ({ n }) =>
     say`timing.window does not span the last finds and was widened to ${metres(n("lowM"))} to ${metres(n("highM"))} m of height.`,
   "scenario-order-changes": ({ text }) =>
-    say`Which scenario comes first turns on what is taken for granted: ${text("best")} as declared, another under ${text("changes")}.`,
+    say`${strong("Which scenario comes first turns on what is taken for granted")}: as declared ${scenarioPhrase(text("best"))}, otherwise ${changesWords(text("changes"))}.`,
   "scenario-pulses-too-near": ({ n }) =>
     say`Pulses nearer than about ${inMetres(n("limitM"))} cannot be told apart by such data; two would lie ${inMetres(n("medianM"))} apart.`,
   "scenario-mass-at-edge": ({ n }) =>
     say`${percent(n("mass"))} of the probability of the one level lies at the top of timing.window: the window decides the answer.`,
   "scenario-leans-on-recovery": ({ text, n }) =>
-    say`Finds thin out upward (${pValue(n("p"))}): the comparison of scenarios, with ${text("best")} first, leans on constant recovery.`,
+    say`Finds thin out upward (${pValue(n("p"))}): the comparison of scenarios, with ${scenarioPhrase(text("best"))} first, leans on constant recovery.`,
   "scenario-horizon-favoured": ({ n }) =>
     say`One level at a horizon comes first also because its level is given: with levels free, two pulses against one stand at ${significant(n("ratio"), 2)} to 1, and an earlier pulse beside one at the horizon is ${strong("not excluded")}.`,
   "scenario-level-mixed": ({ text, n }) =>
     say`Sediment is mixed over about ${inMetres(n("lengthM"))} at ${text("horizon")}: elsewhere last finds, and a level or pulse that rests on them, may lie several times that above where taxa ended.`,
+  "joint-horizon-not-shared": () =>
+    say`The sections are not answered together: declare their main horizons one in boundary.same.`,
+  "joint-sections-left-out": ({ text, n }) =>
+    say`${text("names")} ${n("sections") === 1 ? "is" : "are"} left out of what is said of the sections together: ${leftOutFor(text("scale"), text("horizon"))}.`,
+  "joint-window-widened": ({ text }) =>
+    say`timing.window does not span the last finds of ${text("names")}: where the sections are taken together it is wider than declared.`,
+  "joint-sections-differ": ({ n }) =>
+    say`One distance from the horizon in all sections is ${strong("rejected")} (${pValue(n("p"))}): what is said of them together holds only if it is accepted all the same.`,
+  "joint-sections-likely-differ": ({ n }) =>
+    say`A level of its own in every section is the likelier (${percent(n("free"))}): what is said of them together holds only if they share one all the same.`,
+  "joint-between-samples": ({ text, n }) =>
+    say`Taxa were looked for in samples alone: by the horizons searched the common level is ${offset(n("low"))} to ${offset(n("high"))}\u00a0${text("unit")}, beyond what finds that could lie anywhere allow.`,
+  "joint-recovery-declines": ({ text }) =>
+    say`${strong("Finds thin out upward")} in ${text("names")}: the level of all sections together is put too low.`,
+  "joint-one-level-rejected": ({ text }) =>
+    say`One level for all of these taxa is rejected in ${text("names")}, but taken for granted in what is said of the sections together.`,
+  "joint-turns-on-section": ({ text, n }) =>
+    say`The answer turns on ${text("without")}: without it the middle of what is likely lies at ${offset(n("median"))}\u00a0${text("unit")}.`,
+  "joint-mass-at-edge": ({ n }) =>
+    say`${percent(n("mass"))} of the probability of the level common to all sections lies at the top of timing.window: the window decides the answer.`,
+  "joint-survivors": ({ text, n }) =>
+    say`${plural(n("taxa"), "taxon lives", "taxa live")} on above the horizon in some section and never ${n("taxa") === 1 ? "enters" : "enter"} there: ${name(text("names"))}.`,
+  "joint-survive-elsewhere": ({ text, n }) =>
+    say`${plural(n("taxa"), "taxon that ends", "taxa that end")} in one section ${n("taxa") === 1 ? "lives" : "live"} on in another (${name(text("names"))}): ${n("taxa") === 1 ? "that end is" : "those ends are"} local.`,
   "timing-set-name-taken": ({ subject }) =>
     say`The declared set ${subject} has a reserved name and was not used.`,
   "timing-set-incomplete": ({ subject, n }) =>
@@ -157,6 +182,9 @@ export const wordedCautions: ReadonlySet<string> = new Set(Object.keys(wordings)
 /** Facts to know, told as notes; every other caution is a warning: it can change the answer. */
 const notes: ReadonlySet<string> = new Set([
   "horizon-twice",
+  "joint-sections-left-out",
+  "joint-survivors",
+  "joint-window-widened",
   "main-horizon-found",
   "profile-too-short",
   "range-base-above-finds",
@@ -197,6 +225,18 @@ function cautionWords(caution: Caution, study: Study): Words {
   };
   return wordings[caution.code]?.(told) ?? say`${caution.code}`;
 }
+
+function leftOutFor(scale: string, horizon: string): string {
+  if (scale === "common") return "not on the common scale";
+  return scale === "time" ? `no ${horizon}, or no rate in timing.rates` : `no ${horizon} placed`;
+}
+
+/** `equal (gradual), confined (single)` as a person reads it. */
+const changesWords = (changes: string): string =>
+  changes.replaceAll(
+    /([a-z-]+) \(([^)]+)\)/g,
+    (_, variant: string, best: string) => `${scenarioPhrase(best)} with ${variantWords(variant)}`,
+  );
 
 function givenNames({ n, text }: Told): string {
   return Array.from({ length: n("count") }, (_, i) => text(`name${i + 1}`)).join(", ");
