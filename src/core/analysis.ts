@@ -47,6 +47,6 @@ export function analyseFrom(markers: Markers, study: Study, progress: Progress =
   const finds = markBelowCeiling(settled.finds, candidates, boundaries);
   const ranges = estimateRanges(study, { taxa, candidates, markers }, progress);
   const untrimmed = settled.taxa;
-  const timing = answerTiming(study, { taxa, candidates, markers, ranges, untrimmed }, progress);
+  const timing = answerTiming(study, { taxa, candidates, markers, ranges, untrimmed, alignment }, progress);
   return { study, markers, alignment, finds, taxa, candidates, ranges, timing };
 }

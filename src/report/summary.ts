@@ -9,7 +9,7 @@ export interface SummaryPart {
   readonly warnings: readonly string[];
 }
 
-/** The result as a person would tell it: the study, the fence, then each section. */
+/** The result as a person would tell it: the study, the fence, all sections together, then each. */
 export function summary(analysis: Analysis): readonly SummaryPart[] {
   const all = findings(analysis).filter((finding) => !finding.set?.startsWith("group:"));
   const part = (heading: string, chosen: typeof all): SummaryPart => ({
@@ -19,15 +19,17 @@ export function summary(analysis: Analysis): readonly SummaryPart[] {
       ...new Set(
         chosen.flatMap((finding) =>
           finding.weaknesses
-            .filter(({ severity, code }) => severity === "warning" || code === "timing-survivors")
+            .filter(({ severity, code }) => severity === "warning" || code?.endsWith("-survivors"))
             .map((weakness) => plain(weakness.words)),
         ),
       ),
     ],
   });
   const whole = all.filter((finding) => finding.section === undefined);
+  const together = all.filter((finding) => finding.section === "joint");
   return [
     part(analysis.study.name, whole),
+    ...(together.length > 0 ? [part("All sections together", together)] : []),
     ...analysis.study.sections.map((section) =>
       part(
         section.title,

@@ -231,6 +231,27 @@ export const settingsSchema = v.strictObject({
         v.optional(v.record(v.string(), v.pipe(v.number(), v.minValue(0))), {}),
         "prior weight of each candidate horizon in among-horizons; equal where empty",
       ),
+      jointScale: says(
+        v.optional(v.picklist(["from-horizon", "common", "time"]), "from-horizon"),
+        "scale on which sections are answered together: metres from each horizon, the common scale of the lined-up sections, or ka from each horizon by timing.rates",
+      ),
+      sharedError: says(
+        v.optional(v.pipe(v.number(), v.finite(), v.minValue(0)), 0),
+        "one standard deviation of an error that the picks of all sections share, in the unit of timing.jointScale",
+      ),
+      rates: says(
+        v.optional(
+          v.record(
+            v.string(),
+            v.strictObject({
+              rate: v.pipe(v.number(), v.finite(), v.gtValue(0)),
+              spread: v.optional(v.pipe(v.number(), v.finite(), v.minValue(0)), 0),
+            }),
+          ),
+          {},
+        ),
+        "by section its rate of accumulation, m per ka, and the standard deviation of the rate's logarithm",
+      ),
       contamination: says(
         v.optional(v.pipe(v.number(), v.minValue(0), v.ltValue(1)), 0),
         "chance that one find of a taxon is out of place",

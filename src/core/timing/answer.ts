@@ -4,6 +4,7 @@ import { timingBasis } from "./basis.ts";
 import { besideCautions, comparedCautions, setCaseCautions, topCautions } from "./cautions.ts";
 import { lastFindsCurve } from "./last-finds-curve.ts";
 import { levelCurve } from "./level-curve.ts";
+import { jointAnswers } from "./pooled/joint-answers.ts";
 import { DECLINE_GATE, pooledCentroid } from "./recovery-answers.ts";
 import type { LevelCurve, Timing, TimingAnswer } from "./result.ts";
 import { type ScenarioAnswers, scenarioAnswers } from "./scenarios/answers.ts";
@@ -24,17 +25,26 @@ export function answerTiming(study: Study, input: TimingInput, progress?: Progre
     progress?.(`timing: ${section.name}`, index, study.sections.length);
     return answerSection(section, study, { ...input, progress });
   });
+  const joint = jointAnswers(
+    answered.flatMap((a) => a.cases),
+    study,
+    { ...input, progress },
+  );
   return {
-    sets: answered.flatMap((a) => a.cases.map(({ set: { ranges: _ranges, ...set } }) => set)),
-    answers: answered.flatMap((a) => [...a.answers, ...a.compared.answers]),
+    sets: [
+      ...answered.flatMap((a) => a.cases.map(({ set: { ranges: _ranges, ...set } }) => set)),
+      ...joint.sets,
+    ],
+    answers: [...answered.flatMap((a) => [...a.answers, ...a.compared.answers]), ...joint.answers],
     curves: answered.flatMap((a) => a.curves),
-    scenarios: answered.flatMap((a) => a.compared.scenarios),
-    offsets: answered.flatMap((a) => a.compared.offsets),
+    scenarios: [...answered.flatMap((a) => a.compared.scenarios), ...joint.scenarios],
+    offsets: [...answered.flatMap((a) => a.compared.offsets), ...joint.offsets],
     membership: answered.flatMap((a) => a.compared.membership),
-    densities: answered.flatMap((a) => a.compared.densities),
+    densities: [...answered.flatMap((a) => a.compared.densities), ...joint.densities],
+    leftOut: joint.leftOut,
     lastFinds: answered.flatMap((a) => a.lastFinds),
     distrusted: answered.flatMap((a) => a.distrusted),
-    cautions: answered.flatMap((a) => [...a.cautions, ...a.compared.cautions]),
+    cautions: [...answered.flatMap((a) => [...a.cautions, ...a.compared.cautions]), ...joint.cautions],
     basis: timingBasis,
   };
 }

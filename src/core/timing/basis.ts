@@ -1,6 +1,7 @@
 import type { Basis, Source } from "../basis.ts";
 import { assemblageBasis } from "./basis-assemblage.ts";
 import { checkBasis } from "./basis-checks.ts";
+import { pooledBasis } from "./pooled/basis.ts";
 import { scenarioBasis } from "./scenarios/basis.ts";
 
 const solow1996: Source = {
@@ -94,4 +95,5 @@ export const timingBasis: readonly Basis[] = [
   ...assemblageBasis,
   ...checkBasis,
   ...scenarioBasis,
+  ...pooledBasis,
 ];

@@ -17,6 +17,10 @@ export type TimingMethod =
   | "common-end-joint"
   | "half-intervals"
   | "two-highest"
+  | "pooled-offset"
+  | "pooled-offset-densest"
+  | "pooled-offset-sampled"
+  | "pooled-offset-without"
   | "confidence-levels"
   | "combined"
   | "duration-lower"
@@ -35,7 +39,10 @@ export type TimingMethod =
   | "shift"
   | "highest-find";
 
-/** One answer about an assemblage: a row of timing.csv. `section` may be "joint". Levels are metres of height. */
+/**
+ * One answer about an assemblage: a row of timing.csv. Levels are metres of height; where `section` is "joint", levels of
+ * the common scale from `horizon`.
+ */
 export interface TimingAnswer {
   readonly section: string;
   readonly set: string;
@@ -55,7 +62,7 @@ export interface TimingAnswer {
   readonly level?: number;
   readonly low?: number;
   readonly high?: number;
-  readonly unit?: "m";
+  readonly unit?: "m" | "ka";
   readonly mcError?: number;
   readonly outcome: Outcome;
   readonly note: string;
@@ -129,7 +136,23 @@ export interface Influence {
   readonly p?: number;
 }
 
-/** Posterior density of a level of one scenario along the height of a section, per metre. */
+/** The level common to all sections when one of them is left out, from one horizon. */
+export interface LeftOut {
+  readonly set: string;
+  readonly without: string;
+  readonly horizon: string;
+  readonly median: number;
+  readonly low: number;
+  readonly high: number;
+  readonly level: number;
+  readonly unit: "m" | "ka";
+  readonly probabilityAfter: number;
+}
+
+/**
+ * Posterior density of a level of one scenario along the height of a section, per metre; where `section` is "joint",
+ * along the common scale, from the main horizon.
+ */
 export interface ScenarioDensity {
   readonly section: string;
   readonly set: string;
@@ -176,6 +199,8 @@ export interface Timing {
   readonly offsets: readonly Offset[];
   readonly membership: readonly Membership[];
   readonly densities: readonly ScenarioDensity[];
+  /** Of the sections answered together, by section left out. */
+  readonly leftOut: readonly LeftOut[];
   readonly lastFinds: readonly LastFindsPoint[];
   /** Sets whose own pooled centroid pre-check says that recovery declines upward (p < 0.1). */
   readonly distrusted: readonly { readonly section: string; readonly set: string }[];

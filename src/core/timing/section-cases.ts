@@ -1,3 +1,4 @@
+import type { Alignment } from "../alignment/result.ts";
 import type { MarkerHorizon, Markers } from "../markers/result.ts";
 import { sectionBase } from "../ranges/base.ts";
 import { recoveryCoordinate } from "../ranges/coordinate.ts";
@@ -17,6 +18,8 @@ export interface TimingInput {
   readonly candidates: readonly Candidate[];
   readonly markers: Markers;
   readonly ranges?: Ranges;
+  /** The sections lined up; without it they are not answered together on the common scale. */
+  readonly alignment?: Alignment;
   /** The taxa before finds below a reworking ceiling were taken out; without them nothing is compared. */
   readonly untrimmed?: readonly LocalTaxon[];
 }

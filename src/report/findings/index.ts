@@ -1,6 +1,7 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import { fenceFinding } from "./fence.ts";
 import type { Finding } from "./finding.ts";
+import { jointFindings } from "./joint.ts";
 import { markersFinding } from "./markers.ts";
 import { rangesFinding } from "./ranges.ts";
 import { tablesFinding } from "./tables.ts";
@@ -13,6 +14,7 @@ export function findings(analysis: Analysis): readonly Finding[] {
     tablesFinding(analysis),
     ...sections.map((section) => markersFinding(analysis, section)),
     fenceFinding(analysis),
+    ...jointFindings(analysis),
     ...sections.map((section) => rangesFinding(analysis, section)),
     ...sections.flatMap((section) =>
       analysis.timing.sets

@@ -64,6 +64,10 @@ const lines: Readonly<Record<TimingMethod, Line>> = {
     "Levels from the two highest finds alone",
     ({ note }) => note.match(/tail [^;]*/)?.[0] ?? "",
   ),
+  "pooled-offset": (answer) => ({ label: "The level common to sections", ...metresRange(answer) }),
+  "pooled-offset-densest": (answer) => ({ label: "The densest such levels", ...metresRange(answer) }),
+  "pooled-offset-sampled": (answer) => ({ label: "The same by sampled horizons", ...metresRange(answer) }),
+  "pooled-offset-without": (answer) => ({ label: "The same without a section", ...metresRange(answer) }),
   "confidence-levels": atHorizon("exact Kolmogorov\u2011Smirnov"),
   combined: atHorizon("chances combined by Fisher"),
   "duration-lower": (answer) => ({

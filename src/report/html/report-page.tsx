@@ -25,13 +25,17 @@ export function ReportPage({ analysis, findings, plates, tables, fontFaces }: Re
   const { study } = analysis;
   const of = (station: Finding["station"], section?: string) =>
     findings.filter((finding) => finding.station === station && finding.section === section);
-  const titleOf = (name: string) => study.sections.find((section) => section.name === name)?.title ?? name;
+  const titleOf = (name: string) =>
+    name === "joint"
+      ? "All sections"
+      : (study.sections.find((section) => section.name === name)?.title ?? name);
   const drawn = (subject: PlateFile["subject"], section?: string, set?: string) =>
     plates
       .filter((plate) => plate.subject === subject && plate.section === section && plate.set === set)
       .map(({ drawing }) => drawing);
   const idOf = (name: string) =>
-    `section-${study.sections.findIndex((section) => section.name === name) + 1}`;
+    name === "joint" ? name : `section-${study.sections.findIndex((section) => section.name === name) + 1}`;
+  const together = of("timing", "joint");
   return (
     <html lang="en">
       <head>
@@ -47,13 +51,24 @@ export function ReportPage({ analysis, findings, plates, tables, fontFaces }: Re
             Local disappearance against marker horizons. Worked out by Lastbed {VERSION}, seed{" "}
             {study.settings.seed}; <code>repeat.json</code> beside this page repeats every number.
           </p>
-          <Contents sections={study.sections.map((section) => [idOf(section.name), section.title])} />
+          <Contents
+            sections={[
+              ...(together.length > 0 ? [["joint", "All sections together"] as const] : []),
+              ...study.sections.map((section) => [idOf(section.name), section.title] as const),
+            ]}
+          />
         </header>
         <main>
           <Block findings={of("tables")} />
           <InShort findings={findings} titleOf={titleOf} idOf={idOf} />
           <h2 id="fence">Sections lined up</h2>
           <Block findings={of("fence")} drawings={drawn("fence")} />
+          {together.length > 0 && (
+            <section className="of-section">
+              <h2 id="joint">All sections together</h2>
+              <TimingPart findings={together} plateOf={() => []} />
+            </section>
+          )}
           {study.sections.map((section) => (
             <section key={section.name} className="of-section">
               <h2 id={idOf(section.name)}>{section.title}</h2>

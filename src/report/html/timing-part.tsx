@@ -46,7 +46,7 @@ const isOfGroup = ({ set }: Finding) => set !== undefined && isGroupSet(set);
 /** The survivors of a section are the same for every set: told once, at the first. */
 const withoutSurvivors = (finding: Finding): Finding => ({
   ...finding,
-  weaknesses: finding.weaknesses.filter(({ code }) => code !== "timing-survivors"),
+  weaknesses: finding.weaknesses.filter(({ code }) => !code?.endsWith("-survivors")),
 });
 
 interface InShortProps {

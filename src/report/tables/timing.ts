@@ -21,7 +21,11 @@ export const timingTable = declare({
     number("level", "level of the interval", (t) => t.level),
     number("low", "lower end", (t) => t.low),
     number("high", "upper end", (t) => t.high),
-    text("unit", "unit of estimate, low and high; levels are stratigraphic heights", (t) => t.unit),
+    text(
+      "unit",
+      "unit of estimate, low and high; levels are stratigraphic heights, of joint rows counted from the horizon",
+      (t) => t.unit,
+    ),
     number("mc_error", "Monte Carlo standard error", (t) => t.mcError),
     text("outcome", "closed, open, empty, undefined or not-applicable", (t) => t.outcome),
     text("note", "note", (t) => t.note),
