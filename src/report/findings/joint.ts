@@ -5,7 +5,7 @@ import { weaknessOf } from "../wordings/cautions.ts";
 import { metres, offset, offsetInterval, percent, probability, pValue } from "../wordings/numbers.ts";
 import { plural, say, strong, type Words } from "../wordings/words.ts";
 import type { Finding, NumberLine } from "./finding.ts";
-import { taxaOf } from "./timing.ts";
+import { taxaOf } from "./taxa-of.ts";
 
 /** The section of a finding about all sections together. */
 const JOINT = "joint";

@@ -170,30 +170,6 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${plural(n("taxa"), "taxon lives", "taxa live")} on above the horizon in some section and never ${n("taxa") === 1 ? "enters" : "enter"} there: ${name(text("names"))}.`,
   "joint-survive-elsewhere": ({ text, n }) =>
     say`${plural(n("taxa"), "taxon that ends", "taxa that end")} in one section ${n("taxa") === 1 ? "lives" : "live"} on in another (${name(text("names"))}): ${n("taxa") === 1 ? "that end is" : "those ends are"} local.`,
-  "joint-horizon-not-shared": () =>
-    say`The sections are not answered together: declare their main horizons one in boundary.same.`,
-  "joint-sections-left-out": ({ text, n }) =>
-    say`${text("names")} ${n("sections") === 1 ? "is" : "are"} left out of what is said of the sections together: ${leftOutFor(text("scale"), text("horizon"))}.`,
-  "joint-window-widened": ({ text }) =>
-    say`timing.window does not span the last finds of ${text("names")}: where the sections are taken together it is wider than declared.`,
-  "joint-sections-differ": ({ n }) =>
-    say`One distance from the horizon in all sections is ${strong("rejected")} (${pValue(n("p"))}): what is said of them together holds only if it is accepted all the same.`,
-  "joint-sections-likely-differ": ({ n }) =>
-    say`A level of its own in every section is the likelier (${percent(n("free"))}): what is said of them together holds only if they share one all the same.`,
-  "joint-between-samples": ({ text, n }) =>
-    say`Taxa were looked for in samples alone: by the horizons searched the common level is ${offset(n("low"))} to ${offset(n("high"))}\u00a0${text("unit")}, beyond what finds that could lie anywhere allow.`,
-  "joint-recovery-declines": ({ text }) =>
-    say`${strong("Finds thin out upward")} in ${text("names")}: the level of all sections together is put too low.`,
-  "joint-one-level-rejected": ({ text }) =>
-    say`One level for all of these taxa is rejected in ${text("names")}, but taken for granted in what is said of the sections together.`,
-  "joint-turns-on-section": ({ text, n }) =>
-    say`The answer turns on ${text("without")}: without it the middle of what is likely lies at ${offset(n("median"))}\u00a0${text("unit")}.`,
-  "joint-mass-at-edge": ({ n }) =>
-    say`${percent(n("mass"))} of the probability of the level common to all sections lies at the top of timing.window: the window decides the answer.`,
-  "joint-survivors": ({ text, n }) =>
-    say`${plural(n("taxa"), "taxon lives", "taxa live")} on above the horizon in some section and never ${n("taxa") === 1 ? "enters" : "enter"} there: ${name(text("names"))}.`,
-  "joint-survive-elsewhere": ({ text, n }) =>
-    say`${plural(n("taxa"), "taxon that ends", "taxa that end")} in one section ${n("taxa") === 1 ? "lives" : "live"} on in another (${name(text("names"))}): ${n("taxa") === 1 ? "that end is" : "those ends are"} local.`,
   "timing-set-name-taken": ({ subject }) =>
     say`The declared set ${subject} has a reserved name and was not used.`,
   "timing-set-incomplete": ({ subject, n }) =>
@@ -249,18 +225,6 @@ function cautionWords(caution: Caution, study: Study): Words {
   };
   return wordings[caution.code]?.(told) ?? say`${caution.code}`;
 }
-
-function leftOutFor(scale: string, horizon: string): string {
-  if (scale === "common") return "not on the common scale";
-  return scale === "time" ? `no ${horizon}, or no rate in timing.rates` : `no ${horizon} placed`;
-}
-
-/** `equal (gradual), confined (single)` as a person reads it. */
-const changesWords = (changes: string): string =>
-  changes.replaceAll(
-    /([a-z-]+) \(([^)]+)\)/g,
-    (_, variant: string, best: string) => `${scenarioPhrase(best)} with ${variantWords(variant)}`,
-  );
 
 function leftOutFor(scale: string, horizon: string): string {
   if (scale === "common") return "not on the common scale";
