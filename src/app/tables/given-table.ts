@@ -34,7 +34,7 @@ export interface LeftOut {
 
 export type LeavingSheet = TableForm & Pick<Sheet, "rowNumbers">;
 
-const LEAVING = new Set(["too-many-cells", "malformed-quote"]);
+const LEAVING = new Set(["too-many-cells", "malformed-quote", "unclosed-quote"]);
 
 /** The sheets that left rows out, as far as looking for these rows needs them. */
 export const leavingSheets = (
@@ -157,7 +157,7 @@ export function givenTable(
     for (; next < unread.length && unread[next].row < row; next++) merged.push(unread[next]);
     merged.push({ row, cells: rows[place] });
   }
-  merged.push(...unread.slice(next));
+  for (const row of unread.slice(next)) merged.push(row);
   return {
     ...own,
     rows: merged.map(({ cells }) => cells),

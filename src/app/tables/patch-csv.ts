@@ -79,7 +79,7 @@ const written = (cell: string, delimiter: string): string =>
 export const unquoted = (cell: string): string =>
   isQuoted.test(cell) ? cell.trimEnd().slice(1, -1).replaceAll('""', '"') : cell;
 
-const isQuoted = /^"(?:[^"]|"")*" *$/;
+const isQuoted = /^"(?:[^"]|"")*"\s*$/;
 
 /** A cell that begins with a quote and is not closed as it should be. */
 export const isMalformed = (cell: string): boolean => cell.startsWith('"') && !isQuoted.test(cell);
@@ -126,25 +126,14 @@ export function rowAt(text: string, from: number, delimiter: string): CsvRow {
 
 function cellEnd(text: string, start: number, delimiter: string): number {
   // A quote that nothing closes is a sign like any other.
-  let at = text[start] === '"' ? (closingQuote(text, start + 1, delimiter) ?? start) : start;
+  let at = text[start] === '"' ? (behindClosingQuote(text, start + 1) ?? start) : start;
   while (at < text.length && text[at] !== delimiter && text[at] !== "\n" && text[at] !== "\r") at += 1;
   return at;
 }
 
-/** The quote that ends a cell stands, spaces aside, before what parts cells or rows. */
-function closingQuote(text: string, from: number, delimiter: string): number | undefined {
-  let at = from;
-  for (;;) {
-    at = text.indexOf('"', at);
-    if (at < 0) return undefined;
-    if (text[at + 1] === '"') {
-      at += 2;
-      continue;
-    }
-    let after = at + 1;
-    while (text[after] === " ") after += 1;
-    const sign = text[after];
-    if (sign === undefined || sign === delimiter || sign === "\n" || sign === "\r") return after;
-    at += 1;
-  }
+/** Where a cell goes on behind its closing quote; text that stands there belongs to it. */
+function behindClosingQuote(text: string, from: number): number | undefined {
+  let at = text.indexOf('"', from);
+  while (at >= 0 && text[at + 1] === '"') at = text.indexOf('"', at + 2);
+  return at < 0 ? undefined : at + 1;
 }

@@ -1,5 +1,6 @@
 import Papa from "papaparse";
 import { takeOffApostrophe } from "./apostrophes.ts";
+import { type CsvFault, recordsWithOddQuotes } from "./odd-quotes.ts";
 
 /** A row that holds something: cells as written, with the row number a spreadsheet shows. */
 export interface CsvRecord {
@@ -18,11 +19,6 @@ export interface CsvWriting {
   readonly delimiter?: string;
   /** The sign around cells; a double quote where absent. */
   readonly quote?: string;
-}
-
-interface CsvFault {
-  readonly code: "unclosed-quote" | "malformed-quote";
-  readonly row: number;
 }
 
 /** Text of UTF-8 bytes without byte-order mark, or undefined where the bytes are not UTF-8 text. */
@@ -63,7 +59,7 @@ function plainLineEnds(text: string, { delimiter, quote }: Required<CsvWriting>)
 
 const isBlank = (record: readonly string[]): boolean => record.every((cell) => cell.trim() === "");
 
-/** Parts delimited text into records. */
+/** Parts delimited text into records; where quotes are not as they should be, row by row. */
 export function parseRecords(text: string, { delimiter = ",", quote = '"' }: CsvWriting = {}): CsvRecords {
   const { data, errors } = Papa.parse(plainLineEnds(text, { delimiter, quote }), {
     delimiter,
@@ -72,16 +68,14 @@ export function parseRecords(text: string, { delimiter = ",", quote = '"' }: Csv
     newline: "\n",
     skipEmptyLines: false,
   });
-  const faults = errors
-    .filter(({ type }) => type === "Quotes")
-    .map(({ code, row }) => ({
-      code: code === "MissingQuotes" ? ("unclosed-quote" as const) : ("malformed-quote" as const),
-      row: (row ?? 0) + 1,
-    }));
+  if (errors.some(({ type }) => type === "Quotes")) {
+    const { records, faults } = recordsWithOddQuotes(text, { delimiter, quote });
+    return { records: records.filter(({ cells }) => !isBlank(cells)), faults };
+  }
   const records = data
     .map((cells, index) => ({ cells, row: index + 1 }))
     .filter(({ cells }) => !isBlank(cells));
-  return { records, faults };
+  return { records, faults: [] };
 }
 
 interface WrittenTable {

@@ -6,12 +6,12 @@ import { type EncodingChoice, encodingsOf } from "./dialect/encoding.ts";
 import { type FoundHeader, findHeader, HEADER_REACH } from "./dialect/header.ts";
 import { headText, NotText, type PlainBytes, plainBytes } from "./plain-bytes.ts";
 import type { SheetSource } from "./read-sheet.ts";
-import { scanCells } from "./scan-cells.ts";
+import { type QuoteFault, scanCells } from "./scan-cells.ts";
 
 /** A row that has not as many cells as the header, or a quote where none belongs. */
 export interface OddRow {
   readonly index: number;
-  readonly kind: "short" | "overfull" | "malformed";
+  readonly kind: "short" | "overfull" | "malformed" | "unclosed";
   readonly cells: number;
   /** What stands there; of a short row nothing. */
   readonly written: readonly string[];
@@ -33,8 +33,7 @@ export interface PartedTable extends EncodingChoice {
 export type PartFault =
   | { readonly kind: "not-text" }
   | { readonly kind: "empty" }
-  | { readonly kind: "too-wide"; readonly columns: number }
-  | { readonly kind: "unclosed-quote"; readonly row: number };
+  | { readonly kind: "too-wide"; readonly columns: number };
 
 interface Parting {
   readonly plain: PlainBytes;
@@ -76,20 +75,19 @@ function partPlain(parting: Parting): PartedTable | PartFault {
     skip: header.below,
     decode: plain.decode,
   });
-  if (scanned === undefined) return partWhole(delimiter, parting);
   const writtenAt = (from: number, to: number) =>
     parseRecords(plain.decode(plain.bytes.subarray(from, to)), { delimiter, quote }).records[0]?.cells ?? [];
   const odd = scanned.uneven.map(
-    ({ index, cells, isOverfull, from, to }): OddRow =>
-      isOverfull
-        ? { index, kind: "overfull", cells, written: writtenAt(from, to) }
+    ({ index, cells, isOverfull, quotes, from, to }): OddRow =>
+      isOverfull || quotes !== undefined
+        ? { index, kind: quotes ?? "overfull", cells, written: writtenAt(from, to) }
         : { index, kind: "short", cells, written: [] },
   );
   const { columns: cells, rows } = scanned;
   return { kind: "parted", ...parting.choice, delimiter, head, header, columns: cells, rows, odd };
 }
 
-/** Reads the whole text at once, record by record: for what `scanCells` cannot read, and to tell what is wrong with it. */
+/** Reads the whole text at once, record by record: where the header does not stand in its beginning. */
 function partWhole(
   delimiter: Delimiter,
   { plain, choice, source, mostColumns }: Parting,
@@ -97,13 +95,13 @@ function partWhole(
   const read = parseRecords(plain.decode(plain.bytes), { delimiter, quote: source.declared.quote });
   const { records, faults } = read;
   if (records.length === 0) return { kind: "empty" };
-  const unclosed = faults.find(({ code }) => code === "unclosed-quote");
-  if (unclosed !== undefined) return { kind: "unclosed-quote", row: unclosed.row };
   const header = headerOf(records, source);
   const width = header.headers.length;
   if (width > mostColumns) return { kind: "too-wide", columns: width };
   const below = records.slice(header.below);
-  const malformed = new Set(faults.map(({ row }) => row));
+  const byRow = new Map(
+    faults.map(({ row, code }) => [row, code === "unclosed-quote" ? "unclosed" : "malformed"] as const),
+  );
   return {
     kind: "parted",
     ...choice,
@@ -112,22 +110,16 @@ function partWhole(
     header,
     columns: header.headers.map((_, column) => encode(below.map(({ cells }) => cells[column] ?? ""))),
     rows: Int32Array.from(below, ({ row }) => row),
-    odd: below.flatMap(({ cells, row }, index) =>
-      oddRow(cells, { index, width, isMalformed: malformed.has(row) }),
-    ),
+    odd: below.flatMap(({ cells, row }, index) => oddRow(cells, { index, width, quotes: byRow.get(row) })),
   };
 }
 
 function oddRow(
   written: readonly string[],
-  {
-    index,
-    width,
-    isMalformed,
-  }: { readonly index: number; readonly width: number; readonly isMalformed: boolean },
+  { index, width, quotes }: { readonly index: number; readonly width: number; readonly quotes: QuoteFault },
 ): readonly OddRow[] {
   const cells = written.length;
-  if (isMalformed) return [{ index, kind: "malformed", cells, written }];
+  if (quotes !== undefined) return [{ index, kind: quotes, cells, written }];
   if (written.slice(width).some((cell) => cell.trim() !== ""))
     return [{ index, kind: "overfull", cells, written }];
   return cells < width ? [{ index, kind: "short", cells, written: [] }] : [];

@@ -81,8 +81,6 @@ function tellUnparted(fault: PartedTable | PartFault, { file, problems }: SheetS
         found: `${fault.columns} columns`,
         detail: String(MOST_COLUMNS),
       });
-    case "unclosed-quote":
-      return problems.add("unclosed-quote", { file, row: fault.row, found: '"' });
     case "parted":
       return problems.add("header-only", { file, found: "a header row alone" });
     default:
@@ -162,7 +160,8 @@ function isLeftOut(
   { width, source: { file, problems } }: { readonly width: number; readonly source: SheetSource },
 ): boolean {
   const detail = String(width);
-  if (kind === "malformed") problems.add("malformed-quote", { file, row, found: written.join(",") });
+  if (kind === "unclosed") problems.add("unclosed-quote", { file, row, found: written.join(",") });
+  else if (kind === "malformed") problems.add("malformed-quote", { file, row, found: written.join(",") });
   else if (kind === "overfull")
     problems.add("too-many-cells", { file, row, found: `${cells} cells: ${written.join(",")}`, detail });
   else if (cells < width) problems.add("too-few-cells", { file, row, found: `${cells} cells`, detail });

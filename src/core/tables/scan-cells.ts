@@ -3,7 +3,6 @@ import {
   addCode,
   type ColumnScan,
   columnScan,
-  contentOf,
   endIfRepeated,
   finished,
   hashStep,
@@ -25,7 +24,7 @@ export interface Scanning {
   readonly decode: (bytes: Uint8Array) => string;
 }
 
-/** The cells of a table, column by column, and the rows that have another number of cells. */
+/** The cells of a table, column by column, and the rows that have another number of cells or odd quotes. */
 export interface ScannedCells {
   readonly columns: readonly Coded<string>[];
   /** The row numbers that a spreadsheet shows. */
@@ -33,11 +32,15 @@ export interface ScannedCells {
   readonly uneven: readonly UnevenRow[];
 }
 
+/** Text after a closing quote, or a quote that nothing closes. */
+export type QuoteFault = "malformed" | "unclosed" | undefined;
+
 interface UnevenRow {
   readonly index: number;
   readonly cells: number;
   /** True where a cell beyond the last column holds something. */
   readonly isOverfull: boolean;
+  readonly quotes: QuoteFault;
   /** Where it stands among the bytes. */
   readonly from: number;
   readonly to: number;
@@ -52,9 +55,10 @@ const SAMPLED_ROWS = 1000;
 /**
  * Reads every cell of a delimited text into coded columns, from bytes in which ASCII signs stand for themselves: one
  * pass, and a string for each distinct cell alone. Blank records are passed over, cells that a row lacks are blank.
- * Undefined where a quote stands where none belongs: that is for a reader that can tell what is wrong.
+ * A cell with text after its closing quote goes on to the next sign that parts cells; a quote that nothing closes is a
+ * sign like any other. Both stand as they are written, and their row is told.
  */
-export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells | undefined {
+export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells {
   const { width, skip, decode } = scanning;
   const record = recordScan(bytes, scanning);
   let columns = Array.from({ length: width }, columnScan);
@@ -64,17 +68,18 @@ export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells |
   let count = 0;
   for (let row = 1; record.at < bytes.length; row++) {
     const from = record.at;
-    if (!scanRecord(record, columns, count)) return undefined;
+    scanRecord(record, columns, count);
     if (!record.isFilled) continue;
     if (passed < skip) {
       passed += 1;
       columns = columns.map(columnScan);
       continue;
     }
-    const { cells, isOverfull, at: to } = record;
+    const { cells, isOverfull, quotes, at: to } = record;
     for (let column = cells; column < width; column++)
       addCode(columns[column], count, { bytes, piece: NOTHING });
-    if (cells < width || isOverfull) uneven.push({ index: count, cells, isOverfull, from, to });
+    if (cells < width || isOverfull || quotes !== undefined)
+      uneven.push({ index: count, cells, isOverfull, quotes, from, to });
     rows[count] = row;
     count += 1;
     if (count === rows.length) rows = widened(rows, columns, bytes.length / to);
@@ -101,6 +106,7 @@ const recordScan = (bytes: Uint8Array, { delimiter, quote, decode }: Scanning): 
   cells: 0,
   isFilled: false,
   isOverfull: false,
+  quotes: undefined,
 });
 
 /** Room for the rows that the rest of the bytes may hold, by what was read of them. */
@@ -126,23 +132,23 @@ interface RecordScan {
   cells: number;
   isFilled: boolean;
   isOverfull: boolean;
+  quotes: QuoteFault;
 }
 
-/** Reads one record into a row of the columns; false where a quote stands where none belongs. */
-function scanRecord(record: RecordScan, columns: readonly ColumnScan[], row: number): boolean {
+/** Reads one record into a row of the columns. */
+function scanRecord(record: RecordScan, columns: readonly ColumnScan[], row: number): void {
   const { bytes, delimiter, quote, piece, ends } = record;
   const end = bytes.length;
   record.isFilled = false;
   record.isOverfull = false;
+  record.quotes = undefined;
   let { at } = record;
   for (let column = 0; ; column++) {
     const scan = column < columns.length ? columns[column] : undefined;
     const isQuoted = at < end && bytes[at] === quote;
     const repeated = scan?.isSteady === true && !isQuoted ? endIfRepeated(scan, bytes, at) : -1;
     if (isQuoted) {
-      if (!takeQuoted(record, at)) return false;
-      at = piece.to + 1;
-      if (at < end && ends[bytes[at]] === 0) return false;
+      at = takeQuoted(record, at);
     } else if (scan !== undefined && repeated !== -1 && (repeated >= end || ends[bytes[repeated]] === 1)) {
       scan.codes[row] = scan.last;
       piece.from = at;
@@ -165,11 +171,10 @@ function scanRecord(record: RecordScan, columns: readonly ColumnScan[], row: num
   }
 }
 
-function endRecord(record: RecordScan, column: number, at: number): true {
+function endRecord(record: RecordScan, column: number, at: number): void {
   const { bytes } = record;
   record.cells = column + 1;
   record.at = bytes[at] === RETURN && bytes[at + 1] === LINE_FEED ? at + 2 : at + 1;
-  return true;
 }
 
 /** Finds the content of a cell without quotes, and where it ends. */
@@ -197,32 +202,59 @@ function noteVisible(record: RecordScan, column: ColumnScan | undefined): void {
 }
 
 /** True for a content that is more than white space. */
-function isVisible({ bytes, decode, piece }: RecordScan): boolean {
-  const { from, to } = piece;
+const isVisible = (record: RecordScan): boolean =>
+  isVisibleBetween(record, record.piece.from, record.piece.to);
+
+function isVisibleBetween({ bytes, decode }: RecordScan, from: number, to: number): boolean {
   let isAscii = true;
   for (let at = from; at < to; at++) {
     const byte = bytes[at];
     if (byte < 0x80 && byte !== 0x20 && (byte < 0x09 || byte > 0x0d)) return true;
     isAscii &&= byte < 0x80;
   }
-  return !isAscii && decode(contentOf(bytes, piece)).trim() !== "";
+  return !isAscii && decode(bytes.subarray(from, to)).trim() !== "";
 }
 
-/** Finds the content of a cell in quotes; false where its quote never closes. */
-function takeQuoted({ bytes, quote, piece }: RecordScan, start: number): boolean {
+/** Finds the content of a cell that begins with a quote, and where it ends. */
+function takeQuoted(record: RecordScan, start: number): number {
+  const { bytes, quote, ends, piece } = record;
+  const end = bytes.length;
   let hash = 0;
-  piece.doubled = NO_SIGN;
-  for (let at = start + 1; at < bytes.length; at++) {
+  let doubled = NO_SIGN;
+  for (let at = start + 1; at < end; at++) {
     const byte = bytes[at];
     if (byte === quote) {
       if (bytes[at + 1] !== quote) {
-        [piece.from, piece.to, piece.hash] = [start + 1, at, hash];
-        return true;
+        let after = at + 1;
+        while (after < end && ends[bytes[after]] === 0) after += 1;
+        if (after > at + 1 && isVisibleBetween(record, at + 1, after))
+          return takeOdd(record, { start, end: after });
+        piece.from = start + 1;
+        piece.to = at;
+        piece.hash = hash;
+        piece.doubled = doubled;
+        return after;
       }
-      piece.doubled = quote;
+      doubled = quote;
       at += 1;
     }
     hash = hashStep(hash, byte);
   }
-  return false;
+  return takeOdd(record, { start });
+}
+
+/** A cell whose quotes are not as they should be, as it is written; without an end, it ends as a cell without quotes. */
+function takeOdd(
+  record: RecordScan,
+  { start, end }: { readonly start: number; readonly end?: number },
+): number {
+  const { bytes, piece } = record;
+  record.quotes ??= end === undefined ? "unclosed" : "malformed";
+  if (end === undefined) return takePlain(record, start);
+  piece.from = start;
+  piece.to = end;
+  piece.doubled = NO_SIGN;
+  piece.hash = 0;
+  for (let at = start; at < end; at++) piece.hash = hashStep(piece.hash, bytes[at]);
+  return end;
 }

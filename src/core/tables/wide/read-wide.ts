@@ -8,7 +8,7 @@ import type { ColumnChoice } from "../../study/tables/declare.ts";
 import type { TableName } from "../../study/tables/index.ts";
 import { occurrences } from "../../study/tables/occurrences.ts";
 import { samples } from "../../study/tables/samples.ts";
-import { type CsvRecord, parseRecords } from "../csv.ts";
+import { type CsvRecord, type CsvRecords, parseRecords } from "../csv.ts";
 import { decimalSign } from "../dialect/decimal.ts";
 import { type DeclaredDialect, type TableSetting, tablePath } from "../dialect/declared.ts";
 import { decodeBytes } from "../dialect/encoding.ts";
@@ -74,7 +74,8 @@ export function readWide(source: WideSource): ReadonlyMap<TableName, ReadSheet> 
   const { file, bytes, declared, delimiter, problems, said } = source;
   const decoded = decodeBytes(bytes, declared.encoding);
   if (decoded === undefined) return undefined;
-  const { records } = parseRecords(decoded.text, { delimiter, quote: declared.quote });
+  const parsed = parseRecords(decoded.text, { delimiter, quote: declared.quote });
+  const records = withoutOddQuotes(parsed, source);
   if (records.some(({ cells }) => cells.length > MOST_COLUMNS)) return undefined;
   const shaped = wideShape(records, { chosen: source.chosen, shape: said?.shape });
   if (shaped === undefined) return undefined;
@@ -109,6 +110,16 @@ export function readWide(source: WideSource): ReadonlyMap<TableName, ReadSheet> 
   const shown = { ...shownSheet(shaped, dialect, file), wide, ...(section === undefined ? {} : { section }) };
   tellWide(shown, rows, source);
   return longTables(shown, rows, shaped);
+}
+
+/** The records whose quotes are as they should be; the others are told. */
+function withoutOddQuotes({ records, faults }: CsvRecords, { file, problems }: WideSource) {
+  const odd = new Map(faults.map(({ row, code }) => [row, code]));
+  return records.filter(({ row, cells }) => {
+    const code = odd.get(row);
+    if (code !== undefined) problems.add(code, { file, row, found: cells.join(",") });
+    return code === undefined;
+  });
 }
 
 function decimalOf({ grid, layout }: WideShape, source: WideSource): Dialect["decimal"] | undefined {

@@ -250,11 +250,6 @@ describe("an error on the file, the others go on", () => {
       "section;sample;position\nOrskel Ledge;A;1,234\n",
       "decimal-ambiguous",
     ],
-    [
-      "a quote that never closes",
-      'section,sample,position\nOrskel Ledge,"A,1\nOrskel Ledge,B,2\n',
-      "unclosed-quote",
-    ],
     ["a missing column", "section,position\nOrskel Ledge,1\n", "missing-column"],
     ["no position at all", "section,sample\nOrskel Ledge,A\n", "missing-column"],
     ["a doubled column", "section,sample,position,Position\nOrskel Ledge,A,1,2\n", "duplicate-header"],
