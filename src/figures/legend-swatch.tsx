@@ -2,6 +2,8 @@ import type { ReactElement } from "react";
 import { type ContactKind, contactPath, contactStroke } from "./columns/contact.ts";
 import { levelSetPaint } from "./columns/level-column.tsx";
 import { filledTick, openTick } from "./columns/search-rail.tsx";
+import { type RangeSign, rangeSwatch } from "./legend-range-swatch.tsx";
+import { type TimingSign, timingSwatch } from "./legend-timing-swatch.tsx";
 import type { PatternId } from "./lithology/pattern-tiles.ts";
 import { patternFill } from "./lithology/patterns.tsx";
 import { arrowPath, boxPath, markPath } from "./marks/mark-path.ts";
@@ -21,6 +23,8 @@ export type LegendSign =
     }
   | { readonly kind: "group"; readonly colour: string; readonly letter: string }
   | { readonly kind: "bar"; readonly colour: string; readonly bar: RangeBar }
+  | RangeSign
+  | TimingSign
   | { readonly kind: "survivor" | "cut-off" | "interval-end"; readonly colour: string }
   | {
       readonly kind:
@@ -183,8 +187,16 @@ function swatch(plateId: string, sign: LegendSign): ReactElement {
       );
     case "density":
       return <path d={box} fill={COLOURS.blue} fillOpacity={0.28} stroke={COLOURS.blue} strokeWidth={0.7} />;
+    case "posterior":
+    case "observed-lasts":
+    case "expected-lasts":
+    case "band-each":
+    case "band-all":
+    case "influential":
+    case "was":
+      return timingSwatch(sign);
     default:
-      return sign satisfies never;
+      return rangeSwatch(sign);
   }
 }
 

@@ -19,6 +19,15 @@ const constantRecovery: ReadonlySet<RangeMethod> = new Set<RangeMethod>([
 /** beta of a density of finds that falls straight to nothing at the end. */
 const DECLINING_TAIL = 2;
 
+/** What a method takes recovery to be towards an end. */
+export type RecoveryStance = "holds-under-decline" | "fits-recovery" | "even-recovery";
+
+/** Whether a method holds where finds thin out towards the end, fits or weighs how they do, or takes recovery as even. */
+export function recoveryStance(method: RangeMethod): RecoveryStance {
+  if (declineProof.includes(method)) return "holds-under-decline";
+  return constantRecovery.has(method) ? "even-recovery" : "fits-recovery";
+}
+
 /** How the ends of one section are estimated on one side: which methods lead, and what is said of the others. */
 export interface Leading {
   readonly methods: readonly RangeMethod[];

@@ -12,9 +12,19 @@ export interface DrawnTaxon {
   readonly firstM: number;
   readonly lastM: number;
   readonly findsM: readonly number[];
-  /** Finds set aside: reworked, doubtful, qualified; drawn open. */
-  readonly openM: readonly number[];
+  /** Finds that do not count: drawn open. */
+  readonly open: readonly OpenFind[];
+  /** The highest find under inclusive names, where it is higher than the last. */
+  readonly inclusiveM?: number;
   readonly taper?: Taper;
+}
+
+/** Why a find is drawn open. */
+export type OpenKind = "set-aside" | "reworked" | "doubtful";
+
+export interface OpenFind {
+  readonly heightM: number;
+  readonly kind: OpenKind;
 }
 
 /** Reasons that say that nothing was found there, or that the find is drawn already. */
@@ -34,24 +44,23 @@ export function drawnTaxa(
     .filter((taxon) => taxon.section === section)
     .flatMap((taxon) => {
       const [candidate, taper] = [candidates.get(taxon.taxon), tapers.get(taxon.taxon)];
-      return drawnTaxon(taxon, { candidate, taper, openM: open.get(taxon.taxon) ?? [] });
+      return drawnTaxon(taxon, { candidate, taper, open: open.get(taxon.taxon) ?? [] });
     })
-    .toSorted(
-      (a, b) =>
-        (place.get(a.group) ?? 0) - (place.get(b.group) ?? 0) ||
-        a.lastM - b.lastM ||
-        a.firstM - b.firstM ||
-        (a.taxon < b.taxon ? -1 : 1),
-    );
+    .toSorted((a, b) => (place.get(a.group) ?? 0) - (place.get(b.group) ?? 0) || byLastFind(a, b));
+}
+
+/** By last find, then first find, then name. */
+export function byLastFind(a: DrawnTaxon, b: DrawnTaxon): number {
+  return a.lastM - b.lastM || a.firstM - b.firstM || (a.taxon < b.taxon ? -1 : 1);
 }
 
 interface TaxonParts {
   readonly candidate: Candidate | undefined;
   readonly taper: Taper | undefined;
-  readonly openM: readonly number[];
+  readonly open: readonly OpenFind[];
 }
 
-function drawnTaxon(taxon: LocalTaxon, { candidate, taper, openM }: TaxonParts): readonly DrawnTaxon[] {
+function drawnTaxon(taxon: LocalTaxon, { candidate, taper, open }: TaxonParts): readonly DrawnTaxon[] {
   const firstM = candidate?.firstM ?? taxon.heightsM[0];
   const lastM = candidate?.lastM ?? taxon.heightsM.at(-1);
   if (firstM === undefined || lastM === undefined) return [];
@@ -64,25 +73,37 @@ function drawnTaxon(taxon: LocalTaxon, { candidate, taper, openM }: TaxonParts):
       firstM,
       lastM,
       findsM: taxon.heightsM,
-      openM,
+      open,
+      ...(taxon.lastInclusiveM > lastM ? { inclusiveM: taxon.lastInclusiveM } : {}),
       taper,
     },
   ];
 }
 
-function byTaxon<T extends { readonly section: string; readonly taxon: string }>(
+export function byTaxon<T extends { readonly section: string; readonly taxon: string }>(
   rows: readonly T[],
   section: string,
 ): ReadonlyMap<string, T> {
   return new Map(rows.filter((row) => row.section === section).map((row) => [row.taxon, row]));
 }
 
-function openFinds(finds: readonly Find[], section: string): ReadonlyMap<string, readonly number[]> {
-  const open = finds.filter(
-    (find) => find.section === section && find.used === "no" && !NOT_DRAWN.has(find.reason),
+/** Why a find does not count, as a plate tells it; undefined where it is not drawn open. */
+export function openKind({ used, reason }: Pick<Find, "used" | "reason">): OpenKind | undefined {
+  if (used !== "no" || NOT_DRAWN.has(reason)) return undefined;
+  if (reason === "reworked" || reason === "reworking-suspected" || reason === "below-reworking-ceiling")
+    return "reworked";
+  return reason === "doubtful" ? "doubtful" : "set-aside";
+}
+
+function openFinds(finds: readonly Find[], section: string): ReadonlyMap<string, readonly OpenFind[]> {
+  const open = finds.flatMap((find) => {
+    const kind = find.section === section ? openKind(find) : undefined;
+    return kind === undefined ? [] : [{ taxon: find.accepted, heightM: find.heightM, kind }];
+  });
+  const grouped = group(open, ({ taxon }) => taxon);
+  return new Map(
+    [...grouped].map(([taxon, list]) => [taxon, list.map(({ heightM, kind }) => ({ heightM, kind }))]),
   );
-  const grouped = group(open, (find) => find.accepted);
-  return new Map([...grouped].map(([taxon, list]) => [taxon, list.map((find) => find.heightM)]));
 }
 
 /** Names in a section that rest on finds set aside alone: they have no range to draw. */

@@ -50,7 +50,10 @@ export function layTaxa(taxa: readonly DrawnTaxon[], left: number): TaxaLayout {
 }
 
 /** The letters of the groups that are drawn. */
-export function groupLegend(analysis: Analysis, { groups }: TaxaLayout): readonly LegendEntry[] {
+export function groupLegend(
+  analysis: Analysis,
+  { groups }: { readonly groups: readonly { readonly group: string }[] },
+): readonly LegendEntry[] {
   const signs = groupSigns(analysis);
   return groups.flatMap(({ group }) => {
     const sign = signs.get(group);
@@ -69,13 +72,13 @@ interface TaxaBlockProps {
 const LETTER_ROOM = 12;
 
 /** The name where it fits whole; else its letter, which the legend names, says it alone. */
-function bracketName(group: string, width: number): string {
+export function bracketName(group: string, width: number): string {
   const name = groupLabel(group);
   return fitText(name, width - LETTER_ROOM, TEXT.unit) === name ? name : "";
 }
 
-const BRACKET_LIFT = 9;
-const HEAD_LIFT = 8;
+export const BRACKET_LIFT = 9;
+export const HEAD_LIFT = 8;
 
 export function TaxaBlock({ analysis, layout, left, y, title }: TaxaBlockProps) {
   const signs = groupSigns(analysis);

@@ -1,20 +1,24 @@
 import type { ReactElement } from "react";
+import type { Taper as TaperResult } from "../../core/ranges/result.ts";
 import type { Role } from "../../core/study/finds-result.ts";
-import { type HeightScale, isInFrame, spanOf } from "../height-scale.ts";
-import type { LegendEntry } from "../legend.tsx";
-import { markPath } from "../marks/mark-path.ts";
+import { clippedSpan, type HeightScale, isInFrame, spanOf } from "../height-scale.ts";
+import { EndSign } from "../marks/end-sign.tsx";
+import { boxPath, markPath } from "../marks/mark-path.ts";
 import { SlantedNames } from "../marks/slanted-names.tsx";
-import { type RangeBar, Taper } from "../marks/taper.tsx";
+import { type RangeBar, Taper, type TaperStep } from "../marks/taper.tsx";
+import { round } from "../numbers.ts";
 import { fitText } from "../text.ts";
 import { COLOURS, TEXT } from "../theme.ts";
+import type { ChartedTaxon, DrawnEnd } from "./charted-taxa.ts";
 import type { DrawnTaxon } from "./drawn-taxa.ts";
+import { FindMarks, OpenFinds } from "./find-marks.tsx";
 
 export const BAR_WIDTH = 4.6;
 /** From one bar to the next: as close as slanted names of 7.5 points can stand. */
 export const PITCH = 9.2;
 export const LONGEST_NAME = 150;
 
-const BARS: Readonly<Record<Role, RangeBar>> = {
+export const BARS: Readonly<Record<Role, RangeBar>> = {
   candidate: "filled",
   survivor: "filled",
   "late-start": "dashed",
@@ -30,25 +34,36 @@ interface TaxonRangeProps {
   readonly x: number;
   readonly y: HeightScale;
   readonly colour: string;
-  readonly taxon: DrawnTaxon;
+  readonly taxon: ChartedTaxon;
 }
 
-/** One taxon: its bar, taper, finds, sign of its role above the frame, and its name beneath. */
+/** One taxon: its bar, tapers, finds, the signs of its ends, that of its role above the frame, and its name beneath. */
 export function TaxonRange({ x, y, colour, taxon }: TaxonRangeProps): ReactElement {
-  const { taper, firstM, lastM, findsM, openM, role } = taxon;
-  const isFilled = BARS[role] === "filled";
-  const above = taper?.heightsM.map((heightM, i) => ({ heightM, confidence: 1 - taper.chances[i] }));
+  const { taper, baseTaper, firstM, lastM, findsM, open, role, marks } = taxon;
+  const isFilled = isInQuestion(taxon);
+  const setAside = open.filter(({ kind }) => kind === "set-aside").map(({ heightM }) => heightM);
   return (
     <g data-taxon={taxon.taxon}>
+      {marks !== undefined && <FocusBand x={x} y={y} />}
       <Taper
         {...{ x, y, colour, firstM, lastM }}
         width={BAR_WIDTH}
         bar={BARS[role]}
-        above={isFilled ? above : undefined}
-        topEndM={isFilled ? taper?.endM : undefined}
-        occurrencesM={findsM}
-        openOccurrencesM={openM}
+        above={isFilled ? taper && taperSteps(taper) : undefined}
+        below={isFilled ? baseTaper && taperSteps(baseTaper) : undefined}
+        topEndM={isFilled ? (closedBound(taxon.top) ?? (taxon.top ? undefined : taper?.endM)) : undefined}
+        baseEndM={isFilled ? closedBound(taxon.base) : undefined}
+        occurrencesM={marks === undefined ? findsM : []}
+        openOccurrencesM={marks === undefined ? setAside : []}
       />
+      {marks === undefined ? (
+        <OpenFinds {...{ x, y, colour, open }} />
+      ) : (
+        <FindMarks {...{ x, y, colour, marks }} width={BAR_WIDTH} />
+      )}
+      {isFilled && <EndSigns {...{ x, y, colour, taxon }} />}
+      <InclusiveLine {...{ x, y, colour, taxon }} />
+      {isFilled && <LeaningLine {...{ x, y, colour, taxon }} />}
       <RoleSign x={x} y={y} colour={colour} taxon={taxon} />
       <SlantedNames
         names={[{ text: taxonLabel(taxon.taxon), markX: x, x }]}
@@ -59,6 +74,55 @@ export function TaxonRange({ x, y, colour, taxon }: TaxonRangeProps): ReactEleme
   );
 }
 
+/** Whether the ends of a range are in question, so that its tapers are drawn. */
+export function isInQuestion({ role }: DrawnTaxon): boolean {
+  return BARS[role] === "filled";
+}
+
+function taperSteps({ heightsM, chances }: TaperResult): readonly TaperStep[] {
+  return heightsM.map((heightM, i) => ({ heightM, confidence: 1 - chances[i] }));
+}
+
+function closedBound(end: DrawnEnd | undefined): number | undefined {
+  return end?.outcome === "closed" || end?.outcome === "in-hiatus" ? end.boundM : undefined;
+}
+
+function FocusBand({ x, y }: Pick<TaxonRangeProps, "x" | "y">): ReactElement {
+  const { top, bottom } = spanOf(y);
+  return <path d={boxPath(x - PITCH / 2, top, PITCH, bottom - top)} fill={COLOURS.blue} fillOpacity={0.09} />;
+}
+
+function EndSigns({ x, y, colour, taxon }: TaxonRangeProps): ReactElement {
+  const { top, base, firstM, lastM } = taxon;
+  return (
+    <>
+      {top && <EndSign {...{ x, y, colour, ...top }} end="top" findM={lastM} width={BAR_WIDTH} />}
+      {base && <EndSign {...{ x, y, colour, ...base }} end="base" findM={firstM} width={BAR_WIDTH} />}
+    </>
+  );
+}
+
+function InclusiveLine({ x, y, colour, taxon }: TaxonRangeProps): ReactElement | null {
+  const span = taxon.inclusiveM === undefined ? undefined : clippedSpan(y, taxon.lastM, taxon.inclusiveM);
+  if (span === undefined) return null;
+  const d = `M${round(x)} ${round(span.bottom)}V${round(span.top)}`;
+  return <path d={d} fill="none" stroke={colour} strokeWidth={0.7} strokeDasharray="0.7 1.1" />;
+}
+
+const LEANING_X = BAR_WIDTH / 2 + 1.7;
+
+/** Beside the bar: from the nearest bound to the furthest as the assumed shape of recovery changes. */
+function LeaningLine({ x, y, taxon }: TaxonRangeProps): ReactElement | null {
+  const { leaning } = taxon;
+  const span = leaning && clippedSpan(y, leaning.nearestM, leaning.furthestM);
+  if (leaning === undefined || span === undefined) return null;
+  const at = round(x + LEANING_X);
+  const foot = (heightM: number) =>
+    isInFrame(y, heightM) ? `M${round(at - 0.8)} ${round(y(heightM))}h1.6` : "";
+  const d = `M${at} ${round(span.bottom)}V${round(span.top)}${foot(leaning.nearestM)}${foot(leaning.furthestM)}`;
+  return <path d={d} fill="none" stroke={COLOURS.soft} strokeWidth={0.45} />;
+}
+
 const SIGN_LIFT = 4;
 
 function RoleSign({ x, y, colour, taxon }: TaxonRangeProps): ReactElement | null {
@@ -66,52 +130,4 @@ function RoleSign({ x, y, colour, taxon }: TaxonRangeProps): ReactElement | null
   const d = markPath("triangle", x, spanOf(y).top - SIGN_LIFT, 2.1);
   if (taxon.role === "survivor") return <path d={d} fill={colour} />;
   return <path d={d} fill={COLOURS.paper} stroke={colour} strokeWidth={0.6} />;
-}
-
-/** What the signs of these taxa mean, each only where it is used. */
-export function rangeLegend(taxa: readonly DrawnTaxon[], y: HeightScale): readonly LegendEntry[] {
-  const colour = COLOURS.soft;
-  const has = (test: (taxon: DrawnTaxon) => boolean) => taxa.some(test);
-  const bar = (role: Role, label: string): readonly LegendEntry[] =>
-    has((taxon) => taxon.role === role) ? [{ sign: { kind: "bar", colour, bar: BARS[role] }, label }] : [];
-  const sign = (
-    kind: "find" | "open-find" | "taper" | "interval-end" | "survivor" | "cut-off",
-    label: string,
-    isUsed: boolean,
-  ): readonly LegendEntry[] => (isUsed ? [{ sign: { kind, colour }, label }] : []);
-  return [
-    ...sign(
-      "find",
-      "find",
-      has(({ findsM }) => findsM.length > 0),
-    ),
-    ...sign(
-      "open-find",
-      "find set aside",
-      has(({ openM }) => openM.length > 0),
-    ),
-    ...sign(
-      "taper",
-      "taper: chance that the taxon was still here",
-      has(({ taper }) => taper !== undefined),
-    ),
-    ...sign(
-      "interval-end",
-      "end of the interval",
-      has(({ taper }) => taper?.endM !== undefined && isInFrame(y, taper.endM)),
-    ),
-    ...sign(
-      "survivor",
-      "survivor",
-      has(({ role }) => role === "survivor"),
-    ),
-    ...sign(
-      "cut-off",
-      "found in the highest sample searched",
-      has(({ role, reachesTop }) => role !== "survivor" && reachesTop),
-    ),
-    ...bar("aftermath", "first found after the horizon"),
-    ...bar("late-start", "starts late"),
-    ...bar("too-few", "too few horizons"),
-  ];
 }

@@ -1,35 +1,29 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import { TICK_LABEL_DEPTH } from "../columns/column-ground.tsx";
-import { columnHeadWidth } from "../columns/column-head.tsx";
-import { DURATION_WIDTH, DurationColumn } from "../columns/duration-column.tsx";
-import { LevelColumn, levelColumnWidth } from "../columns/level-column.tsx";
-import type { LegendEntry } from "../legend.tsx";
 import { LensBreak } from "../marks/lens-break.tsx";
 import { axisWords } from "./axis-words.ts";
 import { defaultLens } from "./default-lens.ts";
 import type { Drawing, SectionView } from "./drawing.ts";
-import { type DrawnTaxon, drawnTaxa } from "./drawn-taxa.ts";
+import { drawnTaxa } from "./drawn-taxa.ts";
 import { drawnHorizons, Horizons, horizonLabelsWidth, horizonLegend } from "./horizon-labels.tsx";
 import { lensNotes } from "./lens-notes.ts";
 import { axisColumns, lineLeft, logColumns, railColumn } from "./log-columns.tsx";
-import { type PlateColumn, placeColumns } from "./plate-columns.ts";
+import { placeColumns } from "./plate-columns.ts";
 import { BODY_TOP, MARGIN, setSheet } from "./plate-sheet.tsx";
-import { scaleColumn } from "./scale-column.tsx";
+import { rangeLegend } from "./range-legend.ts";
 import { groupSigns } from "./searched-groups.ts";
-import { type SectionFrame, sectionFrame } from "./section-frame.ts";
+import { sectionFrame } from "./section-frame.ts";
 import { slugOf } from "./slugs.ts";
 import { SurvivorLine, survivorDepth, survivorLines } from "./survivor-line.tsx";
 import { groupLegend, layTaxa, TaxaBlock } from "./taxa-block.tsx";
-import { rangeLegend } from "./taxon-range.tsx";
-import { type DrawnTiming, drawnTiming, timingNotes } from "./timing-words.ts";
+import { type Answered, answerColumns, type TimingAsked } from "./timing-columns.tsx";
+import { drawnTiming, timingNotes } from "./timing-words.ts";
+import { WasHorizons } from "./was-horizons.tsx";
 
-export interface TimingView extends SectionView {
-  /** Name of the set of taxa: `candidates`, `candidates-closed`, a group or a declared list. */
-  readonly set: string;
-}
+/** `set`: name of the set of taxa: `candidates`, `candidates-closed`, a group or a declared list. */
+export interface TimingView extends SectionView, TimingAsked {}
 
 const BODY_HEIGHT = 320;
-const LEVEL_WIDTH = 46;
 const SURVIVOR_WIDTH = 420;
 const NAMES_CLEAR = 14;
 
@@ -73,10 +67,16 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
         <SurvivorLine x={MARGIN} y={MARGIN + 33} lines={lines} />
         <TaxaBlock {...{ analysis, layout, left, y }} title="" />
         {lens && <LensBreak x={from} width={right - from} y={y} lens={lens} />}
+        <WasHorizons analysis={analysis} view={view} y={y} left={from} right={right} />
         <Horizons left={from} right={right} y={y} horizons={horizons} />
       </g>
     ),
-    legend: [...groupLegend(analysis, layout), ...rangeLegend(taxa, y), ...horizonLegend(horizons)],
+    legend: [
+      ...groupLegend(analysis, layout),
+      ...rangeLegend(taxa, y),
+      ...horizonLegend(horizons),
+      ...(view.was === undefined ? [] : [{ sign: { kind: "was" }, label: "as it was" } as const]),
+    ],
     notes: [...notesOf(analysis, view.set, { taxa, timing, frame }), ...lensNotes(frame)],
     panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
     view,
@@ -105,90 +105,6 @@ function setWords(set: string): string {
   if (set === "candidates") return "candidates";
   if (set === "candidates-closed") return "candidates that do not reach the top";
   return set.replace(/^group:/, "group ");
-}
-
-interface Answered {
-  readonly timing: DrawnTiming;
-  readonly taxa: readonly DrawnTaxon[];
-  readonly frame: SectionFrame;
-}
-
-function answerColumns(
-  analysis: Analysis,
-  view: TimingView,
-  { timing, taxa, frame }: Answered,
-): readonly PlateColumn[] {
-  const { y } = frame;
-  const level = levelColumn(analysis, view, { timing, taxa, frame });
-  const { durationLower, durationBoxes } = timing;
-  const leastM = durationLower?.low;
-  const mostM = durationBoxes[0]?.high;
-  const scale = frame.lens ? [scaleColumn(y, frame.lens)] : [];
-  if (taxa.length === 0 || (leastM === undefined && mostM === undefined)) return [...level, ...scale];
-  const fromM = Math.max(...taxa.map((taxon) => taxon.lastM));
-  const duration: PlateColumn = {
-    key: "duration",
-    width: Math.max(DURATION_WIDTH, columnHeadWidth("Duration", "least, most")),
-    draw: (x) => <DurationColumn {...{ x, y, fromM, leastM, mostM }} />,
-    legend: [{ sign: { kind: "duration" }, label: "height between the first and the last disappearance" }],
-  };
-  return [...level, duration, ...scale];
-}
-
-function levelColumn(
-  analysis: Analysis,
-  view: TimingView,
-  { timing, frame }: Answered,
-): readonly PlateColumn[] {
-  const curve = analysis.timing.curves.find(
-    ({ section, set }) => section === view.section && set === view.set,
-  );
-  const toSet = ({ low, high }: { readonly low?: number; readonly high?: number } = {}) =>
-    low === undefined ? [] : [{ baseM: low, topM: high ?? frame.section.topM }];
-  const [ifOne, joint] = [toSet(timing.ifOne), timing.joint.flatMap(toSet)];
-  const points = curve?.heightsM.map((heightM, i) => ({ heightM, p: curve.p[i] })) ?? [];
-  if (points.length === 0 && ifOne.length === 0 && joint.length === 0) return [];
-  const { y } = frame;
-  const limit = 1 - analysis.study.settings.confidence;
-  const [title, unit] = ["One level", "p of ending here"];
-  return [
-    {
-      key: "level",
-      width: Math.max(levelColumnWidth(LEVEL_WIDTH), columnHeadWidth(title, unit)),
-      draw: (x) => (
-        <LevelColumn
-          {...{ x, y, title, unit, limit, joint }}
-          width={LEVEL_WIDTH}
-          curve={points}
-          ifOne={ifOne[0]}
-        />
-      ),
-      legend: levelLegend({
-        limit,
-        hasCurve: points.length > 0,
-        hasIfOne: ifOne.length > 0,
-        hasJoint: joint.length > 0,
-      }),
-    },
-  ];
-}
-
-interface LevelSigns {
-  /** The p below which a level is refuted. */
-  readonly limit: number;
-  readonly hasCurve: boolean;
-  readonly hasIfOne: boolean;
-  readonly hasJoint: boolean;
-}
-
-function levelLegend({ limit, hasCurve, hasIfOne, hasJoint }: LevelSigns): readonly LegendEntry[] {
-  const limitWords = `p = ${Number(limit.toPrecision(3))}`;
-  return [
-    ...(hasCurve ? [{ sign: { kind: "density" }, label: "p that all ended at this level" } as const] : []),
-    ...(hasCurve ? [{ sign: { kind: "level-limit" }, label: limitWords } as const] : []),
-    ...(hasIfOne ? [{ sign: { kind: "set-if-one" }, label: "where, if there was one level" } as const] : []),
-    ...(hasJoint ? [{ sign: { kind: "set-joint" }, label: "levels not excluded" } as const] : []),
-  ];
 }
 
 function notesOf(analysis: Analysis, set: string, { taxa, timing, frame }: Answered): readonly string[] {

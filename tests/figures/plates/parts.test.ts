@@ -63,7 +63,7 @@ test("a find set aside is open, and taxa stand by group and last find", () => {
   const small = smallAnalysis();
   const taxa = drawnTaxa(small, "cliff", groupSigns(small));
   expect(taxa.map(({ lastM }) => lastM)).toEqual([8.5, 11.5, 19.5, 9.5, 10.5, 17.5]);
-  expect(taxa[1]?.openM).toEqual([13.5]);
+  expect(taxa[1]?.open).toEqual([{ heightM: 13.5, kind: "reworked" }]);
 });
 
 test("a sample searched for two groups can be barren for one", () => {
