@@ -33,6 +33,7 @@ const opening = (): PageState => ({
   work: { kind: "idle" },
   history: NO_HISTORY,
   trial: NO_TRIAL,
+  beside: {},
 });
 
 /** The whole page: one line of stations, one focus, a plate with its margin, and what lies under the reading line. */
@@ -40,7 +41,7 @@ export function Page(): ReactElement {
   const [state, dispatch] = useReducer(step, undefined, opening);
   const study = useStudy(dispatch);
   const go = usePlace(state.place, dispatch);
-  const { workedOut, open: openStudy } = study;
+  const { readOut, open: openStudy } = study;
 
   useEffect(() => openStudy("the example", bundledStudy), [openStudy]);
   useTheme(state.theme);
@@ -56,8 +57,8 @@ export function Page(): ReactElement {
   useShortcuts(actions, () => dispatch({ kind: "go-to-turned", isOpen: true }));
 
   useEffect(() => {
-    document.title = workedOut === undefined ? "Lastbed" : `${workedOut.analysis.study.name} · Lastbed`;
-  }, [workedOut]);
+    document.title = readOut === undefined ? "Lastbed" : `${readOut.study.name} · Lastbed`;
+  }, [readOut]);
 
   return (
     <PageProvider value={page}>

@@ -26,8 +26,9 @@ export function nodeRunner(
 ): Runner {
   if (threads === 1) return inlineRunner;
   return {
-    async analyse(job: AnalysisJob, { onProgress, signal }: Watch = {}) {
+    async analyse(job: AnalysisJob, { onProgress, onRead, signal }: Watch = {}) {
       const study = await readSources(job.files, { name: job.name, settings: job.settings });
+      onRead?.(study);
       const count = Math.min(threads, study.sections.length);
       const workers = Array.from({ length: count }, () => startThread(job));
       const stop = () => Promise.all(workers.map((worker) => worker.terminate()));

@@ -1,7 +1,8 @@
 import { proxy, releaseProxy, wrap } from "comlink";
 import type { Analysis } from "../core/analysis-result.ts";
+import type { Study } from "../core/study/model.ts";
 import type { PageWork } from "./page-worker.ts";
-import { putTogether } from "./parts.ts";
+import { type Parted, putTogether } from "./parts.ts";
 import { receivedStudy } from "./received-study.ts";
 import type { AnalysisJob, Runner, Watch } from "./runner.ts";
 
@@ -18,7 +19,7 @@ export function pageRunner(startWorker: () => Worker): Runner {
     worker = undefined;
   };
   return {
-    async analyse(job: AnalysisJob, { onProgress = () => {}, signal }: Watch = {}) {
+    async analyse(job: AnalysisJob, { onProgress = () => {}, onRead, signal }: Watch = {}) {
       signal?.throwIfAborted();
       end();
       const own = startWorker();
@@ -33,10 +34,19 @@ export function pageRunner(startWorker: () => Worker): Runner {
       });
       try {
         const { take, whole } = putTogether();
-        const ears = proxy({ onProgress, onPart: take });
+        const files = [...job.files].map(([name, bytes]) => ({ name, bytes }));
+        let study: Study | undefined;
+        const takeStudy = (parted: Parted) => {
+          const read = whole(parted);
+          if (!isStudy(read) || signal?.aborted) return;
+          study = receivedStudy({ ...read, files });
+          onRead?.(study);
+        };
+        const ears = proxy({ onProgress, onPart: take, onRead: takeStudy });
         const analysis = whole(await Promise.race([work.analyse(job, ears), failed]));
-        if (!isAnalysis(analysis)) throw new Error("pageRunner: expected an analysis from the worker");
-        return { ...analysis, study: receivedStudy(analysis.study) };
+        if (study === undefined || !isAnalysis(analysis))
+          throw new Error("pageRunner: expected a study and its analysis from the worker");
+        return { ...analysis, study };
       } finally {
         work[releaseProxy]();
         if (worker === own) end();
@@ -48,5 +58,8 @@ export function pageRunner(startWorker: () => Worker): Runner {
   };
 }
 
-const isAnalysis = (value: unknown): value is Analysis =>
-  typeof value === "object" && value !== null && "study" in value && "timing" in value;
+const isStudy = (value: unknown): value is Omit<Study, "files"> =>
+  typeof value === "object" && value !== null && "sheets" in value && "sections" in value;
+
+const isAnalysis = (value: unknown): value is Omit<Analysis, "study"> =>
+  typeof value === "object" && value !== null && "markers" in value && "timing" in value;

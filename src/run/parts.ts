@@ -32,8 +32,11 @@ interface Weighed {
   readonly weight: number;
 }
 
-/** Takes a value of plain data, arrays and maps apart; parts are sent in an order in which each can be put together at once. */
-export function takeApart(value: unknown, send: (part: Part) => void): Parted {
+/**
+ * Takes values of plain data, arrays and maps apart; parts are sent in an order in which each can be put together at
+ * once. What one value shares with an earlier one is sent once.
+ */
+export function takeApart(send: (part: Part) => void): (value: unknown) => Parted {
   const known = new Map<unknown, Weighed>();
   let lists = 0;
   const apart = (one: unknown): Weighed => {
@@ -68,7 +71,7 @@ export function takeApart(value: unknown, send: (part: Part) => void): Parted {
     for (const group of groupsOf(parts)) send({ list, ...partedOf(group.map((part) => part.value)) });
     return { weight: 1, value: new SentList(list, isMap) };
   };
-  return partedOf(apart(value).value);
+  return (value) => partedOf(apart(value).value);
 }
 
 const partedOf = (rest: unknown): Parted => ({ rest, isParted: holdsSent(rest) });

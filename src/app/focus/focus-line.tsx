@@ -10,11 +10,15 @@ import { Picker } from "./picker.tsx";
 
 /** What every plate is about: section, main horizon, set of taxa and vertical scale, the same at every station. */
 export function FocusLine(): ReactElement {
-  const { open } = usePage();
+  const { open, study } = usePage();
   return (
     <section className={styles.line} aria-label="Focus">
       {open === undefined ? (
-        <span className={styles.item}>No study is open yet.</span>
+        <span className={styles.item}>
+          {study.readOut === undefined
+            ? "No study is open yet."
+            : "Its tables are read; it is not worked out yet."}
+        </span>
       ) : (
         <Focused {...open} />
       )}

@@ -7,12 +7,13 @@ import { OpenStudyMenu } from "./open-study-menu.tsx";
 import { StationsLine } from "./stations-line.tsx";
 
 export function Header({ actions }: { readonly actions: readonly Action[] }): ReactElement {
-  const { state, dispatch, open } = usePage();
+  const { state, dispatch, study } = usePage();
+  const name = study.readOut?.study.name;
   const theme = actions.find(({ id }) => id === "theme");
   return (
     <header className={styles.header}>
-      <h1 className={styles.study} title={open?.analysis.study.name}>
-        {open?.analysis.study.name ?? "Lastbed"}
+      <h1 className={styles.study} title={name}>
+        {name ?? "Lastbed"}
       </h1>
       <StationsLine />
       <div className={styles.tools}>

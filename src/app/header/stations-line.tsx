@@ -2,16 +2,18 @@ import type { KeyboardEvent, ReactElement } from "react";
 import type { Station } from "../../report/findings/finding.ts";
 import { usePage } from "../state/page-context.ts";
 import { hashOf, STATIONS } from "../state/place.ts";
-import { STATE_WORDS, type StationState, stationState } from "../state/station-state.ts";
+import { readState, STATE_WORDS, type StationState, stationState } from "../state/station-state.ts";
 import styles from "./stations-line.module.css";
 
 /** The line of work: every station with how far it is, told by shape and in words. */
 export function StationsLine(): ReactElement {
-  const { state, open } = usePage();
+  const { state, open, study } = usePage();
   const current = state.place.station;
 
-  const stateOf = (station: Station): StationState =>
-    open === undefined ? "waiting" : stationState(station, open);
+  const stateOf = (station: Station): StationState => {
+    if (open !== undefined) return stationState(station, open);
+    return station === "tables" && study.readOut ? readState(study.readOut.study) : "waiting";
+  };
   return (
     <nav className={styles.nav} aria-label="Stations">
       <ol className={styles.line}>

@@ -6,7 +6,9 @@ import styles from "./work-bar.module.css";
 export function WorkBar(): ReactElement {
   const { state, dispatch, study, open } = usePage();
   const { work } = state;
-  const still = open === undefined ? "" : ` ${open.analysis.study.name} is still shown.`;
+  const { readOut } = study;
+  const still =
+    open !== undefined ? ` ${open.analysis.study.name} is still shown.` : readOut ? " Its tables stay." : "";
   return (
     <div className={styles.place}>
       <output className={work.kind === "failed" ? styles.none : undefined}>
@@ -26,6 +28,11 @@ export function WorkBar(): ReactElement {
             <span>
               Cancelled: {work.name} was not worked out.{still}
             </span>
+            {readOut && (
+              <button type="button" onClick={() => study.rework(state.history)}>
+                Work out {readOut.study.name}
+              </button>
+            )}
             <button type="button" onClick={() => dispatch({ kind: "message-read" })}>
               Close
             </button>

@@ -9,9 +9,9 @@ import { dateWords } from "./date-words.ts";
 export function KeepingBar(): ReactElement | null {
   const { study, keeping, dispatch } = usePage();
   const [read, setRead] = useState<readonly string[]>([]);
-  const { workedOut } = study;
-  if (workedOut === undefined) return null;
-  const { key, opened } = workedOut;
+  const { readOut } = study;
+  if (readOut === undefined) return null;
+  const { key, opened } = readOut;
   const { fault, hold, names } = keeping;
   const edits = heldEdits(opened).length;
   const [last] = names;

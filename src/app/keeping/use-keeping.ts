@@ -44,8 +44,8 @@ const keptLists = async (key: string | undefined): Promise<KeptLists> => ({
 
 /** Keeps the edits of the open study in this browser as they are made. */
 export function useKeeping(history: History, study: OpenStudy, dispatch: Dispatch<PageEvent>): Keeping {
-  const { workedOut, open: openStudy } = study;
-  const { key, given, opened } = workedOut ?? {};
+  const { readOut, open: openStudy } = study;
+  const { key, given, opened } = readOut ?? {};
   const hold = useHold(key);
   const [written, setWritten] = useState<{ readonly at?: number; readonly fault?: string }>({});
   const [{ names, snapshots }, setKept] = useState<KeptLists>({ names: [], snapshots: [] });

@@ -6,6 +6,7 @@ import { KeptPart } from "../keeping/kept-part.tsx";
 import { type Opened, usePage } from "../state/page-context.ts";
 import { findingOf } from "../state/station-state.ts";
 import { Problems } from "../tables/problems.tsx";
+import { ReadNotes } from "../tables/read-notes.tsx";
 import { SetAsideList } from "../tables/set-aside-list.tsx";
 import { TrialBar } from "../trial/trial-bar.tsx";
 import { TrialFields } from "../trial/trial-fields.tsx";
@@ -18,7 +19,7 @@ import { WordsText } from "./words-text.tsx";
 
 /** The notes beside a plate, in the order of an argument; they can be put away. */
 export function Margin(): ReactElement {
-  const { state, dispatch, open } = usePage();
+  const { state, dispatch, open, study } = usePage();
   const { isMarginOpen } = state;
   const label = isMarginOpen ? "Close the margin" : "Open the margin";
   return (
@@ -34,6 +35,7 @@ export function Margin(): ReactElement {
         {isMarginOpen ? <PanelRightClose aria-hidden size={16} /> : <PanelRightOpen aria-hidden size={16} />}
       </button>
       {isMarginOpen && open !== undefined && <Notes open={open} />}
+      {isMarginOpen && open === undefined && study.readOut && <ReadNotes study={study.readOut.study} />}
     </aside>
   );
 }
@@ -70,7 +72,7 @@ function Argument({ finding, open }: { readonly finding: Finding; readonly open:
       )}
       <TrialBar open={open} />
       <Numbers lines={finding.numbers} before={was?.numbers} />
-      {finding.station === "tables" && <Problems analysis={open.analysis} />}
+      {finding.station === "tables" && <Problems />}
       {finding.station === "tables" && <SetAsideList />}
       {finding.station === "tables" && <KeptPart />}
       <Weaknesses weaknesses={finding.weaknesses} />

@@ -29,13 +29,13 @@ export function actionsOf(page: PageContents): readonly Action[] {
   ];
 }
 
-function stationActions({ go, state, open }: PageContents): Action[] {
+function stationActions({ go, state, study }: PageContents): Action[] {
   return STATIONS.map(({ id, title }, index) => ({
     id: `station-${id}`,
     label: title,
     group: "Stations",
     shortcut: String(index + 1),
-    isAvailable: open !== undefined && state.place.station !== id,
+    isAvailable: study.readOut !== undefined && state.place.station !== id,
     act: () => go({ station: id }),
   }));
 }

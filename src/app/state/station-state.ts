@@ -1,4 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { Study } from "../../core/study/model.ts";
 import type { Finding, Station } from "../../report/findings/finding.ts";
 import type { Focus } from "./focus.ts";
 import { lackOf } from "./lack.ts";
@@ -17,11 +18,14 @@ export function stationState(
   { analysis, focus, all }: { analysis: Analysis; focus: Focus; all: readonly Finding[] },
 ): StationState {
   if (lackOf(station, focus, analysis) !== undefined) return "waiting";
-  if (station === "tables")
-    return analysis.study.problems.some(({ severity }) => severity === "error") ? "look" : "done";
+  if (station === "tables") return readState(analysis.study);
   const finding = findingOf(all, { ...focus, station });
   return finding?.weaknesses.some(({ severity }) => severity === "warning") ? "look" : "done";
 }
+
+/** How far the tables are, once they are read. */
+export const readState = ({ problems }: Pick<Study, "problems">): StationState =>
+  problems.some(({ severity }) => severity === "error") ? "look" : "done";
 
 /** The finding that the margin shows for a focus. */
 export function findingOf(all: readonly Finding[], focus: Focus): Finding | undefined {

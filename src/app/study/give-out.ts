@@ -3,12 +3,12 @@ import { handOver } from "../hand-over.ts";
 import { type History, heldEdits } from "../tables/history.ts";
 import { desk } from "./desk.ts";
 import { canWriteFolders, writeFolder } from "./folder.ts";
-import type { WorkedOut } from "./use-study.ts";
+import type { ReadOut } from "./read-out.ts";
 
 const WORKBOOK = "application/vnd.openxmlformats-officedocument.spreadsheetml.sheet";
 
 /** Hands over one table of the study as it is now, as its file; what a person should know of it. */
-export async function giveOutTable(study: WorkedOut, history: History, file: string): Promise<string> {
+export async function giveOutTable(study: ReadOut, history: History, file: string): Promise<string> {
   const { files, edits, to } = parts(study, history);
   const table = await desk().table(files, edits, { ...to, file });
   if (table === undefined) return `${file} could not be saved: it is no table of the study.`;
@@ -18,7 +18,7 @@ export async function giveOutTable(study: WorkedOut, history: History, file: str
 }
 
 /** Hands over the whole study as it is now, as a data package in a zip. */
-export async function giveOutStudy(study: WorkedOut, history: History): Promise<string> {
+export async function giveOutStudy(study: ReadOut, history: History): Promise<string> {
   const { files, edits, to } = parts(study, history);
   const bytes = await desk().packed(files, edits, to);
   const name = `${to.name}.zip`;
@@ -27,7 +27,7 @@ export async function giveOutStudy(study: WorkedOut, history: History): Promise<
 }
 
 /** Hands over the tables as they are now, as a workbook of a sheet each. */
-export async function giveOutWorkbook(study: WorkedOut, history: History): Promise<string> {
+export async function giveOutWorkbook(study: ReadOut, history: History): Promise<string> {
   const { files, edits, to } = parts(study, history);
   const bytes = await desk().workbook(files, edits, to);
   const name = `${to.name}.xlsx`;
@@ -36,7 +36,7 @@ export async function giveOutWorkbook(study: WorkedOut, history: History): Promi
 }
 
 /** Writes the whole study as it is now into a new folder inside one that the person chooses; a zip where no folder can be. */
-export async function giveOutFolder(study: WorkedOut, history: History): Promise<string> {
+export async function giveOutFolder(study: ReadOut, history: History): Promise<string> {
   if (!canWriteFolders()) {
     const said = await giveOutStudy(study, history);
     return `This browser writes no folders: ${said}`;
@@ -47,8 +47,8 @@ export async function giveOutFolder(study: WorkedOut, history: History): Promise
 }
 
 /** The tables of the study without their rows, which the files hold. */
-function parts({ given, tables, analysis }: WorkedOut, history: History) {
-  const now = new Map(analysis.study.sheets.map((sheet) => [sheet.file, sheet]));
+function parts({ given, tables, study }: ReadOut, history: History) {
+  const now = new Map(study.sheets.map((sheet) => [sheet.file, sheet]));
   const forms = tables.map(({ file, table, headers, dialect, columns }) => ({
     file,
     table: table ?? now.get(file)?.table,
@@ -56,5 +56,5 @@ function parts({ given, tables, analysis }: WorkedOut, history: History) {
     dialect,
     columns: now.get(file)?.columns ?? columns,
   }));
-  return { files: given.files, edits: heldEdits(history), to: { name: analysis.study.name, forms } };
+  return { files: given.files, edits: heldEdits(history), to: { name: study.name, forms } };
 }

@@ -31,7 +31,7 @@ const isTakenElsewhere = (target: EventTarget | null): boolean =>
 
 function PasteField({ text }: { readonly text: string }): ReactElement {
   const { state, dispatch, study, go } = usePage();
-  const { workedOut } = study;
+  const { readOut } = study;
   const dialog = useRef<HTMLDialogElement>(null);
   const field = useRef<HTMLTextAreaElement>(null);
   const close = () => dispatch({ kind: "pasted", text: undefined });
@@ -63,9 +63,13 @@ function PasteField({ text }: { readonly text: string }): ReactElement {
         <button type="button" disabled={isEmpty} onClick={() => open(async () => pastedStudy(text))}>
           As a new study
         </button>
-        {workedOut !== undefined && (
-          <button type="button" disabled={isEmpty} onClick={() => open(() => withPasted(workedOut, text))}>
-            Add it to {workedOut.analysis.study.name}
+        {readOut !== undefined && (
+          <button
+            type="button"
+            disabled={isEmpty}
+            onClick={() => open(() => withPasted(readOut, state.history, text))}
+          >
+            Add it to {readOut.study.name}
           </button>
         )}
         <button type="button" onClick={close}>

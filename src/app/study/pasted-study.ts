@@ -1,14 +1,18 @@
 import { pastedFile } from "../../core/tables/sources/pasted.ts";
-import { heldEdits } from "../tables/history.ts";
+import { type History, heldEdits } from "../tables/history.ts";
 import { desk } from "./desk.ts";
 import { type GivenStudy, studyOf } from "./given-study.ts";
-import type { WorkedOut } from "./use-study.ts";
+import type { ReadOut } from "./read-out.ts";
 
 /** A study of one pasted table. */
 export const pastedStudy = (text: string): GivenStudy => studyOf("Pasted table", new Map([pastedFile(text)]));
 
 /** The open study with a pasted table more; the edits made so far are written into its tables. */
-export async function withPasted({ given, tables, history }: WorkedOut, text: string): Promise<GivenStudy> {
+export async function withPasted(
+  { given, tables }: ReadOut,
+  history: History,
+  text: string,
+): Promise<GivenStudy> {
   const edits = heldEdits(history);
   const forms = tables.map(({ file, headers, dialect }) => ({ file, headers, dialect }));
   const files =

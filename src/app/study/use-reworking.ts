@@ -6,11 +6,11 @@ import type { OpenStudy } from "./use-study.ts";
 const PAUSE_MS = 400;
 
 /** Works the study out again, a moment after its last edit; the result before stays in view until then. */
-export function useReworking(history: History, { rework, workedOut }: OpenStudy): void {
-  const isWorkedOut = workedOut === undefined || workedOut.history === history;
+export function useReworking(history: History, { rework, readOut }: OpenStudy): void {
+  const isRead = readOut === undefined || readOut.history === history;
   useEffect(() => {
-    if (isWorkedOut) return undefined;
+    if (isRead) return undefined;
     const timer = setTimeout(() => rework(history), PAUSE_MS);
     return () => clearTimeout(timer);
-  }, [history, isWorkedOut, rework]);
+  }, [history, isRead, rework]);
 }

@@ -1,34 +1,28 @@
 import { type Dispatch, useEffect, useMemo, useRef, useState } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { SettingChange } from "../../core/study/changed-settings.ts";
-import type { Sheet, Study } from "../../core/study/model.ts";
-import type { Problem } from "../../core/study/problem.ts";
+import type { Study } from "../../core/study/model.ts";
 import { pageRunner } from "../../run/page.ts";
-import { receivedSheets } from "../../run/received-study.ts";
-import { keptFiles, keptHistory, studyKey } from "../keeping/kept-studies.ts";
 import type { PageEvent } from "../state/page-state.ts";
 import { settingEdit } from "../tables/edits.ts";
-import { type GivenTable, givenTable, leavingSheets, unreadFiles } from "../tables/given-table.ts";
-import { type History, heldEdits, NO_HISTORY, withStep } from "../tables/history.ts";
+import { type History, NO_HISTORY, withStep } from "../tables/history.ts";
 import { withSetting } from "./chosen-settings.ts";
-import { desk } from "./desk.ts";
 import { type GivenStudy, NotAStudy } from "./given-study.ts";
-import { inSlices } from "./in-slices.ts";
+import {
+  editedFiles,
+  keptWork,
+  nothingRead,
+  prepared,
+  type ReadOut,
+  readOutOf,
+  type Unread,
+} from "./read-out.ts";
 
 const startWorker = () =>
   new Worker(new URL("../../run/page-worker.ts", import.meta.url), { type: "module" });
 
-/** A study that is worked out: as it was given, its tables before any edit, and what its last analysis rests on. */
-export interface WorkedOut {
-  readonly given: GivenStudy;
-  /** Under which its edits are kept; undefined where this browser keeps nothing. */
-  readonly key: string | undefined;
-  /** The edits that were kept when it was opened. */
-  readonly opened: History;
-  readonly sheets: readonly Sheet[];
-  /** The same with what their reading left out. */
-  readonly tables: readonly GivenTable[];
-  readonly history: History;
+/** A study that is worked out: as its last analysis found it. */
+export interface WorkedOut extends ReadOut {
   readonly analysis: Analysis;
 }
 
@@ -40,7 +34,9 @@ export interface TriedOut {
 }
 
 export interface OpenStudy {
-  /** The last study that was worked out; it stays until the next one is. */
+  /** The open study as it was last read: its tables can be worked in before it is worked out. */
+  readonly readOut: ReadOut | undefined;
+  /** The open study as it was last worked out; it stays until it is again, or another one is read. */
   readonly workedOut: WorkedOut | undefined;
   /** Loads a study and works it out; the latest request wins. */
   readonly open: (name: string, load: (signal: AbortSignal) => Promise<GivenStudy>) => void;
@@ -59,14 +55,27 @@ export interface OpenStudy {
   readonly cancel: () => void;
 }
 
+interface AnalysisDue {
+  readonly given: GivenStudy;
+  readonly files: GivenStudy["files"];
+}
+
+interface AnalysisWatch {
+  readonly signal: AbortSignal;
+  readonly onRead?: (study: Study) => void;
+}
+
 export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
+  const [readOut, setReadOut] = useState<ReadOut>();
   const [workedOut, setWorkedOut] = useState<WorkedOut>();
-  const latest = useRef<WorkedOut>(undefined);
+  const latest = useRef<ReadOut>(undefined);
   const runner = useMemo(() => pageRunner(startWorker), []);
   const current = useRef<AbortController>(undefined);
   const isOpening = useRef(false);
   const busyWith = useRef<"study" | "trial">(undefined);
   const [tried, setTried] = useState<TriedOut>();
+  /** The edits that were last asked to be worked out. */
+  const asked = useRef(NO_HISTORY);
   /** The study with settings that are not worked out yet. */
   const settled = useRef<GivenStudy>(undefined);
 
@@ -105,60 +114,66 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
         },
       );
     };
-    const begin = (name: string, work: (signal: AbortSignal) => Promise<WorkedOut>) =>
-      start({ name }, work, (result) => {
-        latest.current = result;
-        settled.current = undefined;
-        setWorkedOut(result);
-        if (isOpening.current) dispatch({ kind: "study-opened", history: result.history });
-        isOpening.current = false;
-      });
-    const analyse = async (given: GivenStudy, signal: AbortSignal) => {
+    const begin = (name: string, load: (signal: AbortSignal) => Promise<Unread>) =>
+      start({ name }, async (signal) => workOut(await load(signal), signal), setWorkedOut);
+    const show = (read: ReadOut) => {
+      latest.current = read;
+      if (settled.current === read.given) settled.current = undefined;
+      setReadOut(read);
+      if (!isOpening.current) return;
+      isOpening.current = false;
+      asked.current = read.history;
+      setWorkedOut(undefined);
+      dispatch({ kind: "study-opened", history: read.history });
+    };
+    const analyse = async ({ given, files }: AnalysisDue, { signal, onRead }: AnalysisWatch) => {
       const onProgress = sparingly((step, share) => {
         if (!signal.aborted) dispatch({ kind: "work-went-on", step, share });
       });
-      const result = await runner.analyse({ name: given.name, files: given.files }, { signal, onProgress });
+      const result = await runner.analyse({ name: given.name, files }, { signal, onProgress, onRead });
       if (result.study.sheets.length === 0)
         throw new NotAStudy(nothingRead(given.name, result.study.problems));
       return result;
     };
-    const workOut = async (given: GivenStudy, history: History, signal: AbortSignal) => {
-      if (heldEdits(history).length === 0) {
-        const analysis = await analyse(given, signal);
-        const { sheets } = analysis.study;
-        return { given, sheets, tables: await givenTables(given, analysis.study), history, analysis };
-      }
-      const { problems, ...read } = await desk().read(given.files);
-      const sheets = receivedSheets(read.sheets);
-      const tables = await givenTables(given, { sheets, problems });
-      const files = await editedFiles(given, tables, history);
-      const analysis = await analyse({ name: given.name, files }, signal);
-      return { given, sheets, tables, history, analysis };
+    /** Reads and works out; what was read is shown first. */
+    const workOut = async (due: Unread, signal: AbortSignal): Promise<WorkedOut> => {
+      const { unread, files } = await prepared(due);
+      const shown: Promise<ReadOut>[] = [];
+      const showRead = async (study: Study) => {
+        const read = await readOutOf(unread, study);
+        if (!signal.aborted && study.sheets.length > 0) show(read);
+        return read;
+      };
+      const onRead = (study: Study) => void shown.push(showRead(study));
+      const analysis = await analyse({ given: unread.given, files }, { signal, onRead });
+      const [read = readOutOf(unread, analysis.study)] = shown;
+      return { ...(await read), analysis };
     };
     const open: OpenStudy["open"] = (name, load) => {
       isOpening.current = true;
       settled.current = undefined;
       void begin(name, async (signal) => {
-        const { given, key, history } = await keptWork(await load(signal));
-        return { key, opened: history, ...(await workOut(given, history, signal)) };
+        const kept = await keptWork(await load(signal));
+        return { ...kept, opened: kept.history };
       });
     };
     const rework: OpenStudy["rework"] = (history) => {
       const now = latest.current;
       if (now === undefined || isOpening.current) return;
+      asked.current = history;
+      const { key, opened, sheets, tables } = now;
       const given = settled.current;
-      void begin(now.analysis.study.name, async (signal) => {
-        if (given !== undefined) return { ...now, ...(await workOut(given, history, signal)) };
-        const files = await editedFiles(now.given, now.tables, history);
-        const analysis = await analyse({ name: now.given.name, files }, signal);
-        return { ...now, history, analysis };
-      });
+      const due =
+        given === undefined
+          ? { given: now.given, sheets, tables }
+          : { given, sheets: undefined, tables: undefined };
+      void begin(now.study.name, async () => ({ ...due, key, opened, history }));
     };
     const settle: OpenStudy["settle"] = (change) => {
       const now = latest.current;
       if (now === undefined || isOpening.current) return;
       settled.current = withSetting(settled.current ?? now.given, change);
-      rework(now.history);
+      rework(asked.current);
     };
     const tryOut: OpenStudy["tryOut"] = (base, changes) => {
       if (busyWith.current === "study") return;
@@ -166,7 +181,7 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
       const { given, tables, history } = base;
       const work = async (signal: AbortSignal) => {
         const files = await editedFiles(given, tables, withStep(history, step));
-        return analyse({ name: given.name, files }, signal);
+        return analyse({ given, files }, { signal });
       };
       const { name } = base.analysis.study;
       void start({ name, isTrial: true }, work, (analysis) => setTried({ changes, base, analysis }));
@@ -191,42 +206,7 @@ export function useStudy(dispatch: Dispatch<PageEvent>): OpenStudy {
     };
     return { open, rework, settle, cancel, tryOut, stopTrying, addFile };
   }, [dispatch, runner]);
-  return useMemo(() => ({ workedOut, tried, ...actions }), [workedOut, tried, actions]);
-}
-
-/** A study with what this browser kept of it; a browser that keeps nothing is no hindrance. */
-async function keptWork(given: GivenStudy): Promise<Pick<WorkedOut, "given" | "key" | "history">> {
-  try {
-    const key = given.key ?? (await studyKey(given));
-    const history = (key && (await keptHistory(key))) || NO_HISTORY;
-    const kept = key === undefined ? undefined : await keptFiles(key);
-    return { given: kept === undefined ? given : { ...given, files: kept }, key, history };
-  } catch {
-    return { given, key: undefined, history: NO_HISTORY };
-  }
-}
-
-/** The tables with what their reading left out: rows that could not be parted, and whole tables. */
-async function givenTables(
-  { files }: GivenStudy,
-  { sheets, problems }: Pick<Study, "sheets" | "problems">,
-): Promise<readonly GivenTable[]> {
-  const leaving = leavingSheets(sheets, problems);
-  const unread = unreadFiles(sheets, problems);
-  const isWhole = leaving.length === 0 && unread.length === 0;
-  const left = isWhole ? undefined : await desk().leftOut(files, leaving, unread);
-  const tables: GivenTable[] = [];
-  for (const sheet of sheets)
-    tables.push(givenTable(sheet, await inSlices(sheet.rows), left?.rows.get(sheet.file)));
-  return [...tables, ...(left?.tables ?? [])];
-}
-
-/** The files to work out: the edits made, each row counted as the page counts it. */
-function editedFiles({ files }: GivenStudy, tables: readonly GivenTable[], history: History) {
-  const edits = heldEdits(history);
-  if (edits.length === 0) return files;
-  const forms = tables.map(({ file, headers, dialect }) => ({ file, headers, dialect }));
-  return desk().edited(files, edits, { forms, keepsRowNumbers: true });
+  return useMemo(() => ({ readOut, workedOut, tried, ...actions }), [readOut, workedOut, tried, actions]);
 }
 
 /** Lets through a new step, or one more hundredth of the same. */
@@ -238,10 +218,4 @@ function sparingly(tell: (step: string, share: number) => void): typeof tell {
     last = { step, hundredth };
     tell(step, share);
   };
-}
-
-function nothingRead(name: string, problems: readonly Problem[]): string {
-  const [first] = problems;
-  const reason = first === undefined ? "" : ` ${first.file}: expected ${first.expected}. ${first.mend}`;
-  return `${name} is not a study: none of its files could be read as a table.${reason}`;
 }

@@ -1,5 +1,4 @@
-import { type ReactElement, useState } from "react";
-import type { Analysis } from "../../core/analysis-result.ts";
+import { type ReactElement, useMemo, useState } from "react";
 import type { Fix, Problem } from "../../core/study/problem.ts";
 import marginStyles from "../margin/margin.module.css";
 import { usePage } from "../state/page-context.ts";
@@ -9,12 +8,14 @@ import { rowNumbering } from "./row-order.ts";
 import styles from "./tables.module.css";
 
 const SHOWN_AT_ONCE = 40;
+const NO_PROBLEMS: readonly Problem[] = [];
 
 /** Every problem of the input: where, what stands there, what was expected, how to mend it. */
-export function Problems({ analysis }: { readonly analysis: Analysis }): ReactElement {
+export function Problems(): ReactElement {
+  const { study } = usePage();
   const [most, setMost] = useState(SHOWN_AT_ONCE);
-  const { problems } = analysis.study;
-  const sorted = problems.toSorted((a, b) => rank(a) - rank(b));
+  const problems = study.readOut?.study.problems ?? NO_PROBLEMS;
+  const sorted = useMemo(() => problems.toSorted((a, b) => rank(a) - rank(b)), [problems]);
   return (
     <section className={marginStyles.part}>
       <h2>Problems</h2>
@@ -39,14 +40,14 @@ export function Problems({ analysis }: { readonly analysis: Analysis }): ReactEl
 /** Writes what is safe to write where a problem has one mend alone. */
 function Mend({ fix }: { readonly fix: Fix }): ReactElement | null {
   const { state, dispatch, study } = usePage();
-  const { workedOut } = study;
-  const sheet = workedOut?.analysis.study.sheets.find(({ file }) => file === fix.file);
+  const { readOut } = study;
+  const sheet = readOut?.study.sheets.find(({ file }) => file === fix.file);
   const column = sheet?.headers.indexOf(fix.column) ?? -1;
-  if (workedOut === undefined || sheet === undefined || column < 0) return null;
+  if (readOut === undefined || sheet === undefined || column < 0) return null;
   const { file, now } = fix;
   const mend = () => {
-    // The row as the last analysis counts it, by the number by which edits know it.
-    const foundAt = editsByFile(heldEdits(workedOut.history)).get(file);
+    // The row as the last reading counts it, by the number by which edits know it.
+    const foundAt = editsByFile(heldEdits(readOut.history)).get(file);
     const row = rowNumbering(foundAt?.added ?? []).known(fix.row);
     const edited = editsByFile(heldEdits(state.history)).get(file)?.cells.get(row)?.get(column);
     const was = edited ?? sheet.rows.at(sheet.rowNumbers.indexOf(fix.row))?.[column] ?? "";

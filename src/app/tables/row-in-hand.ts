@@ -1,6 +1,5 @@
 import type { Section } from "../../core/study/model.ts";
 import type { MarkedRow } from "../../figures/plates/section-log.tsx";
-import { rowId } from "./grid-steps.ts";
 import type { RowPlace } from "./row-places.ts";
 import type { ShownTable } from "./shown-table.ts";
 
@@ -14,8 +13,8 @@ export interface RowInHand {
 
 interface HandOptions {
   readonly sections: readonly Section[];
-  /** Where rows lie, by the numbers by which edits know them. */
-  readonly places: ReadonlyMap<number, RowPlace>;
+  /** Where the row lies; undefined where it has no place. */
+  readonly at: RowPlace | undefined;
   /** The section to show where the row names none. */
   readonly otherwise: string | undefined;
 }
@@ -24,19 +23,17 @@ interface HandOptions {
 export function rowInHand(
   table: ShownTable,
   place: number,
-  { sections, places, otherwise }: HandOptions,
+  { sections, at, otherwise }: HandOptions,
 ): RowInHand | undefined {
   const row = table.rowNumbers[place];
-  const found = places.get(rowId(table, place));
   const column = table.columns.findIndex(
     ({ meaning, header }) => meaning === "section" || header === "section",
   );
   const named = (table.rows[place]?.[column] ?? "").trim();
   const section =
-    found?.section ?? sections.find(({ name }) => name === named)?.name ?? otherwise ?? sections[0]?.name;
+    at?.section ?? sections.find(({ name }) => name === named)?.name ?? otherwise ?? sections[0]?.name;
   if (section === undefined) return undefined;
-  if (row === undefined || found === undefined)
-    return { section, words: "This row has no place in a section" };
-  const { baseM, topM } = found;
+  if (row === undefined || at === undefined) return { section, words: "This row has no place in a section" };
+  const { baseM, topM } = at;
   return { section, marked: { baseM, topM, label: `row ${row}` }, words: "" };
 }

@@ -2,7 +2,7 @@ import type { ReactElement } from "react";
 import { usePage } from "../state/page-context.ts";
 import { canWriteFolders } from "../study/folder.ts";
 import { giveOutFolder, giveOutStudy, giveOutTable, giveOutWorkbook } from "../study/give-out.ts";
-import type { WorkedOut } from "../study/use-study.ts";
+import type { ReadOut } from "../study/read-out.ts";
 import type { History } from "./history.ts";
 import { ToolMenu } from "./tool-menu.tsx";
 
@@ -15,9 +15,9 @@ interface SaveMenuProps {
 /** The ways to get the tables out as they are now. */
 export function SaveMenu({ file, tell }: SaveMenuProps): ReactElement {
   const { study, state } = usePage();
-  const save = (give: (study: WorkedOut, history: History) => Promise<string>) => () => {
-    if (study.workedOut === undefined) return;
-    give(study.workedOut, state.history).then(tell, (error: unknown) =>
+  const save = (give: (study: ReadOut, history: History) => Promise<string>) => () => {
+    if (study.readOut === undefined) return;
+    give(study.readOut, state.history).then(tell, (error: unknown) =>
       tell(error instanceof Error ? error.message : String(error)),
     );
   };

@@ -1,7 +1,7 @@
 import { X } from "lucide-react";
 import { type KeyboardEvent, type ReactElement, useLayoutEffect, useMemo, useRef, useState } from "react";
 import { isInFrame } from "../../figures/height-scale.ts";
-import { sectionLog } from "../../figures/plates/section-log.tsx";
+import { markableLog } from "../../figures/plates/section-log.tsx";
 import { position } from "../../report/wordings/numbers.ts";
 import plateStyles from "../plate/plate.module.css";
 import { useReading } from "../plate/use-reading.ts";
@@ -28,10 +28,11 @@ export function SectionLog({ open, hand, goTo, close }: SectionLogProps): ReactE
   const room = useRoom(frame);
   const { analysis } = open;
   const { section, marked } = hand;
-  const drawing = useMemo(
-    () => sectionLog(analysis, { section, marked, bodyHeight: Math.max(LEAST_BODY, room - AROUND) }),
-    [analysis, section, marked, room],
+  const draw = useMemo(
+    () => markableLog(analysis, { section, bodyHeight: Math.max(LEAST_BODY, room - AROUND) }),
+    [analysis, section, room],
   );
+  const drawing = useMemo(() => draw(marked), [draw, marked]);
   const reading = useReading(drawing, open);
   const { heightM, panel } = reading;
   const onKeyDown = (event: KeyboardEvent) => {

@@ -1,8 +1,8 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import type { Sheet } from "../../core/study/model.ts";
+import type { Study } from "../../core/study/model.ts";
 import type { Problem } from "../../core/study/problem.ts";
 import { baseName } from "../../core/tables/base-name.ts";
-import { resultTables } from "../../report/tables/index.ts";
+import type { ResultDeclaration } from "../../report/tables/result-table.ts";
 import { editedHeaders, NO_EDITS, type TableEdits } from "./edits.ts";
 import type { GivenTable } from "./given-table.ts";
 import { rowNumbering, rowsInOrder } from "./row-order.ts";
@@ -50,10 +50,8 @@ export interface ReadTable {
   readonly lastRow: number;
 }
 
-/** What an analysis found, and the edits that it rests on. */
-export interface Found {
-  readonly sheets: readonly Sheet[];
-  readonly problems: readonly Problem[];
+/** What a reading found, and the edits that it rests on. */
+export interface Found extends Pick<Study, "sheets" | "problems" | "sections"> {
   readonly edits: ReadonlyMap<string, TableEdits>;
 }
 
@@ -160,8 +158,9 @@ function holdsNumbers(cells: readonly string[]): boolean {
   return filled.length > 0 && filled.every((cell) => /^[-+−]?[\d.]+(e[-+]?\d+)?$/i.test(cell.trim()));
 }
 
-export function shownResults(analysis: Analysis): readonly ShownTable[] {
-  return resultTables(analysis).map(({ name, columns, rows }) => ({
+export function shownResult(declaration: ResultDeclaration, analysis: Analysis): ShownTable {
+  const { name, columns, rows } = declaration.fill(analysis);
+  return {
     id: name,
     title: name,
     columns: columns.map((column) => ({
@@ -178,7 +177,7 @@ export function shownResults(analysis: Analysis): readonly ShownTable[] {
     setAside: new Map(),
     unread: new Map(),
     nextRow: { id: rows.length + 2, shown: rows.length + 2 },
-  }));
+  };
 }
 
 /** The problems of each cell, by row number and place of the column; -1 where the whole row is meant. */
@@ -187,14 +186,26 @@ export function problemsByCell(
   problems: readonly Problem[],
 ): ReadonlyMap<string, readonly Problem[]> {
   const byCell = new Map<string, Problem[]>();
+  const placeOf = remembered((name: string | undefined) =>
+    columns.findIndex(({ header, meaning }) => meaning === name || header === name),
+  );
   for (const problem of problems) {
-    const place = columns.findIndex(
-      ({ header, meaning }) => meaning === problem.column || header === problem.column,
-    );
+    const place = placeOf(problem.column);
     const key = cellKey(problem.row ?? 1, place);
-    byCell.set(key, [...(byCell.get(key) ?? []), problem]);
+    const own = byCell.get(key);
+    if (own === undefined) byCell.set(key, [problem]);
+    else own.push(problem);
   }
   return byCell;
+}
+
+function remembered<Key, Value>(find: (key: Key) => Value): (key: Key) => Value {
+  const known = new Map<Key, Value>();
+  return (key) => {
+    const value = known.get(key) ?? find(key);
+    known.set(key, value);
+    return value;
+  };
 }
 
 export const cellKey = (row: number, column: number): string => `${row}:${column}`;

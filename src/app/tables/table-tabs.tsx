@@ -5,7 +5,10 @@ import type { ShownTable } from "./shown-table.ts";
 import styles from "./tables.module.css";
 
 interface TableTabsProps {
-  readonly groups: readonly (readonly [title: string, tables: readonly ShownTable[]])[];
+  readonly groups: readonly (readonly [
+    title: string,
+    tables: readonly Pick<ShownTable, "id" | "problems">[],
+  ])[];
   readonly current: string;
 }
 

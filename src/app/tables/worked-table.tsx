@@ -7,7 +7,7 @@ import { insertedRowStep, rowId } from "./grid-steps.ts";
 import { chosenRows, type Sorting, sortedBy } from "./row-choice.ts";
 import { rowInHand } from "./row-in-hand.ts";
 import { rowNumbering } from "./row-order.ts";
-import { nearestRow, type RowPlace, rowPlaces } from "./row-places.ts";
+import { nearestRow, rowPlace } from "./row-places.ts";
 import { SectionLog } from "./section-log.tsx";
 import { FIRST_CELL, HEADER } from "./selection.ts";
 import type { Found, ShownTable } from "./shown-table.ts";
@@ -18,7 +18,8 @@ import type { Draft } from "./use-grid.ts";
 
 interface WorkedTableProps {
   readonly table: ShownTable;
-  readonly open: Opened;
+  /** Absent until the study is worked out. */
+  readonly open?: Opened;
   readonly found: Found;
 }
 
@@ -64,7 +65,7 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
   };
   const log = useLog({ table, open, found }, selection.active.place);
   const goToLevel = (heightM: number) => {
-    const row = log && nearestRow(log.places, log.hand.section, heightM);
+    const row = log?.nearest(heightM);
     const place = row === undefined ? -1 : table.rowIds.indexOf(row);
     if (places.includes(place)) selectPlace(place, Math.max(0, selection.active.column));
     else tell("No row that is shown here lies in this section.");
@@ -88,7 +89,7 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
           row={place.table === table.id ? place.row : undefined}
           edit={(step) => dispatch({ kind: "edited", step })}
         />
-        {state.isLogOpen && log && (
+        {state.isLogOpen && log && open && (
           <SectionLog
             open={open}
             hand={log.hand}
@@ -101,23 +102,26 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
   );
 }
 
-/** The section of the row in hand and where it lies there, and where all rows of the table lie. */
+/** The section of the row in hand and where it lies there, and the row nearest to a height of that section. */
 function useLog({ table, open, found }: WorkedTableProps, place: number) {
-  const { sections } = open.analysis.study;
-  const placesOfRows = useMemo(() => {
-    const { known } = rowNumbering(found.edits.get(table.id)?.added ?? []);
-    return new Map<number, RowPlace>(
-      [...rowPlaces(sections, table.id)].map(([row, place]) => [known(row), place]),
-    );
-  }, [sections, found, table.id]);
-  const otherwise = open.focus.section?.name;
+  const { sections } = found;
+  const { shown, known } = useMemo(
+    () => rowNumbering(found.edits.get(table.id)?.added ?? []),
+    [found, table.id],
+  );
+  const otherwise = open?.focus.section?.name;
   const id = rowId(table, place);
   const hand = useMemo(
-    () => rowInHand(table, place, { sections, places: placesOfRows, otherwise }),
+    () => rowInHand(table, place, { sections, at: rowPlace(sections, table.id, shown(id)), otherwise }),
     // oxlint-disable-next-line react-hooks/exhaustive-deps -- another cell of the same row changes nothing
-    [table.id, id, table.rowNumbers[place], sections, placesOfRows, otherwise],
+    [table.id, id, table.rowNumbers[place], sections, shown, otherwise],
   );
-  return hand && { hand, places: placesOfRows };
+  const section = sections.find(({ name }) => name === hand?.section);
+  const nearest = (heightM: number) => {
+    const row = section && nearestRow(section, table.id, heightM);
+    return row === undefined ? undefined : known(row);
+  };
+  return hand && { hand, nearest };
 }
 
 function countWords({ rows }: ShownTable, found: number): string {

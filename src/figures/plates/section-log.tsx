@@ -28,6 +28,14 @@ const NARROWEST = 150;
 
 /** A section as it was logged and searched, narrow enough to stand beside a table, with the place of one row marked. */
 export function sectionLog(analysis: Analysis, { marked, ...view }: LogView): Drawing {
+  return markableLog(analysis, view)(marked);
+}
+
+/** The same, drawn once for whatever rows are marked in it one after another. */
+export function markableLog(
+  analysis: Analysis,
+  view: SectionView,
+): (marked: MarkedRow | undefined) => Drawing {
   const names = analysis.study.sections.map((section) => section.name);
   const id = `log-${slugOf(view.section, names, "section")}`;
   const span = { top: BODY_TOP, bottom: BODY_TOP + (view.bodyHeight ?? BODY_HEIGHT) };
@@ -39,19 +47,20 @@ export function sectionLog(analysis: Analysis, { marked, ...view }: LogView): Dr
     ...railColumn(id, analysis, frame),
   ];
   const { placed, right } = placeColumns(columns, MARGIN + POINTER);
-  return setSheet({
-    id,
-    title: section.title,
-    subtitle: `${section.axis === "depth" ? "Depth" : "Height"} in ${section.unit}`,
-    description: describe(section, marked),
-    right: Math.max(right, lineLeft(placed) + 24),
-    bottom: span.bottom,
-    narrowest: NARROWEST,
-    columns: placed,
-    body: marked && <RowMark y={y} marked={marked} left={lineLeft(placed)} right={right} />,
-    panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
-    view,
-  });
+  return (marked) =>
+    setSheet({
+      id,
+      title: section.title,
+      subtitle: `${section.axis === "depth" ? "Depth" : "Height"} in ${section.unit}`,
+      description: describe(section, marked),
+      right: Math.max(right, lineLeft(placed) + 24),
+      bottom: span.bottom,
+      narrowest: NARROWEST,
+      columns: placed,
+      body: marked && <RowMark y={y} marked={marked} left={lineLeft(placed)} right={right} />,
+      panels: [{ section: section.name, left: MARGIN, right, ...span, scale: y }],
+      view,
+    });
 }
 
 function describe(section: Section, marked: MarkedRow | undefined): string {

@@ -6,7 +6,7 @@ import { type Part, putTogether, takeApart } from "../../../src/run/parts.ts";
 function sent(value: unknown) {
   const parts: Part[] = [];
   const { take, whole } = putTogether();
-  const rest = takeApart(value, (part) => parts.push(structuredClone(part)));
+  const rest = takeApart((part) => parts.push(structuredClone(part)))(value);
   for (const part of parts) take(part);
   return { parts, whole: whole(structuredClone(rest)) };
 }

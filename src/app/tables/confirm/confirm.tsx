@@ -8,15 +8,15 @@ import { questionsOf } from "./questions.ts";
 
 /** What every column was taken to be: questions first, then the columns, each to be changed; open where something is asked. */
 export function Confirm(): ReactElement | null {
-  const { open, study } = usePage();
-  const read = open?.analysis.study;
+  const { study } = usePage();
+  const read = study.readOut?.study;
   const questions = useMemo(() => (read === undefined ? [] : questionsOf(read)), [read]);
   if (read === undefined) return null;
   const isOwnPackage = read.files.some(({ name }) => /(?:^|[/\\])datapackage\.json$/.test(name));
   const isDue = questions.length > 0 || !isOwnPackage;
   return (
     // A study that is opened anew begins with its own state.
-    <details key={`${study.workedOut?.key} ${read.name}`} className={styles.confirm} open={isDue}>
+    <details key={`${study.readOut?.key} ${read.name}`} className={styles.confirm} open={isDue}>
       <summary>
         What each column was taken to be
         {questions.length > 0 && <b> · {plural(questions.length, "question")}</b>}
