@@ -38,6 +38,7 @@ const variants: Readonly<Record<string, string>> = {
   "longest-doubled": "twice the longest duration",
   "constant-recovery": "constant recovery",
   sampled: "horizons searched alone",
+  continuous: "finds that could lie anywhere",
 };
 
 /** A change of priors or forms as a person reads it. */

@@ -69,9 +69,17 @@ function answersOf(
   const name = `scenarios: ${section.name}, ${set.set}`;
   const step = progress && ((done: number, total: number) => progress(name, done, total));
   step?.(0, 1);
-  const problem = problemOf(setCase, window, step);
+  const anywhere = problemOf(setCase, window, step);
+  const searched = withSampledHorizons(anywhere, setCase, taxa);
+  const isSearched = searched !== undefined && isFromSearches(setCase);
+  const problem = isSearched ? searched : anywhere;
   const evidence = scenarioEvidence(problem);
-  const variants = [...variantsOf(evidence), ...otherForms(setCase, problem, taxa)];
+  const constant = withConstantRecovery(anywhere, setCase);
+  const variants = [
+    ...variantsOf(evidence),
+    ...otherForm(setCase, "constant-recovery", constant),
+    ...(isSearched ? otherForm(setCase, "continuous", anywhere) : otherForm(setCase, "sampled", searched)),
+  ];
   const place = { section: section.name, set: set.set };
   const weighed = variants.map((variant) => weigh(variant, problem.horizons, settings.timing));
   const levels = levelsOf(evidence);
@@ -91,20 +99,23 @@ function answersOf(
 }
 
 /**
- * The comparison with constant recovery, where it is not, and from the sampled horizons, where searches are listed: for
- * all candidates alone.
+ * Whether a taxon can have been found in the samples searched for its group alone, so that nothing is known of an end
+ * between two of them: searches are listed, and neither recovery by facies or table nor misplaced finds are declared,
+ * which only finds that could lie anywhere can follow.
  */
-function otherForms(
-  setCase: SetCase,
-  problem: ScenarioProblem,
-  taxa: readonly LocalTaxon[],
-): readonly Variant[] {
-  if (setCase.set.set !== allCandidates) return [];
-  const constant = withConstantRecovery(problem, setCase);
-  const sampled = withSampledHorizons(problem, setCase, taxa);
-  return [...otherForm("constant-recovery", constant), ...otherForm("sampled", sampled)];
+function isFromSearches({ section, set, settings }: SetCase): boolean {
+  const groups = new Set(set.ranges.map((range) => range.group));
+  const { recovery } = settings.ranges;
+  return (
+    (recovery === "uniform" || recovery === "effort") &&
+    settings.timing.contamination === 0 &&
+    section.searches.every((search) => !search.derived || !groups.has(search.group))
+  );
 }
 
-function otherForm(name: string, problem: ScenarioProblem | undefined): readonly Variant[] {
-  return problem === undefined ? [] : [ownVariant(name, scenarioEvidence(problem, "none"))];
+/** The comparison under another form of the finds: for all candidates alone. */
+function otherForm({ set }: SetCase, name: string, problem: ScenarioProblem | undefined): readonly Variant[] {
+  return problem === undefined || set.set !== allCandidates
+    ? []
+    : [ownVariant(name, scenarioEvidence(problem, "none"))];
 }

@@ -13,6 +13,7 @@ export const scenarioBasis: readonly Basis[] = [
       "Evidence of one level, of exactly two to four pulses, of a gradual end, of one level at a marker horizon and of independent ends, each the likelihood of all last finds averaged over its prior by deterministic quadrature in logarithms; more than 14 taxa in four pulses, or 20 in three, by importance sampling with its error. Probabilities are over the scenarios that have a prior.",
     assumptions: [
       uniformFinds,
+      "Where searches are listed a taxon is found in samples searched for its group alone, by their effort: all ends between two of them are equally likely (variant continuous: finds could lie anywhere). Where they are not, the reverse (variant sampled).",
       flatPriors,
       "A scenario that allows more is not better for it: it spreads its prior over more possibilities, and only data that need them pay for that; a wider window or longer duration lowers the evidence of the scenarios that use it.",
       "One level at a marker horizon is one idea, its prior shared among the horizons; among-horizons is their sum and is not counted again.",

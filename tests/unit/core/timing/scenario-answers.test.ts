@@ -107,16 +107,22 @@ describe("scenarios of a set", () => {
     expect(weightsOf(timingOf(together), "constant-recovery")).toEqual([]);
   });
 
-  it("show the answer from the horizons searched beside, where all finds lie in samples", () => {
+  it("are weighed from the horizons searched where all finds lie in samples, and beside as if finds could lie anywhere", () => {
     const sampled = ["Orbula vesta", "Lenta acuta", "Spiralis nova"].map((name, i) =>
       taxon(
         name,
         Array.from({ length: 9 }, (_, j) => 3 * (j + 1) - i),
       ),
     );
-    const rows = weightsOf(timingOf(sampled), "sampled");
-    expect(rows.find((row) => row.scenario === "single")?.logEvidence).toBeLessThan(0);
-    expect(weightsOf(timingOf(together), "sampled")).toEqual([]);
+    const single = (timing: Partial<Settings["timing"]>, variant?: string) =>
+      weightsOf(timingOf(sampled, { timing }), variant).find((row) => row.scenario === "single")?.logEvidence;
+    expect(single({}, "sampled")).toBeUndefined();
+    expect(single({}, "continuous")).toBeLessThan(0);
+    expect(single({})).not.toBe(single({}, "continuous"));
+    expect(single({ contamination: 0.02 }, "continuous")).toBeUndefined();
+    expect(single({ contamination: 0.02 }, "sampled")).toBe(single({}));
+    for (const variant of ["sampled", "continuous"])
+      expect(weightsOf(timingOf(together), variant)).toEqual([]);
   });
 
   it("are not compared for one taxon", () => {
