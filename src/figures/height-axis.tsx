@@ -57,7 +57,7 @@ function pieceTicks(
   [baseM, topM]: readonly [number, number],
 ): AxisTicks {
   const [from, to] = extent([readingAt(reading, baseM), readingAt(reading, topM)]);
-  if (from === undefined || to === undefined) return { labelled: [], between: [] };
+  if (from === undefined || to === undefined || !(to > from)) return { labelled: [], between: [] };
   const count = Math.max(1, Math.round(Math.abs(y(topM) - y(baseM)) / POINTS_PER_TICK));
   const values = ticks(from, to, count);
   const format = tickFormat(from, to, count);

@@ -1,6 +1,7 @@
 import { area, line } from "d3";
 import type { ReactElement } from "react";
 import { clippedSpan, type HeightScale, isInFrame, spanOf } from "../height-scale.ts";
+import { WAS_PAINT } from "../legend-timing-swatch.tsx";
 import { boxPath } from "../marks/mark-path.ts";
 import { round } from "../numbers.ts";
 import { COLOURS } from "../theme.ts";
@@ -36,6 +37,8 @@ interface LevelColumnProps {
   readonly limit: number;
   readonly ifOne?: LevelSet;
   readonly joint: readonly LevelSet[];
+  /** The curve before a choice that is only tried. */
+  readonly ghost?: readonly ChancePoint[];
 }
 
 export const LEVEL_LANE = 9;
@@ -43,7 +46,7 @@ const LANE_GAP = 4;
 
 /** Levels at which all could have ended: p along the section, and beside it the sets of levels not excluded. */
 export function LevelColumn(props: LevelColumnProps): ReactElement {
-  const { x, width, y, title, unit, curve, limit, ifOne, joint } = props;
+  const { x, width, y, title, unit, curve, limit, ifOne, joint, ghost = [] } = props;
   const highest = Math.max(2 * limit, ...curve.map((point) => point.p));
   const { scale, tickLabels } = linearColumn([0, Math.min(1, highest)], width);
   const lane = (place: number) => x + width + LANE_GAP + place * (LEVEL_LANE + LANE_GAP);
@@ -52,6 +55,7 @@ export function LevelColumn(props: LevelColumnProps): ReactElement {
       <ColumnHead x={x} top={spanOf(y).top} title={title} unit={unit} />
       <ColumnGround x={x} width={width} y={y} scale={scale} tickLabels={tickLabels} />
       <ChanceCurve x={x} y={y} scale={scale} curve={curve} />
+      <GhostCurve x={x} y={y} scale={scale} curve={ghost} />
       <LimitLine x={x + scale(limit)} y={y} />
       {ifOne && <path d={setBoxes([ifOne], lane(0), y)} {...levelSetPaint("if-one")} />}
       {joint.length > 0 && <path d={setBoxes(joint, lane(1), y)} {...levelSetPaint("joint")} />}
@@ -100,6 +104,16 @@ function ChanceCurve({ x, y, scale, curve }: CurveProps): ReactElement | null {
       <path d={edge(shown) ?? ""} fill="none" stroke={COLOURS.blue} strokeWidth={0.9} />
     </>
   );
+}
+
+function GhostCurve({ x, y, scale, curve }: CurveProps): ReactElement | null {
+  const shown = curve.filter((point) => isInFrame(y, point.heightM));
+  if (shown.length === 0) return null;
+  const edge = line<ChancePoint>(
+    (point) => round(x + scale(point.p)),
+    (point) => round(y(point.heightM)),
+  );
+  return <path d={edge(shown) ?? ""} {...WAS_PAINT} />;
 }
 
 const THINNEST = 1.2;

@@ -38,7 +38,7 @@ function oneLevelWords(answer: TimingAnswer | undefined, confidence: number): st
   if (answer === undefined) return "Whether they could have ended at one level was not asked.";
   if (answer.p === undefined)
     return "Whether they could have ended at one level cannot be answered from these finds.";
-  const test = `common-end, ${answer.taxa} taxa, p ${pWords(answer.p)}`;
+  const test = `${answer.taxa} taxa, exact test of one common end, p ${pWords(answer.p)}`;
   if (rejectsOneLevel(answer.p, confidence)) return `One level for all of them is rejected (${test}).`;
   return `They cannot be told from one level (${test}).`;
 }
@@ -49,28 +49,30 @@ function pWords(p: number): string {
 
 function whereWords({ ifOne, joint }: DrawnTiming, section: Section): string {
   const given = levelsWords(ifOne, section);
-  const single = given === "" ? "" : `If there was one level, it lies from ${given} (common-end-given).`;
+  const single = given === "" ? "" : `If there was one level, it lies from ${given}.`;
   const isEmpty = joint.some((answer) => answer.outcome === "empty");
-  if (isEmpty)
-    return `${single} No single level fits these finds: the joint set is empty (common-end-joint).`.trim();
+  if (isEmpty) return `${single} No single level fits these finds.`.trim();
   const parts = joint.map((answer) => levelsWords(answer, section)).filter((words) => words !== "");
   if (parts.length === 0) return single;
-  return `${single} Levels not excluded: ${parts.join(" and ")} (common-end-joint).`.trim();
+  return `${single} Levels not excluded: ${parts.join(" and ")}.`.trim();
 }
+
+/** As fine as a level can be read off a plate. */
+const DECIMALS = { m: 2, cm: 0, mm: 0, ft: 2 } as const;
 
 function levelsWords(answer: TimingAnswer | undefined, section: Section): string {
   if (answer?.low === undefined) return "";
-  const high =
-    answer.high === undefined ? "beyond the top of the section" : formatGiven(answer.high, section);
-  return `${formatGiven(answer.low, section)} to ${high}`;
+  const low = formatGiven(answer.low, section, DECIMALS[section.unit]);
+  if (answer.high === undefined) return `${low} to beyond the top of the section`;
+  return `${low.replace(/ .*$/, "")} to ${formatGiven(answer.high, section, DECIMALS[section.unit])}`;
 }
 
 function durationWords({ durationLower, durationBoxes }: DrawnTiming): string {
   const least = durationLower?.low;
   const most = durationBoxes.map(boxWords);
   const words = [
-    ...(least === undefined ? [] : [`at least ${roundedWords(least)} m (duration-lower)`]),
-    ...(most.length === 0 ? [] : [`${most.join(", ")} (duration-box)`]),
+    ...(least === undefined ? [] : [`at least ${roundedWords(least)} m`]),
+    ...(most.length === 0 ? [] : [most.join(", ")]),
   ];
   return words.length === 0
     ? ""

@@ -26,11 +26,21 @@ export function timingSentence(told: TimingCase): Words {
     return say`${strong(taxa)} in ${told.section.title}: too few to ask whether they ended together.`;
   const isRejected = rejectsOneLevel(test.p, told.analysis.study.settings.confidence);
   return [
+    ...survivorWords(told),
     ...gateWords(told),
     ...openingWords({ told, test, taxa, isRejected }),
     ...(isAlignedTooWell(test.p) ? tooWellWords() : placeWords(told, isRejected)),
     ...gradualWords(told, isRejected),
   ];
+}
+
+/** Where most taxa live on, the few not found above the main horizon were picked by that. */
+function survivorWords({ analysis, section }: TimingCase): Words {
+  const isWarned = analysis.timing.cautions.some(
+    (c) => c.code === "timing-most-survive" && c.section === section.name,
+  );
+  if (!isWarned) return [];
+  return say`${strong("Most taxa live on above the main horizon")}, so the few not found there tell little of when they ended. `;
 }
 
 /** Where finds thin out upward: what a decline does not harm, before all that it does. */
@@ -43,7 +53,7 @@ function gateWords({ isDistrusted, answers, section, analysis }: TimingCase): Wo
   if (proof?.low === undefined || proof.high === undefined)
     return [
       ...opening,
-      "nothing bounds a common level from above. What follows takes recovery as constant. ",
+      "nothing bounds a common level from above. What follows takes recovery as constant: ",
     ];
   const main = analysis.markers.main.bySection.get(section.name);
   const where =
@@ -89,16 +99,24 @@ function weightWords(
     const beforehand = list(named.map(({ prior }) => probability(prior)));
     return say`; ${strong("no scenario holds half of the weight")}: ${list(named.map(leadWeight))} (beforehand ${beforehand})`;
   }
-  const held = say`${strong(scenarioPhrase(lead.kind))} ${lead.kind.startsWith("pulses") ? "have" : "has"} ${strong(probability(lead.probability))} of the weight (${probability(lead.prior)} beforehand)`;
+  const held = say`${strong(scenarioPhrase(lead.kind))} ${lead.kind.startsWith("pulses") ? "have" : "has"} ${strong(inWords(lead.probability))} of the weight (${probability(lead.prior)} beforehand)`;
   const at =
     lead.horizon === undefined
       ? []
-      : say`, most of it at ${lead.horizon} (${probability(weightAt(told, lead.horizon))})`;
+      : say`, most of it at ${lead.horizon} (${inWords(weightAt(told, lead.horizon))})`;
   const isAgainst = isRejected === (lead.kind === "one-level");
-  return [isAgainst ? "; yet " : "; ", ...held, ...at];
+  return [isAgainst ? "; yet " : "; ", ...held, ...at, ...earlierWords(told, lead)];
 }
 
-const leadWeight = ({ kind, probability: p }: Lead): string => `${scenarioPhrase(kind)} ${probability(p)}`;
+/** One level at a horizon does not compete with that and an earlier pulse: no scenario is both. */
+function earlierWords({ analysis, section, set }: TimingCase, { kind }: Lead): Words {
+  const isOpen = analysis.timing.cautions.some(
+    (c) => c.code === "scenario-horizon-favoured" && c.section === section.name && c.subject === set,
+  );
+  return isOpen && kind === "one-level" ? say`; an earlier pulse besides is ${strong("not excluded")}` : [];
+}
+
+const leadWeight = ({ kind, probability: p }: Lead): string => `${scenarioPhrase(kind)} ${inWords(p)}`;
 
 const weightAt = ({ weights }: TimingCase, horizon: string): number =>
   weights.find((one) => one.horizon === horizon)?.probability ?? 0;
@@ -129,39 +147,43 @@ function levelWords(told: TimingCase, main: string, shown: readonly Offset[], le
   const [first] = shown;
   const level = percent(first?.level ?? 0);
   if (lead.kind === "one-level")
-    return say`. If they ended together, it was ${strong(offsetInterval(first?.low ?? 0, first?.high ?? 0))} from ${main} (${level}), after it with probability ${probability(first?.probabilityAfter ?? 0)}${higherWords(told)}.`;
+    return say`. If they ended together, it was ${strong(offsetInterval(first?.low ?? 0, first?.high ?? 0))} from ${main} (${level}), after it with probability ${inWords(first?.probabilityAfter ?? 0)}${higherWords(told)}.`;
   const each = shown.map(
-    ({ scenario, pulse = 1, low, high }, place) =>
-      `the ${pulseWords(scenario, pulse)}${place === 0 ? " lies" : ""} ${offsetInterval(low, high)}`,
+    ({ scenario, pulse = 1, low, high }) => `the ${pulseWords(scenario, pulse)} ${offsetInterval(low, high)}`,
   );
-  return say`. Of ${scenarioPhrase(lead.kind)}, ${strong(list(each))} from ${main} (${level})${higherWords(told)}.`;
+  return say`: ${strong(list(each))} from ${main} (${level})${higherWords(told)}.`;
 }
+
+/** A chance inside a sentence: `over 0.999`. */
+const inWords = (p: number): string =>
+  probability(p)
+    .replace(/^>\u00a0/, "over\u00a0")
+    .replace(/^<\u00a0/, "under\u00a0");
 
 function higherWords({ analysis, section, set }: TimingCase): string {
   const isLess = analysis.timing.cautions.some(
     (c) => c.code === "timing-less-effort-above" && c.section === section.name && c.subject === set,
   );
-  return isLess ? ", or higher, since the samples just above their last finds are small" : "";
+  return isLess ? ", or higher, since the samples just above are small" : "";
 }
 
 /** How gradual it must have been where one level is rejected, and how gradual it could still be in any case. */
 function gradualWords({ by, section }: TimingCase, isRejected: boolean): Words {
   const shortest = by("duration-lower");
-  const least =
-    isRejected && shortest?.low !== undefined && shortest.level !== undefined
-      ? say` Their local disappearance then took at least ${strong(inMetres(shortest.low))} (${percent(shortest.level)}).`
-      : [];
-  return [...least, ...longestWords(by("duration-box"), section)];
+  const longest = longestWords(by("duration-box"), section);
+  if (!isRejected || shortest?.low === undefined || shortest.level === undefined)
+    return [" A local disappearance ", ...longest];
+  return say` Their local disappearance then took at least ${strong(inMetres(shortest.low))} (${percent(shortest.level)}); one ${longest}`;
 }
 
 /** A duration that the section is too short to hold is told as that: its number says nothing about the rock. */
 function longestWords(longest: TimingAnswer | undefined, section: TimingCase["section"]): Words {
-  if (longest?.high === undefined)
-    return say` How long their local disappearance took cannot be bounded from above.`;
-  const of = longest.taxa === longest.taxaOfSet ? "these taxa" : `the ${longest.taxa} best sampled of them`;
-  return isBeyond(longest, section)
-    ? say` A local disappearance of ${of} spread over ${strong("more than the whole section")} cannot be excluded.`
-    : say` A local disappearance of ${of} spread over up to ${strong(inMetres(longest.high))} cannot be excluded.`;
+  if (longest?.high === undefined) return ["of any length cannot be excluded."];
+  const over = isBeyond(longest, section)
+    ? say`over ${strong("more than the whole section")}`
+    : say`over up to ${strong(inMetres(longest.high))}`;
+  const of = longest.taxa === longest.taxaOfSet ? "" : ` (of the ${longest.taxa} best sampled)`;
+  return say`${over}${of} cannot be excluded.`;
 }
 
 function capital([first = "", ...rest]: Words): Words {

@@ -114,7 +114,7 @@ describe("the sentence of a set of taxa", () => {
     expect(told({ p: 0.46, scenarios: one, offsets, longestM: 1.4 })).toBe(
       "20 candidates cannot be told from one level (p = 0.46); one level has 0.95 of the weight (0.50 beforehand). " +
         "If they ended together, it was −0.12 to +0.60 m from clay (95 %), after it with probability 0.81. " +
-        "A local disappearance of the 12 best sampled of them spread over up to 1.40 m cannot be excluded.",
+        "A local disappearance over up to 1.40 m (of the 12 best sampled) cannot be excluded.",
     );
   });
 
@@ -135,9 +135,11 @@ describe("the sentence of a set of taxa", () => {
       /^One level is rejected for 20 candidates \(p = 0\.0020\) if recovery is constant; two pulses have 0\.86/,
     );
     expect(text).toContain(
-      "Of two pulses, the later lies −0.15 to +0.25 m and the earlier −4.10 to −3.10 m from clay (95 %).",
+      "of the weight (0.25 beforehand): the later −0.15 to +0.25 m and the earlier −4.10 to −3.10 m from clay (95 %).",
     );
-    expect(text).toContain("then took at least 0.80 m (95 %).");
+    expect(text).toContain(
+      "then took at least 0.80 m (95 %); one over up to 9.00 m (of the 12 best sampled) cannot be excluded.",
+    );
   });
 
   it("tells the test and the weights against each other where they disagree", () => {
@@ -192,6 +194,14 @@ describe("the sentence of a set of taxa", () => {
     expect(told({ p: 0.46, main })).toContain("it was 11.50 to 12.50 m (95 %)");
   });
 
+  it("tells a chance that rounds to one or none as over and under", () => {
+    const scenarios = [weight("single", 0.9997), weight("gradual", 0.0003)];
+    const offsets = [offset("single", [-0.5, -0.1], { probabilityAfter: 0.0002 })];
+    const text = told({ p: 0.46, scenarios, offsets });
+    expect(text).toContain("one level has over 0.999 of the weight");
+    expect(text).toContain("after it with probability under 0.001");
+  });
+
   it("of too few taxa asks nothing", () => {
     expect(told({})).toBe("20 candidates in Long Ledge: too few to ask whether they ended together.");
   });
@@ -201,7 +211,7 @@ describe("the sentence of a set of taxa", () => {
       for (const scenarios of [[], one, two]) {
         const text = told({ p, scenarios, offsets: pulses });
         expect(text).not.toMatch(/sudden|simultan|extinct/i);
-        expect(text).toContain("cannot be bounded from above");
+        expect(text).toMatch(/of any length cannot be excluded\.$/);
       }
   });
 });
