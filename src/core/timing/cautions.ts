@@ -129,5 +129,18 @@ export function besideCautions(section: string, candidates: readonly Candidate[]
     ...of("timing-survivors", "survivor"),
     ...of("timing-late-starts", "late-start"),
     ...of("timing-too-few-horizons", "too-few"),
+    ...surviveCautions(section, candidates),
   ];
+}
+
+/**
+ * Candidates are the taxa not found above the main horizon. Where most taxa are, the few that are not look as if they
+ * ended near it wherever they did.
+ */
+function surviveCautions(section: string, candidates: readonly Candidate[]): Caution[] {
+  const count = (role: Candidate["role"]) => candidates.filter((c) => c.role === role).length;
+  const [survivors, taxa] = [count("survivor"), count("candidate")];
+  return taxa > 0 && survivors > taxa
+    ? [{ code: "timing-most-survive", section, numbers: { survivors, taxa } }]
+    : [];
 }

@@ -128,6 +128,8 @@ const wordings: Readonly<Record<string, (told: Told) => Words>> = {
     say`${plural(n("taxa"), "name")} in timing.steps match no candidate or group here: ${name(text("names"))}.`,
   "timing-survivors": ({ text, n }) =>
     say`${plural(n("taxa"), "survivor")} never ${n("taxa") === 1 ? "enters" : "enter"} a test: ${name(text("names"))}.`,
+  "timing-most-survive": ({ n }) =>
+    say`${strong("Most taxa live on")} above the main horizon (${n("survivors")}, against ${n("taxa")} whose end is in question): those not found above it look as if they ended near it, wherever they did.`,
   "timing-late-starts": ({ text, n }) =>
     say`${plural(n("taxa"), "late start")} left out: ${name(text("names"))}.`,
   "timing-too-few-horizons": ({ text, n }) =>
