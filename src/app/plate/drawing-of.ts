@@ -5,9 +5,17 @@ import { markerPlate } from "../../figures/plates/marker-plate.tsx";
 import { rangeChart } from "../../figures/plates/range-chart.tsx";
 import { timingPlate } from "../../figures/plates/timing-plate.tsx";
 import type { Focus } from "../state/focus.ts";
+import type { Beside } from "../state/page-state.ts";
 
-/** The plate of a station for what is in focus; undefined where it has none. */
-export function drawingOf(focus: Focus, analysis: Analysis, view: View): Drawing | undefined {
+/**
+ * The plate of a station for what is in focus; undefined where it has none.
+ * @param beside what a timing plate shows beside its ranges.
+ */
+export function drawingOf(
+  focus: Focus,
+  analysis: Analysis,
+  { beside, ...view }: View & { readonly beside?: Beside },
+): Drawing | undefined {
   const { station, section, set } = focus;
   if (section === undefined || station === "tables") return undefined;
   switch (station) {
@@ -20,7 +28,7 @@ export function drawingOf(focus: Focus, analysis: Analysis, view: View): Drawing
     case "timing":
       return set === undefined
         ? undefined
-        : timingPlate(analysis, { section: section.name, set: set.set, ...view });
+        : timingPlate(analysis, { section: section.name, set: set.set, ...view, ...beside });
     default:
       return station satisfies never;
   }

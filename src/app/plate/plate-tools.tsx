@@ -3,6 +3,7 @@ import { type ReactElement, useState } from "react";
 import type { Drawing } from "../../figures/plates/drawing.ts";
 import { type Action, actionsOf } from "../state/actions.ts";
 import { type Opened, usePage } from "../state/page-context.ts";
+import { BesideChoice } from "./beside-choice.tsx";
 import { downloadPlate } from "./download-plate.ts";
 import styles from "./plate.module.css";
 
@@ -24,6 +25,7 @@ export function PlateTools({
       <span className={styles.failure} role="alert">
         {failure}
       </span>
+      <BesideChoice open={open} />
       {actions.map((action) => (
         <FrameButton key={action.id} action={action} />
       ))}
@@ -33,7 +35,7 @@ export function PlateTools({
         title={`Save ${drawing.title} as it is seen`}
         onClick={() => {
           setFailure("");
-          downloadPlate(open, page.state.frame).catch((error: unknown) => setFailure(String(error)));
+          downloadPlate(open, page.state).catch((error: unknown) => setFailure(String(error)));
         }}
       >
         <Download aria-hidden size={14} /> SVG

@@ -1,3 +1,4 @@
+import type { TimingAsked } from "../../figures/plates/timing-columns.tsx";
 import { allUndone, type EditStep, type History, redone, undone, withStep } from "../tables/history.ts";
 import { type AskedLevel, NO_TRIAL, type Trial } from "../trial/trial.ts";
 import type { Level } from "./level.ts";
@@ -41,7 +42,11 @@ export interface PageState {
   /** Every edit of the study's tables and settings. */
   readonly history: History;
   readonly trial: Trial;
+  /** What the timing plate shows beside its ranges. */
+  readonly beside: Beside;
 }
+
+export type Beside = Pick<TimingAsked, "shows" | "scenario">;
 
 export type PageEvent =
   | { readonly kind: "placed"; readonly place: Place }
@@ -60,6 +65,7 @@ export type PageEvent =
   | { readonly kind: "level-asked"; readonly level: AskedLevel | undefined }
   | { readonly kind: "let-go" }
   | { readonly kind: "kept"; readonly step: EditStep }
+  | { readonly kind: "beside-shown"; readonly beside: Beside }
   | { readonly kind: "undone" }
   | { readonly kind: "redone" }
   | { readonly kind: "all-undone" }
@@ -122,6 +128,8 @@ export function step(state: PageState, event: PageEvent): PageState {
         history: withStep(state.history, event.step),
         trial: { changes: state.trial.changes, isKept: true },
       };
+    case "beside-shown":
+      return { ...state, beside: event.beside };
     case "undone":
       return isTrying(state.trial)
         ? { ...state, trial: NO_TRIAL }
