@@ -25,11 +25,12 @@ const OPEN_WORDS: Readonly<Record<OpenKind, readonly [LegendSign, string]>> = {
   doubtful: [{ kind: "doubtful", colour }, "doubtful"],
 };
 
+const entry = (sign: LegendSign, label: string, isUsed: boolean): readonly LegendEntry[] =>
+  isUsed ? [{ sign, label }] : [];
+
 /** What the signs of these taxa mean, each only where it is used. */
 export function rangeLegend(taxa: readonly ChartedTaxon[], y: HeightScale): readonly LegendEntry[] {
   const has = (test: (taxon: ChartedTaxon) => boolean) => taxa.some(test);
-  const entry = (sign: LegendSign, label: string, isUsed: boolean): readonly LegendEntry[] =>
-    isUsed ? [{ sign, label }] : [];
   const bar = (role: Role, label: string) =>
     entry(
       { kind: "bar", colour, bar: BARS[role] },

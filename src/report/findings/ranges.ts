@@ -1,11 +1,12 @@
 import type { Analysis } from "../../core/analysis-result.ts";
-import type { RangeEnd } from "../../core/ranges/result.ts";
+import { recoveryStance } from "../../core/ranges/leading.ts";
 import type { Candidate, Role } from "../../core/study/finds-result.ts";
 import type { Section } from "../../core/study/model.ts";
 import { weaknessOf } from "../wordings/cautions.ts";
-import { percent } from "../wordings/numbers.ts";
+import { inMetres, percent, pValue } from "../wordings/numbers.ts";
 import { plural, say, strong, type Words } from "../wordings/words.ts";
-import type { Finding } from "./finding.ts";
+import type { Finding, NumberLine } from "./finding.ts";
+import { candidateTops, standings } from "./range-tops.ts";
 
 const roleWords: Readonly<Record<Role, string>> = {
   candidate: "Candidates: end in question",
@@ -17,7 +18,7 @@ const roleWords: Readonly<Record<Role, string>> = {
 
 const roles: readonly Role[] = ["candidate", "survivor", "aftermath", "late-start", "too-few"];
 
-/** Which taxa count in a section, and which could have lived to the main horizon. */
+/** Which taxa count in a section, what their ends say about the main horizon, and how much that leans on recovery. */
 export function rangesFinding(analysis: Analysis, section: Section): Finding {
   const { candidates, ranges, study } = analysis;
   const here = candidates.filter((c) => c.section === section.name);
@@ -28,38 +29,68 @@ export function rangesFinding(analysis: Analysis, section: Section): Finding {
     station: "ranges",
     section: section.name,
     sentence: sentence(analysis, section),
-    numbers: roles
-      .filter((role) => counts.has(role))
-      .map((role) => ({ label: roleWords[role], value: String(counts.get(role)) })),
+    numbers: [
+      ...roles
+        .filter((role) => counts.has(role))
+        .map((role) => ({ label: roleWords[role], value: String(counts.get(role)) })),
+      ...methodLines(analysis, section),
+      ...leaningLines(analysis, section),
+    ],
     weaknesses: cautions.map((c) => weaknessOf(c, study)),
     methods: ranges.basis,
   };
 }
 
-interface Reach {
-  readonly taxa: number;
-  readonly reaching: readonly string[];
-  readonly short: readonly string[];
+/** How the candidates' tops stand against the main horizon, method by method; the leading one first. */
+function methodLines(analysis: Analysis, section: Section): readonly NumberLine[] {
+  const main = analysis.markers.main.bySection.get(section.name);
+  if (main === undefined) return [];
+  const tops = candidateTops(analysis, section.name);
+  const declines = declineOf(analysis, section) !== undefined;
+  return tops.methods.map((method, place) => {
+    const { reaches, open, short, untold } = standings(tops, method, main.positionM);
+    const isTooShort = declines && recoveryStance(method) === "even-recovery";
+    const notes = [
+      place === 0 ? "leads" : "",
+      isTooShort ? "too short where recovery declines" : "",
+      untold > 0 ? `not told for ${untold}` : "",
+    ].filter((note) => note !== "");
+    return {
+      label: `By ${method}`,
+      value: `${reaches} reach, ${open} open, ${short} below`,
+      ...(notes.length === 0 ? {} : { note: notes.join("; ") }),
+    };
+  });
 }
 
-/** Which candidates' intervals by the leading method that tells reach the main horizon at the study's confidence. */
-function reachOf({ candidates, markers, ranges, study }: Analysis, section: Section): Reach {
-  const main = markers.main.bySection.get(section.name);
-  const reaching: string[] = [];
-  const short: string[] = [];
-  const leadingTops = new Map<string, RangeEnd>();
-  for (const end of ranges.ends) {
-    if (end.end !== "top" || end.section !== section.name || end.reachLevel === undefined) continue;
-    if (!leadingTops.has(end.taxon)) leadingTops.set(end.taxon, end);
-  }
-  for (const candidate of candidates) {
-    if (candidate.section !== section.name || candidate.role !== "candidate") continue;
-    const leading = leadingTops.get(candidate.taxon);
-    if (main !== undefined && candidate.lastM >= main.positionM) reaching.push(candidate.taxon);
-    if (leading?.reachLevel === undefined) continue;
-    (leading.reachLevel <= study.settings.confidence ? reaching : short).push(candidate.taxon);
-  }
-  return { taxa: reaching.length + short.length, reaching, short };
+/** How far the upper bounds move as the assumed shape of recovery changes. */
+function leaningLines({ ranges, candidates }: Analysis, section: Section): readonly NumberLine[] {
+  const asked = new Set(
+    candidates.filter((c) => c.section === section.name && c.role === "candidate").map((c) => c.taxon),
+  );
+  const spreads = ranges.leanings
+    .filter((one) => one.section === section.name && one.end === "top" && asked.has(one.taxon))
+    .flatMap(({ nearestM, furthestM }) =>
+      nearestM === undefined || furthestM === undefined ? [] : [furthestM - nearestM],
+    )
+    .toSorted((a, b) => a - b);
+  const middle = spreads[Math.floor((spreads.length - 1) / 2)];
+  if (middle === undefined) return [];
+  return [
+    {
+      label: "Upper bounds move with the shape of recovery",
+      value: `by ${inMetres(middle)} or less in half`,
+      note: `from the nearest to the furthest bound, of ${plural(spreads.length, "taxon", "taxa")} with bounds`,
+    },
+  ];
+}
+
+/** The pre-check under the gate, where finds of the candidates together thin out upward. */
+function declineOf({ ranges }: Analysis, section: Section): number | undefined {
+  const found = ranges.cautions.find(
+    (c) => c.code === "range-recovery-declines" && c.section === section.name,
+  );
+  return typeof found?.numbers?.p === "number" ? found.numbers.p : undefined;
 }
 
 function sentence(analysis: Analysis, section: Section): Words {
@@ -71,14 +102,34 @@ function sentence(analysis: Analysis, section: Section): Words {
     `${counted} ${counted === 1 ? "has its end" : "have their end"}`,
   )} in question${besideWords(here)}.`;
   if (counted === 0) return opening;
-  if (analysis.markers.main.bySection.get(section.name) === undefined)
-    return [...opening, ...say` The main horizon is not placed here.`];
-  const { taxa, reaching } = reachOf(analysis, section);
+  const main = analysis.markers.main.bySection.get(section.name);
+  if (main === undefined) return [...opening, ...say` The main horizon is not placed here.`];
+  return [...gateWords(analysis, section), ...opening, ...reachWords(analysis, section, main.positionM)];
+}
+
+/** What the pre-check says comes first: it decides which method leads. */
+function gateWords(analysis: Analysis, section: Section): Words {
+  const p = declineOf(analysis, section);
+  if (p === undefined) return [];
+  const [leading] = candidateTops(analysis, section.name).methods;
+  return leading === undefined || recoveryStance(leading) === "even-recovery"
+    ? say`${strong("Finds thin out upward")} (${pValue(p)}), so intervals that take recovery as even are too short. `
+    : say`${strong("Finds thin out upward")} (${pValue(p)}), so ${leading}, which allows for that, leads. `;
+}
+
+function reachWords(analysis: Analysis, section: Section, mainM: number): Words {
+  const tops = candidateTops(analysis, section.name);
+  const [leading] = tops.methods;
+  if (leading === undefined) return [];
+  const { reaches, open, short, untold } = standings(tops, leading, mainM);
+  const told = reaches + open + short;
+  if (told === 0) return say` By ${leading} no end can be told.`;
   const level = percent(analysis.study.settings.confidence);
-  return [
-    ...opening,
-    ...say` ${strong(`${reaching.length} of ${taxa}`)} could have lived to the main horizon: ${reaching.length === 1 ? "its" : "their"} ${level} interval reaches it.`,
-  ];
+  const opened = open === 0 ? "" : `, ${open} of them without a bound inside the section`;
+  const rest = untold === 0 ? "" : `; ${untold} cannot be told`;
+  return say` By ${leading} at ${level} the intervals of ${strong(`${reaches + open} of ${told}`)} reach the main horizon${opened}; ${strong(
+    `${short} ${short === 1 ? "ends" : "end"}`,
+  )} below it${rest}.`;
 }
 
 const beside: readonly (readonly [role: Role, one: string, many: string])[] = [

@@ -8,6 +8,7 @@ import { Block } from "./block.tsx";
 import { ChoicesSection } from "./choices-section.tsx";
 import { MethodsSection } from "./methods-section.tsx";
 import { ProblemsSection } from "./problems-section.tsx";
+import { RangesPart } from "./ranges-part.tsx";
 import { ResultTableBlock } from "./result-table-block.tsx";
 import { reportStyle } from "./style.ts";
 import { InShort, TimingPart } from "./timing-part.tsx";
@@ -74,8 +75,11 @@ export function ReportPage({ analysis, findings, plates, tables, fontFaces }: Re
               <h2 id={idOf(section.name)}>{section.title}</h2>
               <h3>Markers</h3>
               <Block findings={of("markers", section.name)} drawings={drawn("markers", section.name)} />
-              <h3>Ranges</h3>
-              <Block findings={of("ranges", section.name)} drawings={drawn("ranges", section.name)} />
+              <RangesPart
+                {...{ analysis, section }}
+                findings={of("ranges", section.name)}
+                drawings={drawn("ranges", section.name)}
+              />
               <TimingPart
                 findings={of("timing", section.name)}
                 plateOf={(set) => drawn("timing", section.name, set)}
