@@ -7,10 +7,9 @@ export function tame(text: string, most = 60): string {
 /** A table for a terminal: columns as wide as their widest cell, two spaces between. */
 export function textTable(rows: readonly (readonly string[])[], indent = "  "): string {
   const tamed = rows.map((row) => row.map((cell) => tame(cell)));
-  const columns = Math.max(0, ...tamed.map((row) => row.length));
-  const widths = Array.from({ length: columns }, (_, i) =>
-    Math.max(...tamed.map((row) => (row[i] ?? "").length)),
-  );
+  const widths: number[] = [];
+  for (const row of tamed)
+    for (const [i, cell] of row.entries()) widths[i] = Math.max(widths[i] ?? 0, cell.length);
   return tamed
     .map(
       (row) =>

@@ -25,7 +25,7 @@ function settleSection(section: Section, study: Study): SettledFinds {
   const taxa: LocalTaxon[] = [];
   for (const [name, ofTaxon] of byTaxon) {
     const merged = mergeHorizons(ofTaxon);
-    finds.push(...merged.map(settledFind));
+    for (const find of merged) finds.push(settledFind(find));
     const used = merged.filter((find) => find.used === "yes");
     if (used.length > 0) taxa.push(localTaxon(name, { section, study, used, judged: merged, searched }));
   }
@@ -235,7 +235,10 @@ function levelsOf(finds: readonly JudgedFind[]): readonly number[] {
 }
 
 function highest(finds: readonly JudgedFind[]): number | undefined {
-  return finds.length === 0 ? undefined : Math.max(...finds.map((find) => find.heightM));
+  return finds.reduce<number | undefined>(
+    (most, { heightM }) => (most === undefined || heightM > most ? heightM : most),
+    undefined,
+  );
 }
 
 const searchKey = (sample: string, group: string) => `${sample}\u0000${group}`;

@@ -15,6 +15,11 @@ export const sourceWordings = {
     error(`a file of at most ${p.detail}`, "Part the table into several studies, or thin it out."),
   "too-many-columns": (p) =>
     error(`at most ${p.detail} columns`, "Take the columns out that the study does not need."),
+  "table-too-large": (p) =>
+    error(
+      `a table of at most ${p.detail} cells, rows times columns`,
+      "Take columns out that the study does not need, or part the table into several studies.",
+    ),
   "read-as": (p) =>
     caution(
       "comma-separated UTF-8 with a decimal point and the header in row 1",

@@ -2,7 +2,7 @@ import type { HeaderHint, ReadSheet } from "../study/assembly/context.ts";
 import { mapValues, takeRows } from "../study/coded.ts";
 import { type RecognisedColumn, recogniseColumns } from "../study/columns.ts";
 import type { Dialect } from "../study/model.ts";
-import type { ProblemList } from "../study/problem-list.ts";
+import { MOST_ALIKE, type ProblemList } from "../study/problem-list.ts";
 import { columnRows } from "../study/sheet-rows.ts";
 import type { TableDeclaration } from "../study/tables/declare.ts";
 import type { TableName } from "../study/tables/index.ts";
@@ -12,8 +12,8 @@ import { unguardedHeaders } from "./csv.ts";
 import { decimalSign } from "./dialect/decimal.ts";
 import { type DeclaredDialect, tablePath } from "./dialect/declared.ts";
 import { tellDialect } from "./dialect/tell-dialect.ts";
-import { MOST_BYTES, MOST_COLUMNS, mebibytes } from "./limits.ts";
-import { type OddRow, type PartedTable, type PartFault, partTable } from "./part-table.ts";
+import { MOST_BYTES, MOST_CELLS, MOST_CELLS_AT_ONCE, MOST_COLUMNS, mebibytes } from "./limits.ts";
+import { type OddRow, type PartedTable, type PartFault, type PartLimits, partTable } from "./part-table.ts";
 import { recognitions } from "./recognition.ts";
 
 export interface SheetSource {
@@ -25,6 +25,8 @@ export interface SheetSource {
   /** What is said about the file; the rest is found in it. */
   readonly declared: DeclaredDialect;
   readonly problems: ProblemList;
+  /** Limits other than the usual ones. */
+  readonly limits?: Partial<PartLimits>;
 }
 
 /** Reads one table's bytes; undefined where the whole file cannot be used, with the reason told. */
@@ -63,13 +65,19 @@ function partedSheet(source: SheetSource): PartedTable | undefined {
     problems.add("file-too-large", { file, found, detail: mebibytes(MOST_BYTES) });
     return undefined;
   }
-  const parted = partTable(source, MOST_COLUMNS);
+  const parted = partTable(source, {
+    mostColumns: MOST_COLUMNS,
+    mostCells: MOST_CELLS,
+    mostAtOnce: MOST_CELLS_AT_ONCE,
+    ...source.limits,
+  });
   if (parted.kind === "parted" && parted.rows.length > 0) return parted;
   tellUnparted(parted, source);
   return undefined;
 }
 
-function tellUnparted(fault: PartedTable | PartFault, { file, problems }: SheetSource): void {
+function tellUnparted(fault: PartedTable | PartFault, source: SheetSource): void {
+  const { file, problems } = source;
   switch (fault.kind) {
     case "not-text":
       return problems.add("undecodable-bytes", { file, found: "bytes that are not text" });
@@ -80,6 +88,12 @@ function tellUnparted(fault: PartedTable | PartFault, { file, problems }: SheetS
         file,
         found: `${fault.columns} columns`,
         detail: String(MOST_COLUMNS),
+      });
+    case "too-large":
+      return problems.add("table-too-large", {
+        file,
+        found: "more cells",
+        detail: String(source.limits?.mostCells ?? MOST_CELLS),
       });
     case "parted":
       return problems.add("header-only", { file, found: "a header row alone" });
@@ -94,9 +108,10 @@ const isBlank = (cell: string): boolean => cell.trim() === "";
 function withoutEmptyEnd(headers: readonly string[], { columns, odd }: PartedTable): readonly string[] {
   let width = headers.length;
   while (width > 0 && isBlank(headers[width - 1])) width -= 1;
+  if (width === headers.length) return headers;
   const isEmpty =
     columns.slice(width).every(({ values }) => values.every(isBlank)) &&
-    odd.every(({ written }) => written.slice(width).every(isBlank));
+    Array.from(odd).every(({ written }) => written().slice(width).every(isBlank));
   return isEmpty ? headers.slice(0, width) : headers;
 }
 
@@ -145,25 +160,48 @@ function cellsOf(
   const read = columns.map(({ header }, column) =>
     guarded.has(header) ? mapValues(cells[column], takeOffApostrophe) : cells[column],
   );
-  const leftOut = odd.filter((one) => isLeftOut(one, rows[one.index], { width: columns.length, source }));
-  if (leftOut.length === 0) return { rows: columnRows(read, rows.length), rowNumbers: rows };
-  const without = new Set(leftOut.map(({ index }) => index));
-  const kept = rows.map((_, index) => index).filter((index) => !without.has(index));
+  const isKept = new Uint8Array(rows.length).fill(1);
+  let leftOut = 0;
+  const tell = oddRowTeller(columns.length, source);
+  for (const one of odd) {
+    tell(one, rows[one.index]);
+    if (one.kind === "short") continue;
+    isKept[one.index] = 0;
+    leftOut += 1;
+  }
+  if (leftOut === 0) return { rows: columnRows(read, rows.length), rowNumbers: rows };
+  const kept = new Int32Array(rows.length - leftOut);
+  let count = 0;
+  for (let index = 0; index < rows.length; index++) {
+    if (isKept[index] === 0) continue;
+    kept[count] = index;
+    count += 1;
+  }
   const keptColumns = read.map((column) => takeRows(column, kept));
   return { rows: columnRows(keptColumns, kept.length), rowNumbers: kept.map((index) => rows[index]) };
 }
 
-/** Tells a row that has not as many cells as the header; true where it cannot be used. */
-function isLeftOut(
-  { kind, cells, written }: OddRow,
-  row: number,
-  { width, source: { file, problems } }: { readonly width: number; readonly source: SheetSource },
-): boolean {
+const oddCodes = {
+  malformed: "malformed-quote",
+  unclosed: "unclosed-quote",
+  overfull: "too-many-cells",
+  short: "too-few-cells",
+} as const;
+
+/** Tells rows that have not as many cells as the header, or odd quotes; what stands in more than are told is not looked up. */
+function oddRowTeller(width: number, { file, problems }: SheetSource): (odd: OddRow, row: number) => void {
+  const told = { malformed: 0, unclosed: 0, overfull: 0, short: 0 };
   const detail = String(width);
-  if (kind === "unclosed") problems.add("unclosed-quote", { file, row, found: written.join(",") });
-  else if (kind === "malformed") problems.add("malformed-quote", { file, row, found: written.join(",") });
-  else if (kind === "overfull")
-    problems.add("too-many-cells", { file, row, found: `${cells} cells: ${written.join(",")}`, detail });
-  else if (cells < width) problems.add("too-few-cells", { file, row, found: `${cells} cells`, detail });
-  return kind !== "short";
+  return ({ kind, cells, written }, row) => {
+    if (kind === "short" && cells >= width) return;
+    told[kind] += 1;
+    const text = told[kind] <= MOST_ALIKE ? written().join(",") : "";
+    const found = {
+      malformed: text,
+      unclosed: text,
+      overfull: `${cells} cells: ${text}`,
+      short: `${cells} cells`,
+    };
+    problems.add(oddCodes[kind], { file, row, found: found[kind], detail });
+  };
 }

@@ -11,6 +11,7 @@ import {
   roomFor,
 } from "./column-scan.ts";
 import { textsOf } from "./piece-texts.ts";
+import { type QuoteFault, type UnevenRow, unevenRows } from "./uneven-rows.ts";
 
 export interface Scanning {
   /** A sign of one byte. */
@@ -20,6 +21,8 @@ export interface Scanning {
   readonly width: number;
   /** Records before the first one to keep; blank ones are not counted. */
   readonly skip: number;
+  /** Rows times columns that are read. */
+  readonly mostCells: number;
   /** The text of bytes; throws where they are none. */
   readonly decode: (bytes: Uint8Array) => string;
 }
@@ -29,21 +32,7 @@ export interface ScannedCells {
   readonly columns: readonly Coded<string>[];
   /** The row numbers that a spreadsheet shows. */
   readonly rows: Int32Array;
-  readonly uneven: readonly UnevenRow[];
-}
-
-/** Text after a closing quote, or a quote that nothing closes. */
-export type QuoteFault = "malformed" | "unclosed" | undefined;
-
-interface UnevenRow {
-  readonly index: number;
-  readonly cells: number;
-  /** True where a cell beyond the last column holds something. */
-  readonly isOverfull: boolean;
-  readonly quotes: QuoteFault;
-  /** Where it stands among the bytes. */
-  readonly from: number;
-  readonly to: number;
+  readonly uneven: Iterable<UnevenRow>;
 }
 
 const LINE_FEED = 10;
@@ -56,14 +45,14 @@ const SAMPLED_ROWS = 1000;
  * Reads every cell of a delimited text into coded columns, from bytes in which ASCII signs stand for themselves: one
  * pass, and a string for each distinct cell alone. Blank records are passed over, cells that a row lacks are blank.
  * A cell with text after its closing quote goes on to the next sign that parts cells; a quote that nothing closes is a
- * sign like any other. Both stand as they are written, and their row is told.
+ * sign like any other. Both stand as they are written, and their row is told. Undefined for more cells than are read.
  */
-export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells {
-  const { width, skip, decode } = scanning;
+export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells | undefined {
+  const { width, skip, mostCells, decode } = scanning;
   const record = recordScan(bytes, scanning);
   let columns = Array.from({ length: width }, columnScan);
   let rows: Int32Array = new Int32Array(SAMPLED_ROWS);
-  const uneven: UnevenRow[] = [];
+  const uneven = unevenRows();
   let passed = 0;
   let count = 0;
   for (let row = 1; record.at < bytes.length; row++) {
@@ -79,10 +68,12 @@ export function scanCells(bytes: Uint8Array, scanning: Scanning): ScannedCells {
     for (let column = cells; column < width; column++)
       addCode(columns[column], count, { bytes, piece: NOTHING });
     if (cells < width || isOverfull || quotes !== undefined)
-      uneven.push({ index: count, cells, isOverfull, quotes, from, to });
+      uneven.add({ index: count, cells, isOverfull, quotes, from, to });
     rows[count] = row;
     count += 1;
-    if (count === rows.length) rows = widened(rows, columns, bytes.length / to);
+    if (count * width > mostCells) return undefined;
+    if (count === rows.length)
+      rows = widened(rows, columns, { times: bytes.length / to, most: mostCells / width + 1 });
   }
   return {
     columns: columns.map((column) => finished(column, count, (pieces) => textsOf(pieces, { bytes, decode }))),
@@ -110,8 +101,14 @@ const recordScan = (bytes: Uint8Array, { delimiter, quote, decode }: Scanning): 
 });
 
 /** Room for the rows that the rest of the bytes may hold, by what was read of them. */
-function widened(rows: Int32Array, columns: readonly ColumnScan[], times: number): Int32Array {
-  const room = Math.ceil(rows.length * Math.min(Math.max(1.05 * times, 1.1), 1e4));
+function widened(
+  rows: Int32Array,
+  columns: readonly ColumnScan[],
+  { times, most }: { readonly times: number; readonly most: number },
+): Int32Array {
+  const room = Math.ceil(
+    Math.min(rows.length * Math.max(1.05 * times, 1.1), Math.max(most, rows.length + 1)),
+  );
   for (const column of columns) roomFor(column, room);
   const more = new Int32Array(room);
   more.set(rows);

@@ -21,7 +21,7 @@ const isToldElsewhere = ({ name, read }: Pick<CellPlace, "name" | "read">): bool
   name === "value" ||
   (name === "unit" && (read.hints.get("value")?.bracket !== undefined || !read.hints.has("unit")));
 
-interface CellFault {
+export interface CellFault {
   readonly code: ProblemCode;
   readonly detail?: string;
 }
@@ -47,7 +47,8 @@ export function tellCell(
   const { code, detail } = fault;
   const { name, row, read, assembly } = place;
   const at = { file: read.sheet.file, row, column: name, found: text };
-  if (code === "blank-cell") return assembly.problems.add(code, at);
+  if (code === "blank-cell" || assembly.problems.isFull(code, at.file))
+    return assembly.problems.add(code, at);
   const nearest = code === "not-in-list" ? suggestName(text.trim(), column.values ?? []) : undefined;
   assembly.problems.add(code, { ...at, detail, nearest, now: onlyMend(text, column, place) });
 }

@@ -150,6 +150,9 @@ function quietSlab(
     top: number("top"),
     ...(leg === "" ? {} : { leg }),
   };
-  const silent = { ...place.assembly, problems: { add: () => {}, addOnce: () => {}, problems: () => [] } };
+  const silent = {
+    ...place.assembly,
+    problems: { add: () => {}, addOnce: () => {}, isFull: () => true, problems: () => [] },
+  };
   return slabOf(cells, frame, { origin: place.origin, assembly: silent });
 }

@@ -4,7 +4,7 @@ import { columnsOf } from "../sheet-rows.ts";
 import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";
 import type { Assembly, ReadSheet, Row } from "./context.ts";
-import { type CellPlace, readCell, tellCell } from "./read-cell.ts";
+import { type CellFault, type CellPlace, readCell, tellCell } from "./read-cell.ts";
 import { repeatedRows } from "./repeated-rows.ts";
 
 /** The values of a declared table's cells by column, and the rows that can be used. */
@@ -68,6 +68,7 @@ interface ReadColumn {
   readonly name: string;
   readonly column: ColumnDeclaration;
   readonly coded: Coded<unknown>;
+  readonly faults: readonly (CellFault | undefined)[];
   /** By code: 1 for what can be used, and for what is there. */
   readonly isGood: Uint8Array;
   readonly isThere: Uint8Array;
@@ -86,6 +87,7 @@ function readColumn(
     name: place.name,
     column,
     coded: { values: read.map(({ value }) => value), codes },
+    faults: read.map(({ fault }) => fault),
     isGood: Uint8Array.from(read, ({ fault }) => (fault === undefined ? 1 : 0)),
     isThere: Uint8Array.from(read, ({ value }) => (value === undefined ? 0 : 1)),
   };
@@ -148,9 +150,10 @@ function tellRow(index: number, { read, assembly, declared }: Reading): void {
   const { sheet } = read;
   const row = sheet.rowNumbers[index];
   const cells = sheet.rows.at(index) ?? [];
-  for (const { name, column } of declared) {
+  for (const { name, column, faults, isGood, coded } of declared) {
+    const code = coded.codes[index];
+    const fault = isGood[code] === 1 ? undefined : faults[code];
     const text = cells[sheet.columns.indexOf(name)] ?? "";
-    const { fault } = readCell(text, column, { name, read });
     if (fault !== undefined) tellCell(text, column, { fault, name, row, cells, read, assembly });
   }
 }

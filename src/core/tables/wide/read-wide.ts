@@ -13,7 +13,8 @@ import { decimalSign } from "../dialect/decimal.ts";
 import { type DeclaredDialect, type TableSetting, tablePath } from "../dialect/declared.ts";
 import { decodeBytes } from "../dialect/encoding.ts";
 import { tellDialect } from "../dialect/tell-dialect.ts";
-import { MOST_COLUMNS } from "../limits.ts";
+import { MOST_CELLS_AT_ONCE, MOST_COLUMNS } from "../limits.ts";
+import { isBeyond } from "../part-table.ts";
 import { recognition, sampleValues } from "../recognition.ts";
 import { columnCells, type Grid, gridOf } from "./grid.ts";
 import { headerReader } from "./leading.ts";
@@ -74,6 +75,10 @@ export function readWide(source: WideSource): ReadonlyMap<TableName, ReadSheet> 
   const { file, bytes, declared, delimiter, problems, said } = source;
   const decoded = decodeBytes(bytes, declared.encoding);
   if (decoded === undefined) return undefined;
+  if (isBeyond(bytes, delimiter, MOST_CELLS_AT_ONCE)) {
+    problems.add("table-too-large", { file, found: "more cells", detail: String(MOST_CELLS_AT_ONCE) });
+    return undefined;
+  }
   const parsed = parseRecords(decoded.text, { delimiter, quote: declared.quote });
   const records = withoutOddQuotes(parsed, source);
   if (records.some(({ cells }) => cells.length > MOST_COLUMNS)) return undefined;
