@@ -11,7 +11,12 @@ import type {
   Taxon,
 } from "../../../src/core/study/model.ts";
 import { defaultSettings } from "../../../src/core/study/settings.ts";
-import type { Timing, TimingAnswer } from "../../../src/core/timing/result.ts";
+import type {
+  LastFindsPoint,
+  ScenarioDensity,
+  Timing,
+  TimingAnswer,
+} from "../../../src/core/timing/result.ts";
 
 const origin = { file: "made.csv", row: 2 };
 
@@ -411,10 +416,38 @@ export function smallAnalysis(): Analysis {
           p: [0.3, 0.7, 0.2, 0.04, 0],
         },
       ],
+      scenarios: [
+        { section: "cliff", set: "candidates", scenario: "single", prior: 0.5, probability: 0.3, note: "" },
+        { section: "cliff", set: "candidates", scenario: "pulses-2", prior: 0.5, probability: 0.7, note: "" },
+      ],
+      densities: [
+        density({ scenario: "single", heightsM: [11.5, 12, 13], density: [1.4, 0.3, 0] }),
+        density({ scenario: "pulses-2", pulse: 1, heightsM: [8.5, 9, 10], density: [0.9, 0.6, 0] }),
+        density({ scenario: "pulses-2", pulse: 2, heightsM: [11.5, 12, 13], density: [1.6, 0.2, 0] }),
+      ],
+      lastFinds: [
+        lasts({ positionM: 8.5, observed: 2, expected: 2.4, low: 1, lowAll: 1, high: 3, highAll: 3 }),
+        lasts({ positionM: 10.5, observed: 1, expected: 1.2, low: 0, lowAll: 0, high: 2, highAll: 3 }),
+        lasts({ positionM: 11.5, observed: 0, expected: 0.4, low: 0, lowAll: 0, high: 1, highAll: 2 }),
+        lasts({ positionM: 12, observed: 0, expected: 0, low: 0, lowAll: 0, high: 0, highAll: 0 }),
+      ],
     },
   });
   return withTaxa(base, TAXA);
 }
+
+const density = (part: Omit<ScenarioDensity, "section" | "set">): ScenarioDensity => ({
+  section: "cliff",
+  set: "candidates",
+  ...part,
+});
+
+const lasts = (part: Omit<LastFindsPoint, "section" | "set" | "level">): LastFindsPoint => ({
+  section: "cliff",
+  set: "candidates",
+  level: 0.95,
+  ...part,
+});
 
 function aligned(section: string, heightM: number) {
   return {

@@ -35,7 +35,24 @@ const goldens: Readonly<Record<string, Drawing>> = {
   "fence-no-datum": fenceDiagram({ ...small, alignment: { ...empty.alignment } }),
   markers: markerPlate(small, { section: "cliff" }),
   timing: timingPlate(small, { section: "cliff", set: "candidates" }),
+  "timing-last-finds": timingPlate(small, { section: "cliff", set: "candidates", shows: "last-finds" }),
+  "timing-tried": timingPlate(tried(), { section: "cliff", set: "candidates", was: small }),
 };
+
+/** The small study with its main horizon moved up and another p along the section. */
+function tried(): Analysis {
+  const main = small.markers.main.bySection.get("cliff");
+  if (main === undefined) throw new Error("no main horizon");
+  const moved = { ...main, name: main.horizon, source: "manual" as const, positionM: main.positionM + 0.6 };
+  const bySection = new Map([...small.markers.main.bySection, ["cliff", moved]]);
+  const markers = {
+    ...small.markers,
+    horizons: [...small.markers.horizons, moved],
+    main: { ...small.markers.main, bySection },
+  };
+  const curves = small.timing.curves.map((curve) => ({ ...curve, p: curve.p.map((p) => p / 2) }));
+  return { ...small, markers, timing: { ...small.timing, curves } };
+}
 
 const hostileNames = [
   "<img src=x onerror=alert(1)>",
@@ -134,6 +151,34 @@ describe.each(Object.entries(cases))("%s", (_, make) => {
       expect(references.filter((id) => !ids.includes(id))).toEqual([]);
     }
   });
+});
+
+describe("what a timing plate shows beside its ranges", () => {
+  const beside = (part: Partial<Parameters<typeof timingPlate>[1]>) =>
+    text(timingPlate(small, { section: "cliff", set: "candidates", ...part }));
+
+  test("the levels of the scenario of most weight, or of the one asked for where it has levels", () => {
+    expect(beside({})).toContain("if two pulses");
+    expect(beside({ scenario: "single" })).toContain("if one level");
+    expect(beside({ scenario: "pulses-4" })).toContain("if two pulses");
+  });
+
+  test("the last finds take the place of levels, p and duration", () => {
+    const words = beside({ shows: "last-finds" });
+    expect(words).toContain("number above each level");
+    expect(words).not.toContain("p of ending here");
+    expect(words).not.toContain("least, most");
+  });
+
+  test("no method by its key, and a unit once an interval", () => {
+    expect(beside({})).not.toMatch(/common-end|duration-/);
+    expect(beside({})).toContain("it lies from 11.5 to 12.6 m.");
+  });
+});
+
+test("a lens that reaches an end of the section leaves no piece of the axis without length", () => {
+  const part = { section: "cliff", frame: [-0.3, 0.3] as const, lens: { halfWidthM: 0.3, times: 10 } };
+  expect(text(rangeChart(small, part))).not.toMatch(/\d\.0{4,}/);
 });
 
 describe("what the page needs", () => {
