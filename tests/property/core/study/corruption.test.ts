@@ -1,9 +1,11 @@
 // The example study, thinned, with its second leg over dipping beds: whatever happens to one cell is told where it stands,
 // and nothing else changes.
+
 import { readdirSync, readFileSync } from "node:fs";
 import * as fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import type { Study } from "../../../../src/core/study/model.ts";
+import type { ColumnDeclaration } from "../../../../src/core/study/tables/declare.ts";
 import { tables as declarations } from "../../../../src/core/study/tables/index.ts";
 import { readWrittenCsv } from "../../../../src/core/tables/csv.ts";
 import { type Tables, texts } from "../../../unit/core/tables/mended-tables.ts";
@@ -59,7 +61,8 @@ function thinned(): Tables {
 
 const sound = thinned();
 const before = studyFrom(texts(sound));
-const columnsOf = (file: string) => declarations.find(({ name }) => `${name}.csv` === file)?.columns ?? {};
+const columnsOf = (file: string): ReadonlyMap<string, ColumnDeclaration> =>
+  new Map(Object.entries(declarations.find(({ name }) => `${name}.csv` === file)?.columns ?? {}));
 
 interface Cell {
   readonly file: string;
@@ -70,7 +73,7 @@ interface Cell {
 /** Cells in which not any text is good: numbers, words of a list, values, units, signs, and names of other tables' rows. */
 const cells: readonly Cell[] = Object.entries(sound).flatMap(([file, [header, ...rows]]) =>
   header.flatMap((column) => {
-    const declared = new Map(Object.entries(columnsOf(file))).get(column);
+    const declared = columnsOf(file).get(column);
     const isStrict =
       declared !== undefined &&
       (declared.type !== "text" ||
