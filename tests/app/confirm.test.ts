@@ -51,6 +51,9 @@ describe.skipIf(findBrowser() === undefined)("a pasted wide sheet, by keyboard",
     await page.keyboard.press("f");
     await expect.poll(() => sentence(page).textContent(), { timeout: 60_000 }).toContain("1 section");
     expect(await sentence(page).textContent()).toMatch(/3 samples and 6 finds of 3 taxa/);
+    const summary = page.getByText("What each column was taken to be");
+    expect(await page.locator("details[open] summary", { has: summary }).count()).toBe(0);
+    await page.keyboard.press("Enter");
     expect(await page.getByLabel("Unit of Depth").inputValue()).toBe("ft");
   }, 90_000);
 

@@ -6,7 +6,7 @@ import { type PageServer, servePage } from "./page-server.ts";
 
 const at = (path: string) => fileURLToPath(new URL(`../../${path}`, import.meta.url));
 
-export const BUILT = at("dist/page");
+export const BUILT = process.env.LASTBED_PAGE ?? at("dist/page");
 
 export const EXAMPLE = { name: "Veyra Shelf", folder: at("datasets/veyra-shelf") };
 

@@ -17,9 +17,11 @@ export async function inSlices<T>(items: Iterable<T>): Promise<readonly T[]> {
 const pause = () =>
   new Promise<void>((resolve) => {
     const { port1, port2 } = new MessageChannel();
-    port1.onmessage = () => {
+    const end = () => {
       port1.close();
       resolve();
     };
+    port1.addEventListener("message", end, { once: true });
+    port1.start();
     port2.postMessage(undefined);
   });

@@ -25,9 +25,23 @@ export type Edit =
       readonly now: string;
     }
   | ({ readonly kind: "row-added"; readonly file: string } & AddedRow)
-  | { readonly kind: "row-set-aside"; readonly file: string; readonly row: number; readonly reason: string }
+  | {
+      readonly kind: "row-set-aside";
+      readonly file: string;
+      readonly row: number;
+      readonly reason: string;
+      /** The find that the row gave, where it was set aside on a plate: it stays drawn, open. */
+      readonly find?: SetAsideFind;
+    }
   | { readonly kind: "row-taken-back"; readonly file: string; readonly row: number }
   | ({ readonly kind: "setting"; readonly file: typeof SETTINGS_FILE } & SettingChange);
+
+export interface SetAsideFind {
+  readonly section: string;
+  readonly taxon: string;
+  readonly heightM: number;
+  readonly sample?: string;
+}
 
 export const settingEdit = (change: SettingChange): Edit => ({
   kind: "setting",

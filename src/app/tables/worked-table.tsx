@@ -64,6 +64,8 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
     setDraft(table.columns[column]?.header ?? "");
   };
   const log = useLog({ table, open, found }, selection.active.place);
+  // An edit can make a section that the last analysis does not have yet.
+  const isDrawable = open?.analysis.study.sections.some(({ name }) => name === log?.hand.section) === true;
   const goToLevel = (heightM: number) => {
     const row = log?.nearest(heightM);
     const place = row === undefined ? -1 : table.rowIds.indexOf(row);
@@ -89,7 +91,7 @@ export function WorkedTable({ table, open, found }: WorkedTableProps): ReactElem
           row={place.table === table.id ? place.row : undefined}
           edit={(step) => dispatch({ kind: "edited", step })}
         />
-        {state.isLogOpen && log && open && (
+        {state.isLogOpen && log && open && isDrawable && (
           <SectionLog
             open={open}
             hand={log.hand}
