@@ -2,6 +2,7 @@ import type { Caution, Progress } from "../basis.ts";
 import type { Section, Study } from "../study/model.ts";
 import { timingBasis } from "./basis.ts";
 import { besideCautions, comparedCautions, setCaseCautions, topCautions } from "./cautions.ts";
+import { influence } from "./influence.ts";
 import { lastFindsCurve } from "./last-finds-curve.ts";
 import { levelCurve } from "./level-curve.ts";
 import { jointAnswers } from "./pooled/joint-answers.ts";
@@ -43,6 +44,7 @@ export function answerTiming(study: Study, input: TimingInput, progress?: Progre
     densities: [...answered.flatMap((a) => a.compared.densities), ...joint.densities],
     leftOut: joint.leftOut,
     lastFinds: answered.flatMap((a) => a.lastFinds),
+    influence: answered.flatMap((a) => a.influence),
     distrusted: answered.flatMap((a) => a.distrusted),
     cautions: [...answered.flatMap((a) => [...a.cautions, ...a.compared.cautions]), ...joint.cautions],
     basis: timingBasis,
@@ -55,6 +57,7 @@ interface AnsweredSection {
   readonly compared: ScenarioAnswers;
   readonly curves: readonly LevelCurve[];
   readonly lastFinds: Timing["lastFinds"];
+  readonly influence: Timing["influence"];
   readonly distrusted: Timing["distrusted"];
   readonly cautions: readonly Caution[];
 }
@@ -89,12 +92,26 @@ function answerSection(section: Section, study: Study, input: SectionInput): Ans
     compared: scenarioAnswers(cases, { window, taxa: input.taxa, progress: input.progress }),
     curves: cases.flatMap((setCase) => (window === undefined ? [] : (levelCurve(setCase, window) ?? []))),
     lastFinds: cases.flatMap(lastFindsCurve),
+    influence: window === undefined ? [] : cases.flatMap((setCase) => influenceIn(setCase, window)),
     distrusted: cases
       .filter(({ set }) => declines(set.ranges))
       .map(({ set }) => ({ section: section.name, set: set.set })),
     cautions,
   };
 }
+
+/** Of the candidates and each declared list: leaving out one taxon after another takes its time. */
+function influenceIn(
+  { section, set, coordinate, settings }: SetCase,
+  { lowM, highM }: TimingWindow,
+): Timing["influence"] {
+  const isAsked = set.set === allCandidates || set.set in settings.timing.sets;
+  if (!isAsked || set.ranges.length < FEWEST_LEFT) return [];
+  return influence(set.ranges, { section: section.name, set: set.set, coordinate, lowM, highM });
+}
+
+/** Without one of them at least two taxa are left. */
+const FEWEST_LEFT = 3;
 
 /** True where the pre-check of these taxa says that recovery falls upward. */
 function declines(ranges: Parameters<typeof pooledCentroid>[0]): boolean {

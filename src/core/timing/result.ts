@@ -202,6 +202,8 @@ export interface Timing {
   /** Of the sections answered together, by section left out. */
   readonly leftOut: readonly LeftOut[];
   readonly lastFinds: readonly LastFindsPoint[];
+  /** How far the answer moves without each taxon and without its highest find. */
+  readonly influence: readonly Influence[];
   /** Sets whose own pooled centroid pre-check says that recovery declines upward (p < 0.1). */
   readonly distrusted: readonly { readonly section: string; readonly set: string }[];
   readonly cautions: readonly Caution[];

@@ -1,4 +1,5 @@
 import type { Analysis } from "../../core/analysis-result.ts";
+import { mostInfluential } from "../../core/timing/influential.ts";
 import { TICK_LABEL_DEPTH } from "../columns/column-ground.tsx";
 import { LensBreak } from "../marks/lens-break.tsx";
 import { axisWords } from "./axis-words.ts";
@@ -6,6 +7,7 @@ import { defaultLens } from "./default-lens.ts";
 import type { Drawing, SectionView } from "./drawing.ts";
 import { drawnTaxa } from "./drawn-taxa.ts";
 import { drawnHorizons, Horizons, horizonLabelsWidth, horizonLegend } from "./horizon-labels.tsx";
+import { InfluenceMarks } from "./influence-marks.tsx";
 import { lensNotes } from "./lens-notes.ts";
 import { axisColumns, lineLeft, logColumns, railColumn } from "./log-columns.tsx";
 import { placeColumns } from "./plate-columns.ts";
@@ -66,6 +68,7 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
       <g data-section={section.name}>
         <SurvivorLine x={MARGIN} y={MARGIN + 33} lines={lines} />
         <TaxaBlock {...{ analysis, layout, left, y }} title="" />
+        <InfluenceMarks {...{ analysis, view, layout, y }} />
         {lens && <LensBreak x={from} width={right - from} y={y} lens={lens} />}
         <WasHorizons analysis={analysis} view={view} y={y} left={from} right={right} />
         <Horizons left={from} right={right} y={y} horizons={horizons} />
@@ -75,6 +78,9 @@ export function timingPlate(analysis: Analysis, view: TimingView): Drawing {
       ...groupLegend(analysis, layout),
       ...rangeLegend(taxa, y),
       ...horizonLegend(horizons),
+      ...(mostInfluential(analysis.timing.influence, view).length > 0
+        ? [{ sign: { kind: "influential" }, label: "without it the level moves most" } as const]
+        : []),
       ...(view.was === undefined ? [] : [{ sign: { kind: "was" }, label: "as it was" } as const]),
     ],
     notes: [...notesOf(analysis, view.set, { taxa, timing, frame }), ...lensNotes(frame)],

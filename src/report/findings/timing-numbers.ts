@@ -1,5 +1,6 @@
+import { mostInfluential } from "../../core/timing/influential.ts";
 import type { Offset, TimingAnswer } from "../../core/timing/result.ts";
-import { offset, offsetInterval, percent, probability } from "../wordings/numbers.ts";
+import { offset, offsetInterval, percent, probability, significant } from "../wordings/numbers.ts";
 import { pulseWords, scenarioTitle } from "../wordings/scenarios.ts";
 import type { NumberLine } from "./finding.ts";
 import type { TimingCase, Weight } from "./timing-case.ts";
@@ -10,7 +11,7 @@ import { timingLine } from "./timing-lines.ts";
  * weights, the levels of the leading one against each horizon, how gradual, the test; all other answers are folded.
  */
 export function timingNumbers(told: TimingCase): readonly NumberLine[] {
-  const lines = [...weightLines(told), ...offsetLines(told), ...answerLines(told)];
+  const lines = [...weightLines(told), ...offsetLines(told), ...influenceLines(told), ...answerLines(told)];
   const isProof = ({ isProof }: Line) => told.isDistrusted && isProof === true;
   return [...lines.filter(isProof), ...lines.filter((line) => !isProof(line))].map(
     ({ isProof: holds, ...line }) =>
@@ -60,6 +61,17 @@ function offsetLines({ offsets, main }: TimingCase): readonly Line[] {
     value: offsetInterval(one.low, one.high),
     note: `${percent(one.level)}, middle ${offset(one.median)}\u00a0m, after it with probability ${probability(one.probabilityAfter)}`,
     isMore: one.horizon !== main,
+  }));
+}
+
+/** What the level of one common end leans on most. */
+function influenceLines({ analysis, section, set }: TimingCase): readonly Line[] {
+  const few = mostInfluential(analysis.timing.influence, { section: section.name, set });
+  return few.map(({ taxon, removed, levelM = 0, p }) => ({
+    group: "The level moves most",
+    label: removed === "taxon" ? `without ${taxon}` : `without the highest find of ${taxon}`,
+    value: `${offset(levelM)}\u00a0m`,
+    ...(p === undefined ? {} : { note: `and p of one level by ${p > 0 ? "+" : ""}${significant(p, 2)}` }),
   }));
 }
 

@@ -12,6 +12,7 @@ import type {
 } from "../../../src/core/study/model.ts";
 import { defaultSettings } from "../../../src/core/study/settings.ts";
 import type {
+  Influence,
   LastFindsPoint,
   ScenarioDensity,
   Timing,
@@ -55,6 +56,7 @@ const noTiming: Timing = {
   densities: [],
   leftOut: [],
   lastFinds: [],
+  influence: [],
   distrusted: [],
   cautions: [],
   basis: [],
@@ -425,6 +427,10 @@ export function smallAnalysis(): Analysis {
         density({ scenario: "pulses-2", pulse: 1, heightsM: [8.5, 9, 10], density: [0.9, 0.6, 0] }),
         density({ scenario: "pulses-2", pulse: 2, heightsM: [11.5, 12, 13], density: [1.6, 0.2, 0] }),
       ],
+      influence: [
+        influences("Aurea secunda", "highest-find", -0.4),
+        influences("Aurea prima", "taxon", 0.02),
+      ],
       lastFinds: [
         lasts({ positionM: 8.5, observed: 2, expected: 2.4, low: 1, lowAll: 1, high: 3, highAll: 3 }),
         lasts({ positionM: 10.5, observed: 1, expected: 1.2, low: 0, lowAll: 0, high: 2, highAll: 3 }),
@@ -440,6 +446,14 @@ const density = (part: Omit<ScenarioDensity, "section" | "set">): ScenarioDensit
   section: "cliff",
   set: "candidates",
   ...part,
+});
+
+const influences = (taxon: string, removed: Influence["removed"], levelM: number): Influence => ({
+  section: "cliff",
+  set: "candidates",
+  taxon,
+  removed,
+  levelM,
 });
 
 const lasts = (part: Omit<LastFindsPoint, "section" | "set" | "level">): LastFindsPoint => ({

@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { analyse } from "../../../src/core/analysis.ts";
 import type { Analysis } from "../../../src/core/analysis-result.ts";
+import type { Caution } from "../../../src/core/basis.ts";
 import { readStudy } from "../../../src/core/tables/read-study.ts";
 import type { Offset, Scenario, ScenarioWeight, TimingAnswer } from "../../../src/core/timing/result.ts";
 import { timingFinding } from "../../../src/report/findings/timing.ts";
@@ -217,9 +218,14 @@ describe("the sentence of a set of taxa", () => {
 });
 
 describe("what stands beside the sentence", () => {
-  const cautions = [
+  const cautions: readonly Caution[] = [
     { code: "timing-survivors", section: "ledge", numbers: { taxa: 3, names: "a, b, c" } },
-    { code: "timing-box-rarest", ...here, subject: "candidates", numbers: { taxon: "a", horizons: 4 } },
+    {
+      code: "timing-box-rarest",
+      section: "ledge",
+      subject: "candidates",
+      numbers: { taxon: "a", horizons: 4 },
+    },
     {
       code: "scenario-order-changes",
       section: "ledge",
