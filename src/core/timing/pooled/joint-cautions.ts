@@ -145,16 +145,11 @@ function survivorCautions(candidates: readonly Candidate[]): Caution[] {
   const surviving = new Set(candidates.filter(({ role }) => role === "survivor").map(({ taxon }) => taxon));
   const ending = new Set(candidates.filter(({ role }) => role === "candidate").map(({ taxon }) => taxon));
   const both = [...surviving].filter((taxon) => ending.has(taxon));
-  const told = (code: string, names: readonly string[]): Caution[] =>
-    names.length === 0
-      ? []
-      : [
-          {
-            code,
-            section: JOINT,
-            subject: allCandidates,
-            numbers: { taxa: names.length, names: names.join(", ") },
-          },
-        ];
   return [...told("joint-survivors", [...surviving]), ...told("joint-survive-elsewhere", both)];
+}
+
+function told(code: string, names: readonly string[]): Caution[] {
+  if (names.length === 0) return [];
+  const numbers = { taxa: names.length, names: names.join(", ") };
+  return [{ code, section: JOINT, subject: allCandidates, numbers }];
 }
