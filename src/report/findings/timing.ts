@@ -6,7 +6,6 @@ import { timingCase } from "./timing-case.ts";
 import { timingNumbers } from "./timing-numbers.ts";
 import { timingSentence } from "./timing-sentence.ts";
 
-
 /** What a set of taxa in one section answers: the scenarios weighed, where their levels lie, how gradual it could be. */
 export function timingFinding(analysis: Analysis, section: Section, set: string): Finding {
   const { timing, study } = analysis;
