@@ -1,36 +1,16 @@
-import type { Dialect } from "./dialect.ts";
 import type { Occurrences } from "./occurrence.ts";
 import type { Origin } from "./origin.ts";
 import type { Problem } from "./problem.ts";
-import type { Recognition, WideReading } from "./recognised.ts";
 import type { Settings } from "./settings.ts";
-import type { SheetRows } from "./sheet-rows.ts";
-import type { TableName } from "./tables/index.ts";
+import type { Sheet } from "./sheet.ts";
 
 export type { Decimal, Delimiter, Dialect, Encoding } from "./dialect.ts";
 export type { Occurrence, Occurrences, Qualifier } from "./occurrence.ts";
 export type { Origin } from "./origin.ts";
+export type { Sheet } from "./sheet.ts";
 
 export type LengthUnit = "m" | "cm" | "mm" | "ft";
 export type Axis = "height" | "depth";
-
-/** A table as it was read: every cell as text, nothing dropped. */
-export interface Sheet {
-  readonly file: string;
-  readonly table: TableName;
-  readonly dialect: Dialect;
-  /** Header cells as written, and the declared column each was taken to be (undefined: kept, not used). */
-  readonly headers: readonly string[];
-  readonly columns: readonly (string | undefined)[];
-  /** What each column was taken to be and why, in the order of the headers. */
-  readonly recognised: readonly Recognition[];
-  /** Absent for a table of one row a find, sample, value ... */
-  readonly wide?: WideReading;
-  /** The section that a file without a column for it was taken to be about. */
-  readonly section?: { readonly name: string; readonly by: "chosen" | "sections" | "name" };
-  readonly rows: SheetRows;
-  readonly rowNumbers: readonly number[] | Int32Array;
-}
 
 /** A file of the study as bytes were given: what the repeat sheet records. */
 export interface StudyFile {

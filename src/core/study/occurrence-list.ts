@@ -1,5 +1,6 @@
 import { type Coded, encode, valueAt } from "./coded.ts";
 import type { Occurrence, OccurrenceColumns, Occurrences } from "./occurrence.ts";
+import type { Stand } from "./origin.ts";
 
 class ColumnOccurrences implements Occurrences {
   readonly columns: OccurrenceColumns;
@@ -30,7 +31,7 @@ function occurrenceAt(columns: OccurrenceColumns, index: number): Occurrence {
     heightM: valueAt(columns.heightM, index),
     reworked: valueAt(columns.reworked, index),
     doubtful: valueAt(columns.doubtful, index),
-    origin: { file: columns.file, row: columns.rows[index] },
+    origin: { file: fileOf(columns, index), row: columns.rows[index] },
   };
   const qualifier = valueAt(columns.qualifier, index);
   if (qualifier !== undefined) find.qualifier = qualifier;
@@ -46,6 +47,34 @@ function occurrenceAt(columns: OccurrenceColumns, index: number): Occurrence {
   if (abundance !== undefined) find.abundance = abundance;
   return find;
 }
+
+const fileOf = ({ file, stands }: OccurrenceColumns, index: number): string =>
+  stands === undefined ? file : valueAt(stands, index).file;
+
+/** What a wide sheet says in the cell of a find, not beside it. */
+const inCell: ReadonlySet<string> = new Set([
+  "taxon",
+  "count",
+  "abundance",
+  "qualifier",
+  "reworked",
+  "doubtful",
+]);
+
+/** The header of the column that says something of a find. */
+export const columnOfFind = (stand: Stand | undefined, column: string): string =>
+  inCell.has(column) ? (stand?.column ?? column) : column;
+
+/** Where what a column says of a find stands. */
+export const placeOfFind = (
+  columns: Pick<OccurrenceColumns, "file" | "stands"> & { readonly rows: ArrayLike<number> },
+  find: number,
+  column: string,
+) => ({
+  file: columns.stands === undefined ? columns.file : valueAt(columns.stands, find).file,
+  row: columns.rows[find],
+  column: columnOfFind(columns.stands && valueAt(columns.stands, find), column),
+});
 
 /** The columns of finds. */
 export function occurrenceColumns(finds: Occurrences): OccurrenceColumns {

@@ -1,6 +1,6 @@
 import type { Coded } from "./coded.ts";
 import type { List } from "./list.ts";
-import type { Origin } from "./origin.ts";
+import type { Origin, Stand } from "./origin.ts";
 
 export type Qualifier =
   | "cf."
@@ -33,10 +33,11 @@ export interface Occurrence {
   readonly origin: Origin;
 }
 
-/** Finds column by column; what a find lacks is undefined there. All stand in one file. */
+/** Finds column by column; what a find lacks is undefined there. All stand in one file, or each as `stands` says. */
 export interface OccurrenceColumns {
   readonly file: string;
   readonly rows: Int32Array;
+  readonly stands?: Coded<Stand>;
   readonly verbatim: Coded<string>;
   readonly taxon: Coded<string>;
   readonly qualifier: Coded<Qualifier | undefined>;

@@ -5,7 +5,7 @@ import type { DeclaredDialect, TableSetting } from "./dialect/declared.ts";
 import { bestParting, type Parting, type Preview, previews } from "./dialect/delimiter.ts";
 import { decodeBytes } from "./dialect/encoding.ts";
 import { MOST_COLUMNS } from "./limits.ts";
-import { wideShape } from "./wide/read-wide.ts";
+import { wideShape } from "./wide/wide-shape.ts";
 
 /** A declared table, with what is chosen for the columns of one file. */
 export type PlannedTable = TableDeclaration & { readonly name: TableName };
@@ -101,11 +101,18 @@ export function planFor(table: PlannedTable, file: PlannedFile): FilePlan {
 
 const noChoices: ReadonlyMap<string, ColumnChoice> = new Map();
 
+export interface OtherPlans {
+  /** Tables that other files are read as. */
+  readonly taken: ReadonlySet<TableName>;
+  /** True where the finds are those of a wide sheet, and further ones join it. */
+  readonly mayJoinWide: boolean;
+}
+
 /** The ways in which a file of no known name can be read: those of most recognised columns. */
-export function plansByColumns(file: PlannedFile, taken: ReadonlySet<TableName>): readonly FilePlan[] {
+export function plansByColumns(file: PlannedFile, { taken, mayJoinWide }: OtherPlans): readonly FilePlan[] {
   const ways = headOf(file);
   if (ways === undefined) return [];
-  const wide = taken.has("occurrences") ? undefined : widePlan(ways, file.said);
+  const wide = taken.has("occurrences") && !mayJoinWide ? undefined : widePlan(ways, file.said);
   if (wide !== undefined && standsFirst(wide, file.said)) return [wide];
   const chosen = choicesOf(file.said);
   const open = tables.filter(({ name }) => !taken.has(name)).map((table) => withChoices(table, chosen));

@@ -60,6 +60,7 @@ export function headText({ bytes, decode }: PlainBytes): {
   let end = Math.min(bytes.length, 3 * PREVIEW);
   const isWhole = end === bytes.length;
   // A byte that goes on with a letter is not parted from it.
-  for (let back = 0; !isWhole && back < 3 && (bytes[end] & 0xc0) === 0x80; back++) end -= 1;
+  const most = isWhole ? 0 : 3;
+  for (let back = 0; back < most && (bytes[end] & 0xc0) === 0x80; back++) end -= 1;
   return { text: decode(bytes.subarray(0, end)), isWhole };
 }

@@ -25,6 +25,7 @@ import {
   sheetName,
   tableNamed,
 } from "./table-of-file.ts";
+import { joinSheets } from "./wide/join-sheets.ts";
 import { readWide } from "./wide/read-wide.ts";
 
 const companions =
@@ -50,32 +51,43 @@ export function readSheets(
   const candidates = candidatesOf(files, reading);
   tellUnusedSettings(candidates, settings, problems);
   const sheets = new Map<TableName, ReadSheet>();
+  let areFindsWide = false;
   const made = new Map<TableName, ReadSheet>();
   const first = new Map<TableName, string>();
   const use = (candidate: Candidate, plan: FilePlan) => {
     const name = plan.kind === "wide" ? "occurrences" : plan.table.name;
     const earlier = first.get(name);
-    if (earlier !== undefined) {
+    const isJoined = plan.kind === "wide" && areFindsWide;
+    if (earlier !== undefined && !isJoined) {
       problems.add("duplicate-table", { file: candidate.path, found: candidate.file, detail: earlier });
       return;
     }
-    first.set(name, candidate.path);
+    if (earlier === undefined) first.set(name, candidate.path);
+    areFindsWide ||= plan.kind === "wide" && earlier === undefined;
     const [own, ...further] = readPlanned(candidate, plan, { ...reading, candidates });
-    if (own !== undefined) sheets.set(...own);
-    for (const [table, sheet] of further) made.set(table, sheet);
+    if (own !== undefined) put(sheets, ...own);
+    for (const [table, sheet] of further) put(made, table, sheet);
   };
   for (const candidate of candidates) {
     const { table, bytes } = candidate;
-    if (table !== undefined && first.has(table.name)) use(candidate, asItIs(table));
+    if (table !== undefined && first.has(table.name) && !areFindsWide) use(candidate, asItIs(table));
     else if (table !== undefined)
       use(candidate, bytes.byteLength > MOST_BYTES ? asItIs(table) : planFor(table, candidate));
   }
   for (const candidate of candidates) {
-    const plan = candidate.table ? undefined : planByColumns(candidate, new Set(first.keys()), problems);
+    const plan = candidate.table
+      ? undefined
+      : planByColumns(candidate, { taken: new Set(first.keys()), mayJoinWide: areFindsWide }, problems);
     if (plan) use(candidate, plan);
   }
   for (const [table, sheet] of made) if (!sheets.has(table)) sheets.set(table, sheet);
   return sheets;
+}
+
+/** Takes a table in, with what an earlier wide sheet was made into. */
+function put(sheets: Map<TableName, ReadSheet>, table: TableName, sheet: ReadSheet): void {
+  const earlier = sheets.get(table);
+  sheets.set(table, earlier === undefined ? sheet : joinSheets(earlier, sheet));
 }
 
 const asItIs = (table: StudyTable): FilePlan => ({
@@ -178,7 +190,10 @@ function sectionOf(candidate: Candidate, reading: Planned): NonNullable<Sheet["s
   const isNumbered =
     sheet !== undefined && /^(?:sheet|tabelle|feuil|hoja|foglio|planilha|лист)\s*\d*$/iu.test(sheet);
   const named = isNumbered ? undefined : sheet;
-  const name = named ?? reading.name ?? (isAlone ? settingName(file) : "section");
+  const unnamed = reading.candidates.filter(({ table }) => table === undefined);
+  const isOneOfSeveral = candidate.table === undefined && unnamed.length > 1;
+  const byFile = isAlone || isOneOfSeveral ? settingName(file) : undefined;
+  const name = named ?? (isOneOfSeveral ? byFile : undefined) ?? reading.name ?? byFile ?? "section";
   reading.problems.add("section-by-name", { file, found: name, detail: tablePath(file, "section") });
   return { name: name.trim().normalize("NFC"), by: "name" };
 }

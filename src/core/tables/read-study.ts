@@ -61,13 +61,17 @@ export function readStudy(files: ReadonlyMap<string, Uint8Array>, options: ReadS
 
 /** The problem with its column called as the file's own header calls it. */
 function asWritten(problem: Problem, sheets: ReadonlyMap<TableName, ReadSheet>): Problem {
-  const read = [...sheets.values()].find((read) => read.sheet.file === problem.file);
-  const sheet = read?.shown ?? read?.sheet;
+  const sheet = sheetOf(problem.file, sheets);
   const place = problem.column === undefined ? -1 : (sheet?.columns.indexOf(problem.column) ?? -1);
   const column = place < 0 ? undefined : sheet?.headers[place];
   if (column === undefined) return problem;
   return { ...problem, column, ...(problem.fix && { fix: { ...problem.fix, column } }) };
 }
+
+const sheetOf = (file: string, sheets: ReadonlyMap<TableName, ReadSheet>): Sheet | undefined =>
+  [...sheets.values()]
+    .flatMap(({ sheet, shown = sheet, alsoShown = [] }) => [shown, ...alsoShown])
+    .find((sheet) => sheet.file === file);
 
 /** The sheets as they stand in their files, each once, with what has to be asked of their columns. */
 function shownSheets(
@@ -76,7 +80,11 @@ function shownSheets(
 ): readonly Sheet[] {
   const byName = new Map(sections.map((section) => [section.name, section]));
   const byFile = new Map<string, Sheet>();
-  for (const { sheet, shown = sheet } of sheets.values()) {
+  const all = [...sheets.values()].flatMap(({ sheet, shown = sheet, alsoShown = [] }) => [
+    shown,
+    ...alsoShown,
+  ]);
+  for (const shown of all) {
     const table = shown.wide === undefined ? tables.find(({ name }) => name === shown.table) : samples;
     if (table !== undefined && !byFile.has(shown.file))
       byFile.set(shown.file, withSectionUnits(shown, table, byName));

@@ -1,8 +1,8 @@
 import { suggestName } from "../study/nearest.ts";
 import type { ProblemList } from "../study/problem-list.ts";
-import { type TableName, tables } from "../study/tables/index.ts";
+import { tables } from "../study/tables/index.ts";
 import { tablePath } from "./dialect/declared.ts";
-import { type FilePlan, type PlannedFile, plansByColumns } from "./file-plan.ts";
+import { type FilePlan, type OtherPlans, type PlannedFile, plansByColumns } from "./file-plan.ts";
 import { MOST_BYTES } from "./limits.ts";
 
 export type StudyTable = (typeof tables)[number];
@@ -32,11 +32,11 @@ const isTableFile = (file: string): boolean => /(?:\.(?:csv|tsv|tab|txt)|\])$/i.
 /** How an oddly named file is to be read by its columns, told; undefined, told, where it is no table or could be several. */
 export function planByColumns(
   candidate: CandidateFile,
-  taken: ReadonlySet<TableName>,
+  others: OtherPlans,
   problems: ProblemList,
 ): FilePlan | undefined {
   const { file, path, bytes } = candidate;
-  const plans = isTableFile(file) && bytes.byteLength <= MOST_BYTES ? plansByColumns(candidate, taken) : [];
+  const plans = isTableFile(file) && bytes.byteLength <= MOST_BYTES ? plansByColumns(candidate, others) : [];
   const names = plans.map((plan) => (plan.kind === "wide" ? "occurrences" : plan.table.name));
   if (plans.length === 1) {
     const [plan] = plans;

@@ -1,7 +1,8 @@
 import { type Coded, countValues } from "../coded.ts";
 import { acceptedName } from "../finds.ts";
 import type { Origin, Section, Study, Taxon } from "../model.ts";
-import { occurrenceColumns } from "../occurrence-list.ts";
+import type { OccurrenceColumns } from "../occurrence.ts";
+import { occurrenceColumns, placeOfFind } from "../occurrence-list.ts";
 import type { Assembly } from "./context.ts";
 import { declaredHorizons } from "./declared-horizons.ts";
 import type { SearchList } from "./search-list.ts";
@@ -10,7 +11,7 @@ import { ungrouped } from "./taxa.ts";
 
 /** How often a name is used and where it stands first. */
 interface Use {
-  readonly origin: Origin;
+  readonly origin: Origin & { readonly column?: string };
   uses: number;
   /** Stands in the table that lists the names of its kind. */
   readonly isListed: boolean;
@@ -50,7 +51,7 @@ function tellSimilar(uses: ReadonlyMap<string, Use>, { problems }: Assembly, nam
     const [usual, odd] = rank(uses.get(second)) > rank(uses.get(first)) ? [second, first] : [first, second];
     const at = uses.get(odd);
     if (!at) continue;
-    problems.add("similar-name", { ...at.origin, column: kind, found: odd, detail: kind, nearest: usual });
+    problems.add("similar-name", { column: kind, ...at.origin, found: odd, detail: kind, nearest: usual });
   }
 }
 
@@ -58,7 +59,7 @@ function tellSimilar(uses: ReadonlyMap<string, Use>, { problems }: Assembly, nam
 const rank = (use: Use | undefined): number =>
   use === undefined ? 0 : use.uses + (use.isListed ? Number.MAX_SAFE_INTEGER / 2 : 0);
 
-function use(uses: Map<string, Use>, name: string, origin: Origin, isListed = false): void {
+function use(uses: Map<string, Use>, name: string, origin: Use["origin"], isListed = false): void {
   const known = uses.get(name);
   if (known) known.uses += 1;
   else uses.set(name, { origin, uses: 1, isListed });
@@ -87,7 +88,7 @@ function taxonUses(
   }
   for (const { occurrences, publishedRanges } of sections) {
     const finds = occurrenceColumns(occurrences);
-    useColumn(uses, finds.taxon, finds);
+    useColumn(uses, ["taxon", finds.taxon], finds);
     for (const { taxon, origin } of publishedRanges) use(uses, taxon, origin);
   }
   return uses;
@@ -96,12 +97,12 @@ function taxonUses(
 /** Uses every name of a column as often as it stands there. */
 function useColumn(
   uses: Map<string, Use>,
-  column: Coded<string>,
-  { file, rows }: { readonly file: string; readonly rows: Int32Array },
+  [kind, column]: readonly [Naming["kind"], Coded<string>],
+  columns: Pick<OccurrenceColumns, "file" | "rows" | "stands">,
 ): void {
   const counts = countValues(column);
   for (const [code, name] of column.values.entries()) {
-    use(uses, name, { file, row: rows[column.codes.indexOf(code)] });
+    use(uses, name, placeOfFind(columns, column.codes.indexOf(code), kind));
     const known = uses.get(name);
     if (known) known.uses += counts[code] - 1;
   }
@@ -127,7 +128,7 @@ function groupUses({ sections, taxa, searches }: Named, assembly: Assembly): Rea
     if (group !== ungrouped && origin.file === listed) use(uses, group, origin, true);
   }
   for (const list of searches.values()) {
-    if (list.kind === "columns") useColumn(uses, list.columns.group, list.columns);
+    if (list.kind === "columns") useColumn(uses, ["group", list.columns.group], list.columns);
     else for (const { group, origin } of list.items) if (origin) use(uses, group, origin);
   }
   for (const { recovery } of sections) {

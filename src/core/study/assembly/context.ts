@@ -1,4 +1,6 @@
+import { type Coded, valueAt } from "../coded.ts";
 import type { Axis, Counting, Leg, LengthUnit, Origin, Section, Sheet } from "../model.ts";
+import type { Stand } from "../origin.ts";
 import type { ProblemList } from "../problem-list.ts";
 import type { Settings } from "../settings.ts";
 import type { RowOf, TableDeclaration } from "../tables/declare.ts";
@@ -14,6 +16,7 @@ export interface HeaderHint {
 
 /** What a wide sheet says of who looked for what: a row a sample, a mark a taxon. */
 export interface Looked {
+  readonly file: string;
   /** The taxa by the order of their marks, as written. */
   readonly taxa: readonly string[];
   readonly rows: readonly {
@@ -37,8 +40,24 @@ export interface ReadSheet {
   readonly hints: ReadonlyMap<string, HeaderHint>;
   /** The sheet as it stands in its file, where `sheet` was made from it. */
   readonly shown?: Sheet;
-  readonly looked?: Looked;
+  /** Further sheets that were joined with it. */
+  readonly alsoShown?: readonly Sheet[];
+  readonly looked?: readonly Looked[];
+  /** Where each row stands, of rows that a wide sheet or several were made into. */
+  readonly stands?: Coded<Stand>;
+  /** What the headers say where sheets are joined, by section. */
+  readonly hintsBySection?: ReadonlyMap<string, readonly HeaderHint[]>;
 }
+
+/** What the headers of a sheet say about the positions of a section. */
+export const hintsIn = ({ hints, hintsBySection }: ReadSheet, section: string): readonly HeaderHint[] =>
+  hintsBySection === undefined ? [...hints.values()] : (hintsBySection.get(section) ?? []);
+
+/** Where a row of a sheet stands. */
+export const originOf = ({ sheet, stands }: ReadSheet, index: number): Origin => ({
+  file: stands === undefined ? sheet.file : valueAt(stands, index).file,
+  row: sheet.rowNumbers[index],
+});
 
 /** A validated row and where it stands. */
 export interface Row<T extends TableDeclaration> {

@@ -16,7 +16,7 @@ export interface PlacedFinds {
 
 /** The finds of a section, given by the places of their rows, as columns; cells that say nothing take the error and the leg of their sample. */
 export function columnsOfFinds(
-  { cells: { file, rowNumbers, columns }, ...all }: PlacedFinds,
+  { cells: { file, rowNumbers, columns, stands }, ...all }: PlacedFinds,
   frame: SectionFrame,
   indices: Int32Array,
 ): OccurrenceColumns {
@@ -26,6 +26,7 @@ export function columnsOfFinds(
   return {
     file,
     rows: indices.map((index) => rowNumbers[index]),
+    ...(stands && { stands: taken(stands) }),
     verbatim: taken(columns.taxon),
     taxon: mapValues(name, ({ name }) => name),
     qualifier: mapValues(name, ({ qualifier }) => qualifier),

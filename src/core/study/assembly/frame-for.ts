@@ -1,6 +1,6 @@
 import type { Coded } from "../coded.ts";
 import type { Origin } from "../model.ts";
-import type { Assembly, ReadSheet, SectionFrame } from "./context.ts";
+import { type Assembly, hintsIn, type ReadSheet, type SectionFrame } from "./context.ts";
 import type { MeantName } from "./meant-name.ts";
 
 /** The sections of a study, each with what converts its positions; those that cannot be used with the reason. */
@@ -57,7 +57,7 @@ function tellMissing(section: string, origin: Origin, { frames, assembly }: Fram
 
 /** A header that names another axis or unit than the section's: nothing is converted on a guess. */
 function isContradicted(frame: SectionFrame, origin: Origin, { read, assembly }: FrameSearch): boolean {
-  for (const { header, axis, unit } of read.hints.values()) {
+  for (const { header, axis, unit } of hintsIn(read, frame.name)) {
     const isOther = (axis ?? frame.axis) !== frame.axis || (unit ?? frame.unit) !== frame.unit;
     if (!isOther) continue;
     const detail = `${frame.axis} in ${frame.unit}, as section ${frame.name} says`;

@@ -3,7 +3,15 @@ import { levelRegister } from "../legs.ts";
 import type { Axis, LengthUnit, Origin } from "../model.ts";
 import { columnsOf } from "../sheet-rows.ts";
 import { sections } from "../tables/sections.ts";
-import { type Assembly, present, type ReadSheet, type Row, type SectionFrame } from "./context.ts";
+import {
+  type Assembly,
+  hintsIn,
+  originOf,
+  present,
+  type ReadSheet,
+  type Row,
+  type SectionFrame,
+} from "./context.ts";
 import type { Frames } from "./frame-for.ts";
 import { meantNames } from "./meant-name.ts";
 import { readLegs } from "./read-legs.ts";
@@ -130,7 +138,8 @@ function isReserved(
 }
 
 /** The section names of a sheet, each with the row it is first met in. */
-function namesIn({ sheet }: ReadSheet): ReadonlyMap<string, Origin> {
+function namesIn(read: ReadSheet): ReadonlyMap<string, Origin> {
+  const { sheet } = read;
   const names = new Map<string, Origin>();
   const isAboutSections = sheet.table !== "claims" && sheet.table !== "choices" && sheet.table !== "taxa";
   const column = isAboutSections ? sheet.columns.indexOf("section") : -1;
@@ -141,7 +150,7 @@ function namesIn({ sheet }: ReadSheet): ReadonlyMap<string, Origin> {
     if (seen[codes[index]] === 1) continue;
     seen[codes[index]] = 1;
     const name = values[codes[index]].trim().normalize("NFC");
-    if (name !== "" && !names.has(name)) names.set(name, { file: sheet.file, row: sheet.rowNumbers[index] });
+    if (name !== "" && !names.has(name)) names.set(name, originOf(read, index));
   }
   return names;
 }
@@ -159,7 +168,7 @@ function scaleOf(section: string, said: Partial<Scale>, search: ScaleSearch): Sc
   const sheets = [...assembly.sheets.values()].filter(
     (read) => read === search.own || namesIn(read).has(section),
   );
-  const hints = sheets.flatMap((read) => [...read.hints.values()]);
+  const hints = sheets.flatMap((read) => hintsIn(read, section));
   const axes = new Set(hints.flatMap(({ axis }) => axis ?? []));
   const units = new Set(hints.flatMap(({ unit }) => unit ?? []));
   const axis = said.axis ?? only(axes) ?? assembly.settings.sections.axis;

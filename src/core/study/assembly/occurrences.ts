@@ -1,9 +1,9 @@
 import { mapValues, type Numbered, numbered, rowsByValue, valueAt } from "../coded.ts";
 import type { Occurrence, Occurrences, Origin, Taxon } from "../model.ts";
-import { columnOccurrences } from "../occurrence-list.ts";
+import { columnOccurrences, placeOfFind } from "../occurrence-list.ts";
 import { type ParsedName, parseName } from "../open-nomenclature.ts";
 import { occurrences } from "../tables/occurrences.ts";
-import type { Assembly, SectionFrame } from "./context.ts";
+import { type Assembly, originOf, type SectionFrame } from "./context.ts";
 import { columnsOfFinds } from "./find-list.ts";
 import { type Frames, frameReader } from "./frame-for.ts";
 import { isQualifier, onlyQualifier } from "./one-mend.ts";
@@ -22,8 +22,8 @@ export function readOccurrences(
   const read = assembly.sheets.get("occurrences");
   const cells = readCells(occurrences, assembly);
   if (!read || !cells) return new Map();
-  const { columns, file, rowNumbers, usable } = cells;
-  const originAt = (index: number): Origin => ({ file, row: rowNumbers[index] });
+  const { columns, rowNumbers, usable } = cells;
+  const originAt = (index: number): Origin => originOf(read, index);
   const frameOf = frameReader(columns.section, originAt, { frames, read, assembly });
   const places = numbered<Place>(rowNumbers.length);
   const names = numbered<ParsedName>(rowNumbers.length);
@@ -115,15 +115,17 @@ const isOddQualifier = (written: string | undefined): boolean =>
   written !== undefined && !isQualifier(written);
 
 /** A count of nothing, and a qualifier that is no sign of open nomenclature and says nothing of the name. */
-function tellOdd({ columns, file, rowNumbers }: FindCells, index: number, { problems }: Assembly): void {
-  const origin = { file, row: rowNumbers[index] };
+function tellOdd(cells: FindCells, index: number, { problems }: Assembly): void {
+  const { columns } = cells;
+  const placeIn = (column: string) => placeOfFind({ ...cells, rows: cells.rowNumbers }, index, column);
   if (valueAt(columns.count, index) === 0)
-    problems.addOnce("count", "count-zero", { ...origin, column: "count", found: "0" });
+    problems.addOnce("count", "count-zero", { ...placeIn("count"), found: "0" });
   const written = valueAt(columns.qualifier, index);
   if (written === undefined || isQualifier(written)) return;
   const now = onlyQualifier(written);
-  const subject = JSON.stringify([written, now && origin.row]);
-  problems.addOnce(subject, "unknown-qualifier", { ...origin, column: "qualifier", found: written, now });
+  const place = placeIn("qualifier");
+  const subject = JSON.stringify([written, now && place.row]);
+  problems.addOnce(subject, "unknown-qualifier", { ...place, found: written, now });
 }
 
 /** True for a find that is not identified to the species, and so never ends a range. */

@@ -1,5 +1,7 @@
 import { type ParsedCell, parseCell, withDecimalPoint } from "../cells.ts";
 import { suggestName } from "../nearest.ts";
+import { columnOfFind } from "../occurrence-list.ts";
+import type { Stand } from "../origin.ts";
 import type { ProblemCode } from "../problem-wordings.ts";
 import type { ColumnDeclaration } from "../tables/declare.ts";
 import { isFixedUnit, lengthUnit } from "../units.ts";
@@ -9,7 +11,9 @@ import { sectionUnit } from "./section-unit.ts";
 
 export interface CellPlace {
   readonly name: string;
+  readonly file: string;
   readonly row: number;
+  readonly stand: Stand | undefined;
   readonly assembly: Assembly;
   readonly read: ReadSheet;
   /** The whole row. */
@@ -45,8 +49,8 @@ export function tellCell(
   { fault, ...place }: CellPlace & { readonly fault: CellFault },
 ): void {
   const { code, detail } = fault;
-  const { name, row, read, assembly } = place;
-  const at = { file: read.sheet.file, row, column: name, found: text };
+  const { name, file, row, stand, assembly } = place;
+  const at = { file, row, column: columnOfFind(stand, name), found: text };
   if (code === "blank-cell" || assembly.problems.isFull(code, at.file))
     return assembly.problems.add(code, at);
   const nearest = code === "not-in-list" ? suggestName(text.trim(), column.values ?? []) : undefined;

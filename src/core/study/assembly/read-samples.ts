@@ -2,7 +2,7 @@ import { valueAt } from "../coded.ts";
 import { sameLevelM } from "../legs.ts";
 import type { Origin, Sample } from "../model.ts";
 import { samples } from "../tables/samples.ts";
-import type { Assembly, SectionFrame } from "./context.ts";
+import { type Assembly, originOf, type SectionFrame } from "./context.ts";
 import { type FrameSearch, type Frames, frameReader } from "./frame-for.ts";
 import { type MeantName, meantNames } from "./meant-name.ts";
 import { lengthOf, type SlabCells, slabOf } from "./position.ts";
@@ -31,12 +31,12 @@ export function readSamples(frames: Frames, assembly: Assembly): SampleLists {
 }
 
 function readListed(
-  { columns, file, rowNumbers, usable }: ReadCells<typeof samples>,
+  { columns, usable }: ReadCells<typeof samples>,
   bySection: Derived,
   search: FrameSearch,
 ): void {
   const { assembly } = search;
-  const originAt = (index: number): Origin => ({ file, row: rowNumbers[index] });
+  const originAt = (index: number): Origin => originOf(search.read, index);
   const frameOf = frameReader(columns.section, originAt, search);
   for (const index of usable) {
     const origin = originAt(index);
@@ -97,11 +97,12 @@ function addSample(sample: Sample, known: Map<string, Sample>, assembly: Assembl
     Math.abs(first.baseM - sample.baseM) <= sameLevelM &&
     Math.abs(first.topM - sample.topM) <= sameLevelM;
   if (isMetAgain) return;
+  const ofFile = first.origin.file === sample.origin.file ? "" : ` of ${first.origin.file}`;
   assembly.problems.add("redefined", {
     ...sample.origin,
     column: "sample",
     found: sample.name,
-    detail: `sample ${sample.name} (first in row ${first.origin.row})`,
+    detail: `sample ${sample.name} (first in row ${first.origin.row}${ofFile})`,
   });
 }
 

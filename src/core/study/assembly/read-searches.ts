@@ -1,6 +1,6 @@
 import { type Coded, encode, mapValues, type Numbered, numbered, takeRows, valueAt } from "../coded.ts";
 import type { Occurrences, Origin, Sample, Search, Taxon } from "../model.ts";
-import { occurrenceColumns } from "../occurrence-list.ts";
+import { occurrenceColumns, placeOfFind } from "../occurrence-list.ts";
 import { settingPath } from "../setting-path.ts";
 import { searches } from "../tables/searches.ts";
 import type { Assembly, BySection, ReadSheet, SectionFrame } from "./context.ts";
@@ -26,8 +26,7 @@ export function readSearches(
 ): ReadonlyMap<string, SearchList> {
   const read = assembly.sheets.get("searches");
   const looked = assembly.sheets.get("occurrences");
-  if (!read && looked?.looked)
-    return listed(searchesOfWide(looked.looked, { ...context, file: looked.sheet.file }, assembly));
+  if (!read && looked?.looked) return listed(searchesOfWide(looked.looked, context, assembly));
   if (!read) return listed(deriveSearches(context, assembly));
   const cells = readCells(searches, assembly);
   if (!cells) return new Map();
@@ -220,7 +219,8 @@ function tellUnsearched(
   { problems }: Assembly,
 ): void {
   for (const [section, finds] of occurrences) {
-    const { taxon, sample, count, file, rows } = occurrenceColumns(finds);
+    const columns = occurrenceColumns(finds);
+    const { taxon, sample, count } = columns;
     const groups = encode(taxon.values.map((name) => groupOf(taxa, name)));
     const isSearched = searchedPairs(lists.get(section), sample.values, groups.values);
     const isFound = count.values.map((number) => number !== 0);
@@ -231,9 +231,7 @@ function tellUnsearched(
       if (isSearched[at * groups.values.length + of] === 1) continue;
       const detail = groups.values[of];
       problems.addOnce(JSON.stringify([section, detail]), "not-searched", {
-        file,
-        row: rows[find],
-        column: "sample",
+        ...placeOfFind(columns, find, "sample"),
         found: `${valueAt(taxon, find)} in ${valueAt(sample, find)}`,
         detail,
       });

@@ -1,9 +1,10 @@
-import type { Coded } from "../coded.ts";
+import { type Coded, valueAt } from "../coded.ts";
 import type { Sheet } from "../model.ts";
+import type { Stand } from "../origin.ts";
 import { columnsOf } from "../sheet-rows.ts";
 import type { ColumnDeclaration, RowOf, TableDeclaration } from "../tables/declare.ts";
 import type { TableName } from "../tables/index.ts";
-import type { Assembly, ReadSheet, Row } from "./context.ts";
+import { type Assembly, originOf, type ReadSheet, type Row } from "./context.ts";
 import { type CellFault, type CellPlace, readCell, tellCell } from "./read-cell.ts";
 import { repeatedRows } from "./repeated-rows.ts";
 
@@ -12,6 +13,7 @@ export interface ReadCells<T extends TableDeclaration> {
   readonly file: string;
   readonly columns: ColumnsOf<T>;
   readonly rowNumbers: Sheet["rowNumbers"];
+  readonly stands?: Coded<Stand>;
   /** Places of the rows without an error, from above downward. */
   readonly usable: Int32Array;
 }
@@ -28,12 +30,13 @@ export function rowsOf<T extends TableDeclaration & { readonly name: TableName }
 }
 
 function* rowsFrom<T extends TableDeclaration>(read: ReadCells<T>, table: T): Generator<Row<T>> {
-  const { file, rowNumbers, usable } = read;
+  const { file, rowNumbers, usable, stands } = read;
   const columns = Object.entries<Coded<unknown>>(read.columns);
   for (const index of usable) {
     const cells: Record<string, unknown> = {};
     for (const [name, { values, codes }] of columns) cells[name] = values[codes[index]];
-    if (isRowOf(cells, table)) yield { cells, origin: { file, row: rowNumbers[index] } };
+    if (isRowOf(cells, table))
+      yield { cells, origin: { file: stands ? valueAt(stands, index).file : file, row: rowNumbers[index] } };
   }
 }
 
@@ -61,7 +64,8 @@ export function readCells<T extends TableDeclaration & { readonly name: TableNam
   const columns = Object.fromEntries(declared.map(({ name, coded }) => [name, coded]));
   const usable = usableRows({ table, read, assembly, cells, declared });
   if (!isColumnsOf(columns, table)) return undefined;
-  return { file: sheet.file, columns, rowNumbers: sheet.rowNumbers, usable };
+  const { stands } = read;
+  return { file: sheet.file, columns, rowNumbers: sheet.rowNumbers, usable, ...(stands && { stands }) };
 }
 
 interface ReadColumn {
@@ -104,7 +108,7 @@ interface Reading {
 /** The rows that can be used; what is wrong with the others is told, from above downward. */
 function usableRows(reading: Reading): Int32Array {
   const { table, read, assembly, cells, declared } = reading;
-  const { rows, rowNumbers, file } = read.sheet;
+  const { rows, rowNumbers } = read.sheet;
   const firstLike = repeatedRows(cells, rows.length);
   const faulty = declared.filter(({ isGood }) => isGood.includes(0));
   const ways = openWays(table, declared);
@@ -116,7 +120,7 @@ function usableRows(reading: Reading): Int32Array {
     if (first !== undefined) {
       const found = (rows.at(index) ?? []).join(",");
       const detail = String(rowNumbers[first]);
-      assembly.problems.add("duplicate-row", { file, row: rowNumbers[index], found, detail });
+      assembly.problems.add("duplicate-row", { ...originOf(read, index), found, detail });
     } else if (!isOdd) {
       usable[count] = index;
       count += 1;
@@ -124,7 +128,7 @@ function usableRows(reading: Reading): Int32Array {
       tellRow(index, reading);
     } else if (ways.length > 0 && !ways.some((set) => isFilled(set, index))) {
       const detail = (table.oneOf ?? []).map((set) => set.join(" and ")).join(", or ");
-      assembly.problems.add("one-of", { file, row: rowNumbers[index], found: "", detail });
+      assembly.problems.add("one-of", { ...originOf(read, index), found: "", detail });
     } else {
       usable[count] = index;
       count += 1;
@@ -148,12 +152,13 @@ const isFilled = (columns: readonly ReadColumn[], index: number): boolean =>
 /** Tells what is wrong with the cells of a row. */
 function tellRow(index: number, { read, assembly, declared }: Reading): void {
   const { sheet } = read;
-  const row = sheet.rowNumbers[index];
+  const origin = originOf(read, index);
+  const stand = read.stands && valueAt(read.stands, index);
   const cells = sheet.rows.at(index) ?? [];
   for (const { name, column, faults, isGood, coded } of declared) {
     const code = coded.codes[index];
     const fault = isGood[code] === 1 ? undefined : faults[code];
     const text = cells[sheet.columns.indexOf(name)] ?? "";
-    if (fault !== undefined) tellCell(text, column, { fault, name, row, cells, read, assembly });
+    if (fault !== undefined) tellCell(text, column, { fault, name, ...origin, stand, cells, read, assembly });
   }
 }

@@ -9,7 +9,6 @@ interface WideSearch {
   readonly samples: SampleLists;
   readonly taxa: ReadonlyMap<string, Taxon>;
   readonly occurrences: ReadonlyMap<string, Occurrences>;
-  readonly file: string;
 }
 
 type Marks = Looked["rows"][number]["marks"];
@@ -20,12 +19,29 @@ type Marks = Looked["rows"][number]["marks"];
  * not say, and the setting `blank` does: by default it was not looked for.
  */
 export function searchesOfWide(
-  looked: Looked,
-  { samples, taxa, file }: WideSearch,
+  sheets: readonly Looked[],
+  context: WideSearch,
   assembly: Assembly,
 ): BySection<Search> {
-  const groups = groupsOf(looked.taxa, taxa);
   const lists = new Map<string, Search[]>();
+  const seen = new Set<string>();
+  for (const looked of sheets) addSearches(lists, looked, { ...context, seen, assembly });
+  return lists;
+}
+
+interface Adding extends WideSearch {
+  /** Samples and groups that an earlier sheet speaks of. */
+  readonly seen: Set<string>;
+  readonly assembly: Assembly;
+}
+
+function addSearches(
+  lists: Map<string, Search[]>,
+  looked: Looked,
+  { samples, taxa, seen, assembly }: Adding,
+): void {
+  const { file } = looked;
+  const groups = groupsOf(looked.taxa, taxa);
   for (const { section, sample, row, effort, marks } of looked.rows) {
     const known = samples.bySection.get(section)?.get(sample);
     if (known === undefined) continue;
@@ -33,6 +49,9 @@ export function searchesOfWide(
       const said = saysOf(members, marks);
       if (said === "blank" && !looked.isBlankChosen) tellBlank(file, { row, sample, group }, assembly);
       if (said === "not-searched" || (said === "blank" && looked.blank === "not-searched")) continue;
+      const key = JSON.stringify([section, sample, group]);
+      if (seen.has(key)) continue;
+      seen.add(key);
       gather(lists, section, {
         sample,
         group,
@@ -45,7 +64,6 @@ export function searchesOfWide(
     }
   }
   tellUnitless(looked, file, assembly);
-  return lists;
 }
 
 /** The taxa of each group, by their places in a row. */

@@ -7,6 +7,8 @@ export interface Grid {
   readonly at: (row: number, column: number) => string;
   /** The row of the file in which a cell stands, as a spreadsheet counts. */
   readonly rowOf: (row: number, column: number) => number;
+  /** The column of the file in which a cell stands. */
+  readonly columnOf: (row: number, column: number) => number;
 }
 
 /** The records as they stand, or turned so that their columns are rows. */
@@ -20,8 +22,9 @@ export function gridOf(records: readonly CsvRecord[], isTurned: boolean): Grid {
         width: records.length,
         at: (row, column) => at(column, row),
         rowOf: (_, column) => rowOf(column),
+        columnOf: (row) => row,
       }
-    : { height: records.length, width: breadth, at, rowOf };
+    : { height: records.length, width: breadth, at, rowOf, columnOf: (_, column) => column };
 }
 
 export const columnCells = ({ at, height }: Grid, column: number, from: number): string[] =>

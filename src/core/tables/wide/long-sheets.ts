@@ -1,4 +1,5 @@
 import type { HeaderHint, ReadSheet } from "../../study/assembly/context.ts";
+import { encode } from "../../study/coded.ts";
 import type { Sheet } from "../../study/model.ts";
 import { parseName } from "../../study/open-nomenclature.ts";
 import type { Grid } from "./grid.ts";
@@ -21,7 +22,15 @@ export function longSheet(
     rows: rows.map(({ cells }) => columns.map((column) => cells[column] ?? "")),
     rowNumbers: rows.map(({ row }) => row),
   };
-  return { sheet, hints, shown };
+  if (table !== "occurrences") return { sheet, hints, shown };
+  const stands = shown.headers.map((column) => ({ file: shown.file, column }));
+  const none = { file: shown.file };
+  return {
+    sheet,
+    hints,
+    shown,
+    stands: encode(rows.map(({ column }) => (column === undefined ? none : stands[column]))),
+  };
 }
 
 interface LongSheet {

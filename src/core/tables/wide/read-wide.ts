@@ -2,60 +2,25 @@ import type { Looked, ReadSheet } from "../../study/assembly/context.ts";
 import { withDecimalPoint } from "../../study/cells.ts";
 import type { Dialect, Sheet } from "../../study/model.ts";
 import type { ProblemList } from "../../study/problem-list.ts";
-import type { CodeMeaning, Recognition, WideReading } from "../../study/recognised.ts";
+import type { CodeMeaning, WideReading } from "../../study/recognised.ts";
 import type { Settings } from "../../study/settings.ts";
 import type { ColumnChoice } from "../../study/tables/declare.ts";
 import type { TableName } from "../../study/tables/index.ts";
 import { occurrences } from "../../study/tables/occurrences.ts";
 import { samples } from "../../study/tables/samples.ts";
-import { type CsvRecord, type CsvRecords, parseRecords } from "../csv.ts";
+import { type CsvRecords, parseRecords } from "../csv.ts";
 import { decimalSign } from "../dialect/decimal.ts";
 import { type DeclaredDialect, type TableSetting, tablePath } from "../dialect/declared.ts";
 import { decodeBytes } from "../dialect/encoding.ts";
 import { tellDialect } from "../dialect/tell-dialect.ts";
 import { MOST_CELLS_AT_ONCE, MOST_COLUMNS } from "../limits.ts";
 import { isBeyond } from "../part-table.ts";
-import { recognition, sampleValues } from "../recognition.ts";
-import { columnCells, type Grid, gridOf } from "./grid.ts";
-import { headerReader } from "./leading.ts";
-import { isNote, legendOf } from "./legend.ts";
+import { legendOf } from "./legend.ts";
 import { groupRows, leadingHints, longSheet } from "./long-sheets.ts";
-import { type WideLayout, wideLayout } from "./wide-layout.ts";
+import { shownSheet } from "./shown-wide.ts";
+import type { WideLayout } from "./wide-layout.ts";
 import { type WideRows, wideRows } from "./wide-rows.ts";
-
-/** A wide sheet among parted records: whether it has to be turned, and where everything stands. */
-export interface WideShape {
-  readonly shape: "samples-down" | "taxa-down";
-  readonly records: readonly CsvRecord[];
-  readonly notes: readonly CsvRecord[];
-  readonly grid: Grid;
-  readonly layout: WideLayout;
-}
-
-/** The shape in which most names of taxa stand; undefined where the records are no wide sheet. */
-export function wideShape(
-  records: readonly CsvRecord[],
-  {
-    chosen,
-    shape,
-  }: { readonly chosen: ReadonlyMap<string, ColumnChoice>; readonly shape?: TableSetting["shape"] },
-): WideShape | undefined {
-  if (shape === "long") return undefined;
-  const notes = records.filter(({ cells }) => isNote(cells));
-  const table = records.filter((record) => !notes.includes(record));
-  const reader = headerReader(chosen);
-  const shapes = (["samples-down", "taxa-down"] as const)
-    .filter((one) => shape === undefined || shape === one)
-    .flatMap((one): WideShape[] => {
-      const grid = gridOf(table, one === "taxa-down");
-      const layout = wideLayout(grid, reader);
-      return layout === undefined ? [] : [{ shape: one, records: table, notes, grid, layout }];
-    });
-  return shapes.reduce<WideShape | undefined>(
-    (best, one) => (best === undefined || one.layout.sure > best.layout.sure ? one : best),
-    undefined,
-  );
-}
+import { type WideShape, wideShape } from "./wide-shape.ts";
 
 export interface WideSource {
   readonly file: string;
@@ -186,57 +151,6 @@ function codesOf({ notes, records, layout, shape }: WideShape, { said, scales }:
   return codes;
 }
 
-/** The sheet as it stands in its file, to look at and to mend. */
-function shownSheet({ shape, records, grid, layout }: WideShape, dialect: Dialect, file: string): Sheet {
-  const below = shape === "taxa-down" ? 1 : layout.below;
-  const rows = records.slice(below);
-  const width = records.reduce((most, { cells }) => Math.max(most, cells.length), 0);
-  const headerOf = new Map([
-    ...layout.leading.map(({ at, header }) => [at, header] as const),
-    ...layout.taxa.map(({ column, name }) => [column, name] as const),
-  ]);
-  const headers = Array.from({ length: width }, (_, at) =>
-    shape === "taxa-down" ? (records[0]?.cells[at] ?? "") : (headerOf.get(at) ?? ""),
-  );
-  const usedAt = new Map(layout.leading.map(({ at, column, isUsed }) => [at, isUsed ? column : undefined]));
-  return {
-    file,
-    table: "occurrences",
-    dialect,
-    headers,
-    columns: headers.map((_, at) => (shape === "taxa-down" ? undefined : usedAt.get(at))),
-    recognised: recognisedIn(grid, layout),
-    rows: rows.map(({ cells }) => headers.map((_, at) => cells[at] ?? "")),
-    rowNumbers: rows.map(({ row }) => row),
-  };
-}
-
-function recognisedIn(grid: Grid, layout: WideLayout): readonly Recognition[] {
-  const { below, leading, taxa } = layout;
-  const valuesOf = (at: number) =>
-    sampleValues(
-      columnCells(grid, at, below).map((cell) => [cell]),
-      0,
-    );
-  const all = [
-    ...leading.map((column) => ({
-      at: column.at,
-      one: { ...recognition(column, samples), values: valuesOf(column.at) },
-      isUsed: column.isUsed && column.column !== "taxon" && column.column !== "group",
-    })),
-    ...taxa.map(({ column, name, by = "name" as const }) => ({
-      at: column,
-      one: { header: name, is: "taxon", by, values: valuesOf(column) },
-      isUsed: true,
-    })),
-  ];
-  return all
-    .toSorted((a, b) => a.at - b.at)
-    .flatMap(({ one, isUsed }) =>
-      one.header === "" && !isUsed ? [] : [isUsed ? one : { ...one, is: "unused" }],
-    );
-}
-
 /** Tells what was taken how, and every cell that cannot be. */
 function tellWide(shown: Sheet, rows: WideRows, { file, problems }: WideSource): void {
   const { wide, recognised } = shown;
@@ -274,6 +188,7 @@ function longTables(
   const has = (name: string) => layout.leading.some(({ column, isUsed }) => isUsed && column === name);
   const unit = hints.get("effort")?.bracket;
   const looked: Looked = {
+    file: shown.file,
     taxa: layout.taxa.map(({ name }) => name),
     rows: rows.looked,
     counting: rows.counting,
@@ -286,7 +201,7 @@ function longTables(
     rows: rows.occurrences,
     hints: new Map(),
   });
-  const tables = new Map<TableName, ReadSheet>([["occurrences", { ...finds, looked }]]);
+  const tables = new Map<TableName, ReadSheet>([["occurrences", { ...finds, looked: [looked] }]]);
   if (has("position") || has("base"))
     tables.set(
       "samples",

@@ -23,6 +23,8 @@ export interface WideRows {
 export interface LongRow {
   readonly cells: Readonly<Record<string, string>>;
   readonly row: number;
+  /** The column of the file, of a find. */
+  readonly column?: number;
 }
 
 interface Making {
@@ -59,6 +61,7 @@ export function wideRows(grid: Grid, layout: WideLayout, making: Making): WideRo
       cell.kind === "found"
         ? {
             row: where(row, taxon).row,
+            column: grid.columnOf(row.at, layout.taxa[taxon].column),
             cells: {
               section: row.place.section,
               sample: row.place.sample,

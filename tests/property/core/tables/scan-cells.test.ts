@@ -1,4 +1,4 @@
-import fc from "fast-check";
+import * as fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { parseRecords } from "../../../../src/core/tables/csv.ts";
 import { type ScannedCells, scanCells } from "../../../../src/core/tables/scan-cells.ts";
