@@ -2,6 +2,7 @@ import type { ReactElement } from "react";
 import { Empty } from "./empty.tsx";
 import { Margin } from "./margin/margin.tsx";
 import { PlateStation } from "./plate/plate-station.tsx";
+import { RangesStation } from "./ranges/ranges-station.tsx";
 import { lackOf } from "./state/lack.ts";
 import { usePage } from "./state/page-context.ts";
 import type { Work } from "./state/page-state.ts";
@@ -12,13 +13,15 @@ import { TablesStation } from "./tables/tables-station.tsx";
 export function Station(): ReactElement {
   const { state, open, study } = usePage();
   const isTables = state.place.station === "tables";
+  const isRanges = state.place.station === "ranges";
   if (open === undefined && !(isTables && study.readOut)) return <Waiting />;
   const lack = open && lackOf(open.focus.station, open.focus, open.analysis);
   return (
     <main className={state.isMarginOpen ? styles.station : `${styles.station} ${styles.wide}`}>
       <section className={styles.left} aria-label={isTables ? "Tables" : "Plate"}>
         {lack !== undefined && <Empty title={lack.what}>{lack.where}</Empty>}
-        {lack === undefined && (isTables ? <TablesStation /> : <PlateStation />)}
+        {lack === undefined &&
+          (isTables ? <TablesStation /> : isRanges ? <RangesStation /> : <PlateStation />)}
       </section>
       <Margin />
     </main>

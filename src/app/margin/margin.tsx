@@ -3,6 +3,7 @@ import { memo, type ReactElement } from "react";
 import type { Finding } from "../../report/findings/finding.ts";
 import { plain } from "../../report/wordings/words.ts";
 import { KeptPart } from "../keeping/kept-part.tsx";
+import { TaxonNotes } from "../ranges/taxon-notes.tsx";
 import { type Opened, usePage } from "../state/page-context.ts";
 import { findingOf } from "../state/station-state.ts";
 import { Problems } from "../tables/problems.tsx";
@@ -71,9 +72,10 @@ function Argument({ finding, open }: { readonly finding: Finding; readonly open:
         </p>
       )}
       <TrialBar open={open} />
+      {finding.station === "ranges" && <TaxonNotes open={open} />}
       <Numbers lines={finding.numbers} before={was?.numbers} />
       {finding.station === "tables" && <Problems />}
-      {finding.station === "tables" && <SetAsideList />}
+      {(finding.station === "tables" || finding.station === "ranges") && <SetAsideList />}
       {finding.station === "tables" && <KeptPart />}
       <Weaknesses weaknesses={finding.weaknesses} />
       <Methods methods={finding.methods} />

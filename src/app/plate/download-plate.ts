@@ -1,3 +1,4 @@
+import type { Drawing } from "../../figures/plates/drawing.ts";
 import { carriedFaces } from "../faces.ts";
 import { handOver } from "../hand-over.ts";
 import type { Opened } from "../state/page-context.ts";
@@ -9,17 +10,20 @@ import { drawingOf } from "./drawing-of.ts";
 export async function downloadPlate(
   { analysis, focus, trying }: Opened,
   { frame, beside }: Pick<PageState, "frame" | "beside">,
+  again?: (fontFaces: string) => Drawing,
 ): Promise<void> {
   const [{ renderPlate }, fontFaces] = await Promise.all([
     import("../../figures/render-plate.ts"),
     carriedFaces(),
   ]);
-  const drawing = drawingOf(focus, analysis, {
-    ...viewOf(focus, frame, analysis, trying?.was),
-    ...(trying && { was: trying.was }),
-    beside,
-    fontFaces,
-  });
+  const drawing =
+    again?.(fontFaces) ??
+    drawingOf(focus, analysis, {
+      ...viewOf(focus, frame, analysis, trying?.was),
+      ...(trying && { was: trying.was }),
+      beside,
+      fontFaces,
+    });
   if (drawing === undefined) throw new Error("downloadPlate: expected a plate in view, got none");
   handOver(`${drawing.id}.svg`, renderPlate(drawing.element), "image/svg+xml");
 }

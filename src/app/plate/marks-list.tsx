@@ -1,13 +1,23 @@
 import { type KeyboardEvent, type ReactElement, useState } from "react";
 import styles from "./plate.module.css";
-import type { Marks } from "./use-marks.ts";
+import type { Marks, OnMark } from "./use-marks.ts";
+
+interface MarksListProps {
+  readonly marks: Marks;
+  readonly onMark?: OnMark;
+  /** The keys that a station has for marks, in words. */
+  readonly keys?: string;
+}
 
 /** The marks of the plate for the keyboard: arrows walk through them, Enter opens their rows. */
-export function MarksList({ marks }: { readonly marks: Marks }): ReactElement | null {
+export function MarksList({ marks, onMark, keys }: MarksListProps): ReactElement | null {
   const [current, setCurrent] = useState(0);
   if (marks.listed.length === 0) return null;
   const place = Math.min(current, marks.listed.length - 1);
   const walk = (event: KeyboardEvent<HTMLElement>) => {
+    const mark = marks.listed[place];
+    const isPlain = !event.altKey && !event.ctrlKey && !event.metaKey;
+    if (isPlain && mark !== undefined && onMark?.(event.key, mark) === true) return event.preventDefault();
     const next = walked(event.key, place, marks.listed.length);
     if (next === undefined) return;
     event.preventDefault();
@@ -17,7 +27,7 @@ export function MarksList({ marks }: { readonly marks: Marks }): ReactElement | 
   return (
     <div className={styles.marks}>
       <h2 id="marks-title">On this plate</h2>
-      <ul aria-labelledby="marks-title">
+      <ul aria-labelledby="marks-title" title={keys}>
         {marks.listed.map((mark, index) => (
           <li key={`${mark.kind} ${mark.name}`}>
             <button

@@ -13,9 +13,11 @@ const ICONS = { nearer: ZoomIn, further: ZoomOut, whole: Maximize2 } as const;
 export function PlateTools({
   drawing,
   open,
+  again,
 }: {
   readonly drawing: Drawing;
   readonly open: Opened;
+  readonly again?: (fontFaces: string) => Drawing;
 }): ReactElement {
   const page = usePage();
   const [failure, setFailure] = useState("");
@@ -35,7 +37,7 @@ export function PlateTools({
         title={`Save ${drawing.title} as it is seen`}
         onClick={() => {
           setFailure("");
-          downloadPlate(open, page.state).catch((error: unknown) => setFailure(String(error)));
+          downloadPlate(open, page.state, again).catch((error: unknown) => setFailure(String(error)));
         }}
       >
         <Download aria-hidden size={14} /> SVG

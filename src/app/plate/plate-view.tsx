@@ -8,7 +8,8 @@ import { MarksList } from "./marks-list.tsx";
 import styles from "./plate.module.css";
 import { PlateTools } from "./plate-tools.tsx";
 import { ReadingLine } from "./reading-line.tsx";
-import { useMarks } from "./use-marks.ts";
+import { useMarkPresses } from "./use-mark-presses.ts";
+import { type OnMark, useMarks } from "./use-marks.ts";
 import { usePlateKeys } from "./use-plate-keys.ts";
 import { usePlateScale } from "./use-plate-scale.ts";
 import { useReading } from "./use-reading.ts";
@@ -16,10 +17,16 @@ import { useReading } from "./use-reading.ts";
 interface PlateProps {
   readonly drawing: Drawing;
   readonly open: Opened;
+  /** The same drawing with other faces, for a file; default that of the station. */
+  readonly again?: (fontFaces: string) => Drawing;
+  /** What the station does with a click or a key on a mark; tells whether it did anything. */
+  readonly onMark?: OnMark;
+  /** Its keys in words. */
+  readonly markKeys?: string;
 }
 
 /** The plate as it will be exported, with the reading line and the names of marks laid over it. */
-export function PlateView({ drawing, open }: PlateProps): ReactElement {
+export function PlateView({ drawing, open, again, onMark, markKeys }: PlateProps): ReactElement {
   const { state } = usePage();
   const frame = useRef<HTMLDivElement>(null);
   const sheet = useRef<HTMLDivElement>(null);
@@ -27,9 +34,10 @@ export function PlateView({ drawing, open }: PlateProps): ReactElement {
   const reading = useReading(drawing, open);
   const marks = useMarks(sheet, drawing);
   usePlateKeys(frame, reading);
+  useMarkPresses(sheet, marks.pointed?.mark, onMark);
   return (
     <figure className={styles.figure}>
-      <PlateTools drawing={drawing} open={open} />
+      <PlateTools drawing={drawing} open={open} again={again} />
       <section
         ref={frame}
         className={styles.frame}
@@ -54,10 +62,10 @@ export function PlateView({ drawing, open }: PlateProps): ReactElement {
             <ReadingLine drawing={drawing} reading={reading} pixelsPerPoint={pixelsPerPoint} />
           )}
           <Handles open={open} panels={drawing.panels} pixelsPerPoint={pixelsPerPoint} />
-          <MarkLabel pointed={marks.pointed} />
+          <MarkLabel pointed={marks.pointed} keys={markKeys} />
         </div>
       </section>
-      <MarksList marks={marks} />
+      <MarksList marks={marks} onMark={onMark} keys={markKeys} />
     </figure>
   );
 }

@@ -17,6 +17,9 @@ export interface Pointed {
   readonly drawing: Drawing;
 }
 
+/** What is done with a key, or `click`, on a mark; tells whether it did anything. */
+export type OnMark = (key: string, mark: Mark) => boolean;
+
 export interface Marks {
   /** The marks on the plate that the keyboard walks through, each once, in the order drawn. */
   readonly listed: readonly Mark[];
@@ -65,12 +68,13 @@ export function useMarks(sheet: RefObject<HTMLElement | null>, drawing: Drawing)
   }, [listed, pointed, drawing, sheet, opened, go]);
 }
 
-const markUnder = (target: EventTarget): Mark | undefined =>
+export const markUnder = (target: EventTarget): Mark | undefined =>
   target instanceof Element ? markOf(target.closest(MARK_SELECTOR)) : undefined;
 
 function marksOn(sheet: HTMLElement | null): readonly Mark[] {
   const found = new Map<string, Mark>();
-  for (const element of sheet?.querySelectorAll("[data-taxon], [data-horizon]") ?? []) {
+  for (const element of sheet?.querySelectorAll("[data-taxon], [data-horizon], [data-taxon] [data-row]") ??
+    []) {
     const mark = markOf(element);
     if (mark !== undefined) found.set(`${mark.kind} ${mark.name}`, mark);
   }

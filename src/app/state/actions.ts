@@ -1,4 +1,5 @@
 import { setTitle } from "../../report/wordings/set-title.ts";
+import { rangesActions } from "../ranges/ranges-actions.ts";
 import { bundledStudy } from "../study/bundled-study.ts";
 import { heightOf } from "./level.ts";
 import type { Opened, PageContents } from "./page-context.ts";
@@ -23,6 +24,7 @@ export function actionsOf(page: PageContents): readonly Action[] {
   return [
     ...stationActions(page),
     ...plateActions(page),
+    ...rangesActions(page),
     ...tableActions(page),
     ...focusActions(page),
     ...pageActions(page),

@@ -3,6 +3,7 @@ import type { Section } from "../../core/study/model.ts";
 import type { TaxonSet } from "../../core/timing/result.ts";
 import type { VerticalScale } from "../../figures/plates/drawing.ts";
 import type { Station } from "../../report/findings/finding.ts";
+import type { RangesPlace } from "../ranges/ranges-place.ts";
 import type { Place } from "./place.ts";
 
 /** What every plate is about: the place, made good against the study that is open. */
@@ -12,6 +13,7 @@ export interface Focus {
   readonly set?: TaxonSet;
   readonly sets: readonly TaxonSet[];
   readonly scale: VerticalScale;
+  readonly ranges: RangesPlace;
 }
 
 export function focusOf(place: Place, analysis: Analysis): Focus {
@@ -19,5 +21,5 @@ export function focusOf(place: Place, analysis: Analysis): Focus {
   const section = sections.find(({ name }) => name === place.section) ?? sections[0];
   const sets = analysis.timing.sets.filter((set) => set.section === section?.name);
   const set = sets.find((set) => set.set === place.set) ?? sets[0];
-  return { station: place.station, section, set, sets, scale: place.scale };
+  return { station: place.station, section, set, sets, scale: place.scale, ranges: place.ranges };
 }

@@ -1,5 +1,6 @@
 import type { VerticalScale } from "../../figures/plates/drawing.ts";
 import type { Station } from "../../report/findings/finding.ts";
+import { type RangesPlace, rangesPlaceOf, writeRangesPlace } from "../ranges/ranges-place.ts";
 
 /** The steps of the job, in working order. */
 export const STATIONS: readonly { readonly id: Station; readonly title: string }[] = [
@@ -22,6 +23,7 @@ export interface Place {
   readonly table?: string;
   readonly row?: number;
   readonly find?: string;
+  readonly ranges: RangesPlace;
 }
 
 /** The place an address names; what it does not name, or names wrongly, is the default. */
@@ -38,6 +40,7 @@ export function placeOf(hash: string): Place {
     table: text("table"),
     row: Number.isInteger(row) && row > 0 ? row : undefined,
     find: text("find"),
+    ranges: rangesPlaceOf(words),
   };
 }
 
@@ -56,6 +59,7 @@ export function hashOf(place: Place): string {
     add("row", place.row);
     add("find", place.find);
   }
+  writeRangesPlace(words, place.ranges);
   const query = words.toString();
   return `#${place.station}${query === "" ? "" : `?${query}`}`;
 }

@@ -120,7 +120,7 @@ function LeaningLine({ x, y, taxon }: TaxonRangeProps): ReactElement | null {
   const foot = (heightM: number) =>
     isInFrame(y, heightM) ? `M${round(at - 0.8)} ${round(y(heightM))}h1.6` : "";
   const d = `M${at} ${round(span.bottom)}V${round(span.top)}${foot(leaning.nearestM)}${foot(leaning.furthestM)}`;
-  return <path d={d} fill="none" stroke={COLOURS.soft} strokeWidth={0.45} />;
+  return <path d={d} fill="none" stroke={COLOURS.soft} strokeOpacity={0.7} strokeWidth={0.4} />;
 }
 
 const SIGN_LIFT = 4;

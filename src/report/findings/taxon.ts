@@ -76,7 +76,6 @@ function methodLine(section: Section, top: RangeEnd, bases: readonly RangeEnd[])
   const notes = [
     base === undefined ? "" : `base ${endWords(section, base)}`,
     STANCES[recoveryStance(top.method)],
-    top.note,
   ].filter((note) => note !== "");
   return { label: top.method, value: endWords(section, top), note: notes.join("; "), top };
 }
