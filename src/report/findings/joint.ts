@@ -88,15 +88,22 @@ function sentence(set: string, { answers, offsets, cautions, analysis }: Told): 
 /** What forbids to trust the level comes before it. */
 function gateWords(cautions: readonly Caution[], test: TimingAnswer | undefined): Words {
   const has = (code: string) => cautions.some((caution) => caution.code === code);
+  const together = has("joint-sections-differ")
+    ? say`One distance in all sections is ${strong("rejected")} (${pValue(test?.p ?? 0)}). `
+    : has("joint-sections-likely-differ")
+      ? say`A level of its own in every section is ${strong("likelier")} than one distance in all. `
+      : [];
   if (has("joint-recovery-declines"))
-    return say`${strong("Finds of these taxa thin out upward")} in some sections, so what follows is not to be trusted. `;
-  if (has("joint-sections-differ"))
-    return say`One distance in all sections is ${strong("rejected")} (${pValue(test?.p ?? 0)}). `;
-  if (has("joint-sections-likely-differ"))
-    return say`A level of its own in every section is ${strong("likelier")} than one distance in all. `;
+    return [
+      ...together,
+      ...say`${strong("Finds of these taxa thin out upward")} in some sections, so what follows is not to be trusted. `,
+    ];
   return has("joint-one-level-rejected")
-    ? say`${strong("One level is rejected")} within some sections, so what follows is not to be trusted. `
-    : [];
+    ? [
+        ...together,
+        ...say`${strong("One level is rejected")} within some sections, so what follows is not to be trusted. `,
+      ]
+    : together;
 }
 
 function interval(low: number, high: number, unit: TimingAnswer["unit"]): string {
