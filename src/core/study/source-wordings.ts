@@ -80,6 +80,11 @@ export const sourceWordings = {
       "a unit for the values",
       `Add a column unit, write it in the header, as value (ppb), or set ${p.detail}. Nothing is assumed: the values are left out until then.`,
     ),
+  "amount-without-unit": (p) =>
+    caution(
+      "an amount_unit beside the amount",
+      `Write the unit in amount_unit or in the header, as amount (g), or set ${p.detail}. The amount is kept without a unit.`,
+    ),
   "effort-without-unit": (p) =>
     caution(
       "an effort_unit beside the effort",

@@ -32,8 +32,14 @@ export function readMeasurements(
     const place = frame && placeOf(cells, frame, { origin, samples, assembly });
     if (!frame || !place) continue;
     const value = valueOf(row, read, assembly);
+    const amountUnit = row.cells.amount_unit ?? read.hints.get("amount")?.bracket;
+    if (value && row.cells.amount !== undefined && amountUnit === undefined) tellAmount(row, read, assembly);
     if (value && isOnScale(row, value.unit.scale))
-      gather(lists, frame.name, measurementOf(row, place, { ...value, density: frame.declared.densityGCm3 }));
+      gather(
+        lists,
+        frame.name,
+        measurementOf(row, place, { ...value, amountUnit, density: frame.declared.densityGCm3 }),
+      );
   }
   return lists;
 }
@@ -113,6 +119,14 @@ function tellUnitless({ cells, origin }: MeasurementRow, read: ReadSheet, { prob
   problems.addOnce("unit", "values-without-unit", { ...origin, column: "value", found: cells.value, detail });
 }
 
+/** An amount of no unit cannot be set beside another. */
+function tellAmount({ cells, origin }: MeasurementRow, read: ReadSheet, { problems }: Assembly): void {
+  const header = read.hints.get("amount")?.header ?? "amount";
+  const detail = settingPath(["tables", read.sheet.file, "columns", header, "unit"]);
+  const found = String(cells.amount);
+  problems.addOnce("amount", "amount-without-unit", { ...origin, column: "amount", found, detail });
+}
+
 /** A value that carries its unit, or the other decimal sign. */
 function onlyReading(
   { value, analyte }: RowOf<typeof measurements>,
@@ -142,10 +156,15 @@ function sigmaOf(
   return oneSigma(cells.error, cells.error_kind, readingSize(reading)) * unit.factor;
 }
 
+interface OfSample {
+  readonly amountUnit?: string;
+  readonly density?: number;
+}
+
 function measurementOf(
   { cells, origin }: MeasurementRow,
   place: Place,
-  { reading, unit, givenUnit, sigma, density }: Value & { readonly density?: number },
+  { reading, unit, givenUnit, sigma, amountUnit, density }: Value & OfSample,
 ): Measurement {
   const limit = cells.detection_limit;
   return {
@@ -163,7 +182,7 @@ function measurementOf(
     ...present({
       trials: cells.trials,
       amount: cells.amount,
-      amountUnit: cells.amount_unit,
+      amountUnit: cells.amount === undefined ? undefined : amountUnit,
       method: cells.method,
     }),
     ...present({ densityGCm3: place.sample?.densityGCm3 ?? density }),
