@@ -1,7 +1,14 @@
 import type { Outcome } from "../../core/basis.ts";
 import type { Section } from "../../core/study/model.ts";
 import type { TimingAnswer, TimingMethod } from "../../core/timing/result.ts";
-import { inMetres, percent, positionInterval, pValue, significant } from "../wordings/numbers.ts";
+import {
+  inMetres,
+  percent,
+  positionInterval,
+  probability,
+  pValue,
+  significant,
+} from "../wordings/numbers.ts";
 import { plural } from "../wordings/words.ts";
 import type { NumberLine } from "./finding.ts";
 
@@ -84,8 +91,8 @@ const lines: Readonly<Record<TimingMethod, Line>> = {
       section,
     ),
   "pulses-posterior": (answer) => ({
-    label: pulsesLabel(answer),
-    value: answer.estimate === undefined ? outcomeWords(answer.outcome) : percent(answer.estimate),
+    label: (answer.part ?? 1) === 1 ? "One level for all" : `${answer.part} pulses`,
+    value: answer.estimate === undefined ? outcomeWords(answer.outcome) : probability(answer.estimate),
     note: "posterior probability",
   }),
   "rank-correlation": (answer, section) =>

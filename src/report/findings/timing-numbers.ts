@@ -32,18 +32,18 @@ const LEAST_SHOWN = 0.005;
 function weightLines({ weights, analysis }: TimingCase): readonly Line[] {
   const isDeclared = Object.keys(analysis.study.settings.timing.priors).length > 0;
   const group = `Scenarios, ${isDeclared ? "declared" : "equal"} priors`;
-  return weights.map((weight, place) => ({
+  return weights.map((weight) => ({
     group,
     label: scenarioTitle(weight),
     value: probability(weight.probability),
     share: weight.probability,
-    note: priorNote(weight, place === 0),
+    note: priorNote(weight),
     isMore: weight.probability < LEAST_SHOWN,
   }));
 }
 
-const priorNote = ({ prior, error }: Weight, isFirst: boolean): string | undefined => {
-  const own = isFirst ? `${probability(prior)} beforehand` : probability(prior);
+const priorNote = ({ prior, error }: Weight): string => {
+  const own = `${probability(prior)} beforehand`;
   return error === undefined ? own : `${own}, ln evidence to \u00b1${Number(error.toPrecision(1))}`;
 };
 
