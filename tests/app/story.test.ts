@@ -177,8 +177,9 @@ describe.skipIf(findBrowser() === undefined)("a person lives through the page", 
     const { page } = opened;
     await page.getByTestId("study-folder").setInputFiles(EXAMPLE.folder);
     await page.locator("header h1", { hasText: "Veyra Shelf" }).waitFor({ timeout: 60_000 });
-    expect(await page.getByLabel("Section", { exact: true }).locator("option").count()).toBe(4);
-  });
+    const sections = page.getByLabel("Section", { exact: true }).locator("option");
+    await expect.poll(() => sections.count(), { timeout: 60_000 }).toBe(4);
+  }, 90_000);
 
   it("asked nobody but this machine, and complained of nothing", () => {
     expect([...opened.hosts]).toEqual(["127.0.0.1"]);

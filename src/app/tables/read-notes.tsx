@@ -1,5 +1,6 @@
 import type { ReactElement } from "react";
 import type { Study } from "../../core/study/model.ts";
+import { heldWords } from "../../report/findings/tables.ts";
 import { plural } from "../../report/wordings/words.ts";
 import { KeptPart } from "../keeping/kept-part.tsx";
 import styles from "../margin/margin.module.css";
@@ -19,10 +20,9 @@ export function ReadNotes({ study }: { readonly study: Study }): ReactElement {
   );
 }
 
-function readWords({ sections, problems }: Study): string {
-  const count = (of: "samples" | "occurrences") => sections.reduce((sum, one) => sum + one[of].length, 0);
-  const errors = problems.filter(({ severity }) => severity === "error").length;
-  const read = `${plural(sections.length, "section")} with ${plural(count("samples"), "sample")} and ${plural(count("occurrences"), "find")} were read.`;
+function readWords(study: Study): string {
+  const errors = study.problems.filter(({ severity }) => severity === "error").length;
+  const read = `${plural(study.sections.length, "section")} with ${heldWords(study)} were read.`;
   return errors === 0
     ? `${read} Nothing had to be left out for errors.`
     : `${read} ${plural(errors, "error")} must be mended; what is unusable is left out.`;

@@ -1,12 +1,11 @@
 import type { Analysis } from "../../core/analysis-result.ts";
 import type { FindReason } from "../../core/study/finds-result.ts";
+import type { Study } from "../../core/study/model.ts";
 import { list, plural, say, strong } from "../wordings/words.ts";
 import type { Finding } from "./finding.ts";
 
 /** What was read, and what stands in the way. */
 export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
-  const samples = study.sections.reduce((sum, section) => sum + section.samples.length, 0);
-  const occurrences = study.sections.reduce((sum, section) => sum + section.occurrences.length, 0);
   const names = new Set(taxa.map((taxon) => taxon.taxon));
   const errors = study.problems.filter((problem) => problem.severity === "error").length;
   const cautions = study.problems.length - errors;
@@ -18,10 +17,7 @@ export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
       : say` Nothing had to be left out for errors.`;
   return {
     station: "tables",
-    sentence: say`${strong(plural(study.sections.length, "section"))} with ${plural(samples, "sample")} and ${plural(
-      occurrences,
-      "find",
-    )} of ${plural(names.size, "taxon", "taxa")} were read.${state}`,
+    sentence: say`${strong(plural(study.sections.length, "section"))} with ${heldWords(study)} of ${plural(names.size, "taxon", "taxa")} were read.${state}`,
     numbers: [
       { label: "Tables read", value: String(study.sheets.length) },
       { label: "Errors", value: String(errors) },
@@ -34,6 +30,17 @@ export function tablesFinding({ study, taxa, finds }: Analysis): Finding {
     weaknesses: [],
     methods: [],
   };
+}
+
+/** What the sections hold, in words; finds are left out where there are published ranges alone. */
+export function heldWords({ sections }: Pick<Study, "sections">): string {
+  const count = (of: "samples" | "occurrences" | "publishedRanges") =>
+    sections.reduce((sum, section) => sum + section[of].length, 0);
+  const ranges = count("publishedRanges");
+  const published = ranges === 0 ? [] : [plural(ranges, "published range")];
+  const isPublishedAlone = ranges > 0 && count("samples") === 0 && count("occurrences") === 0;
+  const found = [plural(count("samples"), "sample"), plural(count("occurrences"), "find")];
+  return list(isPublishedAlone ? published : [...found, ...published]);
 }
 
 function reasons(finds: Analysis["finds"]): string[] {

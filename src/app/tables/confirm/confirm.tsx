@@ -23,6 +23,7 @@ export function Confirm(): ReactElement | null {
   }, [isOpen]);
   if (read === undefined) return null;
   return (
+    // oxlint-disable-next-line jsx-a11y/no-noninteractive-element-interactions -- only listens to where the keys are
     <details
       className={styles.confirm}
       open={isOpen}
@@ -30,7 +31,6 @@ export function Confirm(): ReactElement | null {
         hadFocus.current = true;
       }}
     >
-      {/* oxlint-disable-next-line jsx-a11y/no-noninteractive-element-interactions -- a summary is a button */}
       <summary
         ref={summary}
         onClick={(event) => {

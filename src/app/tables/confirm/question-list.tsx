@@ -1,5 +1,6 @@
 import type { ReactElement } from "react";
 import type { Study } from "../../../core/study/model.ts";
+import type { Recognition } from "../../../core/study/recognised.ts";
 import { plural } from "../../../report/wordings/words.ts";
 import { usePage } from "../../state/page-context.ts";
 import { pathOf } from "./choices-of-sheet.ts";
@@ -25,6 +26,13 @@ export function QuestionList({ questions, read }: QuestionListProps): ReactEleme
   );
 }
 
+const askedWords = (asks: Recognition["asks"]): string =>
+  asks === "axis"
+    ? "height or depth?"
+    : asks === "axis-and-unit"
+      ? "height or depth, and in which unit?"
+      : "in which unit?";
+
 const keyOf = (question: Question): string =>
   [
     question.kind,
@@ -44,9 +52,7 @@ function Asked({ question, read }: { readonly question: Question; readonly read:
       return (
         <>
           <span>
-            <b>{column.header}</b> in {file}:{" "}
-            {column.asks === "axis" ? "which way does it grow?" : "in which unit?"} Its rows are left out
-            until then.
+            <b>{column.header}</b> in {file}: {askedWords(column.asks)} Its rows are left out until then.
           </span>
           <span className={styles.fields}>
             <UnitChoice sheet={sheet} column={column} settings={read.settings} />

@@ -35,9 +35,12 @@ const order: readonly Question["kind"][] = ["unit", "code", "blank", "content", 
 function unitColumns(recognised: readonly Recognition[]): readonly Recognition[] {
   const asking = recognised.filter(({ asks }) => asks !== undefined);
   const ofSection = asking.filter(({ is }) => !ownUnits.has(is));
-  const [first] = ofSection.toSorted((a, b) => Number(b.asks !== "unit") - Number(a.asks !== "unit"));
+  const [first] = ofSection.toSorted((a, b) => rank(b) - rank(a));
   return [...(first === undefined ? [] : [first]), ...asking.filter(({ is }) => ownUnits.has(is))];
 }
+
+/** A column that is half answered stays the one that is asked about. */
+const rank = ({ asks, axis }: Recognition): number => (axis !== undefined ? 2 : asks === "unit" ? 0 : 1);
 
 /** Columns whose unit is their own and not the section's. */
 export const ownUnits: ReadonlySet<string> = new Set(["value", "effort", "amount"]);
