@@ -59,7 +59,7 @@ function gateWords({ isDistrusted, answers, section, analysis }: TimingCase): Wo
   const where =
     main === undefined
       ? strong(positionInterval(section, proof.low, proof.high))
-      : strong(`${offsetInterval(proof.low - main.highM, proof.high - main.lowM)}`);
+      : strong(offsetInterval(proof.low - main.highM, proof.high - main.lowM));
   const from = main === undefined ? "" : ` from ${main.horizon}`;
   return [
     ...opening,
