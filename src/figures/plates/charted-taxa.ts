@@ -122,13 +122,14 @@ function leaningOf(leaning: Leaning | undefined): Pick<ChartedTaxon, "leaning"> 
 
 function findMarks(analysis: Analysis, { section, aside = [] }: RangeView, taxon: string): FindMark[] {
   const own = analysis.finds.filter((find) => find.section === section && find.accepted === taxon);
+  const byHand = aside.filter((find) => find.taxon === taxon);
+  const isByHand = new Set(byHand.map(({ row }) => row));
   const marks = own.flatMap((find): FindMark[] => {
     const open = openKind(find);
-    if (find.used === "no" && open === undefined) return [];
-    const mark = { heightM: find.heightM, row: `${find.origin.file}:${find.origin.row}` };
-    return [open === undefined ? mark : { ...mark, open }];
+    const row = `${find.origin.file}:${find.origin.row}`;
+    if ((find.used === "no" && open === undefined) || isByHand.has(row)) return [];
+    return [open === undefined ? { heightM: find.heightM, row } : { heightM: find.heightM, row, open }];
   });
-  const byHand = aside.filter((find) => find.taxon === taxon);
   return [
     ...marks,
     ...byHand.map(({ heightM, row }) => ({ heightM, row, open: "set-aside" as const })),
