@@ -37,10 +37,7 @@ export function TablesStation(): ReactElement | null {
     <div className={styles.station}>
       <Confirm />
       <TableTabs
-        groups={[
-          ["Study", tables],
-          ["Results", analysis === undefined ? [] : RESULTS],
-        ]}
+        groups={[["Study", tables], ...(analysis === undefined ? [] : [["Results", RESULTS] as const])]}
         current={table.id}
       />
       <WorkedTable key={table.id} {...{ table, open, found }} />
