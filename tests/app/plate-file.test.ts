@@ -32,7 +32,9 @@ describe.skipIf(findBrowser() === undefined)("the file a plate is saved as", () 
   let opened: OpenedPage;
   let analysis: Analysis;
   beforeAll(async () => {
-    [opened, analysis] = await Promise.all([openPage(), analysedExample()]);
+    // Wide enough for the whole range chart on one page.
+    const viewport = { width: 1760, height: 900 };
+    [opened, analysis] = await Promise.all([openPage({ viewport }), analysedExample()]);
     await finding(opened.page);
   }, 120_000);
   afterAll(() => opened?.close());
