@@ -25,7 +25,7 @@ const kept = (page: Page) =>
     () =>
       new Promise<{ files: string[][]; histories: string[] }>((resolve, reject) => {
         const opening = indexedDB.open("lastbed");
-        opening.onerror = () => reject(opening.error);
+        opening.addEventListener("error", () => reject(opening.error));
         opening.onsuccess = () => {
           const reading = opening.result.transaction(["files", "histories"]);
           const files = reading.objectStore("files").getAll();

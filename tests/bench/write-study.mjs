@@ -6,6 +6,9 @@ const TAXA = 600;
 const FINDS_IN_A_SAMPLE = 20;
 const GROUPS = ["ammonoids", "bivalves", "foraminifera", "echinoids", "brachiopods"];
 
+const section = (/** @type {number} */ at) => `Ledge ${at + 1}`;
+const taxon = (/** @type {number} */ at) => `Orvella ${word(at)}ensis`;
+
 /**
  * Writes an invented study of as many finds: 50 sections, 20 finds in every sample, five groups searched in each.
  * @param {string} folder
@@ -14,8 +17,6 @@ const GROUPS = ["ammonoids", "bivalves", "foraminifera", "echinoids", "brachiopo
 export async function writeStudy(folder, finds) {
   await mkdir(folder, { recursive: true });
   const samples = Math.ceil(finds / SECTIONS / FINDS_IN_A_SAMPLE);
-  const section = (/** @type {number} */ at) => `Ledge ${at + 1}`;
-  const taxon = (/** @type {number} */ at) => `Orvella ${word(at)}ensis`;
   const all = Array.from({ length: SECTIONS }, (_, at) => section(at));
   const write = (/** @type {string} */ name, /** @type {string[]} */ lines) =>
     writeFile(join(folder, name), `${lines.join("\n")}\n`);

@@ -1,12 +1,13 @@
 import type { Told } from "./example-variants.ts";
 
+const differs = (number: string | undefined, truly: number) =>
+  Math.abs(Number(number ?? Number.NaN) - truly) > 0.006;
+
 /** What a sentence may never do, whatever the truth: say more than the numbers beside it. */
 export function overclaims({ sentence, weights, lead, horizonWeights, isDistrusted, codes }: Told): string[] {
   const faults: string[] = [];
   const fault = (is: boolean, what: string) => is && faults.push(`${what}: ${sentence}`);
   const said = (pattern: RegExp) => sentence.match(pattern)?.slice(1);
-  const differs = (number: string | undefined, truly: number) =>
-    Math.abs(Number(number ?? Number.NaN) - truly) > 0.006;
   fault(/sudden|simultaneous|extinct/i.test(sentence), "more than ends");
   const weight = said(/ha(?:s|ve) (?:over|under)?\W*([\d.]+) of the weight/);
   fault(weight !== undefined && differs(weight[0], weights.get(lead) ?? 0), "another weight");

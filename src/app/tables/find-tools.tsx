@@ -20,7 +20,9 @@ export function FindTools({ table, field, find, wantsAll, setAll }: FindToolsPro
   const words = state.place.find ?? "";
   // The address follows the field, not the field the address: a quick hand would lose letters.
   useEffect(() => {
-    if (field.current !== null && field.current !== document.activeElement) field.current.value = words;
+    const input = field.current;
+    // oxlint-disable-next-line react/immutability -- a field without state of its own is set where it lies
+    if (input !== null && input !== document.activeElement) input.value = words;
   }, [field, words]);
   return (
     <div className={styles.find}>

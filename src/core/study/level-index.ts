@@ -13,9 +13,10 @@ interface Entry<T> {
   readonly thing: T;
 }
 
+const cellOf = (heightM: number) => Math.floor(heightM / (2 * LEVEL_TOLERANCE_M));
+
 export function levelIndex<T>(): LevelIndex<T> {
   const cells = new Map<number, Entry<T>[]>();
-  const cellOf = (heightM: number) => Math.floor(heightM / (2 * LEVEL_TOLERANCE_M));
   return {
     add: (heightM, thing) => {
       const cell = cellOf(heightM);

@@ -19,19 +19,13 @@ export interface MarkedRow {
   readonly label: string;
 }
 
-export interface LogView extends SectionView {
-  readonly marked?: MarkedRow;
-}
-
 const BODY_HEIGHT = 420;
 const NARROWEST = 150;
 
-/** A section as it was logged and searched, narrow enough to stand beside a table, with the place of one row marked. */
-export function sectionLog(analysis: Analysis, { marked, ...view }: LogView): Drawing {
-  return markableLog(analysis, view)(marked);
-}
-
-/** The same, drawn once for whatever rows are marked in it one after another. */
+/**
+ * A section as it was logged and searched, narrow enough to stand beside a table; drawn once for whatever rows are marked
+ * in it one after another.
+ */
 export function markableLog(
   analysis: Analysis,
   view: SectionView,

@@ -153,10 +153,10 @@ describe.each(Object.entries(cases))("%s", (_, make) => {
   });
 });
 
-describe("what a timing plate shows beside its ranges", () => {
-  const beside = (part: Partial<Parameters<typeof timingPlate>[1]>) =>
-    text(timingPlate(small, { section: "cliff", set: "candidates", ...part }));
+const beside = (part: Partial<Parameters<typeof timingPlate>[1]>) =>
+  text(timingPlate(small, { section: "cliff", set: "candidates", ...part }));
 
+describe("what a timing plate shows beside its ranges", () => {
   test("the levels of the scenario of most weight, or of the one asked for where it has levels", () => {
     expect(beside({})).toContain("if two pulses");
     expect(beside({ scenario: "single" })).toContain("if one level");

@@ -62,10 +62,11 @@ describe.each(Object.entries(changes))("%s", (_, change) => {
   });
 });
 
+const rows = (analysis: Analysis) =>
+  analysis.ranges.ends.filter(({ method, end }) => method === "uniform" && end !== "both");
+
 it("follows the ends of the methods in view at both ends", () => {
   const settings = { ...study.settings, confidence: 0.5 };
-  const rows = (analysis: Analysis) =>
-    analysis.ranges.ends.filter(({ method, end }) => method === "uniform" && end !== "both");
   const followed = followSection(before, "ledge")({ settings, methods: ["uniform"] });
   expect(rows(followed)).toEqual(rows(analyse({ ...study, settings })));
   expect(rows(followed)).not.toEqual(rows(before));
@@ -78,9 +79,9 @@ it("leaves what has no closed form as it was", () => {
   expect(followed.timing.offsets).toBe(before.timing.offsets);
 });
 
-describe("one level asked about", () => {
-  const ask = (heightM: number) => askLevel(before, { section: "ledge", set: "candidates", heightM });
+const ask = (heightM: number) => askLevel(before, { section: "ledge", set: "candidates", heightM });
 
+describe("one level asked about", () => {
   it("has the p of the curve, and none below the highest last find", () => {
     const [curve] = before.timing.curves;
     const at = Math.floor((curve?.heightsM.length ?? 0) / 2);

@@ -33,7 +33,12 @@ function shown(edits: readonly Edit[]) {
     rows: cells,
     rowNumbers: READ,
   };
-  const read = readTables([givenTable(sheet, cells)], { sheets: [], problems: [], edits: new Map() });
+  const read = readTables([givenTable(sheet, cells)], {
+    sheets: [],
+    problems: [],
+    sections: [],
+    edits: new Map(),
+  });
   const [table] = studyTables(read, editsByFile(edits));
   if (table === undefined) throw new Error("no table");
   return table;

@@ -10,13 +10,16 @@ const files = (text: string, name = "occurrences.csv") => new Map([[name, bytes(
 
 /** The tables of files as the page shows them before any edit. */
 function opened(given: ReadonlyMap<string, Uint8Array>, edits: readonly Edit[] = []) {
-  const { sheets, problems } = readStudy(given);
+  const { sheets, problems, sections } = readStudy(given);
   const left = leftOut(given, leavingSheets(sheets, problems), unreadFiles(sheets, problems));
   const tables = [
     ...sheets.map((sheet) => givenTable(sheet, [...sheet.rows], left.rows.get(sheet.file))),
     ...left.tables,
   ];
-  const shown = studyTables(readTables(tables, { sheets, problems, edits: new Map() }), editsByFile(edits));
+  const shown = studyTables(
+    readTables(tables, { sheets, problems, sections, edits: new Map() }),
+    editsByFile(edits),
+  );
   return { tables, shown };
 }
 

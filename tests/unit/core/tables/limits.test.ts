@@ -22,9 +22,9 @@ function readLimited(text: string, limits: Partial<PartLimits>) {
   return { read, problems: problems.problems() };
 }
 
-describe("limits of what is read", () => {
-  const rows = (count: number) => "Tarn Cut,Velorites alta,1\n".repeat(count);
+const rows = (count: number) => "Tarn Cut,Velorites alta,1\n".repeat(count);
 
+describe("limits of what is read", () => {
   it("refuse more cells than rows times columns may be, and read as many", () => {
     expect(readLimited(`${HEADER}\n${rows(4)}`, { mostCells: 12 }).read?.sheet.rows).toHaveLength(4);
     const { read, problems } = readLimited(`${HEADER}\n${rows(5)}`, { mostCells: 12 });
