@@ -1,5 +1,6 @@
 import { type Dispatch, useEffect, useMemo } from "react";
 import type { Analysis } from "../../core/analysis-result.ts";
+import type { RangeMethod } from "../../core/ranges/result.ts";
 import { changedSettings } from "../../core/study/changed-settings.ts";
 import { followSection } from "../../core/trial.ts";
 import type { Finding } from "../../report/findings/finding.ts";
@@ -70,7 +71,8 @@ export function useOpened(
     if (changed.kind === "refused")
       return { ...own, focus, trying: { ...shared, isWhole: false, refused: changed.reason } };
     if (follow === undefined) return { ...own, focus, trying: { ...shared, isWhole: false } };
-    const analysis = follow({ settings: changed.settings, set: focus.set?.set });
+    const methods = methodsInView(own.analysis, focus);
+    const analysis = follow({ settings: changed.settings, set: focus.set?.set, methods });
     const shown = {
       analysis,
       all: followedFindings(own.all, analysis, focus),
@@ -78,6 +80,20 @@ export function useOpened(
     };
     return { ...shown, trying: { ...shared, isWhole: false } };
   }, [own, focus, place, changed, isDone, whole, follow]);
+}
+
+/** Methods whose ends of a section are worked out within a frame. */
+const QUICK: readonly RangeMethod[] = ["uniform", "sampled", "window", "two-highest", "top-k"];
+
+/** The method whose ends the range chart draws, where it can follow a hand. */
+function methodsInView(
+  { ranges }: Analysis,
+  { station, section, ranges: place }: Focus,
+): readonly RangeMethod[] | undefined {
+  if (station !== "ranges") return undefined;
+  const leading = ranges.ends.find((end) => end.section === section?.name)?.method;
+  const shown = QUICK.filter((method) => method === (place.method ?? leading));
+  return shown.length === 0 ? undefined : shown;
 }
 
 /** The findings with the one in focus told anew: the others stand until the whole is worked out. */
