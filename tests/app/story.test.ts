@@ -73,8 +73,9 @@ describe.skipIf(findBrowser() === undefined)("a person lives through the page", 
     const plateBefore = await page.locator("figure svg[role=img]").getAttribute("id");
     await page.getByLabel("Section", { exact: true }).selectOption({ index: 1 });
     await page.waitForURL(/section=/);
-    expect(await finding(page)).not.toBe(before);
-    expect(await page.locator("figure svg[role=img]").getAttribute("id")).not.toBe(plateBefore);
+    await expect.poll(() => finding(page)).not.toBe(before);
+    const plateNow = () => page.locator("figure svg[role=img]").getAttribute("id");
+    await expect.poll(plateNow, { timeout: 10_000 }).not.toBe(plateBefore);
     await page.getByLabel("Scale").selectOption("own");
     await page.waitForURL(/scale=own/);
     await page.keyboard.press("3");
