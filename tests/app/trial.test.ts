@@ -94,7 +94,7 @@ describe.skipIf(findBrowser() === undefined)("choices under the hand", () => {
     await page.getByLabel("One level, m", { exact: true }).fill("9.4");
     await expect.poll(() => level(page).getAttribute("aria-valuetext")).toMatch(/^9\.40/);
     const words = page.locator("figure output").last();
-    expect(await words.textContent()).toMatch(/−0\.60.m from lorn-impact: all at this level, p/);
+    await expect.poll(() => words.textContent()).toMatch(/−0\.60.m from lorn-impact: all at this level, p/);
     await level(page).focus();
     await page.keyboard.press("Shift+ArrowDown");
     await page.keyboard.press("Shift+ArrowDown");
